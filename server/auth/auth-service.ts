@@ -1,0 +1,96 @@
+import { and, eq, sql } from 'drizzle-orm'
+import type { Db } from '../db/client.ts'
+import { people } from '../db/tables/people-tables.ts'
+import { AppError, invalidField } from '../http/app-error.ts'
+import { writeAudit } from '../lib/audit.ts'
+import type { Clock } from '../lib/clock.ts'
+import { newId } from '../lib/ids.ts'
+import { enqueueMail } from '../mail/outbox-store.ts'
+import { spendPasswordToken } from './password-links.ts'
+import { hashPassword, verifyDecoy, verifyPassword } from './passwords.ts'
+
+export type SignedInPerson = { id: string; sessionEpoch: number }
+export type AuthService = ReturnType<typeof createAuthService>
+
+const wrongSignIn = 'That e-mail address and password do not go together.'
+
+export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
+  const activeByEmail = (email: string) =>
+    db
+      .select()
+      .from(people)
+      .where(and(eq(people.email, email), eq(people.active, true)))
+      .get()
+
+  /** Same answer, and the same work, for an unknown address and a wrong password. */
+  async function signIn(email: string, password: string): Promise<SignedInPerson> {
+    const person = activeByEmail(email)
+    const right = person?.passwordHash
+      ? await verifyPassword(person.passwordHash, password)
+      : await verifyDecoy(password)
+    if (!person || !right) throw new AppError('unauthenticated', wrongSignIn)
+    return { id: person.id, sessionEpoch: person.sessionEpoch }
+  }
+
+  /** Answers alike whether the address is known or not. */
+  function askReset(email: string): void {
+    const now = clock.now()
+    const person = activeByEmail(email)
+    db.transaction((tx) => {
+      writeAudit(tx, {
+        at: now,
+        personId: person?.id ?? null,
+        action: 'reset asked',
+        entity: 'person',
+        entityId: person?.id ?? '',
+      })
+      if (!person) return
+      enqueueMail(tx, {
+        key: `password-reset:${newId()}`,
+        kind: 'password-reset',
+        personId: person.id,
+        toName: person.name,
+        toEmail: person.email,
+        payload: {},
+        now,
+      })
+    })
+  }
+
+  /** Sets the hash and ends every session of the person. */
+  function setPassword(personId: string, passwordHash: string, action: string): SignedInPerson {
+    return db.transaction((tx) => {
+      const person = tx
+        .update(people)
+        .set({ passwordHash, sessionEpoch: sql`${people.sessionEpoch} + 1` })
+        .where(and(eq(people.id, personId), eq(people.active, true)))
+        .returning({ id: people.id, sessionEpoch: people.sessionEpoch })
+        .get()
+      if (!person)
+        throw new AppError('not_found', 'That account is no longer open. Ask the office.')
+      writeAudit(tx, { at: clock.now(), personId, action, entity: 'person', entityId: personId })
+      return person
+    })
+  }
+
+  async function useReset(token: string, password: string): Promise<SignedInPerson> {
+    const passwordHash = await hashPassword(password)
+    const personId = spendPasswordToken(db, token, clock.now())
+    if (!personId)
+      throw invalidField('token', 'That link has been used or is too old. Ask for a new one.')
+    return setPassword(personId, passwordHash, 'password set by link')
+  }
+
+  async function changePassword(
+    personId: string,
+    current: string,
+    next: string,
+  ): Promise<SignedInPerson> {
+    const person = db.select().from(people).where(eq(people.id, personId)).get()
+    const right = person?.passwordHash ? await verifyPassword(person.passwordHash, current) : false
+    if (!right) throw invalidField('current', 'That is not the password you have now.')
+    return setPassword(personId, await hashPassword(next), 'password changed')
+  }
+
+  return { signIn, askReset, useReset, changePassword }
+}

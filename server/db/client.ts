@@ -1,0 +1,23 @@
+import { mkdirSync } from 'node:fs'
+import path from 'node:path'
+import Database from 'better-sqlite3'
+import { type BetterSQLite3Database, drizzle } from 'drizzle-orm/better-sqlite3'
+import { schema } from './schema.ts'
+
+export type Db = BetterSQLite3Database<typeof schema>
+/** A database or an open transaction on it: what stores take. */
+export type DbOrTx = Db | Parameters<Parameters<Db['transaction']>[0]>[0]
+
+export type OpenDatabase = { db: Db; sqlite: Database.Database; close(): void }
+
+/** Opens the firm's database ('ridgehand.db' in the data folder, or ':memory:'). */
+export function openDatabase(dataDir: string | ':memory:'): OpenDatabase {
+  if (dataDir !== ':memory:') mkdirSync(dataDir, { recursive: true })
+  const file = dataDir === ':memory:' ? dataDir : path.join(dataDir, 'ridgehand.db')
+  const sqlite = new Database(file)
+  sqlite.pragma('journal_mode = WAL')
+  sqlite.pragma('synchronous = NORMAL')
+  sqlite.pragma('busy_timeout = 5000')
+  sqlite.pragma('foreign_keys = ON')
+  return { db: drizzle(sqlite, { schema }), sqlite, close: () => sqlite.close() }
+}

@@ -1,0 +1,28 @@
+import { integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
+import type { LabourRates } from '../../../shared/labour/labour-rates.ts'
+import type { RoofSettings } from '../../../shared/roof/roof-types.ts'
+
+/** One row (id 1): the contractor this installation serves. */
+export const firm = sqliteTable('firm', {
+  id: integer('id').primaryKey(),
+  name: text('name').notNull(),
+  phone: text('phone').notNull(),
+  timeZone: text('time_zone').notNull(),
+  /** Local hour of the working day before at which reminders go: 'HH:MM'. */
+  reminderAt: text('reminder_at').notNull(),
+  /** How long a change settles before its notice goes out. */
+  changeHoldMinutes: integer('change_hold_minutes').notNull(),
+  startAt: text('start_at').notNull(),
+  hoursPerDay: real('hours_per_day').notNull(),
+  /** ISO weekdays worked, 1 = Monday. */
+  workingWeekdays: text('working_weekdays', { mode: 'json' }).$type<number[]>().notNull(),
+  closedDays: text('closed_days', { mode: 'json' })
+    .$type<{ day: string; name: string }[]>()
+    .notNull(),
+  /** Added to an overhang measured from brickwork to get it from frame. */
+  brickOffsetMm: real('brick_offset_mm').notNull(),
+  lengthUnits: text('length_units', { enum: ['mm', 'feet-inches'] }).notNull(),
+  roofSettings: text('roof_settings', { mode: 'json' }).$type<RoofSettings>().notNull(),
+  labourRates: text('labour_rates', { mode: 'json' }).$type<LabourRates>().notNull(),
+  version: integer('version').notNull().default(1),
+})

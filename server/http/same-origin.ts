@@ -1,0 +1,23 @@
+import type { RequestHandler } from 'express'
+import { AppError } from './app-error.ts'
+
+const safeMethods = new Set(['GET', 'HEAD', 'OPTIONS'])
+
+/**
+ * Refuses writes that another site makes a browser send. `Sec-Fetch-Site` says so itself; older browsers
+ * send `Origin`, which must then be ours.
+ */
+export function refuseCrossSiteWrites(appUrl: string): RequestHandler {
+  const ownOrigin = new URL(appUrl).origin
+  return (req, _res, next) => {
+    if (safeMethods.has(req.method)) return next()
+    const site = req.get('sec-fetch-site')
+    const origin = req.get('origin')
+    const sameHost = origin === `${req.protocol}://${req.get('host') ?? ''}`
+    const foreign =
+      (site !== undefined && site !== 'same-origin' && site !== 'none') ||
+      (origin !== undefined && origin !== ownOrigin && !sameHost)
+    if (foreign) throw new AppError('forbidden', 'This came from another site and was refused.')
+    next()
+  }
+}

@@ -1,0 +1,27 @@
+import { existsSync } from 'node:fs'
+import path from 'node:path'
+import express, { type RequestHandler } from 'express'
+
+const yearSeconds = 31_536_000
+
+/** The built screens: hashed assets kept for good, index.html for every other address. */
+export function builtScreens(distDir: string): RequestHandler[] {
+  const indexFile = path.join(distDir, 'index.html')
+  return [
+    express.static(distDir, {
+      index: false,
+      setHeaders(res, file) {
+        const hashed = file.includes(`${path.sep}assets${path.sep}`)
+        res.setHeader(
+          'Cache-Control',
+          hashed ? `public, max-age=${yearSeconds}, immutable` : 'no-cache',
+        )
+      },
+    }),
+    (req, res, next) => {
+      if (req.method !== 'GET' || !existsSync(indexFile)) return next()
+      res.setHeader('Cache-Control', 'no-cache')
+      res.sendFile(indexFile)
+    },
+  ]
+}

@@ -1,0 +1,40 @@
+import { type QueryClient, useQueryClient } from '@tanstack/react-query'
+import { useEffect } from 'react'
+import { type LiveEvent, liveEventSchema } from '../../shared/events/live-event.ts'
+
+/** First part of the query keys that a topic makes stale; a feature's `all()` key is its topic. */
+const keysByTopic: Record<LiveEvent['topic'], readonly string[]> = {
+  jobs: ['jobs', 'calendar'],
+  roof: ['roof', 'jobs', 'calendar', 'day-sheet'],
+  calendar: ['calendar', 'jobs', 'day-sheet'],
+  'day-sheet': ['day-sheet', 'calendar'],
+  messages: ['messages'],
+  people: ['people', 'calendar', 'day-sheet'],
+  firm: ['firm', 'session', 'calendar', 'day-sheet'],
+}
+
+function refresh(client: QueryClient, topic: LiveEvent['topic']): void {
+  for (const key of keysByTopic[topic]) void client.invalidateQueries({ queryKey: [key] })
+}
+
+/** Keeps every open screen up to date with what others do. */
+export function useLiveEvents(): void {
+  const client = useQueryClient()
+  useEffect(() => {
+    const source = new EventSource('/api/events')
+    let wasLost = false
+    source.onmessage = (message: MessageEvent<string>) => {
+      const parsed = liveEventSchema.safeParse(JSON.parse(message.data))
+      if (parsed.success) refresh(client, parsed.data.topic)
+    }
+    source.onerror = () => {
+      wasLost = true
+    }
+    source.onopen = () => {
+      // What happened while the line was down was not heard.
+      if (wasLost) void client.invalidateQueries()
+      wasLost = false
+    }
+    return () => source.close()
+  }, [client])
+}
