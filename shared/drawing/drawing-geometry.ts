@@ -1,0 +1,100 @@
+import type { Point2 } from '../roof/roof-types.ts'
+
+/** Drawing coordinates: x to the right, y down, in px of the drawing's own width. */
+export type DrawingPoint = Point2
+export type Segment = { from: DrawingPoint; to: DrawingPoint }
+
+/** A rectangle of any turn; what a label takes up. `angleDeg` is clockwise on screen. */
+export type TurnedBox = {
+  centre: DrawingPoint
+  widthPx: number
+  heightPx: number
+  angleDeg: number
+}
+
+export function segmentLength(segment: Segment): number {
+  return Math.hypot(segment.to.x - segment.from.x, segment.to.y - segment.from.y)
+}
+
+export function pointAlong(segment: Segment, fraction: number): DrawingPoint {
+  return {
+    x: segment.from.x + (segment.to.x - segment.from.x) * fraction,
+    y: segment.from.y + (segment.to.y - segment.from.y) * fraction,
+  }
+}
+
+/** The turn of text along a segment, chosen so that it never reads upside down: −90 < angle ≤ 90. */
+export function uprightAngleDeg(segment: Segment): number {
+  const angleDeg =
+    (Math.atan2(segment.to.y - segment.from.y, segment.to.x - segment.from.x) * 180) / Math.PI
+  // A vertical timber reads from its bottom up, like the spine of a drawing.
+  if (angleDeg >= 89.9) return angleDeg - 180
+  if (angleDeg < -90.1) return angleDeg + 180
+  return angleDeg
+}
+
+export function boxCorners(box: TurnedBox): DrawingPoint[] {
+  const turn = (box.angleDeg * Math.PI) / 180
+  const cos = Math.cos(turn)
+  const sin = Math.sin(turn)
+  const halves: [number, number][] = [
+    [-1, -1],
+    [1, -1],
+    [1, 1],
+    [-1, 1],
+  ]
+  return halves.map(([a, b]) => {
+    const u = (a * box.widthPx) / 2
+    const v = (b * box.heightPx) / 2
+    return { x: box.centre.x + u * cos - v * sin, y: box.centre.y + u * sin + v * cos }
+  })
+}
+
+/** Whether two convex shapes share area; touching edges do not count. */
+export function convexShapesOverlap(a: DrawingPoint[], b: DrawingPoint[]): boolean {
+  return !isSeparated(a, b) && !isSeparated(b, a)
+}
+
+export function boxesOverlap(a: TurnedBox, b: TurnedBox): boolean {
+  const reach = Math.hypot(a.widthPx, a.heightPx) / 2 + Math.hypot(b.widthPx, b.heightPx) / 2
+  if (Math.hypot(a.centre.x - b.centre.x, a.centre.y - b.centre.y) >= reach) return false
+  return convexShapesOverlap(boxCorners(a), boxCorners(b))
+}
+
+export function segmentCrossesBox(segment: Segment, box: TurnedBox): boolean {
+  const corners = boxCorners(box)
+  return convexShapesOverlap([segment.from, segment.to], corners)
+}
+
+export function distanceToSegment(point: DrawingPoint, segment: Segment): number {
+  const dx = segment.to.x - segment.from.x
+  const dy = segment.to.y - segment.from.y
+  const lengthSquared = dx * dx + dy * dy
+  const raw =
+    lengthSquared === 0
+      ? 0
+      : ((point.x - segment.from.x) * dx + (point.y - segment.from.y) * dy) / lengthSquared
+  const foot = pointAlong(segment, Math.min(1, Math.max(0, raw)))
+  return Math.hypot(point.x - foot.x, point.y - foot.y)
+}
+
+/** `x y` pairs for an SVG `points` attribute. */
+export function svgPoints(points: readonly DrawingPoint[]): string {
+  return points.map((p) => `${roundPx(p.x)},${roundPx(p.y)}`).join(' ')
+}
+
+export function roundPx(value: number): number {
+  return Math.round(value * 100) / 100
+}
+
+/** Whether a side of `a` has all of `b` on its far side. A two-point shape has two such sides. */
+function isSeparated(a: DrawingPoint[], b: DrawingPoint[]): boolean {
+  return a.some((from, i) => {
+    const to = a[(i + 1) % a.length] ?? from
+    const normal = { x: to.y - from.y, y: from.x - to.x }
+    const across = (p: DrawingPoint) => (p.x - from.x) * normal.x + (p.y - from.y) * normal.y
+    const own = a.map(across)
+    const others = b.map(across)
+    return Math.min(...others) >= Math.max(...own) || Math.max(...others) <= Math.min(...own)
+  })
+}

@@ -1,0 +1,62 @@
+import type { Member } from '../roof/roof-types.ts'
+import type { TimberPoint } from './timber-shape.ts'
+import { endCuts, timberTopEnd } from './timber-shape.ts'
+
+export type MeasuringPointName = 'long point' | 'short point' | 'edge' | 'cut'
+
+/** A place the tape reads on the top of the timber, from the heel plumb line. */
+export type MeasuringPoint = {
+  end: 'head' | 'tail' | 'foot'
+  name: MeasuringPointName
+  /** Which arrises it is on; 'centre' where two cheeks meet. */
+  side: 'left' | 'right' | 'centre' | 'both edges'
+  alongMm: number
+  places: TimberPoint[]
+}
+
+const sameMm = 0.05
+
+/**
+ * What the tape reads at one end of a timber, the farthest first. A cut square across gives one
+ * reading, one cheek two, two cheeks two or three.
+ */
+export function measuringPoints(member: Member, end: 'head' | 'foot'): MeasuringPoint[] {
+  const outward = end === 'head' ? 1 : -1
+  const endWord = endCuts(member, end)[0]?.end ?? end
+  const groups: TimberPoint[][] = []
+  for (const place of timberTopEnd(member, end)) {
+    const same = groups.find(
+      (group) => Math.abs((group[0]?.alongMm ?? 0) - place.alongMm) <= sameMm,
+    )
+    if (same) same.push(place)
+    else groups.push([place])
+  }
+  const ordered = groups.sort((a, b) => outward * ((b[0]?.alongMm ?? 0) - (a[0]?.alongMm ?? 0)))
+  return ordered.map((places, i) => ({
+    end: endWord,
+    name: pointName(i, ordered.length),
+    side: pointSide(places),
+    alongMm: places[0]?.alongMm ?? 0,
+    places,
+  }))
+}
+
+/** The words on the tape's line: "long point, left", "short point, both edges", "tail". */
+export function measuringPointWords(point: MeasuringPoint): string {
+  if (point.name === 'cut') return point.end === 'head' ? 'head cut' : point.end
+  return `${point.end === 'head' ? '' : `${point.end} `}${point.name}, ${point.side}`
+}
+
+function pointName(rank: number, count: number): MeasuringPointName {
+  if (count === 1) return 'cut'
+  if (rank === 0) return 'long point'
+  return rank === count - 1 ? 'short point' : 'edge'
+}
+
+function pointSide(places: readonly TimberPoint[]): MeasuringPoint['side'] {
+  const left = places.some((p) => p.acrossMm > 0.5)
+  const right = places.some((p) => p.acrossMm < -0.5)
+  if (left && right) return 'both edges'
+  if (left) return 'left'
+  return right ? 'right' : 'centre'
+}
