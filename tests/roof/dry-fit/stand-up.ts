@@ -1,5 +1,6 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { checkJoints } from './check-joints.ts'
+import { checkLists, checkWeight } from './check-lists.ts'
 import { checkNumbers } from './check-numbers.ts'
 import { checkPlace, checkPlaning, checkTop } from './check-place.ts'
 import { checkSeat } from './check-seats.ts'
@@ -11,6 +12,10 @@ import { boxesMeet, type Solid, type SolidKit } from './solid-kit.ts'
 /** Two pieces may share no more than this: a sliver from double-precision corners. */
 const OVERLAP_MM3 = 5
 export const PLATE_DEPTH_MM = 90
+
+type Settings = { sawMaxTiltDeg: number; densityKgM3: number }
+/** Stated in the agreement on the computation: the saw tilts 50°, timber weighs 550 kg/m³. */
+const defaultSettings: Settings = { sawMaxTiltDeg: 50, densityKgM3: 550 }
 
 /** The wall plates: the outline's ring, plate width inward, its top at z = 0. */
 export function plateSolid(kit: SolidKit, roof: Roof): Solid {
@@ -48,17 +53,19 @@ export function dryFit(
   kit: SolidKit,
   roof: Roof,
   spec: FrameSpec,
-  sawMaxTiltDeg = 50,
+  settings: Settings = defaultSettings,
 ): Complaint[] {
   const { complain, complaints } = collector()
   checkMarks(complain, spec)
+  checkLists(complain, spec)
   const pieces = spec.members.map((member) => rebuildMember(kit, member))
   const plates = plateSolid(kit, roof)
   const slopes = slopesOf(roof, spec)
   for (const piece of pieces) {
     const hipLike = ['hip', 'broken-hip'].includes(piece.member.role)
     const backed = hipLike ? backingFromSlopes(piece.pose, ownSlopes(piece, slopes)) : null
-    checkNumbers(complain, piece, roof, backed, sawMaxTiltDeg)
+    checkNumbers(complain, piece, roof, backed, settings.sawMaxTiltDeg)
+    checkWeight(complain, piece, settings.densityKgM3)
     checkPlace(complain, piece, spec, slopes)
     checkTop(complain, piece, spec, slopes)
     checkPlaning(complain, piece, spec, slopes)
