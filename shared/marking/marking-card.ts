@@ -1,0 +1,242 @@
+import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
+import { type MarkingCut, type MarkingEnd, markingEnds, tapeBase } from './marking-cuts.ts'
+import {
+  angleText,
+  bevelWords,
+  figureOf,
+  type MarkingBevel,
+  type MarkingFigure,
+  type MarkingOptions,
+} from './marking-figures.ts'
+import { backingOf, birdsmouthOf, furtherFigures, planingWords } from './marking-parts.ts'
+import { roleWords, sectionWords } from './role-words.ts'
+
+/** Wherever numbers leave for the saw. */
+export const cutOneFirst = 'Cut one, try it, then cut the rest.'
+/** Wherever work at height is planned. */
+export const workAtHeight =
+  'Scaffold or edge protection first, harness where those cannot be, as the safe work method statement and local law require. This list does not replace that statement.'
+
+export type MarkingWarning = { text: string; remedy: string }
+
+/** Everything a carpenter marks a line of the cut list from, in words and numbers. */
+export type MarkingCard = {
+  mark: string
+  role: MemberRole
+  name: string
+  section: string
+  quantity: number
+  left: number
+  right: number
+  /** 'x4: 2 left, 2 right'. */
+  quantityWords: string
+  memberMarks: string[]
+  /** The piece whose numbers these are; the drawing shows the same one. */
+  drawnMark: string
+  handWords: string
+  /** What the saw needs, longest point to longest point. */
+  cutLength: MarkingFigure
+  setOutLength: MarkingFigure
+  /** Deductions, rise, run: not needed to mark out, kept for who wants to check. */
+  further: MarkingFigure[]
+  pitchText: string
+  ends: MarkingEnd[]
+  birdsmouth: { figures: MarkingFigure[]; bevels: MarkingBevel[] } | null
+  tailLength: MarkingFigure | null
+  backing: MarkingBevel[]
+  drop: MarkingFigure | null
+  planing: string[]
+  warnings: MarkingWarning[]
+}
+
+/**
+ * The card of one cut line. Lengths mm, angles degrees, exact; texts rounded as the options say.
+ * @throws RangeError when the spec has no such cut line.
+ */
+export function markingCardOf(
+  spec: FrameSpec,
+  cutLineMark: string,
+  options: MarkingOptions,
+): MarkingCard {
+  const line = spec.cutLines.find((one) => one.mark === cutLineMark)
+  const alike = line ? membersOf(spec, line) : []
+  const member = alike.find((one) => one.hand === 'left') ?? alike[0]
+  if (!line || !member) throw new RangeError(`This roof has no cut line ${cutLineMark}.`)
+  return {
+    mark: line.mark,
+    role: line.role,
+    name: roleWords[line.role],
+    section: sectionWords(line.section),
+    quantity: line.quantity,
+    left: line.left,
+    right: line.right,
+    quantityWords: quantityWords(line.quantity, line.left, line.right),
+    memberMarks: line.members,
+    drawnMark: member.mark,
+    handWords: handWords(line, member),
+    cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to longest point'),
+    setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
+    further: furtherFigures(member, options),
+    pitchText: angleText(member.pitchDeg, options),
+    ends: markingEnds(spec, member, alike, options),
+    birdsmouth: birdsmouthOf(member, options),
+    tailLength:
+      member.tailLengthMm > 0
+        ? figureOf('Tail length', member.tailLengthMm, options, 'heel line to tail, along the edge')
+        : null,
+    backing: backingOf(member, options),
+    drop:
+      member.dropMm > 0
+        ? figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
+        : null,
+    planing: planingWords(spec, line, options),
+    warnings: spec.cautions
+      .filter((caution) => caution.members.some((mark) => line.members.includes(mark)))
+      .map(({ text, remedy }) => ({ text, remedy })),
+  }
+}
+
+/** 'x4: 2 left, 2 right'. */
+  quantityWords: string
+  memberMarks: string[]
+  /** The piece whose numbers these are; the drawing shows the same one. */
+  drawnMark: string
+  handWords: string
+  /** What the saw needs, longest point to longest point. */
+  cutLength: MarkingFigure
+  setOutLength: MarkingFigure
+  /** Deductions, rise, run: not needed to mark out, kept for who wants to check. */
+  further: MarkingFigure[]
+  pitchText: string
+  ends: MarkingEnd[]
+  birdsmouth: { figures: MarkingFigure[]; bevels: MarkingBevel[] } | null
+  tailLength: MarkingFigure | null
+  backing: MarkingBevel[]
+  drop: MarkingFigure | null
+  planing: string[]
+  warnings: MarkingWarning[]
+}
+
+/**
+ * The card of one cut line. Lengths mm, angles degrees, exact; texts rounded as the options say.
+ * @throws RangeError when the spec has no such cut line.
+ */
+export function markingCardOf(
+  spec: FrameSpec,
+  cutLineMark: string,
+  options: MarkingOptions,
+): MarkingCard {
+  const line = spec.cutLines.find((one) => one.mark === cutLineMark)
+  const alike = line ? membersOf(spec, line) : []
+  const member = alike.find((one) => one.hand === 'left') ?? alike[0]
+  if (!line || !member) throw new RangeError(`This roof has no cut line ${cutLineMark}.`)
+  return {
+    mark: line.mark,
+    role: line.role,
+    name: roleWords[line.role],
+    section: sectionWords(line.section),
+    quantity: line.quantity,
+    left: line.left,
+    right: line.right,
+    quantityWords: quantityWords(line.quantity, line.left, line.right),
+    memberMarks: line.members,
+    drawnMark: member.mark,
+    handWords: handWords(line, member),
+    cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to longest point'),
+    setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
+    further: furtherFigures(member, options),
+    pitchText: angleText(member.pitchDeg, options),
+    ends: markingEnds(spec, member, alike, options),
+    birdsmouth: birdsmouthOf(member, options),
+    tailLength:
+      member.tailLengthMm > 0
+        ? figureOf('Tail length', member.tailLengthMm, options, 'heel line to tail, along the edge')
+        : null,
+    backing: backingOf(member, options),
+    drop:
+      member.dropMm > 0
+        ? figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
+        : null,
+    planing: planingWords(spec, line, options),
+    warnings: spec.cautions
+      .filter((caution) => caution.members.some((mark) => line.members.includes(mark)))
+      .map(({ text, remedy }) => ({ text, remedy })),
+  }
+}
+
+/** Short plain lines for mail and print; the first names the line. */
+export function markingCardLines(card: MarkingCard): string[] {
+  return cardLines(card)
+}
+
+/** 'x4: 2 left, 2 right', 'x6'. */
+export function quantityWords(quantity: number, left: number, right: number): string {
+  const hands = [left > 0 ? `${left} left` : '', right > 0 ? `${right} right` : ''].filter(Boolean)
+  return hands.length > 0 ? `x${quantity}: ${hands.join(', ')}` : `x${quantity}`
+}
+
+function membersOf(spec: FrameSpec, line: CutLine): Member[] {
+  const marks = new Set(line.members)
+  return spec.members.filter((member) => marks.has(member.mark))
+}
+
+function handWords(line: CutLine, member: Member): string {
+  const along = member.role === 'ridge' ? 'along the ridge from its first node' : 'up the rafter'
+  if (line.left > 0 && line.right > 0)
+    return `Left hand: long point on the left looking ${along}, bow up. Right hand: the same, mirrored.`
+  if (member.hand) return `Long point on the ${member.hand} looking ${along}, bow up.`
+  return 'No hand, bow up.'
+}
+
+function setOutNote(member: Member): string {
+  const base = tapeBase(member)
+  if (member.role === 'ridge') return 'node to node, nothing deducted'
+  return `${base} to the centre of what the head meets, nothing deducted`
+}
+
+function figureWords(figure: MarkingFigure, note = false): string {
+  const value = [figure.text, figure.unit].filter(Boolean).join(' ')
+  return `${figure.label} ${value}${note && figure.note ? ` (${figure.note})` : ''}`
+}
+
+function cutLines(end: MarkingEnd, cut: MarkingCut): string[] {
+  const name = [end.title, cut.cheek.toLowerCase()].filter(Boolean).join(', ')
+  const across = cut.edge
+    ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
+    : '; square across the top'
+  const bears = cut.bearsOn ? `. ${cut.bearsOn}` : ''
+  return [
+    `${name}: ${cut.kind}, down the side ${bevelWords(cut.face)}${across}${bears}.`,
+    ...cut.sawWords,
+  ]
+}
+
+function endLines(end: MarkingEnd): string[] {
+  const from = end.points[0]?.note ?? ''
+  const points = end.points.map((point) => figureWords(point)).join(', ')
+  return [
+    ...(points ? [`${end.title}: ${points}${from ? ` ${from}` : ''}.`] : []),
+    ...end.cuts.flatMap((cut) => cutLines(end, cut)),
+  ]
+}
+
+/** Short plain lines for mail and print; the first names the line. */
+export function markingCardLines(card: MarkingCard): string[] {
+  const mouth = card.birdsmouth
+  return [
+    `${card.mark}  ${card.name}  ${card.section}  ${card.quantityWords}`,
+    `${figureWords(card.cutLength)}, ${figureWords(card.setOutLength).toLowerCase()}.`,
+    ...card.ends.flatMap(endLines),
+    ...(mouth
+      ? [
+          `Birdsmouth: ${mouth.figures.map((one) => figureWords(one).toLowerCase()).join(', ')}.`,
+          `${mouth.bevels.map((one) => `${one.label} ${bevelWords(one)}`).join('; ')}.`,
+        ]
+      : []),
+    ...(card.tailLength ? [`${figureWords(card.tailLength, true)}.`] : []),
+    ...card.backing.map((one) => `${one.label}: ${bevelWords(one)}.`),
+    ...(card.drop ? [`${figureWords(card.drop, true)}.`] : []),
+    card.handWords,
+    ...card.planing,
+  ]
+}

@@ -1,0 +1,170 @@
+import { cutWords } from '../drawing/bevel-dials.ts'
+import { measuringPoints } from '../drawing/timber-points.ts'
+import { endCuts } from '../drawing/timber-shape.ts'
+import type { Cut, FrameSpec, Member } from '../roof/roof-types.ts'
+import {
+  angleText,
+  bevelOf,
+  figureOf,
+  type MarkingBevel,
+  type MarkingFigure,
+  type MarkingOptions,
+} from './marking-figures.ts'
+import { piecesWords } from './role-words.ts'
+import { pastSawWords } from './saw-words.ts'
+
+export type MarkingCut = {
+  /** 'Left cheek', 'Right cheek', or empty for the only cut of its end. */
+  cheek: string
+  /** 'plumb cut', 'square cut', 'cut'. */
+  kind: string
+  longSide: Cut['longSide']
+  /** 'Bears on the ridge R1', or empty for a tail. */
+  bearsOn: string
+  /** Down the side face: the plumb bevel of a plumb cut. */
+  face: MarkingBevel
+  /** Across the top; null when the cut runs square across. */
+  edge: MarkingBevel | null
+  /** Across the other kind of top (square where this one is backed). */
+  edgeOtherTop: MarkingBevel | null
+  bladeTiltDeg: number
+  bladeTiltText: string
+  pastSaw: boolean
+  /** What is needed past the saw, the way round and its safety words; empty otherwise. */
+  sawWords: string[]
+}
+
+/** One end of a timber: where the tape reads it, and its saw cuts. */
+export type MarkingEnd = {
+  end: Cut['end']
+  title: string
+  /** Long and short points, from the heel plumb line. */
+  points: MarkingFigure[]
+  cuts: MarkingCut[]
+}
+
+const squareDeg = 0.05
+const samePointMm = 0.05
+const endTitles: Record<Cut['end'], string> = { head: 'Head', foot: 'Foot', tail: 'Tail' }
+
+/** Foot or tail, then head, in the order a carpenter marks out. */
+export function markingEnds(
+  spec: FrameSpec,
+  member: Member,
+  alike: readonly Member[],
+  options: MarkingOptions,
+): MarkingEnd[] {
+  return (['foot', 'head'] as const).flatMap((end) => {
+    const cuts = endCuts(member, end)
+    const first = cuts[0]
+    if (!first) return []
+    return [
+      {
+        end: first.end,
+        title: endTitles[first.end],
+        points: endPoints(member, end, cuts, options),
+        cuts: cuts.map((cut) => markingCut(spec, member, alike, cut, cuts.length, options)),
+      },
+    ]
+  })
+}
+
+function markingCut(
+  spec: FrameSpec,
+  member: Member,
+  alike: readonly Member[],
+  cut: Cut,
+  cutCount: number,
+  options: MarkingOptions,
+): MarkingCut {
+  const across = Math.abs(cut.edge.fromSquareDeg) > squareDeg
+  const kind = cutWords(member, cut)
+  const topName = member.backing ? 'Across the backed top' : 'Across the top'
+  const otherName = member.backing ? 'Across a square top' : 'Across a backed top'
+  return {
+    cheek: cutCount > 1 ? cheekName(cut) : '',
+    kind,
+    longSide: cut.longSide,
+    bearsOn: bearsOnWords(spec, alike, cut, cutCount),
+    face: bevelOf(faceName(kind), 'side', cut.face, options),
+    edge: across ? bevelOf(topName, 'top', cut.edge, options) : null,
+    edgeOtherTop:
+      across && cut.edgeOtherTop ? bevelOf(otherName, 'top', cut.edgeOtherTop, options) : null,
+    bladeTiltDeg: cut.bladeTiltDeg,
+    bladeTiltText: angleText(cut.bladeTiltDeg, options),
+    pastSaw: cut.pastSaw,
+    sawWords: pastSawWords(member, cut, options),
+  }
+}
+
+function faceName(kind: string): string {
+  return kind === 'plumb cut' ? 'Plumb bevel, down the side' : 'Down the side'
+}
+
+/** A cheek lies on the side of its short point. */
+function cheekName(cut: Cut): string {
+  if (cut.longSide === 'none') return 'Square across'
+  return cut.longSide === 'left' ? 'Right cheek' : 'Left cheek'
+}
+
+/** What a cut lies against; one card stands for alike pieces that may meet different ones. */
+function bearsOnWords(
+  spec: FrameSpec,
+  alike: readonly Member[],
+  cut: Cut,
+  cutCount: number,
+): string {
+  if (cut.end === 'tail') return ''
+  // Two cheeks of one piece meet different neighbours: only its own are named then.
+  const cuts = cutCount > 1 ? [cut] : alike.flatMap((m) => m.cuts.filter((c) => c.end === cut.end))
+  const marks = new Set(cuts.flatMap((c) => [c.against, ...c.alsoAgainst]))
+  const met = spec.members.filter((m) => marks.has(m.mark))
+  return met.length > 0 ? `Bears on ${piecesWords(met)}` : ''
+}
+
+function endPoints(
+  member: Member,
+  end: 'head' | 'foot',
+  cuts: readonly Cut[],
+  options: MarkingOptions,
+): MarkingFigure[] {
+  const only = cuts.length === 1 ? cuts[0] : undefined
+  const points = only
+    ? singleCutPoints(only)
+    : measuringPoints(member, end).map((point) => ({
+        label: point.name === 'cut' ? 'Cut' : `${capital(point.name)}, ${point.side}`,
+        alongMm: point.alongMm,
+      }))
+  return points.map(({ label, alongMm }) =>
+    figureOf(label, Math.abs(alongMm), options, fromWords(member, cuts, alongMm)),
+  )
+}
+
+function singleCutPoints(cut: Cut): { label: string; alongMm: number }[] {
+  const { longPointFromHeelMm: long, shortPointFromHeelMm: short, longSide } = cut
+  if (longSide === 'none' || Math.abs(long - short) <= samePointMm)
+    return [{ label: 'Cut', alongMm: long }]
+  const shortSide = longSide === 'left' ? 'right' : 'left'
+  return [
+    { label: `Long point, ${longSide}`, alongMm: long },
+    { label: `Short point, ${shortSide}`, alongMm: short },
+  ]
+}
+
+/** What the tape is hooked on, and which way it runs. */
+function fromWords(member: Member, cuts: readonly Cut[], alongMm: number): string {
+  const base = tapeBase(member)
+  const end = cuts[0]?.end
+  if (end === 'head') return `from ${base}`
+  if (end === 'tail') return alongMm > 0 ? `up from ${base}` : `down from ${base}`
+  return alongMm < 0 ? `past ${base}` : `in from ${base}`
+}
+
+export function tapeBase(member: Member): string {
+  if (member.birdsmouth) return 'the heel line'
+  return member.role === 'ridge' ? 'the first node' : 'the foot set-out point'
+}
+
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1)
+}

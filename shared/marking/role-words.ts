@@ -1,0 +1,36 @@
+import type { MemberRole, Section } from '../roof/roof-types.ts'
+
+/** What a carpenter calls each piece. */
+export const roleWords: Record<MemberRole, string> = {
+  ridge: 'Ridge',
+  common: 'Common rafter',
+  'crown-end': 'Crown end rafter',
+  hip: 'Hip',
+  'broken-hip': 'Broken hip',
+  valley: 'Valley',
+  creeper: 'Creeper',
+  'valley-creeper': 'Valley creeper',
+  'cripple-creeper': 'Cripple creeper',
+}
+
+/** `45 × 140`: thickness by depth, as the yard sells it. */
+export function sectionWords(section: Section): string {
+  return `${section.thicknessMm} × ${section.depthMm}`
+}
+
+/** 'the ridge R1', 'the hips H1 and H2': pieces named by what they are and their marks. */
+export function piecesWords(pieces: readonly { mark: string; role: MemberRole }[]): string {
+  const byRole = new Map<MemberRole, string[]>()
+  for (const { mark, role } of pieces) byRole.set(role, [...(byRole.get(role) ?? []), mark])
+  const groups = [...byRole].map(([role, marks]) => {
+    const name = roleWords[role].toLowerCase()
+    return `the ${marks.length > 1 ? `${name}s` : name} ${listWords(marks)}`
+  })
+  return listWords(groups)
+}
+
+/** 'a', 'a and b', 'a, b and c'. */
+export function listWords(parts: readonly string[]): string {
+  if (parts.length < 2) return parts[0] ?? ''
+  return `${parts.slice(0, -1).join(', ')} and ${parts[parts.length - 1]}`
+}
