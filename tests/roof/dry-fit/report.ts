@@ -10,6 +10,7 @@ export type Complaint = {
     | 'top edge'
     | 'planing'
     | 'seat'
+    | 'layout'
   marks: string[]
   /** How far out, in millimetres (degrees or cubic millimetres where the text says so). */
   out: number

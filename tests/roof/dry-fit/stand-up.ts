@@ -1,5 +1,6 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { checkJoints } from './check-joints.ts'
+import { checkLayout } from './check-layout.ts'
 import { checkLists, checkWeight } from './check-lists.ts'
 import { checkNumbers } from './check-numbers.ts'
 import { checkPlace, checkPlaning, checkTop } from './check-place.ts'
@@ -13,9 +14,9 @@ import { boxesMeet, type Solid, type SolidKit } from './solid-kit.ts'
 const OVERLAP_MM3 = 5
 export const PLATE_DEPTH_MM = 90
 
-type Settings = { sawMaxTiltDeg: number; densityKgM3: number }
-/** Stated in the agreement on the computation: the saw tilts 50°, timber weighs 550 kg/m³. */
-const defaultSettings: Settings = { sawMaxTiltDeg: 50, densityKgM3: 550 }
+type Settings = { sawMaxTiltDeg: number; densityKgM3: number; minCreeperMm: number }
+/** As agreed for a roof without settings of its own, written out again here. */
+const defaultSettings: Settings = { sawMaxTiltDeg: 50, densityKgM3: 550, minCreeperMm: 300 }
 
 /** The wall plates: the outline's ring, plate width inward, its top at z = 0. */
 export function plateSolid(kit: SolidKit, roof: Roof): Solid {
@@ -72,6 +73,7 @@ export function dryFit(
     checkSeat(complain, kit, piece, roof)
     checkJoints(complain, piece, pieces)
   }
+  checkLayout(complain, roof, spec, slopes, settings.minCreeperMm)
   checkOverlaps(complain, pieces, plates)
   for (const piece of pieces) piece.solid.delete()
   return complaints
