@@ -10,12 +10,15 @@ import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
 import type { EventHub } from './events/event-hub.ts'
 import { eventRoutes } from './events/event-routes.ts'
+import { firmRoutes } from './firm/firm-routes.ts'
 import { type Api, createApi } from './http/api.ts'
 import { AppError } from './http/app-error.ts'
 import { errorHandler } from './http/error-handler.ts'
 import { requestId, requestIdOf } from './http/request-id.ts'
 import { refuseCrossSiteWrites } from './http/same-origin.ts'
 import type { Clock } from './lib/clock.ts'
+import { peopleRoutes } from './people/people-routes.ts'
+import { createPeopleService } from './people/people-service.ts'
 
 export type AppDeps = {
   env: Env
@@ -78,6 +81,9 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
   eventRoutes(api, deps.events)
+  const replanUpcoming = () => undefined
+  peopleRoutes(api, createPeopleService({ db, clock, events: deps.events, replanUpcoming }))
+  firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })
 }
 
 /** The only wiring: everything that serves, from what it is given. */

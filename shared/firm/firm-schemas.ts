@@ -1,0 +1,79 @@
+import { z } from 'zod'
+import { isTimeZone } from '../calendar/local-time.ts'
+import {
+  daySchema,
+  phoneSchema,
+  textSchema,
+  timeOfDaySchema,
+  versionSchema,
+} from '../http/fields.ts'
+
+const minutes = z
+  .number()
+  .min(0, 'Not below nothing.')
+  .max(600, 'Over ten hours is no single piece.')
+const piece = z.strictObject({ cutMinutes: minutes, standMinutes: minutes })
+
+export const labourRatesSchema = z.strictObject({
+  pieces: z.strictObject({
+    ridge: piece,
+    common: piece,
+    'crown-end': piece,
+    hip: piece,
+    'broken-hip': piece,
+    valley: piece,
+    creeper: piece,
+    'valley-creeper': piece,
+    'cripple-creeper': piece,
+  }),
+  setOutMinutes: minutes,
+  setOutMinutesPerPlateM: minutes,
+  firstPairMinutes: minutes,
+  braceRidgeMinutes: minutes,
+  tailLineMinutesPerEaveM: minutes,
+})
+
+const within = (low: number, high: number, what: string) =>
+  z
+    .number({ error: `Give ${what} as a number.` })
+    .min(low, `${what}: ${low} or more.`)
+    .max(high, `${what}: ${high} or less.`)
+
+export const firmRoofSettingsSchema = z.strictObject({
+  sawMaxTiltDeg: within(0, 60, 'the saw’s tilt in degrees'),
+  minCreeperMm: within(0, 2000, 'the shortest creeper in mm'),
+  longestStockMm: within(1000, 15_000, 'the longest stock in mm'),
+  densityKgM3: within(200, 1500, 'the density in kg per m³'),
+  roundMm: within(0.1, 10, 'the rounding in mm'),
+  roundDeg: within(0.1, 5, 'the rounding in degrees'),
+  maxRafterSpanMm: within(500, 10_000, 'the longest rafter span in mm'),
+})
+
+const firmFields = {
+  name: textSchema(80, { required: 'Give the firm’s name.' }),
+  phone: phoneSchema,
+  timeZone: z
+    .string()
+    .refine(isTimeZone, 'Choose a time zone from the list, like Australia/Brisbane.'),
+  reminderAt: timeOfDaySchema,
+  changeHoldMinutes: within(0, 240, 'the hold in minutes'),
+  startAt: timeOfDaySchema,
+  hoursPerDay: within(1, 14, 'hours a day'),
+  workingWeekdays: z.array(z.number().int().min(1).max(7)).min(1, 'Tick at least one day.').max(7),
+  closedDays: z
+    .array(
+      z.strictObject({
+        day: daySchema,
+        name: textSchema(60, { required: 'Say why it is closed.' }),
+      }),
+    )
+    .max(200),
+  brickOffsetMm: within(0, 500, 'the brickwork’s offset in mm'),
+  lengthUnits: z.enum(['mm', 'feet-inches']),
+  roofSettings: firmRoofSettingsSchema,
+  labourRates: labourRatesSchema,
+}
+
+export const editFirmSchema = z.strictObject({ ...firmFields, version: versionSchema })
+export const firmSchema = z.object({ ...firmFields, version: z.number() })
+export type FirmSettings = z.infer<typeof firmSchema>
