@@ -1,0 +1,116 @@
+import type { Plane } from './vector.ts'
+import {
+  along3,
+  angleBetweenDeg,
+  cross3,
+  degrees,
+  dot3,
+  planeCrossing,
+  scale3,
+  unit3,
+} from './vector.ts'
+import type { Angle, Point3 } from './roof-types.ts'
+
+/**
+ * A timber as the saw sees it: a straight piece with plumb side faces. `direction` runs along the top
+ * edge from foot to head, `left` is level and square to it, `up` square to both, all of length 1.
+ */
+export type Timber = {
+  origin: Point3
+  direction: Point3
+  left: Point3
+  up: Point3
+  halfMm: number
+  depthMm: number
+  /** Rise per mm of length, for plumb measures. */
+  sin: number
+  cos: number
+  /** How far each top arris lies plumb under the top centre line; 0 for a square top. */
+  arrisFall: { left: number; right: number }
+}
+
+/** What a plane does to a timber: where it crosses it and at which angles it is marked and sawn. */
+export type Bevel = {
+  alongMm: number
+  leftMm: number
+  rightMm: number
+  /** On the side face, from the arris towards the foot to the line running down. */
+  faceFromEdgeDeg: number
+  /** Across a square top, and across a top planed to the slopes, from the arris into the timber. */
+  squareEdgeDeg: number
+  slopedEdgeDeg: number
+  tiltDeg: number
+  /** Which half of the top the cut leans towards: its own side. */
+  leans: 'left' | 'right' | 'none'
+}
+
+/** Cuts nearer than this to square across (sine of the lean) are square. */
+const squareLean = 1e-9
+
+export const bothWays = (fromEdgeDeg: number): Angle => ({
+  fromEdgeDeg,
+  fromSquareDeg: 90 - fromEdgeDeg,
+})
+
+/** A point of the timber: `alongMm` up its edge, `leftMm` aside, `downMm` plumb under the top centre line. */
+export const timberPoint = (
+  timber: Timber,
+  alongMm: number,
+  leftMm: number,
+  downMm: number,
+): Point3 =>
+  along3(
+    along3(along3(timber.origin, timber.direction, alongMm), timber.left, leftMm),
+    { x: 0, y: 0, z: -1 },
+    downMm,
+  )
+
+/** How far plumb the top lies under its centre line, `leftMm` aside. */
+export const topFall = (timber: Timber, leftMm: number): number =>
+  (Math.abs(leftMm) / timber.halfMm) * (leftMm > 0 ? timber.arrisFall.left : timber.arrisFall.right)
+
+/** The face normal of one half of a top planed to the slopes. */
+const slopedTop = (
+  timber: Timber,
+  side: 'left' | 'right',
+  falls: { left: number; right: number },
+) => {
+  const lean = side === 'left' ? falls.left : -falls.right
+  return unit3(along3(timber.up, timber.left, lean))
+}
+
+/** Angle of a plane's line across a top facet with the arris, 0 to 90 degrees. */
+const edgeDeg = (plane: Plane, timber: Timber, top: Point3): number => {
+  const line = unit3(cross3(plane.normal, top))
+  const angle = angleBetweenDeg(line, timber.direction)
+  return Math.min(angle, 180 - angle)
+}
+
+/**
+ * The one routine for every bevel: a plane in space against a timber.
+ * `falls` are the slopes' falls per mm aside, square to the edge, for the angle across a planed top.
+ * Lengths mm from the timber's origin along its edge, angles degrees.
+ */
+export const bevelOf = (
+  plane: Plane,
+  timber: Timber,
+  falls: { left: number; right: number },
+): Bevel => {
+  const crossing = (leftMm: number) =>
+    planeCrossing(plane, timberPoint(timber, 0, leftMm, topFall(timber, leftMm)), timber.direction)
+  const lean = dot3(plane.normal, timber.left)
+  const leans = Math.abs(lean) < squareLean ? 'none' : lean > 0 ? 'left' : 'right'
+  const down = cross3(plane.normal, timber.left)
+  const downward = unit3(dot3(down, timber.up) > 0 ? scale3(down, -1) : down)
+  const top = slopedTop(timber, leans === 'right' ? 'right' : 'left', falls)
+  return {
+    alongMm: crossing(0),
+    leftMm: crossing(timber.halfMm),
+    rightMm: crossing(-timber.halfMm),
+    faceFromEdgeDeg: angleBetweenDeg(scale3(timber.direction, -1), downward),
+    squareEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, timber.up),
+    slopedEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, top),
+    tiltDeg: degrees(Math.asin(Math.min(1, Math.abs(lean)))),
+    leans,
+  }
+}

@@ -1,0 +1,151 @@
+import { bevelOf, bothWays } from './bevel.ts'
+import type { Timber } from './bevel.ts'
+import type { Ground } from './build-pieces.ts'
+import { isHipLike, piecePoint } from './piece.ts'
+import type { Piece, PlanCut } from './piece.ts'
+import type { Cut, Point3 } from './roof-types.ts'
+import { at } from './slopes.ts'
+import type { PlateEdge } from './slopes.ts'
+import { add2, radians, scale2 } from './vector.ts'
+import type { Plane } from './vector.ts'
+
+/** A cut before the pieces have marks. */
+export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
+  /** Place in the piece's list of joint cuts of this end; null for a tail. */
+  listed: number | null
+}
+
+/** Cuts across within this are square: no long side. */
+const squareMm = 1e-6
+
+/** A piece as a timber in space, at its height over plate. */
+export const timberOf = (piece: Piece, standMm: number): Timber => {
+  const { cos } = piece
+  const sin = piece.tan * cos
+  const dir = piece.dir
+  return {
+    origin: { x: piece.foot.x, y: piece.foot.y, z: piece.foot.z + standMm - piece.dropMm },
+    direction: { x: dir.x * cos, y: dir.y * cos, z: sin },
+    left: { ...piece.left, z: 0 },
+    up: { x: -dir.x * sin, y: -dir.y * sin, z: cos },
+    halfMm: piece.halfMm,
+    depthMm: piece.section.depthMm,
+    sin,
+    cos,
+    arrisFall: piece.backed
+      ? { left: piece.fall.left * piece.halfMm, right: piece.fall.right * piece.halfMm }
+      : { left: 0, right: 0 },
+  }
+}
+
+/** The slopes' falls aside, measured square to the piece's edge instead of plumb. */
+const squareFalls = (piece: Piece) => ({
+  left: piece.fall.left * piece.cos,
+  right: piece.fall.right * piece.cos,
+})
+
+const draftCut = (
+  ground: Ground,
+  piece: Piece,
+  timber: Timber,
+  end: Cut['end'],
+  plane: Plane,
+  listed: number | null,
+): DraftCut => {
+  const bevel = bevelOf(plane, timber, squareFalls(piece))
+  const sign = end === 'head' ? 1 : -1
+  const spread = sign * (bevel.leftMm - bevel.rightMm)
+  const longSide = Math.abs(spread) < squareMm ? 'none' : spread > 0 ? 'left' : 'right'
+  const leftIsLong = longSide !== 'right'
+  const shown = piece.backed ? bevel.slopedEdgeDeg : bevel.squareEdgeDeg
+  const other = piece.backed ? bevel.squareEdgeDeg : bevel.slopedEdgeDeg
+  return {
+    end,
+    plane,
+    listed,
+    alongMm: bevel.alongMm,
+    longSide,
+    longPointFromHeelMm: leftIsLong ? bevel.leftMm : bevel.rightMm,
+    shortPointFromHeelMm: leftIsLong ? bevel.rightMm : bevel.leftMm,
+    face: bothWays(bevel.faceFromEdgeDeg),
+    edge: bothWays(longSide === 'none' ? 90 : shown),
+    edgeOtherTop: isHipLike(piece.role) ? bothWays(longSide === 'none' ? 90 : other) : null,
+    bladeTiltDeg: bevel.tiltDeg,
+    pastSaw: bevel.tiltDeg > ground.settings.sawMaxTiltDeg + 1e-9,
+  }
+}
+
+/** A plumb joint cut as a plane, its point on the top centre line. */
+const jointPlane = (piece: Piece, timber: Timber, cut: PlanCut): Plane => {
+  const { normal, point } = cut
+  const facing = normal.x * piece.dir.x + normal.y * piece.dir.y
+  const planMm =
+    (normal.x * (point.x - piece.foot.x) + normal.y * (point.y - piece.foot.y)) / facing
+  return {
+    point: { ...piecePoint(piece, planMm, 0), z: timber.origin.z + planMm * piece.tan },
+    normal: { x: normal.x, y: normal.y, z: 0 },
+  }
+}
+
+/** The tail plane of an eave: plumb, or square to the slope, through the overhang line of the top plane. */
+const tailPlane = (ground: Ground, edge: PlateEdge, standMm: number): Plane => {
+  const pitch = radians(edge.pitchDeg)
+  const line = add2(edge.from, scale2(edge.inward, -edge.overhangMm))
+  const point: Point3 = { ...line, z: standMm - edge.overhangMm * Math.tan(pitch) }
+  const out = scale2(edge.inward, -1)
+  if (ground.roof.tail === 'plumb') return { point, normal: { ...out, z: 0 } }
+  const level = Math.cos(pitch)
+  return { point, normal: { x: out.x * level, y: out.y * level, z: -Math.sin(pitch) } }
+}
+
+const tailEdges = (ground: Ground, piece: Piece): PlateEdge[] => {
+  const { edges } = ground.plates
+  if (piece.edge !== null) return [at(edges, piece.edge)]
+  if (piece.corner === null) return []
+  return [at(edges, piece.corner - 1), at(edges, piece.corner)]
+}
+
+/** Moves a plane's point onto the timber's top centre line, where the set-out looks for it. */
+const onCentreLine = (plane: Plane, cut: DraftCut, timber: Timber): Plane => ({
+  normal: plane.normal,
+  point: {
+    x: timber.origin.x + timber.direction.x * cut.alongMm,
+    y: timber.origin.y + timber.direction.y * cut.alongMm,
+    z: timber.origin.z + timber.direction.z * cut.alongMm,
+  },
+})
+
+/** Whether a tail plane still takes timber where another one already cuts. */
+const missesTail = (cut: DraftCut, others: DraftCut[]): boolean =>
+  others.some((other) => {
+    const ends = (c: DraftCut) =>
+      c.longSide === 'right'
+        ? [c.shortPointFromHeelMm, c.longPointFromHeelMm]
+        : [c.longPointFromHeelMm, c.shortPointFromHeelMm]
+    const [left = 0, right = 0] = ends(cut)
+    const [otherLeft = 0, otherRight = 0] = ends(other)
+    return left < otherLeft - squareMm && right < otherRight - squareMm
+  })
+
+/** All saw cuts of a piece but its birdsmouth: head, then foot, then tail. */
+export const cutsOf = (ground: Ground, piece: Piece, standMm: number): DraftCut[] => {
+  const timber = timberOf(piece, standMm)
+  const joint = (end: 'head' | 'foot') => (cut: PlanCut, place: number) =>
+    draftCut(ground, piece, timber, end, jointPlane(piece, timber, cut), place)
+  const tails = tailEdges(ground, piece).map((edge) => {
+    const plane = tailPlane(ground, edge, standMm)
+    const cut = draftCut(ground, piece, timber, 'tail', plane, null)
+    return { ...cut, plane: onCentreLine(plane, cut, timber) }
+  })
+  return [
+    ...piece.headCuts.map(joint('head')),
+    ...piece.footCuts.map(joint('foot')),
+    ...tails.filter(
+      (cut) =>
+        !missesTail(
+          cut,
+          tails.filter((other) => other !== cut),
+        ),
+    ),
+  ]
+}

@@ -1,0 +1,67 @@
+import { buildPieces } from './build-pieces.ts'
+import type { Ground } from './build-pieces.ts'
+import { cautionsOf } from './cautions.ts'
+import { roofJoints } from './clusters.ts'
+import { bearings, planSegments } from './contacts.ts'
+import { markMembers } from './cut-lines.ts'
+import { cutJoints } from './joint-order.ts'
+import { draftMember } from './members.ts'
+import type { DraftMember } from './members.ts'
+import { planingOf } from './planing.ts'
+import { publishedLines, publishedPlanes } from './published-lines.ts'
+import { roofLines } from './roof-lines.ts'
+import { RoofRefusedError, roofProblems } from './roof-problems.ts'
+import { defaultSettings } from './roof-settings.ts'
+import type { FrameSpec, Roof, RoofSettings } from './roof-types.ts'
+import { worstRounding } from './rounding.ts'
+import { plateLines } from './slopes.ts'
+import { commonStandMm } from './stand.ts'
+import { roofTotals } from './totals.ts'
+import { fullPlan } from './trim.ts'
+
+/** Cuts all joints and gives every piece its numbers. */
+const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
+  const pieces = buildPieces(ground)
+  const placedAt = cutJoints(ground, pieces)
+  const segments = pieces.flatMap((piece) => planSegments(piece.id, fullPlan(piece)))
+  return pieces.map((piece) =>
+    draftMember(ground, piece, standMm, (cut) => {
+      if (cut.end === 'tail' || cut.listed === null) return []
+      const list = cut.end === 'head' ? piece.headCuts : piece.footCuts
+      const mate = list[cut.listed]?.mitreWith ?? null
+      const own = placedAt(piece.id, cut.end)
+      const mayBear = (other: number) => other === mate || placedAt(other, null) < own
+      return bearings(segments, piece, cut.end, cut.listed, mayBear)
+    }),
+  )
+}
+
+/**
+ * The frame spec of a roof: slopes, lines, every member with its cuts, cut lines, totals, cautions,
+ * corners to plane and the joint error that rounding causes. mm, degrees, m², kg; what each field means
+ * is fixed by the types. Pure and deterministic; some milliseconds for a house.
+ * @throws {RoofRefusedError} with `problems` (field and sentence) when the roof cannot be framed as typed.
+ */
+export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings): FrameSpec => {
+  const problems = roofProblems(roof, settings)
+  if (problems.length > 0) throw new RoofRefusedError(problems)
+  const plates = plateLines(roof)
+  const lines = roofLines(plates)
+  const ground: Ground = { roof, settings, plates, lines, joints: roofJoints(roof, lines) }
+  const standMm = commonStandMm(roof, plates.slopes)
+  const drafts = draftMembers(ground, standMm)
+  const { members, cutLines, markOf } = markMembers(drafts)
+  const planes = publishedPlanes(plates, lines)
+  const published = publishedLines(plates, lines)
+  return {
+    standMm,
+    planes,
+    lines: published,
+    members,
+    cutLines,
+    totals: roofTotals(planes, published, members),
+    cautions: cautionsOf(ground, standMm, members),
+    planing: planingOf(drafts, plates.slopes, standMm, markOf),
+    rounding: worstRounding(drafts, settings, markOf),
+  }
+}

@@ -1,0 +1,39 @@
+import type { DraftMember } from './members.ts'
+import { endCorners } from './ends.ts'
+import type { Planing } from './roof-types.ts'
+import { slopeHeightMm } from './slopes.ts'
+import type { Slope } from './slopes.ts'
+
+/** Less than this over a slope is no work for a plane. */
+const leastOffMm = 0.1
+
+/**
+ * Top corners that stand over a neighbouring slope (ridge ends, apexes, the foot of a broken hip),
+ * with the plumb height to plane off, mm, by end and side. A corner on the centre line counts for both.
+ */
+export const planingOf = (
+  drafts: DraftMember[],
+  slopes: readonly Slope[],
+  standMm: number,
+  markOf: Map<number, string>,
+): Planing[] =>
+  drafts.flatMap((draft) =>
+    (['head', 'foot'] as const).flatMap((end) => {
+      const cuts = draft.cuts.filter((cut) => cut.end === end)
+      if (cuts.length === 0) return []
+      const corners = endCorners(draft.timber, cuts, end === 'head', 'top').map((corner) => ({
+        leftMm: corner.leftMm,
+        overMm:
+          corner.point.z -
+          standMm -
+          Math.min(...slopes.map((slope) => slopeHeightMm(slope, corner.point))),
+      }))
+      return (['left', 'right'] as const).flatMap((side): Planing[] => {
+        const sign = side === 'left' ? 1 : -1
+        const own = corners.filter((corner) => corner.leftMm * sign >= -1e-6)
+        const offMm = Math.max(...own.map((corner) => corner.overMm))
+        const mark = markOf.get(draft.piece.id) ?? ''
+        return offMm > leastOffMm ? [{ mark, end, side, offMm }] : []
+      })
+    }),
+  )

@@ -1,0 +1,90 @@
+import { timberPoint, topFall } from './bevel.ts'
+import type { Timber } from './bevel.ts'
+import type { DraftCut } from './cuts.ts'
+import type { DraftMember } from './members.ts'
+import type { FrameSpec, Point3, RoofSettings } from './roof-types.ts'
+import { along3, cross3, degrees, dot3, planeCrossing, radians, scale3, unit3 } from './vector.ts'
+import type { Plane } from './vector.ts'
+
+const roundTo = (value: number, step: number): number => Math.round(value / step) * step
+
+/** The side a cut's marks start from: its long point, or either arris of a square cut. */
+const markedSide = (cut: DraftCut): 1 | -1 => (cut.longSide === 'right' ? -1 : 1)
+
+/** Normal of the top as the bevel lies on it: square, or the half planed to a slope on the cut's side. */
+const topNormal = (timber: Timber, cut: DraftCut): Point3 => {
+  const away = -markedSide(cut)
+  const { left, right } = timber.arrisFall
+  const fall = (away > 0 ? left : right) / timber.halfMm
+  return unit3(along3(timber.up, timber.left, away * fall * timber.cos))
+}
+
+/**
+ * A cut as it comes out when its long point, face and edge bevels are marked to the given steps:
+ * the plane through the marked point, along both marked lines.
+ */
+export const rebuiltPlane = (
+  timber: Timber,
+  cut: DraftCut,
+  roundMm: number,
+  roundDeg: number,
+): Plane => {
+  const side = markedSide(cut)
+  const leftMm = side * timber.halfMm
+  const along = roundTo(cut.longPointFromHeelMm, roundMm)
+  const point = timberPoint(timber, along, leftMm, topFall(timber, leftMm))
+  const face = radians(roundTo(cut.face.fromEdgeDeg, roundDeg))
+  const edge = radians(roundTo(cut.edge.fromEdgeDeg, roundDeg))
+  const down = along3(scale3(timber.direction, -Math.cos(face)), timber.up, -Math.sin(face))
+  const top = topNormal(timber, cut)
+  const inward = unit3(cross3(timber.direction, top))
+  const across = dot3(inward, timber.left) * side > 0 ? scale3(inward, -1) : inward
+  const back = cut.end === 'head' ? -1 : 1
+  const line = along3(scale3(timber.direction, back * Math.cos(edge)), across, Math.sin(edge))
+  const normal = unit3(cross3(line, down))
+  return { point, normal: dot3(normal, cut.plane.normal) < 0 ? scale3(normal, -1) : normal }
+}
+
+/** Largest gap between a cut and its rebuilt self over the timber's four arrises, mm square to the cut. */
+const gapMm = (timber: Timber, cut: DraftCut, rebuilt: Plane): number => {
+  const facing = Math.abs(dot3(cut.plane.normal, timber.direction))
+  const gaps = [1, -1].flatMap((side) => {
+    const leftMm = side * timber.halfMm
+    return [topFall(timber, leftMm), timber.depthMm / timber.cos].map((downMm) => {
+      const start = timberPoint(timber, 0, leftMm, downMm)
+      const off =
+        planeCrossing(rebuilt, start, timber.direction) -
+        planeCrossing(cut.plane, start, timber.direction)
+      return Math.abs(off) * facing
+    })
+  })
+  return Math.max(...gaps)
+}
+
+/** The joint that suffers most when every number is marked to the settings' steps, mm. */
+export const worstRounding = (
+  drafts: DraftMember[],
+  settings: RoofSettings,
+  markOf: Map<number, string>,
+): FrameSpec['rounding'] => {
+  let worst: FrameSpec['rounding'] = { worstMm: 0, joint: null }
+  for (const { piece, timber, cuts } of drafts) {
+    for (const cut of cuts) {
+      const [against] = cut.bears
+      if (against === undefined) continue
+      const rebuilt = rebuiltPlane(timber, cut, settings.roundMm, settings.roundDeg)
+      const gap = gapMm(timber, cut, rebuilt)
+      if (gap > worst.worstMm + 1e-9) {
+        const joint: [string, string] = [markOf.get(piece.id) ?? '', markOf.get(against) ?? '']
+        worst = { worstMm: gap, joint }
+      }
+    }
+  }
+  return worst
+}
+
+/** Angle between a rebuilt cut and the true one, degrees: for checks of the published numbers. */
+export const rebuildErrorDeg = (timber: Timber, cut: DraftCut): number => {
+  const rebuilt = rebuiltPlane(timber, cut, 1e-9, 1e-9)
+  return degrees(Math.acos(Math.min(1, dot3(rebuilt.normal, cut.plane.normal))))
+}

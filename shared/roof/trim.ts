@@ -1,0 +1,159 @@
+import { boxesMeet, clipConvex, convexOverlap, polygonBox, polygonSignedArea } from './convex.ts'
+import type { Box, Labelled } from './convex.ts'
+import { piecePoint } from './piece.ts'
+import type { Piece, PieceEnd, PlanCut } from './piece.ts'
+import type { Point2 } from './roof-types.ts'
+import { at } from './slopes.ts'
+import { dot2, scale2, sub2 } from './vector.ts'
+
+/** What a side of a trimmed piece's plan is: a long side, a cut (by place in its list), or no face at all. */
+export type Side = { kind: 'face' } | { kind: PieceEnd; cut: number } | { kind: 'open' }
+
+/** Part of a piece that is already placed and in the way of later ones, in plan. */
+export type Obstacle = { piece: number; polygon: Labelled<Side>; box: Box }
+
+/** Overlaps smaller than this in plan are touching faces. */
+const touchMm2 = 0.01
+/** A cut this near to parallel with the piece (cosine) is no end cut. */
+const leastFacing = 0.02
+
+/** The plan of a piece from `fromMm` to `toMm`, its sides faces and its ends open. */
+const strip = (piece: Piece, fromMm: number, toMm: number): Labelled<Side> => {
+  const face: Side = { kind: 'face' }
+  const open: Side = { kind: 'open' }
+  return {
+    points: [
+      piecePoint(piece, fromMm, -piece.halfMm),
+      piecePoint(piece, toMm, -piece.halfMm),
+      piecePoint(piece, toMm, piece.halfMm),
+      piecePoint(piece, fromMm, piece.halfMm),
+    ],
+    labels: [face, open, face, open],
+  }
+}
+
+const cutAway = (polygon: Labelled<Side>, cut: PlanCut, label: Side): Labelled<Side> =>
+  clipConvex(polygon, cut.normal, dot2(cut.normal, cut.point), label)
+
+/** How far past its set-out end a piece is drawn before it is trimmed. */
+const reachPastMm = (piece: Piece): number => 12 * piece.halfMm + 400
+
+/** The plan of a piece with its cuts, from `fromMm` to `toMm`. */
+export const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side> => {
+  let polygon = strip(piece, fromMm, toMm)
+  piece.headCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'head', cut: k })))
+  piece.footCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'foot', cut: k })))
+  return polygon
+}
+
+/** The whole plan of a piece, tail included. */
+export const fullPlan = (piece: Piece): Labelled<Side> => {
+  const past = reachPastMm(piece)
+  const foot = piece.footCuts.length > 0 ? past : piece.tailPlanMm
+  return trimmedPlan(piece, -foot, piece.planMm + (piece.headCuts.length > 0 ? past : 0))
+}
+
+/** One half of a piece, as an obstacle to those that come after it. */
+export const halfObstacle = (piece: Piece, end: PieceEnd): Obstacle => {
+  const past = reachPastMm(piece)
+  const middle = piece.planMm / 2
+  const polygon =
+    end === 'head'
+      ? trimmedPlan(piece, middle, piece.planMm + past)
+      : trimmedPlan(piece, piece.footCuts.length > 0 ? -past : -piece.tailPlanMm, middle)
+  return { piece: piece.id, polygon, box: polygonBox(polygon.points) }
+}
+
+/** The cut, in one of the obstacle's faces, that clears it and leaves most timber. */
+const bestFace = (
+  polygon: Labelled<Side>,
+  obstacle: Obstacle,
+  towardsBody: Point2,
+): PlanCut | null => {
+  let best: PlanCut | null = null
+  let bestArea = touchMm2
+  const { points, labels } = obstacle.polygon
+  points.forEach((p, k) => {
+    if (at(labels, k).kind === 'open') return
+    const side = sub2(at(points, k + 1), p)
+    const size = Math.hypot(side.x, side.y)
+    if (size < 1e-6) return
+    // outward of the obstacle, turned round: off the piece that is cut
+    const normal = { x: -side.y / size, y: side.x / size }
+    if (-dot2(normal, towardsBody) < leastFacing) return
+    const cut: PlanCut = { point: p, normal, mitreWith: null }
+    const left = polygonSignedArea(cutAway(polygon, cut, { kind: 'face' }).points)
+    if (left > bestArea + touchMm2) {
+      best = cut
+      bestArea = left
+    }
+  })
+  return best
+}
+
+type Hit = { obstacle: Obstacle; nearest: number }
+
+const hits = (polygon: Labelled<Side>, obstacles: readonly Obstacle[], away: Point2): Hit[] => {
+  const box = polygonBox(polygon.points)
+  const found: Hit[] = []
+  for (const obstacle of obstacles) {
+    if (!boxesMeet(box, obstacle.box)) continue
+    const shared = convexOverlap(polygon.points, obstacle.polygon.points)
+    if (shared.length < 3 || polygonSignedArea(shared) < touchMm2) continue
+    found.push({ obstacle, nearest: Math.min(...shared.map((p) => dot2(p, away))) })
+  }
+  return found.sort((a, b) => a.nearest - b.nearest)
+}
+
+/** Leaves out cuts that miss the timber which the others leave. */
+const withoutMisses = (whole: Labelled<Side>, cuts: PlanCut[]): PlanCut[] => {
+  let kept = cuts
+  for (const cut of cuts) {
+    const others = kept.filter((other) => other !== cut)
+    const polygon = others.reduce((p, other) => cutAway(p, other, { kind: 'face' }), whole)
+    const left = polygonSignedArea(cutAway(polygon, cut, { kind: 'face' }).points)
+    if (polygonSignedArea(polygon.points) - left < touchMm2) kept = others
+  }
+  return kept
+}
+
+/**
+ * The cuts of one end of a piece: its mitres, then a cheek in the face of each placed piece that it
+ * would run into, nearest first; square through its set-out end where nothing stops it.
+ */
+export const trimEnd = (
+  piece: Piece,
+  end: PieceEnd,
+  obstacles: readonly Obstacle[],
+  mitres: PlanCut[],
+): PlanCut[] => {
+  const away = end === 'head' ? piece.dir : scale2(piece.dir, -1)
+  const past = reachPastMm(piece)
+  const middle = piece.planMm / 2
+  const whole =
+    end === 'head' ? strip(piece, middle, piece.planMm + past) : strip(piece, -past, middle)
+  let polygon = mitres.reduce((p, cut) => cutAway(p, cut, { kind: 'face' }), whole)
+  const cuts = [...mitres]
+  const others = obstacles.filter((obstacle) => obstacle.piece !== piece.id)
+  const clear = () => {
+    for (let round = 0; round < 12; round++) {
+      const facing = hits(polygon, others, away)
+      const cut = facing.reduce<PlanCut | null>(
+        (found, hit) => found ?? bestFace(polygon, hit.obstacle, scale2(away, -1)),
+        null,
+      )
+      if (cut === null) return
+      cuts.push(cut)
+      polygon = cutAway(polygon, cut, { kind: 'face' })
+    }
+  }
+  clear()
+  const endMm = end === 'head' ? piece.planMm : 0
+  const reach = Math.max(...polygon.points.map((p) => dot2(p, away)))
+  const limit = dot2(piecePoint(piece, endMm, 0), away) + past
+  if (reach > limit - 1) {
+    const square = { point: piecePoint(piece, endMm, 0), normal: away, mitreWith: null }
+    cuts.push(square)
+  }
+  return withoutMisses(whole, cuts)
+}
