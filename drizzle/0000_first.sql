@@ -31,6 +31,7 @@ CREATE TABLE `bookings` (
 	`clash_reason` text,
 	`uid` text NOT NULL,
 	`sequence` integer DEFAULT 0 NOT NULL,
+	`short_minutes` integer DEFAULT 0 NOT NULL,
 	`version` integer DEFAULT 1 NOT NULL,
 	`cancelled_at` integer,
 	`created_at` integer NOT NULL,

@@ -21,6 +21,8 @@ export const bookings = sqliteTable(
     /** For calendar files: never changes / rises on a real change. */
     uid: text('uid').notNull(),
     sequence: integer('sequence').notNull().default(0),
+    /** Minutes of the job's work that no booked day has room for, on the job's last booking; set by replan. */
+    shortMinutes: integer('short_minutes').notNull().default(0),
     version: integer('version').notNull().default(1),
     cancelledAt: integer('cancelled_at', { mode: 'timestamp_ms' }),
     createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),

@@ -1,0 +1,141 @@
+import { z } from 'zod'
+import { daysBetween } from '../calendar/days.ts'
+import { daySchema } from '../http/fields.ts'
+import type { RoofGlyphData, RoofGlyphLineKind } from '../drawing/roof-glyph.ts'
+import { bookingStateSchema } from './booking-schemas.ts'
+
+export const longestCalendarDays = 100
+
+export const calendarQuerySchema = z
+  .strictObject({ from: daySchema, to: daySchema })
+  .refine(({ from, to }) => daysBetween(from, to) >= 0, {
+    path: ['to'],
+    message: 'The last day comes before the first.',
+  })
+  .refine(({ from, to }) => daysBetween(from, to) < longestCalendarDays, {
+    path: ['to'],
+    message: `Ask for at most ${longestCalendarDays} days at once.`,
+  })
+
+const lineKinds = ['ridge', 'hip', 'valley', 'broken-hip'] as const satisfies RoofGlyphLineKind[]
+const glyphSchema: z.ZodType<RoofGlyphData, RoofGlyphData> = z.object({
+  outline: z.array(z.tuple([z.number(), z.number()])),
+  lines: z.array(z.tuple([z.number(), z.number(), z.number(), z.number(), z.enum(lineKinds)])),
+})
+
+export const calendarCrewSchema = z.object({
+  id: z.string(),
+  name: z.string(),
+  letter: z.string(),
+  colour: z.number(),
+})
+export type CalendarCrew = z.infer<typeof calendarCrewSchema>
+
+export const dayFlagCodes = [
+  'crew-twice',
+  'crew-twice-on-purpose',
+  'day-not-worked',
+  'nobody-there',
+  'on-leave',
+  'no-roof',
+] as const
+
+/** Something the office should know of a day: what, and a way out. */
+export const dayFlagSchema = z.object({
+  code: z.enum(dayFlagCodes),
+  /** A clash must be settled; a caution may stand. */
+  weight: z.enum(['clash', 'caution']),
+  text: z.string(),
+  wayOut: z.string(),
+})
+export type DayFlag = z.infer<typeof dayFlagSchema>
+
+export const calendarDaySchema = z.object({
+  id: z.string(),
+  day: z.string(),
+  revisionLetter: z.string().nullable(),
+  /** In a few words: 'Hips, creepers'; '' when nothing is planned. */
+  holds: z.string(),
+  plannedMinutes: z.number(),
+  /** Minutes the crew is there: people rostered, less leave, by the firm's hours. */
+  availableMinutes: z.number(),
+  peopleThere: z.number(),
+  /** Has a tick: it stays where it is. */
+  worked: z.boolean(),
+  flags: z.array(dayFlagSchema),
+})
+export type CalendarDay = z.infer<typeof calendarDaySchema>
+
+export const calendarBookingSchema = z.object({
+  id: z.string(),
+  version: z.number(),
+  state: bookingStateSchema,
+  /** 'HH:MM', the firm's own start where the booking names none. */
+  startAt: z.string(),
+  job: z.object({
+    id: z.string(),
+    number: z.string(),
+    title: z.string(),
+    siteAddress: z.string(),
+  }),
+  crew: calendarCrewSchema,
+  glyph: glyphSchema.nullable(),
+  firstDay: z.string(),
+  lastDay: z.string(),
+  dayCount: z.number(),
+  /** Minutes of the job's work that no day has room for; over 0 the booking is too short. */
+  shortMinutes: z.number(),
+  /** Days ahead that hold nothing; over 0 the booking is too long. */
+  emptyDays: z.number(),
+  days: z.array(calendarDaySchema),
+})
+export type CalendarBooking = z.infer<typeof calendarBookingSchema>
+
+export const calendarSchema = z.object({
+  from: z.string(),
+  to: z.string(),
+  today: z.string(),
+  bookings: z.array(calendarBookingSchema),
+  crews: z.array(calendarCrewSchema),
+  workingWeekdays: z.array(z.number()),
+  closedDays: z.array(z.object({ day: z.string(), name: z.string() })),
+})
+export type Calendar = z.infer<typeof calendarSchema>
+
+/** One booking with all its days and what each holds. */
+export const bookingSchema = calendarBookingSchema.omit({ days: true }).extend({
+  /** As typed; null where the firm's start holds. */
+  ownStartAt: z.string().nullable(),
+  gear: z.string(),
+  clashReason: z.string().nullable(),
+  cancelled: z.boolean(),
+  days: z.array(
+    calendarDaySchema.extend({
+      tasks: z.array(
+        z.object({ title: z.string(), quantity: z.number(), plannedMinutes: z.number() }),
+      ),
+    }),
+  ),
+})
+export type Booking = z.infer<typeof bookingSchema>
+
+export const unbookedJobSchema = z.object({
+  id: z.string(),
+  number: z.string(),
+  title: z.string(),
+  siteAddress: z.string(),
+  acceptedOn: z.string(),
+  wantedBy: z.string().nullable(),
+  revisionLetter: z.string().nullable(),
+  glyph: glyphSchema.nullable(),
+  /** Minutes of one person for the whole frame; null while no roof is issued. */
+  workMinutes: z.number().nullable(),
+  /** Working days each crew would need at the strength it has today; null when nobody is in it. */
+  crewDays: z.array(z.object({ crewId: z.string(), days: z.number().nullable() })),
+})
+export type UnbookedJob = z.infer<typeof unbookedJobSchema>
+
+export const unbookedJobsSchema = z.object({
+  jobs: z.array(unbookedJobSchema),
+  crews: z.array(calendarCrewSchema),
+})
