@@ -1,0 +1,119 @@
+import { and, eq } from 'drizzle-orm'
+import { z } from 'zod'
+import { daySchema } from '../../shared/http/fields.ts'
+import { mailNotNeeded } from '../../shared/messages/message-words.ts'
+import { invitationHours, issuePasswordToken, resetHours } from '../auth/password-links.ts'
+import type { DbOrTx } from '../db/client.ts'
+import { toldDays } from '../db/tables/mail-tables.ts'
+import { people } from '../db/tables/people-tables.ts'
+import { readFirm } from '../firm/firm-store.ts'
+import { dayChanges } from './day-changes.ts'
+import { readDayMail } from './day-mail.ts'
+import type { OutboxRow } from './outbox-store.ts'
+import {
+  type AccountMailInput,
+  invitationMail,
+  passwordResetMail,
+} from './templates/account-mails.ts'
+import { changeNoticeMail } from './templates/change-notice.ts'
+import { reminderMail } from './templates/crew-reminder.ts'
+import { type MailDocument, mailHtml, mailText } from './templates/mail-document.ts'
+import { type ToldDay, toldDayOf, toldDaySchema, type ToldPerson } from './told-day.ts'
+
+export type MailText = { subject: string; text: string; html: string }
+
+export type RenderedMail = {
+  /** The person's name and address as they are now: a mended address reaches what still waits. */
+  to: { toName: string; toEmail: string }
+  send: MailText
+  /** As sent, with secret links left out. */
+  keep: MailText
+  /** What the person then knows of a day. */
+  told: { day: string; content: ToldDay; isNotice: boolean } | null
+}
+
+export type Rendering = RenderedMail | { dropped: string }
+
+const dayPayloadSchema = z.object({ day: daySchema })
+
+function textOf(document: MailDocument): MailText {
+  return { subject: document.subject, text: mailText(document), html: mailHtml(document) }
+}
+
+function receiver(person: ToldPerson): RenderedMail['to'] {
+  return { toName: person.name, toEmail: person.email }
+}
+
+function accountMail(
+  db: DbOrTx,
+  person: ToldPerson,
+  from: { appUrl: string; now: Date; hours: number },
+  template: (input: AccountMailInput) => MailDocument,
+): RenderedMail {
+  const token = issuePasswordToken(db, person.id, from.now, from.hours)
+  const about = { personName: person.name, firmName: readFirm(db).name, hours: from.hours }
+  const url = `${from.appUrl}/set-password?token=${token}`
+  return {
+    to: receiver(person),
+    send: textOf(template({ ...about, url })),
+    keep: textOf(template({ ...about, url: null })),
+    told: null,
+  }
+}
+
+function lastTold(db: DbOrTx, personId: string, day: string): ToldDay | null {
+  const row = db
+    .select({ content: toldDays.content })
+    .from(toldDays)
+    .where(and(eq(toldDays.personId, personId), eq(toldDays.day, day)))
+    .get()
+  return row ? toldDaySchema.parse(row.content) : null
+}
+
+function dayMail(db: DbOrTx, row: OutboxRow, person: ToldPerson, appUrl: string): Rendering {
+  const { day } = dayPayloadSchema.parse(row.payload)
+  const firm = readFirm(db)
+  const told = toldDayOf(db, firm, person.id, day)
+  const mail = readDayMail(db, { firm, person, day, told, appUrl })
+  if (row.kind === 'crew-reminder') {
+    if (mail.bookings.length === 0) return { dropped: mailNotNeeded }
+    const text = textOf(reminderMail(mail))
+    return {
+      to: receiver(person),
+      send: text,
+      keep: text,
+      told: { day, content: told, isNotice: false },
+    }
+  }
+  const before = lastTold(db, person.id, day)
+  const changes = before === null ? [] : dayChanges(db, person.id, day, before, told)
+  if (changes.length === 0) return { dropped: mailNotNeeded }
+  const text = textOf(changeNoticeMail(mail, changes))
+  return {
+    to: receiver(person),
+    send: text,
+    keep: text,
+    told: { day, content: told, isNotice: true },
+  }
+}
+
+/** Writes a mail's text from the rows as they are now. Makes secret links, so runs in a transaction. */
+export function renderMail(
+  db: DbOrTx,
+  row: OutboxRow,
+  from: { appUrl: string; now: Date },
+): Rendering {
+  const person = row.personId
+    ? db.select().from(people).where(eq(people.id, row.personId)).get()
+    : undefined
+  if (!person?.active) return { dropped: mailNotNeeded }
+  switch (row.kind) {
+    case 'password-reset':
+      return accountMail(db, person, { ...from, hours: resetHours }, passwordResetMail)
+    case 'invitation':
+      return accountMail(db, person, { ...from, hours: invitationHours }, invitationMail)
+    case 'crew-reminder':
+    case 'change-notice':
+      return dayMail(db, row, person, from.appUrl)
+  }
+}

@@ -1,0 +1,112 @@
+import {
+  cutOneFirst,
+  markingCardLines,
+  markingCardOf,
+  workAtHeight,
+} from '../../../shared/marking/marking-card.ts'
+import type { DayMail, DayMailBooking } from '../day-mail.ts'
+import type { ToldLine } from '../told-day.ts'
+import type { MailBlock } from './mail-document.ts'
+
+type Roof = NonNullable<DayMailBooking['roof']>
+
+export const platesNotMeasured = 'From plan, plates not measured'
+
+const orderOfWork = { cut: 'Cut', stand: 'Stand', 'set-out': 'Set out' } as const
+
+/** What of the line is due today: all of it, or these pieces. */
+function shareWords(line: ToldLine, ofLine: number): string {
+  if (line.quantity === ofLine) return `${line.quantity}`
+  return `${line.quantity} of ${ofLine} (${line.members.join(', ')})`
+}
+
+function lineCard(line: ToldLine, roof: Roof, withNumbers: boolean): MailBlock {
+  const card = markingCardOf(roof.spec, line.mark ?? '', roof.options)
+  const title = `${orderOfWork[line.work]} ${line.mark} ${card.name}: ${shareWords(line, card.quantity)}`
+  if (!withNumbers) return { kind: 'card', title, lines: ['Numbers as under Cut, above.'] }
+  const [first = '', ...rest] = markingCardLines(card)
+  const cautions = card.warnings.map((warning) => `Caution: ${warning.text} ${warning.remedy}`)
+  return { kind: 'card', title, lines: [first, ...rest, ...cautions] }
+}
+
+function markedLines(booking: DayMailBooking, work: 'cut' | 'stand'): ToldLine[] {
+  return booking.told.lines.filter((line) => line.work === work && line.mark !== null)
+}
+
+function workBlocks(booking: DayMailBooking): MailBlock[] {
+  const { roof } = booking
+  const other = booking.told.lines.filter((line) => line.mark === null)
+  const blocks: MailBlock[] = []
+  if (other.length > 0) {
+    blocks.push(
+      { kind: 'subheading', text: 'Set out, try and brace' },
+      { kind: 'list', items: other.map((line) => line.title) },
+    )
+  }
+  if (!roof) {
+    blocks.push({
+      kind: 'caution',
+      text: 'No roof is issued for this job yet, so there are no lengths. Ask the office.',
+    })
+    return blocks
+  }
+  const toCut = markedLines(booking, 'cut')
+  const toStand = markedLines(booking, 'stand')
+  if (!roof.platesMeasured)
+    blocks.push({ kind: 'caution', text: `${platesNotMeasured}. Check sides and diagonals first.` })
+  if (toCut.length > 0) {
+    blocks.push(
+      { kind: 'subheading', text: 'To cut' },
+      { kind: 'paragraph', text: cutOneFirst },
+      ...toCut.map((line) => lineCard(line, roof, true)),
+    )
+  }
+  if (toStand.length > 0) {
+    const cutToday = new Set(toCut.map((line) => line.mark))
+    blocks.push(
+      { kind: 'subheading', text: 'To stand' },
+      ...toStand.map((line) => lineCard(line, roof, !cutToday.has(line.mark))),
+    )
+  }
+  if (toCut.length + toStand.length === 0)
+    blocks.push({ kind: 'paragraph', text: 'No lines of the cut list are planned for this day.' })
+  return blocks
+}
+
+function factsOf(booking: DayMailBooking): [string, string][] {
+  const { told } = booking
+  const facts: [string, string][] = [
+    ['Start', told.startAt],
+    ['Site', told.site],
+    ['Getting in', told.access],
+    ['On site ask for', booking.siteContact],
+    ['Who', booking.who.join(', ')],
+    ['Bring', told.gear],
+    ['Roof', told.revision === null ? '' : `Revision ${told.revision}`],
+    ['Notes', booking.crewNotes],
+  ]
+  return facts.filter(([, value]) => value.trim() !== '')
+}
+
+function bookingBlocks(booking: DayMailBooking): MailBlock[] {
+  return [
+    { kind: 'heading', text: `${booking.told.jobNumber} ${booking.told.jobTitle}` },
+    { kind: 'facts', facts: factsOf(booking) },
+    ...workBlocks(booking),
+  ]
+}
+
+/** The whole day: each booking with its facts and numbers, the safety words, the link. */
+export function dayBlocks(mail: DayMail): MailBlock[] {
+  if (mail.bookings.length === 0) return []
+  return [
+    ...mail.bookings.flatMap(bookingBlocks),
+    { kind: 'caution', text: workAtHeight },
+    { kind: 'link', label: `Open ${mail.dayWords}`, url: mail.url },
+  ]
+}
+
+export function closingBlock(mail: DayMail): MailBlock {
+  const call = mail.firmPhone === '' ? '' : ` Questions: call the office on ${mail.firmPhone}.`
+  return { kind: 'paragraph', text: `${mail.firmName}.${call}` }
+}
