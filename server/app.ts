@@ -16,9 +16,11 @@ import { AppError } from './http/app-error.ts'
 import { errorHandler } from './http/error-handler.ts'
 import { requestId, requestIdOf } from './http/request-id.ts'
 import { refuseCrossSiteWrites } from './http/same-origin.ts'
+import { jobRoutes } from './jobs/job-routes.ts'
+import { revisionRoutes } from './revisions/revision-routes.ts'
+import { createRevisionService } from './revisions/revision-service.ts'
 import type { Clock } from './lib/clock.ts'
 import { peopleRoutes } from './people/people-routes.ts'
-import { createPeopleService } from './people/people-service.ts'
 
 export type AppDeps = {
   env: Env
@@ -81,8 +83,13 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
   eventRoutes(api, deps.events)
+  revisionRoutes(
+    api,
+    createRevisionService({ db, clock, events: deps.events, takeRevision: () => undefined }),
+  )
+  jobRoutes(api, { db, clock, events: deps.events })
   const replanUpcoming = () => undefined
-  peopleRoutes(api, createPeopleService({ db, clock, events: deps.events, replanUpcoming }))
+  peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })
 }
 

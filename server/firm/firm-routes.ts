@@ -20,9 +20,7 @@ type Deps = {
 
 /** The firm as its settings screen edits it; the covering belongs to a job, not to the firm. */
 export function firmSettings(db: DbOrTx): FirmSettings {
-  const { roofSettings, ...rest } = readFirm(db)
-  const { covering: _ofTheJob, ...settings } = roofSettings
-  return { ...rest, roofSettings: settings }
+  return firmSchema.parse(readFirm(db))
 }
 
 export function firmRoutes(api: Api, deps: Deps): void {

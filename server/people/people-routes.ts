@@ -16,7 +16,10 @@ import { currentUser } from '../auth/current-user.ts'
 import { type Api, send } from '../http/api.ts'
 import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
-import type { PeopleService } from './people-service.ts'
+import { addCrew, addLeave, dropLeave, editCrew, listCrews, movePerson } from './crew-service.ts'
+import { firmToday, type PeopleDeps } from './people-change.ts'
+import { addPerson, editPerson, inviteAgain } from './people-service.ts'
+import { listPeople } from './people-store.ts'
 
 /** An id in the path that is no id is a row that is not there. */
 function idIn(req: Request, name: string): string {
@@ -25,15 +28,15 @@ function idIn(req: Request, name: string): string {
   return parsed.data
 }
 
-export function peopleRoutes(api: Api, people: PeopleService): void {
+export function peopleRoutes(api: Api, deps: PeopleDeps): void {
   api.route('get', '/api/people', 'person:read', (_req, res) => {
-    send(res, peopleListSchema, { people: people.list() })
+    send(res, peopleListSchema, { people: listPeople(deps.db, firmToday(deps)) })
   })
   api.route('post', '/api/people', 'person:write', (req, res) => {
     send(
       res,
       personSchema,
-      people.create(currentUser(res), parseInput(createPersonSchema, req.body)),
+      addPerson(deps, currentUser(res), parseInput(createPersonSchema, req.body)),
       201,
     )
   })
@@ -41,26 +44,26 @@ export function peopleRoutes(api: Api, people: PeopleService): void {
     send(
       res,
       personSchema,
-      people.edit(currentUser(res), idIn(req, 'id'), parseInput(editPersonSchema, req.body)),
+      editPerson(deps, currentUser(res), idIn(req, 'id'), parseInput(editPersonSchema, req.body)),
     )
   })
   api.route('post', '/api/people/:id/invitation', 'person:write', (req, res) => {
     parseInput(z.strictObject({}), req.body)
-    people.inviteAgain(currentUser(res), idIn(req, 'id'))
+    inviteAgain(deps, currentUser(res), idIn(req, 'id'))
     send(res, doneSchema, { done: true }, 202)
   })
   api.route('put', '/api/people/:id/crew', 'crew:write', (req, res) => {
     send(
       res,
       personSchema,
-      people.move(currentUser(res), idIn(req, 'id'), parseInput(moveCrewSchema, req.body)),
+      movePerson(deps, currentUser(res), idIn(req, 'id'), parseInput(moveCrewSchema, req.body)),
     )
   })
   api.route('post', '/api/people/:id/leave', 'person:write', (req, res) => {
     send(
       res,
       personSchema,
-      people.addLeave(currentUser(res), idIn(req, 'id'), parseInput(addLeaveSchema, req.body)),
+      addLeave(deps, currentUser(res), idIn(req, 'id'), parseInput(addLeaveSchema, req.body)),
       201,
     )
   })
@@ -68,18 +71,18 @@ export function peopleRoutes(api: Api, people: PeopleService): void {
     send(
       res,
       personSchema,
-      people.dropLeave(currentUser(res), idIn(req, 'id'), idIn(req, 'leaveId')),
+      dropLeave(deps, currentUser(res), idIn(req, 'id'), idIn(req, 'leaveId')),
     )
   })
   api.route('get', '/api/crews', 'crew:read', (_req, res) => {
-    send(res, crewListSchema, { crews: people.crews(currentUser(res)) })
+    send(res, crewListSchema, { crews: listCrews(deps, currentUser(res)) })
   })
   api.route('post', '/api/crews', 'crew:write', (req, res) => {
-    people.addCrew(currentUser(res), parseInput(crewInputSchema, req.body))
+    addCrew(deps, currentUser(res), parseInput(crewInputSchema, req.body))
     send(res, doneSchema, { done: true }, 201)
   })
   api.route('put', '/api/crews/:id', 'crew:write', (req, res) => {
-    people.editCrew(currentUser(res), idIn(req, 'id'), parseInput(crewInputSchema, req.body))
+    editCrew(deps, currentUser(res), idIn(req, 'id'), parseInput(crewInputSchema, req.body))
     send(res, doneSchema, { done: true })
   })
 }

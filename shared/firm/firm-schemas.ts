@@ -75,5 +75,9 @@ const firmFields = {
 }
 
 export const editFirmSchema = z.strictObject({ ...firmFields, version: versionSchema })
-export const firmSchema = z.object({ ...firmFields, version: z.number() })
+export const firmSchema = z.object({
+  ...firmFields,
+  roofSettings: z.object(firmRoofSettingsSchema.shape),
+  version: z.number(),
+})
 export type FirmSettings = z.infer<typeof firmSchema>

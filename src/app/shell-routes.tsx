@@ -8,4 +8,20 @@ export const shellRoutes: RouteObject[] = [
       Component: (await import('../features/auth/account-page.tsx')).AccountPage,
     }),
   },
+  {
+    path: 'people',
+    lazy: async () => ({
+      Component: (await import('../features/people/people-page.tsx')).PeoplePage,
+    }),
+  },
+  {
+    path: 'people/:personId',
+    lazy: async () => ({
+      Component: (await import('../features/people/people-page.tsx')).PeoplePage,
+    }),
+  },
+  {
+    path: 'firm',
+    lazy: async () => ({ Component: (await import('../features/firm/firm-page.tsx')).FirmPage }),
+  },
 ]

@@ -4,7 +4,7 @@ import { type LiveEvent, liveEventSchema } from '../../shared/events/live-event.
 
 /** First part of the query keys that a topic makes stale; a feature's `all()` key is its topic. */
 const keysByTopic: Record<LiveEvent['topic'], readonly string[]> = {
-  jobs: ['jobs', 'calendar'],
+  jobs: ['jobs', 'calendar', 'day-sheet'],
   roof: ['roof', 'jobs', 'calendar', 'day-sheet'],
   calendar: ['calendar', 'jobs', 'day-sheet'],
   'day-sheet': ['day-sheet', 'calendar'],

@@ -1,8 +1,9 @@
 import { type FormEvent, useState } from 'react'
 import type { Crew } from '../../../shared/people/people-schemas.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
-import { failureText, issueAt } from '../../lib/failure-text.ts'
+import { issueAt } from '../../lib/failure-text.ts'
 import { Button } from '../../ui/button.tsx'
+import { FormFailure } from '../../ui/form-failure.tsx'
 import { Field } from '../../ui/field.tsx'
 import { TextInput } from '../../ui/inputs.tsx'
 import { useSaveCrew } from './people-queries.ts'
@@ -56,11 +57,7 @@ export function CrewForm({ crew, onDone }: { crew: Crew | null; onDone: () => vo
           ))}
         </div>
       </fieldset>
-      {failureText(save.error, ['name', 'letter']) ? (
-        <p role="alert" className="font-semibold text-stop">
-          {failureText(save.error, ['name', 'letter'])}
-        </p>
-      ) : null}
+      <FormFailure error={save.error} shownPaths={['name', 'letter']} />
       <Button type="submit" busy={save.isPending}>
         Save crew
       </Button>

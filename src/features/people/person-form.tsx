@@ -1,11 +1,13 @@
 import { type FormEvent, useState } from 'react'
 import { roleNames, roles, type Role } from '../../../shared/auth/roles.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
-import { failureText, issueAt } from '../../lib/failure-text.ts'
+import { issueAt } from '../../lib/failure-text.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { Checkbox, Select, TextInput } from '../../ui/inputs.tsx'
+import { FormFailure } from '../../ui/form-failure.tsx'
 import { useToast } from '../../ui/toast.tsx'
+import { CrewSelect } from './crew-select.tsx'
 import { useAddPerson, useEditPerson } from './people-queries.ts'
 
 type Props = { person: Person | null; crews: Crew[]; onDone: () => void }
@@ -28,9 +30,7 @@ export function PersonForm({ person, crews, onDone }: Props) {
   const set = (name: keyof typeof fields) => (event: { target: { value: string } }) =>
     setFields((now) => ({ ...now, [name]: event.target.value }))
 
-  const submit = (event: FormEvent) => {
-    event.preventDefault()
-    if (mutation.isPending) return
+  const save = () => {
     const done = (text: string) => () => {
       toast(text)
       onDone()
@@ -48,6 +48,10 @@ export function PersonForm({ person, crews, onDone }: Props) {
     }
   }
 
+  const submit = (event: FormEvent) => {
+    event.preventDefault()
+    if (!mutation.isPending) save()
+  }
   return (
     <form onSubmit={submit} noValidate className="space-y-4">
       <Field label="Name" error={issueAt(mutation.error, 'name')}>
@@ -80,21 +84,10 @@ export function PersonForm({ person, crews, onDone }: Props) {
         />
       ) : (
         <Field label="Crew from today" error={issueAt(mutation.error, 'crewId')}>
-          <Select value={crewId} onChange={(event) => setCrewId(event.target.value)}>
-            <option value="">No crew</option>
-            {crews.map((crew) => (
-              <option key={crew.id} value={crew.id}>
-                {crew.name}
-              </option>
-            ))}
-          </Select>
+          <CrewSelect crews={crews} value={crewId} onChange={setCrewId} />
         </Field>
       )}
-      {failureText(mutation.error, fieldPaths) ? (
-        <p role="alert" className="font-semibold text-stop">
-          {failureText(mutation.error, fieldPaths)}
-        </p>
-      ) : null}
+      <FormFailure error={mutation.error} shownPaths={fieldPaths} />
       <Button type="submit" busy={mutation.isPending}>
         {person ? 'Save' : 'Add and send a link'}
       </Button>

@@ -1,13 +1,15 @@
 import { type FormEvent, useState } from 'react'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
-import { failureText, issueAt } from '../../lib/failure-text.ts'
+import { issueAt } from '../../lib/failure-text.ts'
 import { useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
+import { FormFailure } from '../../ui/form-failure.tsx'
 import { Field } from '../../ui/field.tsx'
-import { Select, TextInput } from '../../ui/inputs.tsx'
+import { TextInput } from '../../ui/inputs.tsx'
 import { useToast } from '../../ui/toast.tsx'
+import { CrewSelect } from './crew-select.tsx'
 import { useAddLeave, useDropLeave, useInviteAgain, useMoveCrew } from './people-queries.ts'
 import { PersonForm } from './person-form.tsx'
 
@@ -41,14 +43,7 @@ function CrewMove({ person, crews }: Omit<Props, 'onClose'>) {
       </p>
       <div className="grid gap-3 sm:grid-cols-2">
         <Field label="Crew" error={issueAt(move.error, 'crewId')}>
-          <Select value={crewId} onChange={(event) => setCrewId(event.target.value)}>
-            <option value="">No crew</option>
-            {crews.map((crew) => (
-              <option key={crew.id} value={crew.id}>
-                {crew.name}
-              </option>
-            ))}
-          </Select>
+          <CrewSelect crews={crews} value={crewId} onChange={setCrewId} />
         </Field>
         <Field label="From" error={issueAt(move.error, 'from')}>
           <TextInput
@@ -59,11 +54,7 @@ function CrewMove({ person, crews }: Omit<Props, 'onClose'>) {
           />
         </Field>
       </div>
-      {failureText(move.error, ['crewId', 'from']) ? (
-        <p role="alert" className="font-semibold text-stop">
-          {failureText(move.error, ['crewId', 'from'])}
-        </p>
-      ) : null}
+      <FormFailure error={move.error} shownPaths={['crewId', 'from']} />
       <Button type="submit" kind="plain" busy={move.isPending}>
         Move
       </Button>
@@ -71,33 +62,60 @@ function CrewMove({ person, crews }: Omit<Props, 'onClose'>) {
   )
 }
 
-function Leave({ person }: { person: Person }) {
+function LeaveForm({ person }: { person: Person }) {
   const { firm } = useSession()
   const [startsOn, setStartsOn] = useState(firm.today)
   const [endsOn, setEndsOn] = useState(firm.today)
   const [reason, setReason] = useState('')
   const add = useAddLeave()
-  const drop = useDropLeave()
-  const toast = useToast()
   const submit = (event: FormEvent) => {
     event.preventDefault()
-    if (!add.isPending)
-      add.mutate({ id: person.id, startsOn, endsOn, reason }, { onSuccess: () => setReason('') })
+    if (add.isPending) return
+    add.mutate({ id: person.id, startsOn, endsOn, reason }, { onSuccess: () => setReason('') })
   }
-  const takeBack = (leave: Person['leave'][number]) =>
+  return (
+    <form onSubmit={submit} noValidate className="space-y-3">
+      <div className="grid gap-3 sm:grid-cols-2">
+        <Field label="First day away" error={issueAt(add.error, 'startsOn')}>
+          <TextInput
+            type="date"
+            value={startsOn}
+            onChange={(event) => setStartsOn(event.target.value)}
+          />
+        </Field>
+        <Field label="Last day away" error={issueAt(add.error, 'endsOn')}>
+          <TextInput
+            type="date"
+            value={endsOn}
+            onChange={(event) => setEndsOn(event.target.value)}
+          />
+        </Field>
+      </div>
+      <Field
+        label="Reason"
+        hint="Trade school, annual leave …"
+        error={issueAt(add.error, 'reason')}
+      >
+        <TextInput value={reason} onChange={(event) => setReason(event.target.value)} />
+      </Field>
+      <FormFailure error={add.error} shownPaths={['startsOn', 'endsOn', 'reason']} />
+      <Button type="submit" kind="plain" busy={add.isPending}>
+        Add leave
+      </Button>
+    </form>
+  )
+}
+
+function Leave({ person }: { person: Person }) {
+  const add = useAddLeave()
+  const drop = useDropLeave()
+  const toast = useToast()
+  const takeBack = ({ id, ...leave }: Person['leave'][number]) =>
     drop.mutate(
-      { id: person.id, leaveId: leave.id },
+      { id: person.id, leaveId: id },
       {
         onSuccess: () =>
-          toast('Leave taken back.', {
-            undo: () =>
-              add.mutate({
-                id: person.id,
-                startsOn: leave.startsOn,
-                endsOn: leave.endsOn,
-                reason: leave.reason,
-              }),
-          }),
+          toast('Leave taken back.', { undo: () => add.mutate({ id: person.id, ...leave }) }),
       },
     )
   return (
@@ -121,34 +139,7 @@ function Leave({ person }: { person: Person }) {
           </li>
         ))}
       </ul>
-      <form onSubmit={submit} noValidate className="space-y-3">
-        <div className="grid gap-3 sm:grid-cols-2">
-          <Field label="First day away" error={issueAt(add.error, 'startsOn')}>
-            <TextInput
-              type="date"
-              value={startsOn}
-              onChange={(event) => setStartsOn(event.target.value)}
-            />
-          </Field>
-          <Field label="Last day away" error={issueAt(add.error, 'endsOn')}>
-            <TextInput
-              type="date"
-              value={endsOn}
-              onChange={(event) => setEndsOn(event.target.value)}
-            />
-          </Field>
-        </div>
-        <Field
-          label="Reason"
-          hint="Trade school, annual leave …"
-          error={issueAt(add.error, 'reason')}
-        >
-          <TextInput value={reason} onChange={(event) => setReason(event.target.value)} />
-        </Field>
-        <Button type="submit" kind="plain" busy={add.isPending}>
-          Add leave
-        </Button>
-      </form>
+      <LeaveForm person={person} />
     </div>
   )
 }

@@ -1,0 +1,114 @@
+import { and, asc, eq, inArray, ne } from 'drizzle-orm'
+import type { z } from 'zod'
+import { permissionScope } from '../../shared/auth/permissions.ts'
+import type {
+  addLeaveSchema,
+  Crew,
+  crewInputSchema,
+  moveCrewSchema,
+  Person,
+} from '../../shared/people/people-schemas.ts'
+import type { CurrentUser } from '../auth/current-user.ts'
+import type { DbOrTx } from '../db/client.ts'
+import { crews, leave } from '../db/tables/people-tables.ts'
+import { invalidField, notFound } from '../http/app-error.ts'
+import { newId } from '../lib/ids.ts'
+import {
+  changePeople,
+  firmToday,
+  type PeopleDeps,
+  personView,
+  requireCrew,
+  requirePersonRow,
+} from './people-change.ts'
+import { moveToCrew } from './people-store.ts'
+import { crewIdsOf } from './roster.ts'
+
+type CrewInput = z.output<typeof crewInputSchema>
+
+export function movePerson(
+  deps: PeopleDeps,
+  user: CurrentUser,
+  id: string,
+  { crewId, from }: z.output<typeof moveCrewSchema>,
+): Person {
+  changePeople(deps, user, { action: 'crew changed', entityId: id }, (tx) => {
+    requirePersonRow(tx, id)
+    requireCrew(tx, crewId)
+    if (from < firmToday(deps)) {
+      throw invalidField('from', 'A move starts today or later: days past stay as they were.')
+    }
+    moveToCrew(tx, id, crewId, from)
+  })
+  return personView(deps, id)
+}
+
+export function addLeave(
+  deps: PeopleDeps,
+  user: CurrentUser,
+  personId: string,
+  input: z.output<typeof addLeaveSchema>,
+): Person {
+  changePeople(deps, user, { action: 'leave added', entityId: personId }, (tx) => {
+    requirePersonRow(tx, personId)
+    tx.insert(leave)
+      .values({ id: newId(), personId, ...input })
+      .run()
+  })
+  return personView(deps, personId)
+}
+
+export function dropLeave(
+  deps: PeopleDeps,
+  user: CurrentUser,
+  personId: string,
+  leaveId: string,
+): Person {
+  changePeople(deps, user, { action: 'leave taken back', entityId: personId }, (tx) => {
+    const gone = tx
+      .delete(leave)
+      .where(and(eq(leave.id, leaveId), eq(leave.personId, personId)))
+      .run()
+    if (gone.changes === 0) throw notFound('That leave')
+  })
+  return personView(deps, personId)
+}
+
+/** The office sees every crew, a leading hand the own one. */
+export function listCrews(deps: PeopleDeps, user: CurrentUser): Crew[] {
+  const all = permissionScope(user.role, 'crew:read') === 'all'
+  const own = all ? null : crewIdsOf(deps.db, user.id, firmToday(deps))
+  return deps.db
+    .select()
+    .from(crews)
+    .where(own ? inArray(crews.id, own) : undefined)
+    .orderBy(asc(crews.letter))
+    .all()
+}
+
+function refuseTakenLetter(tx: DbOrTx, letter: string, exceptId: string): void {
+  const taken = tx
+    .select({ id: crews.id })
+    .from(crews)
+    .where(and(eq(crews.letter, letter), ne(crews.id, exceptId)))
+    .get()
+  if (taken) throw invalidField('letter', 'Another crew has this letter.')
+}
+
+export function addCrew(deps: PeopleDeps, user: CurrentUser, input: CrewInput): void {
+  const id = newId()
+  changePeople(deps, user, { action: 'crew added', entityId: id }, (tx) => {
+    refuseTakenLetter(tx, input.letter, id)
+    tx.insert(crews)
+      .values({ id, ...input })
+      .run()
+  })
+}
+
+export function editCrew(deps: PeopleDeps, user: CurrentUser, id: string, input: CrewInput): void {
+  changePeople(deps, user, { action: 'crew changed', entityId: id }, (tx) => {
+    refuseTakenLetter(tx, input.letter, id)
+    if (tx.update(crews).set(input).where(eq(crews.id, id)).run().changes === 0)
+      throw notFound('That crew')
+  })
+}

@@ -1,0 +1,56 @@
+import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
+import type { MemberRole } from '../../../shared/roof/roof-types.ts'
+
+export type NumberField<Key extends string> = {
+  key: Key
+  label: string
+  unit: string
+  hint?: string
+}
+
+export const roofFields: NumberField<keyof FirmSettings['roofSettings']>[] = [
+  {
+    key: 'sawMaxTiltDeg',
+    label: 'Saw tilts to',
+    unit: '°',
+    hint: 'Past this a bevel is flagged with the way round it.',
+  },
+  {
+    key: 'minCreeperMm',
+    label: 'Shortest creeper',
+    unit: 'mm',
+    hint: 'Set-out length; shorter ones are left out.',
+  },
+  { key: 'longestStockMm', label: 'Longest stock', unit: 'mm' },
+  {
+    key: 'maxRafterSpanMm',
+    label: 'Longest rafter span',
+    unit: 'mm',
+    hint: 'From the span tables or the engineer for your timber.',
+  },
+  { key: 'densityKgM3', label: 'Timber weighs', unit: 'kg/m³' },
+  { key: 'roundMm', label: 'Lengths are marked to', unit: 'mm' },
+  { key: 'roundDeg', label: 'Bevels are marked to', unit: '°' },
+]
+
+export const labourFields: NumberField<Exclude<keyof FirmSettings['labourRates'], 'pieces'>>[] = [
+  { key: 'setOutMinutes', label: 'Check and set out plates, once', unit: 'min' },
+  { key: 'setOutMinutesPerPlateM', label: 'and for each metre of plate', unit: 'min' },
+  { key: 'firstPairMinutes', label: 'Cut and try the first pair', unit: 'min' },
+  { key: 'braceRidgeMinutes', label: 'Brace a ridge', unit: 'min' },
+  { key: 'tailLineMinutesPerEaveM', label: 'Tails to a line, each metre of eave', unit: 'min' },
+]
+
+export const pieceNames: Record<MemberRole, string> = {
+  ridge: 'Ridge',
+  common: 'Common rafter',
+  'crown-end': 'Crown end rafter',
+  hip: 'Hip',
+  'broken-hip': 'Broken hip',
+  valley: 'Valley',
+  creeper: 'Creeper',
+  'valley-creeper': 'Valley creeper',
+  'cripple-creeper': 'Cripple creeper',
+}
+
+export const weekdays = ['Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat', 'Sun'] as const
