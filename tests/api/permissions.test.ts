@@ -19,12 +19,11 @@ test('every route answers 401 signed out unless it is public, 403 to a role with
     if (answer.status !== 401) faults.push(`signed out: ${method} ${path} gave ${answer.status}`)
   }
   for (const role of roles) {
-    const person = app.addPerson(role, `Walker ${role}`)
+    const agent = await app.agentFor(app.addPerson(role, `Walker ${role}`).email)
     for (const { method, path, access } of app.api.routes) {
       // Signing out would end the walk; the event stream never ends by itself.
       const skipped = path === '/api/events' || (method === 'delete' && path === '/api/session')
       if (access === 'public' || skipped) continue
-      const agent = await app.agentFor(person.email)
       const answer = await agent[method](filled(path)).send(method === 'get' ? undefined : {})
       const refused = answer.status === 403
       if (answer.status === 401) faults.push(`${role}: ${method} ${path} was signed out`)
