@@ -1,6 +1,10 @@
 import type { Angle, Cut, Member } from '../roof/roof-types.ts'
+import { formatAngle } from '../units/format-angle.ts'
 
-/** One setting of the bevel: where it is laid and what it is set to. */
+/** What a bevel marks; the drawing puts its letter there. */
+export type BevelPlace = 'heel' | 'seat' | 'tail' | 'foot' | 'head' | 'backing'
+
+/** One setting of the bevel, and everything on this timber that is marked with it. */
 export type BevelDialData = {
   /** Stands at the cut in the drawing too. */
   letter: string
@@ -8,74 +12,93 @@ export type BevelDialData = {
   /** Which face of the timber the bevel is laid on. */
   where: 'side' | 'top' | 'end'
   angle: Angle
-  /** Blade tilt and other things to know before sawing. */
-  notes: string[]
-  /** What it marks, so that the drawing can put the letter there. */
-  at: 'head' | 'foot' | 'tail' | 'seat' | 'heel' | 'backing'
+  /** 'heel', 'head, left cheek' … in the order of marking. */
+  uses: string[]
+  places: BevelPlace[]
   /** For a bevel across the top: the side of its long point. */
   longSide: 'left' | 'right' | 'none'
   bladeTiltDeg: number | null
   pastSaw: boolean
+  notes: string[]
 }
 
 type LooseDial = Omit<BevelDialData, 'letter'>
 
 const sameDeg = 0.05
-const endNames = { head: 'Head', foot: 'Foot', tail: 'Tail' } as const
 
-/** Every bevel of a timber once, in the order it is marked: birdsmouth, tail, head, backing. */
+/** Every bevel of a timber once, in the order it is marked: heel, seat, tail, head, backing. */
 export function bevelDialsOf(member: Member): BevelDialData[] {
-  const dials = [
-    ...birdsmouthDials(member),
-    ...member.cuts.filter((cut) => cut.end !== 'head').flatMap(cutDials),
-    ...member.cuts.filter((cut) => cut.end === 'head').flatMap(cutDials),
-    ...backingDials(member),
+  const ends = [
+    member.cuts.filter((cut) => cut.end !== 'head'),
+    member.cuts.filter((cut) => cut.end === 'head'),
   ]
-  return withoutRepeats(dials).map((dial, i) => ({ ...dial, letter: letterFor(i) }))
+  const cutDials = ends.flatMap((cuts) =>
+    cuts.flatMap((cut) => [sideDial(member, cut), ...topDials(member, cut, cuts)]),
+  )
+  const dials = [...birdsmouthDials(member), ...cutDials, ...backingDials(member)]
+  return gathered(dials).map((dial, i) => ({ ...dial, letter: letterFor(i) }))
 }
 
 /** "plumb cut" when it follows the plumb line down the side, "square cut" when square to the edge. */
 export function cutWords(member: Member, cut: Cut): string {
   if (Math.abs(cut.face.fromSquareDeg) <= sameDeg) return 'square cut'
-  return Math.abs(cut.face.fromSquareDeg - member.pitchDeg) <= sameDeg ? 'plumb cut' : 'cut'
+  return isPlumb(member, cut) ? 'plumb cut' : 'cut'
 }
 
-function cutDials(cut: Cut, _: number, cuts: readonly Cut[]): LooseDial[] {
-  const name = endNames[cut.end]
-  const cheek = cuts.length > 1 ? `, ${cut.longSide === 'left' ? 'right' : 'left'} cheek` : ''
-  const common = { at: cut.end, longSide: cut.longSide, pastSaw: cut.pastSaw }
-  const isSquareAcross = Math.abs(cut.edge.fromSquareDeg) <= sameDeg
-  const down: LooseDial = {
-    ...common,
-    title: `${name}, down the side`,
+function isPlumb(member: Member, cut: Cut): boolean {
+  return Math.abs(cut.face.fromSquareDeg - member.pitchDeg) <= sameDeg
+}
+
+function sideDial(member: Member, cut: Cut): LooseDial {
+  const words = cutWords(member, cut)
+  const titles: Record<string, string> = { 'plumb cut': 'Plumb bevel', 'square cut': 'Square' }
+  return {
+    title: titles[words] ?? 'Bevel down the side',
     where: 'side',
     angle: cut.face,
-    notes: isSquareAcross ? ['Square across the top'] : [],
+    uses: [cut.end],
+    places: [cut.end],
+    longSide: 'none',
     bladeTiltDeg: null,
-  }
-  const across: LooseDial = {
-    ...common,
-    title: `${name}, across the top${cheek}`,
-    where: 'top',
-    angle: cut.edge,
+    pastSaw: false,
     notes: [],
-    bladeTiltDeg: cut.bladeTiltDeg,
   }
-  return isSquareAcross ? [down] : [down, across]
+}
+
+function topDials(member: Member, cut: Cut, beside: readonly Cut[]): LooseDial[] {
+  if (cut.longSide === 'none') return []
+  const cheek = beside.length > 1 ? `, ${cut.longSide === 'left' ? 'right' : 'left'} cheek` : ''
+  const otherTop = member.backing ? 'On a square top' : 'On a backed top'
+  return [
+    {
+      title: 'Edge bevel',
+      where: 'top',
+      angle: cut.edge,
+      uses: [`${cut.end}${cheek}`],
+      places: [cut.end],
+      longSide: cut.longSide,
+      bladeTiltDeg: cut.bladeTiltDeg,
+      pastSaw: cut.pastSaw,
+      notes: cut.edgeOtherTop
+        ? [`${otherTop} ${formatAngle(cut.edgeOtherTop.fromEdgeDeg)} from edge`]
+        : [],
+    },
+  ]
 }
 
 function birdsmouthDials(member: Member): LooseDial[] {
   if (!member.birdsmouth) return []
   const { seatFromEdgeDeg, heelFromEdgeDeg } = member.birdsmouth
-  const dial = (at: 'seat' | 'heel', fromEdgeDeg: number): LooseDial => ({
-    at,
-    title: at === 'seat' ? 'Birdsmouth seat' : 'Birdsmouth heel',
+  const dial = (place: 'seat' | 'heel', fromEdgeDeg: number): LooseDial => ({
+    title: place === 'seat' ? 'Seat bevel' : 'Plumb bevel',
     where: 'side',
     angle: { fromEdgeDeg, fromSquareDeg: 90 - fromEdgeDeg },
-    notes: [],
+    uses: [place],
+    places: [place],
     longSide: 'none',
     bladeTiltDeg: null,
     pastSaw: false,
+    notes: [],
   })
   return [dial('heel', heelFromEdgeDeg), dial('seat', seatFromEdgeDeg)]
 }
@@ -83,44 +106,63 @@ function birdsmouthDials(member: Member): LooseDial[] {
 function backingDials(member: Member): LooseDial[] {
   if (!member.backing) return []
   const { leftDeg, rightDeg } = member.backing
-  const isSame = Math.abs(leftDeg - rightDeg) <= sameDeg
-  const dial = (side: string, fromSquareDeg: number): LooseDial => ({
-    at: 'backing',
-    title: side === '' ? 'Backing, both edges' : `Backing, ${side} edge`,
+  const dial = (use: string, fromSquareDeg: number): LooseDial => ({
+    title: 'Backing',
     where: 'end',
     angle: { fromEdgeDeg: 90 - fromSquareDeg, fromSquareDeg },
-    notes: ['Planed off the top, from the side face'],
+    uses: [use],
+    places: ['backing'],
     longSide: 'none',
     bladeTiltDeg: null,
     pastSaw: false,
+    notes: [],
   })
-  return isSame ? [dial('', leftDeg)] : [dial('left', leftDeg), dial('right', rightDeg)]
-}
-
-/** Bevels set alike at one end are one dial: two equal cheeks, two tail cuts. */
-function withoutRepeats(dials: readonly LooseDial[]): LooseDial[] {
-  const kept: LooseDial[] = []
-  for (const dial of dials) {
-    const same = kept.findIndex((one) => isSameSetting(one, dial))
-    const found = kept[same]
-    if (!found) kept.push(dial)
-    else if (dial.where === 'top')
-      kept[same] = { ...found, title: bothCheeks(found.title), longSide: 'none' }
-  }
-  return kept
-}
-
-function isSameSetting(a: LooseDial, b: LooseDial): boolean {
-  return (
-    a.at === b.at &&
-    a.where === b.where &&
-    a.at !== 'backing' &&
-    Math.abs(a.angle.fromEdgeDeg - b.angle.fromEdgeDeg) <= sameDeg
+  if (Math.abs(leftDeg - rightDeg) <= sameDeg) return [dial('both edges', leftDeg)]
+  return [dial('left edge', leftDeg), dial('right edge', rightDeg)].filter(
+    (one) => one.angle.fromSquareDeg > sameDeg,
   )
 }
 
-function bothCheeks(title: string): string {
-  return title.replace(/, (left|right) cheek$/, ', both cheeks')
+/** A bevel is set once and used for all that is marked with it. */
+function gathered(dials: readonly LooseDial[]): LooseDial[] {
+  const kept: LooseDial[] = []
+  for (const dial of dials) {
+    const at = kept.findIndex((one) => isSameSetting(one, dial))
+    const found = kept[at]
+    if (found) kept[at] = together(found, dial)
+    else kept.push(dial)
+  }
+  return kept.map((dial) => ({ ...dial, uses: withBothCheeks(dial.uses) }))
+}
+
+function isSameSetting(a: LooseDial, b: LooseDial): boolean {
+  const tiltGapDeg = Math.abs((a.bladeTiltDeg ?? 0) - (b.bladeTiltDeg ?? 0))
+  return (
+    a.where === b.where &&
+    a.where !== 'end' &&
+    Math.abs(a.angle.fromEdgeDeg - b.angle.fromEdgeDeg) <= sameDeg &&
+    tiltGapDeg <= sameDeg &&
+    a.pastSaw === b.pastSaw
+  )
+}
+
+function together(a: LooseDial, b: LooseDial): LooseDial {
+  return {
+    ...a,
+    uses: [...new Set([...a.uses, ...b.uses])],
+    places: [...new Set([...a.places, ...b.places])],
+    longSide: a.longSide === b.longSide ? a.longSide : 'none',
+  }
+}
+
+function withBothCheeks(uses: readonly string[]): string[] {
+  const both = (end: string) =>
+    uses.includes(`${end}, left cheek`) && uses.includes(`${end}, right cheek`)
+  const named = uses.map((use) => {
+    const [end = use, cheek] = use.split(', ')
+    return cheek && both(end) ? `${end}, both cheeks` : use
+  })
+  return [...new Set(named)]
 }
 
 function letterFor(i: number): string {

@@ -22,25 +22,37 @@ export const dimensionOffsetPx = 16
 const tickPx = 5
 const labelSizePx = 12
 const cornerRadiusPx = 9
+/** Beside its line, or one row further out where that is taken. */
+const labelOffsetsPx = [9, 23]
 
-/** A dimension along every plate, outside the eaves. With numbers each says which edge it is. */
+/**
+ * A dimension along every plate, outside the eaves. With corner numbers each says which edge it is.
+ * The fullest wording that stands clear of the other words and the corners is taken.
+ */
 export function planDimensions(
   roof: DrawableRoof,
   view: PlanView,
-  options: { numbered: boolean; units: LengthUnits },
+  corners: readonly PlanCorner[],
+  units: LengthUnits,
 ): PlanDimension[] {
-  const done: PlanDimension[] = []
-  for (const i of roof.outline.keys()) {
+  const taken: TurnedBox[] = corners.map(cornerBox)
+  return [...roof.outline.keys()].map((i) => {
     const line = dimensionLine(roof, view, i)
     const edge = roof.indexes[i] ?? i
     const lengthMm = segmentLength(line) / view.pxPerMm
-    const texts = edgeTexts(edge, formatLength(lengthMm, options.units), options.numbered)
-    const boxes = texts.map((text) => dimensionLabel(line, text, outwardOf(roof, i)))
-    const others = done.flatMap((d) => (d.label ? [d.label] : []))
-    const label = boxes.find((box) => !others.some((other) => boxesOverlap(box, other))) ?? null
-    done.push({ edge, lengthMm, line, ticks: slashTicks(line), label })
-  }
-  return done
+    const boxes = edgeTexts(edge, formatLength(lengthMm, units), corners.length > 0).flatMap(
+      (text) =>
+        labelOffsetsPx.map((offPx) => dimensionLabel(line, text, outwardOf(roof, i), offPx)),
+    )
+    const label = boxes.find((box) => !taken.some((other) => boxesOverlap(box, other))) ?? null
+    if (label) taken.push(label)
+    return { edge, lengthMm, line, ticks: slashTicks(line), label }
+  })
+}
+
+export function cornerBox(corner: PlanCorner): TurnedBox {
+  const sidePx = 2 * corner.radiusPx
+  return { centre: corner.at, widthPx: sidePx, heightPx: sidePx, angleDeg: 0 }
 }
 
 /** Corner numbers outside the corners, clear of the dimensions. */
@@ -101,12 +113,11 @@ function outwardOf(roof: DrawableRoof, i: number): DrawingPoint {
 
 function edgeTexts(edge: number, length: string, numbered: boolean): string[] {
   if (!numbered) return [length]
-  return [`Edge ${edge + 1} · ${length}`, `${edge + 1} · ${length}`, `${edge + 1}`]
+  return [`Edge ${edge + 1} · ${length}`, `${edge + 1} · ${length}`]
 }
 
-function dimensionLabel(line: Segment, text: string, outward: DrawingPoint) {
+function dimensionLabel(line: Segment, text: string, outward: DrawingPoint, offPx: number) {
   const middle = pointAlong(line, 0.5)
-  const offPx = labelSizePx / 2 + 3
   return {
     text,
     sizePx: labelSizePx,

@@ -3,7 +3,7 @@ import type { LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint, Segment, TurnedBox } from './drawing-geometry.ts'
 import { overhangOutline, outlineMovedOut } from './overhang-outline.ts'
 import type { PlanCorner, PlanDimension, PlanScaleBar } from './plan-dimensions.ts'
-import { planCorners, planDimensions, planScaleBar } from './plan-dimensions.ts'
+import { cornerBox, planCorners, planDimensions, planScaleBar } from './plan-dimensions.ts'
 import type { PlanLabel } from './plan-labels.ts'
 import { placePlanLabels } from './plan-labels.ts'
 import type { PlanMember } from './plan-members.ts'
@@ -56,9 +56,8 @@ export function planDrawing(
   const view = planView(drawable, { ...options, marginPx: marginPx[options.mode] })
   const members = (spec?.members ?? []).map((member) => planMember(member, view))
   const problems = planProblems(options.problems, drawable, view)
-  const numbered = options.mode === 'edit'
-  const dimensions = planDimensions(drawable, view, { numbered, units: options.units })
-  const corners = numbered ? planCorners(drawable, view) : []
+  const corners = options.mode === 'edit' ? planCorners(drawable, view) : []
+  const dimensions = planDimensions(drawable, view, corners, options.units)
   const marks = placePlanLabels(members, spec?.cutLines ?? [], {
     sizePx: markSizePx,
     firstMarks: options.firstMarks,
@@ -111,7 +110,7 @@ function takenBoxes(
   })
   return [
     ...dimensions.flatMap((d) => (d.label ? [d.label] : [])),
-    ...corners.map((c) => square(c.at, 2 * c.radiusPx)),
+    ...corners.map(cornerBox),
     ...problems.map((p) => square(p.at, problemReachPx)),
   ]
 }

@@ -99,9 +99,9 @@ function roomFor(
     angleDeg: uprightAngleDeg(member.centre),
   })
   const blocked = [...placed, ...options.taken]
-  const free = placesAlong(member, widthPx)
-    .map(label)
-    .filter((box) => !blocked.some((other) => boxesOverlap(box, other)))
+  const along = placesAlong(member, widthPx)
+  const places = along.length > 0 || !mayCross ? along : [pointAlong(member.centre, 0.5)]
+  const free = places.map(label).filter((box) => !blocked.some((other) => boxesOverlap(box, other)))
   const clear = free.find((box) => !crossesAnother(box, member, members))
   return clear ?? (mayCross ? (free[0] ?? null) : null)
 }

@@ -1,22 +1,18 @@
 import type { Member } from '../roof/roof-types.ts'
-import { formatLength } from '../units/format-length.ts'
-import type { LengthUnits } from '../units/format-length.ts'
-import { cutWords, type BevelDialData } from './bevel-dials.ts'
+import { formatLength, type LengthUnits } from '../units/format-length.ts'
+import { cutWords, type BevelDialData, type BevelPlace } from './bevel-dials.ts'
 import type { DrawingPoint } from './drawing-geometry.ts'
+import { textWidthPx } from './text-size.ts'
 import type { TimberLayout } from './timber-layout.ts'
 import type { BirdsmouthPoints, SidePoint } from './timber-outline.ts'
 import { timberEndLines } from './timber-outline.ts'
 import { endCuts, timberTopOutline } from './timber-shape.ts'
 import { overPlateText, timberTextPx, type CalloutWish } from './timber-texts.ts'
 
-export type TimberText = {
-  text: string
-  x: number
-  baselineY: number
-  anchor: 'start' | 'middle' | 'end'
-}
+export type TimberText = { text: string; x: number; baselineY: number }
 export type TimberLetter = { letter: string; at: DrawingPoint }
 
+/** The words below the side view: the cut at each end, heel and seat, with their bevels' letters. */
 export function calloutWishes(
   member: Member,
   mouth: BirdsmouthPoints | null,
@@ -24,31 +20,32 @@ export function calloutWishes(
   layout: TimberLayout,
   units: LengthUnits,
 ): CalloutWish[] {
-  const letterOf = (at: BevelDialData['at']) =>
-    dials.find((dial) => dial.at === at && dial.where === 'side')?.letter ?? null
+  const letterOf = (place: BevelPlace) =>
+    dials.find((dial) => dial.where === 'side' && dial.places.includes(place))?.letter ?? null
   const ends = (['foot', 'head'] as const).flatMap((end): CalloutWish[] => {
     const cut = endCuts(member, end)[0]
     const near = timberEndLines(member, end)[0]
     if (!cut || !near) return []
     const text = `${cutWords(member, cut)}${cheekWords(endCuts(member, end))}`
-    return [{ text, letter: letterOf(cut.end), anchor: layout.side(near.to) }]
+    return [{ text, letter: letterOf(cut.end), anchor: layout.side(near.to), lean: 'middle' }]
   })
   if (!mouth || !member.birdsmouth) return ends
   const { seatMm, heelMm } = member.birdsmouth
   const midway = (a: SidePoint, b: SidePoint) =>
     layout.side({ alongMm: (a.alongMm + b.alongMm) / 2, downMm: (a.downMm + b.downMm) / 2 })
-  const length = (mm: number) => formatLength(mm, units)
   return [
     ...ends,
     {
-      text: `heel ${length(heelMm)}`,
+      text: `heel ${formatLength(heelMm, units)}`,
       letter: letterOf('heel'),
       anchor: midway(mouth.corner, mouth.heelFoot),
+      lean: 'left',
     },
     {
-      text: `seat ${length(seatMm)}`,
+      text: `seat ${formatLength(seatMm, units)}`,
       letter: letterOf('seat'),
       anchor: midway(mouth.corner, mouth.seatEnd),
+      lean: 'right',
     },
   ]
 }
@@ -59,55 +56,55 @@ function cheekWords(cuts: readonly { longSide: string }[]): string {
   return cheeks === 1 ? ', one cheek' : ', two cheeks'
 }
 
-/** Letters of the bevels across the top, in the margin beside the cut. */
-export function endLetters(
+/** Letters of the bevels across the top in the margin beside the cut, and of the backing over it. */
+export function topLetters(
   member: Member,
   dials: readonly BevelDialData[],
   layout: TimberLayout,
 ): TimberLetter[] {
-  const y = layout.topY + layout.topHeightPx / 2
-  const outline = timberTopOutline(member).map(layout.top)
-  const leftX = Math.min(...outline.map((p) => p.x)) - 14
-  const rightX = Math.max(...outline.map((p) => p.x)) + 14
-  return (['foot', 'head'] as const).flatMap((end) => {
+  const middleY = layout.topY + layout.topHeightPx / 2
+  const xs = timberTopOutline(member).map((p) => layout.top(p).x)
+  const endLetters = (['foot', 'head'] as const).flatMap((end) => {
+    const places = endCuts(member, end).map((cut): BevelPlace => cut.end)
     const across = dials.filter(
-      (dial) => dial.where === 'top' && (dial.at === 'head') === (end === 'head'),
+      (dial) => dial.where === 'top' && dial.places.some((place) => places.includes(place)),
     )
-    return across.map((dial, i) => ({
-      letter: dial.letter,
-      at: {
-        x: end === 'head' ? rightX : leftX,
-        y: across.length === 1 ? y : y + (dial.longSide === 'right' ? -10 : 10) * (i < 2 ? 1 : 2),
-      },
-    }))
+    const x = end === 'head' ? Math.max(...xs) + 15 : Math.min(...xs) - 15
+    // The long side's bevel cuts the other side away, and stands beside it.
+    return across.map((dial) => {
+      const awayPx = across.length === 1 ? 0 : dial.longSide === 'left' ? 10 : -10
+      return { letter: dial.letter, at: { x, y: middleY + awayPx } }
+    })
   })
+  const backing = dials.filter((dial) => dial.where === 'end')
+  const backingLetters = backing.map((dial, i) => ({
+    letter: dial.letter,
+    at: { x: layout.scale.xPx(0) + 16 + i * 20, y: layout.topY - 10 },
+  }))
+  return [...endLetters, ...backingLetters]
 }
 
-/** Which arris is which, and the height over plate beside its plumb line. */
-export function edgeTexts(
+/** Which arris is which, the backing, and the height over plate at the top of its plumb line. */
+export function timberTexts(
   member: Member,
   mouth: BirdsmouthPoints | null,
+  dials: readonly BevelDialData[],
   layout: TimberLayout,
   units: LengthUnits,
 ): TimberText[] {
-  const first = layout.scale.zones[0]
-  const x = (first?.startPx ?? 0) + 4
-  const underY = layout.topY + layout.topHeightPx + timberTextPx + 2
-  const texts: TimberText[] = [
-    { text: 'left', x, baselineY: layout.topY - 5, anchor: 'start' },
-    { text: 'right', x, baselineY: underY, anchor: 'start' },
+  const overY = layout.topY - 5
+  const underY = layout.topY + layout.topHeightPx + timberTextPx + 3
+  const heelX = layout.scale.xPx(0) + 7
+  const backing = dials.filter((dial) => dial.where === 'end').length
+  const over = backing > 0 ? [{ text: 'backing', x: heelX + backing * 20, baselineY: overY }] : []
+  const plate = mouth ? [{ text: overPlateText(member, units), x: heelX, baselineY: underY }] : []
+  const taken = [...over, ...plate].map((t) => t.x + textWidthPx(t.text, timberTextPx) + 8)
+  const headZone = layout.scale.zones.at(-1)
+  const x = Math.max((headZone?.startPx ?? 0) + 4, ...taken)
+  return [
+    { text: 'left', x, baselineY: overY },
+    { text: 'right', x, baselineY: underY },
+    ...over,
+    ...plate,
   ]
-  if (mouth) {
-    const at = layout.side({
-      alongMm: (mouth.heelTop.alongMm + mouth.corner.alongMm) / 2,
-      downMm: mouth.corner.downMm / 2,
-    })
-    texts.push({
-      text: overPlateText(member, units),
-      x: at.x + 6,
-      baselineY: at.y + timberTextPx / 3,
-      anchor: 'start',
-    })
-  }
-  return texts
 }

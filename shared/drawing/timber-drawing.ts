@@ -7,10 +7,10 @@ import { birdsmouthPoints, timberEndLines, timberSideOutline } from './timber-ou
 import { piecesBetweenBreaks } from './timber-pieces.ts'
 import type { MeasuringPoint } from './timber-points.ts'
 import { measuringPoints, measuringPointWords } from './timber-points.ts'
-import { timberTopOutline } from './timber-shape.ts'
+import { arrisFallMm, timberEndMm, timberTopOutline } from './timber-shape.ts'
 import type { DimensionWish, TimberCallout, TimberDimension } from './timber-texts.ts'
 import { dimensionRowPx, placeCallouts, placeDimensions } from './timber-texts.ts'
-import { calloutWishes, edgeTexts, endLetters } from './timber-callouts.ts'
+import { calloutWishes, timberTexts, topLetters } from './timber-callouts.ts'
 import type { TimberLetter, TimberText } from './timber-callouts.ts'
 import { layoutFor, zoneWishes, type TimberLayout } from './timber-layout.ts'
 import type { TimberScale } from './timber-zones.ts'
@@ -25,8 +25,10 @@ export type TimberDrawing = {
   scale: TimberScale
   topPieces: DrawingPoint[][]
   sidePieces: DrawingPoint[][]
-  /** Cut lines down the side, and the middle of a backed top. */
+  /** Cut lines down the side. */
   lines: (Segment & { isHidden: boolean })[]
+  /** The middle and the near arris of a backed top. */
+  fineLines: Segment[]
   /** Set-out lines: the heel plumb line squared over the top and down the side. */
   setOutLines: Segment[]
   points: { at: DrawingPoint; isLong: boolean }[]
@@ -36,19 +38,24 @@ export type TimberDrawing = {
   texts: TimberText[]
 }
 
-const sideMarginPx = 28
+const sideMarginPx = 26
 const edgeWordsPx = 20
 const largestDepthPx = 128
 
 export function timberDrawing(member: Member, options: TimberDrawingOptions): TimberDrawing {
   const mouth = birdsmouthPoints(member)
   const points = [...measuringPoints(member, 'foot'), ...measuringPoints(member, 'head')]
-  const scale = timberScale(zoneWishes(member, mouth, options.units), {
+  const scale = timberScale(zoneWishes(member, mouth), {
     startPx: sideMarginPx,
     endPx: options.widthPx - sideMarginPx,
     maxPxPerMm: largestDepthPx / Math.max(member.section.depthMm, 40),
   })
-  const rows = placeDimensions(pointDimensions(member, points, scale, options), options.widthPx)
+  const rows = placeDimensions(
+    member.role === 'ridge'
+      ? ridgeDimensions(member, points, scale, options.units)
+      : tapeDimensions(points, scale, options.units),
+    options.widthPx,
+  )
   const layout = layoutFor(member, scale, rows.heightPx + edgeWordsPx)
   const dials = bevelDialsOf(member)
   const wordsY = layout.sideY + layout.sideHeightPx + 14
@@ -65,6 +72,7 @@ export function timberDrawing(member: Member, options: TimberDrawingOptions): Ti
     topPieces: piecesBetweenBreaks(timberTopOutline(member).map(layout.top), scale.zones),
     sidePieces: piecesBetweenBreaks(timberSideOutline(member).map(layout.side), scale.zones),
     lines: faceLines(member, layout),
+    fineLines: backingLines(member, layout),
     setOutLines: setOutLines(member, mouth, layout),
     points: points.flatMap((point) => pointDots(point, layout)),
     dimensions: [
@@ -72,24 +80,52 @@ export function timberDrawing(member: Member, options: TimberDrawingOptions): Ti
       wholeLength(member, layout, wholeY, options),
     ],
     callouts: words.callouts,
-    letters: endLetters(member, dials, layout),
-    texts: edgeTexts(member, mouth, layout, options.units),
+    letters: topLetters(member, dials, layout),
+    texts: timberTexts(member, mouth, dials, layout, options.units),
   }
 }
 
-/** Every reading of the tape, from the heel plumb line; a ridge is read from its first node. */
-function pointDimensions(
-  _member: Member,
+/** Every reading of the tape, from the heel plumb line. */
+function tapeDimensions(
   points: readonly MeasuringPoint[],
   scale: TimberScale,
-  options: TimberDrawingOptions,
+  units: LengthUnits,
 ): DimensionWish[] {
   return points.map((point) => ({
-    text: `${measuringPointWords(point)} ${formatLength(Math.abs(point.alongMm), options.units)}`,
+    texts: measuringPointWords(point).map(
+      (words) => `${words} ${formatLength(Math.abs(point.alongMm), units)}`,
+    ),
     from: { x: scale.xPx(0), y: 0 },
     to: { x: scale.xPx(point.alongMm), y: 0 },
     isMain: point.end === 'head' && (point.name === 'long point' || point.name === 'cut'),
   }))
+}
+
+/** A ridge has no heel: its set-out length from node to node, and what runs past each. */
+function ridgeDimensions(
+  member: Member,
+  points: readonly MeasuringPoint[],
+  scale: TimberScale,
+  units: LengthUnits,
+): DimensionWish[] {
+  const setOutMm = member.setOutLengthMm
+  const span = (name: string, fromMm: number, toMm: number, isMain: boolean): DimensionWish[] =>
+    Math.abs(toMm - fromMm) < 0.5
+      ? []
+      : [
+          {
+            texts: [`${name} ${formatLength(Math.abs(toMm - fromMm), units)}`],
+            from: { x: scale.xPx(fromMm), y: 0 },
+            to: { x: scale.xPx(toMm), y: 0 },
+            isMain,
+          },
+        ]
+  const ends = points.flatMap((point) => {
+    const fromMm = point.end === 'head' ? setOutMm : 0
+    const isPast = point.end === 'head' ? point.alongMm > fromMm : point.alongMm < fromMm
+    return span(isPast ? 'past' : 'short', fromMm, point.alongMm, false)
+  })
+  return [...span('set-out', 0, setOutMm, true), ...ends]
 }
 
 function wholeLength(
@@ -122,16 +158,43 @@ function faceLines(member: Member, layout: TimberLayout): TimberDrawing['lines']
   }))
 }
 
+/** Along the timber, broken where it is broken. */
+function backingLines(member: Member, layout: TimberLayout): Segment[] {
+  if (!member.backing) return []
+  const arrisMm = arrisFallMm(member, -member.section.thicknessMm / 2)
+  const middle = [timberEndMm(member, 'foot', 0, 0), timberEndMm(member, 'head', 0, 0)]
+  const near = (['foot', 'head'] as const).map(
+    (end) => timberEndLines(member, end)[0]?.from.alongMm ?? 0,
+  )
+  const run = ([fromMm = 0, toMm = 0]: number[], y: number): Segment[] =>
+    layout.scale.zones.map((zone) => ({
+      from: { x: Math.max(zone.startPx, layout.scale.xPx(fromMm)), y },
+      to: { x: Math.min(zone.endPx, layout.scale.xPx(toMm)), y },
+    }))
+  return [
+    ...run(middle, layout.topY + layout.topHeightPx / 2),
+    ...run(near, layout.side({ alongMm: 0, downMm: arrisMm }).y),
+  ]
+}
+
 function setOutLines(
   member: Member,
   mouth: BirdsmouthPoints | null,
   layout: TimberLayout,
 ): Segment[] {
   const half = member.section.thicknessMm / 2
-  const across = (acrossMm: number) => layout.top({ alongMm: 0, acrossMm, downMm: 0 })
-  const over: Segment = { from: across(half), to: across(-half) }
-  if (!mouth) return [over]
-  return [over, { from: layout.side(mouth.heelTop), to: layout.side(mouth.corner) }]
+  const over = (alongMm: number): Segment => ({
+    from: layout.top({ alongMm, acrossMm: half, downMm: 0 }),
+    to: layout.top({ alongMm, acrossMm: -half, downMm: 0 }),
+  })
+  const down = (alongMm: number): Segment => ({
+    from: layout.side({ alongMm, downMm: 0 }),
+    to: layout.side({ alongMm, downMm: member.section.depthMm }),
+  })
+  if (member.role === 'ridge')
+    return [0, member.setOutLengthMm].flatMap((alongMm) => [over(alongMm), down(alongMm)])
+  if (!mouth) return [over(0)]
+  return [over(0), { from: layout.side(mouth.heelTop), to: layout.side(mouth.corner) }]
 }
 
 function pointDots(point: MeasuringPoint, layout: TimberLayout): TimberDrawing['points'] {

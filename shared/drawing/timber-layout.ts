@@ -1,11 +1,8 @@
 import type { Member } from '../roof/roof-types.ts'
-import type { LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint } from './drawing-geometry.ts'
-import { textWidthPx } from './text-size.ts'
 import type { BirdsmouthPoints, SidePoint } from './timber-outline.ts'
-import { timberEndLines, timberSideOutline } from './timber-outline.ts'
+import { timberEndLines } from './timber-outline.ts'
 import type { TimberPoint } from './timber-shape.ts'
-import { overPlateText, timberTextPx } from './timber-texts.ts'
 import type { TimberScale, TimberZoneWish } from './timber-zones.ts'
 
 /** Where the two views stand in the drawing, and how timber points come to px. */
@@ -21,29 +18,25 @@ export type TimberLayout = {
 
 const betweenPx = 24
 
-/** Tail, birdsmouth and head, each with a little plain timber beside it. */
-export function zoneWishes(
-  member: Member,
-  mouth: BirdsmouthPoints | null,
-  units: LengthUnits,
-): TimberZoneWish[] {
-  const outline = timberSideOutline(member)
-  const depthMm = member.section.depthMm
+/** Tail, birdsmouth and head (a ridge: its two ends), each with a little plain timber beside it. */
+export function zoneWishes(member: Member, mouth: BirdsmouthPoints | null): TimberZoneWish[] {
   const alongs = (end: 'head' | 'foot') =>
     timberEndLines(member, end).flatMap((line) => [line.from.alongMm, line.to.alongMm])
-  const head = alongs('head')
-  const foot = alongs('foot')
-  const overPlatePx = textWidthPx(overPlateText(member, units), timberTextPx) + 12
   const heel = mouth ? [0, mouth.heelFoot.alongMm, mouth.seatEnd.alongMm] : [0]
+  const head = mouth ? alongs('head') : [...alongs('head'), nodeNearHead(member)]
   const zone = (of: number[], beforePx: number, afterPx: number): TimberZoneWish => ({
     fromMm: Math.min(...of),
     toMm: Math.max(...of),
     beforePx,
     afterPx,
   })
-  const isUsable = outline.every((p) => Number.isFinite(p.alongMm)) && depthMm > 0
-  if (!isUsable) return [zone([0, member.setOutLengthMm], 0, 0)]
-  return [zone(foot, 0, 26), zone(heel, 22, mouth ? overPlatePx : 0), zone(head, 40, 0)]
+  return [zone(alongs('foot'), 0, 16), zone(heel, 14, 14), zone(head, 40, 0)]
+}
+
+/** Where a ridge's set-out ends, so that what runs past it is seen. */
+function nodeNearHead(member: Member): number {
+  const ends = timberEndLines(member, 'head').map((line) => line.from.alongMm)
+  return member.role === 'ridge' ? member.setOutLengthMm : Math.min(...ends)
 }
 
 export function layoutFor(member: Member, scale: TimberScale, topY: number): TimberLayout {

@@ -1,5 +1,4 @@
 import type { Member } from '../roof/roof-types.ts'
-import type { TimberPoint } from './timber-shape.ts'
 import { arrisFallMm, timberEndMm, timberTopEnd } from './timber-shape.ts'
 
 /** Along the timber and down square to its edge. */
@@ -7,6 +6,8 @@ export type SidePoint = { alongMm: number; downMm: number }
 
 /** A line of the side view; hidden where it lies behind the timber. */
 export type SideLine = { from: SidePoint; to: SidePoint; isHidden: boolean }
+
+const sameMm = 0.05
 
 export type BirdsmouthPoints = {
   /** On the top edge. */
@@ -60,18 +61,20 @@ export function birdsmouthPoints(member: Member): BirdsmouthPoints | null {
 /** The cut lines down the side: on the near (right) face, between cheeks, and dashed behind. */
 export function timberEndLines(member: Member, end: 'head' | 'foot'): SideLine[] {
   const outward = end === 'head' ? 1 : -1
-  const depthMm = member.section.depthMm
-  const corners = [...timberTopEnd(member, end)].reverse()
-  let farthest = -Infinity
-  return corners.map((corner: TimberPoint, i): SideLine => {
-    const fallMm = arrisFallMm(member, corner.acrossMm)
+  const nearToFar = [...timberTopEnd(member, end)].reverse()
+  const lines: SideLine[] = []
+  for (const corner of nearToFar) {
     const at = (downMm: number): SidePoint => ({
       alongMm: timberEndMm(member, end, corner.acrossMm, downMm),
       downMm,
     })
-    const reach = outward * at(0).alongMm
-    const isHidden = i > 0 && reach < farthest - 0.05
-    farthest = Math.max(farthest, reach)
-    return { from: at(fallMm), to: at(depthMm), isHidden }
-  })
+    const reaches = lines.map((line) => outward * (line.to.alongMm - at(line.to.downMm).alongMm))
+    if (reaches.some((reach) => Math.abs(reach) < sameMm)) continue
+    lines.push({
+      from: at(arrisFallMm(member, corner.acrossMm)),
+      to: at(member.section.depthMm),
+      isHidden: reaches.some((reach) => reach > 0),
+    })
+  }
+  return lines
 }

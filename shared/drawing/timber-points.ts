@@ -41,10 +41,13 @@ export function measuringPoints(member: Member, end: 'head' | 'foot'): Measuring
   }))
 }
 
-/** The words on the tape's line: "long point, left", "short point, both edges", "tail". */
-export function measuringPointWords(point: MeasuringPoint): string {
-  if (point.name === 'cut') return point.end === 'head' ? 'head cut' : point.end
-  return `${point.end === 'head' ? '' : `${point.end} `}${point.name}, ${point.side}`
+/** The words on the tape's line, fullest first: "long point, left", then "long point", "long". */
+export function measuringPointWords(point: MeasuringPoint): string[] {
+  if (point.name === 'cut')
+    return point.end === 'head' ? ['heel to head cut', 'head cut'] : [point.end]
+  const short = point.name === 'edge' ? point.side : point.name.replace(' point', '')
+  if (point.end === 'head') return [`${point.name}, ${point.side}`, point.name, short]
+  return [`${point.end} ${point.name}, ${point.side}`, `${point.end} ${short}`, short]
 }
 
 function pointName(rank: number, count: number): MeasuringPointName {
@@ -59,4 +62,12 @@ function pointSide(places: readonly TimberPoint[]): MeasuringPoint['side'] {
   if (left && right) return 'both edges'
   if (left) return 'left'
   return right ? 'right' : 'centre'
+}
+
+/** Which way the head is cut, in words for a card: "Long point on the left, bow up". */
+export function handWords(member: Member): string {
+  if (member.hand) return `Long point on the ${member.hand}, bow up`
+  const cheeks = endCuts(member, 'head').filter((cut) => cut.longSide !== 'none').length
+  if (cheeks > 1) return 'Long point in the middle, two cheeks, bow up'
+  return 'Square across the head, bow up'
 }

@@ -15,7 +15,15 @@ export type TimberCallout = {
   leader: Segment
 }
 
-export type CalloutWish = { text: string; letter: string | null; anchor: DrawingPoint }
+export type CalloutWish = {
+  text: string
+  letter: string | null
+  anchor: DrawingPoint
+  /** Which way the words run from what they name. */
+  lean: 'left' | 'middle' | 'right'
+}
+
+const leanShare = { left: -1, middle: 0, right: 1 } as const
 
 /** A dimension from the heel plumb line (or the whole length), its text above its line. */
 export type TimberDimension = {
@@ -31,7 +39,8 @@ export type TimberDimension = {
 }
 
 export type DimensionWish = {
-  text: string
+  /** From the fullest wording to the shortest; the first that fits its line is taken. */
+  texts: string[]
   from: DrawingPoint
   to: DrawingPoint
   isMain: boolean
@@ -40,9 +49,12 @@ export type DimensionWish = {
 export const dimensionRowPx = 22
 export const calloutRowPx = 20
 const letterRoomPx = 20
-const apartPx = 8
+const apartPx = 5
 
-/** Words in rows below the timber: each under what it names, the next row where they would touch. */
+/**
+ * Words in rows below the timber: each under what it names, the next row where they would touch. Heel
+ * and seat come nearest, so that no fine line runs through the words of the ends.
+ */
 export function placeCallouts(
   wishes: readonly CalloutWish[],
   topY: number,
@@ -50,10 +62,12 @@ export function placeCallouts(
 ): { callouts: TimberCallout[]; heightPx: number } {
   const rows: { from: number; to: number }[][] = []
   const callouts = [...wishes]
-    .sort((a, b) => a.anchor.x - b.anchor.x)
+    .sort((a, b) => Number(isEnd(a)) - Number(isEnd(b)) || a.anchor.x - b.anchor.x)
     .map((wish): TimberCallout => {
       const width = textWidthPx(wish.text, timberTextPx) + (wish.letter ? letterRoomPx : 0)
-      const x = Math.min(Math.max(wish.anchor.x, width / 2), widthPx - width / 2)
+      const wantedX = wish.anchor.x + leanShare[wish.lean] * (width / 2 - 6)
+      const x = Math.min(Math.max(wantedX, width / 2 + 2), widthPx - width / 2 - 2)
+      const leaderX = Math.min(Math.max(wish.anchor.x, x - width / 2 + 4), x + width / 2 - 4)
       const row = freeRow(rows, x - width / 2 - apartPx, x + width / 2 + apartPx)
       const baselineY = topY + row * calloutRowPx + timberTextPx
       return {
@@ -62,10 +76,14 @@ export function placeCallouts(
         x,
         baselineY,
         widthPx: width,
-        leader: { from: wish.anchor, to: { x, y: baselineY - timberTextPx } },
+        leader: { from: wish.anchor, to: { x: leaderX, y: baselineY - timberTextPx } },
       }
     })
   return { callouts, heightPx: rows.length * calloutRowPx }
+}
+
+function isEnd(wish: CalloutWish): boolean {
+  return wish.lean === 'middle'
 }
 
 /** Dimensions in rows above the timber, the shortest nearest to it. */
@@ -78,16 +96,17 @@ export function placeDimensions(
   const rowed = [...wishes]
     .sort((a, b) => spanPx(a) - spanPx(b))
     .map((wish) => {
-      const half = textWidthPx(wish.text, timberTextPx) / 2 + 2
+      const text = fittingText(wish.texts, spanPx(wish))
+      const half = textWidthPx(text, timberTextPx) / 2 + 2
       const middle = (wish.from.x + wish.to.x) / 2
       const textX = Math.min(Math.max(middle, half), widthPx - half)
       const from = Math.min(wish.from.x, wish.to.x, textX - half)
       const to = Math.max(wish.from.x, wish.to.x, textX + half)
-      return { wish, textX, row: freeRow(rows, from + 1, to - 1) }
+      return { wish, text, textX, row: freeRow(rows, from + 1, to - 1) }
     })
   const heightPx = rows.length * dimensionRowPx
-  const dimensions = rowed.map(({ wish, textX, row }): TimberDimension => ({
-    text: wish.text,
+  const dimensions = rowed.map(({ wish, text, textX, row }): TimberDimension => ({
+    text,
     fromX: wish.from.x,
     toX: wish.to.x,
     fromY: wish.from.y,
@@ -97,6 +116,11 @@ export function placeDimensions(
     isMain: wish.isMain,
   }))
   return { dimensions, heightPx }
+}
+
+function fittingText(texts: readonly string[], spanPx: number): string {
+  const fits = texts.find((text) => textWidthPx(text, timberTextPx) + 4 <= spanPx)
+  return fits ?? texts.at(-1) ?? ''
 }
 
 /** The first row with nothing in the way, taken. */

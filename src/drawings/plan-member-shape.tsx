@@ -1,0 +1,95 @@
+import type { KeyboardEvent } from 'react'
+import { svgPoints } from '../../shared/drawing/drawing-geometry.ts'
+import type { PlanMember } from '../../shared/drawing/plan-members.ts'
+
+/** How a timber stands in the day's work; 'plain' where no day is shown. */
+export type MemberState = 'plain' | 'due' | 'done' | 'rest'
+
+const lineClasses: Record<MemberState, string> = {
+  plain: 'stroke-ink-soft [stroke-width:1.25]',
+  due: 'stroke-clay [stroke-width:4]',
+  done: 'stroke-leaf [stroke-width:2.5] [stroke-dasharray:6_3]',
+  rest: 'stroke-rule [stroke-width:1.25]',
+}
+const fillClasses: Record<MemberState, string> = {
+  plain: 'fill-sheet',
+  due: 'fill-clay',
+  done: 'fill-sheet',
+  rest: 'fill-sheet',
+}
+const stateWords: Record<MemberState, string> = {
+  plain: '',
+  due: ', due today',
+  done: ', done',
+  rest: '',
+}
+
+/** Drawn to its true thickness once that shows; as a line below. */
+const outlineFromPx = 3.5
+
+type Props = {
+  member: PlanMember
+  state: MemberState
+  isSelected: boolean
+  isTabStop: boolean
+  isFocused: boolean
+  isPickable: boolean
+  onKeyDown: (event: KeyboardEvent<SVGGElement>) => void
+  onFocus: () => void
+  onBlur: () => void
+}
+
+export function PlanMemberShape(props: Props) {
+  const { member, state, isSelected, isFocused, isPickable } = props
+  const pickProps = isPickable
+    ? {
+        role: 'button',
+        tabIndex: props.isTabStop ? 0 : -1,
+        'aria-label': `${member.mark}, ${roleWords(member.role)}${stateWords[state]}`,
+        'aria-pressed': isSelected,
+        onKeyDown: props.onKeyDown,
+        onFocus: props.onFocus,
+        onBlur: props.onBlur,
+      }
+    : {}
+  return (
+    <g data-mark={member.mark} className="outline-none" {...pickProps}>
+      {isSelected || isFocused ? <MemberHalo member={member} isSelected={isSelected} /> : null}
+      <MemberBody member={member} state={state} />
+    </g>
+  )
+}
+
+/** Chalk round the picked timber: solid when picked, dashed while only in focus. */
+function MemberHalo({ member, isSelected }: { member: PlanMember; isSelected: boolean }) {
+  return (
+    <line
+      {...centreProps(member)}
+      strokeLinecap="round"
+      strokeWidth={Math.max(9, member.thicknessPx + 7)}
+      className={isSelected ? 'stroke-chalk' : 'stroke-chalk opacity-50'}
+    />
+  )
+}
+
+function MemberBody({ member, state }: { member: PlanMember; state: MemberState }) {
+  if (member.thicknessPx < outlineFromPx)
+    return <line {...centreProps(member)} className={lineClasses[state]} />
+  const stroke = state === 'due' ? 'stroke-clay [stroke-width:1.5]' : lineClasses[state]
+  return (
+    <polygon
+      points={svgPoints(member.outline)}
+      strokeLinejoin="round"
+      className={`${fillClasses[state]} ${stroke}`}
+    />
+  )
+}
+
+function centreProps({ centre }: PlanMember) {
+  return { x1: centre.from.x, y1: centre.from.y, x2: centre.to.x, y2: centre.to.y }
+}
+
+/** 'crown-end' → 'crown end'. */
+export function roleWords(role: string): string {
+  return role.replaceAll('-', ' ')
+}
