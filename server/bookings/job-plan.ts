@@ -1,0 +1,122 @@
+import type { Day } from '../../shared/calendar/days.ts'
+import { carryOver } from '../../shared/day-plan/carry-over.ts'
+import {
+  type DayPlan,
+  type DayToPlan,
+  type DonePieces,
+  type PlannedTask,
+  planDays,
+} from '../../shared/day-plan/day-plan.ts'
+import type { LabourRates } from '../../shared/labour/labour-rates.ts'
+import { workPackagesOf } from '../../shared/labour/work-packages.ts'
+import { packageKeys, type PackageKey } from '../../shared/labour/work-step.ts'
+import type { FrameSpec } from '../../shared/roof/roof-types.ts'
+import type { CrewHours } from './crew-hours.ts'
+import type { JobDay, JobTask } from './job-plan-store.ts'
+
+export type JobPlanInput = {
+  days: readonly JobDay[]
+  tasks: readonly JobTask[]
+  /** What days not started are cut to; null before the first revision. */
+  revisionId: string | null
+  specs: ReadonlyMap<string, FrameSpec>
+  rates: LabourRates
+  hours: CrewHours
+  today: Day
+}
+
+export type JobPlan = {
+  plan: DayPlan
+  /** The days that were planned or kept, in the plan's order. */
+  days: { row: JobDay; started: boolean }[]
+  /** Marks cut to an older revision that this one has no place for. */
+  cutButUnused: { revisionId: string; marks: string[] }[]
+}
+
+/** Started: it has a tick, be it one taken back. */
+export function startedDayIds(tasks: readonly JobTask[]): Set<string> {
+  return new Set(tasks.filter((t) => t.tickCount > 0).map((t) => t.bookingDayId))
+}
+
+/**
+ * Plans what is left of a job over its standing days from today on. Days past keep what was ticked; started
+ * days keep all they hold.
+ */
+export function planJob(input: JobPlanInput): JobPlan {
+  const { days, tasks, revisionId, specs, rates, hours, today } = input
+  const spec = revisionId === null ? undefined : specs.get(revisionId)
+  const started = startedDayIds(tasks)
+  const ahead = days
+    .filter((row) => !row.cancelled && row.day >= today)
+    .map((row) => ({ row, started: started.has(row.id) }))
+  const kept = ahead.filter((d) => d.started)
+  const cutButUnused: JobPlan['cutButUnused'] = []
+  const done = emptyDone()
+  const revisionOf = new Map(days.map((row) => [row.id, row.revisionId]))
+  for (const [id, there] of spec ? specs : []) {
+    const ofRevision = tasks.filter((t) => revisionOf.get(t.bookingDayId) === id)
+    const ticked = donePieces(ofRevision, (t) => t.tickSum)
+    if (id === revisionId || !spec) {
+      merge(done, ticked)
+      continue
+    }
+    const keptIds = new Set(kept.map((d) => d.row.id))
+    merge(
+      ticked,
+      donePieces(
+        ofRevision.filter((t) => keptIds.has(t.bookingDayId)),
+        (t) => t.quantity,
+      ),
+    )
+    const carried = carryOver(there, spec, ticked)
+    merge(done, carried.done)
+    if (carried.cutButUnused.length > 0)
+      cutButUnused.push({ revisionId: id, marks: carried.cutButUnused })
+  }
+  const toPlan = ahead.map(({ row, started: isStarted }): DayToPlan => {
+    const crewMinutes = hours.on(row.crewId, row.day).minutes
+    if (!isStarted) return { day: row.day, crewMinutes }
+    const own = row.revisionId === revisionId ? tasks.filter((t) => t.bookingDayId === row.id) : []
+    return { day: row.day, crewMinutes, frozen: { tasks: own.flatMap(asPlanned) } }
+  })
+  const packages = spec ? workPackagesOf(spec, rates) : []
+  return { plan: planDays({ packages, days: toPlan, done }), days: ahead, cutButUnused }
+}
+
+type MutableDone = { cut: Set<string>; stood: Set<string>; setOut: Set<PackageKey> }
+
+function emptyDone(): MutableDone {
+  return { cut: new Set(), stood: new Set(), setOut: new Set() }
+}
+
+function isPackageKey(key: string): key is PackageKey {
+  return (packageKeys as readonly string[]).includes(key)
+}
+
+/** The first so many pieces of each task; a piece that stands has been cut. */
+function donePieces(tasks: readonly JobTask[], piecesOf: (task: JobTask) => number): MutableDone {
+  const done = emptyDone()
+  for (const task of tasks) {
+    const pieces = Math.max(0, Math.min(task.quantity, piecesOf(task)))
+    const marks = task.memberMarks.slice(0, pieces)
+    if (task.work === 'set-out' && pieces > 0 && isPackageKey(task.packageKey))
+      done.setOut.add(task.packageKey)
+    for (const mark of marks) {
+      if (task.work === 'stand') done.stood.add(mark)
+      done.cut.add(mark)
+    }
+  }
+  return done
+}
+
+function merge(into: MutableDone, from: DonePieces): void {
+  for (const mark of from.cut) into.cut.add(mark)
+  for (const mark of from.stood) into.stood.add(mark)
+  for (const key of from.setOut) into.setOut.add(key)
+}
+
+function asPlanned(task: JobTask): PlannedTask[] {
+  const { packageKey, work, cutLineMark, memberMarks, title, quantity, plannedMinutes } = task
+  if (!isPackageKey(packageKey)) return []
+  return [{ packageKey, work, cutLineMark, memberMarks, title, quantity, plannedMinutes }]
+}
