@@ -6,6 +6,7 @@ import { pinoHttp } from 'pino-http'
 import { authRoutes } from './auth/auth-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
 import { loadUser, sessionCookieName } from './auth/session.ts'
+import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
 import type { EventHub } from './events/event-hub.ts'
@@ -20,6 +21,7 @@ import { jobRoutes } from './jobs/job-routes.ts'
 import { revisionRoutes } from './revisions/revision-routes.ts'
 import { createRevisionService } from './revisions/revision-service.ts'
 import type { Clock } from './lib/clock.ts'
+import { messageRoutes } from './messages/message-routes.ts'
 import { peopleRoutes } from './people/people-routes.ts'
 
 export type AppDeps = {
@@ -83,6 +85,8 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
   eventRoutes(api, deps.events)
+  daySheetRoutes(api, deps)
+  messageRoutes(api, deps)
   revisionRoutes(
     api,
     createRevisionService({ db, clock, events: deps.events, takeRevision: () => undefined }),

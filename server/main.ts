@@ -13,6 +13,8 @@ import { type Env, readEnv } from './env.ts'
 import { createEventHub } from './events/event-hub.ts'
 import { builtScreens } from './http/screens.ts'
 import { systemClock } from './lib/clock.ts'
+import { createMailWorker } from './mail/mail-worker.ts'
+import { createMailTransport } from './mail/transport.ts'
 
 const projectDir = path.join(path.dirname(fileURLToPath(import.meta.url)), '..')
 
@@ -56,14 +58,27 @@ async function main(): Promise<void> {
     },
     { hot },
   )
+  const mailWorker = createMailWorker({
+    db: database.db,
+    clock: systemClock,
+    transport: createMailTransport(env),
+    appUrl: env.appUrl,
+    mailFrom: env.mailFrom,
+    log,
+    events,
+  })
   const server = createServer(app)
   server.listen(env.port, env.host, () => {
+    mailWorker.start()
     console.log(`Ridgehand is at http://localhost:${env.port}`)
   })
   const stop = () => {
+    const mailDone = mailWorker.stop()
     server.close(() => {
-      database.close()
-      process.exit(0)
+      void mailDone.finally(() => {
+        database.close()
+        process.exit(0)
+      })
     })
     server.closeAllConnections()
   }
