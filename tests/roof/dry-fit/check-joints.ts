@@ -10,6 +10,10 @@ const REACH_MM = 6
 /** Below this share of a bearing face, what is open is an edge of a sloping top, not a gap. */
 const CLOSED_SHARE = 0.97
 const SPECK_MM2 = 25
+/** A piece that is named must touch at all. */
+const TOUCH_MM2 = 1
+/** Two cheeks nearly in one plane touch each other's piece by a sliver that needs no name. */
+const ASIDE_SHARE = 0.03
 
 /** Lays a cut plane level at z = 0, the sawn piece under it. */
 function layLevel(solid: Solid, normal: Vec, point: Vec): Solid {
@@ -36,7 +40,14 @@ function faceCorners(piece: Piece, sawn: SawnPlane): Vec[] {
     .map((p) => toBuilding(piece.pose, p))
 }
 
-type Bearing = { mark: string; solid: Solid; areaMm2: number }
+type Bearing = {
+  mark: string
+  solid: Solid
+  areaMm2: number
+  touchMm2: number
+  /** It was cut to fit this piece, so this piece need not name it. */
+  buttsBack: boolean
+}
 
 /** The least opening at which the other pieces fill the face; REACH_MM when they never do. */
 function openingMm(face: Flat, bearings: readonly Bearing[]): number {
@@ -67,18 +78,22 @@ function checkCut(complain: Complain, piece: Piece, sawn: SawnPlane, others: Pie
     .filter((o) => o !== piece && boxesMeet(o.box, near))
     .map((o) => {
       const solid = layLevel(o.solid, normal, point)
-      return { mark: o.member.mark, solid, areaMm2: shared(face, solid, REACH_MM / 4).area() }
+      const areaMm2 = shared(face, solid, REACH_MM / 4).area()
+      const touchMm2 = shared(face, solid, CLOSE_MM / 2).area()
+      const buttsBack = o.member.cuts.some((c) => [c.against, ...c.alsoAgainst].includes(mark))
+      return { mark: o.member.mark, solid, areaMm2, touchMm2, buttsBack }
     })
-    .filter((b) => b.areaMm2 > SPECK_MM2)
+    .filter((b) => b.areaMm2 > TOUCH_MM2)
     .sort((a, b) => b.areaMm2 - a.areaMm2)
 
+  const aside = Math.max(SPECK_MM2, ASIDE_SHARE * face.area())
   const listed = cut.against === null ? [] : [cut.against, ...cut.alsoAgainst]
   for (const name of listed) {
     if (bearings.some((b) => b.mark === name)) continue
     say(`its ${cut.end} cut is said to bear on it and does not`, 0, name)
   }
   for (const b of bearings) {
-    if (listed.includes(b.mark)) continue
+    if (listed.includes(b.mark) || b.buttsBack || b.touchMm2 < aside) continue
     say(`its ${cut.end} cut bears on it unsaid, mm²`, b.areaMm2, b.mark)
   }
   if (cut.against === null || bearings.length === 0) return

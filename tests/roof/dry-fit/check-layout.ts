@@ -48,6 +48,7 @@ export function checkLayout(
     const places = rafters.map((m) => alongOf(m.axis.from.x, m.axis.from.y))
     const say = (marks: string[], text: string, out: number): void =>
       complain({ check: 'layout', marks, out, text })
+    const atCorner = (roof.sections.rafter.thicknessMm + roof.sections.hip.thicknessMm) / 2
     if (places.length === 0) return say([`slope ${index}`], 'has no rafters', 0)
     places.slice(1).forEach((place, i) => {
       const bay = place - places[i]!
@@ -59,7 +60,7 @@ export function checkLayout(
       [places.at(-1)!, rafters.at(-1)!.mark, roof.maxSpacingMm],
     ] as const) {
       const next = place + step
-      if (next < start || next > end) continue
+      if (next < start + atCorner || next > end - atCorner) continue
       const x = slope.cornerX + next * dx
       const y = slope.cornerY + next * dy
       const missing = setOutAt(slope, others, x, y, plane.pitchDeg)

@@ -15,6 +15,9 @@ import { angleDeg, cosDeg, dot, sinDeg, sub, tanDeg, toDeg, toVec, type Vec } fr
 export const LENGTH_TOL_MM = 0.01
 export const ANGLE_TOL_DEG = 0.001
 
+/** A head's point this near the centre line is called central. */
+const CENTRAL_MM = 0.1
+
 type Check = Complaint['check']
 
 function expectNear(
@@ -120,8 +123,9 @@ function checkLengths(complain: Complain, piece: Piece, roof: Roof): void {
     complain({ check: 'numbers', marks: [member.mark], out: 0, text })
     return
   }
-  near('head deduction', member.headDeductionMm, member.setOutLengthMm - Math.min(...heads))
-  near('foot deduction', member.footDeductionMm, feet.length > 0 ? Math.max(...feet) : 0)
+  // To the nearest cut: two cheeks may cross the centre line at different places.
+  near('head deduction', member.headDeductionMm, member.setOutLengthMm - Math.max(...heads))
+  near('foot deduction', member.footDeductionMm, feet.length > 0 ? Math.min(...feet) : 0)
   near('tail', member.tailLengthMm, tails.length > 0 ? -Math.max(...tails) : 0)
   const alongs = own.map((p) => p[0])
   const allowance = tails.length > 0 ? roof.tailAllowanceMm : 0
@@ -147,7 +151,7 @@ function headHand(piece: Piece): Member['hand'] {
   const furthest = Math.max(...piece.own.map((p) => p[0]))
   const sides = piece.own.filter((p) => p[0] > furthest - 0.01).map((p) => p[1])
   const middle = (Math.min(...sides) + Math.max(...sides)) / 2
-  if (Math.abs(middle) < 0.01) return null
+  if (Math.abs(middle) < CENTRAL_MM) return null
   return middle > 0 ? 'left' : 'right'
 }
 
@@ -159,7 +163,7 @@ function checkOtherTop(complain: Complain, piece: Piece, sawn: SawnPlane, backed
   const deg = piece.member.backing === null ? (side > 0 ? backed.leftDeg : backed.rightDeg) : 0
   const across: Vec = [0, side * cosDeg(deg), -sinDeg(deg)]
   const [a] = sawn.normal
-  const rebuilt = toDeg(Math.atan2(1, Math.abs(dot(sawn.normal, across) / a)))
+  const rebuilt = toDeg(Math.atan2(1, dot(sawn.normal, across) / Math.abs(a)))
   const name = `edge bevel of the other top, ${sawn.cut.end} cut`
   expectNear(complain, piece, 'numbers', name, other.fromEdgeDeg, rebuilt, ANGLE_TOL_DEG)
 }

@@ -6,7 +6,7 @@ import { tanDeg } from './vec.ts'
 
 /** A seat lies flat when timber is within this over the plate along the whole bearing. */
 const FLAT_MM = 0.2
-const STRIP_MM = 1
+const STRIP_MM = 0.2
 
 /** Length of timber on plate along the member's centre line, FLAT_MM over the plate top. */
 function bearingMm(kit: SolidKit, piece: Piece, roof: Roof): number {

@@ -30,7 +30,8 @@ const rad = (deg: number): number => (deg * Math.PI) / 180
 
 /**
  * A building with level ridge and gable at x = 0, whose other end meets the first side at the
- * corner to be checked. Wide enough that two creepers step down on each side of that hip.
+ * corner to be checked. Wide enough that two creepers step down on each side of that hip. The end's
+ * overhang levels the eaves, so that both tail cheeks of the hip are there to be read.
  */
 function buildingWith({ in: given, out }: Corner, hipTop: Roof['hipTop']): Roof {
   const widest = Math.max(out.hip_plan_from_plate1_deg, out.hip_plan_from_plate2_deg)
@@ -48,12 +49,15 @@ function buildingWith({ in: given, out }: Corner, hipTop: Roof['hipTop']): Roof 
   const hip = { thicknessMm: thick, depthMm: 240 }
   const rafter = { thicknessMm: 45, depthMm: 140 }
   const ridge = { thicknessMm: 35, depthMm: 240 }
-  return makeRoof(outline, [side, end, side, 'gable'], {
+  const roof = makeRoof(outline, [side, end, side, 'gable'], {
     hipTop,
     maxSpacingMm: given.spacing_mm,
     overhangMm: given.overhang1_mm,
     sections: { rafter, hip, valley: hip, ridge },
   })
+  const tan = (deg: number): number => Math.tan(rad(deg))
+  roof.edges[1]!.overhangMm = (given.overhang1_mm * tan(side)) / tan(end)
+  return roof
 }
 
 type Bevels = { face_from_edge: number; edge_from_edge: number; tilt: number }

@@ -219,7 +219,8 @@ test('ready reckoner worked at 0.7 rise, called 35° (reprinted TRADA Timber 202
   expect(
     misfits([
       ['rafter', common.setOutLengthMm / common.runMm, number('results.rafter_per_run.1'), 0.00006],
-      ['hip', hip.setOutLengthMm / common.runMm, number('results.hip_per_run.1'), 0.00006],
+      // The page cuts 1.57797 short to 1.5779.
+      ['hip', hip.setOutLengthMm / common.runMm, number('results.hip_per_run.1'), 0.0001],
       ['hip plumb', square(1 / faceTan(hip), 424), 210, 1],
       ['hip edge', square(edgeTan(hip), 300), 269, 1],
       ['hip backing', square(backingTan, 300), 134, 1],
