@@ -1,0 +1,38 @@
+import type { Covering, RoofSettings } from '../roof/roof-types.ts'
+
+export const coverings = ['tiles', 'sheet', 'shingles', 'other'] as const
+export type CoveringKind = (typeof coverings)[number]
+
+type CoveringFact = {
+  name: string
+  /** Null: no figure is held, so no caution is raised; the maker's instructions decide. */
+  usualMinPitchDeg: number | null
+  source: string
+}
+
+/** What a covering usually takes, for a caution only; local codes and the maker decide. */
+export const coveringFacts: Record<CoveringKind, CoveringFact> = {
+  tiles: {
+    name: 'concrete or clay tiles',
+    usualMinPitchDeg: 15,
+    source:
+      'Deemed range 15–35°: NCC 2019 volume 2, 3.5.2.1(c), an older edition; check the one in force',
+  },
+  sheet: {
+    name: 'corrugated sheet',
+    usualMinPitchDeg: 5,
+    source: 'Common practice, no source',
+  },
+  shingles: { name: 'shingles', usualMinPitchDeg: null, source: 'No figure held' },
+  other: { name: 'another covering', usualMinPitchDeg: null, source: 'No figure held' },
+}
+
+export function coveringOf(kind: CoveringKind): Covering | null {
+  const { name, usualMinPitchDeg } = coveringFacts[kind]
+  return usualMinPitchDeg === null ? null : { name, minPitchDeg: usualMinPitchDeg }
+}
+
+/** What a job's roof is framed under: the firm's settings with the job's covering. */
+export function jobRoofSettings(firm: RoofSettings, kind: CoveringKind): RoofSettings {
+  return { ...firm, covering: coveringOf(kind) }
+}
