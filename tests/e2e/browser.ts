@@ -94,7 +94,7 @@ export async function visit(
     complaints,
     goto: async (address) => {
       await page.goto(address)
-      await page.getByRole('heading', { level: 1 }).first().waitFor()
+      await page.getByRole('heading').first().waitFor()
     },
     close: () => context.close(),
   }
