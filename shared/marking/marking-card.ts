@@ -1,3 +1,4 @@
+import { groupBy } from '../collections/group-by.ts'
 import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
 import { type MarkingCut, type MarkingEnd, markingEnds, tapeBase } from './marking-cuts.ts'
 import {
@@ -112,7 +113,7 @@ function handWords(line: CutLine, member: Member): string {
   if (line.left > 0 && line.right > 0)
     return `Left hand: long point on the left looking ${along}, bow up. Right hand: the same, mirrored.`
   if (member.hand) return `Long point on the ${member.hand} looking ${along}, bow up.`
-  return 'No hand, bow up.'
+  return 'No left or right, bow up.'
 }
 
 function setOutNote(member: Member): string {
@@ -126,25 +127,36 @@ function figureWords(figure: MarkingFigure, note = false): string {
   return `${figure.label} ${value}${note && figure.note ? ` (${figure.note})` : ''}`
 }
 
-function cutLines(end: MarkingEnd, cut: MarkingCut): string[] {
-  const name = [end.title, cut.cheek.toLowerCase()].filter(Boolean).join(', ')
+function bevelsWords(cut: MarkingCut): string {
+  if (cut.kind === 'square cut' && !cut.edge) return 'square cut'
   const across = cut.edge
     ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
     : '; square across the top'
-  const bears = cut.bearsOn ? `. ${cut.bearsOn}` : ''
-  return [
-    `${name}: ${cut.kind}, down the side ${bevelWords(cut.face)}${across}${bears}.`,
-    ...cut.sawWords,
-  ]
+  return `${cut.kind}, down the side ${bevelWords(cut.face)}${across}`
+}
+
+/** Cheeks sawn alike are one line. */
+function cutLines(end: MarkingEnd): string[] {
+  const groups = groupBy(end.cuts, (cut) => [bevelsWords(cut), ...cut.sawWords].join('|'))
+  return [...groups.values()].flatMap((cuts) => {
+    const first = cuts[0]
+    if (!first) return []
+    const cheeks = cuts.length > 1 ? 'both cheeks' : first.cheek.toLowerCase()
+    const name = [end.title, cheeks].filter(Boolean).join(', ')
+    const bears = cuts.map(({ cheek, bearsOn }) =>
+      bearsOn && cheek ? `${cheek}: ${bearsOn}` : bearsOn,
+    )
+    const bearsText = bears.filter(Boolean).map((text) => ` ${text}.`)
+    return [`${name}: ${bevelsWords(first)}.${bearsText.join('')}`, ...first.sawWords]
+  })
 }
 
 function endLines(end: MarkingEnd): string[] {
   const from = end.points[0]?.note ?? ''
   const points = end.points.map((point) => figureWords(point)).join(', ')
-  return [
-    ...(points ? [`${end.title}: ${points}${from ? ` ${from}` : ''}.`] : []),
-    ...end.cuts.flatMap((cut) => cutLines(end, cut)),
-  ]
+  const name = points.startsWith(end.title) ? '' : `${end.title}: `
+  const place = points ? [`${name}${points}${from ? ` ${from}` : ''}.`] : []
+  return [...place, ...cutLines(end)]
 }
 
 /** Short plain lines for mail and print; the first names the line. */

@@ -85,7 +85,7 @@ function markingCut(
     cheek: cutCount > 1 ? cheekName(cut) : '',
     kind,
     longSide: cut.longSide,
-    bearsOn: bearsOnWords(spec, alike, cut, cutCount),
+    bearsOn: bearsOnWords(spec, alike, member, cut, cutCount),
     face: bevelOf(faceName(kind), 'side', cut.face, options),
     edge: across ? bevelOf(topName, 'top', cut.edge, options) : null,
     edgeOtherTop:
@@ -111,15 +111,19 @@ function cheekName(cut: Cut): string {
 function bearsOnWords(
   spec: FrameSpec,
   alike: readonly Member[],
+  member: Member,
   cut: Cut,
   cutCount: number,
 ): string {
   if (cut.end === 'tail') return ''
-  // Two cheeks of one piece meet different neighbours: only its own are named then.
-  const cuts = cutCount > 1 ? [cut] : alike.flatMap((m) => m.cuts.filter((c) => c.end === cut.end))
+  // Left and right cheeks change places from piece to piece, so the drawn one's are named.
+  const onlyDrawn = cutCount > 1
+  const cuts = onlyDrawn ? [cut] : alike.flatMap((m) => m.cuts.filter((c) => c.end === cut.end))
   const marks = new Set(cuts.flatMap((c) => [c.against, ...c.alsoAgainst]))
   const met = spec.members.filter((m) => marks.has(m.mark))
-  return met.length > 0 ? `Bears on ${piecesWords(met)}` : ''
+  if (met.length === 0) return ''
+  const whose = onlyDrawn && alike.length > 1 ? `${member.mark} bears` : 'Bears'
+  return `${whose} on ${piecesWords(met)}`
 }
 
 function endPoints(
@@ -132,7 +136,7 @@ function endPoints(
   const points = only
     ? singleCutPoints(only)
     : measuringPoints(member, end).map((point) => ({
-        label: point.name === 'cut' ? 'Cut' : `${capital(point.name)}, ${point.side}`,
+        label: point.name === 'cut' ? cutLabel(point.end) : `${capital(point.name)}, ${point.side}`,
         alongMm: point.alongMm,
       }))
   return points.map(({ label, alongMm }) =>
@@ -140,10 +144,14 @@ function endPoints(
   )
 }
 
+function cutLabel(end: Cut['end']): string {
+  return `${endTitles[end]} cut`
+}
+
 function singleCutPoints(cut: Cut): { label: string; alongMm: number }[] {
   const { longPointFromHeelMm: long, shortPointFromHeelMm: short, longSide } = cut
   if (longSide === 'none' || Math.abs(long - short) <= samePointMm)
-    return [{ label: 'Cut', alongMm: long }]
+    return [{ label: cutLabel(cut.end), alongMm: long }]
   const shortSide = longSide === 'left' ? 'right' : 'left'
   return [
     { label: `Long point, ${longSide}`, alongMm: long },

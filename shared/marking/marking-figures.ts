@@ -77,11 +77,16 @@ export function bevelOf(
     fromEdgeDeg: angle.fromEdgeDeg,
     fromSquareDeg: angle.fromSquareDeg,
     fromEdgeText: angleText(edgeDeg, options),
-    fromSquareText: angleText(90 - edgeDeg, options),
+    fromSquareText: angleText(Math.abs(90 - edgeDeg), options),
   }
 }
 
-/** '25.0° from square (65.0° from the edge)'. */
+/** '25.0° from square, 65.0° from the edge'. */
 export function bevelWords(bevel: MarkingBevel): string {
-  return `${bevel.fromSquareText} from square, ${bevel.fromEdgeText} from the edge`
+  return `${bevel.fromSquareText} ${squareWord(bevel)}, ${bevel.fromEdgeText} from the edge`
+}
+
+/** A line that leans beyond square is read the other way. */
+export function squareWord(bevel: Pick<MarkingBevel, 'fromSquareDeg'>): string {
+  return bevel.fromSquareDeg < 0 ? 'past square' : 'from square'
 }

@@ -1,3 +1,4 @@
+import { groupBy } from '../collections/group-by.ts'
 import type { CutLine, FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   bevelOf,
@@ -7,6 +8,7 @@ import {
   type MarkingFigure,
   type MarkingOptions,
 } from './marking-figures.ts'
+import { listWords } from './role-words.ts'
 
 export function furtherFigures(member: Member, options: MarkingOptions): MarkingFigure[] {
   const past = (mm: number) => (mm < 0 ? 'runs past' : 'taken off along the edge')
@@ -57,11 +59,16 @@ export function backingOf(member: Member, options: MarkingOptions): MarkingBevel
   return [bevel('Backing, left edge', leftDeg), bevel('Backing, right edge', rightDeg)]
 }
 
+/** Pieces planed alike share a sentence. */
 export function planingWords(spec: FrameSpec, line: CutLine, options: MarkingOptions): string[] {
-  return spec.planing
-    .filter((one) => line.members.includes(one.mark))
-    .map(
-      ({ mark, end, side, offMm }) =>
-        `${mark}: plane ${lengthWords(offMm, options)} off the ${side} top corner at the ${end}.`,
-    )
+  const ofLine = spec.planing.filter((one) => line.members.includes(one.mark))
+  const groups = groupBy(
+    ofLine,
+    (one) => `${lengthWords(one.offMm, options)}|${one.side}|${one.end}`,
+  )
+  return [...groups].map(([key, pieces]) => {
+    const [off = '', side = '', end = ''] = key.split('|')
+    const marks = listWords(pieces.map((one) => one.mark))
+    return `${marks}: plane ${off} off the ${side} top corner at the ${end}.`
+  })
 }
