@@ -1,5 +1,6 @@
 import {
   cutOneFirst,
+  type MarkingCard,
   markingCardLines,
   markingCardOf,
   workAtHeight,
@@ -15,18 +16,41 @@ export const platesNotMeasured = 'From plan, plates not measured'
 const orderOfWork = { cut: 'Cut', stand: 'Stand', 'set-out': 'Set out' } as const
 
 /** What of the line is due today: all of it, or these pieces. */
-function shareWords(line: ToldLine, ofLine: number): string {
-  if (line.quantity === ofLine) return `${line.quantity}`
-  return `${line.quantity} of ${ofLine} (${line.members.join(', ')})`
+function shareWords(line: ToldLine, card: MarkingCard): string {
+  if (line.quantity === card.quantity) return card.quantityWords
+  return `x${line.quantity} of ${card.quantity}: ${line.members.join(', ')}`
 }
 
-function lineCard(line: ToldLine, roof: Roof, withNumbers: boolean): MailBlock {
-  const card = markingCardOf(roof.spec, line.mark ?? '', roof.options)
-  const title = `${orderOfWork[line.work]} ${line.mark} ${card.name}: ${shareWords(line, card.quantity)}`
-  if (!withNumbers) return { kind: 'card', title, lines: ['Numbers as under Cut, above.'] }
-  const [first = '', ...rest] = markingCardLines(card)
+function lineTitle(line: ToldLine, card: MarkingCard): string {
+  return `${orderOfWork[line.work]} ${card.mark} ${card.name} ${card.section}, ${shareWords(line, card)}`
+}
+
+function cardFor(line: ToldLine, roof: Roof): MarkingCard {
+  return markingCardOf(roof.spec, line.mark ?? '', roof.options)
+}
+
+function lineCard(line: ToldLine, roof: Roof): MailBlock {
+  const card = cardFor(line, roof)
+  const numbers = markingCardLines(card).slice(1)
   const cautions = card.warnings.map((warning) => `Caution: ${warning.text} ${warning.remedy}`)
-  return { kind: 'card', title, lines: [first, ...rest, ...cautions] }
+  return { kind: 'card', title: lineTitle(line, card), lines: [...numbers, ...cautions] }
+}
+
+/** What was cut the same day has its numbers above; what was cut before gets them again. */
+function standBlocks(toStand: ToldLine[], toCut: ToldLine[], roof: Roof): MailBlock[] {
+  if (toStand.length === 0) return []
+  const cutToday = new Set(toCut.map((line) => line.mark))
+  const above = toStand.filter((line) => cutToday.has(line.mark))
+  const others = toStand.filter((line) => !cutToday.has(line.mark))
+  const list: MailBlock[] = [
+    { kind: 'paragraph', text: 'Cut the same day, numbers above:' },
+    { kind: 'list', items: above.map((line) => lineTitle(line, cardFor(line, roof))) },
+  ]
+  return [
+    { kind: 'subheading', text: 'To stand' },
+    ...(above.length > 0 ? list : []),
+    ...others.map((line) => lineCard(line, roof)),
+  ]
 }
 
 function markedLines(booking: DayMailBooking, work: 'cut' | 'stand'): ToldLine[] {
@@ -58,16 +82,10 @@ function workBlocks(booking: DayMailBooking): MailBlock[] {
     blocks.push(
       { kind: 'subheading', text: 'To cut' },
       { kind: 'paragraph', text: cutOneFirst },
-      ...toCut.map((line) => lineCard(line, roof, true)),
+      ...toCut.map((line) => lineCard(line, roof)),
     )
   }
-  if (toStand.length > 0) {
-    const cutToday = new Set(toCut.map((line) => line.mark))
-    blocks.push(
-      { kind: 'subheading', text: 'To stand' },
-      ...toStand.map((line) => lineCard(line, roof, !cutToday.has(line.mark))),
-    )
-  }
+  blocks.push(...standBlocks(toStand, toCut, roof))
   if (toCut.length + toStand.length === 0)
     blocks.push({ kind: 'paragraph', text: 'No lines of the cut list are planned for this day.' })
   return blocks
