@@ -29,8 +29,12 @@ export type Timber = {
   arrisFall: { left: number; right: number }
 }
 
+/** Where a plane crosses the lines of a timber: mm along = base + perLeft × mm aside + perDown × mm plumb under the top. */
+export type Crossing = { baseMm: number; perLeft: number; perDown: number }
+
 /** What a plane does to a timber: where it crosses it and at which angles it is marked and sawn. */
 export type Bevel = {
+  crossing: Crossing
   alongMm: number
   leftMm: number
   rightMm: number
@@ -79,12 +83,31 @@ const slopedTop = (
   return unit3(along3(timber.up, timber.left, lean))
 }
 
-/** Angle of a plane's line across a top facet with the arris, 0 to 90 degrees. */
+/**
+ * Angle of a plane's line across a top facet, from the arris into the timber, at the long point; over
+ * 90 where a planed top turns a nearly square cut past square.
+ */
 const edgeDeg = (plane: Plane, timber: Timber, top: Point3): number => {
-  const line = unit3(cross3(plane.normal, top))
-  const angle = angleBetweenDeg(line, timber.direction)
-  return Math.min(angle, 180 - angle)
+  const across = unit3(cross3(plane.normal, top))
+  // from the long point to the short one, which lies on the side that the cut leans towards
+  const toShort = dot3(across, timber.left) * dot3(plane.normal, timber.left)
+  const line = toShort < 0 ? scale3(across, -1) : across
+  const offTimber = dot3(plane.normal, timber.direction) < 0 ? -1 : 1
+  return angleBetweenDeg(line, scale3(timber.direction, -offTimber))
 }
+
+/** How a plane crosses the lines of a timber that run along it. */
+export const crossingOf = (plane: Plane, timber: Timber): Crossing => {
+  const facing = dot3(plane.normal, timber.direction)
+  return {
+    baseMm: planeCrossing(plane, timber.origin, timber.direction),
+    perLeft: -dot3(plane.normal, timber.left) / facing,
+    perDown: plane.normal.z / facing,
+  }
+}
+
+export const crossingAt = (crossing: Crossing, leftMm: number, downMm: number): number =>
+  crossing.baseMm + crossing.perLeft * leftMm + crossing.perDown * downMm
 
 /**
  * The one routine for every bevel: a plane in space against a timber.
@@ -96,17 +119,18 @@ export const bevelOf = (
   timber: Timber,
   falls: { left: number; right: number },
 ): Bevel => {
-  const crossing = (leftMm: number) =>
-    planeCrossing(plane, timberPoint(timber, 0, leftMm, topFall(timber, leftMm)), timber.direction)
+  const crossing = crossingOf(plane, timber)
+  const { halfMm, arrisFall } = timber
   const lean = dot3(plane.normal, timber.left)
   const leans = Math.abs(lean) < squareLean ? 'none' : lean > 0 ? 'left' : 'right'
   const down = cross3(plane.normal, timber.left)
   const downward = unit3(dot3(down, timber.up) > 0 ? scale3(down, -1) : down)
   const top = slopedTop(timber, leans === 'right' ? 'right' : 'left', falls)
   return {
-    alongMm: crossing(0),
-    leftMm: crossing(timber.halfMm),
-    rightMm: crossing(-timber.halfMm),
+    crossing,
+    alongMm: crossing.baseMm,
+    leftMm: crossingAt(crossing, halfMm, arrisFall.left),
+    rightMm: crossingAt(crossing, -halfMm, arrisFall.right),
     faceFromEdgeDeg: angleBetweenDeg(scale3(timber.direction, -1), downward),
     squareEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, timber.up),
     slopedEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, top),

@@ -20,13 +20,18 @@ export type Ground = {
 
 type Start = Pick<Piece, 'role' | 'section' | 'foot' | 'head' | 'slopes'>
 
-const rawPiece = (start: Start): Omit<Piece, 'id'> => {
+const rawPiece = (start: Start): Piece => {
   const run = sub2(start.head, start.foot)
   const planMm = length2(run)
   const dir = { x: run.x / planMm, y: run.y / planMm }
   const rise = start.head.z - start.foot.z
   return {
-    ...start,
+    id: 0,
+    role: start.role,
+    section: start.section,
+    foot: start.foot,
+    head: start.head,
+    slopes: start.slopes,
     halfMm: start.section.thicknessMm / 2,
     dir,
     left: left2(dir),
@@ -61,7 +66,7 @@ const hipTailPlanMm = (ground: Ground, corner: number, dir: { x: number; y: numb
   return Math.min(...reaches)
 }
 
-const linePiece = (ground: Ground, line: NodeLine): Omit<Piece, 'id'> => {
+const linePiece = (ground: Ground, line: NodeLine): Piece => {
   const { roof, lines, joints } = ground
   const role: MemberRole =
     line.kind === 'ridge' ? 'ridge' : line.kind === 'hip' ? 'hip' : 'broken-hip'
@@ -71,8 +76,7 @@ const linePiece = (ground: Ground, line: NodeLine): Omit<Piece, 'id'> => {
   const piece = rawPiece({ role, section, foot: foot.point, head: head.point, slopes: line.slopes })
   const fall = sideFalls(ground, line.slopes, piece.left)
   const backed = role !== 'ridge' && roof.hipTop === 'backed'
-  return {
-    ...piece,
+  return Object.assign(piece, {
     fall,
     backed,
     dropMm: backed ? 0 : Math.max(fall.left, fall.right) * piece.halfMm,
@@ -80,7 +84,7 @@ const linePiece = (ground: Ground, line: NodeLine): Omit<Piece, 'id'> => {
     footJoint: at(joints.ofNode, line.from),
     headJoint: at(joints.ofNode, line.to),
     tailPlanMm: foot.corner === null ? 0 : hipTailPlanMm(ground, foot.corner, piece.dir),
-  }
+  })
 }
 
 const lineIndex = (ground: Ground, slope: number, border: Border): number | null => {
@@ -105,12 +109,7 @@ const rafterRole = (ground: Ground, slope: number, joint: Joint | null, line: nu
   return 'crown-end'
 }
 
-const rafterPiece = (
-  ground: Ground,
-  slope: Slope,
-  face: Face,
-  station: Station,
-): Omit<Piece, 'id'> | null => {
+const rafterPiece = (ground: Ground, slope: Slope, face: Face, station: Station): Piece | null => {
   const { lines, joints, plates, roof } = ground
   const span = squareLineSpan(lines, slope, face, station.alongMm)
   if (span === null) return null
@@ -127,19 +126,19 @@ const rafterPiece = (
     z: inMm * slope.tan,
   })
   const edge: PlateEdge = edgeUnder(plates, slope, station.alongMm)
-  return {
-    ...rawPiece({
-      role: rafterRole(ground, slope.index, joint, headLine),
-      section: roof.sections.rafter,
-      foot: place(0),
-      head: place(span.high),
-      slopes: [slope.index],
-    }),
+  const piece = rawPiece({
+    role: rafterRole(ground, slope.index, joint, headLine),
+    section: roof.sections.rafter,
+    foot: place(0),
+    head: place(span.high),
+    slopes: [slope.index],
+  })
+  return Object.assign(piece, {
     edge: edge.index,
     headJoint: jointIndex,
     headLine: joint === null ? headLine : null,
     tailPlanMm: edge.overhangMm,
-  }
+  })
 }
 
 /** Whether a rafter `alongMm` along a slope's plate stands clear of the hips at both corners and is worth cutting. */
@@ -163,7 +162,7 @@ const clearOfCorners = (ground: Ground, slope: Slope, face: Face, alongMm: numbe
 /** Every timber of the roof with its set-out line, none cut yet: lines first, then rafters slope by slope. */
 export const buildPieces = (ground: Ground): Piece[] => {
   const { roof, plates, lines, joints } = ground
-  const pieces: Omit<Piece, 'id'>[] = []
+  const pieces: Piece[] = []
   lines.lines.forEach((line, index) => {
     const isTimber = line.kind === 'ridge' || line.kind === 'hip' || line.kind === 'broken-hip'
     if (isTimber && !joints.swallowed.has(index)) pieces.push(linePiece(ground, line))
@@ -176,5 +175,6 @@ export const buildPieces = (ground: Ground): Piece[] => {
       if (piece !== null) pieces.push(piece)
     }
   }
-  return pieces.map((piece, id) => ({ ...piece, id }))
+  pieces.forEach((piece, id) => (piece.id = id))
+  return pieces
 }

@@ -26,7 +26,6 @@ const isNear = (a: Segment, b: Segment): boolean =>
 
 /** How many mm of two faces lie on each other, in plan. */
 const sharedMm = (a: Segment, b: Segment): number => {
-  if (!isNear(a, b)) return 0
   const run = sub2(a.to, a.from)
   const size = Math.hypot(run.x, run.y)
   if (size < leastBearingMm) return 0
@@ -58,7 +57,7 @@ export const bearings = (
   if (own === undefined) return []
   const sums = new Map<number, number>()
   for (const other of segments) {
-    if (other.piece === piece.id || !mayBear(other.piece)) continue
+    if (other.piece === piece.id || !isNear(own, other) || !mayBear(other.piece)) continue
     const shared = sharedMm(own, other)
     if (shared > leastBearingMm) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
   }

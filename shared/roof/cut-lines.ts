@@ -22,40 +22,33 @@ const roleOrder = Object.keys(letters)
 /** What makes two pieces alike: lengths in `alikeMm`, angles in `alikeDeg`, both as plain numbers. */
 type Likeness = { words: string; mm: number[]; deg: number[] }
 
-const flipped = (side: 'left' | 'right' | 'none', mirror: boolean) =>
-  !mirror || side === 'none' ? side : side === 'left' ? 'right' : 'left'
-
-const sideRank = { left: 0, none: 1, right: 2 }
+const sideRanks = { left: -1, none: 0, right: 1 }
+const endRanks = { head: 0, foot: 1, tail: 2 }
 
 /** The numbers of a piece as cut, or of its mirror image. */
 const likeness = (member: DraftMember, mirror: boolean): Likeness => {
-  const ends: Cut['end'][] = ['head', 'foot', 'tail']
-  const cuts = member.cuts
-    .map((cut) => ({ ...cut, longSide: flipped(cut.longSide, mirror) }))
-    .sort(
-      (a, b) =>
-        ends.indexOf(a.end) - ends.indexOf(b.end) ||
-        sideRank[a.longSide] - sideRank[b.longSide] ||
-        a.alongMm - b.alongMm,
-    )
-  const mouth = member.birdsmouth
-  const backing = member.backing
-  const sides = backing === null ? [] : [backing.leftDeg, backing.rightDeg]
-  return {
-    words: [member.role, mouth === null, ...cuts.map((cut) => cut.end + cut.longSide)].join(),
-    mm: [
-      member.setOutLengthMm,
-      member.cutLengthMm,
-      member.dropMm,
-      ...(mouth === null ? [] : [mouth.heelMm, mouth.seatMm, mouth.heelOffsetMm]),
-      ...cuts.flatMap((c) => [c.alongMm, c.longPointFromHeelMm, c.shortPointFromHeelMm]),
-    ],
-    deg: [
-      member.pitchDeg,
-      ...(mirror ? sides.reverse() : sides),
-      ...cuts.flatMap((c) => [c.face.fromEdgeDeg, c.edge.fromEdgeDeg, c.bladeTiltDeg]),
-    ],
+  const turn = mirror ? -1 : 1
+  const ranked = member.cuts.map((cut) => ({
+    cut,
+    end: endRanks[cut.end],
+    side: sideRanks[cut.longSide] * turn,
+  }))
+  ranked.sort((a, b) => a.end - b.end || a.side - b.side || a.cut.alongMm - b.cut.alongMm)
+  const { birdsmouth, backing } = member
+  const mm = [member.setOutLengthMm, member.cutLengthMm, member.dropMm]
+  const deg = [member.pitchDeg]
+  if (birdsmouth !== null) mm.push(birdsmouth.heelMm, birdsmouth.seatMm, birdsmouth.heelOffsetMm)
+  if (backing !== null) {
+    const { leftDeg, rightDeg } = backing
+    deg.push(...(mirror ? [rightDeg, leftDeg] : [leftDeg, rightDeg]))
   }
+  let words = `${member.role} ${birdsmouth === null}`
+  for (const { cut, end, side } of ranked) {
+    words += ` ${end}${side}`
+    mm.push(cut.alongMm, cut.longPointFromHeelMm, cut.shortPointFromHeelMm)
+    deg.push(cut.face.fromEdgeDeg, cut.edge.fromEdgeDeg, cut.bladeTiltDeg)
+  }
+  return { words, mm, deg }
 }
 
 const within = (a: number[], b: number[], tolerance: number) =>
@@ -64,16 +57,15 @@ const within = (a: number[], b: number[], tolerance: number) =>
 const alike = (a: Likeness, b: Likeness) =>
   a.words === b.words && within(a.mm, b.mm, alikeMm) && within(a.deg, b.deg, alikeDeg)
 
-type Group = { first: Likeness; members: DraftMember[] }
+type Group = { straight: Likeness; mirrored: Likeness; members: DraftMember[] }
 
 const grouped = (members: DraftMember[]): Group[] => {
   const groups: Group[] = []
   for (const member of members) {
     const straight = likeness(member, false)
-    const mirrored = likeness(member, true)
-    const found = groups.find((g) => alike(straight, g.first) || alike(mirrored, g.first))
-    if (found === undefined) groups.push({ first: straight, members: [member] })
-    else found.members.push(member)
+    const found = groups.find((g) => alike(straight, g.straight) || alike(straight, g.mirrored))
+    if (found !== undefined) found.members.push(member)
+    else groups.push({ straight, mirrored: likeness(member, true), members: [member] })
   }
   return groups
 }
@@ -86,16 +78,47 @@ export const suffix = (place: number): string => {
 
 export type MarkedMembers = { members: Member[]; cutLines: CutLine[]; markOf: Map<number, string> }
 
-const finished = (member: DraftMember, markOf: Map<number, string>): Member => {
+const finished = (draft: DraftMember, markOf: Map<number, string>): Member => {
   const mark = (piece: number) => markOf.get(piece) ?? ''
-  const { piece, timber: _timber, cuts, ...numbers } = member
   return {
-    mark: mark(piece.id),
-    ...numbers,
-    cuts: cuts.map(({ bears, listed: _listed, ...cut }) => {
-      const [first, ...rest] = bears.map(mark)
-      return { ...cut, against: first ?? null, alsoAgainst: rest }
-    }),
+    mark: mark(draft.piece.id),
+    role: draft.role,
+    hand: draft.hand,
+    section: draft.section,
+    axis: draft.axis,
+    riseMm: draft.riseMm,
+    runMm: draft.runMm,
+    pitchDeg: draft.pitchDeg,
+    setOutLengthMm: draft.setOutLengthMm,
+    headDeductionMm: draft.headDeductionMm,
+    footDeductionMm: draft.footDeductionMm,
+    tailLengthMm: draft.tailLengthMm,
+    cutLengthMm: draft.cutLengthMm,
+    cuts: draft.cuts.map((cut) => finishedCut(cut, mark)),
+    birdsmouth: draft.birdsmouth,
+    backing: draft.backing,
+    dropMm: draft.dropMm,
+    planes: draft.planes,
+    weightKg: draft.weightKg,
+  }
+}
+
+const finishedCut = (cut: DraftMember['cuts'][number], mark: (piece: number) => string): Cut => {
+  const [against, ...alsoAgainst] = cut.bears.map(mark)
+  return {
+    end: cut.end,
+    plane: cut.plane,
+    against: against ?? null,
+    alsoAgainst,
+    alongMm: cut.alongMm,
+    longSide: cut.longSide,
+    longPointFromHeelMm: cut.longPointFromHeelMm,
+    shortPointFromHeelMm: cut.shortPointFromHeelMm,
+    face: cut.face,
+    edge: cut.edge,
+    edgeOtherTop: cut.edgeOtherTop,
+    bladeTiltDeg: cut.bladeTiltDeg,
+    pastSaw: cut.pastSaw,
   }
 }
 
@@ -137,12 +160,6 @@ export const markMembers = (drafts: DraftMember[]): MarkedMembers => {
       },
     ]
   })
-  const order = new Map(drafts.map((draft) => [draft.piece.id, draft]))
-  const members = groups.flatMap((group) =>
-    group.members.flatMap((m) => {
-      const draft = order.get(m.piece.id)
-      return draft === undefined ? [] : [finished(draft, markOf)]
-    }),
-  )
+  const members = groups.flatMap((group) => group.members.map((draft) => finished(draft, markOf)))
   return { members, cutLines, markOf }
 }

@@ -1,5 +1,5 @@
 import { bevelOf, bothWays } from './bevel.ts'
-import type { Timber } from './bevel.ts'
+import type { Crossing, Timber } from './bevel.ts'
 import type { Ground } from './build-pieces.ts'
 import { isHipLike, piecePoint } from './piece.ts'
 import type { Piece, PlanCut } from './piece.ts'
@@ -13,6 +13,7 @@ import type { Plane } from './vector.ts'
 export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
   /** Place in the piece's list of joint cuts of this end; null for a tail. */
   listed: number | null
+  crossing: Crossing
 }
 
 /** Cuts across within this are square: no long side. */
@@ -63,6 +64,7 @@ const draftCut = (
     end,
     plane,
     listed,
+    crossing: bevel.crossing,
     alongMm: bevel.alongMm,
     longSide,
     longPointFromHeelMm: leftIsLong ? bevel.leftMm : bevel.rightMm,

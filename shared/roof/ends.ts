@@ -1,8 +1,7 @@
-import { timberPoint, topFall } from './bevel.ts'
+import { crossingAt, timberPoint, topFall } from './bevel.ts'
 import type { Timber } from './bevel.ts'
 import type { DraftCut } from './cuts.ts'
 import type { Point3 } from './roof-types.ts'
-import { dot3, planeCrossing, sub3 } from './vector.ts'
 
 /** A corner of a timber's end: where it is and how far off the centre line. */
 export type EndCorner = { leftMm: number; alongMm: number; point: Point3 }
@@ -13,11 +12,7 @@ const downMm = (timber: Timber, leftMm: number, level: Level): number =>
   level === 'top' ? topFall(timber, leftMm) : timber.depthMm / timber.cos
 
 const crossingMm = (timber: Timber, cut: DraftCut, leftMm: number, level: Level): number =>
-  planeCrossing(
-    cut.plane,
-    timberPoint(timber, 0, leftMm, downMm(timber, leftMm, level)),
-    timber.direction,
-  )
+  crossingAt(cut.crossing, leftMm, downMm(timber, leftMm, level))
 
 /** Where two cuts of an end meet across the timber, on one half of it; null outside that half. */
 const meetingMm = (
@@ -40,40 +35,52 @@ const meetingMm = (
 /** Offsets off the centre line at which an end can have a corner. */
 const offsets = (timber: Timber, cuts: DraftCut[], level: Level): number[] => {
   const found = [timber.halfMm, 0, -timber.halfMm]
-  cuts.forEach((a, k) => {
-    for (const b of cuts.slice(k + 1)) {
-      for (const half of [1, -1] as const) {
-        const leftMm = meetingMm(timber, a, b, level, half)
-        if (leftMm !== null) found.push(leftMm)
-      }
+  for (let i = 0; i < cuts.length; i++) {
+    for (let j = i + 1; j < cuts.length; j++) {
+      const [a, b] = [cuts[i], cuts[j]]
+      if (a === undefined || b === undefined) continue
+      const left = meetingMm(timber, a, b, level, 1)
+      const right = meetingMm(timber, a, b, level, -1)
+      if (left !== null) found.push(left)
+      if (right !== null) found.push(right)
     }
-  })
+  }
   return found
 }
 
-/** The corners of one end of a timber, of its top or bottom, cut by all cuts of that end. */
-export const endCorners = (
+/** How far a line of the timber runs to the cuts of one end. */
+const endAlongMm = (
   timber: Timber,
   cuts: DraftCut[],
   upper: boolean,
+  leftMm: number,
   level: Level,
-): EndCorner[] =>
-  offsets(timber, cuts, level).map((leftMm) => {
-    const reaches = cuts.map((cut) => crossingMm(timber, cut, leftMm, level))
-    const alongMm = upper ? Math.min(...reaches) : Math.max(...reaches)
-    return {
-      leftMm,
-      alongMm,
-      point: timberPoint(timber, alongMm, leftMm, downMm(timber, leftMm, level)),
-    }
+) => {
+  let alongMm = upper ? Infinity : -Infinity
+  for (const cut of cuts) {
+    const reach = crossingMm(timber, cut, leftMm, level)
+    alongMm = upper ? Math.min(alongMm, reach) : Math.max(alongMm, reach)
+  }
+  return alongMm
+}
+
+/** The corners of one end of a timber's top, cut by all cuts of that end. */
+export const endCorners = (timber: Timber, cuts: DraftCut[], upper: boolean): EndCorner[] =>
+  offsets(timber, cuts, 'top').map((leftMm) => {
+    const alongMm = endAlongMm(timber, cuts, upper, leftMm, 'top')
+    return { leftMm, alongMm, point: timberPoint(timber, alongMm, leftMm, topFall(timber, leftMm)) }
   })
 
 /** Furthest reach of a timber's end along its own axis, mm from its origin. */
 export const endReachMm = (timber: Timber, cuts: DraftCut[], upper: boolean): number => {
-  const corners = [
-    ...endCorners(timber, cuts, upper, 'top'),
-    ...endCorners(timber, cuts, upper, 'bottom'),
-  ]
-  const reaches = corners.map(({ point }) => dot3(timber.direction, sub3(point, timber.origin)))
-  return upper ? Math.max(...reaches) : Math.min(...reaches)
+  let furthest = upper ? -Infinity : Infinity
+  for (const level of ['top', 'bottom'] as const) {
+    for (const leftMm of offsets(timber, cuts, level)) {
+      // a point plumb below the top lies further towards the foot, measured along the timber
+      const back = timber.sin * downMm(timber, leftMm, level)
+      const reach = endAlongMm(timber, cuts, upper, leftMm, level) - back
+      furthest = upper ? Math.max(furthest, reach) : Math.min(furthest, reach)
+    }
+  }
+  return furthest
 }

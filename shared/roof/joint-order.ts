@@ -192,13 +192,14 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
     const standsOnPlate = job.end === 'head' && job.piece.role !== 'ridge' && !hasFootJob(job.piece)
     if (standsOnPlate) obstacles.push(halfObstacle(job.piece, 'foot'))
   }
-  const order = new Map<string, number>()
-  placed.forEach(({ piece, end }, k) => {
-    order.set(`${piece.id} ${end}`, k)
-    const first = `${piece.id} first`
-    if (!order.has(first)) order.set(first, k)
-  })
-  return (piece, end) => order.get(`${piece} ${end ?? 'first'}`) ?? -1
+  const headAt = pieces.map(() => -1)
+  const footAt = pieces.map(() => -1)
+  placed.forEach(({ piece, end }, k) => ((end === 'head' ? headAt : footAt)[piece.id] = k))
+  return (piece, end) => {
+    const [head = -1, foot = -1] = [headAt[piece], footAt[piece]]
+    if (end !== null) return end === 'head' ? head : foot
+    return foot < 0 ? head : Math.min(head, foot)
+  }
 }
 
 const hasFootJob = (piece: Piece): boolean => piece.role === 'broken-hip'

@@ -21,7 +21,7 @@ export const planingOf = (
     (['head', 'foot'] as const).flatMap((end) => {
       const cuts = draft.cuts.filter((cut) => cut.end === end)
       if (cuts.length === 0) return []
-      const corners = endCorners(draft.timber, cuts, end === 'head', 'top').map((corner) => ({
+      const corners = endCorners(draft.timber, cuts, end === 'head').map((corner) => ({
         leftMm: corner.leftMm,
         overMm:
           corner.point.z -

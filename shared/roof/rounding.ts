@@ -1,9 +1,9 @@
-import { timberPoint, topFall } from './bevel.ts'
+import { crossingAt, crossingOf, timberPoint, topFall } from './bevel.ts'
 import type { Timber } from './bevel.ts'
 import type { DraftCut } from './cuts.ts'
 import type { DraftMember } from './members.ts'
 import type { FrameSpec, Point3, RoofSettings } from './roof-types.ts'
-import { along3, cross3, degrees, dot3, planeCrossing, radians, scale3, unit3 } from './vector.ts'
+import { along3, cross3, dot3, radians, scale3, unit3 } from './vector.ts'
 import type { Plane } from './vector.ts'
 
 const roundTo = (value: number, step: number): number => Math.round(value / step) * step
@@ -48,17 +48,15 @@ export const rebuiltPlane = (
 /** Largest gap between a cut and its rebuilt self over the timber's four arrises, mm square to the cut. */
 const gapMm = (timber: Timber, cut: DraftCut, rebuilt: Plane): number => {
   const facing = Math.abs(dot3(cut.plane.normal, timber.direction))
-  const gaps = [1, -1].flatMap((side) => {
-    const leftMm = side * timber.halfMm
-    return [topFall(timber, leftMm), timber.depthMm / timber.cos].map((downMm) => {
-      const start = timberPoint(timber, 0, leftMm, downMm)
-      const off =
-        planeCrossing(rebuilt, start, timber.direction) -
-        planeCrossing(cut.plane, start, timber.direction)
-      return Math.abs(off) * facing
-    })
-  })
-  return Math.max(...gaps)
+  const marked = crossingOf(rebuilt, timber)
+  let worst = 0
+  for (const leftMm of [timber.halfMm, -timber.halfMm]) {
+    for (const downMm of [topFall(timber, leftMm), timber.depthMm / timber.cos]) {
+      const off = crossingAt(marked, leftMm, downMm) - crossingAt(cut.crossing, leftMm, downMm)
+      worst = Math.max(worst, Math.abs(off) * facing)
+    }
+  }
+  return worst
 }
 
 /** The joint that suffers most when every number is marked to the settings' steps, mm. */
@@ -81,10 +79,4 @@ export const worstRounding = (
     }
   }
   return worst
-}
-
-/** Angle between a rebuilt cut and the true one, degrees: for checks of the published numbers. */
-export const rebuildErrorDeg = (timber: Timber, cut: DraftCut): number => {
-  const rebuilt = rebuiltPlane(timber, cut, 1e-9, 1e-9)
-  return degrees(Math.acos(Math.min(1, dot3(rebuilt.normal, cut.plane.normal))))
 }
