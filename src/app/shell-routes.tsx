@@ -3,6 +3,28 @@ import type { RouteObject } from 'react-router-dom'
 /** Screens inside the shell, one lazy file each; `permission` of the first navigation entry guards none: the server does. */
 export const shellRoutes: RouteObject[] = [
   {
+    path: 'board',
+    lazy: async () => ({ Component: (await import('../features/jobs/board-page.tsx')).BoardPage }),
+  },
+  {
+    path: 'jobs/new',
+    lazy: async () => ({
+      Component: (await import('../features/jobs/new-job-page.tsx')).NewJobPage,
+    }),
+  },
+  {
+    path: 'jobs/:jobId',
+    lazy: async () => ({ Component: (await import('../features/jobs/job-page.tsx')).JobPage }),
+    children: [
+      {
+        path: 'edit',
+        lazy: async () => ({
+          Component: (await import('../features/jobs/job-edit-panel.tsx')).JobEditPanel,
+        }),
+      },
+    ],
+  },
+  {
     path: 'account',
     lazy: async () => ({
       Component: (await import('../features/auth/account-page.tsx')).AccountPage,

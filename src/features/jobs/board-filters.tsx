@@ -1,0 +1,103 @@
+import { Search, X } from 'lucide-react'
+import { useEffect, useRef } from 'react'
+import { jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
+import type { Board } from '../../../shared/jobs/job-views.ts'
+import { Button } from '../../ui/button.tsx'
+import { Field } from '../../ui/field.tsx'
+import { Select, TextInput } from '../../ui/inputs.tsx'
+import type { BoardFilter } from './job-queries.ts'
+
+type Props = {
+  filter: BoardFilter
+  change: (next: Partial<BoardFilter>) => void
+  isFiltered: boolean
+  board: Board | undefined
+}
+
+function isTyping(target: EventTarget | null): boolean {
+  return (
+    target instanceof HTMLElement && target.matches('input, textarea, select, [contenteditable]')
+  )
+}
+
+/** `/` goes to the search from anywhere on the page. */
+function useSearchKey() {
+  const input = useRef<HTMLInputElement>(null)
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent) => {
+      if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return
+      if (isTyping(event.target)) return
+      event.preventDefault()
+      input.current?.focus()
+      input.current?.select()
+    }
+    window.addEventListener('keydown', onKey)
+    return () => window.removeEventListener('keydown', onKey)
+  }, [])
+  return input
+}
+
+export function BoardFilters({ filter, change, isFiltered, board }: Props) {
+  const input = useSearchKey()
+  const crews = board?.crews ?? []
+  return (
+    <search className="mb-4 grid grid-cols-2 items-end gap-3 lg:flex">
+      <div className="relative col-span-2 lg:w-80">
+        <label htmlFor="board-search" className="mb-1 block font-semibold">
+          Find a job
+        </label>
+        <Search size={18} aria-hidden className="absolute bottom-3.5 left-3 text-ink-soft" />
+        <TextInput
+          ref={input}
+          id="board-search"
+          type="search"
+          className="pl-9"
+          placeholder="Number, title, site or name"
+          aria-keyshortcuts="/"
+          maxLength={80}
+          value={filter.q}
+          onChange={(event) => change({ q: event.target.value })}
+        />
+      </div>
+      <Field label="Stage" className="lg:w-44">
+        <Select
+          value={filter.stage ?? ''}
+          onChange={(event) =>
+            change({ stage: jobStages.find((stage) => stage === event.target.value) ?? null })
+          }
+        >
+          <option value="">All stages</option>
+          {jobStages.map((stage) => (
+            <option key={stage} value={stage}>
+              {jobStageNames[stage]}
+              {board ? ` (${board.counts[stage]})` : ''}
+            </option>
+          ))}
+        </Select>
+      </Field>
+      <Field label="Crew" className="lg:w-44">
+        <Select
+          value={filter.crew ?? ''}
+          onChange={(event) => change({ crew: event.target.value || null })}
+        >
+          <option value="">All crews</option>
+          {crews.map((crew) => (
+            <option key={crew.id} value={crew.id}>
+              {crew.name}
+            </option>
+          ))}
+        </Select>
+      </Field>
+      {isFiltered ? (
+        <Button
+          kind="quiet"
+          className="col-span-2 justify-self-start"
+          onClick={() => change({ q: '', stage: null, crew: null })}
+        >
+          <X size={18} aria-hidden />
+          Show all jobs
+        </Button>
+      ) : null}
+    </search>
+  )
+}

@@ -1,0 +1,134 @@
+import { useInfiniteQuery } from '@tanstack/react-query'
+import { Plus } from 'lucide-react'
+import { Link } from 'react-router-dom'
+import { type JobStage, jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
+import type { Board } from '../../../shared/jobs/job-views.ts'
+import { failureText } from '../../lib/failure-text.ts'
+import { useMay } from '../../lib/session.ts'
+import { Button, buttonClass } from '../../ui/button.tsx'
+import { PageHeader } from '../../ui/page-header.tsx'
+import { Skeleton } from '../../ui/skeleton.tsx'
+import { EmptyState, ErrorState } from '../../ui/states.tsx'
+import { useBoardAddress } from './board-address.ts'
+import { BoardColumns } from './board-columns.tsx'
+import { BoardFilters } from './board-filters.tsx'
+import { JobCard } from './job-card.tsx'
+import { jobQueries } from './job-queries.ts'
+import { useSettled } from './use-settled.ts'
+
+const settleMs = 200
+
+function BoardSkeleton() {
+  return (
+    <div role="status" aria-label="Loading the board" className="gap-3 max-lg:space-y-3 lg:flex">
+      {jobStages.map((stage) => (
+        <div key={stage} className="space-y-2 lg:w-64 lg:grow">
+          <Skeleton className="h-8 w-full" />
+          <Skeleton className="h-28" />
+          <Skeleton className="h-28 max-lg:hidden" />
+        </div>
+      ))}
+    </div>
+  )
+}
+
+function NewJobLink() {
+  return (
+    <Link to="/jobs/new" className={buttonClass()}>
+      <Plus size={20} aria-hidden />
+      New job
+    </Link>
+  )
+}
+
+function NoJobs({ isFiltered, onClear }: { isFiltered: boolean; onClear: () => void }) {
+  const mayWrite = useMay('job:write')
+  if (isFiltered) {
+    return (
+      <EmptyState
+        title="No job fits"
+        action={
+          <Button kind="plain" onClick={onClear}>
+            Show all jobs
+          </Button>
+        }
+      >
+        Try fewer words, another stage or another crew.
+      </EmptyState>
+    )
+  }
+  return mayWrite ? (
+    <EmptyState title="No jobs yet" action={<NewJobLink />}>
+      Write down the first enquiry. Its roof and its days come after.
+    </EmptyState>
+  ) : (
+    <EmptyState title="No jobs for your crew">
+      What your crew is booked on shows here, two weeks back and four ahead.
+    </EmptyState>
+  )
+}
+
+type StageListProps = { stage: JobStage; board: Board; more: (() => void) | null; busy: boolean }
+
+function StageList({ stage, board, more, busy }: StageListProps) {
+  return (
+    <section>
+      <h2 className="mb-2 text-lg font-extrabold">
+        {jobStageNames[stage]}{' '}
+        <span className="font-semibold tabular-nums text-ink-soft">{board.counts[stage]}</span>
+      </h2>
+      <ul className="grid gap-3 sm:grid-cols-2 lg:grid-cols-3 xl:grid-cols-4">
+        {board.jobs.map((card) => (
+          <li key={card.id}>
+            <JobCard card={card} />
+          </li>
+        ))}
+      </ul>
+      {more ? (
+        <Button kind="plain" className="mt-4 w-full sm:w-auto" busy={busy} onClick={more}>
+          Show more
+        </Button>
+      ) : null}
+    </section>
+  )
+}
+
+/** Jobs by stage. */
+export function BoardPage() {
+  const { filter, change, isFiltered } = useBoardAddress()
+  const q = useSettled(filter.q, settleMs)
+  const asked = { ...filter, q }
+  const query = useInfiniteQuery(jobQueries.board(asked))
+  const mayWrite = useMay('job:write')
+  const first = query.data?.pages[0]
+  const clear = () => change({ q: '', stage: null, crew: null })
+
+  const body = () => {
+    if (query.isError && !first) {
+      const message = failureText(query.error) ?? 'The board could not be loaded.'
+      return <ErrorState message={message} onRetry={() => void query.refetch()} />
+    }
+    if (!first) return <BoardSkeleton />
+    const jobs = query.data?.pages.flatMap((page) => page.jobs) ?? []
+    if (jobs.length === 0) return <NoJobs isFiltered={isFiltered} onClear={clear} />
+    const { stage } = filter
+    if (!stage)
+      return <BoardColumns board={first} onShowStage={(next) => change({ stage: next })} />
+    const ofStage = jobs.filter((card) => card.stage === stage)
+    return (
+      <StageList
+        stage={stage}
+        board={{ ...first, jobs: ofStage }}
+        more={query.hasNextPage ? () => void query.fetchNextPage() : null}
+        busy={query.isFetchingNextPage}
+      />
+    )
+  }
+  return (
+    <>
+      <PageHeader title="Board" actions={mayWrite ? <NewJobLink /> : null} />
+      <BoardFilters filter={filter} change={change} isFiltered={isFiltered} board={first} />
+      <div aria-busy={query.isPlaceholderData}>{body()}</div>
+    </>
+  )
+}

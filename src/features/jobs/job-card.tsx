@@ -1,0 +1,79 @@
+import { CircleAlert } from 'lucide-react'
+import { Link } from 'react-router-dom'
+import { formatDay } from '../../../shared/calendar/days.ts'
+import { jobMissingWords } from '../../../shared/jobs/job-missing.ts'
+import type { JobCard as Card } from '../../../shared/jobs/job-views.ts'
+import { CrewPennant } from '../../drawings/crew-pennant.tsx'
+import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
+import { bookingDaysText } from './booking-words.ts'
+import { NoRoofGlyph } from './no-roof-glyph.tsx'
+
+const glyphPx = 48
+
+function roofText(card: Card): string | null {
+  if (card.latestLetter) return `Roof ${card.latestLetter}`
+  return card.hasDraft ? 'Roof in draft' : null
+}
+
+function CardTiming({ card }: { card: Card }) {
+  const booking = card.nextBooking
+  if (booking) {
+    return (
+      <span className="flex items-center gap-2 font-semibold">
+        <CrewPennant
+          letter={booking.crew.letter}
+          colour={booking.crew.colour}
+          name={booking.crew.name}
+        />
+        <span>
+          {bookingDaysText(booking)}
+          {booking.state === 'pencilled' ? (
+            <span className="font-normal text-ink-soft"> in pencil</span>
+          ) : null}
+        </span>
+      </span>
+    )
+  }
+  if (!card.wantedBy || card.stage === 'complete') return null
+  return <span className="text-ink-soft">Wanted by {formatDay(card.wantedBy)}</span>
+}
+
+/** A job on the board: its shape, where it is, when it is on, and what it lacks. */
+export function JobCard({ card }: { card: Card }) {
+  const roof = roofText(card)
+  return (
+    <Link
+      to={`/jobs/${card.id}`}
+      className="block rounded-md border border-rule bg-sheet p-3 hover:border-ink-soft"
+    >
+      <span className="flex gap-3">
+        {card.glyph ? (
+          <RoofGlyph glyph={card.glyph} sizePx={glyphPx} />
+        ) : (
+          <NoRoofGlyph sizePx={glyphPx} />
+        )}
+        <span className="min-w-0 flex-1">
+          <span className="flex flex-wrap justify-between gap-x-2 text-sm text-ink-soft">
+            <span className="font-semibold tabular-nums">{card.number}</span>
+            {roof ? <span>{roof}</span> : null}
+          </span>
+          <span className="block font-semibold leading-snug [overflow-wrap:anywhere]">
+            {card.title}
+          </span>
+        </span>
+      </span>
+      {card.siteAddress ? (
+        <span className="mt-1 line-clamp-2 text-sm text-ink-soft">{card.siteAddress}</span>
+      ) : null}
+      <span className="mt-2 block space-y-1 text-sm empty:hidden">
+        <CardTiming card={card} />
+        {card.missing.length > 0 ? (
+          <span className="flex items-start gap-1.5 text-ochre">
+            <CircleAlert size={16} aria-hidden className="mt-0.5 shrink-0" />
+            <span>{card.missing.map((kind) => jobMissingWords[kind]).join(' · ')}</span>
+          </span>
+        ) : null}
+      </span>
+    </Link>
+  )
+}
