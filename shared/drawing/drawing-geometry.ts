@@ -61,9 +61,31 @@ export function boxesOverlap(a: TurnedBox, b: TurnedBox): boolean {
   return convexShapesOverlap(boxCorners(a), boxCorners(b))
 }
 
+/** Whether a segment runs through a box; along its edge does not count. */
 export function segmentCrossesBox(segment: Segment, box: TurnedBox): boolean {
-  const corners = boxCorners(box)
-  return convexShapesOverlap([segment.from, segment.to], corners)
+  const turn = (box.angleDeg * Math.PI) / 180
+  const cos = Math.cos(turn)
+  const sin = Math.sin(turn)
+  const own = (p: DrawingPoint) => {
+    const dx = p.x - box.centre.x
+    const dy = p.y - box.centre.y
+    return { x: dx * cos + dy * sin, y: dy * cos - dx * sin }
+  }
+  const from = own(segment.from)
+  const to = own(segment.to)
+  const acrossX = slabShare(from.x, to.x, box.widthPx / 2)
+  const acrossY = slabShare(from.y, to.y, box.heightPx / 2)
+  return Math.max(acrossX.enter, acrossY.enter, 0) < Math.min(acrossX.leave, acrossY.leave, 1)
+}
+
+/** The share of a segment, 0 to 1, at which it enters and leaves a band about nought. */
+function slabShare(from: number, to: number, half: number): { enter: number; leave: number } {
+  const step = to - from
+  if (Math.abs(step) < 1e-9)
+    return Math.abs(from) < half ? { enter: -Infinity, leave: Infinity } : { enter: 1, leave: 0 }
+  const a = (-half - from) / step
+  const b = (half - from) / step
+  return { enter: Math.min(a, b), leave: Math.max(a, b) }
 }
 
 export function distanceToSegment(point: DrawingPoint, segment: Segment): number {
@@ -87,7 +109,7 @@ export function roundPx(value: number): number {
   return Math.round(value * 100) / 100
 }
 
-/** Whether a side of `a` has all of `b` on its far side. A two-point shape has two such sides. */
+/** Whether a side of `a` has all of `b` on its far side. */
 function isSeparated(a: DrawingPoint[], b: DrawingPoint[]): boolean {
   return a.some((from, i) => {
     const to = a[(i + 1) % a.length] ?? from

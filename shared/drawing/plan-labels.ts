@@ -98,12 +98,19 @@ function roomFor(
     heightPx: options.sizePx + 2,
     angleDeg: uprightAngleDeg(member.centre),
   })
-  const blocked = [...placed, ...options.taken]
   const along = placesAlong(member, widthPx)
   const places = along.length > 0 || !mayCross ? along : [pointAlong(member.centre, 0.5)]
-  const free = places.map(label).filter((box) => !blocked.some((other) => boxesOverlap(box, other)))
-  const clear = free.find((box) => !crossesAnother(box, member, members))
-  return clear ?? (mayCross ? (free[0] ?? null) : null)
+  const isTaken = (box: TurnedBox) =>
+    placed.some((other) => boxesOverlap(box, other)) ||
+    options.taken.some((other) => boxesOverlap(box, other))
+  let firstFree: PlanLabel | null = null
+  for (const place of places) {
+    const box = label(place)
+    if (isTaken(box)) continue
+    if (!crossesAnother(box, member, members)) return box
+    firstFree ??= box
+  }
+  return mayCross ? firstFree : null
 }
 
 function crossesAnother(box: TurnedBox, own: PlanMember, members: readonly PlanMember[]): boolean {

@@ -8,8 +8,8 @@ export type MeasuringPointName = 'long point' | 'short point' | 'edge' | 'cut'
 export type MeasuringPoint = {
   end: 'head' | 'tail' | 'foot'
   name: MeasuringPointName
-  /** Which arrises it is on; 'centre' where two cheeks meet. */
-  side: 'left' | 'right' | 'centre' | 'both edges'
+  /** Which arrises it is on, or where between them two cheeks meet. */
+  side: 'left' | 'right' | 'both edges' | 'centre' | 'left of centre' | 'right of centre'
   alongMm: number
   places: TimberPoint[]
 }
@@ -35,7 +35,7 @@ export function measuringPoints(member: Member, end: 'head' | 'foot'): Measuring
   return ordered.map((places, i) => ({
     end: endWord,
     name: pointName(i, ordered.length),
-    side: pointSide(places),
+    side: pointSide(places, member.section.thicknessMm / 2),
     alongMm: places[0]?.alongMm ?? 0,
     places,
   }))
@@ -56,12 +56,13 @@ function pointName(rank: number, count: number): MeasuringPointName {
   return rank === count - 1 ? 'short point' : 'edge'
 }
 
-function pointSide(places: readonly TimberPoint[]): MeasuringPoint['side'] {
-  const left = places.some((p) => p.acrossMm > 0.5)
-  const right = places.some((p) => p.acrossMm < -0.5)
-  if (left && right) return 'both edges'
-  if (left) return 'left'
-  return right ? 'right' : 'centre'
+function pointSide(places: readonly TimberPoint[], halfMm: number): MeasuringPoint['side'] {
+  const onArris = places.filter((p) => Math.abs(p.acrossMm) > halfMm - 0.01)
+  if (onArris.length > 1) return 'both edges'
+  const acrossMm = (onArris[0] ?? places[0])?.acrossMm ?? 0
+  if (onArris.length === 1) return acrossMm > 0 ? 'left' : 'right'
+  if (Math.abs(acrossMm) < 0.5) return 'centre'
+  return acrossMm > 0 ? 'left of centre' : 'right of centre'
 }
 
 /** Which way the head is cut, in words for a card: "Long point on the left, bow up". */

@@ -120,7 +120,8 @@ function order(member: PlanMember, stateOf: Props['stateOf']): number {
 }
 
 function focusMark(group: SVGGElement | null, mark: string): void {
-  group?.querySelector<SVGGElement>(`[data-mark="${CSS.escape(mark)}"]`)?.focus()
+  const shapes = [...(group?.querySelectorAll<SVGGElement>('[data-mark]') ?? [])]
+  shapes.find((shape) => shape.getAttribute('data-mark') === mark)?.focus()
 }
 
 /** The timber under the finger; a click without a place (a screen reader's) means its own target. */
