@@ -31,7 +31,8 @@ beforeAll(async () => {
 const head = (member: Member): Cut => member.cuts.find((cut) => cut.end === 'head')!
 const tail = (member: Member): Cut => member.cuts.find((cut) => cut.end === 'tail')!
 
-type Bend = [field: string, role: MemberRole, bend: (member: Member, spec: FrameSpec) => void]
+type Bend = [field: string, role: MemberRole, bend: (member: Member) => void]
+type SpecBend = [field: string, bend: (spec: FrameSpec) => void]
 
 /** Every number by 1 mm or 0.5°, on the role where it matters most. */
 const bends: Bend[] = [
@@ -78,9 +79,27 @@ const bends: Bend[] = [
   ['tail alongMm', 'common', (m) => (tail(m).alongMm -= BEND_MM)],
   ['tail face angle', 'hip', (m) => (tail(m).face.fromEdgeDeg += BEND_DEG)],
   ['tail edge angle', 'hip', (m) => (tail(m).edge.fromEdgeDeg += BEND_DEG)],
-  ['standMm of the roof', 'ridge', (_, spec) => (spec.standMm += BEND_MM)],
-  ['quantity of a cut line', 'common', (_, spec) => (spec.cutLines[0]!.quantity += 1)],
 ]
+
+const specBends: SpecBend[] = [
+  ['standMm', (spec) => (spec.standMm += BEND_MM)],
+  ['worst error by rounding', (spec) => (spec.rounding.worstMm += 0.1)],
+  ['planing', (spec) => (spec.planing[0]!.offMm += BEND_MM)],
+  ['planing left out', (spec) => spec.planing.pop()],
+  ['quantity of a cut line', (spec) => (spec.cutLines[0]!.quantity += 1)],
+  ['length of a cut line', (spec) => (spec.cutLines[0]!.cutLengthMm += BEND_MM)],
+  ['hands of a cut line', (spec) => (spec.cutLines.at(-1)!.left += 1)],
+  ['roof area', (spec) => (spec.totals.roofAreaM2 += 0.1)],
+  ['ridge in all', (spec) => (spec.totals.ridgeMm += BEND_MM)],
+  ['hips in all', (spec) => (spec.totals.hipMm += BEND_MM)],
+  ['length of a section', (spec) => (spec.totals.bySection[0]!.lengthMm += BEND_MM)],
+  ['a mark used twice', (spec) => (spec.members[0]!.mark = spec.members[1]!.mark)],
+  ['a rafter left out', (spec) => spec.members.splice(spec.members.findIndex(isCommon), 1)],
+]
+
+function isCommon(member: Member): boolean {
+  return member.role === 'common'
+}
 
 function swap(side: Cut['longSide']): Cut['longSide'] {
   return side === 'left' ? 'right' : 'left'
@@ -91,12 +110,17 @@ describe('the dry fit complains of a bent number', () => {
     expect(reportLines(dryFit(kit, roof, sound))).toEqual([])
   })
 
-  test.each(bends)('%s of a %s', (_field, role, bend) => {
+  test.each(bends)('%s of a %s, and names it', (_field, role, bend) => {
     const spec = structuredClone(sound)
-    bend(
-      spec.members.find((m) => m.role === role)!,
-      spec,
-    )
+    const member = spec.members.find((m) => m.role === role)!
+    bend(member)
+    const named = dryFit(kit, roof, spec).filter((c) => c.marks.includes(member.mark))
+    expect(named).not.toEqual([])
+  })
+
+  test.each(specBends)('%s of the spec', (_field, bend) => {
+    const spec = structuredClone(sound)
+    bend(spec)
     expect(dryFit(kit, roof, spec)).not.toEqual([])
   })
 })

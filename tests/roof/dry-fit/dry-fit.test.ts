@@ -4,6 +4,7 @@ import { frameRoof } from '../../../shared/roof/frame-roof.ts'
 import type { Roof } from '../../../shared/roof/roof-types.ts'
 import { convexReferences, referenceRoof } from '../support/roofs.ts'
 import { furtherRoofs } from './further-roofs.ts'
+import { randomBuilding, randomRoof } from './random-roofs.ts'
 import { reportLines } from './report.ts'
 import { loadSolidKit, type SolidKit } from './solid-kit.ts'
 import { dryFit } from './stand-up.ts'
@@ -59,4 +60,14 @@ describe('further roofs go together from their numbers alone', () => {
       fits({ ...build(), ...way })
     })
   }
+})
+
+describe('any convex plan goes together from its numbers alone', () => {
+  const seeds = Array.from({ length: proof ? 120 : 6 }, (_, i) => i + 1)
+  test.each(seeds)('random plan %i', (seed) => {
+    fits(randomRoof(seed))
+  })
+  test.each(seeds)('random end on a straight building %i', (seed) => {
+    fits(randomBuilding(seed))
+  })
 })

@@ -16,6 +16,7 @@ const RUN = 2000
 const STAND = 113
 const HEEL = 140 / cos - STAND
 const RIDGE_HALF = 17.5
+const HEAD = (RUN - RIDGE_HALF) / cos
 
 const roof: Roof = makeRoof(
   [
@@ -59,9 +60,8 @@ const kilograms = (thick: number, deep: number, long: number): number =>
 
 function common(mark: string, x: number, way: 1 | -1): Member {
   const heelY = way > 0 ? 0 : 2 * RUN
-  const head = (RUN - RIDGE_HALF) / cos
   const tail = 300 / cos
-  const cutLengthMm = head + tail + 140 * tan
+  const cutLengthMm = HEAD + tail + 140 * tan
   return {
     mark,
     role: 'common',
@@ -77,7 +77,7 @@ function common(mark: string, x: number, way: 1 | -1): Member {
     tailLengthMm: tail,
     cutLengthMm,
     cuts: [
-      squareCut('head', head, 'R1', {
+      squareCut('head', HEAD, 'R1', {
         point: { x, y: RUN - way * RIDGE_HALF, z: 0 },
         normal: { x: 0, y: way, z: 0 },
       }),
@@ -182,7 +182,8 @@ function handMade(): FrameSpec {
     },
     cautions: [],
     planing: [],
-    rounding: { worstMm: 0, joint: null },
+    // Half a degree marks 65° and 90° exactly; what is left is the head's long point, square to the cut.
+    rounding: { worstMm: Math.abs(HEAD - Math.round(HEAD)) * cos, joint: ['C1', 'R1'] },
   }
 }
 

@@ -11,6 +11,7 @@ export type Complaint = {
     | 'planing'
     | 'seat'
     | 'layout'
+    | 'rounding'
   marks: string[]
   /** How far out, in millimetres (degrees or cubic millimetres where the text says so). */
   out: number

@@ -4,6 +4,7 @@ import { checkLayout } from './check-layout.ts'
 import { checkLists, checkWeight } from './check-lists.ts'
 import { checkNumbers } from './check-numbers.ts'
 import { checkPlace, checkPlaning, checkTop } from './check-place.ts'
+import { checkRounding } from './check-rounding.ts'
 import { checkSeat } from './check-seats.ts'
 import { rebuildMember, type Piece } from './rebuild-member.ts'
 import { collector, type Complain, type Complaint } from './report.ts'
@@ -74,6 +75,7 @@ export function dryFit(
     checkJoints(complain, piece, pieces)
   }
   checkLayout(complain, roof, spec, slopes, settings.minCreeperMm)
+  checkRounding(complain, pieces, spec)
   checkOverlaps(complain, pieces, plates)
   for (const piece of pieces) piece.solid.delete()
   return complaints
