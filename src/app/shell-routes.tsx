@@ -25,6 +25,20 @@ export const shellRoutes: RouteObject[] = [
     ],
   },
   {
+    path: 'messages',
+    lazy: async () => ({
+      Component: (await import('../features/messages/messages-page.tsx')).MessagesPage,
+    }),
+    children: [
+      {
+        path: ':messageId',
+        lazy: async () => ({
+          Component: (await import('../features/messages/message-panel.tsx')).MessagePanel,
+        }),
+      },
+    ],
+  },
+  {
     path: 'account',
     lazy: async () => ({
       Component: (await import('../features/auth/account-page.tsx')).AccountPage,
@@ -45,5 +59,17 @@ export const shellRoutes: RouteObject[] = [
   {
     path: 'firm',
     lazy: async () => ({ Component: (await import('../features/firm/firm-page.tsx')).FirmPage }),
+  },
+  {
+    path: 'jobs/:jobId/roof',
+    lazy: async () => ({
+      Component: (await import('../features/roof-editor/roof-editor-page.tsx')).RoofEditorPage,
+    }),
+  },
+  {
+    path: 'jobs/:jobId/revisions/:letter',
+    lazy: async () => ({
+      Component: (await import('../features/roof-editor/revision-page.tsx')).RevisionPage,
+    }),
   },
 ]

@@ -60,35 +60,39 @@ function runSender(dataDir: string, mailDir: string, killAtFiles: number | null)
   })
 }
 
-test('a sender killed twice in the middle loses no mail, and each kill repeats one mail, marked', async () => {
-  const dir = mkdtempSync(path.join(tmpdir(), 'killed-'))
-  const mailDir = path.join(dir, 'mail')
-  seed(dir)
-  await runSender(dir, mailDir, 3)
-  await runSender(dir, mailDir, 7)
-  await runSender(dir, mailDir, null)
+test(
+  'a sender killed twice in the middle loses no mail, and each kill repeats one mail, marked',
+  async () => {
+    const dir = mkdtempSync(path.join(tmpdir(), 'killed-'))
+    const mailDir = path.join(dir, 'mail')
+    seed(dir)
+    await runSender(dir, mailDir, 3)
+    await runSender(dir, mailDir, 7)
+    await runSender(dir, mailDir, null)
 
-  const copies = new Map<string, number>()
-  for (const file of filesIn(mailDir)) {
-    const to = /^To: .*?([\w.]+@quillback\.example)/m.exec(
-      readFileSync(path.join(mailDir, file), 'utf8'),
-    )?.[1]
-    copies.set(to ?? '', (copies.get(to ?? '') ?? 0) + 1)
-  }
-  const database = openDatabase(dir)
-  const rows = database.db.select().from(outbox).all()
-  database.close()
-  rmSync(dir, { recursive: true })
+    const copies = new Map<string, number>()
+    for (const file of filesIn(mailDir)) {
+      const to = /^To: .*?([\w.]+@quillback\.example)/m.exec(
+        readFileSync(path.join(mailDir, file), 'utf8'),
+      )?.[1]
+      copies.set(to ?? '', (copies.get(to ?? '') ?? 0) + 1)
+    }
+    const database = openDatabase(dir)
+    const rows = database.db.select().from(outbox).all()
+    database.close()
+    rmSync(dir, { recursive: true })
 
-  expect(copies.size).toBe(mailCount)
-  const twice = [...copies].filter(([, count]) => count > 1)
-  expect(twice.length).toBeLessThanOrEqual(2)
-  expect(twice.length).toBeGreaterThan(0)
-  const marked = rows.filter((row) => row.state === 'maybe-twice').map((row) => row.toEmail)
-  for (const [email, count] of twice) {
-    expect(count).toBe(2)
-    expect(marked).toContain(email)
-  }
-  expect(rows.filter((row) => row.state === 'sent')).toHaveLength(mailCount - marked.length)
-  expect(marked.length).toBeLessThanOrEqual(2)
-}, timeoutMs)
+    expect(copies.size).toBe(mailCount)
+    const twice = [...copies].filter(([, count]) => count > 1)
+    expect(twice.length).toBeLessThanOrEqual(2)
+    expect(twice.length).toBeGreaterThan(0)
+    const marked = rows.filter((row) => row.state === 'maybe-twice').map((row) => row.toEmail)
+    for (const [email, count] of twice) {
+      expect(count).toBe(2)
+      expect(marked).toContain(email)
+    }
+    expect(rows.filter((row) => row.state === 'sent')).toHaveLength(mailCount - marked.length)
+    expect(marked.length).toBeLessThanOrEqual(2)
+  },
+  timeoutMs,
+)
