@@ -1,0 +1,33 @@
+import { markingCardOf } from '../../../shared/marking/marking-card.ts'
+import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
+import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
+import { Dialog } from '../../ui/dialog.tsx'
+import { CardView } from './card-view.tsx'
+
+type Props = {
+  spec: FrameSpec
+  /** Mark of a member or of a cut line; null closes. */
+  mark: string | null
+  options: MarkingOptions
+  onClose: () => void
+}
+
+/** The marking card of a picked timber, beside the page. */
+export function CardDialog({ spec, mark, options, onClose }: Props) {
+  const line = spec.cutLines.find((one) => one.mark === mark || one.members.includes(mark ?? ''))
+  if (!line || mark === null) return null
+  const card = markingCardOf(spec, line.mark, options)
+  const picked = spec.members.find((one) => one.mark === mark)
+  const member = picked ?? spec.members.find((one) => one.mark === card.drawnMark)
+  const hand = picked?.hand ? `, ${picked.hand} hand` : ''
+  return (
+    <Dialog
+      open
+      place="panel"
+      onClose={onClose}
+      title={`${picked?.mark ?? line.mark} · ${card.name}${hand}`}
+    >
+      {member ? <CardView card={card} member={member} units={options.units} /> : null}
+    </Dialog>
+  )
+}

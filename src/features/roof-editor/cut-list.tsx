@@ -1,0 +1,156 @@
+import { useMemo } from 'react'
+import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
+import type { MarkingFigure, MarkingOptions } from '../../../shared/marking/marking-figures.ts'
+import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
+
+type Props = { spec: FrameSpec; options: MarkingOptions; onPick: (cutLineMark: string) => void }
+
+/** 'Head, left cheek 65.0° / 44.5°': down the side, then across the top, both from the edge. */
+function bevelRows(card: MarkingCard): { where: string; angles: string }[] {
+  return card.ends.flatMap((end) =>
+    end.cuts.map((cut) => ({
+      where: [end.title, cut.cheek.toLowerCase()].filter(Boolean).join(', '),
+      angles: [cut.face.fromEdgeText, cut.edge?.fromEdgeText ?? 'square'].join(' / '),
+    })),
+  )
+}
+
+function FigureText({ figure }: { figure: MarkingFigure }) {
+  return (
+    <>
+      {figure.text}
+      {figure.unit ? (
+        <span className="text-sm font-normal text-ink-soft"> {figure.unit}</span>
+      ) : null}
+    </>
+  )
+}
+
+/** Every line of the cut list; a table at the desk and on paper, cards on a phone. */
+export function CutList({ spec, options, onPick }: Props) {
+  const cards = useMemo(
+    () => spec.cutLines.map((line) => markingCardOf(spec, line.mark, options)),
+    [spec, options],
+  )
+  return (
+    <>
+      <p className="mb-2 text-sm text-ink-soft">
+        Bevels from the edge: down the side / across the top.
+      </p>
+      <ul className="space-y-2 sm:hidden print:hidden">
+        {cards.map((card) => (
+          <CutLineCard key={card.mark} card={card} onPick={onPick} />
+        ))}
+      </ul>
+      <CutTable cards={cards} onPick={onPick} />
+    </>
+  )
+}
+
+const headings = ['Mark', 'Piece', 'Section', 'Cut length', 'No.', 'L', 'R', 'Set-out', 'Bevels']
+const numberHeadings = new Set(['Cut length', 'No.', 'L', 'R', 'Set-out'])
+
+function CutTable({ cards, onPick }: { cards: MarkingCard[]; onPick: Props['onPick'] }) {
+  return (
+    <div className="hidden overflow-x-auto sm:block print:block print:overflow-visible">
+      <table className="w-full border-collapse text-left">
+        <thead>
+          <tr className="border-b-2 border-ink-soft text-sm">
+            {headings.map((heading) => (
+              <th
+                key={heading}
+                scope="col"
+                className={`px-2 py-1 ${numberHeadings.has(heading) ? 'text-right' : ''}`}
+              >
+                {heading === 'L' ? <abbr title="Left hand">L</abbr> : null}
+                {heading === 'R' ? <abbr title="Right hand">R</abbr> : null}
+                {heading === 'L' || heading === 'R' ? null : heading}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {cards.map((card) => (
+            <CutRow key={card.mark} card={card} onPick={onPick} />
+          ))}
+        </tbody>
+      </table>
+    </div>
+  )
+}
+
+function CutRow({ card, onPick }: { card: MarkingCard; onPick: Props['onPick'] }) {
+  const number = 'px-2 py-1 text-right tabular-nums'
+  return (
+    <tr className="border-b border-rule align-top break-inside-avoid">
+      <th scope="row" className="px-2 py-1">
+        <MarkButton card={card} onPick={onPick} />
+      </th>
+      <td className="px-2 py-1">{card.name}</td>
+      <td className="whitespace-nowrap px-2 py-1 tabular-nums">{card.section}</td>
+      <td className={`${number} whitespace-nowrap font-extrabold`}>
+        <FigureText figure={card.cutLength} />
+      </td>
+      <td className={number}>{card.quantity}</td>
+      <td className={number}>{card.left || '–'}</td>
+      <td className={number}>{card.right || '–'}</td>
+      <td className={`${number} whitespace-nowrap`}>
+        <FigureText figure={card.setOutLength} />
+      </td>
+      <td className="px-2 py-1 text-sm">
+        {bevelRows(card).map(({ where, angles }) => (
+          <p key={where} className="whitespace-nowrap">
+            {where} <span className="font-semibold tabular-nums">{angles}</span>
+          </p>
+        ))}
+      </td>
+    </tr>
+  )
+}
+
+function MarkButton({ card, onPick }: { card: MarkingCard; onPick: Props['onPick'] }) {
+  return (
+    <>
+      <button
+        type="button"
+        onClick={() => onPick(card.mark)}
+        aria-label={`${card.mark}, ${card.name}: open its card`}
+        className="min-h-11 min-w-11 rounded-md px-1 text-left font-extrabold text-chalk underline print:hidden"
+      >
+        {card.mark}
+      </button>
+      <span className="hidden font-extrabold print:inline">{card.mark}</span>
+    </>
+  )
+}
+
+function CutLineCard({ card, onPick }: { card: MarkingCard; onPick: Props['onPick'] }) {
+  return (
+    <li className="rounded-md border border-rule bg-sheet p-3">
+      <div className="flex items-start justify-between gap-3">
+        <div className="min-w-0">
+          <MarkButton card={card} onPick={onPick} />
+          <p>
+            {card.name} · {card.section}
+          </p>
+          <p className="font-semibold">{card.quantityWords}</p>
+        </div>
+        <div className="shrink-0 text-right">
+          <p className="numeral text-[1.75rem]">
+            <FigureText figure={card.cutLength} />
+          </p>
+          <p className="text-sm text-ink-soft">
+            set-out <FigureText figure={card.setOutLength} />
+          </p>
+        </div>
+      </div>
+      <ul className="mt-2 text-sm">
+        {bevelRows(card).map(({ where, angles }) => (
+          <li key={where}>
+            {where} <span className="font-semibold tabular-nums">{angles}</span>
+          </li>
+        ))}
+      </ul>
+    </li>
+  )
+}

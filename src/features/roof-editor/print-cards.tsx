@@ -1,0 +1,28 @@
+import { markingCardOf } from '../../../shared/marking/marking-card.ts'
+import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
+import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
+import { CardView } from './card-view.tsx'
+import { usePrinting } from './use-printing.ts'
+
+type Props = { spec: FrameSpec; options: MarkingOptions }
+
+/** A sheet for each line of the cut list; drawn only when the page goes to paper. */
+export function PrintCards({ spec, options }: Props) {
+  if (!usePrinting()) return null
+  return (
+    <div>
+      {spec.cutLines.map((line) => {
+        const card = markingCardOf(spec, line.mark, options)
+        const member = spec.members.find((one) => one.mark === card.drawnMark)
+        return member ? (
+          <section key={line.mark} className="break-before-page">
+            <h2 className="mb-2 text-xl font-extrabold">
+              {card.mark} · {card.name}
+            </h2>
+            <CardView card={card} member={member} units={options.units} />
+          </section>
+        ) : null
+      })}
+    </div>
+  )
+}

@@ -1,0 +1,100 @@
+import { type KeyboardEvent, useDeferredValue, useMemo, useState } from 'react'
+import { withText } from '../../../shared/revisions/form-paths.ts'
+import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
+import { roofOfForm } from '../../../shared/revisions/roof-of-form.ts'
+import { Segmented } from '../../ui/segmented.tsx'
+import { EditorHeader } from './editor-header.tsx'
+import { ProblemList } from './problem-list.tsx'
+import { RoofFormContext, type RoofFormHandle } from './roof-form-context.ts'
+import { RoofResults } from './roof-results.tsx'
+import { DraftConflict } from './save-state.tsx'
+import { ShapeFields } from './shape-fields.tsx'
+import { SlopeFields } from './slope-fields.tsx'
+import { CutFields, LayoutFields, SectionFields } from './timber-fields.tsx'
+import { useFramedRoof } from './use-framed-roof.ts'
+import { useIssue } from './use-issue.ts'
+import { useRoofDraft } from './use-roof-draft.ts'
+
+const parts = [
+  { value: 'fields', label: 'Fields' },
+  { value: 'plan', label: 'Plan' },
+  { value: 'numbers', label: 'Numbers' },
+] as const
+type Part = (typeof parts)[number]['value']
+
+/** Fields on the left, the roof they make on the right; on a phone one part at a time. */
+export function RoofEditor({ opened }: { opened: JobRoof }) {
+  const [part, setPart] = useState<Part>('fields')
+  const draft = useRoofDraft(opened)
+  const { form, setForm, saver, saveState } = draft
+  const { settings, brickOffsetMm } = opened
+  const firm = useMemo(() => ({ settings, brickOffsetMm }), [settings, brickOffsetMm])
+  const settled = useDeferredValue(form)
+  const reading = useMemo(() => roofOfForm(settled, firm), [settled, firm])
+  const framed = useFramedRoof(reading.roof, settings)
+  const issue = useIssue(opened, { form, firm, saver })
+
+  const handle = useMemo((): RoofFormHandle => {
+    const shown = new Map(
+      (reading.problems ?? [])
+        .filter((problem) => issue.wasRefused || !problem.isMissing)
+        .map((problem) => [problem.path, problem.message]),
+    )
+    return {
+      form,
+      problemAt: (path) => shown.get(path),
+      setText: (path, text) => setForm(withText(form, path, text), path),
+      setForm,
+    }
+  }, [form, reading, setForm, issue.wasRefused])
+
+  return (
+    <RoofFormContext value={handle}>
+      <div onKeyDown={(event) => undoByKey(event, draft)}>
+        <EditorHeader opened={opened} draft={draft} issue={issue} />
+        {saveState.kind === 'conflict' ? (
+          <DraftConflict
+            current={saveState.current}
+            onTheirs={draft.takeTheirs}
+            onMine={draft.keepMine}
+          />
+        ) : null}
+        {issue.problems.length > 0 ? (
+          <ProblemList problems={issue.problems} onGo={() => setPart('fields')} />
+        ) : null}
+        <div className="sticky top-0 z-10 -mx-4 mb-3 bg-paper px-4 py-2 lg:hidden">
+          <Segmented label="Part of the page" options={parts} value={part} onChange={setPart} />
+        </div>
+        <div className="gap-6 lg:grid lg:grid-cols-[minmax(20rem,26rem)_minmax(0,1fr)]">
+          <div className={`space-y-4 ${part === 'fields' ? '' : 'hidden lg:block'}`}>
+            <ShapeFields />
+            <SlopeFields brickOffsetMm={brickOffsetMm} />
+            <SectionFields />
+            <LayoutFields />
+            <CutFields />
+          </div>
+          <div className={part === 'fields' ? 'hidden lg:block' : ''}>
+            <RoofResults
+              reading={reading}
+              framed={framed}
+              settings={settings}
+              part={part === 'numbers' ? 'numbers' : 'plan'}
+            />
+          </div>
+        </div>
+      </div>
+    </RoofFormContext>
+  )
+}
+
+type Undo = { undo: () => void; redo: () => void }
+
+/** Ctrl or Cmd with Z, with Shift for redo: one undo for the whole form, not one a field. */
+function undoByKey(event: KeyboardEvent, { undo, redo }: Undo): void {
+  const isZ = event.key.toLowerCase() === 'z' && (event.ctrlKey || event.metaKey)
+  const isY = event.key.toLowerCase() === 'y' && event.ctrlKey
+  if (!isZ && !isY) return
+  event.preventDefault()
+  if (isY || event.shiftKey) redo()
+  else undo()
+}

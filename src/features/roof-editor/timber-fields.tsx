@@ -1,0 +1,100 @@
+import { type SectionKey, sectionKeys } from '../../../shared/revisions/roof-form.ts'
+import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
+
+export const sizesRule =
+  'Sized by span tables or an engineer, not by this program. Type what they say.'
+
+const sectionTitles: Record<SectionKey, string> = {
+  rafter: 'Rafter',
+  hip: 'Hip',
+  ridge: 'Ridge',
+  valley: 'Valley',
+}
+const sectionHints: Partial<Record<SectionKey, string>> = {
+  hip: 'Leave empty on a roof without hips.',
+  valley: 'Leave empty on a roof without valleys.',
+}
+
+/** Every size is typed by a person; none is offered. */
+export function SectionFields() {
+  return (
+    <FieldGroup title="Timber sizes" note={sizesRule}>
+      {sectionKeys.map((key) => (
+        <fieldset key={key} className="col-span-2">
+          <legend className="mb-1 font-semibold">{sectionTitles[key]}</legend>
+          <div className="grid grid-cols-2 gap-2">
+            <MeasureField path={`sections.${key}.thicknessMm`} label="Thickness, mm" />
+            <MeasureField path={`sections.${key}.depthMm`} label="Depth, mm" />
+          </div>
+          {sectionHints[key] ? (
+            <p className="mt-1 text-sm text-ink-soft">{sectionHints[key]}</p>
+          ) : null}
+        </fieldset>
+      ))}
+    </FieldGroup>
+  )
+}
+
+export function LayoutFields() {
+  return (
+    <FieldGroup title="Plates and spacing">
+      <MeasureField path="plateWidthMm" label="Plate width, mm" />
+      <MeasureField
+        path="maxSpacingMm"
+        label="Rafter spacing, mm"
+        hint="Centre to centre, at most."
+      />
+      <ChoiceField
+        path="spacing"
+        label="Bays between stations"
+        className="col-span-2"
+        options={[
+          ['even', 'All alike'],
+          ['full', 'Full bays, the odd one last'],
+        ]}
+      />
+    </FieldGroup>
+  )
+}
+
+export function CutFields() {
+  return (
+    <FieldGroup title="Tails, hips and seats">
+      <ChoiceField
+        path="tail"
+        label="Tail cut"
+        options={[
+          ['plumb', 'Plumb'],
+          ['square', 'Square'],
+        ]}
+      />
+      <MeasureField
+        path="tailAllowanceMm"
+        label="Tail allowance, mm"
+        hint="Left long, cut to a line on site."
+      />
+      <ChoiceField
+        path="hipTop"
+        label="Hip top"
+        options={[
+          ['lowered', 'Lowered'],
+          ['backed', 'Backed'],
+        ]}
+      />
+      <ChoiceField
+        path="valleyTop"
+        label="Valley top"
+        options={[
+          ['square', 'Square'],
+          ['dished', 'Dished'],
+        ]}
+      />
+      <MeasureField
+        path="standMm"
+        label="Height over plate, mm"
+        hint="Leave empty to have it worked out."
+        className="col-span-2"
+      />
+    </FieldGroup>
+  )
+}
