@@ -1,0 +1,64 @@
+import {
+  cancelBookingSchema,
+  changeBookingSchema,
+  createBookingSchema,
+  restoreBookingSchema,
+} from '../../shared/bookings/booking-schemas.ts'
+import {
+  bookingSchema,
+  calendarQuerySchema,
+  calendarSchema,
+  unbookedJobsSchema,
+} from '../../shared/bookings/calendar-schemas.ts'
+import { currentUser } from '../auth/current-user.ts'
+import type { Db } from '../db/client.ts'
+import type { EventHub } from '../events/event-hub.ts'
+import { type Api, send } from '../http/api.ts'
+import { notFound } from '../http/app-error.ts'
+import { parseInput } from '../http/parse-input.ts'
+import type { Clock } from '../lib/clock.ts'
+import { createBookingService } from './booking-service.ts'
+import { createCalendarService } from './calendar-service.ts'
+import { createUnbookedService } from './unbooked-service.ts'
+
+export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: EventHub }): void {
+  const calendar = createCalendarService(deps)
+  const bookings = createBookingService({ ...deps, calendar })
+  const unbooked = createUnbookedService(deps)
+  const idOf = (params: Record<string, unknown>): string => String(params['bookingId'])
+
+  api.route('get', '/api/calendar', 'calendar:read', (req, res) => {
+    const span = parseInput(calendarQuerySchema, req.query)
+    send(res, calendarSchema, calendar.read(currentUser(res), span))
+  })
+
+  api.route('get', '/api/calendar/unbooked', 'booking:write', (_req, res) => {
+    send(res, unbookedJobsSchema, unbooked.read())
+  })
+
+  api.route('get', '/api/bookings/:bookingId', 'calendar:read', (req, res) => {
+    const booking = calendar.readBooking(currentUser(res), idOf(req.params))
+    if (!booking) throw notFound('That booking')
+    send(res, bookingSchema, booking)
+  })
+
+  api.route('post', '/api/bookings', 'booking:write', (req, res) => {
+    const input = parseInput(createBookingSchema, req.body)
+    send(res, bookingSchema, bookings.create(currentUser(res), input), 201)
+  })
+
+  api.route('patch', '/api/bookings/:bookingId', 'booking:write', (req, res) => {
+    const input = parseInput(changeBookingSchema, req.body)
+    send(res, bookingSchema, bookings.change(currentUser(res), idOf(req.params), input))
+  })
+
+  api.route('post', '/api/bookings/:bookingId/cancel', 'booking:write', (req, res) => {
+    const input = parseInput(cancelBookingSchema, req.body)
+    send(res, bookingSchema, bookings.cancel(currentUser(res), idOf(req.params), input))
+  })
+
+  api.route('post', '/api/bookings/:bookingId/restore', 'booking:write', (req, res) => {
+    const input = parseInput(restoreBookingSchema, req.body)
+    send(res, bookingSchema, bookings.restore(currentUser(res), idOf(req.params), input))
+  })
+}

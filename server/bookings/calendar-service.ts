@@ -1,0 +1,179 @@
+import { and, asc, eq, type SQL } from 'drizzle-orm'
+import type {
+  Booking,
+  Calendar,
+  CalendarBooking,
+  CalendarCrew,
+  CalendarDay,
+} from '../../shared/bookings/calendar-schemas.ts'
+import { permissionScope } from '../../shared/auth/permissions.ts'
+import { type Day, dayPlus } from '../../shared/calendar/days.ts'
+import { localDayOf } from '../../shared/calendar/local-time.ts'
+import { packagesInWords } from '../../shared/labour/package-words.ts'
+import type { CurrentUser } from '../auth/current-user.ts'
+import type { Db, DbOrTx } from '../db/client.ts'
+import { bookings } from '../db/tables/booking-tables.ts'
+import { crews } from '../db/tables/people-tables.ts'
+import { type Firm, readFirm } from '../firm/firm-store.ts'
+import type { Clock } from '../lib/clock.ts'
+import { bookingDayVisible } from '../lib/visibility.ts'
+import {
+  type DayRow,
+  daysBetweenScope,
+  type Extent,
+  readCrewDays,
+  readDayRows,
+  readDayTaskLines,
+  readDayWork,
+  readExtents,
+  readWorkedDayIds,
+  standingScope,
+} from './calendar-store.ts'
+import { type CrewHours, readCrewHours } from './crew-hours.ts'
+import { dayFlags } from './day-flags.ts'
+
+const both = (...conditions: SQL[]): SQL => and(...conditions) ?? conditions[0] ?? standingScope()
+
+type Seen = { rows: DayRow[]; days: CalendarDay[]; extents: Map<string, Extent>; hours: CrewHours }
+
+/** Rows of a scope with everything a screen says about each day: the same few queries for any number. */
+function readSeen(
+  db: DbOrTx,
+  input: { scope: SQL; visible: SQL; firm: Firm; today: Day; isOffice: boolean },
+): Seen {
+  const { scope, visible, firm, today, isOffice } = input
+  const rows = readDayRows(db, scope)
+  const [first, last] = [rows[0], rows[rows.length - 1]]
+  const span = { from: first?.day ?? today, to: last?.day ?? today }
+  const hours = readCrewHours(db, span, firm)
+  const work = readDayWork(db, scope)
+  const worked = readWorkedDayIds(db, scope)
+  const crewDays = readCrewDays(db, [...new Set(rows.map((row) => row.crew.id))], span)
+  const days = rows.map((row): CalendarDay => {
+    const crewDay = hours.on(row.crew.id, row.day)
+    const others = crewDays.filter(
+      (other) =>
+        other.day === row.day &&
+        other.crewId === row.crew.id &&
+        other.bookingId !== row.booking.id &&
+        row.booking.cancelledAt === null,
+    )
+    const held = work.get(row.id)
+    return {
+      id: row.id,
+      day: row.day,
+      revisionLetter: row.revisionLetter,
+      holds: packagesInWords(held?.packageKeys ?? []),
+      plannedMinutes: held?.plannedMinutes ?? 0,
+      availableMinutes: crewDay.minutes,
+      peopleThere: crewDay.thereIds.length,
+      worked: worked.has(row.id),
+      flags: dayFlags(row, { calendar: firm, crewDay, others, isOffice }),
+    }
+  })
+  const bookingIds = [...new Set(rows.map((row) => row.booking.id))]
+  const extents =
+    bookingIds.length > 0 ? readExtents(db, bookingIds, visible, today) : new Map<string, Extent>()
+  return { rows, days, extents, hours }
+}
+
+function asBookings(seen: Seen, firm: Firm): CalendarBooking[] {
+  const byId = new Map<string, CalendarBooking>()
+  for (const [i, row] of seen.rows.entries()) {
+    const day = seen.days[i]
+    const extent = seen.extents.get(row.booking.id)
+    if (!day || !extent) continue
+    const { completedOn, ...job } = row.job
+    const booking = byId.get(row.booking.id) ?? {
+      id: row.booking.id,
+      version: row.booking.version,
+      state: row.booking.state,
+      startAt: row.booking.startAt ?? firm.startAt,
+      job,
+      crew: row.crew,
+      glyph: null,
+      ...extent,
+      shortMinutes: completedOn === null ? row.booking.shortMinutes : 0,
+      days: [],
+    }
+    booking.days.push(day)
+    booking.glyph = row.glyph ?? booking.glyph
+    byId.set(row.booking.id, booking)
+  }
+  return [...byId.values()]
+}
+
+export type CalendarService = ReturnType<typeof createCalendarService>
+
+export function createCalendarService(deps: { db: Db; clock: Clock }) {
+  const { db, clock } = deps
+
+  function viewOf(user: CurrentUser, from: DbOrTx = db) {
+    const firm = readFirm(from)
+    const now = clock.now()
+    return {
+      firm,
+      today: localDayOf(now, firm.timeZone),
+      visible: bookingDayVisible(user, 'calendar:read', firm, now),
+      isOffice: permissionScope(user.role, 'booking:write') === 'all',
+    }
+  }
+
+  return {
+    /** What is booked from one day to another, as far as the user may see it. */
+    read(user: CurrentUser, span: { from: Day; to: Day }): Calendar {
+      const view = viewOf(user)
+      const visible = both(standingScope(), view.visible)
+      const scope = both(visible, daysBetweenScope(span.from, span.to))
+      const seen = readSeen(db, { ...view, scope, visible })
+      const shown = asBookings(seen, view.firm)
+      return {
+        ...span,
+        today: view.today,
+        bookings: shown,
+        crews: view.isOffice ? readActiveCrews(db) : crewsOf(shown),
+        workingWeekdays: view.firm.workingWeekdays,
+        closedDays: view.firm.closedDays.filter(
+          ({ day }) => day >= dayPlus(span.from, -7) && day <= dayPlus(span.to, 60),
+        ),
+      }
+    },
+
+    /** One booking, cancelled or not; null when it is not there or not this user's to see. */
+    readBooking(user: CurrentUser, id: string, from: DbOrTx = db): Booking | null {
+      const view = viewOf(user, from)
+      const visible = view.isOffice ? view.visible : both(standingScope(), view.visible)
+      const scope = both(visible, eq(bookings.id, id))
+      const seen = readSeen(from, { ...view, scope, visible })
+      const [booking] = asBookings(seen, view.firm)
+      const [row] = seen.rows
+      if (!booking || !row) return null
+      const lines = readDayTaskLines(from, scope)
+      return {
+        ...booking,
+        ownStartAt: row.booking.startAt,
+        gear: row.booking.gear,
+        clashReason: view.isOffice ? row.booking.clashReason : null,
+        cancelled: row.booking.cancelledAt !== null,
+        days: booking.days.map((day) => ({
+          ...day,
+          tasks: lines.filter((line) => line.dayId === day.id),
+        })),
+      }
+    },
+  }
+}
+
+export function readActiveCrews(db: DbOrTx): CalendarCrew[] {
+  return db
+    .select({ id: crews.id, name: crews.name, letter: crews.letter, colour: crews.colour })
+    .from(crews)
+    .where(eq(crews.active, true))
+    .orderBy(asc(crews.letter), asc(crews.name))
+    .all()
+}
+
+function crewsOf(shown: readonly CalendarBooking[]): CalendarCrew[] {
+  const byId = new Map(shown.map((booking) => [booking.crew.id, booking.crew]))
+  return [...byId.values()].sort((a, b) => (a.letter < b.letter ? -1 : 1))
+}
