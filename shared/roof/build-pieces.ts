@@ -4,10 +4,10 @@ import type { Station } from './layout.ts'
 import type { Piece } from './piece.ts'
 import type { Border, Face, NodeLine, RoofLines } from './roof-lines.ts'
 import { squareLineSpan } from './roof-lines.ts'
-import type { MemberRole, Roof, RoofSettings } from './roof-types.ts'
+import type { MemberRole, Point2, Roof, RoofSettings } from './roof-types.ts'
 import { at, edgeUnder, slopeGradient, slopePoint } from './slopes.ts'
 import type { PlateEdge, PlateLines, Slope } from './slopes.ts'
-import { cross2, dot2, left2, length2, sub2 } from './vector.ts'
+import { dot2, left2, length2, sub2 } from './vector.ts'
 
 /** All that is known of a roof before any timber is cut. */
 export type Ground = {
@@ -43,9 +43,9 @@ const rawPiece = (start: Start): Piece => {
     dropMm: 0,
     edge: null,
     corner: null,
+    line: null,
     headJoint: null,
     footJoint: null,
-    headLine: null,
     footLine: null,
     tailPlanMm: 0,
     headCuts: [],
@@ -66,7 +66,7 @@ const hipTailPlanMm = (ground: Ground, corner: number, dir: { x: number; y: numb
   return Math.min(...reaches)
 }
 
-const linePiece = (ground: Ground, line: NodeLine): Piece => {
+const linePiece = (ground: Ground, line: NodeLine, index: number): Piece => {
   const { roof, lines, joints } = ground
   const role: MemberRole =
     line.kind === 'ridge' ? 'ridge' : line.kind === 'hip' ? 'hip' : 'broken-hip'
@@ -80,12 +80,16 @@ const linePiece = (ground: Ground, line: NodeLine): Piece => {
     fall,
     backed,
     dropMm: backed ? 0 : Math.max(fall.left, fall.right) * piece.halfMm,
+    line: index,
     corner: foot.corner,
     footJoint: at(joints.ofNode, line.from),
     headJoint: at(joints.ofNode, line.to),
     tailPlanMm: foot.corner === null ? 0 : hipTailPlanMm(ground, foot.corner, piece.dir),
   })
 }
+
+/** A foot this near to the plate line stands on it. */
+const onPlateMm = 0.5
 
 const lineIndex = (ground: Ground, slope: number, border: Border): number | null => {
   if (border.kind !== 'slope') return null
@@ -125,37 +129,51 @@ const rafterPiece = (ground: Ground, slope: Slope, face: Face, station: Station)
     ...slopePoint(slope, station.alongMm, inMm),
     z: inMm * slope.tan,
   })
+  const footLine = span.low > onPlateMm ? lineIndex(ground, slope.index, span.lowBorder) : null
   const edge: PlateEdge = edgeUnder(plates, slope, station.alongMm)
   const piece = rawPiece({
-    role: rafterRole(ground, slope.index, joint, headLine),
+    role: footLine === null ? rafterRole(ground, slope.index, joint, headLine) : 'creeper',
     section: roof.sections.rafter,
-    foot: place(0),
+    foot: place(footLine === null ? 0 : span.low),
     head: place(span.high),
     slopes: [slope.index],
   })
   return Object.assign(piece, {
-    edge: edge.index,
+    edge: footLine === null ? edge.index : null,
+    footLine,
     headJoint: jointIndex,
-    headLine: joint === null ? headLine : null,
-    tailPlanMm: edge.overhangMm,
+    tailPlanMm: footLine === null ? edge.overhangMm : 0,
   })
+}
+
+/** How near a rafter may stand to a hip's corner: clear of its side at the plate, and of its tail where it leans back. */
+const hipGapMm = (ground: Ground, slope: Slope, run: Point2, corner: Point2): number => {
+  const { sections } = ground.roof
+  const size = length2(run)
+  const sine = dot2(slope.inward, run) / size
+  const atStart = dot2(slope.along, sub2(corner, slope.origin)) < slope.lengthMm / 2
+  const leansBack = Math.max(0, (dot2(slope.along, run) / size) * (atStart ? -1 : 1))
+  const overhangMm = at(ground.plates.edges, at(slope.edges, atStart ? 0 : -1)).overhangMm
+  return (
+    sections.rafter.thicknessMm / 2 +
+    sections.hip.thicknessMm / 2 / sine +
+    (overhangMm * leansBack) / sine
+  )
 }
 
 /** Whether a rafter `alongMm` along a slope's plate stands clear of the hips at both corners and is worth cutting. */
 const clearOfCorners = (ground: Ground, slope: Slope, face: Face, alongMm: number): boolean => {
-  const { lines, roof, settings } = ground
-  if (alongMm < 0 || alongMm > slope.lengthMm) return false
+  const { lines, settings } = ground
   const span = squareLineSpan(lines, slope, face, alongMm)
-  if (span === null || span.low > 0.5) return false
-  if (span.high * Math.hypot(1, slope.tan) < settings.minCreeperMm) return false
-  const halves = [roof.sections.rafter.thicknessMm / 2, roof.sections.hip.thicknessMm / 2]
+  if (span === null) return false
+  if ((span.high - span.low) * Math.hypot(1, slope.tan) < settings.minCreeperMm) return false
+  if (alongMm < 0 || alongMm > slope.lengthMm) return span.lowBorder.kind === 'slope'
   return lines.lines.every((line) => {
     if (line.kind !== 'hip' || !line.slopes.includes(slope.index)) return true
-    const from = at(lines.nodes, line.from).point
-    const run = sub2(at(lines.nodes, line.to).point, from)
-    const sine = Math.abs(cross2(slope.along, run)) / length2(run)
-    const gap = Math.abs(dot2(slope.along, sub2(from, slope.origin)) - alongMm)
-    return gap >= at(halves, 0) + at(halves, 1) / sine
+    const corner = at(lines.nodes, line.from).point
+    const run = sub2(at(lines.nodes, line.to).point, corner)
+    const gap = Math.abs(dot2(slope.along, sub2(corner, slope.origin)) - alongMm)
+    return gap >= hipGapMm(ground, slope, run, corner)
   })
 }
 
@@ -165,7 +183,7 @@ export const buildPieces = (ground: Ground): Piece[] => {
   const pieces: Piece[] = []
   lines.lines.forEach((line, index) => {
     const isTimber = line.kind === 'ridge' || line.kind === 'hip' || line.kind === 'broken-hip'
-    if (isTimber && !joints.swallowed.has(index)) pieces.push(linePiece(ground, line))
+    if (isTimber && !joints.swallowed.has(index)) pieces.push(linePiece(ground, line, index))
   })
   for (const slope of plates.slopes) {
     const face = at(lines.faces, slope.index)

@@ -77,7 +77,17 @@ const outOfRidge = (ridge: Piece, joint: Joint): Point2 =>
 const isRidgeAt = (piece: Piece, joint: number): boolean =>
   piece.role === 'ridge' && (piece.headJoint === joint || piece.footJoint === joint)
 
-const headPhase = (ground: Ground, piece: Piece): number => {
+/** A side rafter nearer than this (cosine) to square with its broken hip stands to it as a common to a ridge. */
+const squareSideCos = 0.5
+
+/** Side rafters at the foot of a broken hip butt the crown's sides; those square to it butt its own. */
+const sidePhase = (piece: Piece, joint: Joint, pieces: Piece[]): number => {
+  const rising = pieces.find((p) => p.role === 'broken-hip' && p.line === joint.rising)
+  if (rising === undefined) return phases.side
+  return Math.abs(dot2(rising.dir, piece.dir)) < squareSideCos ? phases.common : phases.side
+}
+
+const headPhase = (ground: Ground, piece: Piece, pieces: Piece[]): number => {
   const joint = piece.headJoint === null ? null : at(ground.joints.joints, piece.headJoint)
   switch (piece.role) {
     case 'ridge':
@@ -90,14 +100,14 @@ const headPhase = (ground: Ground, piece: Piece): number => {
     case 'crown-end':
       return phases.crown
     default:
-      return joint === null ? phases.creeper : phases.side
+      return joint === null ? phases.creeper : sidePhase(piece, joint, pieces)
   }
 }
 
 /** Every end that meets other timber, first placed first. */
 const endJobs = (ground: Ground, pieces: Piece[]): EndJob[] => {
   const phaseOf = new Map<Piece, number>()
-  pieces.forEach((piece) => phaseOf.set(piece, headPhase(ground, piece)))
+  pieces.forEach((piece) => phaseOf.set(piece, headPhase(ground, piece, pieces)))
   ground.joints.joints.forEach((joint, index) => {
     const crowns = pieces.filter((p) => p.role === 'crown-end' && p.headJoint === index)
     const through =
@@ -113,6 +123,9 @@ const endJobs = (ground: Ground, pieces: Piece[]): EndJob[] => {
     if (piece.role === 'ridge') jobs.push({ piece, end: 'foot', phase, joint: piece.footJoint })
     if (piece.role === 'broken-hip') {
       jobs.push({ piece, end: 'foot', phase: phases.brokenFoot, joint: piece.footJoint })
+    }
+    if (piece.footLine !== null) {
+      jobs.push({ piece, end: 'foot', phase: phases.creeper, joint: null })
     }
   }
   return jobs.sort((a, b) => a.phase - b.phase || a.piece.id - b.piece.id)
@@ -202,4 +215,4 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   }
 }
 
-const hasFootJob = (piece: Piece): boolean => piece.role === 'broken-hip'
+const hasFootJob = (piece: Piece): boolean => piece.role === 'broken-hip' || piece.footLine !== null

@@ -96,10 +96,13 @@ export const slopeStations = (
   face: Face,
   isClear: (alongMm: number) => boolean,
 ): Station[] => {
-  const fixed = fixedStations(roof, plates, lines, joints, slope, face).filter((s) =>
-    isClear(s.alongMm),
+  const fixed = fixedStations(roof, plates, lines, joints, slope, face).filter(
+    (s) => s.alongMm >= 0 && s.alongMm <= slope.lengthMm && isClear(s.alongMm),
   )
-  if (fixed.length === 0) fixed.push({ alongMm: slope.lengthMm / 2, joint: null })
+  if (fixed.length === 0 && isClear(slope.lengthMm / 2)) {
+    fixed.push({ alongMm: slope.lengthMm / 2, joint: null })
+  }
+  if (fixed.length === 0) return []
   const free = (alongMm: number): Station => ({ alongMm, joint: null })
   const first = at(fixed, 0).alongMm
   const last = at(fixed, fixed.length - 1).alongMm

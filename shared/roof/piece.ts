@@ -31,10 +31,11 @@ export type Piece = {
   /** Plate edge that a rafter stands on, or corner that a hip stands on. */
   edge: number | null
   corner: number | null
-  /** Joints at its ends, and the line that a rafter's end meets. */
+  /** The line (index) that a ridge or hip is. */
+  line: number | null
   headJoint: number | null
   footJoint: number | null
-  headLine: number | null
+  /** The hip that a rafter hangs from, beyond the end of its plate where a hip leans back. */
   footLine: number | null
   /** How far the piece reaches past its foot in plan before any tail cut. */
   tailPlanMm: number
