@@ -4,6 +4,8 @@ import helmet from 'helmet'
 import type { Logger } from 'pino'
 import { pinoHttp } from 'pino-http'
 import { authRoutes } from './auth/auth-routes.ts'
+import { replanUpcoming, takeRevision } from './bookings/replan.ts'
+import { bookingRoutes } from './bookings/booking-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
 import { loadUser, sessionCookieName } from './auth/session.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
@@ -85,14 +87,11 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
   eventRoutes(api, deps.events)
+  bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
   messageRoutes(api, deps)
-  revisionRoutes(
-    api,
-    createRevisionService({ db, clock, events: deps.events, takeRevision: () => undefined }),
-  )
+  revisionRoutes(api, createRevisionService({ db, clock, events: deps.events, takeRevision }))
   jobRoutes(api, { db, clock, events: deps.events })
-  const replanUpcoming = () => undefined
   peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })
 }
