@@ -5,7 +5,11 @@ import {
   daySheetsQuerySchema,
   daySheetsSchema,
 } from '../../shared/day-sheets/day-sheet-schemas.ts'
-import { newPlateCheckSchema, plateCheckSchema } from '../../shared/day-sheets/plate-check.ts'
+import {
+  latestPlateCheckSchema,
+  newPlateCheckSchema,
+  plateCheckSchema,
+} from '../../shared/day-sheets/plate-check.ts'
 import {
   changeTaskSchema,
   myTasksSchema,
@@ -14,7 +18,7 @@ import {
   taskAnswerSchema,
   taskDetailSchema,
 } from '../../shared/day-sheets/task-schemas.ts'
-import { daySchema, idSchema, textSchema } from '../../shared/http/fields.ts'
+import { daySchema, idSchema } from '../../shared/http/fields.ts'
 import { currentUser } from '../auth/current-user.ts'
 import type { Db } from '../db/client.ts'
 import type { EventHub } from '../events/event-hub.ts'
@@ -38,9 +42,6 @@ function idIn(req: Request, name: string, what: string): string {
 }
 
 const myTasksQuerySchema = z.strictObject({ day: daySchema.optional() })
-const letterQuerySchema = z.strictObject({
-  letter: textSchema(4, { required: 'Say which revision.' }),
-})
 
 /** Day sheets, tasks, ticks and plate checks. */
 export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
@@ -93,11 +94,12 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
     send(res, taskAnswerSchema, { task })
   })
 
-  const latestSchema = z.object({ check: plateCheckSchema.nullable() })
-  api.route('get', '/api/jobs/:jobId/plate-checks/latest', 'plate-check:write', (req, res) => {
+  api.route('get', '/api/jobs/:jobId/plate-checks/:letter', 'plate-check:write', (req, res) => {
     const jobId = idIn(req, 'jobId', 'That job')
-    const { letter } = parseInput(letterQuerySchema, req.query)
-    send(res, latestSchema, { check: latestComparison(db, viewerOf(res), jobId, letter) })
+    const letter = String(req.params['letter'])
+    send(res, latestPlateCheckSchema, {
+      check: latestComparison(db, viewerOf(res), jobId, letter),
+    })
   })
 
   api.route('post', '/api/jobs/:jobId/plate-checks', 'plate-check:write', (req, res) => {

@@ -47,7 +47,12 @@ function measuredIssues(cornerCount: number, check: NewPlateCheck): FieldIssue[]
   return [...sides, ...none, ...wrong]
 }
 
-function findRevision(db: DbOrTx, viewer: Viewer, jobId: string, letter: string): RevisionRow {
+function findRevision(
+  db: DbOrTx,
+  viewer: Viewer,
+  jobId: string,
+  letter: string,
+): RevisionRow | undefined {
   const visible = jobVisible(viewer.user, 'plate-check:write', viewer.firm, viewer.now)
   const job = db
     .select({ id: jobs.id })
@@ -55,13 +60,11 @@ function findRevision(db: DbOrTx, viewer: Viewer, jobId: string, letter: string)
     .where(and(eq(jobs.id, jobId), visible))
     .get()
   if (!job) throw notFound('That job')
-  const revision = db
+  return db
     .select()
     .from(roofRevisions)
     .where(and(eq(roofRevisions.jobId, jobId), eq(roofRevisions.letter, letter)))
     .get()
-  if (!revision) throw invalidField('letter', `This job has no revision ${letter}.`)
-  return revision
 }
 
 function answerOf(db: DbOrTx, revision: RevisionRow, checkId: string): PlateCheckAnswer {
@@ -92,6 +95,7 @@ export function recordPlateCheck(
   const { user, now } = viewer
   return db.transaction((tx) => {
     const revision = findRevision(tx, viewer, jobId, input.letter)
+    if (!revision) throw invalidField('letter', `This job has no revision ${input.letter}.`)
     const issues = measuredIssues(revision.roof.outline.length, input)
     if (issues.length > 0)
       throw new AppError('invalid_input', 'Some fields need another look.', { issues })
@@ -133,6 +137,7 @@ export function latestComparison(
   letter: string,
 ): PlateCheckAnswer | null {
   const revision = findRevision(db, viewer, jobId, letter)
+  if (!revision) throw notFound('That revision')
   const latest = db
     .select({ id: plateChecks.id })
     .from(plateChecks)

@@ -55,6 +55,8 @@ export const plateCheckSchema = z.object({
   note: z.string(),
   comparison: plateComparisonSchema,
 })
+/** The latest check of a revision; null before the first. */
+export const latestPlateCheckSchema = z.object({ check: plateCheckSchema.nullable() })
 export type PlateCheckAnswer = z.infer<typeof plateCheckSchema>
 
 /** Common practice, no source: more than this between plan and plate changes what is cut. */
