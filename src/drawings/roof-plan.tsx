@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { useLayoutEffect, useMemo, useState, type RefObject } from 'react'
 import { planDrawing, type PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
 import type { FrameSpec, Roof, RoofProblem } from '../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
@@ -50,6 +50,7 @@ export function RoofPlan(props: Props) {
       }),
     [roof, spec, widthPx, boxWidthPx, zoom, maxHeightPx, mode, units, problems, selected, due],
   )
+  useCentreOnZoom(boxRef, zoom, drawing, selected)
   const showsDay = props.due !== undefined || props.done !== undefined
   const stateOf = (mark: string): MemberState => {
     if (!showsDay) return 'plain'
@@ -114,4 +115,19 @@ function PlanSvg(props: SvgProps) {
       <PlanProblems drawing={drawing} />
     </svg>
   )
+}
+
+/** Drawn larger, the picked timber (or the middle of the roof) stays in sight. */
+function useCentreOnZoom(
+  boxRef: RefObject<HTMLDivElement | null>,
+  zoom: number,
+  drawing: PlanDrawing | null,
+  selected: string | null,
+): void {
+  const picked = drawing?.members.find((member) => member.mark === selected)?.centre
+  const share = picked && drawing ? (picked.from.x + picked.to.x) / 2 / drawing.view.widthPx : 0.5
+  useLayoutEffect(() => {
+    const box = boxRef.current
+    if (box) box.scrollLeft = share * box.scrollWidth - box.clientWidth / 2
+  }, [boxRef, zoom, share])
 }
