@@ -20,7 +20,7 @@ function Heading({ stage, count }: { stage: JobStage; count: number }) {
 function StageColumn({ stage, cards, count, onShowAll }: ColumnProps) {
   const [open, setOpen] = useState(stage !== 'complete')
   const Chevron = open ? ChevronDown : ChevronRight
-  const width = count === 0 ? 'hidden lg:flex lg:w-28' : 'flex lg:w-64 lg:grow'
+  const width = count === 0 ? 'hidden lg:flex lg:w-24' : 'flex lg:w-52 lg:grow'
   return (
     <section className={`${width} min-h-0 shrink-0 flex-col`}>
       <h2 className="text-lg font-extrabold">
@@ -70,7 +70,7 @@ export function BoardColumns({
   onShowStage: (stage: JobStage) => void
 }) {
   return (
-    <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-12.5rem)] lg:min-h-96 lg:gap-3 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
+    <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-14.25rem)] lg:min-h-96 lg:gap-3 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
       {jobStages.map((stage) => (
         <StageColumn
           key={stage}

@@ -22,7 +22,7 @@ function BoardSkeleton() {
   return (
     <div role="status" aria-label="Loading the board" className="gap-3 max-lg:space-y-3 lg:flex">
       {jobStages.map((stage) => (
-        <div key={stage} className="space-y-2 lg:w-64 lg:grow">
+        <div key={stage} className="space-y-2 lg:w-52 lg:grow">
           <Skeleton className="h-8 w-full" />
           <Skeleton className="h-28" />
           <Skeleton className="h-28 max-lg:hidden" />
@@ -41,20 +41,11 @@ function NewJobLink() {
   )
 }
 
-function NoJobs({ isFiltered, onClear }: { isFiltered: boolean; onClear: () => void }) {
+function NoJobs({ isFiltered }: { isFiltered: boolean }) {
   const mayWrite = useMay('job:write')
   if (isFiltered) {
     return (
-      <EmptyState
-        title="No job fits"
-        action={
-          <Button kind="plain" onClick={onClear}>
-            Show all jobs
-          </Button>
-        }
-      >
-        Try fewer words, another stage or another crew.
-      </EmptyState>
+      <EmptyState title="No job fits">Try fewer words, another stage or another crew.</EmptyState>
     )
   }
   return mayWrite ? (
@@ -101,7 +92,6 @@ export function BoardPage() {
   const query = useInfiniteQuery(jobQueries.board(asked))
   const mayWrite = useMay('job:write')
   const first = query.data?.pages[0]
-  const clear = () => change({ q: '', stage: null, crew: null })
 
   const body = () => {
     if (query.isError && !first) {
@@ -110,7 +100,7 @@ export function BoardPage() {
     }
     if (!first) return <BoardSkeleton />
     const jobs = query.data?.pages.flatMap((page) => page.jobs) ?? []
-    if (jobs.length === 0) return <NoJobs isFiltered={isFiltered} onClear={clear} />
+    if (jobs.length === 0) return <NoJobs isFiltered={isFiltered} />
     const { stage } = filter
     if (!stage)
       return <BoardColumns board={first} onShowStage={(next) => change({ stage: next })} />

@@ -1,16 +1,16 @@
 import { CalendarPlus } from 'lucide-react'
 import { Link } from 'react-router-dom'
-import { formatDay } from '../../../shared/calendar/days.ts'
 import type { JobBooking, JobView } from '../../../shared/jobs/job-views.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
-import { useMay } from '../../lib/session.ts'
+import { useMay, useSession } from '../../lib/session.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { Card } from '../../ui/card.tsx'
-import { bookingDaysText } from './booking-words.ts'
+import { bookingDaysText, dayText } from './day-words.ts'
 
 function BookingRow({ booking }: { booking: JobBooking }) {
   const { crew } = booking
+  const { today } = useSession().firm
   return (
     <li>
       <Link
@@ -24,7 +24,9 @@ function BookingRow({ booking }: { booking: JobBooking }) {
           className="h-8 w-10 text-lg"
         />
         <span className="min-w-0 flex-1">
-          <span className="font-semibold text-chalk underline">{bookingDaysText(booking)}</span>
+          <span className="font-semibold text-chalk underline">
+            {bookingDaysText(booking, today)}
+          </span>
           <span className="block text-sm text-ink-soft">
             {crew.name}, {booking.dayCount} {booking.dayCount === 1 ? 'day' : 'days'}
           </span>
@@ -38,18 +40,25 @@ function BookingRow({ booking }: { booking: JobBooking }) {
 /** Which crew is on it, and when. */
 export function JobBookingsCard({ job }: { job: JobView }) {
   const mayBook = useMay('booking:write')
+  const { today } = useSession().firm
+  const isWaiting = job.stage === 'won' && job.bookings.length === 0
   return (
     <Card>
       <div className="mb-2 flex flex-wrap items-center justify-between gap-3">
         <h2 className="text-lg font-extrabold">Bookings</h2>
         {mayBook ? (
-          <Link to={`/calendar/book?job=${job.id}`} className={buttonClass('plain')}>
+          <Link
+            to={`/calendar/book?job=${job.id}`}
+            className={buttonClass(isWaiting ? 'primary' : 'plain')}
+          >
             <CalendarPlus size={18} aria-hidden />
             Book a crew
           </Link>
         ) : null}
       </div>
-      {job.wantedBy ? <p className="text-ink-soft">Wanted by {formatDay(job.wantedBy)}</p> : null}
+      {job.wantedBy ? (
+        <p className="text-ink-soft">Wanted by {dayText(job.wantedBy, today)}</p>
+      ) : null}
       {job.bookings.length > 0 ? (
         <ul className="divide-y divide-rule">
           {job.bookings.map((booking) => (

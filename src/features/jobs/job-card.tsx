@@ -1,14 +1,14 @@
 import { CircleAlert } from 'lucide-react'
 import { Link } from 'react-router-dom'
-import { formatDay } from '../../../shared/calendar/days.ts'
 import { jobMissingWords } from '../../../shared/jobs/job-missing.ts'
 import type { JobCard as Card } from '../../../shared/jobs/job-views.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
-import { bookingDaysText } from './booking-words.ts'
+import { useSession } from '../../lib/session.ts'
+import { bookingDaysText, dayText } from './day-words.ts'
 import { NoRoofGlyph } from './no-roof-glyph.tsx'
 
-const glyphPx = 48
+const glyphPx = 40
 
 function roofText(card: Card): string | null {
   if (card.latestLetter) return `Roof ${card.latestLetter}`
@@ -16,6 +16,7 @@ function roofText(card: Card): string | null {
 }
 
 function CardTiming({ card }: { card: Card }) {
+  const { today } = useSession().firm
   const booking = card.nextBooking
   if (booking) {
     return (
@@ -26,7 +27,7 @@ function CardTiming({ card }: { card: Card }) {
           name={booking.crew.name}
         />
         <span>
-          {bookingDaysText(booking)}
+          {bookingDaysText(booking, today)}
           {booking.state === 'pencilled' ? (
             <span className="font-normal text-ink-soft"> in pencil</span>
           ) : null}
@@ -35,7 +36,7 @@ function CardTiming({ card }: { card: Card }) {
     )
   }
   if (!card.wantedBy || card.stage === 'complete') return null
-  return <span className="text-ink-soft">Wanted by {formatDay(card.wantedBy)}</span>
+  return <span className="text-ink-soft">Wanted by {dayText(card.wantedBy, today)}</span>
 }
 
 /** A job on the board: its shape, where it is, when it is on, and what it lacks. */

@@ -4,7 +4,7 @@ import {
   type JobFieldsInput,
 } from '../../../shared/jobs/job-schemas.ts'
 import type { JobView } from '../../../shared/jobs/job-views.ts'
-import { formatDay } from '../../../shared/calendar/days.ts'
+import { formatDayWithYear } from '../../../shared/calendar/days.ts'
 import { Button } from '../../ui/button.tsx'
 import { Note } from '../../ui/states.tsx'
 import { changedFields, jobFieldLabels, jobFieldNames, jobFormOf } from './job-form-values.ts'
@@ -15,7 +15,9 @@ function shown(values: JobFieldsInput, name: JobFieldName): string {
   const value = values[name]
   if (value === '') return 'empty'
   if (name === 'covering') return coveringNames[values.covering]
-  return dayFields.includes(name) && /^\d{4}-\d\d-\d\d$/.test(value) ? formatDay(value) : value
+  return dayFields.includes(name) && /^\d{4}-\d\d-\d\d$/.test(value)
+    ? formatDayWithYear(value)
+    : value
 }
 
 type Props = {

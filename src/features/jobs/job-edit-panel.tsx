@@ -4,13 +4,15 @@ import { useMay, useUser } from '../../lib/session.ts'
 import { Dialog } from '../../ui/dialog.tsx'
 import { ErrorState } from '../../ui/states.tsx'
 import { useToast } from '../../ui/toast.tsx'
-import { jobDraftKey } from './job-form-draft.ts'
+import { jobDraftKey, keptText, readJobDraft } from './job-form-draft.ts'
 import { jobFormOf } from './job-form-values.ts'
 import { JobForm } from './job-form.tsx'
 import { useChangeJob } from './job-queries.ts'
 import { useJobForm } from './use-job-form.ts'
 
-function EditJobForm({ job, onClose }: { job: JobView; onClose: () => void }) {
+type EditProps = { job: JobView; onClose: () => void; onLeave: () => void }
+
+function EditJobForm({ job, onClose, onLeave }: EditProps) {
   const user = useUser()
   const change = useChangeJob()
   const toast = useToast()
@@ -33,7 +35,7 @@ function EditJobForm({ job, onClose }: { job: JobView; onClose: () => void }) {
       isNew={false}
       saveLabel="Save changes"
       fresh={fresh}
-      onCancel={onClose}
+      onCancel={onLeave}
     />
   )
 }
@@ -43,11 +45,17 @@ export function JobEditPanel() {
   const job = useOutletContext<JobView>()
   const mayWrite = useMay('job:write')
   const navigate = useNavigate()
+  const user = useUser()
+  const toast = useToast()
   const close = () => void navigate(`/jobs/${job.id}`)
+  const leave = () => {
+    if (readJobDraft(jobDraftKey(user.id, job.id))) toast(keptText, { kind: 'stop' })
+    close()
+  }
   return (
-    <Dialog open onClose={close} place="panel" title={`Edit ${job.number}`}>
+    <Dialog open onClose={leave} place="panel" title={`Edit ${job.number}`}>
       {mayWrite ? (
-        <EditJobForm job={job} onClose={close} />
+        <EditJobForm job={job} onClose={close} onLeave={leave} />
       ) : (
         <ErrorState message="Only the office changes jobs." />
       )}

@@ -21,6 +21,8 @@ const draftSchema = z.object({
 })
 export type JobFormDraft = z.infer<typeof draftSchema>
 
+export const keptText = 'Not saved. What you typed is kept until you come back to it.'
+
 /** Typed and not saved: kept in this tab, a person and a form apart. */
 export function jobDraftKey(userId: string, form: string): string {
   return `ridgehand.job-form.${userId}.${form}`

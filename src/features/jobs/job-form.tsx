@@ -7,6 +7,10 @@ import { jobFormOf } from './job-form-values.ts'
 import type { JobFormDraft } from './job-form-draft.ts'
 import type { JobFormState } from './use-job-form.ts'
 
+/** The panel's foot stays in sight; it reaches over the panel's own padding. */
+const stuckClass =
+  'sticky -bottom-4 -mx-4 -mb-4 border-t border-rule px-4 sm:-bottom-6 sm:-mx-6 sm:-mb-6 sm:px-6'
+
 type Props = {
   state: JobFormState
   isNew: boolean
@@ -53,7 +57,7 @@ export function JobForm({ state, isNew, saveLabel, fresh, onCancel }: Props) {
     <form onSubmit={(event) => void submit(event)} noValidate className="space-y-6">
       {isRestored && !conflict ? <Restored onDiscard={() => startAgain(fresh())} /> : null}
       <JobFields form={form} isNew={isNew} />
-      <div className="sticky bottom-0 -mx-4 space-y-3 border-t border-rule bg-sheet px-4 py-3 sm:-mx-6 sm:px-6">
+      <div className={`space-y-3 bg-sheet py-3 ${isNew ? '' : stuckClass}`}>
         {conflict ? (
           <Conflict state={state} />
         ) : (

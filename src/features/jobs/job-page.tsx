@@ -98,7 +98,8 @@ function JobDetails({ job }: { job: JobView }) {
           <JobRoofCard job={job} />
           <JobBookingsCard job={job} />
         </div>
-        <div className="space-y-4">
+        {/* On site the way there and whom to ring come first. */}
+        <div className={`space-y-4 ${mayWrite ? '' : 'max-lg:order-first'}`}>
           <JobContactsCard job={job} />
           <Notes title="Notes for the crew" text={job.crewNotes} />
           <Notes title="Office notes" text={job.notes} />

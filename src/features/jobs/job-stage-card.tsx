@@ -1,5 +1,4 @@
 import { Check } from 'lucide-react'
-import { formatDay } from '../../../shared/calendar/days.ts'
 import type { JobFactName } from '../../../shared/jobs/job-schemas.ts'
 import { jobStageNames, jobStages, stageReached } from '../../../shared/jobs/job-stage.ts'
 import type { JobView } from '../../../shared/jobs/job-views.ts'
@@ -9,6 +8,7 @@ import { useMay, useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { Card } from '../../ui/card.tsx'
 import { useToast } from '../../ui/toast.tsx'
+import { dayText } from './day-words.ts'
 import { useSetFact } from './job-queries.ts'
 
 const facts: { name: JobFactName; done: string; press: string; said: string }[] = [
@@ -65,6 +65,7 @@ function usePressFact(job: JobView) {
 
 function Facts({ job }: { job: JobView }) {
   const { press, busy } = usePressFact(job)
+  const { today } = useSession().firm
   return (
     <ul className="mt-4 divide-y divide-rule border-y border-rule">
       <li className="flex min-h-12 flex-wrap items-center justify-between gap-2">
@@ -82,7 +83,7 @@ function Facts({ job }: { job: JobView }) {
               {done}
             </span>
             {day ? (
-              <span className="font-semibold">{formatDay(day)}</span>
+              <span className="font-semibold">{dayText(day, today)}</span>
             ) : (
               <Button kind="plain" busy={busy} onClick={() => press(name, said)}>
                 {label}
@@ -98,13 +99,14 @@ function Facts({ job }: { job: JobView }) {
 /** Where the job stands, and the facts the office sets. */
 export function JobStageCard({ job }: { job: JobView }) {
   const mayWrite = useMay('job:write')
+  const { today } = useSession().firm
   return (
     <Card>
       <h2 className="mb-3 text-lg font-extrabold">Where it stands</h2>
       <StageTrack job={job} />
       {mayWrite ? <Facts job={job} /> : null}
       {!mayWrite && job.completedOn ? (
-        <p className="mt-3">Complete since {formatDay(job.completedOn)}</p>
+        <p className="mt-3">Complete since {dayText(job.completedOn, today)}</p>
       ) : null}
     </Card>
   )

@@ -5,7 +5,7 @@ import { Card } from '../../ui/card.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { ErrorState } from '../../ui/states.tsx'
 import { useToast } from '../../ui/toast.tsx'
-import { jobDraftKey } from './job-form-draft.ts'
+import { jobDraftKey, keptText, readJobDraft } from './job-form-draft.ts'
 import { emptyJobForm } from './job-form-values.ts'
 import { JobForm } from './job-form.tsx'
 import { useChangeJob, useCreateJob } from './job-queries.ts'
@@ -33,12 +33,12 @@ function useSaveNewJob(): Save {
 }
 
 function NewJobForm() {
-  const user = useUser()
+  const draftKey = jobDraftKey(useUser().id, 'new')
   const save = useSaveNewJob()
   const navigate = useNavigate()
   const toast = useToast()
   const state = useJobForm({
-    draftKey: jobDraftKey(user.id, 'new'),
+    draftKey,
     fresh: freshForm,
     save,
     onSaved: (job) => {
@@ -46,15 +46,13 @@ function NewJobForm() {
       void navigate(`/jobs/${job.id}`, { replace: true })
     },
   })
+  const leave = () => {
+    if (readJobDraft(draftKey)) toast(keptText, { kind: 'stop' })
+    void navigate('/board')
+  }
   return (
     <Card className="max-w-3xl sm:px-6">
-      <JobForm
-        state={state}
-        isNew
-        saveLabel="Save the job"
-        fresh={freshForm}
-        onCancel={() => void navigate('/board')}
-      />
+      <JobForm state={state} isNew saveLabel="Save the job" fresh={freshForm} onCancel={leave} />
     </Card>
   )
 }
