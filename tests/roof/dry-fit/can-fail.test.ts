@@ -19,6 +19,7 @@ const roof = makeRoof(
     [0, 4200],
   ],
   [25, 25, 25, 25],
+  { maxSpacingMm: 900 },
 )
 
 let kit: SolidKit

@@ -1,4 +1,4 @@
-import type { Cut, Member, Roof } from '../../../shared/roof/roof-types.ts'
+import type { Cut, Roof } from '../../../shared/roof/roof-types.ts'
 import {
   backingDeg,
   directionToBuilding,
@@ -146,13 +146,24 @@ function checkBirdsmouth(complain: Complain, piece: Piece): void {
   near('heel angle', mouth.heelFromEdgeDeg, 90 - member.pitchDeg, ANGLE_TOL_DEG)
 }
 
-/** The side on which the head reaches furthest; null when that is central or square across. */
-function headHand(piece: Piece): Member['hand'] {
+/** How far left of the centre line the head reaches furthest; 0 when square across. */
+function headPointLeftMm(piece: Piece): number {
   const furthest = Math.max(...piece.own.map((p) => p[0]))
   const sides = piece.own.filter((p) => p[0] > furthest - 0.01).map((p) => p[1])
-  const middle = (Math.min(...sides) + Math.max(...sides)) / 2
-  if (Math.abs(middle) < CENTRAL_MM) return null
-  return middle > 0 ? 'left' : 'right'
+  return (Math.min(...sides) + Math.max(...sides)) / 2
+}
+
+/** Hand is the side of that point; so near the centre that no tape tells, either will do. */
+function checkHand(complain: Complain, piece: Piece): void {
+  const left = headPointLeftMm(piece)
+  const { hand, mark } = piece.member
+  const side = left > 0 ? 'left' : 'right'
+  const central = Math.abs(left) < 0.001
+  const either = Math.abs(left) < CENTRAL_MM && hand === null
+  const fits = central ? hand === null : either || hand === side
+  if (fits) return
+  const text = `hand is ${hand ?? 'none'}, the head's long point is this far left of centre, mm`
+  complain({ check: 'numbers', marks: [mark], out: left, text })
 }
 
 /** The top edge of the other kind (square where this hip is backed) must give the other bevel. */
@@ -186,9 +197,5 @@ export function checkNumbers(
   }
   checkLengths(complain, piece, roof)
   checkBirdsmouth(complain, piece)
-  const hand = headHand(piece)
-  if (hand !== piece.member.hand) {
-    const text = `hand is ${piece.member.hand ?? 'none'}, the head's long point is ${hand ?? 'central'}`
-    complain({ check: 'numbers', marks: [piece.member.mark], out: 0, text })
-  }
+  checkHand(complain, piece)
 }
