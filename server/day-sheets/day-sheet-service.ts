@@ -6,6 +6,7 @@ import type { CrewRef, DayRoof, DaySheets } from '../../shared/day-sheets/day-sh
 import type { MyTasks, TaskDetail } from '../../shared/day-sheets/task-schemas.ts'
 import { markingCardOf } from '../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../shared/marking/marking-figures.ts'
+import { shareWords } from '../../shared/marking/role-words.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
 import { plateChecks, roofRevisions } from '../db/tables/job-tables.ts'
@@ -83,6 +84,7 @@ function markingOptions(
 export function dayRoofFor(db: DbOrTx, viewer: Viewer, bookingDayId: string): DayRoof {
   const revision = db
     .select({
+      jobId: roofRevisions.jobId,
       letter: roofRevisions.letter,
       roof: roofRevisions.roof,
       spec: roofRevisions.spec,
@@ -100,8 +102,8 @@ export function dayRoofFor(db: DbOrTx, viewer: Viewer, bookingDayId: string): Da
     )
     .get()
   if (!revision) throw notFound('That roof')
-  const { letter, roof, spec, settings } = revision
-  return { letter, roof, spec, marking: markingOptions(viewer.firm, settings) }
+  const { jobId, letter, roof, spec, settings } = revision
+  return { jobId, letter, roof, spec, marking: markingOptions(viewer.firm, settings) }
 }
 
 function placeOf(
@@ -148,6 +150,8 @@ export function taskDetailFor(db: DbOrTx, viewer: Viewer, taskId: string): TaskD
   return {
     task: asDayTask(row),
     place: placeOf(db, viewer.firm, row, revision),
+    shareWords: card ? shareWords(revision?.spec.members ?? [], row.task.memberMarks) : '',
+    units: viewer.firm.lengthUnits,
     card,
     member,
   }

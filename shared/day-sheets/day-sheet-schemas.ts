@@ -82,6 +82,7 @@ const isObject = (value: unknown) => typeof value === 'object' && value !== null
 
 /** A stored revision never changes, so a screen may keep this for good. */
 export const dayRoofSchema = z.object({
+  jobId: z.string(),
   letter: z.string(),
   roof: z.custom<Roof>(isObject),
   spec: z.custom<FrameSpec>(isObject),

@@ -48,6 +48,9 @@ const memberSchema = z.custom<Member>(isObject)
 export const taskDetailSchema = z.object({
   task: dayTaskSchema,
   place: taskPlaceSchema,
+  /** Pieces of this task and their hands: 'x3: 2 left, 1 right'; empty for set-out work. */
+  shareWords: z.string(),
+  units: z.enum(['mm', 'feet-inches']),
   card: cardSchema.nullable(),
   /** The piece the card describes, for its drawing. */
   member: memberSchema.nullable(),

@@ -1,16 +1,20 @@
-import { groupBy } from '../collections/group-by.ts'
 import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
-import { type MarkingCut, type MarkingEnd, markingEnds, tapeBase } from './marking-cuts.ts'
+import {
+  bevelsWords,
+  cutsSawnAlike,
+  type MarkingEnd,
+  markingEnds,
+  tapeBase,
+} from './marking-cuts.ts'
 import {
   angleText,
-  bevelWords,
   figureOf,
   type MarkingBevel,
   type MarkingFigure,
   type MarkingOptions,
 } from './marking-figures.ts'
 import { backingOf, birdsmouthOf, furtherFigures, planingWords } from './marking-parts.ts'
-import { roleWords, sectionWords } from './role-words.ts'
+import { quantityWords, roleWords, sectionWords } from './role-words.ts'
 
 /** Wherever numbers leave for the saw. */
 export const cutOneFirst = 'Cut one, try it, then cut the rest.'
@@ -97,12 +101,6 @@ export function markingCardOf(
   }
 }
 
-/** 'x4: 2 left, 2 right', 'x6'. */
-export function quantityWords(quantity: number, left: number, right: number): string {
-  const hands = [left > 0 ? `${left} left` : '', right > 0 ? `${right} right` : ''].filter(Boolean)
-  return hands.length > 0 ? `x${quantity}: ${hands.join(', ')}` : `x${quantity}`
-}
-
 function membersOf(spec: FrameSpec, line: CutLine): Member[] {
   const marks = new Set(line.members)
   return spec.members.filter((member) => marks.has(member.mark))
@@ -127,28 +125,18 @@ function figureWords(figure: MarkingFigure, note = false): string {
   return `${figure.label} ${value}${note && figure.note ? ` (${figure.note})` : ''}`
 }
 
-function bevelsWords(cut: MarkingCut): string {
-  if (cut.kind === 'square cut' && !cut.edge) return 'square cut'
-  const across = cut.edge
-    ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
-    : '; square across the top'
-  return `${cut.kind}, down the side ${bevelWords(cut.face)}${across}`
-}
-
 /** Cheeks sawn alike are one line. */
 function cutLines(end: MarkingEnd): string[] {
-  const groups = groupBy(end.cuts, (cut) => [bevelsWords(cut), ...cut.sawWords].join('|'))
-  return [...groups.values()].flatMap((cuts) => {
-    const first = cuts[0]
-    if (!first) return []
-    const cheeks = cuts.length > 1 ? 'both cheeks' : first.cheek.toLowerCase()
-    const name = [end.title, cheeks].filter(Boolean).join(', ')
-    const bears = cuts.map(({ cheek, bearsOn }) =>
-      bearsOn && cheek ? `${cheek}: ${bearsOn}` : bearsOn,
-    )
-    const bearsText = bears.filter(Boolean).map((text) => ` ${text}.`)
-    return [`${name}: ${bevelsWords(first)}.${bearsText.join('')}`, ...first.sawWords]
-  })
+  return cutsSawnAlike(end)
+    .map(({ name, cuts, first }) => {
+      const bears = cuts.map(({ cheek, bearsOn }) =>
+        bearsOn && cheek ? `${cheek}: ${bearsOn}` : bearsOn,
+      )
+      const bearsText = bears.filter(Boolean).map((text) => ` ${text}.`)
+      const title = [end.title, name.toLowerCase()].filter(Boolean).join(', ')
+      return [`${title}: ${bevelsWords(first)}.${bearsText.join('')}`, ...first.sawWords]
+    })
+    .flat()
 }
 
 function endLines(end: MarkingEnd): string[] {

@@ -1,3 +1,4 @@
+import { groupBy } from '../collections/group-by.ts'
 import { cutWords } from '../drawing/bevel-dials.ts'
 import { measuringPoints } from '../drawing/timber-points.ts'
 import { endCuts } from '../drawing/timber-shape.ts'
@@ -5,6 +6,7 @@ import type { Cut, FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   angleText,
   bevelOf,
+  bevelWords,
   figureOf,
   type MarkingBevel,
   type MarkingFigure,
@@ -175,4 +177,25 @@ export function tapeBase(member: Member): string {
 
 function capital(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1)
+}
+
+/** A cut's bevels in one run of words. */
+export function bevelsWords(cut: MarkingCut): string {
+  if (cut.kind === 'square cut' && !cut.edge) return 'square cut'
+  const across = cut.edge
+    ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
+    : '; square across the top'
+  return `${cut.kind}, down the side ${bevelWords(cut.face)}${across}`
+}
+
+export type CutsSawnAlike = { name: string; first: MarkingCut; cuts: MarkingCut[] }
+
+/** The cuts of an end, those with the same settings of bevel and blade together. */
+export function cutsSawnAlike(end: MarkingEnd): CutsSawnAlike[] {
+  const groups = groupBy(end.cuts, (cut) => [bevelsWords(cut), ...cut.sawWords].join('|'))
+  return [...groups.values()].flatMap((cuts) => {
+    const first = cuts[0]
+    if (!first) return []
+    return [{ name: cuts.length > 1 ? 'Both cheeks' : first.cheek, first, cuts }]
+  })
 }

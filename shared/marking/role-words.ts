@@ -34,3 +34,19 @@ export function listWords(parts: readonly string[]): string {
   if (parts.length < 2) return parts[0] ?? ''
   return `${parts.slice(0, -1).join(', ')} and ${parts[parts.length - 1]}`
 }
+
+/** How many pieces, and which hands they are: 'x3: 2 left, 1 right'. */
+export function shareWords(
+  members: readonly { mark: string; hand: 'left' | 'right' | null }[],
+  marks: readonly string[],
+): string {
+  const share = members.filter((member) => marks.includes(member.mark))
+  const count = (hand: 'left' | 'right') => share.filter((member) => member.hand === hand).length
+  return quantityWords(marks.length, count('left'), count('right'))
+}
+
+/** 'x4: 2 left, 2 right', 'x6'. */
+export function quantityWords(quantity: number, left: number, right: number): string {
+  const hands = [left > 0 ? `${left} left` : '', right > 0 ? `${right} right` : ''].filter(Boolean)
+  return hands.length > 0 ? `x${quantity}: ${hands.join(', ')}` : `x${quantity}`
+}
