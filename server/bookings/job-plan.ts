@@ -49,7 +49,7 @@ export function planJob(input: JobPlanInput): JobPlan {
   const ahead = days
     .filter((row) => !row.cancelled && row.day >= today)
     .map((row) => ({ row, started: started.has(row.id) }))
-  const kept = ahead.filter((d) => d.started)
+  const keptIds = new Set(ahead.filter((d) => d.started).map((d) => d.row.id))
   const cutButUnused: JobPlan['cutButUnused'] = []
   const done = emptyDone()
   const revisionOf = new Map(days.map((row) => [row.id, row.revisionId]))
@@ -60,18 +60,15 @@ export function planJob(input: JobPlanInput): JobPlan {
       merge(done, ticked)
       continue
     }
-    const keptIds = new Set(kept.map((d) => d.row.id))
+    const onKept = ofRevision.filter((t) => keptIds.has(t.bookingDayId))
+    const { cutButUnused: marks } = carryOver(there, spec, ticked)
+    if (marks.length > 0) cutButUnused.push({ revisionId: id, marks })
+    // A started day goes on as it is, so its pieces are spoken for, ticked or not.
     merge(
       ticked,
-      donePieces(
-        ofRevision.filter((t) => keptIds.has(t.bookingDayId)),
-        (t) => t.quantity,
-      ),
+      donePieces(onKept, (t) => t.quantity),
     )
-    const carried = carryOver(there, spec, ticked)
-    merge(done, carried.done)
-    if (carried.cutButUnused.length > 0)
-      cutButUnused.push({ revisionId: id, marks: carried.cutButUnused })
+    merge(done, carryOver(there, spec, ticked).done)
   }
   const toPlan = ahead.map(({ row, started: isStarted }): DayToPlan => {
     const crewMinutes = hours.on(row.crewId, row.day).minutes
