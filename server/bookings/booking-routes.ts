@@ -9,6 +9,7 @@ import {
   calendarQuerySchema,
   calendarSchema,
   unbookedJobsSchema,
+  unbookedQuerySchema,
 } from '../../shared/bookings/calendar-schemas.ts'
 import { currentUser } from '../auth/current-user.ts'
 import type { Db } from '../db/client.ts'
@@ -32,8 +33,9 @@ export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: Ev
     send(res, calendarSchema, calendar.read(currentUser(res), span))
   })
 
-  api.route('get', '/api/calendar/unbooked', 'booking:write', (_req, res) => {
-    send(res, unbookedJobsSchema, unbooked.read())
+  api.route('get', '/api/calendar/unbooked', 'booking:write', (req, res) => {
+    const { job } = parseInput(unbookedQuerySchema, req.query)
+    send(res, unbookedJobsSchema, unbooked.read(job))
   })
 
   api.route('get', '/api/bookings/:bookingId', 'calendar:read', (req, res) => {

@@ -1,17 +1,4 @@
-import {
-  and,
-  asc,
-  between,
-  count,
-  eq,
-  inArray,
-  isNull,
-  max,
-  min,
-  type SQL,
-  sql,
-  sum,
-} from 'drizzle-orm'
+import { and, asc, between, eq, inArray, isNull, type SQL, sql, sum } from 'drizzle-orm'
 import type { Day } from '../../shared/calendar/days.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { bookingDays, bookings, tasks, ticks } from '../db/tables/booking-tables.ts'
@@ -102,9 +89,15 @@ export function readWorkedDayIds(db: DbOrTx, scope: SQL): Set<string> {
   return new Set(rows.map((row) => row.id))
 }
 
-export type Extent = { firstDay: Day; lastDay: Day; dayCount: number; emptyDays: number }
+export type Extent = {
+  firstDay: Day
+  lastDay: Day
+  dayCount: number
+  allDays: Day[]
+  emptyDays: number
+}
 
-/** First and last day of each booking, how many, and how many from `today` on hold nothing. */
+/** All days of each booking, and how many from `today` on hold nothing. */
 export function readExtents(
   db: DbOrTx,
   bookingIds: readonly string[],
@@ -116,9 +109,7 @@ export function readExtents(
   const rows = db
     .select({
       id: bookingDays.bookingId,
-      firstDay: min(bookingDays.day),
-      lastDay: max(bookingDays.day),
-      dayCount: count(),
+      days: sql<string>`group_concat(${bookingDays.day})`,
       emptyDays: sql<number>`sum(case when ${isEmpty} then 1 else 0 end)`.mapWith(Number),
     })
     .from(bookingDays)
@@ -127,10 +118,11 @@ export function readExtents(
     .groupBy(bookingDays.bookingId)
     .all()
   return new Map(
-    rows.map(({ id, firstDay, lastDay, dayCount, emptyDays }) => [
-      id,
-      { firstDay: firstDay ?? '', lastDay: lastDay ?? '', dayCount, emptyDays },
-    ]),
+    rows.map(({ id, days, emptyDays }) => {
+      const allDays = days.split(',').sort()
+      const [firstDay = '', lastDay = ''] = [allDays[0], allDays[allDays.length - 1]]
+      return [id, { firstDay, lastDay, dayCount: allDays.length, allDays, emptyDays }]
+    }),
   )
 }
 

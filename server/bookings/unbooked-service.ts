@@ -1,4 +1,4 @@
-import { and, asc, eq, isNotNull, isNull, sql } from 'drizzle-orm'
+import { and, asc, eq, isNotNull, isNull, or, sql } from 'drizzle-orm'
 import type { z } from 'zod'
 import type { unbookedJobsSchema } from '../../shared/bookings/calendar-schemas.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
@@ -13,15 +13,21 @@ import { readActiveCrews } from './calendar-service.ts'
 import { readCrewHours } from './crew-hours.ts'
 import { readSpecs } from './job-plan-store.ts'
 
-/** Jobs won, not complete, without a booking that stands; the newest revision with each. */
-function readUnbooked(db: Db) {
+/** Jobs won, not complete, without a booking that stands, and the one asked for; newest revision with each. */
+function readUnbooked(db: Db, askedId: string | undefined) {
+  const isUnbooked = and(
+    isNotNull(jobs.acceptedOn),
+    isNull(jobs.completedOn),
+    sql`not exists (select 1 from ${bookings} where ${bookings.jobId} = ${jobs.id} and ${bookings.cancelledAt} is null)`,
+  )
   return db
     .select({
       id: jobs.id,
       number: jobs.number,
       title: jobs.title,
       siteAddress: jobs.siteAddress,
-      acceptedOn: sql<string>`${jobs.acceptedOn}`,
+      acceptedOn: jobs.acceptedOn,
+      isUnbooked: sql<number>`(${isUnbooked})`.mapWith(Boolean),
       wantedBy: jobs.wantedBy,
       revisionId: roofRevisions.id,
       revisionLetter: roofRevisions.letter,
@@ -35,13 +41,7 @@ function readUnbooked(db: Db) {
         sql`${roofRevisions.sequence} = (select max(r.sequence) from roof_revisions r where r.job_id = ${jobs.id})`,
       ),
     )
-    .where(
-      and(
-        isNotNull(jobs.acceptedOn),
-        isNull(jobs.completedOn),
-        sql`not exists (select 1 from ${bookings} where ${bookings.jobId} = ${jobs.id} and ${bookings.cancelledAt} is null)`,
-      ),
-    )
+    .where(askedId === undefined ? isUnbooked : or(isUnbooked, eq(jobs.id, askedId)))
     .orderBy(
       sql`${jobs.wantedBy} is null`,
       asc(jobs.wantedBy),
@@ -69,26 +69,30 @@ export function createUnbookedService({ db, clock }: { db: Db; clock: Clock }) {
   }
 
   return {
-    read(): z.input<typeof unbookedJobsSchema> {
+    read(askedId?: string): z.input<typeof unbookedJobsSchema> {
       const firm = readFirm(db)
       const today = localDayOf(clock.now(), firm.timeZone)
-      const rows = readUnbooked(db)
+      const rows = readUnbooked(db, askedId)
       const crews = readActiveCrews(db)
       const hours = readCrewHours(db, { from: today, to: today }, firm)
       const minutes = workMinutes(
         firm,
         rows.flatMap((row) => row.revisionId ?? []),
       )
-      const shown = rows.map(({ revisionId, ...row }) => {
+      const shown = rows.map(({ revisionId, isUnbooked, ...row }) => {
         const work = revisionId === null ? null : (minutes.get(revisionId) ?? null)
         const crewDays = crews.map((crew) => {
           const there = hours.on(crew.id, today).minutes
           const days = work === null || there === 0 ? null : Math.max(1, Math.ceil(work / there))
           return { crewId: crew.id, days }
         })
-        return { ...row, workMinutes: work, crewDays }
+        return { isUnbooked, job: { ...row, workMinutes: work, crewDays } }
       })
-      return { jobs: shown, crews }
+      return {
+        jobs: shown.filter((one) => one.isUnbooked).map((one) => one.job),
+        asked: shown.find((one) => !one.isUnbooked)?.job ?? null,
+        crews,
+      }
     },
   }
 }

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { daysBetween } from '../calendar/days.ts'
-import { daySchema } from '../http/fields.ts'
+import { daySchema, idSchema } from '../http/fields.ts'
 import type { RoofGlyphData, RoofGlyphLineKind } from '../drawing/roof-glyph.ts'
 import { bookingStateSchema } from './booking-schemas.ts'
 
@@ -83,6 +83,8 @@ export const calendarBookingSchema = z.object({
   firstDay: z.string(),
   lastDay: z.string(),
   dayCount: z.number(),
+  /** Every day of the booking, those outside the span asked for too. */
+  allDays: z.array(z.string()),
   /** Minutes of the job's work that no day has room for; over 0 the booking is too short. */
   shortMinutes: z.number(),
   /** Days ahead that hold nothing; over 0 the booking is too long. */
@@ -119,12 +121,15 @@ export const bookingSchema = calendarBookingSchema.omit({ days: true }).extend({
 })
 export type Booking = z.infer<typeof bookingSchema>
 
+/** `job` asks for that one too, booked already or not yet won. */
+export const unbookedQuerySchema = z.strictObject({ job: idSchema.optional() })
+
 export const unbookedJobSchema = z.object({
   id: z.string(),
   number: z.string(),
   title: z.string(),
   siteAddress: z.string(),
-  acceptedOn: z.string(),
+  acceptedOn: z.string().nullable(),
   wantedBy: z.string().nullable(),
   revisionLetter: z.string().nullable(),
   glyph: glyphSchema.nullable(),
@@ -137,5 +142,7 @@ export type UnbookedJob = z.infer<typeof unbookedJobSchema>
 
 export const unbookedJobsSchema = z.object({
   jobs: z.array(unbookedJobSchema),
+  /** The one asked for by id, when it is none of those. */
+  asked: unbookedJobSchema.nullable(),
   crews: z.array(calendarCrewSchema),
 })
