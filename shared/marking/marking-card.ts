@@ -8,6 +8,7 @@ import {
 } from './marking-cuts.ts'
 import {
   angleText,
+  bevelWords,
   figureOf,
   type MarkingBevel,
   type MarkingFigure,
