@@ -115,7 +115,7 @@ function MarkButton({ card, onPick }: { card: MarkingCard; onPick: Props['onPick
         type="button"
         onClick={() => onPick(card.mark)}
         aria-label={`${card.mark}, ${card.name}: open its card`}
-        className="min-h-11 min-w-11 rounded-md px-1 text-left font-extrabold text-chalk underline print:hidden"
+        className="-my-2 min-h-11 min-w-11 rounded-md px-1 text-left font-extrabold text-chalk underline print:hidden"
       >
         {card.mark}
       </button>
@@ -131,7 +131,7 @@ function CutLineCard({ card, onPick }: { card: MarkingCard; onPick: Props['onPic
         <div className="min-w-0">
           <MarkButton card={card} onPick={onPick} />
           <p>
-            {card.name} · {card.section}
+            {card.name} · <span className="whitespace-nowrap">{card.section}</span>
           </p>
           <p className="font-semibold">{card.quantityWords}</p>
         </div>

@@ -43,10 +43,10 @@ export function EditorHeader({ opened, draft, issue }: Props) {
         <>
           <SaveStateLine state={draft.saveState} onRetry={() => void draft.saver.flush()} />
           <Button kind="plain" disabled={!draft.canUndo} onClick={draft.undo} title="Ctrl Z">
-            <Undo2 size={18} aria-hidden /> Undo
+            <Undo2 size={18} aria-hidden /> <span className="sr-only sm:not-sr-only">Undo</span>
           </Button>
           <Button kind="plain" disabled={!draft.canRedo} onClick={draft.redo} title="Ctrl Shift Z">
-            <Redo2 size={18} aria-hidden /> Redo
+            <Redo2 size={18} aria-hidden /> <span className="sr-only sm:not-sr-only">Redo</span>
           </Button>
           <Button busy={issue.isPending} onClick={issue.start}>
             Issue as {nextLetter}

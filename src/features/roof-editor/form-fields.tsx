@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react'
+import { memo, type ReactNode } from 'react'
 import { textAt } from '../../../shared/revisions/form-paths.ts'
 import { Field } from '../../ui/field.tsx'
 import { Select, TextInput } from '../../ui/inputs.tsx'
@@ -6,44 +6,59 @@ import { fieldId, useRoofForm } from './roof-form-context.ts'
 
 type Props = { path: string; label: string; hint?: string; className?: string }
 
+type MeasureProps = Props & { placeholder?: string }
+type BoxProps = {
+  text: string
+  problem: string | undefined
+  setText: (path: string, text: string) => void
+}
+
 /** A measure, kept as typed. */
-export function MeasureField({
-  path,
-  label,
-  hint,
-  className,
-  placeholder,
-}: Props & { placeholder?: string }) {
+export function MeasureField(props: MeasureProps) {
   const { form, problemAt, setText } = useRoofForm()
+  const { path } = props
+  return (
+    <MeasureBox {...props} text={textAt(form, path)} problem={problemAt(path)} setText={setText} />
+  )
+}
+
+/** Drawn again only when its own text or problem changes, so that a key in one field costs one field. */
+const MeasureBox = memo(function MeasureBox(props: MeasureProps & BoxProps) {
+  const { path, label, hint, className, placeholder, text, problem, setText } = props
   return (
     <div id={fieldId(path)} className={`min-w-0 ${className ?? ''}`}>
-      <Field label={label} hint={hint} error={problemAt(path)}>
+      <Field label={label} hint={hint} error={problem}>
         <TextInput
           inputMode="decimal"
           autoComplete="off"
           placeholder={placeholder}
           className="tabular-nums"
-          value={textAt(form, path)}
+          value={text}
           maxLength={20}
           onChange={(event) => setText(path, event.target.value)}
         />
       </Field>
     </div>
   )
+})
+
+type Options = readonly (readonly [value: string, words: string])[]
+type ChoiceProps = Props & { options: Options }
+
+export function ChoiceField(props: ChoiceProps) {
+  const { form, problemAt, setText } = useRoofForm()
+  const { path } = props
+  return (
+    <ChoiceBox {...props} text={textAt(form, path)} problem={problemAt(path)} setText={setText} />
+  )
 }
 
-export function ChoiceField({
-  path,
-  label,
-  hint,
-  className,
-  options,
-}: Props & { options: readonly (readonly [value: string, words: string])[] }) {
-  const { form, problemAt, setText } = useRoofForm()
+const ChoiceBox = memo(function ChoiceBox(props: ChoiceProps & BoxProps) {
+  const { path, label, hint, className, options, text, problem, setText } = props
   return (
     <div id={fieldId(path)} className={`min-w-0 ${className ?? ''}`}>
-      <Field label={label} hint={hint} error={problemAt(path)}>
-        <Select value={textAt(form, path)} onChange={(event) => setText(path, event.target.value)}>
+      <Field label={label} hint={hint} error={problem}>
+        <Select value={text} onChange={(event) => setText(path, event.target.value)}>
           {options.map(([value, words]) => (
             <option key={value} value={value}>
               {words}
@@ -53,7 +68,7 @@ export function ChoiceField({
       </Field>
     </div>
   )
-}
+})
 
 /** A titled group of fields. */
 export function FieldGroup({

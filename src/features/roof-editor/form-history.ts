@@ -1,3 +1,4 @@
+import { withText } from '../../../shared/revisions/form-paths.ts'
 import type { RoofForm } from '../../../shared/revisions/roof-form.ts'
 
 /** What was typed, back and forth; keystrokes in one field within a moment are one step. */
@@ -9,6 +10,7 @@ export type FormHistory = {
 }
 
 export type FormAction =
+  | { kind: 'text'; path: string; text: string; atMs: number }
   | { kind: 'change'; form: RoofForm; path: string; atMs: number }
   | { kind: 'undo' }
   | { kind: 'redo' }
@@ -24,6 +26,10 @@ export function historyOf(form: RoofForm): FormHistory {
 export function formHistoryReducer(history: FormHistory, action: FormAction): FormHistory {
   const { past, now, future } = history
   if (action.kind === 'change') return changed(history, action)
+  if (action.kind === 'text') {
+    const { path, text, atMs } = action
+    return changed(history, { form: withText(now, path, text), path, atMs })
+  }
   if (action.kind === 'replace') return historyOf(action.form)
   if (action.kind === 'undo') {
     const before = past.at(-1)
@@ -36,9 +42,11 @@ export function formHistoryReducer(history: FormHistory, action: FormAction): Fo
 }
 
 function changed(
-  { past, now, last }: FormHistory,
+  history: FormHistory,
   { form, path, atMs }: { form: RoofForm; path: string; atMs: number },
 ): FormHistory {
+  const { past, now, last } = history
+  if (form === now) return history
   const goesOn = last !== null && last.path === path && atMs - last.atMs < oneStepMs
   return {
     past: goesOn ? past : [...past.slice(1 - mostSteps), now],

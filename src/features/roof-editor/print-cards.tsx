@@ -15,7 +15,7 @@ export function PrintCards({ spec, options }: Props) {
         const card = markingCardOf(spec, line.mark, options)
         const member = spec.members.find((one) => one.mark === card.drawnMark)
         return member ? (
-          <section key={line.mark} className="break-before-page">
+          <section key={line.mark} className="break-before-page [zoom:0.7]">
             <h2 className="mb-2 text-xl font-extrabold">
               {card.mark} · {card.name}
             </h2>

@@ -23,7 +23,7 @@ export function ProblemList({ problems, onGo }: Props) {
       className="mb-4 rounded-md border-2 border-stop bg-sheet p-4"
     >
       <h2 className="font-extrabold text-stop">Not issued: put these right first</h2>
-      <ul className="mt-1 space-y-1">
+      <ul className="mt-1 gap-x-8 sm:columns-2 xl:columns-3">
         {problems.map(({ path, message }) => (
           <li key={path}>
             <a

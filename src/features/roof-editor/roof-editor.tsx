@@ -1,5 +1,4 @@
 import { type KeyboardEvent, useDeferredValue, useMemo, useState } from 'react'
-import { withText } from '../../../shared/revisions/form-paths.ts'
 import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
 import { roofOfForm } from '../../../shared/revisions/roof-of-form.ts'
 import { Segmented } from '../../ui/segmented.tsx'
@@ -26,7 +25,7 @@ type Part = (typeof parts)[number]['value']
 export function RoofEditor({ opened }: { opened: JobRoof }) {
   const [part, setPart] = useState<Part>('fields')
   const draft = useRoofDraft(opened)
-  const { form, setForm, saver, saveState } = draft
+  const { form, setForm, setText, saver, saveState } = draft
   const { settings, brickOffsetMm } = opened
   const firm = useMemo(() => ({ settings, brickOffsetMm }), [settings, brickOffsetMm])
   const settled = useDeferredValue(form)
@@ -43,10 +42,10 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
     return {
       form,
       problemAt: (path) => shown.get(path),
-      setText: (path, text) => setForm(withText(form, path, text), path),
+      setText,
       setForm,
     }
-  }, [form, reading, setForm, issue.wasRefused])
+  }, [form, reading, setForm, setText, issue.wasRefused])
 
   return (
     <RoofFormContext value={handle}>
@@ -73,7 +72,9 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
             <LayoutFields />
             <CutFields />
           </div>
-          <div className={part === 'fields' ? 'hidden lg:block' : ''}>
+          <div
+            className={`lg:sticky lg:top-4 lg:max-h-[calc(100dvh-2rem)] lg:self-start lg:overflow-y-auto ${part === 'fields' ? 'hidden lg:block' : ''}`}
+          >
             <RoofResults
               reading={reading}
               framed={framed}

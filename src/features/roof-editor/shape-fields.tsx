@@ -1,4 +1,4 @@
-import { type RoofForm, type RoofShape, roofShapes } from '../../../shared/revisions/roof-form.ts'
+import { type RoofShape, roofShapes } from '../../../shared/revisions/roof-form.ts'
 import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
 import { CornerFields } from './corner-fields.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
@@ -16,13 +16,10 @@ const endWords = [
   ['both', 'Both'],
 ] as const
 
-function lengthOfWords(form: RoofForm) {
-  const end = form.shape === 'octagonal-end' ? 'octagon' : 'splay'
-  return [
-    ['straight-side', `Straight side, to the ${end}`],
-    ['overall', 'Over all'],
-  ] as const
-}
+const lengthOfWords = [
+  ['straight-side', 'Straight side'],
+  ['overall', 'Over all'],
+] as const
 
 /** Which plan it is, and how big. */
 export function ShapeFields() {
@@ -68,7 +65,7 @@ export function ShapeFields() {
       )}
       {hasCutEnd ? (
         <>
-          <ChoiceField path="lengthOf" label="Length is" options={lengthOfWords(form)} />
+          <ChoiceField path="lengthOf" label="Length is" options={lengthOfWords} />
           <ChoiceField
             path="endAt"
             label={form.shape === 'octagonal-end' ? 'Octagonal end at' : 'Splayed end at'}

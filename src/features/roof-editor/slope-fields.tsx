@@ -4,6 +4,11 @@ import { formatMm } from '../../../shared/units/format-length.ts'
 import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
 
+const overhangStarts = [
+  ['frame', 'Frame'],
+  ['brickwork', 'Brickwork'],
+] as const
+
 /** Pitch and overhangs for the whole roof, then what single plates have of their own. */
 export function SlopeFields({ brickOffsetMm }: { brickOffsetMm: number }) {
   const { form } = useRoofForm()
@@ -23,10 +28,7 @@ export function SlopeFields({ brickOffsetMm }: { brickOffsetMm: number }) {
               ? `${formatMm(brickOffsetMm)} mm added for the brickwork (Firm settings).`
               : 'Level, from the plate’s outer face to the tail’s plumb cut.'
           }
-          options={[
-            ['frame', 'Frame'],
-            ['brickwork', 'Brickwork'],
-          ]}
+          options={overhangStarts}
         />
         {hasGables ? <MeasureField path="vergeOverhangMm" label="Verge overhang, mm" /> : null}
       </FieldGroup>
@@ -44,12 +46,17 @@ export function SlopeFields({ brickOffsetMm }: { brickOffsetMm: number }) {
   )
 }
 
-function finishWords(plate: FormPlate) {
-  const isEnd = plate.path === 'sides.left' || plate.path === 'sides.right'
-  return [
-    ['eave', isEnd ? 'Hip end' : 'Eave'],
-    ['gable', isEnd ? 'Gable end' : 'Gable'],
-  ] as const
+const finishes = [
+  ['eave', 'Eave'],
+  ['gable', 'Gable'],
+] as const
+const endFinishes = [
+  ['eave', 'Hip end'],
+  ['gable', 'Gable end'],
+] as const
+
+function finishWords({ path }: FormPlate) {
+  return path === 'sides.left' || path === 'sides.right' ? endFinishes : finishes
 }
 
 function PlateFields({ plate, number }: { plate: FormPlate; number: number }) {

@@ -1,4 +1,5 @@
 import { lengthWords, type MarkingOptions } from '../../../shared/marking/marking-figures.ts'
+import { planingWords } from '../../../shared/marking/marking-parts.ts'
 import { sectionWords } from '../../../shared/marking/role-words.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
 import { Note } from '../../ui/states.tsx'
@@ -89,15 +90,13 @@ export function SpecCautions({ spec }: Pick<Props, 'spec'>) {
 /** Corners to plane, and what rounding the marks costs at the worst joint. */
 export function SpecFit({ spec, options }: Props) {
   const { joint, worstMm } = spec.rounding
+  const planing = spec.cutLines.flatMap((line) => planingWords(spec, line, options))
   return (
     <div className="space-y-2">
-      {spec.planing.length > 0 ? (
+      {planing.length > 0 ? (
         <ul className="list-disc pl-5">
-          {spec.planing.map((one) => (
-            <li key={`${one.mark}${one.end}${one.side}`}>
-              {one.mark}: plane {lengthWords(one.offMm, options)} off the {one.side} top corner at
-              the {one.end}.
-            </li>
+          {planing.map((words) => (
+            <li key={words}>{words}</li>
           ))}
         </ul>
       ) : (

@@ -15,6 +15,23 @@ const sectionHints: Partial<Record<SectionKey, string>> = {
   valley: 'Leave empty on a roof without valleys.',
 }
 
+const bays = [
+  ['even', 'All alike'],
+  ['full', 'Full bays, the odd one last'],
+] as const
+const tails = [
+  ['plumb', 'Plumb'],
+  ['square', 'Square'],
+] as const
+const hipTops = [
+  ['lowered', 'Lowered'],
+  ['backed', 'Backed'],
+] as const
+const valleyTops = [
+  ['square', 'Square'],
+  ['dished', 'Dished'],
+] as const
+
 /** Every size is typed by a person; none is offered. */
 export function SectionFields() {
   return (
@@ -48,10 +65,7 @@ export function LayoutFields() {
         path="spacing"
         label="Bays between stations"
         className="col-span-2"
-        options={[
-          ['even', 'All alike'],
-          ['full', 'Full bays, the odd one last'],
-        ]}
+        options={bays}
       />
     </FieldGroup>
   )
@@ -60,35 +74,14 @@ export function LayoutFields() {
 export function CutFields() {
   return (
     <FieldGroup title="Tails, hips and seats">
-      <ChoiceField
-        path="tail"
-        label="Tail cut"
-        options={[
-          ['plumb', 'Plumb'],
-          ['square', 'Square'],
-        ]}
-      />
+      <ChoiceField path="tail" label="Tail cut" options={tails} />
       <MeasureField
         path="tailAllowanceMm"
         label="Tail allowance, mm"
         hint="Left long, cut to a line on site."
       />
-      <ChoiceField
-        path="hipTop"
-        label="Hip top"
-        options={[
-          ['lowered', 'Lowered'],
-          ['backed', 'Backed'],
-        ]}
-      />
-      <ChoiceField
-        path="valleyTop"
-        label="Valley top"
-        options={[
-          ['square', 'Square'],
-          ['dished', 'Dished'],
-        ]}
-      />
+      <ChoiceField path="hipTop" label="Hip top" options={hipTops} />
+      <ChoiceField path="valleyTop" label="Valley top" options={valleyTops} />
       <MeasureField
         path="standMm"
         label="Height over plate, mm"

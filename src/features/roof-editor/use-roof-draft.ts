@@ -66,6 +66,10 @@ export function useRoofDraft(opened: JobRoof) {
       dispatch({ kind: 'change', form: next, path, atMs: Date.now() }),
     [],
   )
+  const setText = useCallback(
+    (path: string, text: string) => dispatch({ kind: 'text', path, text, atMs: Date.now() }),
+    [],
+  )
   const takeTheirs = (theirs: RoofDraft | null) => {
     const next = theirs?.form ?? formOfShape('rectangle')
     known.current = next
@@ -75,6 +79,7 @@ export function useRoofDraft(opened: JobRoof) {
   return {
     form,
     setForm,
+    setText,
     saver,
     saveState,
     canUndo: history.past.length > 0,
