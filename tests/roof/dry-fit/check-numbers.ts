@@ -149,7 +149,7 @@ function checkBirdsmouth(complain: Complain, piece: Piece): void {
 /** How far left of the centre line the head reaches furthest; 0 when square across. */
 function headPointLeftMm(piece: Piece): number {
   const furthest = Math.max(...piece.own.map((p) => p[0]))
-  const sides = piece.own.filter((p) => p[0] > furthest - 0.01).map((p) => p[1])
+  const sides = piece.own.filter((p) => p[0] > furthest - 1e-5).map((p) => p[1])
   return (Math.min(...sides) + Math.max(...sides)) / 2
 }
 
