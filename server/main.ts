@@ -8,6 +8,8 @@ import session from 'express-session'
 import { pino } from 'pino'
 import { buildApp } from './app.ts'
 import { openDatabase } from './db/client.ts'
+import { demoSignIns, hasDemo } from './db/demo/demo-sign-ins.ts'
+import { isEmpty, seedDemo } from './db/demo/seed-demo.ts'
 import { migrateDatabase } from './db/migrate.ts'
 import { type Env, readEnv } from './env.ts'
 import { createEventHub } from './events/event-hub.ts'
@@ -27,6 +29,12 @@ function keepSecret(env: Env): Env {
   return { ...env, sessionSecret: readFileSync(file, 'utf8').trim() }
 }
 
+/** What to open in a browser on this machine. */
+function address(env: Env): string {
+  const host = env.host === '127.0.0.1' || env.host === '0.0.0.0' ? 'localhost' : env.host
+  return `http://${host}:${env.port}`
+}
+
 async function hotScreens(): Promise<RequestHandler[]> {
   const { createServer: createVite } = await import('vite')
   const vite = await createVite({
@@ -43,6 +51,7 @@ async function main(): Promise<void> {
   const log = pino({ level: env.logLevel })
   const database = openDatabase(env.dataDir)
   migrateDatabase(database)
+  if (env.seedDemo && isEmpty(database.db)) await seedDemo(database.db, systemClock)
   const SqliteStore = connectSqlite3(session)
   const sessionStore = new SqliteStore({ dir: env.dataDir, db: 'sessions.db' })
   const events = createEventHub()
@@ -70,7 +79,8 @@ async function main(): Promise<void> {
   const server = createServer(app)
   server.listen(env.port, env.host, () => {
     mailWorker.start()
-    console.log(`Ridgehand is at http://localhost:${env.port}`)
+    console.log(`Ridgehand is at ${address(env)}`)
+    if (hasDemo(database.db)) console.log(demoSignIns())
   })
   const stop = () => {
     const mailDone = mailWorker.stop()

@@ -39,18 +39,33 @@ function stampSays(file, value) {
   return existsSync(file) && readFileSync(file, 'utf8') === value
 }
 
-/** Installs the locked packages when they are missing or the lock has changed. */
+/** Whether what npm says it installed is what the lock asks for. */
+function lockIsInstalled() {
+  const installedFile = inProject('node_modules', '.package-lock.json')
+  if (!existsSync(installedFile)) return false
+  const wanted = JSON.parse(readFileSync(inProject('package-lock.json'), 'utf8')).packages
+  const installed = JSON.parse(readFileSync(installedFile, 'utf8')).packages
+  return Object.entries(wanted).every(
+    ([place, { version, optional }]) =>
+      place === '' || optional || installed[place]?.version === version,
+  )
+}
+
+/** Installs the locked packages when they are missing, the lock has changed, or Node has. */
 export function ensureInstalled() {
   if (Number(process.versions.node.split('.')[0]) < oldestNode) {
     fail(`Ridgehand needs Node ${oldestNode} or newer; this is ${process.versions.node}.`)
   }
-  const stamp = inProject('node_modules', '.installed-from')
-  const wanted = hashOf([inProject('package-lock.json')]) + process.versions.modules
-  if (stampSays(stamp, wanted)) return
-  console.log('Installing the locked packages. The first time takes a few minutes.')
-  // Screens are built here, so the build's packages are wanted in production too.
-  run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'])
-  writeFileSync(stamp, wanted)
+  // The two databases are compiled against one Node's binary interface.
+  const stamp = inProject('node_modules', '.built-for-abi')
+  const abi = process.versions.modules
+  const otherAbi = existsSync(stamp) && !stampSays(stamp, abi)
+  if (otherAbi || !lockIsInstalled()) {
+    console.log('Installing the locked packages. The first time takes a few minutes.')
+    // Screens are built here, so the build's packages are wanted in production too.
+    run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'])
+  }
+  writeFileSync(stamp, abi)
 }
 
 /** Builds the screens when what they are made of has changed. */

@@ -59,7 +59,7 @@ test('imports keep to the house: shared below, features apart, no circles', asyn
   const { output } = await cruise(
     ['src', 'server', 'shared', 'fakes'],
     {
-      ruleSet: { forbidden: zones(), options: {} },
+      ruleSet: { forbidden: zones() },
       validate: true,
       baseDir: projectDir,
       doNotFollow: { path: 'node_modules' },

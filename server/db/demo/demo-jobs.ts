@@ -152,7 +152,7 @@ export const demoJobs: DemoJob[] = [
     acceptedAgo: 8,
     roof: 'pyramid',
     issued: true,
-    booking: { crew: 'B', fromWorkingDay: 5, days: 1, state: 'pencilled', gear: '', done: 'none' },
+    booking: { crew: 'A', fromWorkingDay: 2, days: 1, state: 'pencilled', gear: '', done: 'none' },
   },
   {
     ...blank,
@@ -175,8 +175,8 @@ export const demoJobs: DemoJob[] = [
     issued: true,
     booking: {
       crew: 'B',
-      fromWorkingDay: 2,
-      days: 2,
+      fromWorkingDay: 1,
+      days: 1,
       state: 'firm',
       gear: 'Drop saw, two sawhorses, harness kit',
       done: 'none',
@@ -205,7 +205,7 @@ export const demoJobs: DemoJob[] = [
     booking: {
       crew: 'A',
       fromWorkingDay: -1,
-      days: 3,
+      days: 2,
       state: 'firm',
       gear: 'Drop saw, long level, harness kit',
       done: 'half',
@@ -232,7 +232,7 @@ export const demoJobs: DemoJob[] = [
     booking: {
       crew: 'B',
       fromWorkingDay: -1,
-      days: 3,
+      days: 2,
       state: 'firm',
       gear: 'Drop saw, nail guns, two planks',
       done: 'half',
@@ -260,7 +260,7 @@ export const demoJobs: DemoJob[] = [
     booking: {
       crew: 'A',
       fromWorkingDay: -6,
-      days: 2,
+      days: 1,
       state: 'firm',
       gear: 'Drop saw',
       done: 'all',

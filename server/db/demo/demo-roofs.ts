@@ -38,9 +38,12 @@ const rectangle = (
 
 /** One real roof of each shape; the sizes are a demo's, not advice. */
 export const demoRoofs = {
-  hip: rectangle('9000', '6000', '25'),
+  hip: rectangle('18600', '8400', '25', { maxSpacingMm: '450' }),
   gable: withGables(rectangle('8400', '5400', '30'), 'left', 'right'),
-  hipAndGable: withGables(rectangle('10200', '6000', '22.5', { tail: 'square' }), 'right'),
+  hipAndGable: withGables(
+    rectangle('19200', '9000', '22.5', { tail: 'square', maxSpacingMm: '450' }),
+    'right',
+  ),
   octagonalEnd: withGables(
     form('octagonal-end', { widthMm: '6000', lengthMm: '9000', pitchDeg: '25' }),
     'left',
