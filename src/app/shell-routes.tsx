@@ -39,6 +39,26 @@ export const shellRoutes: RouteObject[] = [
     ],
   },
   {
+    path: 'calendar',
+    lazy: async () => ({
+      Component: (await import('../features/calendar/calendar-page.tsx')).CalendarPage,
+    }),
+    children: [
+      {
+        path: 'book',
+        lazy: async () => ({
+          Component: (await import('../features/calendar/book-panel.tsx')).BookPanel,
+        }),
+      },
+      {
+        path: 'bookings/:bookingId',
+        lazy: async () => ({
+          Component: (await import('../features/calendar/booking-panel.tsx')).BookingPanel,
+        }),
+      },
+    ],
+  },
+  {
     path: 'account',
     lazy: async () => ({
       Component: (await import('../features/auth/account-page.tsx')).AccountPage,
@@ -70,6 +90,30 @@ export const shellRoutes: RouteObject[] = [
     path: 'jobs/:jobId/revisions/:letter',
     lazy: async () => ({
       Component: (await import('../features/roof-editor/revision-page.tsx')).RevisionPage,
+    }),
+  },
+  {
+    path: 'today',
+    lazy: async () => ({
+      Component: (await import('../features/today/today-page.tsx')).TodayPage,
+    }),
+  },
+  {
+    path: 'today/plates/:bookingDayId',
+    lazy: async () => ({
+      Component: (await import('../features/today/plate-check-page.tsx')).PlateCheckPage,
+    }),
+  },
+  {
+    path: 'my-tasks',
+    lazy: async () => ({
+      Component: (await import('../features/my-tasks/my-tasks-page.tsx')).MyTasksPage,
+    }),
+  },
+  {
+    path: 'my-tasks/:taskId',
+    lazy: async () => ({
+      Component: (await import('../features/my-tasks/task-page.tsx')).TaskPage,
     }),
   },
 ]

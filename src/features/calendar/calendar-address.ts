@@ -1,0 +1,82 @@
+import { useSearchParams } from 'react-router-dom'
+import { daySchema } from '../../../shared/http/fields.ts'
+import { type Day, dayPlus, isoWeekday } from '../../../shared/calendar/days.ts'
+import { useSession } from '../../lib/session.ts'
+import type { Span } from './calendar-queries.ts'
+
+export type CalendarView = 'month' | 'week'
+
+const mondayOf = (day: Day): Day => dayPlus(day, 1 - isoWeekday(day))
+const firstOfMonth = (day: Day): Day => `${day.slice(0, 7)}-01`
+const firstOfNextMonth = (day: Day): Day => firstOfMonth(dayPlus(firstOfMonth(day), 31))
+const lastOfMonth = (day: Day): Day => dayPlus(firstOfNextMonth(day), -1)
+
+/** The days a view shows: whole weeks, Monday first. */
+export function spanOf(view: CalendarView, on: Day): Span {
+  if (view === 'week') return { from: mondayOf(on), to: dayPlus(mondayOf(on), 6) }
+  return { from: mondayOf(firstOfMonth(on)), to: dayPlus(mondayOf(lastOfMonth(on)), 6) }
+}
+
+/** A day in the view before or after. */
+export function stepOf(view: CalendarView, on: Day, direction: -1 | 1): Day {
+  if (view === 'week') return dayPlus(on, 7 * direction)
+  return direction === 1 ? firstOfNextMonth(on) : firstOfMonth(dayPlus(firstOfMonth(on), -1))
+}
+
+const months = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+]
+
+export function titleOf(view: CalendarView, on: Day): string {
+  const nameOf = (day: Day): string => months[Number(day.slice(5, 7)) - 1] ?? ''
+  if (view === 'month') return `${nameOf(on)} ${on.slice(0, 4)}`
+  const { from, to } = spanOf('week', on)
+  const first = from.slice(0, 7) === to.slice(0, 7) ? '' : ` ${nameOf(from)}`
+  return `${Number(from.slice(8))}${first} to ${Number(to.slice(8))} ${nameOf(to)} ${to.slice(0, 4)}`
+}
+
+/** View and day of the calendar, kept in the address. */
+export function useCalendarAddress(isNarrow: boolean) {
+  const { firm } = useSession()
+  const [search, setSearch] = useSearchParams()
+  const asked = search.get('on') ?? search.get('day') ?? ''
+  const on = daySchema.safeParse(asked).success ? asked : firm.today
+  const askedView = search.get('view')
+  const view: CalendarView =
+    askedView === 'week' || askedView === 'month' ? askedView : isNarrow ? 'week' : 'month'
+  const go = (next: { view?: CalendarView; on?: Day }) =>
+    setSearch(
+      (now) => {
+        now.set('view', next.view ?? view)
+        now.set('on', next.on ?? on)
+        return now
+      },
+      { replace: true },
+    )
+  return { view, on, today: firm.today, span: spanOf(view, on), go }
+}
+
+/** The search part for a link that keeps the calendar as it is, with these added or (null) taken out. */
+export function searchWith(
+  search: URLSearchParams,
+  changes: Record<string, string | null>,
+): string {
+  const next = new URLSearchParams(search)
+  for (const [key, value] of Object.entries(changes)) {
+    if (value === null) next.delete(key)
+    else next.set(key, value)
+  }
+  const text = next.toString()
+  return text ? `?${text}` : ''
+}

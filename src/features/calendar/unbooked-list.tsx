@@ -1,0 +1,70 @@
+import { Draggable } from '@fullcalendar/interaction'
+import { GripVertical } from 'lucide-react'
+import { useEffect, useRef } from 'react'
+import { Link, useSearchParams } from 'react-router-dom'
+import type { CalendarCrew, UnbookedJob } from '../../../shared/bookings/calendar-schemas.ts'
+import { formatDay } from '../../../shared/calendar/days.ts'
+import { formatHours } from '../../../shared/labour/format-hours.ts'
+import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
+import { searchWith } from './calendar-address.ts'
+
+type Props = { jobs: readonly UnbookedJob[]; crews: readonly CalendarCrew[]; mayDrag: boolean }
+
+/** '23 h: 2 days for P, 3 for R'. */
+export function workWords(job: UnbookedJob, crews: readonly CalendarCrew[]): string {
+  if (job.workMinutes === null) return 'No roof issued yet'
+  const parts = crews.flatMap((crew) => {
+    const days = job.crewDays.find((c) => c.crewId === crew.id)?.days
+    return days ? [`${days} ${days === 1 ? 'day' : 'days'} for ${crew.name}`] : []
+  })
+  const hours = `${formatHours(job.workMinutes)} of work`
+  return parts.length > 0 ? `${hours}: ${parts.join(', ')}` : hours
+}
+
+/** Jobs won without a booking; dragged onto a day, or booked by their link. */
+export function UnbookedList({ jobs, crews, mayDrag }: Props) {
+  const [search] = useSearchParams()
+  const list = useRef<HTMLUListElement>(null)
+  useEffect(() => {
+    if (!mayDrag || !list.current) return
+    const draggable = new Draggable(list.current, {
+      itemSelector: '[data-job]',
+      // The drop opens the form; the grid itself makes nothing.
+      eventData: () => ({ create: false, title: '' }),
+    })
+    return () => draggable.destroy()
+  }, [mayDrag])
+  return (
+    <ul ref={list} className="space-y-2">
+      {jobs.map((job) => (
+        <li
+          key={job.id}
+          data-job={job.id}
+          className={`rounded-md border border-rule bg-sheet p-2 ${mayDrag ? 'cursor-grab' : ''}`}
+        >
+          <div className="flex items-start gap-2">
+            {job.glyph ? <RoofGlyph glyph={job.glyph} sizePx={40} /> : null}
+            <div className="min-w-0 flex-1">
+              <p className="font-semibold [overflow-wrap:anywhere]">{job.title}</p>
+              <p className="text-sm text-ink-soft">
+                {job.number}
+                {job.wantedBy ? ` · wanted by ${formatDay(job.wantedBy)}` : ''}
+              </p>
+            </div>
+            {mayDrag ? (
+              <GripVertical size={18} aria-hidden className="shrink-0 text-ink-soft" />
+            ) : null}
+          </div>
+          <p className="mt-1 text-sm">{workWords(job, crews)}</p>
+          <Link
+            to={`/calendar/book${searchWith(search, { job: job.id })}`}
+            aria-label={`Book ${job.title}`}
+            className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
+          >
+            Book
+          </Link>
+        </li>
+      ))}
+    </ul>
+  )
+}
