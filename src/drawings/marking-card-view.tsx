@@ -1,0 +1,78 @@
+import { cutOneFirst, type MarkingCard } from '../../shared/marking/marking-card.ts'
+import type { Member } from '../../shared/roof/roof-types.ts'
+import type { LengthUnits } from '../../shared/units/format-length.ts'
+import { Note } from '../ui/states.tsx'
+import { MarkingNumbers } from './marking-numbers.tsx'
+import { TimberDrawing } from './timber-drawing.tsx'
+
+type Props = {
+  card: MarkingCard
+  member: Member | null
+  units: LengthUnits
+  /** What the plates say of these numbers; shown first. */
+  platesMeasured: boolean
+}
+
+/** A whole marking card: numbers at reading size, the timber with its bevels, and what to mind. */
+export function MarkingCardView({ card, member, units, platesMeasured }: Props) {
+  return (
+    <div className="space-y-4">
+      <div>
+        <p className="font-extrabold">{cutOneFirst}</p>
+        {platesMeasured ? null : <p className="font-semibold">From plan, plates not measured.</p>}
+        <p>{card.handWords}</p>
+      </div>
+      <CardRemarks card={card} />
+      <MarkingNumbers card={card} />
+      {member ? (
+        <div className="border-t border-rule pt-3">
+          <p className="mb-2 font-extrabold">
+            Drawn: {member.mark}
+            {member.hand ? `, ${member.hand} hand` : ''}
+          </p>
+          <TimberDrawing member={member} units={units} />
+        </div>
+      ) : null}
+      <details className="border-t border-rule pt-2">
+        <summary className="flex min-h-14 items-center font-semibold">Further numbers</summary>
+        <dl className="grid grid-cols-2 gap-x-4 gap-y-1 text-base">
+          {card.further.map((figure) => (
+            <div key={figure.label}>
+              <dt className="inline">{figure.label} </dt>
+              <dd className="inline font-extrabold tabular-nums">
+                {figure.text} {figure.unit}
+              </dd>
+            </div>
+          ))}
+          <div>
+            <dt className="inline">Pitch </dt>
+            <dd className="inline font-extrabold tabular-nums">{card.pitchText}</dd>
+          </div>
+        </dl>
+      </details>
+    </div>
+  )
+}
+
+/** Planing and cautions of a line. */
+export function CardRemarks({ card }: { card: MarkingCard }) {
+  return (
+    <>
+      {card.planing.length > 0 ? (
+        <Note title="Plane">
+          {card.planing.map((text) => (
+            <p key={text} className="text-base">
+              {text}
+            </p>
+          ))}
+        </Note>
+      ) : null}
+      {card.warnings.map(({ text, remedy }) => (
+        <Note key={text} kind="caution" title="Caution">
+          <p className="text-base">{text}</p>
+          <p className="text-base">{remedy}</p>
+        </Note>
+      ))}
+    </>
+  )
+}

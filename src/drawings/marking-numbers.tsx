@@ -1,0 +1,140 @@
+import type { MarkingCard } from '../../shared/marking/marking-card.ts'
+import { cutsSawnAlike, type MarkingEnd } from '../../shared/marking/marking-cuts.ts'
+import {
+  type MarkingBevel,
+  type MarkingFigure,
+  squareWord,
+} from '../../shared/marking/marking-figures.ts'
+
+/** A length to read off at arm's length. */
+export function FigureView({
+  figure,
+  isMain = false,
+}: {
+  figure: MarkingFigure
+  isMain?: boolean
+}) {
+  return (
+    <div className="min-w-0">
+      <dt className="text-base font-semibold leading-tight">{figure.label}</dt>
+      <dd className="leading-tight">
+        <span className={`numeral ${isMain ? 'text-[2.5rem]' : 'text-[1.75rem]'}`}>
+          {figure.text}
+        </span>
+        {figure.unit ? <span className="text-base"> {figure.unit}</span> : null}
+        {figure.note ? <span className="block text-sm text-ink-soft">{figure.note}</span> : null}
+      </dd>
+    </div>
+  )
+}
+
+/** An angle both ways. */
+export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: string | undefined }) {
+  return (
+    <div className="min-w-0">
+      <dt className="text-base font-semibold leading-tight">{bevel.label}</dt>
+      <dd className="flex flex-wrap items-baseline gap-x-4">
+        <span className="whitespace-nowrap">
+          <span className="numeral text-[1.75rem]">{bevel.fromSquareText}</span>{' '}
+          <span className="text-base">{squareWord(bevel)}</span>
+        </span>
+        <span className="whitespace-nowrap">
+          <span className="numeral text-[1.75rem]">{bevel.fromEdgeText}</span>{' '}
+          <span className="text-base">from edge</span>
+        </span>
+        {extra ? <span className="text-base">{extra}</span> : null}
+      </dd>
+    </div>
+  )
+}
+
+function EndNumbers({ end }: { end: MarkingEnd }) {
+  return (
+    <div className="border-t border-rule pt-3">
+      <p className="mb-1 text-base font-extrabold">{end.title}</p>
+      <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
+        {end.points.map((point) => (
+          <FigureView key={point.label} figure={point} />
+        ))}
+      </dl>
+      {cutsSawnAlike(end).map(({ name, first, cuts }) => (
+        <div key={name} className="mt-2">
+          <p className="text-base">
+            {[name, first.kind, first.edge ? '' : 'square across the top']
+              .filter(Boolean)
+              .join(', ')}
+          </p>
+          <dl className="space-y-1">
+            {first.kind === 'square cut' ? null : <BevelView bevel={first.face} />}
+            {first.edge ? (
+              <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
+            ) : null}
+            {first.edgeOtherTop ? (
+              <div className="text-base text-ink-soft">
+                <dt className="inline">{first.edgeOtherTop.label}: </dt>
+                <dd className="inline">
+                  {first.edgeOtherTop.fromSquareText} {squareWord(first.edgeOtherTop)},{' '}
+                  {first.edgeOtherTop.fromEdgeText} from edge
+                </dd>
+              </div>
+            ) : null}
+          </dl>
+          {cuts.map(({ cheek, bearsOn }) =>
+            bearsOn ? (
+              <p key={cheek + bearsOn} className="text-base">
+                {cheek ? `${cheek}: ` : ''}
+                {bearsOn}.
+              </p>
+            ) : null,
+          )}
+          {first.sawWords.length > 0 ? (
+            <p className="mt-1 border-l-8 border-ochre pl-2 text-base font-semibold">
+              {first.sawWords.join(' ')}
+            </p>
+          ) : null}
+        </div>
+      ))}
+    </div>
+  )
+}
+
+/** Every number of a marking card, the ones the saw waits for first and largest. */
+export function MarkingNumbers({ card }: { card: MarkingCard }) {
+  // The head is measured to from the heel line before the tail is.
+  const ends = [...card.ends].reverse()
+  const mouth = card.birdsmouth
+  return (
+    <div className="space-y-3">
+      <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
+        <FigureView figure={card.cutLength} isMain />
+        <FigureView figure={card.setOutLength} isMain />
+      </dl>
+      {ends.map((end) => (
+        <EndNumbers key={end.end} end={end} />
+      ))}
+      {mouth ? (
+        <div className="border-t border-rule pt-3">
+          <p className="mb-1 text-base font-extrabold">Birdsmouth</p>
+          <dl className="grid grid-cols-2 gap-x-4 gap-y-2 sm:grid-cols-3">
+            {mouth.figures.map((figure) => (
+              <FigureView key={figure.label} figure={figure} />
+            ))}
+          </dl>
+          <dl className="mt-2 space-y-1">
+            {mouth.bevels.map((bevel) => (
+              <BevelView key={bevel.label} bevel={bevel} />
+            ))}
+          </dl>
+        </div>
+      ) : null}
+      {card.backing.length > 0 || card.drop ? (
+        <dl className="space-y-1 border-t border-rule pt-3">
+          {card.backing.map((bevel) => (
+            <BevelView key={bevel.label} bevel={bevel} />
+          ))}
+          {card.drop ? <FigureView figure={card.drop} /> : null}
+        </dl>
+      ) : null}
+    </div>
+  )
+}
