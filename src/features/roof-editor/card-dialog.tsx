@@ -1,19 +1,20 @@
 import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
+import { MarkingCardView } from '../../drawings/marking-card-view.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
-import { CardView } from './card-view.tsx'
 
 type Props = {
   spec: FrameSpec
   /** Mark of a member or of a cut line; null closes. */
   mark: string | null
   options: MarkingOptions
+  platesMeasured: boolean
   onClose: () => void
 }
 
 /** The marking card of a picked timber, beside the page. */
-export function CardDialog({ spec, mark, options, onClose }: Props) {
+export function CardDialog({ spec, mark, options, platesMeasured, onClose }: Props) {
   const line = spec.cutLines.find((one) => one.mark === mark || one.members.includes(mark ?? ''))
   if (!line || mark === null) return null
   const card = markingCardOf(spec, line.mark, options)
@@ -27,7 +28,15 @@ export function CardDialog({ spec, mark, options, onClose }: Props) {
       onClose={onClose}
       title={`${picked?.mark ?? line.mark} · ${card.name}${hand}`}
     >
-      {member ? <CardView card={card} member={member} units={options.units} /> : null}
+      <p className="mb-2 font-semibold">
+        {card.section} · {card.quantityWords}
+      </p>
+      <MarkingCardView
+        card={card}
+        member={member ?? null}
+        units={options.units}
+        platesMeasured={platesMeasured}
+      />
     </Dialog>
   )
 }

@@ -1,7 +1,7 @@
 import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
-import { CardView } from './card-view.tsx'
+import { PrintCard } from './print-card.tsx'
 import { usePrinting } from './use-printing.ts'
 
 type Props = { spec: FrameSpec; options: MarkingOptions }
@@ -15,11 +15,11 @@ export function PrintCards({ spec, options }: Props) {
         const card = markingCardOf(spec, line.mark, options)
         const member = spec.members.find((one) => one.mark === card.drawnMark)
         return member ? (
-          <section key={line.mark} className="break-before-page [zoom:0.7]">
+          <section key={line.mark} className="break-before-page [zoom:0.74]">
             <h2 className="mb-2 text-xl font-extrabold">
               {card.mark} · {card.name}
             </h2>
-            <CardView card={card} member={member} units={options.units} />
+            <PrintCard card={card} member={member} units={options.units} />
           </section>
         ) : null
       })}

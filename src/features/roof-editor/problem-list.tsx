@@ -1,4 +1,5 @@
 import { useEffect, useRef } from 'react'
+import { flushSync } from 'react-dom'
 import type { FormProblem } from '../../../shared/revisions/form-typing.ts'
 import { fieldId } from './roof-form-context.ts'
 
@@ -31,9 +32,9 @@ export function ProblemList({ problems, onGo }: Props) {
               className="inline-block py-1 font-semibold text-chalk underline"
               onClick={(event) => {
                 event.preventDefault()
-                onGo()
-                // The field may be on a part of the page that shows only after this click.
-                requestAnimationFrame(() => goToField(path))
+                // The field may be on a part of the page that shows only now.
+                flushSync(onGo)
+                goToField(path)
               }}
             >
               {message}

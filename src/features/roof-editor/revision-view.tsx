@@ -64,7 +64,13 @@ export function RevisionView({ revision }: { revision: Revision }) {
         </Part>
       </div>
       <PrintCards spec={spec} options={options} />
-      <CardDialog spec={spec} mark={picked} options={options} onClose={() => pick(null)} />
+      <CardDialog
+        spec={spec}
+        mark={picked}
+        options={options}
+        platesMeasured={revision.platesMeasured}
+        onClose={() => pick(null)}
+      />
     </>
   )
 }

@@ -60,7 +60,13 @@ export const RoofResults = memo(function RoofResults({ reading, framed, settings
             <h2 className="mb-2 text-lg font-extrabold">Fit</h2>
             <SpecFit spec={spec} options={options} />
           </Card>
-          <CardDialog spec={spec} mark={picked} options={options} onClose={() => setPicked(null)} />
+          <CardDialog
+            spec={spec}
+            mark={picked}
+            options={options}
+            platesMeasured={false}
+            onClose={() => setPicked(null)}
+          />
         </div>
       ) : (
         <p className={`text-ink-soft ${part === 'numbers' ? '' : 'hidden'}`}>

@@ -1,21 +1,23 @@
-import { useSyncExternalStore } from 'react'
+import { useEffect, useState } from 'react'
 import { flushSync } from 'react-dom'
-
-function subscribe(listener: () => void): () => void {
-  const media = window.matchMedia('print')
-  // What only paper needs must stand on the page before the browser lays the paper out.
-  const onChange = () => flushSync(listener)
-  media.addEventListener('change', onChange)
-  window.addEventListener('beforeprint', onChange)
-  window.addEventListener('afterprint', onChange)
-  return () => {
-    media.removeEventListener('change', onChange)
-    window.removeEventListener('beforeprint', onChange)
-    window.removeEventListener('afterprint', onChange)
-  }
-}
 
 /** Whether the page is being laid out for paper. */
 export function usePrinting(): boolean {
-  return useSyncExternalStore(subscribe, () => window.matchMedia('print').matches)
+  const [isPrinting, setIsPrinting] = useState(() => window.matchMedia('print').matches)
+  useEffect(() => {
+    const media = window.matchMedia('print')
+    // What only paper needs must stand on the page before the browser lays the paper out.
+    const before = () => flushSync(() => setIsPrinting(true))
+    const after = () => setIsPrinting(media.matches)
+    const onMedia = () => flushSync(() => setIsPrinting(media.matches))
+    window.addEventListener('beforeprint', before)
+    window.addEventListener('afterprint', after)
+    media.addEventListener('change', onMedia)
+    return () => {
+      window.removeEventListener('beforeprint', before)
+      window.removeEventListener('afterprint', after)
+      media.removeEventListener('change', onMedia)
+    }
+  }, [])
+  return isPrinting
 }

@@ -8,8 +8,8 @@ import { Note } from '../../ui/states.tsx'
 
 type Props = { card: MarkingCard; member: Member; units: LengthUnits }
 
-/** Everything to mark one line of the cut list from: numbers, drawing, bevels. */
-export function CardView({ card, member, units }: Props) {
+/** One line of the cut list on one sheet: everything to mark it from. */
+export function PrintCard({ card, member, units }: Props) {
   return (
     <div className="space-y-4">
       <div>
@@ -24,50 +24,54 @@ export function CardView({ card, member, units }: Props) {
         <BigFigure figure={card.setOutLength} />
       </dl>
       <TimberDrawing member={member} units={units} />
-      {card.ends.map((end) =>
-        end.points.length > 0 || end.cuts.some((cut) => cut.bearsOn || cut.pastSaw) ? (
-          <Part key={end.title} title={end.title}>
-            <Figures figures={end.points} />
-            {end.cuts.map((cut) => (
-              <div key={`${cut.cheek}${cut.bearsOn}`}>
-                {cut.bearsOn ? <p>{[cut.cheek, cut.bearsOn].filter(Boolean).join(': ')}.</p> : null}
-                {cut.sawWords.map((words) => (
-                  <p key={words} className="font-semibold text-stop">
-                    {words}
-                  </p>
-                ))}
-              </div>
+      <div className="grid grid-cols-2 items-start gap-x-8 gap-y-3">
+        {card.ends.map((end) =>
+          end.points.length > 0 || end.cuts.some((cut) => cut.bearsOn || cut.pastSaw) ? (
+            <Part key={end.title} title={end.title}>
+              <Figures figures={end.points} />
+              {end.cuts.map((cut) => (
+                <div key={`${cut.cheek}${cut.bearsOn}`}>
+                  {cut.bearsOn ? (
+                    <p>{[cut.cheek, cut.bearsOn].filter(Boolean).join(': ')}.</p>
+                  ) : null}
+                  {cut.sawWords.map((words) => (
+                    <p key={words} className="font-semibold text-stop">
+                      {words}
+                    </p>
+                  ))}
+                </div>
+              ))}
+            </Part>
+          ) : null,
+        )}
+        {card.birdsmouth ? (
+          <Part title="Birdsmouth">
+            <Figures figures={card.birdsmouth.figures} />
+            {card.birdsmouth.bevels.map((bevel) => (
+              <p key={bevel.label}>
+                {bevel.label}: {bevelWords(bevel)}
+              </p>
             ))}
           </Part>
-        ) : null,
-      )}
-      {card.birdsmouth ? (
-        <Part title="Birdsmouth">
-          <Figures figures={card.birdsmouth.figures} />
-          {card.birdsmouth.bevels.map((bevel) => (
+        ) : null}
+        <Part title="Further">
+          <Figures
+            figures={[
+              ...(card.tailLength ? [card.tailLength] : []),
+              ...(card.drop ? [card.drop] : []),
+              ...card.further,
+            ]}
+          />
+          {card.backing.map((bevel) => (
             <p key={bevel.label}>
               {bevel.label}: {bevelWords(bevel)}
             </p>
           ))}
+          {card.planing.map((words) => (
+            <p key={words}>{words}</p>
+          ))}
         </Part>
-      ) : null}
-      <Part title="Further">
-        <Figures
-          figures={[
-            ...(card.tailLength ? [card.tailLength] : []),
-            ...(card.drop ? [card.drop] : []),
-            ...card.further,
-          ]}
-        />
-        {card.backing.map((bevel) => (
-          <p key={bevel.label}>
-            {bevel.label}: {bevelWords(bevel)}
-          </p>
-        ))}
-        {card.planing.map((words) => (
-          <p key={words}>{words}</p>
-        ))}
-      </Part>
+      </div>
       {card.warnings.map(({ text, remedy }) => (
         <Note key={text} kind="caution" title={text}>
           <p className="text-sm">{remedy}</p>
@@ -102,7 +106,7 @@ function Part({ title, children }: { title: string; children: ReactNode }) {
 
 function Figures({ figures }: { figures: MarkingFigure[] }) {
   return (
-    <dl className="divide-y divide-rule">
+    <dl className="divide-y divide-rule border-b border-rule">
       {figures.map((figure) => (
         <div key={figure.label} className="flex items-baseline justify-between gap-3 py-1">
           <dt>
