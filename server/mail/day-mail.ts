@@ -1,23 +1,25 @@
-import { and, eq } from 'drizzle-orm'
+import { eq } from 'drizzle-orm'
 import { type Day, formatDay } from '../../shared/calendar/days.ts'
 import { roleMay } from '../../shared/auth/permissions.ts'
 import type { Role } from '../../shared/auth/roles.ts'
 import type { FrameSpec } from '../../shared/roof/roof-types.ts'
 import type { MarkingOptions } from '../../shared/marking/marking-figures.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
-import { jobs, plateChecks, roofRevisions } from '../db/tables/job-tables.ts'
+import { bookings } from '../db/tables/booking-tables.ts'
+import type { jobs } from '../db/tables/job-tables.ts'
+import { type CrewDaySheet, readDaySheets } from '../day-sheets/day-sheet-store.ts'
 import type { Firm } from '../firm/firm-store.ts'
-import { rosterOf } from '../people/roster.ts'
-import type { ToldBooking, ToldDay, ToldPerson } from './told-day.ts'
+import type { ToldBooking, ToldDay, ToldLine, ToldPerson } from './told-day.ts'
 
 /** One booking of a day as its mail shows it: what is told, and the numbers that go with it. */
 export type DayMailBooking = {
   told: ToldBooking
+  /** What is told, in the day's order of work. */
+  lines: ToldLine[]
   siteContact: string
   crewNotes: string
   who: string[]
-  roof: { spec: FrameSpec; options: MarkingOptions; platesMeasured: boolean } | null
+  roof: { spec: FrameSpec; options: MarkingOptions; plates: CrewDaySheet['plates'] } | null
 }
 
 export type DayMail = {
@@ -31,24 +33,14 @@ export type DayMail = {
   url: string
 }
 
-function roofOf(db: DbOrTx, firm: Firm, bookingId: string, day: Day): DayMailBooking['roof'] {
-  const revision = db
-    .select({ id: roofRevisions.id, spec: roofRevisions.spec, settings: roofRevisions.settings })
-    .from(bookingDays)
-    .innerJoin(roofRevisions, eq(roofRevisions.id, bookingDays.revisionId))
-    .where(and(eq(bookingDays.bookingId, bookingId), eq(bookingDays.day, day)))
-    .get()
+function roofOf(firm: Firm, sheet: CrewDaySheet): DayMailBooking['roof'] {
+  const { revision, plates } = sheet
   if (!revision) return null
-  const check = db
-    .select({ id: plateChecks.id })
-    .from(plateChecks)
-    .where(eq(plateChecks.revisionId, revision.id))
-    .get()
   const { roundMm, roundDeg, sawMaxTiltDeg } = revision.settings
   return {
     spec: revision.spec,
     options: { units: firm.lengthUnits, roundMm, roundDeg, sawMaxTiltDeg },
-    platesMeasured: check !== undefined,
+    plates,
   }
 }
 
@@ -58,31 +50,28 @@ function siteContactFor(role: Role, job: typeof jobs.$inferSelect): string {
   return [job.siteContactName, phone].filter(Boolean).join(', ')
 }
 
-function bookingMail(
-  db: DbOrTx,
-  firm: Firm,
-  person: ToldPerson,
-  day: Day,
-  told: ToldBooking,
-): DayMailBooking[] {
-  const row = db
-    .select({ crewId: bookings.crewId, job: jobs })
+/** The booking's own sheet of the day, as Today shows it. */
+function sheetOf(db: DbOrTx, bookingId: string, day: Day, now: Date): CrewDaySheet | undefined {
+  const booking = db
+    .select({ crewId: bookings.crewId })
     .from(bookings)
-    .innerJoin(jobs, eq(jobs.id, bookings.jobId))
-    .where(eq(bookings.id, told.bookingId))
+    .where(eq(bookings.id, bookingId))
     .get()
-  if (!row) return []
-  return [
-    {
-      told,
-      siteContact: siteContactFor(person.role, row.job),
-      crewNotes: row.job.crewNotes,
-      who: rosterOf(db, row.crewId, day)
-        .filter((member) => !member.onLeave)
-        .map((member) => member.name),
-      roof: roofOf(db, firm, told.bookingId, day),
-    },
-  ]
+  if (!booking) return undefined
+  return readDaySheets(db, { crewId: booking.crewId, day }, now).find(
+    (sheet) => sheet.booking.id === bookingId,
+  )
+}
+
+function inOrderOfWork(lines: ToldLine[], sheet: CrewDaySheet): ToldLine[] {
+  const place = (line: ToldLine) =>
+    sheet.tasks.findIndex(
+      (task) =>
+        task.work === line.work &&
+        task.cutLineMark === line.mark &&
+        (line.mark !== null || task.title === line.title),
+    )
+  return [...lines].sort((a, b) => place(a) - place(b))
 }
 
 /** Where a person of a role opens a day. */
@@ -93,16 +82,28 @@ export function dayUrl(appUrl: string, role: Role, day: Day): string {
 /** Everything a day's mail says to a person, as the rows are now. */
 export function readDayMail(
   db: DbOrTx,
-  from: { firm: Firm; person: ToldPerson; day: Day; told: ToldDay; appUrl: string },
+  from: { firm: Firm; person: ToldPerson; day: Day; told: ToldDay; appUrl: string; now: Date },
 ): DayMail {
   const { firm, person, day, told } = from
+  const bookingMails = told.bookings.map((one): DayMailBooking => {
+    const sheet = sheetOf(db, one.bookingId, day, from.now)
+    if (!sheet) throw new Error(`Booking ${one.bookingId} has no sheet on ${day}.`)
+    return {
+      told: one,
+      lines: inOrderOfWork(one.lines, sheet),
+      siteContact: siteContactFor(person.role, sheet.job),
+      crewNotes: sheet.job.crewNotes,
+      who: sheet.roster.filter((member) => !member.onLeave).map((member) => member.name),
+      roof: roofOf(firm, sheet),
+    }
+  })
   return {
     day,
     dayWords: formatDay(day),
     personName: person.name,
     firmName: firm.name,
     firmPhone: firm.phone,
-    bookings: told.bookings.flatMap((one) => bookingMail(db, firm, person, day, one)),
+    bookings: bookingMails,
     url: dayUrl(from.appUrl, person.role, day),
   }
 }

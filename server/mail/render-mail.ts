@@ -70,11 +70,16 @@ function lastTold(db: DbOrTx, personId: string, day: string): ToldDay | null {
   return row ? toldDaySchema.parse(row.content) : null
 }
 
-function dayMail(db: DbOrTx, row: OutboxRow, person: ToldPerson, appUrl: string): Rendering {
+function dayMail(
+  db: DbOrTx,
+  row: OutboxRow,
+  person: ToldPerson,
+  from: { appUrl: string; now: Date },
+): Rendering {
   const { day } = dayPayloadSchema.parse(row.payload)
   const firm = readFirm(db)
   const told = toldDayOf(db, firm, person.id, day)
-  const mail = readDayMail(db, { firm, person, day, told, appUrl })
+  const mail = readDayMail(db, { ...from, firm, person, day, told })
   if (row.kind === 'crew-reminder') {
     if (mail.bookings.length === 0) return { dropped: mailNotNeeded }
     const text = textOf(reminderMail(mail))
@@ -114,6 +119,6 @@ export function renderMail(
       return accountMail(db, person, { ...from, hours: invitationHours }, invitationMail)
     case 'crew-reminder':
     case 'change-notice':
-      return dayMail(db, row, person, from.appUrl)
+      return dayMail(db, row, person, from)
   }
 }

@@ -21,6 +21,11 @@ function shareWords(line: ToldLine, card: MarkingCard): string {
   return `x${line.quantity} of ${card.quantity}: ${line.members.join(', ')}`
 }
 
+/** A task may name a line that the roof has lost; the rest of the mail still goes. */
+function isInRoof(line: ToldLine, roof: Roof): boolean {
+  return roof.spec.cutLines.some((one) => one.mark === line.mark)
+}
+
 function lineTitle(line: ToldLine, card: MarkingCard): string {
   return `${orderOfWork[line.work]} ${card.mark} ${card.name} ${card.section}, ${shareWords(line, card)}`
 }
@@ -53,13 +58,26 @@ function standBlocks(toStand: ToldLine[], toCut: ToldLine[], roof: Roof): MailBl
   ]
 }
 
-function markedLines(booking: DayMailBooking, work: 'cut' | 'stand'): ToldLine[] {
-  return booking.told.lines.filter((line) => line.work === work && line.mark !== null)
+function markedLines(booking: DayMailBooking, roof: Roof, work: 'cut' | 'stand'): ToldLine[] {
+  return booking.lines.filter((line) => line.work === work && isInRoof(line, roof))
+}
+
+function platesBlocks({ plates }: Roof): MailBlock[] {
+  if (plates === null)
+    return [{ kind: 'caution', text: `${platesNotMeasured}. Check sides and diagonals first.` }]
+  if (plates.differing === 0) return []
+  const lengths = plates.differing === 1 ? '1 length is' : `${plates.differing} lengths are`
+  return [
+    {
+      kind: 'caution',
+      text: `The plates were measured and ${lengths} off plan. Look at the check before you cut.`,
+    },
+  ]
 }
 
 function workBlocks(booking: DayMailBooking): MailBlock[] {
   const { roof } = booking
-  const other = booking.told.lines.filter((line) => line.mark === null)
+  const other = booking.lines.filter((line) => line.mark === null)
   const blocks: MailBlock[] = []
   if (other.length > 0) {
     blocks.push(
@@ -74,10 +92,9 @@ function workBlocks(booking: DayMailBooking): MailBlock[] {
     })
     return blocks
   }
-  const toCut = markedLines(booking, 'cut')
-  const toStand = markedLines(booking, 'stand')
-  if (!roof.platesMeasured)
-    blocks.push({ kind: 'caution', text: `${platesNotMeasured}. Check sides and diagonals first.` })
+  const toCut = markedLines(booking, roof, 'cut')
+  const toStand = markedLines(booking, roof, 'stand')
+  blocks.push(...platesBlocks(roof))
   if (toCut.length > 0) {
     blocks.push(
       { kind: 'subheading', text: 'To cut' },
@@ -86,6 +103,12 @@ function workBlocks(booking: DayMailBooking): MailBlock[] {
     )
   }
   blocks.push(...standBlocks(toStand, toCut, roof))
+  const lost = booking.lines.filter((line) => line.mark !== null && !isInRoof(line, roof))
+  if (lost.length > 0)
+    blocks.push({
+      kind: 'caution',
+      text: `Planned, but not in this revision of the roof: ${lost.map((line) => line.mark).join(', ')}. Ask the office.`,
+    })
   if (toCut.length + toStand.length === 0)
     blocks.push({ kind: 'paragraph', text: 'No lines of the cut list are planned for this day.' })
   return blocks
