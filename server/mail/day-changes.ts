@@ -33,8 +33,8 @@ function lineChanges(before: ToldLine[], after: ToldLine[]): string[] {
 
 function fieldChange(label: string, before: string, after: string): string[] {
   if (before === after) return []
-  if (after === '') return [`${label}: nothing any more, was ${before}`]
-  return [before === '' ? `${label}: ${after}` : `${label}: now ${after}, was ${before}`]
+  if (after === '') return [`${label} nothing any more, was ${before}`]
+  return [before === '' ? `${label}: ${after}` : `${label} now ${after}, was ${before}`]
 }
 
 /** What differs within one booking, in words. */

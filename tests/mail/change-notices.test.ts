@@ -43,8 +43,8 @@ test('a start moved after the reminder leads to one notice a person, when the ho
       .map((mail) => mail.to)
       .sort(),
   ).toEqual([yard.apprentice.email, yard.lead.email].sort())
-  expect(notices()[0]?.subject).toBe('Change for Thu 3 Dec: Start: now 09:00, was 07:00')
-  expect(notices()[0]?.text).toContain('Start: now 09:00, was 07:00')
+  expect(notices()[0]?.subject).toBe('Change for Thu 3 Dec: Start now 09:00, was 07:00')
+  expect(notices()[0]?.text).toContain('Start now 09:00, was 07:00')
   expect(notices()[0]?.text).toContain('Cut length 3853 mm')
 })
 
@@ -62,7 +62,7 @@ test('a further change starts the hold afresh, and the notice says the net chang
   yard.at('2026-12-02T06:25:00Z')
   await worker.runOnce()
   expect(notices()).toHaveLength(2)
-  expect(notices()[0]?.text).toContain('Start: now 10:00, was 07:00')
+  expect(notices()[0]?.text).toContain('Start now 10:00, was 07:00')
   expect(notices()[0]?.text).toContain('Bring: Second ladder')
   expect(notices()[0]?.text).not.toContain('09:00')
 })
@@ -94,7 +94,7 @@ test('changed back while its notice could not be sent: the notice is dropped, an
   yard.setBooking(booking.id, { startAt: '10:00' })
   await settle('2026-12-02T07:00:00Z')
   expect(notices()).toHaveLength(2)
-  expect(notices()[0]?.text).toContain('Start: now 10:00, was 07:00')
+  expect(notices()[0]?.text).toContain('Start now 10:00, was 07:00')
 })
 
 test('a day moved on is called off with its new day, and the new day has its own reminder in time', async () => {
@@ -142,7 +142,7 @@ test('a new revision is told with its letter and its lengths', async () => {
   await settle('2026-12-02T06:00:00Z')
   const common = next.spec.cutLines.find((line) => line.role === 'common')
   expect(notices()).toHaveLength(2)
-  expect(notices()[0]?.text).toContain('Roof revision: now B, was A')
+  expect(notices()[0]?.text).toContain('Roof revision now B, was A')
   expect(notices()[0]?.text).toContain(`Cut length ${Math.round(common!.cutLengthMm)} mm`)
 })
 
@@ -197,7 +197,7 @@ test('a second change after a notice makes a second notice, of what differs from
   yard.setBooking(booking.id, { startAt: '10:00' })
   await settle('2026-12-02T07:00:00Z')
   expect(notices()).toHaveLength(4)
-  expect(notices()[2]?.text).toContain('Start: now 10:00, was 09:00')
+  expect(notices()[2]?.text).toContain('Start now 10:00, was 09:00')
   expect(yard.mailOf(`change:${yard.lead.id}:2026-12-03:2`)?.state).toBe('sent')
 })
 

@@ -90,12 +90,12 @@ function Actions({ message }: { message: MessageDetail }) {
 }
 
 const parts = [
-  { value: 'html', label: 'As it looks' },
   { value: 'text', label: 'Plain text' },
+  { value: 'html', label: 'As it looks' },
 ] as const
 
 function Words({ message }: { message: MessageDetail }) {
-  const [part, setPart] = useState<'html' | 'text'>('html')
+  const [part, setPart] = useState<'html' | 'text'>('text')
   if (message.text === null || message.html === null) {
     return (
       <p className="text-ink-soft">
@@ -105,7 +105,9 @@ function Words({ message }: { message: MessageDetail }) {
   }
   return (
     <div className="flex min-h-0 grow flex-col gap-3">
-      <Segmented label="Part of the mail" options={parts} value={part} onChange={setPart} />
+      <div>
+        <Segmented label="Part of the mail" options={parts} value={part} onChange={setPart} />
+      </div>
       {part === 'html' ? (
         <iframe
           title="The mail as a mail program shows it"
