@@ -4,6 +4,8 @@ import { add2, cross2, dot2, length2, scale2 } from './vector.ts'
 
 /** Side rafters nearer than this (cosine) to square with their broken hip stand to it as commons to a ridge. */
 const squareSideCos = 0.35
+/** A side rafter on the crown end stands at least this far off the side of the broken hip that bends away. */
+const clearStepMm = 1.5
 
 /** The rafters of a broken hip's own two slopes that meet it at its foot. */
 export const sidesAt = (broken: Piece, pieces: Piece[]): Piece[] =>
@@ -51,7 +53,7 @@ const pastOblique = (broken: Piece, crown: Piece | null, half: number): number =
   if (crown === null) return half
   const turn = turnRad(broken, crown)
   if (turn < 1e-6) return half
-  const covered = (crown.halfMm - broken.halfMm / Math.cos(turn)) / Math.tan(turn)
+  const covered = (crown.halfMm - clearStepMm - broken.halfMm / Math.cos(turn)) / Math.tan(turn)
   return Math.min(half, Math.max(0, covered))
 }
 

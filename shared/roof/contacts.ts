@@ -3,14 +3,14 @@ import type { Piece, PieceEnd } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import type { Side } from './trim.ts'
-import { dot2, left2, sub2 } from './vector.ts'
+import { add2, dot2, left2, scale2, sub2 } from './vector.ts'
 
 /** A side of a trimmed piece in plan, as a segment. */
 type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
 
 /** Faces this near to one plane bear on each other. */
-const bearingGapMm = 0.02
-const leastBearingMm = 0.05
+const bearingGapMm = 0.1
+const leastBearingMm = 0.25
 
 export const planSegments = (piece: number, plan: Labelled<Side>): Segment[] =>
   plan.points.flatMap((from, k) => {
@@ -24,27 +24,60 @@ const isNear = (a: Segment, b: Segment): boolean =>
   Math.max(b.from.y, b.to.y) >= Math.min(a.from.y, a.to.y) - 1 &&
   Math.min(b.from.y, b.to.y) <= Math.max(a.from.y, a.to.y) + 1
 
-/** How many mm of two faces lie on each other, in plan. */
-const sharedMm = (a: Segment, b: Segment): number => {
+/** Where along a's side two faces lie on each other in plan, with no more than the gap between; null where they do not. */
+const sharedRange = (a: Segment, b: Segment): [number, number] | null => {
   const run = sub2(a.to, a.from)
   const size = Math.hypot(run.x, run.y)
-  if (size < leastBearingMm) return 0
+  if (size < leastBearingMm) return null
   const dir = { x: run.x / size, y: run.y / size }
   const across = left2(dir)
   const s = dot2(dir, sub2(b.from, a.from))
   const t = dot2(dir, sub2(b.to, a.from))
-  const low = Math.max(0, Math.min(s, t))
-  const high = Math.min(size, Math.max(s, t))
-  if (high - low < leastBearingMm) return 0
-  // off plane where they overlap, since a long face reaches far beyond the cut
+  let low = Math.max(0, Math.min(s, t))
+  let high = Math.min(size, Math.max(s, t))
+  if (high - low < leastBearingMm) return null
+  // b's distance off a's plane runs straight from one end of b to the other
   const offFrom = dot2(across, sub2(b.from, a.from))
-  const offTo = dot2(across, sub2(b.to, a.from))
-  const off = (at: number) => Math.abs(offFrom + ((offTo - offFrom) * (at - s)) / (t - s))
-  return Math.max(off(low), off(high)) > bearingGapMm ? 0 : high - low
+  const slope = (dot2(across, sub2(b.to, a.from)) - offFrom) / (t - s)
+  const ends = [bearingGapMm, -bearingGapMm].map((gap) => s + (gap - offFrom) / slope)
+  if (Math.abs(slope) > 1e-9) {
+    low = Math.max(low, Math.min(...ends))
+    high = Math.min(high, Math.max(...ends))
+  } else if (Math.abs(offFrom) > bearingGapMm) return null
+  return high - low < leastBearingMm ? null : [low, high]
+}
+
+/** Top and underside of a piece over a point of the plan, but for the common height over plate. */
+const heights = (piece: Piece, p: Point2): [number, number] => {
+  const off = sub2(p, piece.foot)
+  const centre = piece.foot.z - piece.dropMm + dot2(off, piece.dir) * piece.tan
+  const aside = dot2(off, piece.left)
+  const fall = aside > 0 ? piece.fall.left : piece.fall.right
+  const top = piece.backed ? centre - fall * Math.abs(aside) : centre
+  return [centre - piece.section.depthMm / piece.cos, top]
+}
+
+/** Area on which two faces bear, mm²: their shared run in plan times the height they share. */
+const bearingMm2 = (pieces: readonly Piece[], own: Segment, other: Segment): number => {
+  const range = sharedRange(own, other)
+  if (range === null) return 0
+  const [a, b] = [at(pieces, own.piece), at(pieces, other.piece)]
+  const run = sub2(own.to, own.from)
+  const size = Math.hypot(run.x, run.y)
+  const heightAt = (mm: number): number => {
+    const p = add2(own.from, scale2(run, mm / size))
+    const [lowA, topA] = heights(a, p)
+    const [lowB, topB] = heights(b, p)
+    return Math.max(0, Math.min(topA, topB) - Math.max(lowA, lowB))
+  }
+  const [low, high] = range
+  const mean = (heightAt(low) + 4 * heightAt((low + high) / 2) + heightAt(high)) / 6
+  return (high - low) * mean
 }
 
 /** Pieces that a piece's cut bears on, most bearing first: `mayBear` says who was placed before it. */
 export const bearings = (
+  pieces: readonly Piece[],
   segments: readonly Segment[],
   piece: Piece,
   end: PieceEnd,
@@ -58,8 +91,8 @@ export const bearings = (
   const sums = new Map<number, number>()
   for (const other of segments) {
     if (other.piece === piece.id || !isNear(own, other) || !mayBear(other.piece)) continue
-    const shared = sharedMm(own, other)
-    if (shared > leastBearingMm) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
+    const shared = bearingMm2(pieces, own, other)
+    if (shared > 0) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
   }
   return [...sums].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([id]) => id)
 }

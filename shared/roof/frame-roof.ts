@@ -31,7 +31,7 @@ const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
       const mate = list[cut.listed]?.mitreWith ?? null
       const own = placedAt(piece.id, cut.end)
       const mayBear = (other: number) => other === mate || placedAt(other, null) < own
-      return bearings(segments, piece, cut.end, cut.listed, mayBear)
+      return bearings(pieces, segments, piece, cut.end, cut.listed, mayBear)
     }),
   )
 }

@@ -4,10 +4,9 @@ import { bodyDirection, endJobs, inLineRad, phases, turn } from './joint-phases.
 import type { EndJob } from './joint-phases.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
-import { at } from './slopes.ts'
 import { halfObstacle, trimEnd } from './trim.ts'
 import type { Obstacle } from './trim.ts'
-import { add2, dot2, length2, scale2, sub2 } from './vector.ts'
+import { add2, distance2, dot2, length2, scale2, sub2 } from './vector.ts'
 
 type State = { pieces: Piece[]; jobs: EndJob[]; placed: EndJob[]; obstacles: Obstacle[] }
 
@@ -37,13 +36,17 @@ const cutsOfEnd = (ground: Ground, job: EndJob, state: State): PlanCut[] => {
     const crown = jobs.find(isCrown)?.piece ?? null
     return [brokenFootCut(job.piece, crown, sidesAt(job.piece, pieces))]
   }
-  return trimEnd(job.piece, job.end, obstacles, distinct(mitres(ground, job, jobs, placed)))
+  return trimEnd(job.piece, job.end, obstacles, distinct(mitres(job, jobs, placed)))
 }
 
+/** Pieces of one joint that end further apart than this do not share a mitre: the later one butts. */
+const oneHeadMm = 1
+
+const meets = ({ piece, end }: EndJob): Point2 => (end === 'head' ? piece.head : piece.foot)
+
 /** Plumb planes between a piece and those of its own phase next to it round the joint. */
-const mitres = (ground: Ground, job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
+const mitres = (job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
   if (job.joint === null) return []
-  const joint = at(ground.joints.joints, job.joint)
   const own = bodyDirection(job.piece, job.end)
   const round = [...placed, ...jobs.filter((j) => j.phase === job.phase)].filter(
     (j) => j.joint === job.joint && j.piece !== job.piece,
@@ -58,13 +61,14 @@ const mitres = (ground: Ground, job: EndJob, jobs: EndJob[], placed: EndJob[]): 
       null,
     )
     if (next === null || next.phase !== job.phase || angle(next) > Math.PI + inLineRad) return []
+    if (distance2(meets(job), meets(next)) > oneHeadMm) return []
     const half = angle(next) / 2
     const cos = Math.cos(half)
     const sin = sign * Math.sin(half)
     // along the mitre, out of the joint, then square to it on the far side of the piece
     const line = { x: own.x * cos - own.y * sin, y: own.x * sin + own.y * cos }
     const normal = sign === 1 ? { x: -line.y, y: line.x } : { x: line.y, y: -line.x }
-    return [{ point: joint.point, normal, mitreWith: next.piece.id }]
+    return [{ point: meets(job), normal, mitreWith: next.piece.id }]
   })
 }
 
