@@ -4,7 +4,7 @@ import { add2, cross2, dot2, length2, scale2 } from './vector.ts'
 
 /** Side rafters nearer than this (cosine) to square with their broken hip stand to it as commons to a ridge. */
 const squareSideCos = 0.35
-/** A side rafter on the crown end stands at least this far off the side of the broken hip that bends away. */
+/** Where timbers part at a slant beside a joint they stand at least this far apart, so that one clear face bears. */
 const clearStepMm = 1.5
 
 /** The rafters of a broken hip's own two slopes that meet it at its foot. */
@@ -42,7 +42,9 @@ const pastSquareSides = (broken: Piece, crown: Piece | null, sides: Piece[]): nu
       (mm) => (side.halfMm + mm * towardsFoot) / aside,
     )
   })
-  return Math.max(...sides.map((side) => side.halfMm), ...reaches)
+  const half = Math.max(...sides.map((side) => side.halfMm))
+  const inSquare = sides.every((side) => Math.abs(dot2(side.dir, broken.dir)) < 1e-6)
+  return inSquare ? half : Math.max(half, ...reaches) + clearStepMm
 }
 
 /**
