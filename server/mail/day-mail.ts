@@ -19,6 +19,7 @@ export type DayMailBooking = {
   siteContact: string
   crewNotes: string
   who: string[]
+  cautions: string[]
   roof: { spec: FrameSpec; options: MarkingOptions; plates: CrewDaySheet['plates'] } | null
 }
 
@@ -94,6 +95,7 @@ export function readDayMail(
       siteContact: siteContactFor(person.role, sheet.job),
       crewNotes: sheet.job.crewNotes,
       who: sheet.roster.filter((member) => !member.onLeave).map((member) => member.name),
+      cautions: [...new Set(sheet.cautions.map(({ text, remedy }) => `${text} ${remedy}`.trim()))],
       roof: roofOf(firm, sheet),
     }
   })

@@ -1,5 +1,7 @@
+import { eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
-import { plateChecks } from '../../server/db/tables/job-tables.ts'
+import { tasks } from '../../server/db/tables/booking-tables.ts'
+import { plateChecks, roofRevisions } from '../../server/db/tables/job-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { createMailYard, type MailYard } from './support/mail-yard.ts'
 
@@ -115,4 +117,51 @@ test('what somebody typed stays text in the HTML part, and nothing is loaded fro
     /<[^>]+\s(src|srcset|background)=|<(link|style|iframe)|@import|url\(/,
   )
   expect(mail.text).toContain('<img src="http://elsewhere.example/x"> & "sons"')
+})
+
+test('what was cut the day before and is stood today has its numbers again', async () => {
+  const yard = await createMailYard()
+  yard.book(['2026-12-02', '2026-12-03'])
+  const mail = await sentReminder(yard, yard.lead.email)
+  expect(mail.text).not.toContain('To cut')
+  for (const line of yard.revision.spec.cutLines)
+    expect(mail.text).toMatch(
+      new RegExp(`Stand ${line.mark} .*\\n  Cut length ${Math.round(line.cutLengthMm)} mm`),
+    )
+})
+
+test('a part of a line names its pieces and the hands they are', async () => {
+  const yard = await createMailYard()
+  yard.book(['2026-12-03'])
+  const line = yard.revision.spec.cutLines.find((one) => one.left > 0 && one.right > 0)!
+  const pieces = line.members.slice(0, 3)
+  const left = yard.revision.spec.members.filter(
+    (one) => pieces.includes(one.mark) && one.hand === 'left',
+  ).length
+  for (const task of yard.db
+    .select()
+    .from(tasks)
+    .all()
+    .filter((one) => one.cutLineMark === line.mark))
+    yard.db
+      .update(tasks)
+      .set({ memberMarks: pieces, quantity: 3 })
+      .where(eq(tasks.id, task.id))
+      .run()
+  const mail = await sentReminder(yard, yard.lead.email)
+  expect(mail.text).toContain(`(${pieces.join(', ')}; ${line.quantity} in all)`)
+  if (left > 0) expect(mail.text).toContain(`x3: ${left} left`)
+})
+
+test('a caution that touches several lines is said once', async () => {
+  const yard = await createMailYard()
+  yard.book(['2026-12-03'])
+  const caution = { code: 'past-saw', text: 'Past the saw.', remedy: 'Finish by hand.' } as const
+  const spec = {
+    ...yard.revision.spec,
+    cautions: [{ ...caution, members: yard.revision.spec.members.map((one) => one.mark) }],
+  }
+  yard.db.update(roofRevisions).set({ spec }).where(eq(roofRevisions.id, yard.revision.id)).run()
+  const mail = await sentReminder(yard, yard.lead.email)
+  expect(mail.text.split('Past the saw. Finish by hand.')).toHaveLength(2)
 })

@@ -5,6 +5,7 @@ import {
   markingCardOf,
   workAtHeight,
 } from '../../../shared/marking/marking-card.ts'
+import { shareWords } from '../../../shared/marking/role-words.ts'
 import type { DayMail, DayMailBooking } from '../day-mail.ts'
 import type { ToldLine } from '../told-day.ts'
 import type { MailBlock } from './mail-document.ts'
@@ -16,9 +17,10 @@ export const platesNotMeasured = 'From plan, plates not measured'
 const orderOfWork = { cut: 'Cut', stand: 'Stand', 'set-out': 'Set out' } as const
 
 /** What of the line is due today: all of it, or these pieces. */
-function shareWords(line: ToldLine, card: MarkingCard): string {
+function dueWords(line: ToldLine, card: MarkingCard, roof: Roof): string {
   if (line.quantity === card.quantity) return card.quantityWords
-  return `x${line.quantity} of ${card.quantity}: ${line.members.join(', ')}`
+  const share = shareWords(roof.spec.members, line.members)
+  return `${share} (${line.members.join(', ')}; ${card.quantity} in all)`
 }
 
 /** A task may name a line that the roof has lost; the rest of the mail still goes. */
@@ -26,8 +28,8 @@ function isInRoof(line: ToldLine, roof: Roof): boolean {
   return roof.spec.cutLines.some((one) => one.mark === line.mark)
 }
 
-function lineTitle(line: ToldLine, card: MarkingCard): string {
-  return `${orderOfWork[line.work]} ${card.mark} ${card.name} ${card.section}, ${shareWords(line, card)}`
+function lineTitle(line: ToldLine, card: MarkingCard, roof: Roof): string {
+  return `${orderOfWork[line.work]} ${card.mark} ${card.name} ${card.section}, ${dueWords(line, card, roof)}`
 }
 
 function cardFor(line: ToldLine, roof: Roof): MarkingCard {
@@ -36,9 +38,12 @@ function cardFor(line: ToldLine, roof: Roof): MarkingCard {
 
 function lineCard(line: ToldLine, roof: Roof): MailBlock {
   const card = cardFor(line, roof)
-  const numbers = markingCardLines(card).slice(1)
-  const cautions = card.warnings.map((warning) => `Caution: ${warning.text} ${warning.remedy}`)
-  return { kind: 'card', title: lineTitle(line, card), lines: [...numbers, ...cautions] }
+  return {
+    kind: 'card',
+    title: lineTitle(line, card, roof),
+    // The first names the line, as the title does.
+    lines: markingCardLines(card).slice(1),
+  }
 }
 
 /** What was cut the same day has its numbers above; what was cut before gets them again. */
@@ -49,7 +54,7 @@ function standBlocks(toStand: ToldLine[], toCut: ToldLine[], roof: Roof): MailBl
   const others = toStand.filter((line) => !cutToday.has(line.mark))
   const list: MailBlock[] = [
     { kind: 'paragraph', text: 'Cut the same day, numbers above:' },
-    { kind: 'list', items: above.map((line) => lineTitle(line, cardFor(line, roof))) },
+    { kind: 'list', items: above.map((line) => lineTitle(line, cardFor(line, roof), roof)) },
   ]
   return [
     { kind: 'subheading', text: 'To stand' },
@@ -72,6 +77,15 @@ function platesBlocks({ plates }: Roof): MailBlock[] {
       kind: 'caution',
       text: `The plates were measured and ${lengths} off plan. Look at the check before you cut.`,
     },
+  ]
+}
+
+/** Each said once, for several lines may share it. */
+function cautionBlocks({ cautions }: DayMailBooking): MailBlock[] {
+  if (cautions.length === 0) return []
+  return [
+    { kind: 'subheading', text: 'Take care' },
+    { kind: 'list', items: cautions },
   ]
 }
 
@@ -102,7 +116,7 @@ function workBlocks(booking: DayMailBooking): MailBlock[] {
       ...toCut.map((line) => lineCard(line, roof)),
     )
   }
-  blocks.push(...standBlocks(toStand, toCut, roof))
+  blocks.push(...standBlocks(toStand, toCut, roof), ...cautionBlocks(booking))
   const lost = booking.lines.filter((line) => line.mark !== null && !isInRoof(line, roof))
   if (lost.length > 0)
     blocks.push({
