@@ -11,7 +11,7 @@ import { BookingFields, CrewField } from './booking-fields.tsx'
 import { conflictOf, useCancelBooking, useCreateBooking } from './calendar-queries.ts'
 import { ClashAnswer, type OnPurpose } from './clash-answer.tsx'
 import { FormFailure, issuesOf } from './form-failure.tsx'
-import { workWords } from './unbooked-list.tsx'
+import { workWords } from './work-words.ts'
 
 type Props = {
   jobs: readonly UnbookedJob[]

@@ -28,7 +28,7 @@ function LoadBar({ planned, there }: { planned: number; there: number }) {
 
 export function cellClass(state: BookingState): string {
   const border = state === 'firm' ? 'border-solid border-ink' : 'border-dashed border-ink-soft'
-  return `block rounded-md border-2 bg-sheet p-1.5 text-left text-sm leading-snug text-ink ${border}`
+  return `block rounded-md border-2 bg-sheet text-left leading-snug text-ink ${border}`
 }
 
 /** One day of a booking: the roof's shape, whose it is, what the day holds, and its hours. */
@@ -36,7 +36,7 @@ export function BookingCell({ booking, day }: { booking: CalendarBooking; day: C
   const length = day.day === booking.lastDay ? lengthWords(booking) : null
   return (
     <span className="block space-y-1">
-      <span className="flex items-center gap-1.5">
+      <span className="flex flex-wrap items-center gap-x-1.5">
         {booking.glyph ? <RoofGlyph glyph={booking.glyph} sizePx={30} /> : null}
         <CrewPennant {...booking.crew} />
         <StateMark state={booking.state} />

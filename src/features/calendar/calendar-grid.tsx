@@ -47,7 +47,7 @@ const shownOf = (props: Record<string, unknown>): Shown => props as Shown
 function EventCell({ event }: EventContentArg) {
   const { booking, day } = shownOf(event.extendedProps)
   return (
-    <span className={cellClass(booking.state)}>
+    <span className={`${cellClass(booking.state)} p-1.5 text-sm`}>
       <BookingCell booking={booking} day={day} />
     </span>
   )
@@ -101,6 +101,7 @@ export function CalendarGrid(props: Props) {
         drop={dropJob}
         dragScroll
         longPressDelay={400}
+        dayHeaderContent={({ date, text }) => (view === 'week' ? formatDay(dayOf(date)) : text)}
         dayCellClassNames={({ date }) =>
           whyNotWorked(calendar, dayOf(date)) ? ['day-not-worked'] : []
         }

@@ -50,7 +50,7 @@ export function DayList({ calendar, view, mayEdit, from, to }: Props) {
                 <li key={bookedDay.id}>
                   <Link
                     to={`/calendar/bookings/${booking.id}${searchWith(search, {})}`}
-                    className={`${cellClass(booking.state)} p-3 text-base`}
+                    className={`${cellClass(booking.state)} p-3`}
                   >
                     <BookingCell booking={booking} day={bookedDay} />
                   </Link>

@@ -4,22 +4,11 @@ import { useEffect, useRef } from 'react'
 import { Link, useSearchParams } from 'react-router-dom'
 import type { CalendarCrew, UnbookedJob } from '../../../shared/bookings/calendar-schemas.ts'
 import { formatDay } from '../../../shared/calendar/days.ts'
-import { formatHours } from '../../../shared/labour/format-hours.ts'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
 import { searchWith } from './calendar-address.ts'
+import { workWords } from './work-words.ts'
 
 type Props = { jobs: readonly UnbookedJob[]; crews: readonly CalendarCrew[]; mayDrag: boolean }
-
-/** '23 h: 2 days for P, 3 for R'. */
-export function workWords(job: UnbookedJob, crews: readonly CalendarCrew[]): string {
-  if (job.workMinutes === null) return 'No roof issued yet'
-  const parts = crews.flatMap((crew) => {
-    const days = job.crewDays.find((c) => c.crewId === crew.id)?.days
-    return days ? [`${days} ${days === 1 ? 'day' : 'days'} for ${crew.name}`] : []
-  })
-  const hours = `${formatHours(job.workMinutes)} of work`
-  return parts.length > 0 ? `${hours}: ${parts.join(', ')}` : hours
-}
 
 /** Jobs won without a booking; dragged onto a day, or booked by their link. */
 export function UnbookedList({ jobs, crews, mayDrag }: Props) {
