@@ -96,18 +96,24 @@ function checkCut(complain: Complain, piece: Piece, sawn: SawnPlane, others: Pie
     if (listed.includes(b.mark) || b.buttsBack || b.touchMm2 < aside) continue
     say(`its ${cut.end} cut bears on it unsaid, mm²`, b.areaMm2, b.mark)
   }
-  if (cut.against === null || bearings.length === 0) return
-  const most = bearings[0]!
-  const first = bearings.find((b) => b.mark === cut.against)
-  if (first !== undefined && most.areaMm2 - first.areaMm2 > SPECK_MM2) {
+  if (cut.against === null) {
+    const free = cut.end !== 'head' || piece.member.role === 'ridge'
+    return free ? undefined : say('its head cut is said to bear on nothing', 0)
+  }
+  const named = bearings.filter((b) => listed.includes(b.mark))
+  const [most] = bearings
+  const first = named.find((b) => b.mark === cut.against)
+  if (most === undefined || first === undefined) return
+  // What only stands behind a corner of the face, in no joint with it, is a void and not a gap.
+  if (named.some((b) => b.areaMm2 - first.areaMm2 > aside)) {
     say(
       `its ${cut.end} cut has more bearing on it than on ${cut.against}, mm²`,
       most.areaMm2,
       most.mark,
     )
   }
-  const opening = openingMm(face, bearings)
-  if (opening > CLOSE_MM) say(`its ${cut.end} joint stands open, mm`, opening, most.mark)
+  const opening = openingMm(face, named)
+  if (opening > CLOSE_MM) say(`its ${cut.end} joint stands open, mm`, opening, first.mark)
 }
 
 /** Every cut that butts: closed within 0.2 mm over its bearing face, and on the pieces it names. */
