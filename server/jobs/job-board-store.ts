@@ -46,10 +46,10 @@ function visibleDays(viewer: Viewer): SQL {
 
 function hasCrew(viewer: Viewer, crewId: string | undefined): SQL {
   if (!crewId) return sql`1 = 1`
-  return sql`exists (
-    select 1 from bookings join booking_days on booking_days.booking_id = bookings.id
-    where bookings.job_id = jobs.id and bookings.cancelled_at is null
-      and bookings.crew_id = ${crewId} and ${visibleDays(viewer)})`
+  // Not `exists`: for each job that would walk all of the crew's bookings.
+  return sql`jobs.id in (
+    select bookings.job_id from bookings join booking_days on booking_days.booking_id = bookings.id
+    where bookings.cancelled_at is null and bookings.crew_id = ${crewId} and ${visibleDays(viewer)})`
 }
 
 /** Jobs found, each with its stage and what orders it within that. */

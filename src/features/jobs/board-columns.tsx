@@ -42,10 +42,7 @@ function StageColumn({ stage, cards, count, onShowAll }: ColumnProps) {
         className={`min-h-0 gap-2 py-2 lg:flex lg:flex-1 lg:flex-col lg:overflow-y-auto lg:pr-1 ${open ? 'grid sm:grid-cols-2' : 'hidden'}`}
       >
         {cards.map((card) => (
-          <li
-            key={card.id}
-            className="[contain-intrinsic-size:auto_9rem] [content-visibility:auto]"
-          >
+          <li key={card.id}>
             <JobCard card={card} />
           </li>
         ))}

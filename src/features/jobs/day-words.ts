@@ -6,8 +6,13 @@ export function dayText(day: Day, today: Day): string {
   return day.slice(0, 4) === today.slice(0, 4) ? formatDay(day) : formatDayWithYear(day)
 }
 
+/** A day stays on one line. */
+function unbroken(text: string): string {
+  return text.replaceAll(' ', '\u00a0')
+}
+
 /** 'Thu 4 Dec' or 'Thu 4 Dec to Mon 8 Dec'. */
 export function bookingDaysText({ startsOn, endsOn }: JobBooking, today: Day): string {
-  if (startsOn === endsOn) return dayText(startsOn, today)
-  return `${formatDay(startsOn)} to ${dayText(endsOn, today)}`
+  if (startsOn === endsOn) return unbroken(dayText(startsOn, today))
+  return `${unbroken(formatDay(startsOn))} to ${unbroken(dayText(endsOn, today))}`
 }

@@ -1,11 +1,11 @@
 import { CircleAlert } from 'lucide-react'
 import { Link } from 'react-router-dom'
-import { jobMissingWords } from '../../../shared/jobs/job-missing.ts'
 import type { JobCard as Card } from '../../../shared/jobs/job-views.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
 import { useSession } from '../../lib/session.ts'
 import { bookingDaysText, dayText } from './day-words.ts'
+import { missingText } from './missing-text.ts'
 import { NoRoofGlyph } from './no-roof-glyph.tsx'
 
 const glyphPx = 40
@@ -71,7 +71,7 @@ export function JobCard({ card }: { card: Card }) {
         {card.missing.length > 0 ? (
           <span className="flex items-start gap-1.5 text-ochre">
             <CircleAlert size={16} aria-hidden className="mt-0.5 shrink-0" />
-            <span>{card.missing.map((kind) => jobMissingWords[kind]).join(' · ')}</span>
+            <span>{missingText(card.missing)}</span>
           </span>
         ) : null}
       </span>

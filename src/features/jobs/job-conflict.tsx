@@ -37,7 +37,7 @@ export function JobConflict({ current, base, values, busy, onSaveOver, onTakeThe
   return (
     <Note kind="caution" title="Somebody else changed this job since you opened it">
       {differing.length > 0 ? (
-        <dl className="my-2 space-y-2">
+        <dl className="my-2 max-h-[40vh] space-y-2 overflow-y-auto">
           {differing.map((name) => (
             <div key={name}>
               <dt className="font-semibold">{jobFieldLabels[name]}</dt>

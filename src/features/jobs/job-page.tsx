@@ -1,7 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { ArrowLeft, CircleAlert, Pencil } from 'lucide-react'
 import { Link, Outlet, useParams } from 'react-router-dom'
-import { jobMissingWords } from '../../../shared/jobs/job-missing.ts'
 import { jobStageNames } from '../../../shared/jobs/job-stage.ts'
 import type { JobView } from '../../../shared/jobs/job-views.ts'
 import { ApiFailure } from '../../lib/api-client.ts'
@@ -18,6 +17,7 @@ import { JobContactsCard } from './job-contacts-card.tsx'
 import { jobQueries } from './job-queries.ts'
 import { JobRoofCard } from './job-roof-card.tsx'
 import { JobStageCard } from './job-stage-card.tsx'
+import { missingText } from './missing-text.ts'
 
 function BackToBoard() {
   return (
@@ -36,7 +36,7 @@ function Missing({ job }: { job: JobView }) {
   return (
     <p className="mb-4 flex items-start gap-2 font-semibold text-ochre">
       <CircleAlert size={20} aria-hidden className="mt-0.5 shrink-0" />
-      <span>{job.missing.map((kind) => jobMissingWords[kind]).join(' · ')}</span>
+      <span>{missingText(job.missing)}</span>
     </p>
   )
 }
