@@ -80,7 +80,7 @@ export function markingCardOf(
     memberMarks: line.members,
     drawnMark: member.mark,
     handWords: handWords(line, member),
-    cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to longest point'),
+    cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to point'),
     setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
     further: furtherFigures(member, options),
     pitchText: angleText(member.pitchDeg, options),
@@ -116,9 +116,7 @@ function handWords(line: CutLine, member: Member): string {
 }
 
 function setOutNote(member: Member): string {
-  const base = tapeBase(member)
-  if (member.role === 'ridge') return 'node to node, nothing deducted'
-  return `${base} to the centre of what the head meets, nothing deducted`
+  return member.role === 'ridge' ? 'node to node' : `${tapeBase(member)} to centre, nothing off`
 }
 
 function figureWords(figure: MarkingFigure, note = false): string {

@@ -1,6 +1,7 @@
 import { cutOneFirst, type MarkingCard } from '../../shared/marking/marking-card.ts'
 import type { Member } from '../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
+import { Fold } from '../ui/fold.tsx'
 import { Note } from '../ui/states.tsx'
 import { MarkingNumbers } from './marking-numbers.tsx'
 import { TimberDrawing } from './timber-drawing.tsx'
@@ -33,23 +34,24 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
           <TimberDrawing member={member} units={units} />
         </div>
       ) : null}
-      <details className="border-t border-rule pt-2">
-        <summary className="flex min-h-14 items-center font-semibold">Further numbers</summary>
-        <dl className="grid grid-cols-2 gap-x-4 gap-y-1 text-base">
-          {card.further.map((figure) => (
-            <div key={figure.label}>
-              <dt className="inline">{figure.label} </dt>
-              <dd className="inline font-extrabold tabular-nums">
-                {figure.text} {figure.unit}
-              </dd>
+      <div className="border-t border-rule">
+        <Fold title="Further numbers">
+          <dl className="grid grid-cols-2 gap-x-4 gap-y-1 text-base">
+            {card.further.map((figure) => (
+              <div key={figure.label}>
+                <dt className="inline">{figure.label} </dt>
+                <dd className="inline font-extrabold tabular-nums">
+                  {figure.text} {figure.unit}
+                </dd>
+              </div>
+            ))}
+            <div>
+              <dt className="inline">Pitch </dt>
+              <dd className="inline font-extrabold tabular-nums">{card.pitchText}</dd>
             </div>
-          ))}
-          <div>
-            <dt className="inline">Pitch </dt>
-            <dd className="inline font-extrabold tabular-nums">{card.pitchText}</dd>
-          </div>
-        </dl>
-      </details>
+          </dl>
+        </Fold>
+      </div>
     </div>
   )
 }

@@ -1,5 +1,9 @@
 import type { MarkingCard } from '../../shared/marking/marking-card.ts'
-import { cutsSawnAlike, type MarkingEnd } from '../../shared/marking/marking-cuts.ts'
+import {
+  cutsSawnAlike,
+  type MarkingCut,
+  type MarkingEnd,
+} from '../../shared/marking/marking-cuts.ts'
 import {
   type MarkingBevel,
   type MarkingFigure,
@@ -48,6 +52,15 @@ export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: strin
   )
 }
 
+/** What the bevels below do not say by themselves. */
+function CutName({ name, cut }: { name: string; cut: MarkingCut }) {
+  const kind = cut.kind === 'plumb cut' ? '' : cut.kind
+  const across = cut.edge || cut.kind === 'square cut' ? '' : 'square across the top'
+  const words = [name, kind, across].filter(Boolean).join(', ')
+  if (words === '') return null
+  return <p className="text-base font-semibold">{words.charAt(0).toUpperCase() + words.slice(1)}</p>
+}
+
 function EndNumbers({ end }: { end: MarkingEnd }) {
   return (
     <div className="border-t border-rule pt-3">
@@ -59,11 +72,7 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
       </dl>
       {cutsSawnAlike(end).map(({ name, first, cuts }) => (
         <div key={name} className="mt-2">
-          <p className="text-base">
-            {[name, first.kind, first.edge ? '' : 'square across the top']
-              .filter(Boolean)
-              .join(', ')}
-          </p>
+          <CutName name={name} cut={first} />
           <dl className="space-y-1">
             {first.kind === 'square cut' ? null : <BevelView bevel={first.face} />}
             {first.edge ? (
@@ -98,11 +107,24 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
   )
 }
 
+/** The two lengths that are asked for first, and where the head is. */
+export function MainNumbers({ card }: { card: MarkingCard }) {
+  const head = card.ends.find((end) => end.end === 'head')
+  return (
+    <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
+      <FigureView figure={card.cutLength} isMain />
+      <FigureView figure={card.setOutLength} isMain />
+      {head?.points.map((point) => (
+        <FigureView key={point.label} figure={point} />
+      ))}
+    </dl>
+  )
+}
+
 /** Every number of a marking card, the ones the saw waits for first and largest. */
 export function MarkingNumbers({ card }: { card: MarkingCard }) {
   // The head is measured to from the heel line before the tail is.
   const ends = [...card.ends].reverse()
-  const mouth = card.birdsmouth
   return (
     <div className="space-y-3">
       <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
@@ -112,21 +134,7 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
       {ends.map((end) => (
         <EndNumbers key={end.end} end={end} />
       ))}
-      {mouth ? (
-        <div className="border-t border-rule pt-3">
-          <p className="mb-1 text-base font-extrabold">Birdsmouth</p>
-          <dl className="grid grid-cols-2 gap-x-4 gap-y-2 sm:grid-cols-3">
-            {mouth.figures.map((figure) => (
-              <FigureView key={figure.label} figure={figure} />
-            ))}
-          </dl>
-          <dl className="mt-2 space-y-1">
-            {mouth.bevels.map((bevel) => (
-              <BevelView key={bevel.label} bevel={bevel} />
-            ))}
-          </dl>
-        </div>
-      ) : null}
+      <BirdsmouthNumbers card={card} />
       {card.backing.length > 0 || card.drop ? (
         <dl className="space-y-1 border-t border-rule pt-3">
           {card.backing.map((bevel) => (
@@ -135,6 +143,26 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
           {card.drop ? <FigureView figure={card.drop} /> : null}
         </dl>
       ) : null}
+    </div>
+  )
+}
+
+function BirdsmouthNumbers({ card }: { card: MarkingCard }) {
+  const mouth = card.birdsmouth
+  if (!mouth) return null
+  return (
+    <div className="border-t border-rule pt-3">
+      <p className="mb-1 text-base font-extrabold">Birdsmouth</p>
+      <dl className="grid grid-cols-2 gap-x-4 gap-y-2 sm:grid-cols-3">
+        {mouth.figures.map((figure) => (
+          <FigureView key={figure.label} figure={figure} />
+        ))}
+      </dl>
+      <dl className="mt-2 space-y-1">
+        {mouth.bevels.map((bevel) => (
+          <BevelView key={bevel.label} bevel={bevel} />
+        ))}
+      </dl>
     </div>
   )
 }

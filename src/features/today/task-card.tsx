@@ -6,12 +6,13 @@ import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
 import { shareWords } from '../../../shared/marking/role-words.ts'
 import { CardRemarks } from '../../drawings/marking-card-view.tsx'
-import { MarkingNumbers } from '../../drawings/marking-numbers.tsx'
+import { MainNumbers, MarkingNumbers } from '../../drawings/marking-numbers.tsx'
 import { useMay } from '../../lib/session.ts'
 import { useTicks } from '../../lib/use-ticks.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
+import { Fold } from '../../ui/fold.tsx'
 import { TaskControls } from './task-controls.tsx'
 
 type Props = {
@@ -23,6 +24,8 @@ type Props = {
   /** The numbers of this line stand further up on the page. */
   numbersAbove: boolean
 }
+
+type NumbersProps = { task: DayTask; card: MarkingCard; numbersAbove: boolean }
 
 const workWords = { 'set-out': 'Set out', cut: 'Cut', stand: 'Stand' } as const
 
@@ -87,13 +90,7 @@ export function TaskCard({ task, roof, roster, place, numbersAbove }: Props) {
           {task.memberMarks.join(', ')}. {card.handWords}
         </p>
       ) : null}
-      {card && numbersAbove ? <p className="mt-1 font-semibold">Numbers as above.</p> : null}
-      {card && !numbersAbove ? (
-        <div className="mt-3 space-y-3">
-          <CardRemarks card={card} />
-          <MarkingNumbers card={card} />
-        </div>
-      ) : null}
+      {card ? <TaskNumbers task={task} card={card} numbersAbove={numbersAbove} /> : null}
       <div className="mt-3 space-y-3 border-t border-rule pt-3">
         {mayOrder ? (
           <>
@@ -113,6 +110,26 @@ export function TaskCard({ task, roof, roster, place, numbersAbove }: Props) {
         )}
       </div>
     </article>
+  )
+}
+
+/** To cut: every number. To stand, when done or said above: the lengths, the rest a tap away. */
+function TaskNumbers({ task, card, numbersAbove }: NumbersProps) {
+  const isFull = task.work === 'cut' && !numbersAbove && !isDone(task)
+  return (
+    <div className="mt-3 space-y-3">
+      <CardRemarks card={card} />
+      {isFull ? (
+        <MarkingNumbers card={card} />
+      ) : (
+        <>
+          <MainNumbers card={card} />
+          <Fold title="All numbers">
+            <MarkingNumbers card={card} />
+          </Fold>
+        </>
+      )}
+    </div>
   )
 }
 
