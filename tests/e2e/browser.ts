@@ -60,11 +60,11 @@ export type Visitor = {
 
 type Look = { viewport?: { width: number; height: number }; dark?: boolean }
 
-/** Somebody with a browser of their own; signed in when an address is given. */
+/** Somebody with a browser of their own; signed in when told as whom. */
 export async function visit(
   browser: Browser,
   url: string,
-  email?: string,
+  signIn?: { email: string; password?: string },
   look: Look = {},
 ): Promise<Visitor> {
   const context = await browser.newContext({
@@ -81,10 +81,10 @@ export async function visit(
   page.on('console', (message) => {
     if (message.type() === 'error') complaints.push(`console: ${message.text()}`)
   })
-  if (email) {
+  if (signIn) {
     await page.goto('/sign-in')
-    await page.getByLabel('E-mail').fill(email)
-    await page.getByLabel('Password').fill(testPassword)
+    await page.getByLabel('E-mail').fill(signIn.email)
+    await page.getByLabel('Password').fill(signIn.password ?? testPassword)
     await page.getByRole('button', { name: 'Sign in' }).click()
     await page.getByRole('main').waitFor()
     await page.waitForURL((address) => !address.pathname.startsWith('/sign-in'))

@@ -1,0 +1,52 @@
+import { AxeBuilder } from '@axe-core/playwright'
+import type { Browser } from '@playwright/test'
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import { desk, launchBrowser, phone, visit } from './browser.ts'
+import { demoSignIn, serveDemo } from './demo.ts'
+import { screensOf } from './screen-list.ts'
+
+let browser: Browser
+let app: Awaited<ReturnType<typeof serveDemo>>
+
+beforeAll(async () => {
+  browser = await launchBrowser()
+  app = await serveDemo()
+})
+afterAll(async () => {
+  await browser.close()
+  await app.close()
+})
+
+const looks = [
+  { name: 'on a phone, light', viewport: phone, dark: false },
+  { name: 'at the desk, dark', viewport: desk, dark: true },
+]
+
+test.each(looks)(
+  'axe finds nothing on any screen and none scrolls sideways: $name',
+  { timeout: 300_000 },
+  async (look) => {
+    const screens = screensOf(app, '2026-12-02')
+    const faults: string[] = []
+    for (const who of [...new Set(screens.map((screen) => screen.who))]) {
+      const visitor = await visit(browser, app.url, who ? demoSignIn(who) : undefined, look)
+      for (const { name, path } of screens.filter((screen) => screen.who === who)) {
+        await visitor.goto(path)
+        await visitor.page.waitForLoadState('networkidle')
+        const { violations } = await new AxeBuilder({ page: visitor.page }).analyze()
+        for (const violation of violations) {
+          faults.push(
+            `${name}: ${violation.id} at ${violation.nodes[0]?.target.join(' ')} (${violation.nodes.length})`,
+          )
+        }
+        const overflow = await visitor.page.evaluate(
+          () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+        )
+        if (overflow > 0) faults.push(`${name}: scrolls sideways by ${overflow} px`)
+      }
+      faults.push(...visitor.complaints.map((complaint) => `${who}: ${complaint}`))
+      await visitor.close()
+    }
+    expect(faults).toEqual([])
+  },
+)

@@ -1,0 +1,81 @@
+import { createTransport } from 'nodemailer'
+import { asc, eq } from 'drizzle-orm'
+import { seedDemo } from '../../server/db/demo/seed-demo.ts'
+import { demoPassword } from '../../server/db/demo/demo-people.ts'
+import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
+import { jobs } from '../../server/db/tables/job-tables.ts'
+import { people } from '../../server/db/tables/people-tables.ts'
+import { createFakeMailTransport } from '../../fakes/mail/fake-mail-transport.ts'
+import { createMailWorker } from '../../server/mail/mail-worker.ts'
+import { type ServedApp, serveTestApp } from './browser.ts'
+
+export const demoSignIn = (key: string) => ({
+  email: `${key}@quillback.example`,
+  password: demoPassword,
+})
+
+/** A worker on the served app's own clock and a fake that keeps nothing on disk. */
+export function mailFor(app: ServedApp) {
+  const fake = createFakeMailTransport({ dir: null })
+  const worker = createMailWorker({
+    db: app.db,
+    clock: app.clock,
+    transport: createTransport(fake),
+    appUrl: app.url,
+    mailFrom: app.env.mailFrom,
+    log: app.log,
+    events: app.events,
+  })
+  return { fake, worker }
+}
+
+/** The demo firm on a real port, its reminders sent for the day after. */
+export async function serveDemo(now?: Date) {
+  const app = await serveTestApp(now ? { now } : {})
+  await seedDemo(app.db, app.clock)
+  const mail = mailFor(app)
+  await mail.worker.runOnce()
+  return { ...app, mail }
+}
+
+type Db = ServedApp['db']
+
+export function jobIdOf(db: Db, number: string): string {
+  return db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, number)).get()?.id ?? ''
+}
+
+export function bookingIdOf(db: Db, number: string): string {
+  return (
+    db
+      .select({ id: bookings.id })
+      .from(bookings)
+      .where(eq(bookings.jobId, jobIdOf(db, number)))
+      .get()?.id ?? ''
+  )
+}
+
+export function dayIdOf(db: Db, number: string, day: string): string {
+  const rows = db
+    .select({ id: bookingDays.id, day: bookingDays.day })
+    .from(bookingDays)
+    .where(eq(bookingDays.bookingId, bookingIdOf(db, number)))
+    .all()
+  return rows.find((row) => row.day === day)?.id ?? ''
+}
+
+/** A task of the day that a person was handed. */
+export function taskIdOf(db: Db, email: string, dayId: string): string {
+  const person = db.select({ id: people.id }).from(people).where(eq(people.email, email)).get()
+  const rows = db
+    .select({
+      id: tasks.id,
+      who: tasks.assignedToId,
+      mark: tasks.cutLineMark,
+      position: tasks.position,
+    })
+    .from(tasks)
+    .where(eq(tasks.bookingDayId, dayId))
+    .orderBy(asc(tasks.position))
+    .all()
+  return rows.find((row) => row.who === person?.id && row.mark !== null)?.id ?? ''
+}
