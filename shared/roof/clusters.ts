@@ -1,13 +1,14 @@
 import type { Roof } from './roof-types.ts'
 import type { NodeLine, RoofLines } from './roof-lines.ts'
 import { at } from './slopes.ts'
-import { distance2 } from './vector.ts'
+import { add2, distance2, scale2 } from './vector.ts'
 import type { Point2 } from './roof-types.ts'
 
 /**
  * A joint of the roof: one node, or several so near together that no timber fits between them.
  * `ridge` and `rising` are lines (indexes) that end here and get a member: a ridge, and a broken hip
- * that starts here and climbs on. A joint with neither is an apex.
+ * that starts here and climbs on. A joint with neither is an apex. Its rafters' centre lines all run
+ * through `point`.
  */
 export type Joint = {
   nodes: number[]
@@ -42,6 +43,37 @@ const unite = (owner: number[], a: number, b: number) => {
   })
 }
 
+const middle = (a: Point2, b: Point2): Point2 => scale2(add2(a, b), 0.5)
+
+/** Its ridge's end, the middle of a ridge too short to be one, the foot of what climbs on, or its highest node. */
+const centreOf = (
+  lines: RoofLines,
+  nodes: number[],
+  ridge: NodeLine | undefined,
+  rising: NodeLine | undefined,
+  shortRidge: NodeLine | undefined,
+): Point2 => {
+  const point = (n: number) => at(lines.nodes, n).point
+  if (ridge !== undefined) return point(nodes.includes(ridge.from) ? ridge.from : ridge.to)
+  if (rising !== undefined) return point(rising.from)
+  if (shortRidge !== undefined) return middle(point(shortRidge.from), point(shortRidge.to))
+  return nodes.map(point).reduce((a, b) => (b.z > a.z ? b : a))
+}
+
+const jointOf = (lines: RoofLines, swallowed: ReadonlySet<number>, nodes: number[]): Joint => {
+  const ends = (line: NodeLine) => nodes.includes(line.from) || nodes.includes(line.to)
+  const find = (want: (line: NodeLine, isSwallowed: boolean) => boolean) => {
+    const found = lines.lines.findIndex((line, i) => want(line, swallowed.has(i)))
+    return found < 0 ? null : found
+  }
+  const ridge = find((l, gone) => !gone && l.kind === 'ridge' && ends(l))
+  const rising = find((l, gone) => !gone && l.kind === 'broken-hip' && nodes.includes(l.from))
+  const shortRidge = find((l, gone) => gone && l.kind === 'ridge' && ends(l))
+  const line = (index: number | null) => (index === null ? undefined : at(lines.lines, index))
+  const centre = centreOf(lines, nodes, line(ridge), line(rising), line(shortRidge))
+  return { nodes, point: { x: centre.x, y: centre.y }, ridge, rising }
+}
+
 /** Gathers the nodes of a roof into joints. */
 export const roofJoints = (roof: Roof, lines: RoofLines): Joints => {
   const owner = lines.nodes.map((_, k) => k)
@@ -56,20 +88,8 @@ export const roofJoints = (roof: Roof, lines: RoofLines): Joints => {
   owner.forEach((root, k) => {
     if (root !== k || at(lines.nodes, k).corner !== null) return
     const nodes = owner.flatMap((other, n) => (other === root ? [n] : []))
-    const points = nodes.map((n) => at(lines.nodes, n).point)
-    const mean = (pick: (p: Point2) => number) =>
-      points.reduce((sum, p) => sum + pick(p), 0) / points.length
-    const kept = (want: (line: NodeLine) => boolean) => {
-      const found = lines.lines.findIndex((line, i) => !swallowed.has(i) && want(line))
-      return found < 0 ? null : found
-    }
     nodes.forEach((n) => (ofNode[n] = joints.length))
-    joints.push({
-      nodes,
-      point: { x: mean((p) => p.x), y: mean((p) => p.y) },
-      ridge: kept((l) => l.kind === 'ridge' && (nodes.includes(l.from) || nodes.includes(l.to))),
-      rising: kept((l) => l.kind === 'broken-hip' && nodes.includes(l.from)),
-    })
+    joints.push(jointOf(lines, swallowed, nodes))
   })
   return { joints, ofNode, swallowed }
 }

@@ -33,8 +33,12 @@ export const timberOf = (piece: Piece, standMm: number): Timber => {
     depthMm: piece.section.depthMm,
     sin,
     cos,
+    // beside a hip that leans back one slope can rise: backing under 0, and nothing to plane there
     arrisFall: piece.backed
-      ? { left: piece.fall.left * piece.halfMm, right: piece.fall.right * piece.halfMm }
+      ? {
+          left: Math.max(0, piece.fall.left) * piece.halfMm,
+          right: Math.max(0, piece.fall.right) * piece.halfMm,
+        }
       : { left: 0, right: 0 },
   }
 }

@@ -7,6 +7,7 @@ import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
 import type { DraftMember } from './members.ts'
+import type { Piece, PieceEnd } from './piece.ts'
 import { planingOf } from './planing.ts'
 import { publishedLines, publishedPlanes } from './published-lines.ts'
 import { roofLines } from './roof-lines.ts'
@@ -19,6 +20,10 @@ import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
 import { fullPlan } from './trim.ts'
 
+/** Ridges, and the feet of broken hips, are there first: others bear on them. */
+const runsThrough = (piece: Piece, end: PieceEnd): boolean =>
+  piece.role === 'ridge' || (piece.role === 'broken-hip' && end === 'foot')
+
 /** Cuts all joints and gives every piece its numbers. */
 const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
   const pieces = buildPieces(ground)
@@ -26,7 +31,7 @@ const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
   const segments = pieces.flatMap((piece) => planSegments(piece.id, fullPlan(piece)))
   return pieces.map((piece) =>
     draftMember(ground, piece, standMm, (cut) => {
-      if (cut.end === 'tail' || cut.listed === null) return []
+      if (cut.end === 'tail' || cut.listed === null || runsThrough(piece, cut.end)) return []
       const list = cut.end === 'head' ? piece.headCuts : piece.footCuts
       const mate = list[cut.listed]?.mitreWith ?? null
       const own = placedAt(piece.id, cut.end)

@@ -4,6 +4,7 @@ import { bodyDirection, endJobs, inLineRad, phases, turn } from './joint-phases.
 import type { EndJob } from './joint-phases.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
+import { at } from './slopes.ts'
 import { halfObstacle, trimEnd } from './trim.ts'
 import type { Obstacle } from './trim.ts'
 import { add2, distance2, dot2, length2, scale2, sub2 } from './vector.ts'
@@ -28,6 +29,14 @@ const ridgeEnd = (ground: Ground, { piece, end }: EndJob): PlanCut => {
   return { point: add2(node, scale2(away, past)), normal: away, mitreWith: null }
 }
 
+/** Trims an end; it may run past its set-out end as far as its joint's centre and a little more. */
+const trimmed = (ground: Ground, job: EndJob, obstacles: Obstacle[], cuts: PlanCut[]) => {
+  const { piece, end, joint } = job
+  const set = end === 'head' ? piece.head : piece.foot
+  const toCentre = joint === null ? 0 : distance2(set, at(ground.joints.joints, joint).point)
+  return trimEnd(piece, end, obstacles, cuts, toCentre + 3 * piece.halfMm)
+}
+
 const cutsOfEnd = (ground: Ground, job: EndJob, state: State): PlanCut[] => {
   const { jobs, placed, obstacles, pieces } = state
   if (job.phase === phases.ridge) return [ridgeEnd(ground, job)]
@@ -36,17 +45,19 @@ const cutsOfEnd = (ground: Ground, job: EndJob, state: State): PlanCut[] => {
     const crown = jobs.find(isCrown)?.piece ?? null
     return [brokenFootCut(job.piece, crown, sidesAt(job.piece, pieces))]
   }
-  return trimEnd(job.piece, job.end, obstacles, distinct(mitres(job, jobs, placed)))
+  return trimmed(ground, job, obstacles, distinct(mitres(ground, job, jobs, placed)))
 }
 
-/** Pieces of one joint that end further apart than this do not share a mitre: the later one butts. */
-const oneHeadMm = 1
+/** Pieces whose centre lines miss the joint's centre by more than this share no mitre: the later one butts. */
+const offCentreMm = 1
 
-const meets = ({ piece, end }: EndJob): Point2 => (end === 'head' ? piece.head : piece.foot)
+const runsThrough = (piece: Piece, centre: Point2): boolean =>
+  Math.abs(dot2(piece.left, sub2(centre, piece.foot))) < offCentreMm
 
 /** Plumb planes between a piece and those of its own phase next to it round the joint. */
-const mitres = (job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
+const mitres = (ground: Ground, job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
   if (job.joint === null) return []
+  const centre = at(ground.joints.joints, job.joint).point
   const own = bodyDirection(job.piece, job.end)
   const round = [...placed, ...jobs.filter((j) => j.phase === job.phase)].filter(
     (j) => j.joint === job.joint && j.piece !== job.piece,
@@ -61,20 +72,31 @@ const mitres = (job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
       null,
     )
     if (next === null || next.phase !== job.phase || angle(next) > Math.PI + inLineRad) return []
-    if (distance2(meets(job), meets(next)) > oneHeadMm) return []
+    if (!runsThrough(job.piece, centre) || !runsThrough(next.piece, centre)) return []
     const half = angle(next) / 2
     const cos = Math.cos(half)
     const sin = sign * Math.sin(half)
     // along the mitre, out of the joint, then square to it on the far side of the piece
     const line = { x: own.x * cos - own.y * sin, y: own.x * sin + own.y * cos }
     const normal = sign === 1 ? { x: -line.y, y: line.x } : { x: line.y, y: -line.x }
-    return [{ point: meets(job), normal, mitreWith: next.piece.id }]
+    return [{ point: centre, normal, mitreWith: next.piece.id }]
   })
 }
 
 /** A mitre that two pieces share once; in-line pairs get theirs from both sides. */
 const distinct = (cuts: PlanCut[]): PlanCut[] =>
   cuts.filter((cut, k) => !cuts.slice(0, k).some((c) => length2(sub2(c.normal, cut.normal)) < 1e-9))
+
+const endCuts = ({ piece, end }: EndJob): PlanCut[] =>
+  end === 'head' ? piece.headCuts : piece.footCuts
+
+const isShared = (cut: PlanCut, job: EndJob, jobs: EndJob[]): boolean =>
+  jobs.some(
+    (mate) =>
+      mate.piece.id === cut.mitreWith &&
+      mate.joint === job.joint &&
+      endCuts(mate).some((c) => c.mitreWith === job.piece.id),
+  )
 
 /** When an end was placed; with null, the first end of that piece. */
 export type PlacedAt = (piece: number, end: PieceEnd | null) => number
@@ -87,18 +109,29 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   const jobs = endJobs(ground, pieces)
   const obstacles: Obstacle[] = []
   const placed: EndJob[] = []
-  for (const job of jobs) {
-    const cuts = cutsOfEnd(ground, job, { pieces, jobs, placed, obstacles })
+  const slots = new Map<EndJob, number>()
+  const place = (job: EndJob, cuts: PlanCut[]) => {
     if (job.end === 'head') job.piece.headCuts = cuts
     else job.piece.footCuts = cuts
-    obstacles.push(halfObstacle(job.piece, job.end))
-    placed.push(job)
-    const standsOnPlate =
-      job.end === 'head' &&
-      job.piece.role !== 'ridge' &&
-      !jobs.some((j) => j.piece === job.piece && j.end === 'foot')
-    if (standsOnPlate) obstacles.push(halfObstacle(job.piece, 'foot'))
+    const obstacle = halfObstacle(job.piece, job.end)
+    const known = slots.get(job)
+    if (known !== undefined) obstacles[known] = obstacle
+    else slots.set(job, obstacles.push(obstacle) - 1)
   }
+  jobs.forEach((job, k) => {
+    place(job, cutsOfEnd(ground, job, { pieces, jobs, placed, obstacles }))
+    placed.push(job)
+    const hasFoot = jobs.some((j) => j.piece === job.piece && j.end === 'foot')
+    if (!hasFoot) obstacles.push(halfObstacle(job.piece, 'foot'))
+    if (jobs[k + 1]?.phase === job.phase) return
+    // a mitre whose mate found something else to bear on is no mitre
+    for (const done of jobs.filter((j) => j.phase === job.phase)) {
+      const cuts = endCuts(done)
+      const kept = cuts.filter((cut) => cut.mitreWith !== null && isShared(cut, done, jobs))
+      if (cuts.every((cut) => cut.mitreWith === null || kept.includes(cut))) continue
+      place(done, trimmed(ground, done, obstacles, kept))
+    }
+  })
   const headAt = pieces.map(() => -1)
   const footAt = pieces.map(() => -1)
   placed.forEach(({ piece, end }, k) => ((end === 'head' ? headAt : footAt)[piece.id] = k))

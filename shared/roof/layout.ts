@@ -36,10 +36,8 @@ const fixedStations = (
     if (own.length === 0 || touchesGable(lines, own)) return
     const ridge = joint.ridge === null ? null : at(lines.lines, joint.ridge)
     const onRidge = own.filter((n) => ridge !== null && (ridge.from === n || ridge.to === n))
-    const used = onRidge.length > 0 ? onRidge : own
-    const reach = used.map((n) => dot2(slope.along, sub2(at(lines.nodes, n).point, slope.origin)))
-    const alongMm = (Math.min(...reach) + Math.max(...reach)) / 2
-    const height = Math.max(...used.map((n) => at(lines.nodes, n).point.z))
+    const alongMm = dot2(slope.along, sub2(joint.point, slope.origin))
+    const height = Math.max(...own.map((n) => at(lines.nodes, n).point.z))
     stations.push({ alongMm, joint: index, rank: onRidge.length > 0 ? 1 : 2 + 1 / (1 + height) })
   })
   return keepApart(stations, roof.sections.rafter.thicknessMm)

@@ -117,15 +117,25 @@ const withoutMisses = (whole: Labelled<Side>, cuts: PlanCut[]): PlanCut[] => {
   return kept
 }
 
+/** How far past `stop` a piece's centre line runs to the nearest of its cuts. */
+const centreReachMm = (piece: Piece, cuts: PlanCut[], stop: Point2, away: Point2): number => {
+  const reaches = cuts.map(
+    (cut) => dot2(cut.normal, sub2(cut.point, stop)) / dot2(cut.normal, away),
+  )
+  return Math.min(reachPastMm(piece), ...reaches)
+}
+
 /**
  * The cuts of one end of a piece: its mitres, then a cheek in the face of each placed piece that it
- * would run into, nearest first; square through its set-out end where nothing stops it.
+ * would run into, nearest first; square through its set-out end where nothing stops it within
+ * `allowPastMm` of there.
  */
 export const trimEnd = (
   piece: Piece,
   end: PieceEnd,
   obstacles: readonly Obstacle[],
   mitres: PlanCut[],
+  allowPastMm: number,
 ): PlanCut[] => {
   const away = end === 'head' ? piece.dir : scale2(piece.dir, -1)
   const past = reachPastMm(piece)
@@ -148,12 +158,12 @@ export const trimEnd = (
     }
   }
   clear()
-  const endMm = end === 'head' ? piece.planMm : 0
-  const reach = Math.max(...polygon.points.map((p) => dot2(p, away)))
-  const limit = dot2(piecePoint(piece, endMm, 0), away) + past
-  if (reach > limit - 1) {
-    const square = { point: piecePoint(piece, endMm, 0), normal: away, mitreWith: null }
+  const stop = piecePoint(piece, end === 'head' ? piece.planMm : 0, 0)
+  if (centreReachMm(piece, cuts, stop, away) > allowPastMm) {
+    const square = { point: stop, normal: away, mitreWith: null }
     cuts.push(square)
+    polygon = cutAway(polygon, square, { kind: 'face' })
+    clear()
   }
   return withoutMisses(whole, cuts)
 }
