@@ -11,6 +11,7 @@ import { BookingFields, CrewField } from './booking-fields.tsx'
 import { conflictOf, useCancelBooking, useCreateBooking } from './calendar-queries.ts'
 import { ClashAnswer, type OnPurpose } from './clash-answer.tsx'
 import { FormFailure, issuesOf } from './form-failure.tsx'
+import { useUndoing } from './use-undoing.ts'
 import { workWords } from './work-words.ts'
 
 type Props = {
@@ -23,6 +24,7 @@ type Props = {
 
 function useBookForm({ jobs, crews, jobId, day, onDone }: Props) {
   const toast = useToast()
+  const undoing = useUndoing()
   const create = useCreateBooking()
   const cancel = useCancelBooking()
   const [clientId] = useState(() => crypto.randomUUID())
@@ -51,7 +53,8 @@ function useBookForm({ jobs, crews, jobId, day, onDone }: Props) {
       },
       {
         onSuccess: (booking) => {
-          const undo = () => cancel.mutate({ id: booking.id, version: booking.version })
+          const back = { id: booking.id, version: booking.version }
+          const undo = undoing(() => cancel.mutateAsync(back))
           const days = booking.days.length === 1 ? '1 day' : `${booking.days.length} days`
           toast(`Booked: ${booking.crew.name}, ${days} from ${formatDay(booking.firstDay)}.`, {
             undo,

@@ -9,6 +9,7 @@ import {
   useRestoreBooking,
 } from './calendar-queries.ts'
 import type { OnPurpose } from './clash-answer.tsx'
+import { useUndoing } from './use-undoing.ts'
 
 type Draft = BookingValues & { days: string[] }
 export type BookingChange = Omit<ChangeInput, 'id' | 'version'>
@@ -26,6 +27,7 @@ export type BookingEditProps = { booking: Booking; onClosed: () => void }
 /** What the person is typing, what it began from, and what becomes of it. */
 export function useBookingEdit({ booking, onClosed }: BookingEditProps) {
   const toast = useToast()
+  const undoing = useUndoing()
   const change = useChangeBooking()
   const cancel = useCancelBooking()
   const restore = useRestoreBooking()
@@ -37,22 +39,15 @@ export function useBookingEdit({ booking, onClosed }: BookingEditProps) {
     setDraft(draftOf(from))
     change.reset()
   }
-  const undoTo = (before: Booking, after: Booking) => () =>
-    change.mutate(
-      { id: after.id, version: after.version, ...inputOf(draftOf(before)), evenIfNotWorked: true },
-      {
-        onSuccess: start,
-        onError: (error) => toast(error.message, { kind: 'stop' }),
-      },
-    )
   const send = (input: BookingChange) => {
     if (change.isPending) return
     change.mutate(
       { id: base.id, version: base.version, ...input },
       {
         onSuccess: (after) => {
-          toast('Booking changed.', { undo: undoTo(base, after) })
-          start(after)
+          const back = { id: after.id, version: after.version, ...inputBackTo(base) }
+          toast('Booking changed.', { undo: undoing(() => change.mutateAsync(back)) })
+          onClosed()
         },
       },
     )
@@ -62,12 +57,8 @@ export function useBookingEdit({ booking, onClosed }: BookingEditProps) {
       { id: base.id, version: base.version },
       {
         onSuccess: (after) => {
-          const undo = () =>
-            restore.mutate(
-              { id: after.id, version: after.version },
-              { onError: (error) => toast(error.message, { kind: 'stop' }) },
-            )
-          toast('Booking cancelled.', { undo })
+          const back = { id: after.id, version: after.version }
+          toast('Booking cancelled.', { undo: undoing(() => restore.mutateAsync(back)) })
           onClosed()
         },
       },
@@ -91,4 +82,11 @@ export const inputOf = (draft: Draft) => ({
   state: draft.state,
   startAt: draft.startAt === '' ? null : draft.startAt,
   gear: draft.gear,
+})
+
+/** What was settled on purpose before is settled again. */
+const inputBackTo = (before: Booking): BookingChange => ({
+  ...inputOf(draftOf(before)),
+  evenIfNotWorked: true,
+  ...(before.clashReason === null ? {} : { clashReason: before.clashReason }),
 })

@@ -4,19 +4,20 @@ import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import { useToast } from '../../ui/toast.tsx'
 import { conflictOf, useChangeBooking } from './calendar-queries.ts'
 import type { OnPurpose } from './clash-answer.tsx'
+import { useUndoing } from './use-undoing.ts'
 
 type Asked = { booking: CalendarBooking; move: { from: Day; to: Day } }
 
 /** A dragged day: moved at once, put back when refused, taken back by Undo. */
 export function useMoveBooking() {
   const toast = useToast()
+  const undoing = useUndoing()
   const change = useChangeBooking()
   const [asked, setAsked] = useState<Asked | null>(null)
 
-  const undo = (before: CalendarBooking, version: number) => () =>
-    change.mutate(
-      { id: before.id, version, days: before.allDays, evenIfNotWorked: true },
-      { onError: (error) => toast(error.message, { kind: 'stop' }) },
+  const undo = (before: CalendarBooking, version: number) =>
+    undoing(() =>
+      change.mutateAsync({ id: before.id, version, days: before.allDays, evenIfNotWorked: true }),
     )
 
   const send = ({ booking, move }: Asked, said: OnPurpose = {}) => {
