@@ -53,9 +53,10 @@ export function shortSideSign(cut: Cut): -1 | 0 | 1 {
   return cut.longSide === 'right' ? 1 : -1
 }
 
+/** How the top of one side is planed; a slope that rises away from the centre leaves it square. */
 export function backingDeg(member: Member, sideSign: -1 | 0 | 1): number {
   if (member.backing === null || sideSign === 0) return 0
-  return sideSign > 0 ? member.backing.leftDeg : member.backing.rightDeg
+  return Math.max(0, sideSign > 0 ? member.backing.leftDeg : member.backing.rightDeg)
 }
 
 /**
