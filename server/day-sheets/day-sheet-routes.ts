@@ -1,4 +1,4 @@
-import type { Request, Response } from 'express'
+import type { Response } from 'express'
 import { z } from 'zod'
 import {
   dayRoofSchema,
@@ -18,14 +18,14 @@ import {
   taskAnswerSchema,
   taskDetailSchema,
 } from '../../shared/day-sheets/task-schemas.ts'
-import { daySchema, idSchema } from '../../shared/http/fields.ts'
+import { daySchema } from '../../shared/http/fields.ts'
 import { currentUser } from '../auth/current-user.ts'
 import type { Db } from '../db/client.ts'
 import type { EventHub } from '../events/event-hub.ts'
 import { readFirm } from '../firm/firm-store.ts'
 import { type Api, send } from '../http/api.ts'
-import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId } from '../http/path-id.ts'
 import type { Clock } from '../lib/clock.ts'
 import { dayRoofFor, daySheetsFor, myTasksFor, taskDetailFor } from './day-sheet-service.ts'
 import { latestComparison, recordPlateCheck } from './plate-check-service.ts'
@@ -33,13 +33,6 @@ import { addTick, changeTask, raiseHand } from './task-service.ts'
 import type { Viewer } from './task-store.ts'
 
 type Deps = { db: Db; clock: Clock; events: EventHub }
-
-/** An address that cannot be an id is answered like one that is nobody's. */
-function idIn(req: Request, name: string, what: string): string {
-  const parsed = idSchema.safeParse(req.params[name])
-  if (!parsed.success) throw notFound(what)
-  return parsed.data
-}
 
 const myTasksQuerySchema = z.strictObject({ day: daySchema.optional() })
 
@@ -58,7 +51,7 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
   })
 
   api.route('get', '/api/day-sheets/:bookingDayId/spec', 'roof:read', (req, res) => {
-    const id = idIn(req, 'bookingDayId', 'That roof')
+    const id = pathId(req, 'bookingDayId', 'That roof')
     send(res, dayRoofSchema, dayRoofFor(db, viewerOf(res), id))
   })
 
@@ -68,26 +61,26 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
   })
 
   api.route('get', '/api/tasks/:taskId', 'task:read', (req, res) => {
-    const id = idIn(req, 'taskId', 'That task')
+    const id = pathId(req, 'taskId', 'That task')
     send(res, taskDetailSchema, taskDetailFor(db, viewerOf(res), id))
   })
 
   api.route('patch', '/api/tasks/:taskId', 'day-sheet:write', (req, res) => {
-    const id = idIn(req, 'taskId', 'That task')
+    const id = pathId(req, 'taskId', 'That task')
     const task = changeTask(db, viewerOf(res), id, parseInput(changeTaskSchema, req.body))
     changed()
     send(res, taskAnswerSchema, { task })
   })
 
   api.route('post', '/api/tasks/:taskId/ticks', 'task:tick', (req, res) => {
-    const id = idIn(req, 'taskId', 'That task')
+    const id = pathId(req, 'taskId', 'That task')
     const task = addTick(db, viewerOf(res), id, parseInput(newTickSchema, req.body))
     changed()
     send(res, taskAnswerSchema, { task })
   })
 
   api.route('post', '/api/tasks/:taskId/hand', 'task:tick', (req, res) => {
-    const id = idIn(req, 'taskId', 'That task')
+    const id = pathId(req, 'taskId', 'That task')
     const { raised } = parseInput(raiseHandSchema, req.body)
     const task = raiseHand(db, viewerOf(res), id, raised)
     changed()
@@ -95,7 +88,7 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
   })
 
   api.route('get', '/api/jobs/:jobId/plate-checks/:letter', 'plate-check:write', (req, res) => {
-    const jobId = idIn(req, 'jobId', 'That job')
+    const jobId = pathId(req, 'jobId', 'That job')
     const letter = String(req.params['letter'])
     send(res, latestPlateCheckSchema, {
       check: latestComparison(db, viewerOf(res), jobId, letter),
@@ -103,7 +96,7 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
   })
 
   api.route('post', '/api/jobs/:jobId/plate-checks', 'plate-check:write', (req, res) => {
-    const jobId = idIn(req, 'jobId', 'That job')
+    const jobId = pathId(req, 'jobId', 'That job')
     const input = parseInput(newPlateCheckSchema, req.body)
     const check = recordPlateCheck(db, viewerOf(res), jobId, input)
     changed()

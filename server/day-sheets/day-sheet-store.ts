@@ -141,7 +141,7 @@ export function latestPlateCheck(
 }
 
 function minutesThere(firm: Firm, roster: RosteredPerson[]): number {
-  return roster.filter((person) => !person.onLeave).length * firm.hoursPerDay * 60
+  return Math.round(roster.filter((person) => !person.onLeave).length * firm.hoursPerDay * 60)
 }
 
 /** What is not as it was on the booking's day before. */

@@ -1,6 +1,6 @@
 import { groupBy } from '../collections/group-by.ts'
 import { cutWords } from '../drawing/bevel-dials.ts'
-import { measuringPoints } from '../drawing/timber-points.ts'
+import { type MeasuringPoint, measuringPoints } from '../drawing/timber-points.ts'
 import { endCuts } from '../drawing/timber-shape.ts'
 import type { Cut, FrameSpec, Member } from '../roof/roof-types.ts'
 import {
@@ -138,12 +138,17 @@ function endPoints(
   const points = only
     ? singleCutPoints(only)
     : measuringPoints(member, end).map((point) => ({
-        label: point.name === 'cut' ? cutLabel(point.end) : `${capital(point.name)}, ${point.side}`,
+        label: pointLabel(point),
         alongMm: point.alongMm,
       }))
   return points.map(({ label, alongMm }) =>
     figureOf(label, Math.abs(alongMm), options, fromWords(member, cuts, alongMm)),
   )
+}
+
+function pointLabel({ name, end, side }: MeasuringPoint): string {
+  if (name === 'cut') return cutLabel(end)
+  return name === 'edge' ? `${capital(side)} edge` : `${capital(name)}, ${side}`
 }
 
 function cutLabel(end: Cut['end']): string {

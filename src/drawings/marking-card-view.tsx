@@ -23,7 +23,8 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
         {platesMeasured ? null : <p className="font-semibold">From plan, plates not measured.</p>}
         <p>{card.handWords}</p>
       </div>
-      <CardRemarks card={card} />
+      <CardCautions card={card} />
+      <PlaningNote card={card} />
       <MarkingNumbers card={card} />
       {member ? (
         <div className="border-t border-rule pt-3">
@@ -56,25 +57,25 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
   )
 }
 
-/** Planing and cautions of a line. */
-export function CardRemarks({ card }: { card: MarkingCard }) {
+/** Top corners to plane off. */
+export function PlaningNote({ card }: { card: MarkingCard }) {
+  if (card.planing.length === 0) return null
   return (
-    <>
-      {card.planing.length > 0 ? (
-        <Note title="Plane">
-          {card.planing.map((text) => (
-            <p key={text} className="text-base">
-              {text}
-            </p>
-          ))}
-        </Note>
-      ) : null}
-      {card.warnings.map(({ text, remedy }) => (
-        <Note key={text} kind="caution" title="Caution">
-          <p className="text-base">{text}</p>
-          <p className="text-base">{remedy}</p>
-        </Note>
+    <Note title="Plane">
+      {card.planing.map((text) => (
+        <p key={text} className="text-base print:text-xs">
+          {text}
+        </p>
       ))}
-    </>
+    </Note>
   )
+}
+
+function CardCautions({ card }: { card: MarkingCard }) {
+  return card.warnings.map(({ text, remedy }) => (
+    <Note key={text} kind="caution" title="Caution">
+      <p className="text-base">{text}</p>
+      <p className="text-base">{remedy}</p>
+    </Note>
+  ))
 }

@@ -20,13 +20,17 @@ export function FigureView({
 }) {
   return (
     <div className="min-w-0">
-      <dt className="text-base font-semibold leading-tight">{figure.label}</dt>
+      <dt className="text-base print:text-xs font-semibold leading-tight">{figure.label}</dt>
       <dd className="leading-tight">
-        <span className={`numeral ${isMain ? 'text-[2.5rem]' : 'text-[1.75rem]'}`}>
+        <span
+          className={`numeral ${isMain ? 'text-[2.5rem] print:text-xl' : 'text-[1.75rem] print:text-lg'}`}
+        >
           {figure.text}
         </span>
-        {figure.unit ? <span className="text-base"> {figure.unit}</span> : null}
-        {figure.note ? <span className="block text-sm text-ink-soft">{figure.note}</span> : null}
+        {figure.unit ? <span className="text-base print:text-xs"> {figure.unit}</span> : null}
+        {figure.note ? (
+          <span className="block text-sm print:text-xs text-ink-soft">{figure.note}</span>
+        ) : null}
       </dd>
     </div>
   )
@@ -36,17 +40,17 @@ export function FigureView({
 export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: string | undefined }) {
   return (
     <div className="min-w-0">
-      <dt className="text-base font-semibold leading-tight">{bevel.label}</dt>
+      <dt className="text-base print:text-xs font-semibold leading-tight">{bevel.label}</dt>
       <dd className="flex flex-wrap items-baseline gap-x-4">
         <span className="whitespace-nowrap">
-          <span className="numeral text-[1.75rem]">{bevel.fromSquareText}</span>{' '}
-          <span className="text-base">{squareWord(bevel)}</span>
+          <span className="numeral text-[1.75rem] print:text-lg">{bevel.fromSquareText}</span>{' '}
+          <span className="text-base print:text-xs">{squareWord(bevel)}</span>
         </span>
         <span className="whitespace-nowrap">
-          <span className="numeral text-[1.75rem]">{bevel.fromEdgeText}</span>{' '}
-          <span className="text-base">from edge</span>
+          <span className="numeral text-[1.75rem] print:text-lg">{bevel.fromEdgeText}</span>{' '}
+          <span className="text-base print:text-xs">from edge</span>
         </span>
-        {extra ? <span className="text-base">{extra}</span> : null}
+        {extra ? <span className="text-base print:text-xs">{extra}</span> : null}
       </dd>
     </div>
   )
@@ -58,13 +62,17 @@ function CutName({ name, cut }: { name: string; cut: MarkingCut }) {
   const across = cut.edge || cut.kind === 'square cut' ? '' : 'square across the top'
   const words = [name, kind, across].filter(Boolean).join(', ')
   if (words === '') return null
-  return <p className="text-base font-semibold">{words.charAt(0).toUpperCase() + words.slice(1)}</p>
+  return (
+    <p className="text-base print:text-xs font-semibold">
+      {words.charAt(0).toUpperCase() + words.slice(1)}
+    </p>
+  )
 }
 
 function EndNumbers({ end }: { end: MarkingEnd }) {
   return (
-    <div className="border-t border-rule pt-3">
-      <p className="mb-1 text-base font-extrabold">{end.title}</p>
+    <div className="border-t border-rule pt-3 print:pt-1">
+      <p className="mb-1 text-base print:text-xs font-extrabold">{end.title}</p>
       <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
         {end.points.map((point) => (
           <FigureView key={point.label} figure={point} />
@@ -79,7 +87,7 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
               <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
             ) : null}
             {first.edgeOtherTop ? (
-              <div className="text-base text-ink-soft">
+              <div className="text-base print:text-xs text-ink-soft">
                 <dt className="inline">{first.edgeOtherTop.label}: </dt>
                 <dd className="inline">
                   {first.edgeOtherTop.fromSquareText} {squareWord(first.edgeOtherTop)},{' '}
@@ -90,14 +98,14 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
           </dl>
           {cuts.map(({ cheek, bearsOn }) =>
             bearsOn ? (
-              <p key={cheek + bearsOn} className="text-base">
+              <p key={cheek + bearsOn} className="text-base print:text-xs">
                 {cheek ? `${cheek}: ` : ''}
                 {bearsOn}.
               </p>
             ) : null,
           )}
           {first.sawWords.length > 0 ? (
-            <p className="mt-1 border-l-8 border-ochre pl-2 text-base font-semibold">
+            <p className="mt-1 border-l-8 border-ochre pl-2 text-base print:text-xs font-semibold">
               {first.sawWords.join(' ')}
             </p>
           ) : null}
@@ -126,7 +134,7 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
   // The head is measured to from the heel line before the tail is.
   const ends = [...card.ends].reverse()
   return (
-    <div className="space-y-3">
+    <div className="space-y-3 print:space-y-1">
       <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
         <FigureView figure={card.cutLength} isMain />
         <FigureView figure={card.setOutLength} isMain />
@@ -136,7 +144,7 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
       ))}
       <BirdsmouthNumbers card={card} />
       {card.backing.length > 0 || card.drop ? (
-        <dl className="space-y-1 border-t border-rule pt-3">
+        <dl className="space-y-1 border-t border-rule pt-3 print:pt-1">
           {card.backing.map((bevel) => (
             <BevelView key={bevel.label} bevel={bevel} />
           ))}
@@ -151,8 +159,8 @@ function BirdsmouthNumbers({ card }: { card: MarkingCard }) {
   const mouth = card.birdsmouth
   if (!mouth) return null
   return (
-    <div className="border-t border-rule pt-3">
-      <p className="mb-1 text-base font-extrabold">Birdsmouth</p>
+    <div className="border-t border-rule pt-3 print:pt-1">
+      <p className="mb-1 text-base print:text-xs font-extrabold">Birdsmouth</p>
       <dl className="grid grid-cols-2 gap-x-4 gap-y-2 sm:grid-cols-3">
         {mouth.figures.map((figure) => (
           <FigureView key={figure.label} figure={figure} />

@@ -13,7 +13,7 @@ export function Fold({
 }) {
   return (
     <details open={isOpen} className="group">
-      <summary className="flex min-h-14 list-none items-center gap-2 font-semibold text-chalk [&::-webkit-details-marker]:hidden">
+      <summary className="flex min-h-14 list-none items-center gap-2 font-semibold text-chalk print:hidden [&::-webkit-details-marker]:hidden">
         <ChevronDown size={22} aria-hidden className="shrink-0 group-open:rotate-180" />
         {title}
       </summary>

@@ -5,6 +5,7 @@ import { formatDay } from '../../../shared/calendar/days.ts'
 import type { DayTask, TaskDetail } from '../../../shared/day-sheets/task-schemas.ts'
 import { workAtHeight } from '../../../shared/marking/marking-card.ts'
 import { MarkingCardView } from '../../drawings/marking-card-view.tsx'
+import { ApiFailure } from '../../lib/api-client.ts'
 import { failureText } from '../../lib/failure-text.ts'
 import { useUser } from '../../lib/session.ts'
 import { useTicks, withTask } from '../../lib/use-ticks.ts'
@@ -13,7 +14,7 @@ import { Button, buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
-import { ErrorState, Note } from '../../ui/states.tsx'
+import { EmptyState, ErrorState, Note } from '../../ui/states.tsx'
 import { SunlightSwitch } from '../../ui/sunlight-switch.tsx'
 import { useToast } from '../../ui/toast.tsx'
 import { myTasksQueries, raiseHand } from './my-tasks-queries.ts'
@@ -150,21 +151,36 @@ function TaskBody({ detail }: { detail: TaskDetail }) {
   )
 }
 
+/** A task handed to somebody else is answered like one that is not there. */
+function TaskFailure({ error, onRetry }: { error: Error; onRetry: () => void }) {
+  const isGone = error instanceof ApiFailure && error.status === 404
+  return (
+    <div className="site-screen space-y-4">
+      <PageHeader title="Task" />
+      {isGone ? (
+        <EmptyState
+          title="This task is not yours"
+          action={
+            <Link to="/my-tasks" className={buttonClass('primary', 'site')}>
+              My tasks
+            </Link>
+          }
+        >
+          It may have been handed to somebody else, or the day was planned again.
+        </EmptyState>
+      ) : (
+        <ErrorState message={failureText(error) ?? error.message} onRetry={onRetry} />
+      )}
+    </div>
+  )
+}
+
 /** One task: its marking card, its ticks, a raised hand. */
 export function TaskPage() {
   const { taskId = '' } = useParams()
   const query = useQuery(myTasksQueries.detail(taskId))
   if (query.isPending) return <PageSkeleton />
-  if (query.isError)
-    return (
-      <>
-        <PageHeader title="Task" />
-        <ErrorState
-          message={failureText(query.error) ?? query.error.message}
-          onRetry={() => void query.refetch()}
-        />
-      </>
-    )
+  if (query.isError) return <TaskFailure error={query.error} onRetry={() => void query.refetch()} />
   return (
     <div className="site-screen">
       <TaskBody key={query.data.task.id} detail={query.data} />

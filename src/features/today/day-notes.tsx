@@ -1,5 +1,6 @@
 import { workAtHeight } from '../../../shared/marking/marking-card.ts'
 import type { DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
+import { Fold } from '../../ui/fold.tsx'
 import { Note } from '../../ui/states.tsx'
 
 /** What is not as it was the day before. */
@@ -18,15 +19,23 @@ export function ChangesNote({ sheet }: { sheet: DaySheet }) {
 
 /** Cautions of the roof that concern what is handled this day. */
 export function CautionNotes({ sheet }: { sheet: DaySheet }) {
+  const { cautions } = sheet
+  if (cautions.length === 0) return null
   return (
-    <>
-      {sheet.cautions.map((caution) => (
-        <Note key={caution.text} kind="caution" title="Caution">
-          <p className="text-base">{caution.text}</p>
-          <p className="text-base">{caution.remedy}</p>
-        </Note>
-      ))}
-    </>
+    <Note kind="caution" title={cautions.length === 1 ? 'Caution' : 'Cautions'}>
+      <ul className="list-disc pl-6 text-base">
+        {cautions.map(({ text }) => (
+          <li key={text}>{text}</li>
+        ))}
+      </ul>
+      <Fold title="What answers them">
+        <ul className="list-disc space-y-2 pl-6 text-base">
+          {cautions.map(({ text, remedy }) => (
+            <li key={text}>{remedy}</li>
+          ))}
+        </ul>
+      </Fold>
+    </Note>
   )
 }
 

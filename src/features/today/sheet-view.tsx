@@ -20,7 +20,7 @@ function SheetPlan({ sheet, roof }: { sheet: DaySheet; roof: DayRoof }) {
   const due = useMemo(() => new Set(sheet.dueMarks), [sheet.dueMarks])
   const done = useMemo(() => new Set(sheet.doneMarks), [sheet.doneMarks])
   return (
-    <Card aria-label="Roof plan">
+    <Card aria-label="Roof plan" className="print:mx-auto print:w-[120mm] print:break-inside-avoid">
       <RoofPlan
         roof={roof.roof}
         spec={roof.spec}

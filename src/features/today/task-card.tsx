@@ -5,7 +5,7 @@ import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-sch
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
 import { shareWords } from '../../../shared/marking/role-words.ts'
-import { CardRemarks } from '../../drawings/marking-card-view.tsx'
+import { PlaningNote } from '../../drawings/marking-card-view.tsx'
 import { MainNumbers, MarkingNumbers } from '../../drawings/marking-numbers.tsx'
 import { useMay } from '../../lib/session.ts'
 import { useTicks } from '../../lib/use-ticks.ts'
@@ -48,7 +48,7 @@ function TaskHead({
   return (
     <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-1">
       <div className="min-w-0">
-        <h4 className="text-xl font-extrabold leading-tight">
+        <h4 className="text-xl font-extrabold leading-tight print:text-base">
           {card ? (
             <>
               {workWords[task.work]} <span className="text-clay">{card.mark}</span> {card.name}
@@ -82,16 +82,16 @@ export function TaskCard({ task, roof, roster, place, numbersAbove }: Props) {
   const share = roof ? shareWords(roof.spec.members, task.memberMarks) : ''
   return (
     <article
-      className={`rounded-md border border-l-8 bg-sheet p-3 sm:p-4 break-inside-avoid ${isDone(task) ? 'border-leaf' : 'border-rule border-l-clay'}`}
+      className={`rounded-md border border-l-8 bg-sheet p-3 sm:p-4 break-inside-avoid print:border-l print:p-2 print:text-xs ${isDone(task) ? 'border-leaf' : 'border-rule border-l-clay'}`}
     >
       <TaskHead task={task} card={card} share={share} />
       {card ? (
-        <p className="mt-1 text-base">
+        <p className="mt-1 text-base print:text-xs">
           {task.memberMarks.join(', ')}. {card.handWords}
         </p>
       ) : null}
       {card ? <TaskNumbers task={task} card={card} numbersAbove={numbersAbove} /> : null}
-      <div className="mt-3 space-y-3 border-t border-rule pt-3">
+      <div className="mt-3 space-y-3 border-t border-rule pt-3 print:mt-1 print:pt-1">
         {mayOrder ? (
           <>
             <TaskTicks task={task} />
@@ -117,8 +117,8 @@ export function TaskCard({ task, roof, roster, place, numbersAbove }: Props) {
 function TaskNumbers({ task, card, numbersAbove }: NumbersProps) {
   const isFull = task.work === 'cut' && !numbersAbove && !isDone(task)
   return (
-    <div className="mt-3 space-y-3">
-      <CardRemarks card={card} />
+    <div className="mt-3 space-y-3 print:mt-1 print:space-y-1">
+      <PlaningNote card={card} />
       {isFull ? (
         <MarkingNumbers card={card} />
       ) : (

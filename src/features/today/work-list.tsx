@@ -49,16 +49,21 @@ export function WorkList({ sheet, roof }: Props) {
     <section aria-label="Work of the day" className="space-y-5">
       <p className="text-xl font-extrabold">{cutOneFirst}</p>
       {leftOver.length > 0 ? (
-        <div className="space-y-3">
-          <h3 className="text-lg font-extrabold">
+        <div className="space-y-3 print:columns-2 print:gap-3 print:space-y-2">
+          <h3 className="text-lg font-extrabold [column-span:all] break-after-avoid">
             Left over from {[...new Set(leftOver.map((task) => formatDay(task.day)))].join(', ')}
           </h3>
           {leftOver.map((task) => show(task, null))}
         </div>
       ) : null}
       {packageRuns(tasks).map((run) => (
-        <div key={`${run.title} ${run.tasks[0]?.index}`} className="space-y-3">
-          <h3 className="text-lg font-extrabold">{run.title}</h3>
+        <div
+          key={`${run.title} ${run.tasks[0]?.index}`}
+          className="space-y-3 print:columns-2 print:gap-3 print:space-y-2"
+        >
+          <h3 className="text-lg font-extrabold [column-span:all] break-after-avoid">
+            {run.title}
+          </h3>
           {run.tasks.map(({ task, index }) => show(task, { index, count: tasks.length }))}
         </div>
       ))}
