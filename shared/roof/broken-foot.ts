@@ -4,8 +4,8 @@ import { add2, cross2, dot2, length2, scale2 } from './vector.ts'
 
 /** Side rafters nearer than this (cosine) to square with their broken hip stand to it as commons to a ridge. */
 const squareSideCos = 0.35
-/** Where timbers part at a slant beside a joint they stand at least this far apart, so that one clear face bears. */
-const clearStepMm = 1.5
+/** Where timbers part at a slant beside a joint they stand this share of a thickness apart, so that one clear face bears. */
+const clearShare = 1 / 30
 
 /** The rafters of a broken hip's own two slopes that meet it at its foot. */
 export const sidesAt = (broken: Piece, pieces: Piece[]): Piece[] =>
@@ -44,7 +44,7 @@ const pastSquareSides = (broken: Piece, crown: Piece | null, sides: Piece[]): nu
   })
   const half = Math.max(...sides.map((side) => side.halfMm))
   const inSquare = sides.every((side) => Math.abs(dot2(side.dir, broken.dir)) < 1e-6)
-  return inSquare ? half : Math.max(half, ...reaches) + clearStepMm
+  return inSquare ? half : Math.max(half, ...reaches) + 2 * half * clearShare
 }
 
 /**
@@ -55,7 +55,8 @@ const pastOblique = (broken: Piece, crown: Piece | null, half: number): number =
   if (crown === null) return half
   const turn = turnRad(broken, crown)
   if (turn < 1e-6) return half
-  const covered = (crown.halfMm - clearStepMm - broken.halfMm / Math.cos(turn)) / Math.tan(turn)
+  const covered =
+    (crown.halfMm - 2 * crown.halfMm * clearShare - broken.halfMm / Math.cos(turn)) / Math.tan(turn)
   return Math.min(half, Math.max(0, covered))
 }
 

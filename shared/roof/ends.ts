@@ -14,6 +14,9 @@ const downMm = (timber: Timber, leftMm: number, level: Level): number =>
 const crossingMm = (timber: Timber, cut: DraftCut, leftMm: number, level: Level): number =>
   crossingAt(cut.crossing, leftMm, downMm(timber, leftMm, level))
 
+/** Cuts that cross the centre line this near to each other meet on it. */
+const centralGapMm = 1e-6
+
 /** Where two cuts of an end meet across the timber, on one half of it; null outside that half. */
 const meetingMm = (
   timber: Timber,
@@ -26,6 +29,7 @@ const meetingMm = (
   const gapAt = (leftMm: number) =>
     crossingMm(timber, a, leftMm, level) - crossingMm(timber, b, leftMm, level)
   const inner = gapAt(0)
+  if (Math.abs(inner) < centralGapMm) return 0
   const step = inner - gapAt(outer)
   if (Math.abs(step) < 1e-12) return null
   const share = inner / step
@@ -34,7 +38,8 @@ const meetingMm = (
 
 /** Offsets off the centre line at which an end can have a corner. */
 const offsets = (timber: Timber, cuts: DraftCut[], level: Level): number[] => {
-  const found = [timber.halfMm, 0, -timber.halfMm]
+  const isRidged = level === 'top' && (timber.arrisFall.left > 0 || timber.arrisFall.right > 0)
+  const found = isRidged ? [timber.halfMm, 0, -timber.halfMm] : [timber.halfMm, -timber.halfMm]
   for (let i = 0; i < cuts.length; i++) {
     for (let j = i + 1; j < cuts.length; j++) {
       const [a, b] = [cuts[i], cuts[j]]

@@ -22,18 +22,13 @@ export const planingOf = (
       const cuts = draft.cuts.filter((cut) => cut.end === end)
       if (cuts.length === 0) return []
       const { timber } = draft
-      const isBacked = timber.arrisFall.left !== 0 || timber.arrisFall.right !== 0
-      const found = endCorners(timber, cuts, end === 'head')
-      // the middle of a square top is no corner
-      const corners = found
-        .filter((c) => isBacked || c.leftMm !== 0)
-        .map((corner) => ({
-          leftMm: corner.leftMm,
-          overMm:
-            corner.point.z -
-            standMm -
-            Math.min(...slopes.map((slope) => slopeHeightMm(slope, corner.point))),
-        }))
+      const corners = endCorners(timber, cuts, end === 'head').map((corner) => ({
+        leftMm: corner.leftMm,
+        overMm:
+          corner.point.z -
+          standMm -
+          Math.min(...slopes.map((slope) => slopeHeightMm(slope, corner.point))),
+      }))
       return (['left', 'right'] as const).flatMap((side): Planing[] => {
         const sign = side === 'left' ? 1 : -1
         const own = corners.filter((corner) => corner.leftMm * sign >= -1e-6)

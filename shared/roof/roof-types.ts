@@ -104,12 +104,15 @@ export type Cut = {
   alongMm: number
   /** Side of the long point, looking from foot to head with the top edge up. */
   longSide: 'left' | 'right' | 'none'
-  /** Along the top arrises, from the heel plumb line. */
+  /** Along the top arrises, from the heel plumb line; under 0 below it, towards the tail, like `alongMm`. */
   longPointFromHeelMm: number
   shortPointFromHeelMm: number
   /** On the side face: from the arris towards the foot to the line down the face; over 90 allowed. */
   face: Angle
-  /** Across the top: from the arris running into the timber, on the cut's side. */
+  /**
+   * Across the top, at the long point: from the arris running into the timber. Over 90 only where a
+   * backed top turns a nearly square cut past square.
+   */
   edge: Angle
   /** For a hip: the edge bevel of the other kind of top (backed where this one is square, and so on). */
   edgeOtherTop: Angle | null

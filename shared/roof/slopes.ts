@@ -147,7 +147,3 @@ export const edgeUnder = (lines: PlateLines, slope: Slope, alongMm: number): Pla
   })
   return at(lines.edges, found ?? at(slope.edges, slope.edges.length - 1))
 }
-
-/** Interior angle at a corner, degrees: the building's side. */
-export const interiorDeg = (before: Point2, after: Point2): number =>
-  180 - degrees(Math.atan2(cross2(before, after), dot2(before, after)))
