@@ -9,6 +9,7 @@ import {
   type SawnPlane,
 } from './rebuild-member.ts'
 import type { Complain, Complaint } from './report.ts'
+import type { Backing } from './slopes.ts'
 import { angleDeg, cosDeg, dot, sinDeg, sub, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
 /** The spec is exact, so what it says twice must agree to a hundredth of a millimetre. */
@@ -178,8 +179,6 @@ function checkOtherTop(complain: Complain, piece: Piece, sawn: SawnPlane, backed
   const name = `edge bevel of the other top, ${sawn.cut.end} cut`
   expectNear(complain, piece, 'numbers', name, other.fromEdgeDeg, rebuilt, ANGLE_TOL_DEG)
 }
-
-export type Backing = { leftDeg: number; rightDeg: number }
 
 /** Compares everything a spec says twice about one member, and its marked cuts with their planes. */
 export function checkNumbers(

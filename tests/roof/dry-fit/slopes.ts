@@ -42,11 +42,10 @@ export function lowest(slopes: readonly Slope[], x: number, y: number): number {
 export const slopeNormal = (slope: Slope): Vec =>
   unit([-slope.tan * slope.inward[0], -slope.tan * slope.inward[1], 1])
 
+export type Backing = { leftDeg: number; rightDeg: number }
+
 /** Which of two slopes falls away to the left of a member, and how much each turns from square. */
-export function backingFromSlopes(
-  pose: Pose,
-  slopes: readonly Slope[],
-): { leftDeg: number; rightDeg: number } {
+export function backingFromSlopes(pose: Pose, slopes: readonly Slope[]): Backing {
   const falls = slopes.map((slope) => {
     const n = directionToOwn(pose, slopeNormal(slope))
     return toDeg(Math.atan2(n[1], n[2]))
