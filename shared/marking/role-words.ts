@@ -13,9 +13,9 @@ export const roleWords: Record<MemberRole, string> = {
   'cripple-creeper': 'Cripple creeper',
 }
 
-/** `45 × 140`: thickness by depth, as the yard sells it. */
+/** `140 × 45`: depth by thickness, as merchants say it. */
 export function sectionWords(section: Section): string {
-  return `${section.thicknessMm} × ${section.depthMm}`
+  return `${section.depthMm} × ${section.thicknessMm}`
 }
 
 /** 'the ridge R1', 'the hips H1 and H2': pieces named by what they are and their marks. */

@@ -60,7 +60,7 @@ test('over a real SMTP server the reminder arrives whole, after one refusal, wit
   expect(mine?.subject).toBe('Thu 3 Dec, 07:00: 12 Kiln Road, Marrow Creek')
   expect(mine?.text?.trim()).toBe(row?.text?.trim())
   expect(String(mine?.html).trim()).toBe(row?.html?.trim())
-  expect(mine?.text).toContain('45 × 140')
+  expect(mine?.text).toContain('140 × 45')
   expect(mine?.messageId).toBe(`<${row?.id}@ridgehand.example>`)
   expect(mine?.headers.get('auto-submitted')).toBe('auto-generated')
   expect(mine?.attachments).toHaveLength(0)

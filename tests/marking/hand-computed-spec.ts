@@ -2,7 +2,7 @@ import type { Angle, Cut, FrameSpec, Member } from '../../shared/roof/roof-types
 
 /**
  * A 3-4-5 roof worked by hand, so that every number is plain to check: run 3000, rise 2250, set-out length
- * 3750 (Pythagoras), pitch atan(3/4) = 36.8699°. Rafters 45 × 140; ridge 35 thick.
+ * 3750 (Pythagoras), pitch atan(3/4) = 36.8699°. Rafters 140 × 45; ridge 35 thick.
  */
 export const pitchDeg = 36.8699
 

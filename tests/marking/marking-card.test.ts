@@ -21,7 +21,7 @@ test('a common of 3 m run and 2.25 m rise is marked 3750 set out and 3728 to its
   // Source: Pythagoras, a 3-4-5 triangle; half of a 35 ridge over its cosine is 21.9.
   const card = markingCardOf(specOf([common]), 'C1', options)
   expect(card.name).toBe('Common rafter')
-  expect(card.section).toBe('45 × 140')
+  expect(card.section).toBe('140 × 45')
   expect(card.setOutLength).toMatchObject({ valueMm: 3750, text: '3750', unit: 'mm' })
   const head = card.ends.find((end) => end.end === 'head')!
   expect(head.points).toMatchObject([{ label: 'Head cut', valueMm: 3728.125, text: '3728' }])

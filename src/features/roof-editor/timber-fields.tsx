@@ -40,8 +40,8 @@ export function SectionFields() {
         <fieldset key={key} className="col-span-2">
           <legend className="mb-1 font-semibold">{sectionTitles[key]}</legend>
           <div className="grid grid-cols-2 gap-2">
-            <MeasureField path={`sections.${key}.thicknessMm`} label="Thickness, mm" />
             <MeasureField path={`sections.${key}.depthMm`} label="Depth, mm" />
+            <MeasureField path={`sections.${key}.thicknessMm`} label="Thickness, mm" />
           </div>
           {sectionHints[key] ? (
             <p className="mt-1 text-sm text-ink-soft">{sectionHints[key]}</p>
