@@ -7,6 +7,7 @@ import type { RequestHandler } from 'express'
 import session from 'express-session'
 import { pino } from 'pino'
 import { buildApp } from './app.ts'
+import { createDayTurn } from './bookings/day-turn.ts'
 import { openDatabase } from './db/client.ts'
 import { demoSignIns, hasDemo } from './db/demo/demo-sign-ins.ts'
 import { isEmpty, seedDemo } from './db/demo/seed-demo.ts'
@@ -76,13 +77,16 @@ async function main(): Promise<void> {
     log,
     events,
   })
+  const dayTurn = createDayTurn({ db: database.db, clock: systemClock, events, log })
   const server = createServer(app)
   server.listen(env.port, env.host, () => {
+    dayTurn.start()
     mailWorker.start()
     console.log(`Ridgehand is at ${address(env)}`)
     if (hasDemo(database.db)) console.log(demoSignIns())
   })
   const stop = () => {
+    dayTurn.stop()
     const mailDone = mailWorker.stop()
     server.close(() => {
       void mailDone.finally(() => {
