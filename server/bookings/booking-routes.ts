@@ -1,3 +1,4 @@
+import type { Request } from 'express'
 import {
   cancelBookingSchema,
   changeBookingSchema,
@@ -17,6 +18,7 @@ import type { EventHub } from '../events/event-hub.ts'
 import { type Api, send } from '../http/api.ts'
 import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId } from '../http/path-id.ts'
 import type { Clock } from '../lib/clock.ts'
 import { createBookingService } from './booking-service.ts'
 import { createCalendarService } from './calendar-service.ts'
@@ -26,7 +28,7 @@ export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: Ev
   const calendar = createCalendarService(deps)
   const bookings = createBookingService({ ...deps, calendar })
   const unbooked = createUnbookedService(deps)
-  const idOf = (params: Record<string, unknown>): string => String(params['bookingId'])
+  const idOf = (req: Request): string => pathId(req, 'bookingId', 'That booking')
 
   api.route('get', '/api/calendar', 'calendar:read', (req, res) => {
     const span = parseInput(calendarQuerySchema, req.query)
@@ -39,7 +41,7 @@ export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: Ev
   })
 
   api.route('get', '/api/bookings/:bookingId', 'calendar:read', (req, res) => {
-    const booking = calendar.readBooking(currentUser(res), idOf(req.params))
+    const booking = calendar.readBooking(currentUser(res), idOf(req))
     if (!booking) throw notFound('That booking')
     send(res, bookingSchema, booking)
   })
@@ -51,16 +53,16 @@ export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: Ev
 
   api.route('patch', '/api/bookings/:bookingId', 'booking:write', (req, res) => {
     const input = parseInput(changeBookingSchema, req.body)
-    send(res, bookingSchema, bookings.change(currentUser(res), idOf(req.params), input))
+    send(res, bookingSchema, bookings.change(currentUser(res), idOf(req), input))
   })
 
   api.route('post', '/api/bookings/:bookingId/cancel', 'booking:write', (req, res) => {
     const input = parseInput(cancelBookingSchema, req.body)
-    send(res, bookingSchema, bookings.cancel(currentUser(res), idOf(req.params), input))
+    send(res, bookingSchema, bookings.cancel(currentUser(res), idOf(req), input))
   })
 
   api.route('post', '/api/bookings/:bookingId/restore', 'booking:write', (req, res) => {
     const input = parseInput(restoreBookingSchema, req.body)
-    send(res, bookingSchema, bookings.restore(currentUser(res), idOf(req.params), input))
+    send(res, bookingSchema, bookings.restore(currentUser(res), idOf(req), input))
   })
 }

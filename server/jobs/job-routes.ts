@@ -10,16 +10,11 @@ import {
 import { boardSchema, jobSchema } from '../../shared/jobs/job-views.ts'
 import { currentUser } from '../auth/current-user.ts'
 import { type Api, send } from '../http/api.ts'
-import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId, pathPart } from '../http/path-id.ts'
 import { createJobService, type JobDeps } from './job-service.ts'
 
-/** An id in an address that is no id belongs to no job: the same 404 as a missing one. */
-function jobIdOf(req: Request): string {
-  const parsed = z.uuid().safeParse(req.params['jobId'])
-  if (!parsed.success) throw notFound('This job')
-  return parsed.data
-}
+const jobIdOf = (req: Request) => pathId(req, 'jobId', 'This job')
 
 export function jobRoutes(api: Api, deps: JobDeps): void {
   const jobs = createJobService(deps)
@@ -45,9 +40,8 @@ export function jobRoutes(api: Api, deps: JobDeps): void {
 
   api.route('put', '/api/jobs/:jobId/facts/:fact', 'job:write', (req, res) => {
     const jobId = jobIdOf(req)
-    const fact = z.enum(jobFactNames).safeParse(req.params['fact'])
-    if (!fact.success) throw notFound('This')
+    const fact = pathPart(req, 'fact', z.enum(jobFactNames), 'This')
     const input = parseInput(setFactSchema, req.body)
-    send(res, jobSchema, jobs.setFact(currentUser(res), jobId, fact.data, input))
+    send(res, jobSchema, jobs.setFact(currentUser(res), jobId, fact, input))
   })
 }

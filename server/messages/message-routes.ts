@@ -1,5 +1,4 @@
-import { z } from 'zod'
-import { idSchema } from '../../shared/http/fields.ts'
+import type { Request } from 'express'
 import {
   listMessagesSchema,
   messageDetailSchema,
@@ -9,9 +8,10 @@ import {
 import { currentUser } from '../auth/current-user.ts'
 import { type Api, send } from '../http/api.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId } from '../http/path-id.ts'
 import { createMessageService, type MessageDeps } from './message-service.ts'
 
-const pathSchema = z.object({ id: idSchema })
+const messageIdOf = (req: Request) => pathId(req, 'id', 'That message')
 
 export function messageRoutes(api: Api, deps: MessageDeps): void {
   const messages = createMessageService(deps)
@@ -21,11 +21,11 @@ export function messageRoutes(api: Api, deps: MessageDeps): void {
   })
 
   api.route('get', '/api/messages/:id', 'message:read', (req, res) => {
-    send(res, messageDetailSchema, messages.read(parseInput(pathSchema, req.params).id))
+    send(res, messageDetailSchema, messages.read(messageIdOf(req)))
   })
 
   api.route('post', '/api/messages/:id/retry', 'message:write', (req, res) => {
-    const { id } = parseInput(pathSchema, req.params)
+    const id = messageIdOf(req)
     parseInput(retryMessageSchema, req.body)
     send(res, messageDetailSchema, messages.retry(currentUser(res), id))
   })

@@ -1,7 +1,6 @@
 import type { Request } from 'express'
 import { z } from 'zod'
 import { doneSchema } from '../../shared/auth/auth-schemas.ts'
-import { idSchema } from '../../shared/http/fields.ts'
 import {
   addLeaveSchema,
   createPersonSchema,
@@ -14,19 +13,15 @@ import {
 } from '../../shared/people/people-schemas.ts'
 import { currentUser } from '../auth/current-user.ts'
 import { type Api, send } from '../http/api.ts'
-import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId } from '../http/path-id.ts'
 import { addCrew, addLeave, dropLeave, editCrew, listCrews, movePerson } from './crew-service.ts'
 import { firmToday, type PeopleDeps } from './people-change.ts'
 import { addPerson, editPerson, inviteAgain } from './people-service.ts'
 import { listPeople } from './people-store.ts'
 
-/** An id in the path that is no id is a row that is not there. */
-function idIn(req: Request, name: string): string {
-  const parsed = idSchema.safeParse(req.params[name])
-  if (!parsed.success) throw notFound()
-  return parsed.data
-}
+const personIdOf = (req: Request) => pathId(req, 'id', 'That person')
+const crewIdOf = (req: Request) => pathId(req, 'id', 'That crew')
 
 export function peopleRoutes(api: Api, deps: PeopleDeps): void {
   api.route('get', '/api/people', 'person:read', (_req, res) => {
@@ -44,26 +39,26 @@ export function peopleRoutes(api: Api, deps: PeopleDeps): void {
     send(
       res,
       personSchema,
-      editPerson(deps, currentUser(res), idIn(req, 'id'), parseInput(editPersonSchema, req.body)),
+      editPerson(deps, currentUser(res), personIdOf(req), parseInput(editPersonSchema, req.body)),
     )
   })
   api.route('post', '/api/people/:id/invitation', 'person:write', (req, res) => {
     parseInput(z.strictObject({}), req.body)
-    inviteAgain(deps, currentUser(res), idIn(req, 'id'))
+    inviteAgain(deps, currentUser(res), personIdOf(req))
     send(res, doneSchema, { done: true }, 202)
   })
   api.route('put', '/api/people/:id/crew', 'crew:write', (req, res) => {
     send(
       res,
       personSchema,
-      movePerson(deps, currentUser(res), idIn(req, 'id'), parseInput(moveCrewSchema, req.body)),
+      movePerson(deps, currentUser(res), personIdOf(req), parseInput(moveCrewSchema, req.body)),
     )
   })
   api.route('post', '/api/people/:id/leave', 'person:write', (req, res) => {
     send(
       res,
       personSchema,
-      addLeave(deps, currentUser(res), idIn(req, 'id'), parseInput(addLeaveSchema, req.body)),
+      addLeave(deps, currentUser(res), personIdOf(req), parseInput(addLeaveSchema, req.body)),
       201,
     )
   })
@@ -71,7 +66,7 @@ export function peopleRoutes(api: Api, deps: PeopleDeps): void {
     send(
       res,
       personSchema,
-      dropLeave(deps, currentUser(res), idIn(req, 'id'), idIn(req, 'leaveId')),
+      dropLeave(deps, currentUser(res), personIdOf(req), pathId(req, 'leaveId', 'That leave')),
     )
   })
   api.route('get', '/api/crews', 'crew:read', (_req, res) => {
@@ -82,7 +77,7 @@ export function peopleRoutes(api: Api, deps: PeopleDeps): void {
     send(res, doneSchema, { done: true }, 201)
   })
   api.route('put', '/api/crews/:id', 'crew:write', (req, res) => {
-    editCrew(deps, currentUser(res), idIn(req, 'id'), parseInput(crewInputSchema, req.body))
+    editCrew(deps, currentUser(res), crewIdOf(req), parseInput(crewInputSchema, req.body))
     send(res, doneSchema, { done: true })
   })
 }

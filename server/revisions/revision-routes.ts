@@ -10,21 +10,13 @@ import {
 } from '../../shared/revisions/revision-schemas.ts'
 import { currentUser } from '../auth/current-user.ts'
 import { type Api, send } from '../http/api.ts'
-import { notFound } from '../http/app-error.ts'
 import { parseInput } from '../http/parse-input.ts'
+import { pathId, pathPart } from '../http/path-id.ts'
 import type { RevisionService } from './revision-service.ts'
 
-const jobIdSchema = z.uuid()
 const letterSchema = z.string().regex(/^[A-Z]{1,3}$/)
 
-/** An address that cannot name a row is a missing row. */
-function param<Schema extends z.ZodType>(req: Request, name: string, schema: Schema, what: string) {
-  const parsed = schema.safeParse(req.params[name])
-  if (!parsed.success) throw notFound(what)
-  return parsed.data
-}
-
-const jobIdOf = (req: Request) => param(req, 'jobId', jobIdSchema, 'That job')
+const jobIdOf = (req: Request) => pathId(req, 'jobId', 'That job')
 
 export function revisionRoutes(api: Api, revisions: RevisionService): void {
   api.route('get', '/api/jobs/:jobId/roof', 'roof:write', (req, res) => {
@@ -46,7 +38,7 @@ export function revisionRoutes(api: Api, revisions: RevisionService): void {
 
   api.route('get', '/api/jobs/:jobId/revisions/:letter', 'roof:read', (req, res) => {
     const jobId = jobIdOf(req)
-    const letter = param(req, 'letter', letterSchema, 'That revision')
+    const letter = pathPart(req, 'letter', letterSchema, 'That revision')
     send(res, revisionSchema, revisions.readRevision(currentUser(res), jobId, letter))
   })
 }
