@@ -1,7 +1,5 @@
+import type { Covering as CoveringKind } from '../jobs/job-schemas.ts'
 import type { Covering, RoofSettings } from '../roof/roof-types.ts'
-
-export const coverings = ['tiles', 'sheet', 'shingles', 'other'] as const
-export type CoveringKind = (typeof coverings)[number]
 
 type CoveringFact = {
   name: string

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { coverings } from './coverings.ts'
+import { coverings } from '../jobs/job-schemas.ts'
 import { frameSpecSchema, roofSchema, roofSettingsSchema } from './frame-spec-schema.ts'
 import { roofFormSchema } from './roof-form.ts'
 
