@@ -16,7 +16,8 @@ export function openDatabase(dataDir: string | ':memory:'): OpenDatabase {
   const file = dataDir === ':memory:' ? dataDir : path.join(dataDir, 'ridgehand.db')
   const sqlite = new Database(file)
   sqlite.pragma('journal_mode = WAL')
-  sqlite.pragma('synchronous = NORMAL')
+  // A mail said to be sent, or told, must not be forgotten over a power cut.
+  sqlite.pragma('synchronous = FULL')
   sqlite.pragma('busy_timeout = 5000')
   sqlite.pragma('foreign_keys = ON')
   return { db: drizzle(sqlite, { schema }), sqlite, close: () => sqlite.close() }
