@@ -76,7 +76,7 @@ export const suffix = (place: number): string => {
   return place < 26 ? letter : suffix(Math.floor(place / 26) - 1) + letter
 }
 
-export type MarkedMembers = { members: Member[]; cutLines: CutLine[]; markOf: Map<number, string> }
+type MarkedMembers = { members: Member[]; cutLines: CutLine[]; markOf: Map<number, string> }
 
 const finished = (draft: DraftMember, markOf: Map<number, string>): Member => {
   const mark = (piece: number) => markOf.get(piece) ?? ''

@@ -4,7 +4,7 @@ import type { DraftCut } from './cuts.ts'
 import type { Point3 } from './roof-types.ts'
 
 /** A corner of a timber's end: where it is and how far off the centre line. */
-export type EndCorner = { leftMm: number; alongMm: number; point: Point3 }
+type EndCorner = { leftMm: number; alongMm: number; point: Point3 }
 
 type Level = 'top' | 'bottom'
 

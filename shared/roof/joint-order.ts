@@ -99,7 +99,7 @@ const isShared = (cut: PlanCut, job: EndJob, jobs: EndJob[]): boolean =>
   )
 
 /** When an end was placed; with null, the first end of that piece. */
-export type PlacedAt = (piece: number, end: PieceEnd | null) => number
+type PlacedAt = (piece: number, end: PieceEnd | null) => number
 
 /**
  * Cuts all ends that meet other timber, in the order of who runs through and who butts; changes the

@@ -9,7 +9,7 @@ import { distance2, dot2, scale2, sub2 } from './vector.ts'
 export type Border =
   { kind: 'plate'; edge: number } | { kind: 'slope'; slope: number } | { kind: 'open' }
 
-export type RoofNode = { point: Point3; corner: number | null }
+type RoofNode = { point: Point3; corner: number | null }
 
 /** A slope's own part of the plan, corner by corner; `borders[k]` runs from node k to node k + 1. */
 export type Face = { slope: number; nodes: number[]; borders: Border[] }

@@ -23,12 +23,7 @@ const topNormal = (timber: Timber, cut: DraftCut): Point3 => {
  * A cut as it comes out when its long point, face and edge bevels are marked to the given steps:
  * the plane through the marked point, along both marked lines.
  */
-export const rebuiltPlane = (
-  timber: Timber,
-  cut: DraftCut,
-  roundMm: number,
-  roundDeg: number,
-): Plane => {
+const rebuiltPlane = (timber: Timber, cut: DraftCut, roundMm: number, roundDeg: number): Plane => {
   const side = markedSide(cut)
   const leftMm = side * timber.halfMm
   const along = roundTo(cut.longPointFromHeelMm, roundMm)

@@ -1,16 +1,5 @@
 import type { Point2, Roof } from './roof-types.ts'
-import {
-  add2,
-  cross2,
-  degrees,
-  distance2,
-  dot2,
-  left2,
-  radians,
-  scale2,
-  sub2,
-  unit2,
-} from './vector.ts'
+import { add2, cross2, distance2, dot2, left2, radians, scale2, sub2, unit2 } from './vector.ts'
 
 /** One plate edge in plan; `inward` points into the building. */
 export type PlateEdge = {

@@ -12,7 +12,7 @@ export const birdsmouthShare = 1 / 3
  * Height over plate that one slope asks for, mm: what is left over the largest birdsmouth that takes
  * at most a third of the rafter's depth, square to the edge, and seats at most on the plate's width.
  */
-export const standAskedMm = (roof: Roof, pitchDeg: number): number => {
+const standAskedMm = (roof: Roof, pitchDeg: number): number => {
   const pitch = radians(pitchDeg)
   const plumbDepth = roof.sections.rafter.depthMm / Math.cos(pitch)
   const byDepth = (roof.sections.rafter.depthMm * birdsmouthShare) / Math.cos(pitch)

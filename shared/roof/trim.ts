@@ -39,7 +39,7 @@ const cutAway = (polygon: Labelled<Side>, cut: PlanCut, label: Side): Labelled<S
 const reachPastMm = (piece: Piece): number => 12 * piece.halfMm + 400
 
 /** The plan of a piece with its cuts, from `fromMm` to `toMm`. */
-export const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side> => {
+const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side> => {
   let polygon = strip(piece, fromMm, toMm)
   piece.headCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'head', cut: k })))
   piece.footCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'foot', cut: k })))

@@ -17,7 +17,7 @@ export const distance2 = (a: Point2, b: Point2): number => Math.hypot(a.x - b.x,
 export const left2 = (a: Point2): Point2 => ({ x: -a.y, y: a.x })
 export const unit2 = (a: Point2): Point2 => scale2(a, 1 / length2(a))
 
-export const sub3 = (a: Point3, b: Point3): Point3 => ({ x: a.x - b.x, y: a.y - b.y, z: a.z - b.z })
+const sub3 = (a: Point3, b: Point3): Point3 => ({ x: a.x - b.x, y: a.y - b.y, z: a.z - b.z })
 export const scale3 = (a: Point3, k: number): Point3 => ({ x: a.x * k, y: a.y * k, z: a.z * k })
 export const dot3 = (a: Point3, b: Point3): number => a.x * b.x + a.y * b.y + a.z * b.z
 export const cross3 = (a: Point3, b: Point3): Point3 => ({
