@@ -1,5 +1,5 @@
 import { rateLimit } from 'express-rate-limit'
-import type { Request } from 'express'
+import type { Request, RequestHandler, Response } from 'express'
 import {
   askResetSchema,
   changePasswordSchema,
@@ -21,29 +21,32 @@ import { endSession, sessionCookieName, startSession } from './session.ts'
 
 const minutesMs = 60_000
 
-/** Two counters: one an account, one an address; either one full stops the try. */
-function signInLimits() {
-  const shared = {
+type Counter = {
+  /** Tries a quarter of an hour. */
+  most: number
+  /** Whose tries; the address they come from when left out. */
+  of?: (req: Request, res: Response) => string
+  /** Count those that went well too. */
+  countAll?: boolean
+}
+
+function limit({ most, of, countAll = false }: Counter): RequestHandler {
+  return rateLimit({
     windowMs: 15 * minutesMs,
-    standardHeaders: 'draft-8' as const,
+    limit: most,
+    standardHeaders: 'draft-8',
     legacyHeaders: false,
+    skipSuccessfulRequests: !countAll,
+    ...(of ? { keyGenerator: of } : {}),
     handler: () => {
-      throw new AppError(
-        'too_many',
-        'Too many tries. Wait a quarter of an hour, or reset the password.',
-      )
+      throw new AppError('too_many', 'Too many tries. Wait a quarter of an hour and try again.')
     },
-  }
-  const account = (req: Request) => {
-    const email: unknown = (req.body as { email?: unknown } | undefined)?.email
-    return typeof email === 'string'
-      ? `account:${email.trim().toLowerCase().slice(0, 254)}`
-      : 'account:none'
-  }
-  return [
-    rateLimit({ ...shared, limit: 10, keyGenerator: account, skipSuccessfulRequests: true }),
-    rateLimit({ ...shared, limit: 60, skipSuccessfulRequests: true }),
-  ]
+  })
+}
+
+function accountOf(req: Request): string {
+  const email: unknown = (req.body as { email?: unknown } | undefined)?.email
+  return typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : ''
 }
 
 export function authRoutes(api: Api, deps: { db: Db; clock: Clock; auth: AuthService }): void {
@@ -65,7 +68,9 @@ export function authRoutes(api: Api, deps: { db: Db; clock: Clock; auth: AuthSer
     send(res, sessionSchema, sessionFor(maybeCurrentUser(res)))
   })
 
-  api.route('post', '/api/session', 'public', ...signInLimits(), async (req, res) => {
+  // The address first: once it is full, no more accounts are remembered for it.
+  const signInLimits = [limit({ most: 60 }), limit({ most: 10, of: accountOf })]
+  api.route('post', '/api/session', 'public', ...signInLimits, async (req, res) => {
     const { email, password } = parseInput(signInSchema, req.body)
     await startSession(req, await auth.signIn(email, password))
     send(res, doneSchema, { done: true }, 201)
@@ -77,18 +82,24 @@ export function authRoutes(api: Api, deps: { db: Db; clock: Clock; auth: AuthSer
     send(res, doneSchema, { done: true })
   })
 
-  api.route('post', '/api/password-resets', 'public', ...signInLimits(), (req, res) => {
+  // Each one asked for is a mail to somebody.
+  const resetLimits = [
+    limit({ most: 30, countAll: true }),
+    limit({ most: 5, of: accountOf, countAll: true }),
+  ]
+  api.route('post', '/api/password-resets', 'public', ...resetLimits, (req, res) => {
     auth.askReset(parseInput(askResetSchema, req.body).email)
     send(res, doneSchema, { done: true }, 202)
   })
 
-  api.route('put', '/api/password-resets', 'public', ...signInLimits(), async (req, res) => {
+  api.route('put', '/api/password-resets', 'public', limit({ most: 30 }), async (req, res) => {
     const { token, password } = parseInput(useResetSchema, req.body)
     await startSession(req, await auth.useReset(token, password))
     send(res, doneSchema, { done: true })
   })
 
-  api.route('put', '/api/session/password', 'account:own', async (req, res) => {
+  const ownLimit = limit({ most: 10, of: (_req, res) => currentUser(res).id })
+  api.route('put', '/api/session/password', 'account:own', ownLimit, async (req, res) => {
     const { current, next } = parseInput(changePasswordSchema, req.body)
     await startSession(req, await auth.changePassword(currentUser(res).id, current, next))
     send(res, doneSchema, { done: true })

@@ -1,18 +1,36 @@
 import { and, eq, sql } from 'drizzle-orm'
-import type { Db } from '../db/client.ts'
+import type { Db, DbOrTx } from '../db/client.ts'
 import { people } from '../db/tables/people-tables.ts'
 import { AppError, invalidField } from '../http/app-error.ts'
 import { writeAudit } from '../lib/audit.ts'
 import type { Clock } from '../lib/clock.ts'
 import { newId } from '../lib/ids.ts'
 import { enqueueMail } from '../mail/outbox-store.ts'
-import { spendPasswordToken } from './password-links.ts'
+import { dropPasswordLinks, isPasswordTokenGood, spendPasswordToken } from './password-links.ts'
 import { hashPassword, verifyDecoy, verifyPassword } from './passwords.ts'
 
 export type SignedInPerson = { id: string; sessionEpoch: number }
 export type AuthService = ReturnType<typeof createAuthService>
 
 const wrongSignIn = 'That e-mail address and password do not go together.'
+
+/** Sets the hash, ends every session of the person and every link sent before. */
+function setPassword(
+  tx: DbOrTx,
+  input: { personId: string; passwordHash: string; action: string; now: Date },
+): SignedInPerson {
+  const { personId, passwordHash, action, now } = input
+  const person = tx
+    .update(people)
+    .set({ passwordHash, sessionEpoch: sql`${people.sessionEpoch} + 1` })
+    .where(and(eq(people.id, personId), eq(people.active, true)))
+    .returning({ id: people.id, sessionEpoch: people.sessionEpoch })
+    .get() as SignedInPerson | undefined
+  if (!person) throw new AppError('not_found', 'That account is no longer open. Ask the office.')
+  dropPasswordLinks(tx, personId)
+  writeAudit(tx, { at: now, personId, action, entity: 'person', entityId: personId })
+  return person
+}
 
 export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
   const activeByEmail = (email: string) =>
@@ -57,28 +75,18 @@ export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
     })
   }
 
-  /** Sets the hash and ends every session of the person. */
-  function setPassword(personId: string, passwordHash: string, action: string): SignedInPerson {
-    return db.transaction((tx) => {
-      const person = tx
-        .update(people)
-        .set({ passwordHash, sessionEpoch: sql`${people.sessionEpoch} + 1` })
-        .where(and(eq(people.id, personId), eq(people.active, true)))
-        .returning({ id: people.id, sessionEpoch: people.sessionEpoch })
-        .get()
-      if (!person)
-        throw new AppError('not_found', 'That account is no longer open. Ask the office.')
-      writeAudit(tx, { at: clock.now(), personId, action, entity: 'person', entityId: personId })
-      return person
-    })
-  }
-
   async function useReset(token: string, password: string): Promise<SignedInPerson> {
+    const spentOrOld = () =>
+      invalidField('token', 'That link has been used or is too old. Ask for a new one.')
+    // A guess must not cost the work of a hash.
+    if (!isPasswordTokenGood(db, token, clock.now())) throw spentOrOld()
     const passwordHash = await hashPassword(password)
-    const personId = spendPasswordToken(db, token, clock.now())
-    if (!personId)
-      throw invalidField('token', 'That link has been used or is too old. Ask for a new one.')
-    return setPassword(personId, passwordHash, 'password set by link')
+    const now = clock.now()
+    return db.transaction((tx) => {
+      const personId = spendPasswordToken(tx, token, now)
+      if (!personId) throw spentOrOld()
+      return setPassword(tx, { personId, passwordHash, action: 'password set by link', now })
+    })
   }
 
   async function changePassword(
@@ -89,7 +97,11 @@ export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
     const person = db.select().from(people).where(eq(people.id, personId)).get()
     const right = person?.passwordHash ? await verifyPassword(person.passwordHash, current) : false
     if (!right) throw invalidField('current', 'That is not the password you have now.')
-    return setPassword(personId, await hashPassword(next), 'password changed')
+    const passwordHash = await hashPassword(next)
+    const now = clock.now()
+    return db.transaction((tx) =>
+      setPassword(tx, { personId, passwordHash, action: 'password changed', now }),
+    )
   }
 
   return { signIn, askReset, useReset, changePassword }

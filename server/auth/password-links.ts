@@ -14,9 +14,7 @@ export const invitationHours = 7 * 24
  */
 export function issuePasswordToken(db: DbOrTx, personId: string, now: Date, hours: number): string {
   const token = newToken()
-  db.delete(passwordResets)
-    .where(and(eq(passwordResets.personId, personId), isNull(passwordResets.usedAt)))
-    .run()
+  dropPasswordLinks(db, personId)
   db.insert(passwordResets)
     .values({
       id: newId(),
@@ -28,18 +26,35 @@ export function issuePasswordToken(db: DbOrTx, personId: string, now: Date, hour
   return token
 }
 
+/** Links not used yet stop working: they were for another address, or for access that has ended. */
+export function dropPasswordLinks(db: DbOrTx, personId: string): void {
+  db.delete(passwordResets)
+    .where(and(eq(passwordResets.personId, personId), isNull(passwordResets.usedAt)))
+    .run()
+}
+
+const worksAt = (token: string, now: Date) =>
+  and(
+    eq(passwordResets.tokenHash, hashToken(token)),
+    isNull(passwordResets.usedAt),
+    gt(passwordResets.expiresAt, now),
+  )
+
+export function isPasswordTokenGood(db: DbOrTx, token: string, now: Date): boolean {
+  const found = db
+    .select({ id: passwordResets.id })
+    .from(passwordResets)
+    .where(worksAt(token, now))
+    .get()
+  return found !== undefined
+}
+
 /** Spends a token; null when it is unknown, used or too old. */
 export function spendPasswordToken(db: DbOrTx, token: string, now: Date): string | null {
   const spent = db
     .update(passwordResets)
     .set({ usedAt: now })
-    .where(
-      and(
-        eq(passwordResets.tokenHash, hashToken(token)),
-        isNull(passwordResets.usedAt),
-        gt(passwordResets.expiresAt, now),
-      ),
-    )
+    .where(worksAt(token, now))
     .returning({ personId: passwordResets.personId })
     .get()
   return spent?.personId ?? null

@@ -6,6 +6,7 @@ import type {
   Person,
 } from '../../shared/people/people-schemas.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
+import { dropPasswordLinks } from '../auth/password-links.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { people } from '../db/tables/people-tables.ts'
 import { invalidField, staleVersion } from '../http/app-error.ts'
@@ -80,6 +81,7 @@ export function editPerson(
         'You cannot take away your own access. Ask somebody else in the office.',
       )
     }
+    if (accessChanged || row.email !== fields.email) dropPasswordLinks(tx, id)
     tx.update(people)
       .set({
         ...fields,

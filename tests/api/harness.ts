@@ -1,5 +1,5 @@
 import session from 'express-session'
-import { pino } from 'pino'
+import { type Logger, pino } from 'pino'
 import request from 'supertest'
 import type { Role } from '../../shared/auth/roles.ts'
 import { buildApp } from '../../server/app.ts'
@@ -22,18 +22,21 @@ export type TestApp = Awaited<ReturnType<typeof createTestApp>>
 export type Agent = ReturnType<typeof request.agent>
 
 /** A whole server on a fresh in-memory database, its clock in the test's hand. */
-export async function createTestApp(options: { now?: Date } = {}) {
+export async function createTestApp(
+  options: { now?: Date; env?: Record<string, string>; log?: Logger } = {},
+) {
   const database = openDatabase(':memory:')
   migrateDatabase(database)
   const clock = { current: options.now ?? testNow, now: () => clock.current }
   const events = createEventHub()
-  const env = readEnv({ NODE_ENV: 'test', PORT: '0', APP_URL: 'http://ridgehand.test' })
+  const given = { NODE_ENV: 'test', PORT: '0', APP_URL: 'http://ridgehand.test' }
+  const env = readEnv({ ...given, ...options.env })
   const deps = {
     env,
     db: database.db,
     clock,
     events,
-    log: pino({ level: 'silent' }),
+    log: options.log ?? pino({ level: 'silent' }),
     sessionStore: new session.MemoryStore(),
     screens: [],
   }
