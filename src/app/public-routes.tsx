@@ -1,10 +1,12 @@
 import type { RouteObject } from 'react-router-dom'
+import { PageSkeleton } from '../ui/skeleton.tsx'
 import { RouteError } from './route-error.tsx'
 
 /** Screens for somebody not signed in. */
 export const publicRoutes: RouteObject[] = [
   {
     errorElement: <RouteError />,
+    hydrateFallbackElement: <PageSkeleton />,
     children: [
       {
         path: '/sign-in',

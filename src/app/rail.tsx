@@ -1,9 +1,10 @@
+import { Keyboard } from 'lucide-react'
 import { NavLink } from 'react-router-dom'
 import { roleNames } from '../../shared/auth/roles.ts'
 import type { SessionUser } from '../lib/session.ts'
 import type { NavigationEntry } from './navigation.ts'
 
-type Props = { entries: NavigationEntry[]; user: SessionUser; firmName: string }
+type Props = { entries: NavigationEntry[]; user: SessionUser; firmName: string; onKeys: () => void }
 
 const linkClass = ({ isActive }: { isActive: boolean }) =>
   `flex min-h-11 items-center gap-3 rounded-md px-3 font-semibold ${
@@ -11,7 +12,7 @@ const linkClass = ({ isActive }: { isActive: boolean }) =>
   }`
 
 /** Navigation at the desk. */
-export function Rail({ entries, user, firmName }: Props) {
+export function Rail({ entries, user, firmName, onKeys }: Props) {
   return (
     <aside className="fixed inset-y-0 left-0 z-20 hidden w-56 flex-col border-r border-rule bg-sheet lg:flex print:hidden">
       <div className="px-4 pb-4 pt-5">
@@ -28,6 +29,18 @@ export function Rail({ entries, user, firmName }: Props) {
         ))}
       </nav>
       <div className="border-t border-rule p-2">
+        <button
+          type="button"
+          aria-keyshortcuts="?"
+          onClick={onKeys}
+          className="flex min-h-11 w-full items-center gap-3 rounded-md px-3 font-semibold text-ink-soft hover:bg-paper"
+        >
+          <Keyboard size={20} aria-hidden />
+          Keys
+          <kbd className="ml-auto rounded-sm border border-ink-soft px-1.5 font-sans text-sm">
+            ?
+          </kbd>
+        </button>
         <NavLink to="/account" className={linkClass}>
           <span className="min-w-0">
             <span className="block truncate">{user.name}</span>

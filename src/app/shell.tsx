@@ -4,13 +4,16 @@ import { useLiveEvents } from '../lib/live-events.ts'
 import { useSession, type SessionUser } from '../lib/session.ts'
 import { PageSkeleton } from '../ui/skeleton.tsx'
 import { BottomBar } from './bottom-bar.tsx'
+import { KeysDialog } from './keys-dialog.tsx'
 import { navigationOf } from './navigation.ts'
 import { Rail } from './rail.tsx'
+import { useKeysHelp } from './use-keys-help.ts'
 
 function SignedInShell({ user }: { user: SessionUser }) {
   useLiveEvents()
   const { firm } = useSession()
   const entries = navigationOf[user.role]
+  const keys = useKeysHelp()
   const loading = useNavigation().state === 'loading'
   return (
     <div className="min-h-dvh lg:pl-56 print:pl-0">
@@ -20,7 +23,7 @@ function SignedInShell({ user }: { user: SessionUser }) {
       >
         Skip to the page
       </a>
-      <Rail entries={entries} user={user} firmName={firm.name} />
+      <Rail entries={entries} user={user} firmName={firm.name} onKeys={keys.open} />
       <main
         id="main"
         aria-busy={loading}
@@ -31,6 +34,7 @@ function SignedInShell({ user }: { user: SessionUser }) {
         </Suspense>
       </main>
       <BottomBar entries={entries} user={user} />
+      <KeysDialog role={user.role} open={keys.isOpen} onClose={keys.close} />
     </div>
   )
 }

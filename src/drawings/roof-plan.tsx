@@ -71,7 +71,7 @@ export function RoofPlan(props: Props) {
             onPick={onPick}
           />
         ) : (
-          <p className="p-4 text-ink-soft">Type the corners and the plan is drawn here.</p>
+          <p className="p-4 text-ink-soft">The plan is drawn here as its sizes are typed.</p>
         )}
       </div>
       {drawing ? (

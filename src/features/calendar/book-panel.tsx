@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
-import { useNavigate, useSearchParams } from 'react-router-dom'
+import { Link, useNavigate, useSearchParams } from 'react-router-dom'
+import { buttonClass } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { EmptyState, ErrorState } from '../../ui/states.tsx'
@@ -7,6 +8,12 @@ import { useSession } from '../../lib/session.ts'
 import { BookForm } from './book-form.tsx'
 import { searchWith } from './calendar-address.ts'
 import { calendarQueries } from './calendar-queries.ts'
+
+const linkTo = (to: string, words: string) => (
+  <Link to={to} className={buttonClass('plain')}>
+    {words}
+  </Link>
+)
 
 /** The form behind /calendar/book?job=…&day=…, whether a job was dragged there or picked by hand. */
 export function BookPanel() {
@@ -24,11 +31,16 @@ export function BookPanel() {
       ) : !data ? (
         <PageSkeleton />
       ) : jobs.length === 0 ? (
-        <EmptyState title="Nothing is waiting for a crew">
-          A job stands here once its price is accepted on the board.
+        <EmptyState
+          title="Nothing is waiting for a crew"
+          action={linkTo('/board', 'Go to the board')}
+        >
+          Open a job and press Accepted today; then it can be booked.
         </EmptyState>
       ) : data.crews.length === 0 ? (
-        <EmptyState title="There is no crew yet">Make one under People first.</EmptyState>
+        <EmptyState title="There is no crew yet" action={linkTo('/people', 'Go to People')}>
+          Add a crew and who is in it first.
+        </EmptyState>
       ) : (
         <BookForm
           key={jobId}

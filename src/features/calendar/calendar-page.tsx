@@ -75,7 +75,7 @@ function Unbooked({ isNarrow }: { isNarrow: boolean }) {
   ) : !data ? (
     <Skeleton className="h-24" />
   ) : jobs.length === 0 ? (
-    <p className="text-ink-soft">Every job won is booked.</p>
+    <p className="text-ink-soft">None waiting. A job comes here once its price is accepted.</p>
   ) : (
     <UnbookedList jobs={jobs} crews={data.crews} mayDrag={!isNarrow} />
   )

@@ -16,11 +16,11 @@ function Heading({ stage, count }: { stage: JobStage; count: number }) {
   )
 }
 
-/** A column at the desk; on a phone a section that folds. An empty one is narrow, and left out on a phone. */
+/** A column at the desk, narrow enough for all seven at 1360 px; on a phone a section that folds. An empty one is narrower, and left out on a phone. */
 function StageColumn({ stage, cards, count, onShowAll }: ColumnProps) {
   const [open, setOpen] = useState(stage !== 'complete')
   const Chevron = open ? ChevronDown : ChevronRight
-  const width = count === 0 ? 'hidden lg:flex lg:w-24' : 'flex lg:w-52 lg:grow'
+  const width = count === 0 ? 'hidden lg:flex lg:w-24' : 'flex lg:w-36 lg:grow'
   return (
     <section className={`${width} min-h-0 shrink-0 flex-col`}>
       <h2 className="text-lg font-extrabold">
@@ -67,7 +67,7 @@ export function BoardColumns({
   onShowStage: (stage: JobStage) => void
 }) {
   return (
-    <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-14.25rem)] lg:min-h-96 lg:gap-3 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
+    <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-14.25rem)] lg:min-h-96 lg:gap-2 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
       {jobStages.map((stage) => (
         <StageColumn
           key={stage}

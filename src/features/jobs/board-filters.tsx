@@ -1,7 +1,7 @@
 import { Search, X } from 'lucide-react'
-import { useEffect, useRef } from 'react'
 import { jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
 import type { Board } from '../../../shared/jobs/job-views.ts'
+import { useSearchKey } from '../../lib/use-search-key.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { Select, TextInput } from '../../ui/inputs.tsx'
@@ -12,29 +12,6 @@ type Props = {
   change: (next: Partial<BoardFilter>) => void
   isFiltered: boolean
   board: Board | undefined
-}
-
-function isTyping(target: EventTarget | null): boolean {
-  return (
-    target instanceof HTMLElement && target.matches('input, textarea, select, [contenteditable]')
-  )
-}
-
-/** `/` goes to the search from anywhere on the page. */
-function useSearchKey() {
-  const input = useRef<HTMLInputElement>(null)
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent) => {
-      if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return
-      if (isTyping(event.target)) return
-      event.preventDefault()
-      input.current?.focus()
-      input.current?.select()
-    }
-    window.addEventListener('keydown', onKey)
-    return () => window.removeEventListener('keydown', onKey)
-  }, [])
-  return input
 }
 
 export function BoardFilters({ filter, change, isFiltered, board }: Props) {

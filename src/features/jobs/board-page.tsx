@@ -5,6 +5,7 @@ import { type JobStage, jobStageNames, jobStages } from '../../../shared/jobs/jo
 import type { Board } from '../../../shared/jobs/job-views.ts'
 import { failureText } from '../../lib/failure-text.ts'
 import { useMay } from '../../lib/session.ts'
+import { useSettled } from '../../lib/use-settled.ts'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { Skeleton } from '../../ui/skeleton.tsx'
@@ -12,17 +13,17 @@ import { EmptyState, ErrorState } from '../../ui/states.tsx'
 import { useBoardAddress } from './board-address.ts'
 import { BoardColumns } from './board-columns.tsx'
 import { BoardFilters } from './board-filters.tsx'
+import { FirstSteps } from './first-steps.tsx'
 import { JobCard } from './job-card.tsx'
 import { jobQueries } from './job-queries.ts'
-import { useSettled } from './use-settled.ts'
 
 const settleMs = 200
 
 function BoardSkeleton() {
   return (
-    <div role="status" aria-label="Loading the board" className="gap-3 max-lg:space-y-3 lg:flex">
+    <div role="status" aria-label="Loading the board" className="gap-2 max-lg:space-y-3 lg:flex">
       {jobStages.map((stage) => (
-        <div key={stage} className="space-y-2 lg:w-52 lg:grow">
+        <div key={stage} className="space-y-2 lg:w-36 lg:grow">
           <Skeleton className="h-8 w-full" />
           <Skeleton className="h-28" />
           <Skeleton className="h-28 max-lg:hidden" />
@@ -41,7 +42,7 @@ function NewJobLink() {
   )
 }
 
-function NoJobs({ isFiltered }: { isFiltered: boolean }) {
+function NoJobs({ isFiltered, hasCrews }: { isFiltered: boolean; hasCrews: boolean }) {
   const mayWrite = useMay('job:write')
   if (isFiltered) {
     return (
@@ -49,9 +50,7 @@ function NoJobs({ isFiltered }: { isFiltered: boolean }) {
     )
   }
   return mayWrite ? (
-    <EmptyState title="No jobs yet" action={<NewJobLink />}>
-      Write down the first enquiry. Its roof and its days come after.
-    </EmptyState>
+    <FirstSteps hasCrews={hasCrews} />
   ) : (
     <EmptyState title="No jobs for your crew">
       What your crew is booked on shows here, two weeks back and four ahead.
@@ -100,7 +99,8 @@ export function BoardPage() {
     }
     if (!first) return <BoardSkeleton />
     const jobs = query.data?.pages.flatMap((page) => page.jobs) ?? []
-    if (jobs.length === 0) return <NoJobs isFiltered={isFiltered} />
+    if (jobs.length === 0)
+      return <NoJobs isFiltered={isFiltered} hasCrews={first.crews.length > 0} />
     const { stage } = filter
     if (!stage)
       return <BoardColumns board={first} onShowStage={(next) => change({ stage: next })} />

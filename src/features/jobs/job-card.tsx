@@ -45,28 +45,28 @@ export function JobCard({ card }: { card: Card }) {
   return (
     <Link
       to={`/jobs/${card.id}`}
-      className="block rounded-md border border-rule bg-sheet p-3 hover:border-ink-soft"
+      className="block rounded-md border border-rule bg-sheet p-2.5 leading-snug hover:border-ink-soft"
     >
-      <span className="flex gap-3">
+      <span className="flex items-center gap-2.5">
         {card.glyph ? (
           <RoofGlyph glyph={card.glyph} sizePx={glyphPx} />
         ) : (
           <NoRoofGlyph sizePx={glyphPx} />
         )}
-        <span className="min-w-0 flex-1">
-          <span className="flex flex-wrap justify-between gap-x-2 text-sm text-ink-soft">
-            <span className="font-semibold tabular-nums">{card.number}</span>
-            {roof ? <span>{roof}</span> : null}
+        <span className="min-w-0 flex-1 text-sm text-ink-soft">
+          <span className="block font-semibold tabular-nums [overflow-wrap:anywhere]">
+            {card.number}
           </span>
-          <span className="block font-semibold leading-snug [overflow-wrap:anywhere]">
-            {card.title}
-          </span>
+          {roof ? <span className="block">{roof}</span> : null}
         </span>
       </span>
+      <span className="mt-1 line-clamp-4 font-semibold [overflow-wrap:anywhere]">{card.title}</span>
       {card.siteAddress ? (
-        <span className="mt-1 line-clamp-2 text-sm text-ink-soft">{card.siteAddress}</span>
+        <span className="mt-0.5 line-clamp-2 text-sm text-ink-soft [overflow-wrap:anywhere]">
+          {card.siteAddress}
+        </span>
       ) : null}
-      <span className="mt-2 block space-y-1 text-sm empty:hidden">
+      <span className="mt-1.5 block space-y-1 text-sm empty:hidden">
         <CardTiming card={card} />
         {card.missing.length > 0 ? (
           <span className="flex items-start gap-1.5 text-ochre">

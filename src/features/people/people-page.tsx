@@ -6,6 +6,7 @@ import { formatDay } from '../../../shared/calendar/days.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { failureText } from '../../lib/failure-text.ts'
+import { useSearchKey } from '../../lib/use-search-key.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
@@ -113,6 +114,7 @@ export function PeoplePage() {
   const [params, setParams] = useSearchParams()
   const { personId } = useParams()
   const navigate = useNavigate()
+  const searchInput = useSearchKey()
   const search = params.get('q') ?? ''
   const close = () => void navigate({ pathname: '/people', search: params.toString() })
   const failed = people.error ?? crews.error
@@ -142,7 +144,10 @@ export function PeoplePage() {
         <h2 className="mb-2 text-lg font-extrabold">Everybody</h2>
         <Field label="Find by name or e-mail" className="mb-3 max-w-sm">
           <TextInput
+            ref={searchInput}
             type="search"
+            aria-keyshortcuts="/"
+            maxLength={80}
             value={search}
             onChange={(event) =>
               setParams(event.target.value ? { q: event.target.value } : {}, { replace: true })

@@ -80,7 +80,10 @@ function LeaveForm({ person }: { person: Person }) {
           <TextInput
             type="date"
             value={startsOn}
-            onChange={(event) => setStartsOn(event.target.value)}
+            onChange={(event) => {
+              setStartsOn(event.target.value)
+              if (endsOn < event.target.value) setEndsOn(event.target.value)
+            }}
           />
         </Field>
         <Field label="Last day away" error={issueAt(add.error, 'endsOn')}>
