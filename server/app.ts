@@ -7,7 +7,7 @@ import { authRoutes } from './auth/auth-routes.ts'
 import { replanUpcoming, takeRevision } from './bookings/replan.ts'
 import { bookingRoutes } from './bookings/booking-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
-import { loadUser, sessionCookieName } from './auth/session.ts'
+import { isStillSignedIn, loadUser, sessionCookieName } from './auth/session.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
@@ -55,7 +55,7 @@ function securityHeaders(env: Env, hot: boolean): RequestHandler {
             frameAncestors: ["'none'"],
             imgSrc: ["'self'", 'data:', 'blob:'],
             objectSrc: ["'none'"],
-            scriptSrc: ["'self'", "'wasm-unsafe-eval'"],
+            scriptSrc: ["'self'"],
             styleSrc: ["'self'", "'unsafe-inline'"],
             workerSrc: ["'self'", 'blob:'],
           },
@@ -86,7 +86,7 @@ function sessions(deps: AppDeps): RequestHandler {
 function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
-  eventRoutes(api, deps.events)
+  eventRoutes(api, deps.events, (req) => isStillSignedIn(db, req))
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
   messageRoutes(api, deps)
