@@ -18,7 +18,7 @@ import { type Api, createApi } from './http/api.ts'
 import { AppError } from './http/app-error.ts'
 import { errorHandler } from './http/error-handler.ts'
 import { requestId, requestIdOf } from './http/request-id.ts'
-import { refuseCrossSiteWrites } from './http/same-origin.ts'
+import { refuseCrossSiteWrites, refuseOtherBodies } from './http/same-origin.ts'
 import { jobRoutes } from './jobs/job-routes.ts'
 import { revisionRoutes } from './revisions/revision-routes.ts'
 import { createRevisionService } from './revisions/revision-service.ts'
@@ -127,6 +127,7 @@ export function buildApp(
     next()
   })
   app.use('/api', refuseCrossSiteWrites(deps.env.appUrl))
+  app.use('/api', refuseOtherBodies)
   app.use('/api', express.json({ limit: '512kb' }))
   app.use('/api', sessions(deps), loadUser(deps.db))
   const api = createApi(app)

@@ -25,7 +25,7 @@ const projectDir = path.join(path.dirname(fileURLToPath(import.meta.url)), '..')
 function keepSecret(env: Env): Env {
   if (process.env['SESSION_SECRET']) return env
   const file = path.join(env.dataDir, 'session-secret')
-  mkdirSync(env.dataDir, { recursive: true })
+  mkdirSync(env.dataDir, { recursive: true, mode: 0o700 })
   if (!existsSync(file)) writeFileSync(file, env.sessionSecret, { mode: 0o600 })
   return { ...env, sessionSecret: readFileSync(file, 'utf8').trim() }
 }

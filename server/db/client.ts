@@ -12,7 +12,8 @@ export type OpenDatabase = { db: Db; sqlite: Database.Database; close(): void }
 
 /** Opens the firm's database ('ridgehand.db' in the data folder, or ':memory:'). */
 export function openDatabase(dataDir: string | ':memory:'): OpenDatabase {
-  if (dataDir !== ':memory:') mkdirSync(dataDir, { recursive: true })
+  // For its owner only: password hashes, sessions and, in fake mail, links lie in it.
+  if (dataDir !== ':memory:') mkdirSync(dataDir, { recursive: true, mode: 0o700 })
   const file = dataDir === ':memory:' ? dataDir : path.join(dataDir, 'ridgehand.db')
   const sqlite = new Database(file)
   sqlite.pragma('journal_mode = WAL')

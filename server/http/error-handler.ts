@@ -13,7 +13,8 @@ function asAppError(error: unknown): AppError {
     return new AppError('invalid_input', 'The request was not whole. Try again.')
   if (type === 'entity.too.large')
     return new AppError('invalid_input', 'That is too much to send at once.')
-  if (status === 400) return new AppError('invalid_input', 'The request was not understood.')
+  if (status !== undefined && status >= 400 && status < 500)
+    return new AppError('invalid_input', 'The request was not understood.')
   return new AppError(
     'internal',
     'Something went wrong on our side. Nothing was saved. Try again.',

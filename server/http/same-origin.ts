@@ -21,3 +21,14 @@ export function refuseCrossSiteWrites(appUrl: string): RequestHandler {
     next()
   }
 }
+
+/**
+ * A body is JSON or nothing. What a plain form can send needs no leave of ours (Fetch standard, CORS-safelisted
+ * content types), so such a body is refused rather than read as empty.
+ */
+export const refuseOtherBodies: RequestHandler = (req, _res, next) => {
+  const isEmpty = req.get('content-length') === '0'
+  if (!isEmpty && req.is('application/json') === false)
+    throw new AppError('invalid_input', 'A body is sent as JSON.')
+  next()
+}

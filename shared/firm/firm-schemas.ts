@@ -3,7 +3,7 @@ import { isTimeZone } from '../calendar/local-time.ts'
 import {
   daySchema,
   phoneSchema,
-  textSchema,
+  lineSchema,
   timeOfDaySchema,
   versionSchema,
 } from '../http/fields.ts'
@@ -50,7 +50,7 @@ export const firmRoofSettingsSchema = z.strictObject({
 })
 
 const firmFields = {
-  name: textSchema(80, { required: 'Give the firm’s name.' }),
+  name: lineSchema(80, { required: 'Give the firm’s name.' }),
   phone: phoneSchema,
   timeZone: z
     .string()
@@ -64,7 +64,7 @@ const firmFields = {
     .array(
       z.strictObject({
         day: daySchema,
-        name: textSchema(60, { required: 'Say why it is closed.' }),
+        name: lineSchema(60, { required: 'Say why it is closed.' }),
       }),
     )
     .max(200),

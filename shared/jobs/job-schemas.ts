@@ -4,6 +4,7 @@ import {
   emailSchema,
   idSchema,
   phoneSchema,
+  lineSchema,
   textSchema,
   versionSchema,
 } from '../http/fields.ts'
@@ -48,12 +49,12 @@ const numberSchema = textSchema(20).regex(
 /** Every field the office types, all as text; an empty one is cleared. */
 export const jobFieldsSchema = z.strictObject({
   number: numberSchema,
-  title: textSchema(120, { required: 'Give the job a title, like House, Lot 12.' }),
-  siteAddress: textSchema(200),
+  title: lineSchema(120, { required: 'Give the job a title, like House, Lot 12.' }),
+  siteAddress: lineSchema(200),
   accessNotes: textSchema(1000),
-  siteContactName: textSchema(80),
+  siteContactName: lineSchema(80),
   siteContactPhone: phoneSchema,
-  customerName: textSchema(80),
+  customerName: lineSchema(80),
   customerPhone: phoneSchema,
   customerEmail: maybeEmailSchema,
   covering: z.enum(coverings, 'Choose a covering.'),

@@ -5,12 +5,12 @@ import {
   emailSchema,
   idSchema,
   phoneSchema,
-  textSchema,
+  lineSchema,
   versionSchema,
 } from '../http/fields.ts'
 
 const personFields = {
-  name: textSchema(80, { required: 'Give the name people know them by.' }),
+  name: lineSchema(80, { required: 'Give the name people know them by.' }),
   email: emailSchema,
   phone: phoneSchema,
   role: roleSchema,
@@ -37,7 +37,7 @@ export const addLeaveSchema = z
   .strictObject({
     startsOn: daySchema,
     endsOn: daySchema,
-    reason: textSchema(120),
+    reason: lineSchema(120),
   })
   .refine((leave) => leave.endsOn >= leave.startsOn, {
     path: ['endsOn'],
@@ -45,7 +45,7 @@ export const addLeaveSchema = z
   })
 
 export const crewInputSchema = z.strictObject({
-  name: textSchema(40, { required: 'Give the crew a name.' }),
+  name: lineSchema(40, { required: 'Give the crew a name.' }),
   letter: z
     .string()
     .trim()

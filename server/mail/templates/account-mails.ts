@@ -1,4 +1,4 @@
-import type { MailDocument } from './mail-document.ts'
+import { type MailDocument, subjectLine } from './mail-document.ts'
 
 export type AccountMailInput = {
   personName: string
@@ -33,7 +33,7 @@ export function passwordResetMail(input: AccountMailInput): MailDocument {
 
 export function invitationMail(input: AccountMailInput): MailDocument {
   return {
-    subject: `Your account at ${input.firmName}`,
+    subject: subjectLine(`Your account at ${input.firmName}`),
     blocks: [
       { kind: 'paragraph', text: `Hello ${input.personName},` },
       {
