@@ -6,7 +6,8 @@ import type { CrewDayRow, DayRow } from './calendar-store.ts'
 const jobName = (row: { jobNumber: string; jobTitle: string }): string =>
   `${row.jobNumber} ${row.jobTitle}`
 
-function twiceFlag(row: DayRow, others: readonly CrewDayRow[]): DayFlag[] {
+/** Why both are booked is the office's own note. */
+function twiceFlag(row: DayRow, others: readonly CrewDayRow[], isOffice: boolean): DayFlag[] {
   if (others.length === 0) return []
   const names = others.map(jobName).join(' and ')
   const reason =
@@ -16,7 +17,7 @@ function twiceFlag(row: DayRow, others: readonly CrewDayRow[]): DayFlag[] {
         {
           code: 'crew-twice-on-purpose',
           weight: 'caution',
-          text: `${row.crew.name} is also on ${names}, on purpose: ${reason}`,
+          text: `${row.crew.name} is also on ${names}, on purpose${isOffice ? `: ${reason}` : '.'}`,
           wayOut: 'Move one of them when that no longer holds.',
         },
       ]
@@ -63,7 +64,7 @@ export function dayFlags(
 ): DayFlag[] {
   const closed = whyNotWorked(input.calendar, row.day)
   const flags: DayFlag[] = [
-    ...twiceFlag(row, input.others),
+    ...twiceFlag(row, input.others, input.isOffice),
     ...peopleFlags(row, input.crewDay),
     ...(closed
       ? [
