@@ -146,11 +146,11 @@ test('a reminder for work that has started is not tried again', async () => {
   expect(stateOf(yard, id)).toBe('failed')
 })
 
-test('a message that is not there is 404, half an id is 400, and a body with more in it is refused', async () => {
+test('a message that is not there is 404, half an id likewise, and a body with more in it is refused', async () => {
   const { yard, office } = await yardWithMail()
   await office.get(`/api/messages/${newId()}`).expect(404)
   await office.post(`/api/messages/${newId()}/retry`).send({}).expect(404)
-  expect((await office.get('/api/messages/half').expect(400)).body.issues[0].path).toBe('id')
+  await office.get('/api/messages/half').expect(404)
   const id = addMail(yard)
   const answer = await office.post(`/api/messages/${id}/retry`).send({ state: 'sent' }).expect(400)
   expect(answer.body.issues[0].path).toBe('state')
