@@ -143,16 +143,26 @@ function problem(path: string, message: string): FormProblem {
   return { path, message, isMissing: false }
 }
 
+const largestLikelyMetres = 100
+
 /** Measures of a ready shape that leave no plan at all. */
 function shapeProblems(form: RoofForm): FormProblem[] {
   if (form.shape === 'corners') return []
   const [lengthMm, widthMm] = [lengthMmOfText(form.lengthMm), lengthMmOfText(form.widthMm)]
   return [
-    ...(lengthMm > 0 ? [] : [problem('lengthMm', 'The length must be more than 0 mm.')]),
-    ...(widthMm > 0 ? [] : [problem('widthMm', 'The width must be more than 0 mm.')]),
+    ...sideProblems('lengthMm', 'length', lengthMm),
+    ...sideProblems('widthMm', 'width', widthMm),
     ...(form.shape === 'splayed-end' ? splayProblems(endCutMm(form), widthMm) : []),
     ...overallProblems(form),
   ]
+}
+
+/** A house is not 9 mm long: whoever typed that meant metres. */
+function sideProblems(path: string, what: string, sideMm: number): FormProblem[] {
+  if (!(sideMm > 0)) return [problem(path, `The ${what} must be more than 0 mm.`)]
+  if (sideMm >= largestLikelyMetres) return []
+  const typed = Math.round(sideMm * 1000)
+  return [problem(path, `The ${what} is in mm: for ${sideMm} m type ${typed}.`)]
 }
 
 function splayProblems(splayMm: number, widthMm: number): FormProblem[] {

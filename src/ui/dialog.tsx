@@ -1,6 +1,7 @@
 import { X } from 'lucide-react'
 import { Dialog as Radix } from 'radix-ui'
 import { type ReactNode, useRef } from 'react'
+import { isTouched } from '../lib/pointer.ts'
 
 type Props = {
   open: boolean
@@ -23,7 +24,7 @@ const controls = 'a[href], button:not(:disabled), input:not(:disabled), select, 
 function firstPlace(title: HTMLElement | null, body: HTMLElement | null): HTMLElement | null {
   const first = body?.querySelector<HTMLElement>(controls)
   const isField = first?.matches('input, select, textarea') ?? false
-  return isField && !window.matchMedia('(pointer: coarse)').matches ? (first ?? null) : title
+  return isField && !isTouched() ? (first ?? null) : title
 }
 
 /** Traps focus, closes on Esc, gives focus back to where it came from; a click beside it does not throw typing away. */

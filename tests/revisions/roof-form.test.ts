@@ -135,6 +135,14 @@ test('a bad pitch of one plate is said at that plate', () => {
   expect(problems).toEqual({ 'sides.back.pitchDeg': expect.stringContaining('from 5 to 60') })
 })
 
+test('a length typed in metres is told so at its field', () => {
+  const problems = problemsOf(typedForm('rectangle', { lengthMm: '9.0', widthMm: '6.5' }))
+  expect(problems).toEqual({
+    lengthMm: 'The length is in mm: for 9 m type 9000.',
+    widthMm: 'The width is in mm: for 6.5 m type 6500.',
+  })
+})
+
 test('faults of the roof come back at the fields that caused them', () => {
   const at = (texts: Record<string, string>, shape: RoofShape = 'rectangle') =>
     Object.keys(problemsOf(typedForm(shape, texts)))

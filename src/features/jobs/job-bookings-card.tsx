@@ -41,7 +41,8 @@ function BookingRow({ booking }: { booking: JobBooking }) {
 export function JobBookingsCard({ job }: { job: JobView }) {
   const mayBook = useMay('booking:write')
   const { today } = useSession().firm
-  const isWaiting = job.stage === 'won' && job.bookings.length === 0
+  // Without a roof the roof comes first.
+  const isWaiting = job.stage === 'won' && job.bookings.length === 0 && job.revisions.length > 0
   return (
     <Card>
       <div className="mb-2 flex flex-wrap items-center justify-between gap-3">

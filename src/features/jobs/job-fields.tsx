@@ -6,6 +6,7 @@ import {
   type JobFieldName,
   type JobFieldsInput,
 } from '../../../shared/jobs/job-schemas.ts'
+import { isTouched } from '../../lib/pointer.ts'
 import { Field } from '../../ui/field.tsx'
 import { Select, TextArea, TextInput } from '../../ui/inputs.tsx'
 import { jobFieldLabels } from './job-form-values.ts'
@@ -15,6 +16,7 @@ type FieldProps = { form: Form; name: JobFieldName; hint?: string; className?: s
 type TextProps = FieldProps & {
   type?: 'text' | 'tel' | 'email' | 'date'
   inputMode?: 'decimal'
+  autoFocus?: boolean
 }
 
 function JobText({ form, name, hint, className, ...rest }: TextProps) {
@@ -50,7 +52,12 @@ export function JobFields({ form, isNew }: { form: Form; isNew: boolean }) {
   return (
     <div className="space-y-6">
       <Group title="Job">
-        <JobText form={form} name="title" className="sm:col-span-2" />
+        <JobText
+          form={form}
+          name="title"
+          className="sm:col-span-2"
+          autoFocus={isNew && !isTouched()}
+        />
         <Field label={jobFieldLabels.covering} error={errors.covering?.message}>
           <Select {...form.register('covering')}>
             {coverings.map((covering) => (

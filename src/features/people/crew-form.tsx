@@ -10,10 +10,17 @@ import { useSaveCrew } from './people-queries.ts'
 
 const colours = [1, 2, 3, 4, 5, 6]
 
-export function CrewForm({ crew, onDone }: { crew: Crew | null; onDone: () => void }) {
+type Props = { crew: Crew | null; crews: readonly Crew[]; onDone: () => void }
+
+/** The first colour that no crew flies yet. */
+function freeColour(crews: readonly Crew[]): number {
+  return colours.find((each) => crews.every((crew) => crew.colour !== each)) ?? 1
+}
+
+export function CrewForm({ crew, crews, onDone }: Props) {
   const [name, setName] = useState(crew?.name ?? '')
   const [letter, setLetter] = useState(crew?.letter ?? '')
-  const [colour, setColour] = useState(crew?.colour ?? 1)
+  const [colour, setColour] = useState(crew?.colour ?? freeColour(crews))
   const save = useSaveCrew()
   const submit = (event: FormEvent) => {
     event.preventDefault()

@@ -101,7 +101,11 @@ function Crews({ crews, people }: { crews: Crew[]; people: Person[] }) {
         onClose={() => setEditing(null)}
         title={editing === 'new' ? 'Add a crew' : 'Crew'}
       >
-        <CrewForm crew={editing === 'new' ? null : editing} onDone={() => setEditing(null)} />
+        <CrewForm
+          crew={editing === 'new' ? null : editing}
+          crews={crews}
+          onDone={() => setEditing(null)}
+        />
       </Dialog>
     </section>
   )

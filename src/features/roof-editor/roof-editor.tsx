@@ -1,10 +1,11 @@
-import { type KeyboardEvent, useDeferredValue, useMemo, useState } from 'react'
+import { type KeyboardEvent, useDeferredValue, useEffect, useMemo, useState } from 'react'
 import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
 import { roofOfForm } from '../../../shared/revisions/roof-of-form.ts'
+import { isTouched } from '../../lib/pointer.ts'
 import { Segmented } from '../../ui/segmented.tsx'
 import { EditorHeader } from './editor-header.tsx'
 import { ProblemList } from './problem-list.tsx'
-import { RoofFormContext, type RoofFormHandle } from './roof-form-context.ts'
+import { fieldId, RoofFormContext, type RoofFormHandle } from './roof-form-context.ts'
 import { RoofResults } from './roof-results.tsx'
 import { DraftConflict } from './save-state.tsx'
 import { ShapeFields } from './shape-fields.tsx'
@@ -31,6 +32,7 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
   const settled = useDeferredValue(form)
   const reading = useMemo(() => roofOfForm(settled, firm), [settled, firm])
   const framed = useFramedRoof(reading.roof, settings)
+  useStartTyping(form.lengthMm === '')
   const issue = useIssue(opened, { form, firm, saver })
 
   const handle = useMemo((): RoofFormHandle => {
@@ -86,6 +88,15 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
       </div>
     </RoofFormContext>
   )
+}
+
+/** A roof not begun opens with the cursor in its first measure. */
+function useStartTyping(isEmpty: boolean): void {
+  const [wasEmpty] = useState(isEmpty)
+  useEffect(() => {
+    if (!wasEmpty || isTouched()) return
+    document.getElementById(fieldId('lengthMm'))?.querySelector('input')?.focus()
+  }, [wasEmpty])
 }
 
 type Undo = { undo: () => void; redo: () => void }
