@@ -1,5 +1,4 @@
 import type { Angle, Cut, Member } from '../roof/roof-types.ts'
-import { formatAngle } from '../units/format-angle.ts'
 
 /** What a bevel marks; the drawing puts its letter there. */
 export type BevelPlace = 'heel' | 'seat' | 'tail' | 'foot' | 'head' | 'backing'
@@ -19,7 +18,8 @@ export type BevelDialData = {
   longSide: 'left' | 'right' | 'none'
   bladeTiltDeg: number | null
   pastSaw: boolean
-  notes: string[]
+  /** The bevel were the top the other way: square for backed, backed for square. */
+  otherTop: { title: string; fromEdgeDeg: number } | null
 }
 
 type LooseDial = Omit<BevelDialData, 'letter'>
@@ -61,7 +61,7 @@ function sideDial(member: Member, cut: Cut): LooseDial {
     longSide: 'none',
     bladeTiltDeg: null,
     pastSaw: false,
-    notes: [],
+    otherTop: null,
   }
 }
 
@@ -79,9 +79,9 @@ function topDials(member: Member, cut: Cut, beside: readonly Cut[]): LooseDial[]
       longSide: cut.longSide,
       bladeTiltDeg: cut.bladeTiltDeg,
       pastSaw: cut.pastSaw,
-      notes: cut.edgeOtherTop
-        ? [`${otherTop} ${formatAngle(cut.edgeOtherTop.fromEdgeDeg)} from edge`]
-        : [],
+      otherTop: cut.edgeOtherTop
+        ? { title: otherTop, fromEdgeDeg: cut.edgeOtherTop.fromEdgeDeg }
+        : null,
     },
   ]
 }
@@ -98,7 +98,7 @@ function birdsmouthDials(member: Member): LooseDial[] {
     longSide: 'none',
     bladeTiltDeg: null,
     pastSaw: false,
-    notes: [],
+    otherTop: null,
   })
   return [dial('heel', heelFromEdgeDeg), dial('seat', seatFromEdgeDeg)]
 }
@@ -115,7 +115,7 @@ function backingDials(member: Member): LooseDial[] {
     longSide: 'none',
     bladeTiltDeg: null,
     pastSaw: false,
-    notes: [],
+    otherTop: null,
   })
   if (Math.abs(leftDeg - rightDeg) <= sameDeg) return [dial('both edges', leftDeg)]
   return [dial('left edge', leftDeg), dial('right edge', rightDeg)].filter(

@@ -15,6 +15,7 @@ import {
   type MarkingOptions,
 } from './marking-figures.ts'
 import { backingOf, birdsmouthOf, furtherFigures, planingWords } from './marking-parts.ts'
+import { ridgeWayWords } from './ridge-words.ts'
 import { quantityWords, roleWords, sectionWords } from './role-words.ts'
 
 /** Wherever numbers leave for the saw. */
@@ -52,6 +53,8 @@ export type MarkingCard = {
   backing: MarkingBevel[]
   drop: MarkingFigure | null
   planing: string[]
+  /** What its bevels are set to, for the dials beside it. */
+  roundDeg: number
   warnings: MarkingWarning[]
 }
 
@@ -79,7 +82,7 @@ export function markingCardOf(
     quantityWords: quantityWords(line.quantity, line.left, line.right),
     memberMarks: line.members,
     drawnMark: member.mark,
-    handWords: handWords(line, member),
+    handWords: handWords(spec, line, member),
     cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to point'),
     setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
     further: furtherFigures(member, options),
@@ -96,6 +99,7 @@ export function markingCardOf(
         ? figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
         : null,
     planing: planingWords(spec, line, options),
+    roundDeg: options.roundDeg,
     warnings: spec.cautions
       .filter((caution) => caution.members.some((mark) => line.members.includes(mark)))
       .map(({ text, remedy }) => ({ text, remedy })),
@@ -107,8 +111,9 @@ function membersOf(spec: FrameSpec, line: CutLine): Member[] {
   return spec.members.filter((member) => marks.has(member.mark))
 }
 
-function handWords(line: CutLine, member: Member): string {
-  const along = member.role === 'ridge' ? 'along the ridge from its first node' : 'up the rafter'
+function handWords(spec: FrameSpec, line: CutLine, member: Member): string {
+  if (member.role === 'ridge') return ridgeWayWords(spec, member)
+  const along = 'up the rafter'
   if (line.left > 0 && line.right > 0)
     return `Left hand: long point on the left looking ${along}, bow up. Right hand: the same, mirrored.`
   if (member.hand) return `Long point on the ${member.hand} looking ${along}, bow up.`
@@ -124,15 +129,15 @@ function figureWords(figure: MarkingFigure, note = false): string {
   return `${figure.label} ${value}${note && figure.note ? ` (${figure.note})` : ''}`
 }
 
-/** Cheeks sawn alike are one line. */
-function cutLines(end: MarkingEnd): string[] {
+/** Cheeks sawn alike are one line; an only cut follows the place it is made at. */
+function cutLines(end: MarkingEnd, place: string): string[] {
   return cutsSawnAlike(end)
     .map(({ name, cuts, first }) => {
       const bears = cuts.map(({ cheek, bearsOn }) =>
         bearsOn && cheek ? `${cheek}: ${bearsOn}` : bearsOn,
       )
       const bearsText = bears.filter(Boolean).map((text) => ` ${text}.`)
-      const title = [end.title, name.toLowerCase()].filter(Boolean).join(', ')
+      const title = place || [end.title, name.toLowerCase()].filter(Boolean).join(', ')
       return [`${title}: ${bevelsWords(first)}.${bearsText.join('')}`, ...first.sawWords]
     })
     .flat()
@@ -140,10 +145,19 @@ function cutLines(end: MarkingEnd): string[] {
 
 function endLines(end: MarkingEnd): string[] {
   const from = end.points[0]?.note ?? ''
-  const points = end.points.map((point) => figureWords(point)).join(', ')
-  const name = points.startsWith(end.title) ? '' : `${end.title}: `
-  const place = points ? [`${name}${points}${from ? ` ${from}` : ''}.`] : []
-  return [...place, ...cutLines(end)]
+  const only = end.points.length === 1 ? end.points[0] : undefined
+  if (only) return cutLines(end, `${figureWords(only)} ${from}`.trim())
+  const points = end.points.map((point) => figureWords(point).toLowerCase()).join('; ')
+  const place = points ? [`${end.title}: ${points}; ${from}.`] : []
+  return [...place, ...cutLines(end, '')]
+}
+
+/** The tail's length where no tail point has said it. */
+function tailLines({ tailLength, ends }: MarkingCard): string[] {
+  if (!tailLength) return []
+  const points = ends.filter((end) => end.end === 'tail').flatMap((end) => end.points)
+  const isSaid = points.some((point) => point.text === tailLength.text)
+  return isSaid ? [] : [`${figureWords(tailLength, true)}.`]
 }
 
 /** Short plain lines for mail and print; the first names the line. */
@@ -159,7 +173,7 @@ export function markingCardLines(card: MarkingCard): string[] {
           `${mouth.bevels.map((one) => `${one.label} ${bevelWords(one)}`).join('; ')}.`,
         ]
       : []),
-    ...(card.tailLength ? [`${figureWords(card.tailLength, true)}.`] : []),
+    ...tailLines(card),
     ...card.backing.map((one) => `${one.label}: ${bevelWords(one)}.`),
     ...(card.drop ? [`${figureWords(card.drop, true)}.`] : []),
     card.handWords,

@@ -49,15 +49,15 @@ const squareDeg = 0.05
 const samePointMm = 0.05
 const endTitles: Record<Cut['end'], string> = { head: 'Head', foot: 'Foot', tail: 'Tail' }
 
-/** Foot or tail, then head, in the order a carpenter marks out. */
+/** Head, then tail or foot: the head is measured to from the heel line first. */
 export function markingEnds(
   spec: FrameSpec,
   member: Member,
   alike: readonly Member[],
   options: MarkingOptions,
 ): MarkingEnd[] {
-  return (['foot', 'head'] as const).flatMap((end) => {
-    const cuts = endCuts(member, end)
+  return (['head', 'foot'] as const).flatMap((end) => {
+    const cuts = leftCheekFirst(endCuts(member, end))
     const first = cuts[0]
     if (!first) return []
     return [
@@ -69,6 +69,12 @@ export function markingEnds(
       },
     ]
   })
+}
+
+/** A cheek lies on the side of its short point. */
+function leftCheekFirst(cuts: readonly Cut[]): Cut[] {
+  const rank = { right: 0, none: 1, left: 2 }
+  return [...cuts].sort((a, b) => rank[a.longSide] - rank[b.longSide])
 }
 
 function markingCut(
@@ -103,7 +109,6 @@ function faceName(kind: string): string {
   return kind === 'plumb cut' ? 'Plumb bevel, down the side' : 'Down the side'
 }
 
-/** A cheek lies on the side of its short point. */
 function cheekName(cut: Cut): string {
   if (cut.longSide === 'none') return 'Square across'
   return cut.longSide === 'left' ? 'Right cheek' : 'Left cheek'

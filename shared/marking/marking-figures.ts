@@ -60,7 +60,9 @@ export function figureOf(
   }
 }
 
-export function angleText(angleDeg: number, options: MarkingOptions): string {
+type AngleOptions = Pick<MarkingOptions, 'roundDeg'>
+
+export function angleText(angleDeg: number, options: AngleOptions): string {
   return formatAngle(angleDeg, options.roundDeg)
 }
 
@@ -68,7 +70,7 @@ export function bevelOf(
   label: string,
   where: MarkingBevel['where'],
   angle: Angle,
-  options: MarkingOptions,
+  options: AngleOptions,
 ): MarkingBevel {
   const edgeDeg = roundedTo(angle.fromEdgeDeg, options.roundDeg)
   return {
@@ -83,10 +85,15 @@ export function bevelOf(
 
 /** '25.0° from square, 65.0° from the edge'. */
 export function bevelWords(bevel: MarkingBevel): string {
-  return `${bevel.fromSquareText} ${squareWord(bevel)}, ${bevel.fromEdgeText} from the edge`
+  return `${bevel.fromSquareText} ${squareWord(bevel)}, ${bevel.fromEdgeText} from the ${edgeWord(bevel)}`
 }
 
-/** A line that leans beyond square is read the other way. */
+/** A line down the side usually leans towards the foot; past square, towards the head. */
 export function squareWord(bevel: Pick<MarkingBevel, 'fromSquareDeg'>): string {
-  return bevel.fromSquareDeg < 0 ? 'past square' : 'from square'
+  return bevel.fromSquareDeg < 0 ? 'past square, towards the head' : 'from square'
+}
+
+/** What the second reading is taken from: backing is read on the end of the timber. */
+export function edgeWord({ where }: Pick<MarkingBevel, 'where'>): 'edge' | 'side' {
+  return where === 'end' ? 'side' : 'edge'
 }

@@ -59,16 +59,41 @@ export function backingOf(member: Member, options: MarkingOptions): MarkingBevel
   return [bevel('Backing, left edge', leftDeg), bevel('Backing, right edge', rightDeg)]
 }
 
-/** Pieces planed alike share a sentence. */
+/** Pieces, sides and ends planed alike share a sentence. */
 export function planingWords(spec: FrameSpec, line: CutLine, options: MarkingOptions): string[] {
   const ofLine = spec.planing.filter((one) => line.members.includes(one.mark))
-  const groups = groupBy(
-    ofLine,
-    (one) => `${lengthWords(one.offMm, options)}|${one.side}|${one.end}`,
+  const corners = [...groupBy(ofLine, (one) => `${one.mark}|${one.end}`).values()].flatMap(
+    (planings) => cornersOfEnd(planings, options),
   )
-  return [...groups].map(([key, pieces]) => {
-    const [off = '', side = '', end = ''] = key.split('|')
-    const marks = listWords(pieces.map((one) => one.mark))
-    return `${marks}: plane ${off} off the ${side} top corner at the ${end}.`
+  const places = [
+    ...groupBy(corners, (one) => `${one.mark}|${one.off}|${one.corner}`).values(),
+  ].map((same) => ({ ...first(same), place: listWords(same.map((one) => `the ${one.end}`)) }))
+  const groups = groupBy(places, (one) => `${one.off}|${one.corner}|${one.place}`)
+  return [...groups.values()].map((same) => {
+    const { off, corner, place } = first(same)
+    return `${listWords(same.map((one) => one.mark))}: plane ${off} off ${corner} at ${place}.`
   })
+}
+
+type Planing = FrameSpec['planing'][number]
+
+/** One piece's end: both corners in one when as much comes off each. */
+function cornersOfEnd(planings: readonly Planing[], options: MarkingOptions) {
+  const corners = planings.map(({ mark, end, side, offMm }) => ({
+    mark,
+    end,
+    off: lengthWords(offMm, options),
+    corner: `the ${side} top corner`,
+  }))
+  const isAlike = new Set(corners.map((one) => one.off)).size === 1
+  const hasBoth = new Set(planings.map((one) => one.side)).size === 2
+  return isAlike && hasBoth
+    ? corners.slice(0, 1).map((one) => ({ ...one, corner: 'both top corners' }))
+    : corners
+}
+
+function first<T>(list: readonly T[]): T {
+  const [one] = list
+  if (one === undefined) throw new RangeError('A group has at least one piece.')
+  return one
 }

@@ -1,16 +1,19 @@
 import type { BevelDialData } from '../../shared/drawing/bevel-dials.ts'
-import { formatAngle } from '../../shared/units/format-angle.ts'
+import { angleText, bevelOf, edgeWord, squareWord } from '../../shared/marking/marking-figures.ts'
 
-type Props = { dial: BevelDialData }
+type Props = {
+  dial: BevelDialData
+  /** What the bevel is set to. */
+  roundDeg: number
+}
 
 const centre = { x: 96, y: 26 }
 const radius = 62
 const whereWords = { side: 'On the side', top: 'Across the top', end: 'Off the top' } as const
 
-/** One setting of the bevel: drawn as it lies on the timber, and read from the edge and from square. */
-export function BevelDial({ dial }: Props) {
-  const { angle } = dial
-  const isPastSquare = angle.fromSquareDeg < 0
+/** One setting of the bevel: drawn as it lies on the timber, and read as the marking card reads it. */
+export function BevelDial({ dial, roundDeg }: Props) {
+  const bevel = bevelOf(dial.title, dial.where, dial.angle, { roundDeg })
   return (
     <div className="flex items-center gap-3 rounded-md border border-rule bg-sheet p-2 break-inside-avoid">
       {dial.where === 'end' ? <BackingDrawing dial={dial} /> : <DialDrawing dial={dial} />}
@@ -25,28 +28,28 @@ export function BevelDial({ dial }: Props) {
           {whereWords[dial.where]}: {dial.uses.join(' · ')}
         </p>
         <p className="leading-tight">
-          <span className="text-2xl font-extrabold tabular-nums">
-            {formatAngle(angle.fromEdgeDeg)}
-          </span>{' '}
-          <span className="text-sm">{dial.where === 'end' ? 'from the side' : 'from edge'}</span>
+          <span className="text-2xl font-extrabold tabular-nums">{bevel.fromSquareText}</span>{' '}
+          <span className="text-sm">{squareWord(bevel)}</span>
         </p>
         <p className="leading-tight">
-          <span className="text-lg font-extrabold tabular-nums">
-            {formatAngle(Math.abs(angle.fromSquareDeg))}
-          </span>{' '}
-          <span className="text-sm">{isPastSquare ? 'past square' : 'from square'}</span>
+          <span className="text-2xl font-extrabold tabular-nums">{bevel.fromEdgeText}</span>{' '}
+          <span className="text-sm">from {edgeWord(bevel)}</span>
         </p>
-        <DialNotes dial={dial} />
+        <DialNotes dial={dial} roundDeg={roundDeg} />
       </div>
     </div>
   )
 }
 
-function DialNotes({ dial }: Props) {
-  const tilt = dial.bladeTiltDeg === null ? [] : [`Blade tilt ${formatAngle(dial.bladeTiltDeg)}`]
+function DialNotes({ dial, roundDeg }: Props) {
+  const tilt =
+    dial.bladeTiltDeg === null ? [] : [`Blade tilt ${angleText(dial.bladeTiltDeg, { roundDeg })}`]
+  const other = dial.otherTop
+    ? [`${dial.otherTop.title} ${angleText(dial.otherTop.fromEdgeDeg, { roundDeg })} from edge`]
+    : []
   return (
     <>
-      {[...tilt, ...dial.notes].map((note) => (
+      {[...tilt, ...other].map((note) => (
         <p key={note} className="text-sm text-ink-soft">
           {note}
         </p>
@@ -59,7 +62,7 @@ function DialNotes({ dial }: Props) {
 }
 
 /** Edge along the top, square line dashed, bevel heavy; foot of the timber to the left. */
-function DialDrawing({ dial }: Props) {
+function DialDrawing({ dial }: Pick<Props, 'dial'>) {
   const deg = dial.angle.fromEdgeDeg
   const isFlipped = dial.where === 'top' && dial.longSide === 'right'
   const bevel = onDial(deg, radius + 6)
@@ -113,7 +116,7 @@ function ticks(): string {
 }
 
 /** The end of the timber: its square top dashed, the backed top heavy, as far as it is planed. */
-function BackingDrawing({ dial }: Props) {
+function BackingDrawing({ dial }: Pick<Props, 'dial'>) {
   const fall = Math.tan((dial.angle.fromSquareDeg * Math.PI) / 180) * 30
   const isLeft = !dial.uses.includes('right edge')
   const isRight = !dial.uses.includes('left edge')

@@ -23,16 +23,16 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
         {platesMeasured ? null : <p className="font-semibold">From plan, plates not measured.</p>}
         <p>{card.handWords}</p>
       </div>
-      <CardCautions card={card} />
       <PlaningNote card={card} />
       <MarkingNumbers card={card} />
+      <CardCautions card={card} />
       {member ? (
         <div className="border-t border-rule pt-3">
           <p className="mb-2 font-extrabold">
             Drawn: {member.mark}
             {member.hand ? `, ${member.hand} hand` : ''}
           </p>
-          <TimberDrawing member={member} units={units} />
+          <TimberDrawing member={member} units={units} roundDeg={card.roundDeg} />
         </div>
       ) : null}
       <div className="border-t border-rule">
@@ -61,13 +61,13 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
 export function PlaningNote({ card }: { card: MarkingCard }) {
   if (card.planing.length === 0) return null
   return (
-    <Note title="Plane">
+    <ul className="list-none border-l-8 border-rule p-0 pl-2">
       {card.planing.map((text) => (
-        <p key={text} className="text-base print:text-xs">
+        <li key={text} className="text-base print:text-xs">
           {text}
-        </p>
+        </li>
       ))}
-    </Note>
+    </ul>
   )
 }
 

@@ -1,14 +1,17 @@
 import type { MarkingCard } from '../../shared/marking/marking-card.ts'
 import {
   cutsSawnAlike,
+  type CutsSawnAlike,
   type MarkingCut,
   type MarkingEnd,
 } from '../../shared/marking/marking-cuts.ts'
 import {
   type MarkingBevel,
+  edgeWord,
   type MarkingFigure,
   squareWord,
 } from '../../shared/marking/marking-figures.ts'
+import { pastSawSafety } from '../../shared/marking/saw-words.ts'
 
 /** A length to read off at arm's length. */
 export function FigureView({
@@ -48,7 +51,7 @@ export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: strin
         </span>
         <span className="whitespace-nowrap">
           <span className="numeral text-[1.75rem] print:text-lg">{bevel.fromEdgeText}</span>{' '}
-          <span className="text-base print:text-xs">from edge</span>
+          <span className="text-base print:text-xs">from {edgeWord(bevel)}</span>
         </span>
         {extra ? <span className="text-base print:text-xs">{extra}</span> : null}
       </dd>
@@ -115,31 +118,66 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
   )
 }
 
-/** The two lengths that are asked for first, and where the head is. */
-export function MainNumbers({ card }: { card: MarkingCard }) {
-  const head = card.ends.find((end) => end.end === 'head')
+/** The length a piece is known by, on one line. */
+export function CutLengthLine({ card }: { card: MarkingCard }) {
+  const { cutLength } = card
   return (
-    <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
-      <FigureView figure={card.cutLength} isMain />
-      <FigureView figure={card.setOutLength} isMain />
-      {head?.points.map((point) => (
-        <FigureView key={point.label} figure={point} />
-      ))}
-    </dl>
+    <p className="flex items-baseline gap-2 text-base print:text-xs">
+      {cutLength.label}
+      <span>
+        <span className="numeral text-[1.75rem] print:text-lg">{cutLength.text}</span>{' '}
+        {cutLength.unit}
+      </span>
+    </p>
+  )
+}
+
+/** What the saw waits for: the length, the head's points and its bevels. Paper shows every number. */
+export function CutNumbers({ card }: { card: MarkingCard }) {
+  const head = card.ends.find((end) => end.end === 'head')
+  const points = head?.points ?? []
+  return (
+    <div className="space-y-2 print:hidden">
+      <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
+        <FigureView figure={card.cutLength} isMain />
+        <FigureView figure={{ ...card.setOutLength, note: '' }} />
+        {points.map((point) => (
+          <FigureView key={point.label} figure={point} />
+        ))}
+      </dl>
+      {head ? cutsSawnAlike(head).map((alike) => <CutBevels key={alike.name} {...alike} />) : null}
+      {card.ends.some((end) => end.cuts.some((cut) => cut.pastSaw)) ? (
+        <p className="border-l-8 border-ochre pl-2 text-base font-semibold">
+          Past the saw: the way round is under all numbers. {pastSawSafety}
+        </p>
+      ) : null}
+    </div>
+  )
+}
+
+function CutBevels({ name, first }: Pick<CutsSawnAlike, 'name' | 'first'>) {
+  return (
+    <>
+      <CutName name={name} cut={first} />
+      <dl className="space-y-1">
+        {first.kind === 'square cut' ? null : <BevelView bevel={first.face} />}
+        {first.edge ? (
+          <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
+        ) : null}
+      </dl>
+    </>
   )
 }
 
 /** Every number of a marking card, the ones the saw waits for first and largest. */
 export function MarkingNumbers({ card }: { card: MarkingCard }) {
-  // The head is measured to from the heel line before the tail is.
-  const ends = [...card.ends].reverse()
   return (
     <div className="space-y-3 print:space-y-1">
       <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
         <FigureView figure={card.cutLength} isMain />
         <FigureView figure={card.setOutLength} isMain />
       </dl>
-      {ends.map((end) => (
+      {card.ends.map((end) => (
         <EndNumbers key={end.end} end={end} />
       ))}
       <BirdsmouthNumbers card={card} />

@@ -12,6 +12,8 @@ import { useWidth } from './use-width.ts'
 type Props = {
   member: Member
   units?: LengthUnits
+  /** What bevels are set to. */
+  roundDeg?: number
   /** Leave the dials out where the bevels are read elsewhere on the page. */
   showsDials?: boolean
 }
@@ -20,7 +22,7 @@ const pageWidthPx = 680
 const leastWidthPx = 300
 
 /** One timber to scale from above and from its right side, with its measuring points and bevels. */
-export function TimberDrawing({ member, units = 'mm', showsDials = true }: Props) {
+export function TimberDrawing({ member, units = 'mm', roundDeg = 0.5, showsDials = true }: Props) {
   const [boxRef, boxWidthPx] = useWidth<HTMLDivElement>(pageWidthPx)
   const widthPx = Math.max(boxWidthPx, leastWidthPx)
   const drawing = useMemo(() => timberDrawing(member, { widthPx, units }), [member, widthPx, units])
@@ -38,7 +40,7 @@ export function TimberDrawing({ member, units = 'mm', showsDials = true }: Props
         <ul className="grid list-none grid-cols-[repeat(auto-fill,minmax(min(100%,18rem),1fr))] gap-2 p-0">
           {dials.map((dial) => (
             <li key={dial.letter}>
-              <BevelDial dial={dial} />
+              <BevelDial dial={dial} roundDeg={roundDeg} />
             </li>
           ))}
         </ul>

@@ -55,7 +55,9 @@ test.each([45.25, 44.75, 67.3, 12.49, 89.75])(
 test('a line past square says so instead of showing a minus', () => {
   const member = { ...common, cuts: [{ ...headCut, face: angle(95) }] }
   const card = markingCardOf(specOf([member]), 'C1', options)
-  expect(markingCardLines(card).join('\n')).toContain('5.0° past square, 95.0° from the edge')
+  expect(markingCardLines(card).join('\n')).toContain(
+    '5.0° past square, towards the head, 95.0° from the edge',
+  )
 })
 
 test('a line of left and right creepers says which is which', () => {
@@ -84,8 +86,8 @@ test('a ridge has no heel: it is measured from its first node and runs past both
   expect(card.drop).toMatchObject({ valueMm: 13.1, text: '13' })
   const text = markingCardLines(card).join('\n')
   expect(text).not.toContain('heel')
-  expect(text).toContain('Head cut 4023 mm from the first node.')
-  expect(text).toContain('Foot cut 23 mm past the first node.')
+  expect(text).toContain('Head cut 4023 mm from the first node: ')
+  expect(text).toContain('Foot cut 23 mm past the first node: ')
 })
 
 test('numbers stay exact and are rounded only where they are written', () => {
@@ -127,6 +129,72 @@ test('only the cautions and planing of the line are on its card', () => {
   const card = markingCardOf(spec, 'C1', options)
   expect(card.warnings).toEqual([{ text: 'Deep.', remedy: 'Ask.' }])
   expect(card.planing).toEqual(['C1a: plane 2 mm off the right top corner at the head.'])
+})
+
+test('corners planed alike are one sentence, and a piece planed at both ends says so once', () => {
+  const off = (mark: string, end: 'head' | 'foot', side: 'left' | 'right', offMm = 2) =>
+    ({ mark, end, side, offMm }) as const
+  const spec = specOf([ridge], {
+    planing: [
+      off('R1', 'head', 'left'),
+      off('R1', 'head', 'right'),
+      off('R1', 'foot', 'left'),
+      off('R1', 'foot', 'right'),
+    ],
+  })
+  expect(markingCardOf(spec, 'R1', options).planing).toEqual([
+    'R1: plane 2 mm off both top corners at the head and the foot.',
+  ])
+  const uneven = specOf([ridge], {
+    planing: [off('R1', 'head', 'left'), off('R1', 'head', 'right', 5)],
+  })
+  expect(markingCardOf(uneven, 'R1', options).planing).toEqual([
+    'R1: plane 2 mm off the left top corner at the head.',
+    'R1: plane 5 mm off the right top corner at the head.',
+  ])
+})
+
+test('two cheeks give the points that are on the timber: the middle and both edges', () => {
+  // Source: geometry. Octagonal end at 25°, rafters 45: the diagonal crown's cheeks stand at 45° to it in
+  // plan and meet on its centre line 35.11 below the node (roof.md, known values); each edge is half a
+  // thickness further down in plan, over the cosine of the pitch: 22.5 / cos 25° = 24.83.
+  const cut = 3000 * (2 - Math.SQRT2)
+  const outline = [
+    [0, 0],
+    [8000, 0],
+    [8000 + cut, cut],
+    [8000 + cut, 6000 - cut],
+    [8000, 6000],
+    [0, 6000],
+  ] as const
+  const spec = frameRoof(makeRoof(outline, [25, 25, 25, 25, 25, 25]))
+  const diagonal = spec.members.find(
+    (one) => one.role === 'crown-end' && one.cuts.filter(({ end }) => end === 'head').length === 2,
+  )!
+  const line = spec.cutLines.find(({ members }) => members.includes(diagonal.mark))!
+  const head = markingCardOf(spec, line.mark, options).ends.find(({ end }) => end === 'head')!
+  expect(head.points.map(({ label }) => label)).toEqual([
+    'Long point, centre',
+    'Short point, both edges',
+  ])
+  const centreMm = 3000 / Math.cos((25 * Math.PI) / 180) - 35.11
+  expect(head.points[0]!.valueMm).toBeCloseTo(centreMm, 1)
+  expect(head.points[1]!.valueMm).toBeCloseTo(centreMm - 24.83, 1)
+})
+
+test('a ridge says which of its ends the tape starts from', () => {
+  const outline = [
+    [0, 0],
+    [9000, 0],
+    [9000, 6000],
+    [0, 6000],
+  ] as const
+  const spec = frameRoof(makeRoof(outline, [25, 25, 25, 25]))
+  const card = markingCardOf(spec, 'R1', options)
+  const board = spec.members.find((one) => one.role === 'ridge')!
+  const crown = spec.members.find((one) => card.handWords.includes(`crown end rafter ${one.mark}`))!
+  expect(crown.axis.to.x).toBeCloseTo(board.axis.from.x, 6)
+  expect(crown.axis.to.y).toBeCloseTo(board.axis.from.y, 6)
 })
 
 test('a cut line that the roof has not is refused by name', () => {
