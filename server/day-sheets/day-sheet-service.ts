@@ -148,6 +148,7 @@ export function taskDetailFor(db: DbOrTx, viewer: Viewer, taskId: string): TaskD
       : null
   const member = revision?.spec.members.find((one) => one.mark === card?.drawnMark) ?? null
   return {
+    today: localDayOf(viewer.now, viewer.firm.timeZone),
     task: asDayTask(row),
     place: placeOf(db, viewer.firm, row, revision),
     shareWords: card ? shareWords(revision?.spec.members ?? [], row.task.memberMarks) : '',
@@ -159,7 +160,8 @@ export function taskDetailFor(db: DbOrTx, viewer: Viewer, taskId: string): TaskD
 
 /** What a person has been handed for a day, by site. */
 export function myTasksFor(db: DbOrTx, viewer: Viewer, wantedDay: Day | undefined): MyTasks {
-  const day = wantedDay ?? localDayOf(viewer.now, viewer.firm.timeZone)
+  const today = localDayOf(viewer.now, viewer.firm.timeZone)
+  const day = wantedDay ?? today
   const places = new Map<string, MyTasks['places'][number]>()
   for (const row of ownTasks(db, viewer, day)) {
     const id = row.task.bookingDayId
@@ -173,6 +175,7 @@ export function myTasksFor(db: DbOrTx, viewer: Viewer, wantedDay: Day | undefine
   const near = ownTaskDays(db, viewer, day)
   return {
     day,
+    today,
     previousDay: near?.previousDay ?? null,
     nextDay: near?.nextDay ?? null,
     places: [...places.values()],

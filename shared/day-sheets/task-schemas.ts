@@ -46,6 +46,8 @@ const cardSchema = z.custom<MarkingCard>(isObject)
 const memberSchema = z.custom<Member>(isObject)
 
 export const taskDetailSchema = z.object({
+  /** The firm's day now: a task may be of another. */
+  today: z.string(),
   task: dayTaskSchema,
   place: taskPlaceSchema,
   /** Pieces of this task and their hands: 'x3: 2 left, 1 right'; empty for set-out work. */
@@ -59,6 +61,7 @@ export type TaskDetail = z.infer<typeof taskDetailSchema>
 
 export const myTasksSchema = z.object({
   day: z.string(),
+  today: z.string(),
   previousDay: z.string().nullable(),
   nextDay: z.string().nullable(),
   places: z.array(taskPlaceSchema.extend({ tasks: z.array(dayTaskSchema) })),

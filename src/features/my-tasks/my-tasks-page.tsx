@@ -130,7 +130,11 @@ export function MyTasksPage() {
   const mine = query.data
   return (
     <div className="site-screen">
-      <PageHeader title="My tasks" lead={formatDay(mine.day)} actions={<SunlightSwitch />} />
+      <PageHeader
+        title="My tasks"
+        lead={mine.day === mine.today ? `Today, ${formatDay(mine.day)}` : formatDay(mine.day)}
+        actions={<SunlightSwitch />}
+      />
       <DayKeys mine={mine} />
       {mine.places.length === 0 ? <NoTasks mine={mine} /> : null}
       <div className="space-y-6">

@@ -1,18 +1,20 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
 import { ChevronLeft, ChevronRight, Hand } from 'lucide-react'
 import { Link, useParams } from 'react-router-dom'
-import { formatDay } from '../../../shared/calendar/days.ts'
+import { formatDay, formatDayWithYear } from '../../../shared/calendar/days.ts'
 import type { DayTask, TaskDetail } from '../../../shared/day-sheets/task-schemas.ts'
 import { workAtHeight } from '../../../shared/marking/marking-card.ts'
 import { MarkingCardView } from '../../drawings/marking-card-view.tsx'
 import { ApiFailure } from '../../lib/api-client.ts'
 import { failureText } from '../../lib/failure-text.ts'
-import { useUser } from '../../lib/session.ts'
+import { useSession, useUser } from '../../lib/session.ts'
+import { useDayAsk } from '../../lib/use-day-ask.tsx'
 import { useTicks, withTask } from '../../lib/use-ticks.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
+import { PrintFoot } from '../../ui/print-foot.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { EmptyState, ErrorState, Note } from '../../ui/states.tsx'
 import { SunlightSwitch } from '../../ui/sunlight-switch.tsx'
@@ -73,7 +75,8 @@ function Neighbours({ task }: { task: DayTask }) {
 }
 
 /** Within reach of a thumb while the card above is read. */
-function TickBar({ task }: { task: DayTask }) {
+function TickBar({ task, today }: { task: DayTask; today: string }) {
+  const { askFirst, question } = useDayAsk(task.day, today)
   const { count, unsent, step } = useTicks(task)
   return (
     <div className="sticky bottom-[calc(3.5rem+env(safe-area-inset-bottom))] z-10 -mx-4 flex justify-center border-t-2 border-ink bg-sheet px-4 py-2 lg:bottom-0 lg:mx-0 lg:rounded-md lg:border-2 print:hidden">
@@ -82,9 +85,10 @@ function TickBar({ task }: { task: DayTask }) {
         count={count}
         total={task.quantity}
         unsent={unsent}
-        onStep={step}
+        onStep={(delta) => askFirst(() => step(delta))}
         size="large"
       />
+      {question}
     </div>
   )
 }
@@ -92,6 +96,7 @@ function TickBar({ task }: { task: DayTask }) {
 function TaskBody({ detail }: { detail: TaskDetail }) {
   const { task, place, card, member, units, shareWords } = detail
   const { role } = useUser()
+  const { firm } = useSession()
   const { count } = useTicks(task)
   const backTo = role === 'apprentice' ? `/my-tasks?day=${task.day}` : `/today?day=${task.day}`
   return (
@@ -113,6 +118,10 @@ function TaskBody({ detail }: { detail: TaskDetail }) {
             <SunlightSwitch />
           </>
         }
+      />
+      <PrintFoot
+        left={`${firm.name}: ${place.jobNumber}${place.revisionLetter ? `, revision ${place.revisionLetter}` : ''}`}
+        middle={`${task.title}, ${formatDayWithYear(task.day)}`}
       />
       <div className="mx-auto max-w-3xl space-y-4">
         {count >= task.quantity ? (
@@ -143,9 +152,11 @@ function TaskBody({ detail }: { detail: TaskDetail }) {
             <p className="text-base">{workAtHeight}</p>
           </Note>
         ) : null}
-        <HandKey task={task} />
-        <Neighbours task={task} />
-        <TickBar task={task} />
+        <div className="space-y-4 print:hidden">
+          <HandKey task={task} />
+          <Neighbours task={task} />
+        </div>
+        <TickBar task={task} today={detail.today} />
       </div>
     </>
   )

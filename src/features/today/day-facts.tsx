@@ -8,48 +8,44 @@ import { hoursWords } from './day-words.ts'
 
 function Fact({ name, children }: { name: string; children: ReactNode }) {
   return (
-    <div className="border-t border-rule py-2 first:border-t-0 sm:grid sm:grid-cols-[8rem_1fr] sm:gap-3">
-      <dt className="text-base font-semibold text-ink-soft">{name}</dt>
-      <dd className="min-w-0 [overflow-wrap:anywhere]">{children}</dd>
+    <div className="grid grid-cols-[4.75rem_minmax(0,1fr)] gap-2 py-0.5">
+      <dt className="text-base text-ink-soft">{name}</dt>
+      <dd className="min-w-0 text-base [overflow-wrap:anywhere]">{children}</dd>
     </div>
   )
 }
 
-function Where({ job }: { job: DaySheet['job'] }) {
-  if (job.siteAddress === '') return <>No address yet. Ask the office.</>
+const keyClass = `${buttonClass('plain', 'site')} min-w-0 flex-1 px-3 sm:flex-none sm:px-5`
+
+/** The two keys of the way there: the map and the site's phone. */
+function WayKeys({ job }: { job: DaySheet['job'] }) {
+  const phone = job.siteContactPhone ?? ''
+  if (!job.mapUrl && !phone) return null
   return (
-    <>
-      {job.siteAddress}
+    <div className="my-2 flex flex-wrap gap-2 print:hidden">
       {job.mapUrl ? (
-        <a
-          href={job.mapUrl}
-          target="_blank"
-          rel="noreferrer"
-          className={`${buttonClass('plain', 'site')} mt-2 w-full sm:w-auto print:hidden`}
-        >
+        <a href={job.mapUrl} target="_blank" rel="noreferrer" className={keyClass}>
           <MapPin size={22} aria-hidden />
           Map
         </a>
       ) : null}
-    </>
+      {phone ? (
+        <a href={`tel:${phone.replaceAll(/[^\d+]/g, '')}`} className={keyClass}>
+          <Phone size={22} aria-hidden />
+          <span className="sr-only">Ring the site, </span>
+          <span className="whitespace-nowrap">{phone}</span>
+        </a>
+      ) : null}
+    </div>
   )
 }
 
-function Contact({ job }: { job: DaySheet['job'] }) {
-  const phone = job.siteContactPhone ?? ''
-  if (job.siteContactName === '' && phone === '') return <>None given.</>
+function contactWords({ siteContactName, siteContactPhone = '' }: DaySheet['job']): ReactNode {
+  if (siteContactName === '' && siteContactPhone === '') return 'None given.'
   return (
     <>
-      {job.siteContactName || 'Site phone'}
-      {phone ? (
-        <a
-          href={`tel:${phone.replaceAll(/[^\d+]/g, '')}`}
-          className={`${buttonClass('plain', 'site')} mt-2 w-full sm:ml-3 sm:mt-0 sm:w-auto print:ml-2 print:inline print:border-0 print:p-0`}
-        >
-          <Phone size={22} aria-hidden className="print:hidden" />
-          {phone}
-        </a>
-      ) : null}
+      {siteContactName || 'Site phone'}
+      <span className="hidden print:inline"> {siteContactPhone}</span>
     </>
   )
 }
@@ -72,18 +68,20 @@ function Roster({ roster }: { roster: DaySheet['roster'] }) {
 export function DayFacts({ sheet }: { sheet: DaySheet }) {
   const { job } = sheet
   return (
-    <Card aria-label="Start, site and crew">
+    <Card aria-label="Start, site and crew" className="px-3 py-2 sm:p-4">
+      <p className="flex flex-wrap items-baseline gap-x-3">
+        <span className="numeral text-[2rem]">
+          <span className="sr-only">Start </span>
+          {sheet.startAt}
+        </span>
+        <span className="min-w-0 font-semibold [overflow-wrap:anywhere]">
+          {job.siteAddress || 'No address yet. Ask the office.'}
+        </span>
+      </p>
+      <WayKeys job={job} />
       <dl>
-        <Fact name="Start">
-          <span className="numeral text-[2rem]">{sheet.startAt}</span>
-        </Fact>
-        <Fact name="Where">
-          <Where job={job} />
-        </Fact>
         {job.accessNotes ? <Fact name="Access">{job.accessNotes}</Fact> : null}
-        <Fact name="On site">
-          <Contact job={job} />
-        </Fact>
+        <Fact name="On site">{contactWords(job)}</Fact>
         <Fact name="Who">
           <Roster roster={sheet.roster} />
         </Fact>

@@ -7,7 +7,7 @@ type Props = { sheets: DaySheets; onDay: (day: string) => void }
 const keyClass =
   'flex min-h-14 min-w-0 flex-1 items-center justify-center gap-1 rounded-md border border-ink-soft bg-sheet px-2 font-semibold disabled:opacity-40'
 
-/** The booked days before and after, one tap away, and any other day. */
+/** The booked days before and after, one tap away. */
 export function DaySwitcher({ sheets, onDay }: Props) {
   const { day, today, previousDay, nextDay } = sheets
   return (
@@ -24,6 +24,11 @@ export function DaySwitcher({ sheets, onDay }: Props) {
           {previousDay ? formatDay(previousDay) : 'None before'}
         </span>
       </button>
+      {day === today ? null : (
+        <button type="button" onClick={() => onDay(today)} className={`${keyClass} sm:flex-none`}>
+          Today
+        </button>
+      )}
       <button
         type="button"
         disabled={nextDay === null}
@@ -36,24 +41,19 @@ export function DaySwitcher({ sheets, onDay }: Props) {
         </span>
         <ChevronRight size={24} aria-hidden />
       </button>
-      <div className="flex w-full gap-2 sm:w-auto">
-        <input
-          type="date"
-          aria-label="Any day"
-          value={day}
-          onChange={(event) => (event.target.value ? onDay(event.target.value) : undefined)}
-          className="min-h-14 min-w-0 flex-1 rounded-md border border-ink-soft bg-sheet px-3 text-ink"
-        />
-        {day === today ? null : (
-          <button
-            type="button"
-            onClick={() => onDay(today)}
-            className={`${keyClass} flex-none px-4`}
-          >
-            Today
-          </button>
-        )}
-      </div>
     </nav>
+  )
+}
+
+/** Any other day. */
+export function AnyDay({ sheets, onDay }: Props) {
+  return (
+    <input
+      type="date"
+      aria-label="Any day"
+      value={sheets.day}
+      onChange={(event) => (event.target.value ? onDay(event.target.value) : undefined)}
+      className="min-h-14 min-w-0 flex-1 rounded-md border border-ink-soft bg-sheet px-3 text-ink"
+    />
   )
 }

@@ -11,6 +11,7 @@ import { Skeleton } from '../../ui/skeleton.tsx'
 import { ErrorState } from '../../ui/states.tsx'
 import { CautionNotes, ChangesNote, HeightNote } from './day-notes.tsx'
 import { DayFacts } from './day-facts.tsx'
+import { JumpKeys, planPlaceId } from './jump-keys.tsx'
 import { PlatesNote } from './plates-note.tsx'
 import { todayQueries } from './today-queries.ts'
 import { WorkList } from './work-list.tsx'
@@ -20,7 +21,12 @@ function SheetPlan({ sheet, roof }: { sheet: DaySheet; roof: DayRoof }) {
   const due = useMemo(() => new Set(sheet.dueMarks), [sheet.dueMarks])
   const done = useMemo(() => new Set(sheet.doneMarks), [sheet.doneMarks])
   return (
-    <Card aria-label="Roof plan" className="print:mx-auto print:w-[120mm] print:break-inside-avoid">
+    <Card
+      id={planPlaceId(sheet)}
+      tabIndex={-1}
+      aria-label="Roof plan"
+      className="scroll-mt-2 p-2 sm:p-4 print:mx-auto print:w-[120mm] print:break-inside-avoid"
+    >
       <RoofPlan
         roof={roof.roof}
         spec={roof.spec}
@@ -72,7 +78,7 @@ function SheetRoof({ sheet, revisionId }: { sheet: DaySheet; revisionId: string 
 }
 
 /** One booking of the day: facts and plan beside the work. */
-export function SheetView({ sheet }: { sheet: DaySheet }) {
+export function SheetView({ sheet, today }: { sheet: DaySheet; today: string }) {
   const { job, revision } = sheet
   const roof = useQuery({
     ...todayQueries.roof(sheet.bookingDayId, revision?.id ?? ''),
@@ -90,16 +96,20 @@ export function SheetView({ sheet }: { sheet: DaySheet }) {
           {sheet.state === 'pencilled' ? <Badge kind="ochre">Pencilled</Badge> : null}
         </p>
       </div>
-      <div className="grid gap-4 lg:grid-cols-[minmax(0,5fr)_minmax(0,6fr)] lg:gap-6 print:block print:space-y-3">
-        <div className="space-y-4">
+      {/* A phone reads facts, work, plan; a desk has the plan under the facts, beside the work. */}
+      <div className="grid gap-4 lg:grid-cols-[minmax(0,5fr)_minmax(0,6fr)] lg:grid-rows-[auto_1fr] lg:gap-x-6 print:block print:space-y-3">
+        <div className="space-y-3">
+          <JumpKeys sheet={sheet} />
           <ChangesNote sheet={sheet} />
           <DayFacts sheet={sheet} />
           <PlatesNote sheet={sheet} />
-          <HeightNote />
           <CautionNotes sheet={sheet} />
-          {revision ? <SheetRoof sheet={sheet} revisionId={revision.id} /> : null}
+          <HeightNote />
         </div>
-        <WorkList sheet={sheet} roof={roof.data ?? null} />
+        <div className="lg:col-start-2 lg:row-span-2 lg:row-start-1">
+          <WorkList sheet={sheet} roof={roof.data ?? null} today={today} />
+        </div>
+        {revision ? <SheetRoof sheet={sheet} revisionId={revision.id} /> : null}
       </div>
     </section>
   )

@@ -1,4 +1,4 @@
-import { Hand } from 'lucide-react'
+import { Check, ChevronDown, Hand } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { isDone } from '../../../shared/day-sheets/day-pieces.ts'
 import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
@@ -6,13 +6,14 @@ import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
 import { shareWords } from '../../../shared/marking/role-words.ts'
 import { PlaningNote } from '../../drawings/marking-card-view.tsx'
-import { MainNumbers, MarkingNumbers } from '../../drawings/marking-numbers.tsx'
+import { CutLengthLine, CutNumbers, MarkingNumbers } from '../../drawings/marking-numbers.tsx'
 import { useMay } from '../../lib/session.ts'
 import { useTicks } from '../../lib/use-ticks.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
 import { Fold } from '../../ui/fold.tsx'
+import { taskPlaceId } from './jump-keys.tsx'
 import { TaskControls } from './task-controls.tsx'
 
 type Props = {
@@ -23,10 +24,14 @@ type Props = {
   place: { index: number; count: number } | null
   /** The numbers of this line stand further up on the page. */
   numbersAbove: boolean
+  /** Asks once before a tick on a day that is not today. */
+  askFirst: (tick: () => void) => void
 }
 
 type NumbersProps = { task: DayTask; card: MarkingCard; numbersAbove: boolean }
 
+/** Of more pieces than these the marks are put away. */
+const mostMarks = 8
 const workWords = { 'set-out': 'Set out', cut: 'Cut', stand: 'Stand' } as const
 
 function cardOf(task: DayTask, roof: DayRoof | null): MarkingCard | null {
@@ -36,33 +41,21 @@ function cardOf(task: DayTask, roof: DayRoof | null): MarkingCard | null {
   return hasLine ? markingCardOf(roof.spec, mark, roof.marking) : null
 }
 
-function TaskHead({
-  task,
-  card,
-  share,
-}: {
-  task: DayTask
-  card: MarkingCard | null
-  share: string
-}) {
+function TaskTitle({ task, card }: { task: DayTask; card: MarkingCard | null }) {
+  if (!card) return <>{task.title}</>
+  return (
+    <>
+      {workWords[task.work]} <span className="text-clay">{card.mark}</span> {card.name}
+    </>
+  )
+}
+
+function TaskHead({ task, card }: { task: DayTask; card: MarkingCard | null }) {
   return (
     <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-1">
-      <div className="min-w-0">
-        <h4 className="text-xl font-extrabold leading-tight print:text-base">
-          {card ? (
-            <>
-              {workWords[task.work]} <span className="text-clay">{card.mark}</span> {card.name}
-            </>
-          ) : (
-            task.title
-          )}
-        </h4>
-        {card ? (
-          <p>
-            {card.section} · {share}
-          </p>
-        ) : null}
-      </div>
+      <h4 className="min-w-0 text-xl font-extrabold leading-tight print:text-base">
+        <TaskTitle task={task} card={card} />
+      </h4>
       <div className="flex flex-wrap gap-1">
         {task.handRaisedAt ? (
           <Badge kind="stop">
@@ -75,76 +68,124 @@ function TaskHead({
   )
 }
 
-/** One line of the day: what, how many, its numbers, who, and how far. */
-export function TaskCard({ task, roof, roster, place, numbersAbove }: Props) {
-  const mayOrder = useMay('day-sheet:write')
+/** One line of the day: what, how many, its numbers, who, and how far; one row once it is done. */
+export function TaskCard(props: Props) {
+  const { task, roof } = props
   const card = cardOf(task, roof)
-  const share = roof ? shareWords(roof.spec.members, task.memberMarks) : ''
+  const border = isDone(task) ? 'border-leaf' : 'border-rule border-l-clay'
   return (
     <article
-      className={`rounded-md border border-l-8 bg-sheet p-3 sm:p-4 break-inside-avoid print:border-l print:p-2 print:text-xs ${isDone(task) ? 'border-leaf' : 'border-rule border-l-clay'}`}
+      id={taskPlaceId(task)}
+      tabIndex={-1}
+      className={`scroll-mt-2 rounded-md border border-l-8 bg-sheet break-inside-avoid print:border-l print:p-2 print:text-xs ${border} ${isDone(task) ? 'px-3' : 'p-3 sm:p-4'}`}
     >
-      <TaskHead task={task} card={card} share={share} />
+      {isDone(task) && !task.handRaisedAt ? (
+        <DoneRow {...props} card={card} />
+      ) : (
+        <OpenTask {...props} card={card} />
+      )}
+    </article>
+  )
+}
+
+type CardProps = Props & { card: MarkingCard | null }
+
+/** What is done takes no room; a tap still opens its numbers and its count. */
+function DoneRow(props: CardProps) {
+  const { task, card } = props
+  return (
+    <details className="group">
+      <summary className="flex min-h-14 list-none items-center gap-2 print:min-h-0 [&::-webkit-details-marker]:hidden">
+        <Check size={24} aria-hidden className="shrink-0 text-leaf" />
+        <h4 className="min-w-0 flex-1 font-semibold leading-tight">
+          <TaskTitle task={task} card={card} />
+        </h4>
+        <span className="shrink-0 text-base">
+          {task.quantity === 1 ? 'Done' : `${task.doneCount} of ${task.quantity}`}
+        </span>
+        <ChevronDown
+          size={22}
+          aria-hidden
+          className="shrink-0 group-open:rotate-180 print:hidden"
+        />
+      </summary>
+      <div className="pb-3">
+        <OpenTask {...props} showsTitle={false} />
+      </div>
+    </details>
+  )
+}
+
+function OpenTask({ showsTitle = true, ...props }: CardProps & { showsTitle?: boolean }) {
+  const { task, roof, roster, place, card } = props
+  const mayOrder = useMay('day-sheet:write')
+  const share = roof ? shareWords(roof.spec.members, task.memberMarks) : ''
+  return (
+    <>
+      {showsTitle ? <TaskHead task={task} card={card} /> : null}
       {card ? (
-        <p className="mt-1 text-base print:text-xs">
-          {task.memberMarks.join(', ')}. {card.handWords}
+        <p className="text-base print:text-xs">
+          {card.section} · <span className="font-semibold">{share}</span>
+          {task.memberMarks.length <= mostMarks ? ` · ${task.memberMarks.join(', ')}` : null}
         </p>
       ) : null}
-      {card ? <TaskNumbers task={task} card={card} numbersAbove={numbersAbove} /> : null}
-      <div className="mt-3 space-y-3 border-t border-rule pt-3 print:mt-1 print:pt-1">
+      {card ? <TaskNumbers task={task} card={card} numbersAbove={props.numbersAbove} /> : null}
+      <div className="mt-3 space-y-3 print:mt-1 print:space-y-0">
         {mayOrder ? (
           <>
-            <TaskTicks task={task} />
+            <TaskTicks task={task} hasCard={card !== null} askFirst={props.askFirst} />
             <TaskControls task={task} roster={roster} place={place} />
-            {card ? (
-              <Link
-                to={`/my-tasks/${task.id}`}
-                className={`${buttonClass('plain', 'site')} w-full sm:w-auto print:hidden`}
-              >
-                Card with drawing
-              </Link>
-            ) : null}
           </>
         ) : (
           <TaskState task={task} />
         )}
       </div>
-    </article>
+    </>
   )
 }
 
-/** To cut: every number. To stand, when done or said above: the lengths, the rest a tap away. */
+/** To cut: what the saw waits for, the rest a tap away. To stand: the length it is known by. */
 function TaskNumbers({ task, card, numbersAbove }: NumbersProps) {
   const isFull = task.work === 'cut' && !numbersAbove && !isDone(task)
   return (
-    <div className="mt-3 space-y-3 print:mt-1 print:space-y-1">
-      <PlaningNote card={card} />
-      {isFull ? (
+    <div className="mt-2 space-y-2 print:mt-1 print:space-y-1">
+      {isFull ? <CutNumbers card={card} /> : <CutLengthLine card={card} />}
+      {numbersAbove ? null : <PlaningNote card={card} />}
+      <Fold title="All numbers">
+        <p className="text-base">{task.memberMarks.join(', ')}</p>
+        <p className="text-base">{card.handWords}</p>
+        {numbersAbove ? <PlaningNote card={card} /> : null}
         <MarkingNumbers card={card} />
-      ) : (
-        <>
-          <MainNumbers card={card} />
-          <Fold title="All numbers">
-            <MarkingNumbers card={card} />
-          </Fold>
-        </>
-      )}
+      </Fold>
+      {isFull ? (
+        <div className="hidden print:block">
+          <p>{card.handWords}</p>
+          <MarkingNumbers card={card} />
+        </div>
+      ) : null}
     </div>
   )
 }
 
-function TaskTicks({ task }: { task: DayTask }) {
+type TicksProps = Pick<Props, 'task' | 'askFirst'> & { hasCard: boolean }
+
+function TaskTicks({ task, hasCard, askFirst }: TicksProps) {
   const { count, unsent, step } = useTicks(task)
   return (
     <>
-      <div className="print:hidden">
+      <div className="flex flex-wrap items-center justify-between gap-2 print:hidden">
         <CountStepper
           label={task.title}
           count={count}
           total={task.quantity}
           unsent={unsent}
-          onStep={step}
+          onStep={(delta) => askFirst(() => step(delta))}
         />
+        {hasCard ? (
+          <Link to={`/my-tasks/${task.id}`} className={`${buttonClass('plain', 'site')} px-3`}>
+            Card<span className="sr-only"> with drawing, {task.title}</span>
+          </Link>
+        ) : null}
       </div>
       <p className="hidden print:block">
         {count} of {task.quantity} done. {task.assignedTo?.name ?? ''}

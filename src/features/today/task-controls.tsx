@@ -2,7 +2,6 @@ import { ArrowDown, ArrowUp, Hand } from 'lucide-react'
 import type { DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { Button } from '../../ui/button.tsx'
-import { Field } from '../../ui/field.tsx'
 import { Select } from '../../ui/inputs.tsx'
 import { useTaskChange } from './use-task-change.ts'
 
@@ -21,26 +20,25 @@ function AssignSelect({ task, roster, change }: AssignProps) {
   const assigned = task.assignedTo
   const isGone = assigned !== null && !there.some((person) => person.id === assigned.id)
   return (
-    <Field label="Who does it">
-      <Select
-        className="min-h-14"
-        value={assigned?.id ?? ''}
-        disabled={change.isPending}
-        onChange={(event) => change.mutate({ assignedToId: event.target.value || null })}
-      >
-        <option value="">Nobody yet</option>
-        {there.map((person) => (
-          <option key={person.id} value={person.id}>
-            {person.name}
-          </option>
-        ))}
-        {isGone ? <option value={assigned.id}>{assigned.name} (not there)</option> : null}
-      </Select>
-    </Field>
+    <Select
+      aria-label="Who does it"
+      className="min-h-14 min-w-0 flex-1"
+      value={assigned?.id ?? ''}
+      disabled={change.isPending}
+      onChange={(event) => change.mutate({ assignedToId: event.target.value || null })}
+    >
+      <option value="">Who? Nobody yet</option>
+      {there.map((person) => (
+        <option key={person.id} value={person.id}>
+          {person.name}
+        </option>
+      ))}
+      {isGone ? <option value={assigned.id}>{assigned.name} (not there)</option> : null}
+    </Select>
   )
 }
 
-/** Hand out, try the first piece, put in order, answer a raised hand. */
+/** Hand out, try the first piece, answer a raised hand; the order is put away. */
 export function TaskControls({ task, roster, place }: Props) {
   const { change, hand } = useTaskChange(task)
   return (
@@ -57,50 +55,62 @@ export function TaskControls({ task, roster, place }: Props) {
           Seen to, lower the hand
         </Button>
       ) : null}
-      <AssignSelect task={task} roster={roster} change={change} />
-      <div className="flex flex-wrap items-center gap-2">
-        {task.work === 'cut' ? (
-          <label className="flex min-h-14 flex-1 items-center gap-3 rounded-md border border-ink-soft px-3 font-semibold">
-            <input
-              type="checkbox"
-              className="h-7 w-7 shrink-0 accent-clay"
-              checked={task.firstPiece !== null}
-              disabled={change.isPending}
-              onChange={(event) => change.mutate({ firstPieceTried: event.target.checked })}
-            />
-            <span>
-              First piece tried
-              {task.firstPiece ? (
-                <span className="block text-sm font-normal">by {task.firstPiece.by}</span>
-              ) : null}
-            </span>
-          </label>
-        ) : null}
-        {place ? (
-          <>
-            <Button
-              kind="plain"
-              size="site"
-              aria-label={`${task.title}: earlier in the day`}
-              disabled={place.index === 0}
-              busy={change.isPending}
-              onClick={() => change.mutate({ position: place.index - 1 })}
-            >
-              <ArrowUp size={22} aria-hidden />
-            </Button>
-            <Button
-              kind="plain"
-              size="site"
-              aria-label={`${task.title}: later in the day`}
-              disabled={place.index === place.count - 1}
-              busy={change.isPending}
-              onClick={() => change.mutate({ position: place.index + 1 })}
-            >
-              <ArrowDown size={22} aria-hidden />
-            </Button>
-          </>
-        ) : null}
+      {task.work === 'cut' ? <FirstPiece task={task} change={change} /> : null}
+      <div className="flex items-center gap-2">
+        <AssignSelect task={task} roster={roster} change={change} />
+        {place ? <OrderKeys task={task} place={place} change={change} /> : null}
       </div>
     </div>
+  )
+}
+
+function FirstPiece({ task, change }: Pick<AssignProps, 'task' | 'change'>) {
+  return (
+    <label className="flex min-h-14 items-center gap-3 rounded-md border border-ink-soft px-3 font-semibold">
+      <input
+        type="checkbox"
+        className="h-7 w-7 shrink-0 accent-clay"
+        checked={task.firstPiece !== null}
+        disabled={change.isPending}
+        onChange={(event) => change.mutate({ firstPieceTried: event.target.checked })}
+      />
+      <span>
+        First piece tried
+        {task.firstPiece ? (
+          <span className="block text-sm font-normal">by {task.firstPiece.by}</span>
+        ) : null}
+      </span>
+    </label>
+  )
+}
+
+type OrderProps = Pick<AssignProps, 'task' | 'change'> & { place: { index: number; count: number } }
+
+function OrderKeys({ task, place, change }: OrderProps) {
+  return (
+    <>
+      <Button
+        kind="plain"
+        size="site"
+        className="min-w-14 px-0"
+        aria-label={`${task.title}: earlier in the day`}
+        disabled={place.index === 0}
+        busy={change.isPending}
+        onClick={() => change.mutate({ position: place.index - 1 })}
+      >
+        <ArrowUp size={22} aria-hidden />
+      </Button>
+      <Button
+        kind="plain"
+        size="site"
+        className="min-w-14 px-0"
+        aria-label={`${task.title}: later in the day`}
+        disabled={place.index === place.count - 1}
+        busy={change.isPending}
+        onClick={() => change.mutate({ position: place.index + 1 })}
+      >
+        <ArrowDown size={22} aria-hidden />
+      </Button>
+    </>
   )
 }

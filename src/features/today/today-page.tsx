@@ -14,7 +14,7 @@ import { PrintFoot } from '../../ui/print-foot.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { EmptyState, ErrorState } from '../../ui/states.tsx'
 import { SunlightSwitch } from '../../ui/sunlight-switch.tsx'
-import { DaySwitcher } from './day-switcher.tsx'
+import { AnyDay, DaySwitcher } from './day-switcher.tsx'
 import { dayTitle } from './day-words.ts'
 import { SheetView } from './sheet-view.tsx'
 import { todayQueries } from './today-queries.ts'
@@ -102,7 +102,13 @@ function TodayBody({
         actions={
           <>
             <SunlightSwitch />
-            <Button kind="plain" size="site" onClick={() => window.print()}>
+            <AnyDay sheets={sheets} onDay={(day) => set('day', day)} />
+            <Button
+              kind="plain"
+              size="site"
+              className="hidden sm:inline-flex"
+              onClick={() => window.print()}
+            >
               <Printer size={22} aria-hidden />
               Print
             </Button>
@@ -120,7 +126,7 @@ function TodayBody({
       ) : (
         <div className="space-y-8">
           {sheets.sheets.map((sheet) => (
-            <SheetView key={sheet.bookingDayId} sheet={sheet} />
+            <SheetView key={sheet.bookingDayId} sheet={sheet} today={sheets.today} />
           ))}
         </div>
       )}

@@ -2,9 +2,10 @@ import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-sch
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { cutOneFirst } from '../../../shared/marking/marking-card.ts'
+import { useDayAsk } from '../../lib/use-day-ask.tsx'
 import { TaskCard } from './task-card.tsx'
 
-type Props = { sheet: DaySheet; roof: DayRoof | null }
+type Props = { sheet: DaySheet; roof: DayRoof | null; today: string }
 
 type Run = { title: string; tasks: { task: DayTask; index: number }[] }
 
@@ -32,7 +33,8 @@ function repeatedLines(tasks: readonly DayTask[]): Set<string> {
 }
 
 /** Everything to cut and stand, in order, left over first. */
-export function WorkList({ sheet, roof }: Props) {
+export function WorkList({ sheet, roof, today }: Props) {
+  const { askFirst, question } = useDayAsk(sheet.day, today)
   const { tasks, leftOver, roster } = sheet
   const repeated = repeatedLines([...leftOver, ...tasks])
   const show = (task: DayTask, place: { index: number; count: number } | null) => (
@@ -43,11 +45,13 @@ export function WorkList({ sheet, roof }: Props) {
       roster={roster}
       place={place}
       numbersAbove={repeated.has(task.id)}
+      askFirst={askFirst}
     />
   )
   return (
     <section aria-label="Work of the day" className="space-y-5">
       <p className="text-xl font-extrabold">{cutOneFirst}</p>
+      {question}
       {leftOver.length > 0 ? (
         <div className="space-y-3 print:columns-2 print:gap-3 print:space-y-2">
           <h3 className="text-lg font-extrabold [column-span:all] break-after-avoid">
