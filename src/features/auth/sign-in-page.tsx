@@ -8,11 +8,7 @@ import { TextInput } from '../../ui/inputs.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { useSignIn } from './auth-queries.ts'
 import { PublicPage } from './public-page.tsx'
-
-/** Only our own addresses: a link from elsewhere must not send people away after sign-in. */
-function wayBack(to: string | null): string {
-  return to && /^\/(?![/\\])/.test(to) ? to : '/'
-}
+import { wayBack } from './way-back.ts'
 
 function SignInForm() {
   const { user } = useSession()
