@@ -52,7 +52,8 @@ export function ToastProvider({ children }: { children: ReactNode }) {
             ) : null}
           </Radix.Root>
         ))}
-        <Radix.Viewport className="fixed bottom-20 right-4 z-50 flex w-[min(24rem,92vw)] flex-col gap-2 lg:bottom-4 print:hidden" />
+        {/* At the desk on the left, clear of the panel that slides in on the right. */}
+        <Radix.Viewport className="fixed bottom-20 right-4 z-50 flex w-[min(24rem,92vw)] flex-col gap-2 lg:bottom-4 lg:left-60 lg:right-auto print:hidden" />
       </Radix.Provider>
     </ToastContext.Provider>
   )

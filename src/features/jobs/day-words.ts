@@ -7,7 +7,7 @@ export function dayText(day: Day, today: Day): string {
 }
 
 /** A day stays on one line. */
-function unbroken(text: string): string {
+export function unbroken(text: string): string {
   return text.replaceAll(' ', '\u00a0')
 }
 

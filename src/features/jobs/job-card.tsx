@@ -4,7 +4,7 @@ import type { JobCard as Card } from '../../../shared/jobs/job-views.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
 import { useSession } from '../../lib/session.ts'
-import { bookingDaysText, dayText } from './day-words.ts'
+import { bookingDaysText, dayText, unbroken } from './day-words.ts'
 import { missingText } from './missing-text.ts'
 import { NoRoofGlyph } from './no-roof-glyph.tsx'
 
@@ -36,7 +36,7 @@ function CardTiming({ card }: { card: Card }) {
     )
   }
   if (!card.wantedBy || card.stage === 'complete') return null
-  return <span className="text-ink-soft">Wanted by {dayText(card.wantedBy, today)}</span>
+  return <span className="text-ink-soft">Wanted by {unbroken(dayText(card.wantedBy, today))}</span>
 }
 
 /** A job on the board: its shape, where it is, when it is on, and what it lacks. */
