@@ -14,6 +14,12 @@ export type AuthService = ReturnType<typeof createAuthService>
 
 const wrongSignIn = 'That e-mail address and password do not go together.'
 
+function hashOf(db: DbOrTx, personId: string): string | null {
+  const columns = { passwordHash: people.passwordHash }
+  const row = db.select(columns).from(people).where(eq(people.id, personId)).get()
+  return row?.passwordHash ?? null
+}
+
 /** Sets the hash, ends every session of the person and every link sent before. */
 function setPassword(
   tx: DbOrTx,
@@ -94,14 +100,16 @@ export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
     current: string,
     next: string,
   ): Promise<SignedInPerson> {
-    const person = db.select().from(people).where(eq(people.id, personId)).get()
-    const right = person?.passwordHash ? await verifyPassword(person.passwordHash, current) : false
-    if (!right) throw invalidField('current', 'That is not the password you have now.')
+    const wrongNow = () => invalidField('current', 'That is not the password you have now.')
+    const known = hashOf(db, personId)
+    if (known === null || !(await verifyPassword(known, current))) throw wrongNow()
     const passwordHash = await hashPassword(next)
     const now = clock.now()
-    return db.transaction((tx) =>
-      setPassword(tx, { personId, passwordHash, action: 'password changed', now }),
-    )
+    return db.transaction((tx) => {
+      // A reset meanwhile stands: what was checked is the password no longer.
+      if (hashOf(tx, personId) !== known) throw wrongNow()
+      return setPassword(tx, { personId, passwordHash, action: 'password changed', now })
+    })
   }
 
   return { signIn, askReset, useReset, changePassword }

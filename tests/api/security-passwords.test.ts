@@ -103,6 +103,20 @@ test('the password asked for again at a change cannot be guessed without end', a
   expect((await change(testPassword)).status).toBe(429)
 })
 
+test('of two changes of a password at the same moment one is told that it came too late', async () => {
+  const app = await createTestApp()
+  const { email } = app.addPerson('office', 'Orla Brandt')
+  const devices = [await app.agentFor(email), await app.agentFor(email)]
+  const answers = await Promise.all(
+    devices.map((device, i) =>
+      device
+        .put('/api/session/password')
+        .send({ current: testPassword, next: `${nextPassword} ${i}` }),
+    ),
+  )
+  expect(answers.map((answer) => answer.status).sort()).toEqual([200, 400])
+})
+
 test('no password and no link stands in the log, at its most talkative', async () => {
   const lines: string[] = []
   const log = pino({ level: 'trace' }, { write: (line: string) => void lines.push(line) })

@@ -156,3 +156,17 @@ test('the data folder is for its owner only: it holds password hashes, sessions 
   expect(statSync(dir).mode & 0o077).toBe(0)
   rmSync(parent, { recursive: true, force: true })
 })
+
+test('a page runs our own scripts only, stands in no other page, and gives its address to nobody', async () => {
+  const { agent } = await officeApp()
+  const { headers } = await agent.get('/api/session').expect(200)
+  const policy = String(headers['content-security-policy'])
+  expect(policy).toContain("default-src 'self'")
+  expect(policy).toMatch(/script-src 'self'(;|$)/)
+  expect(policy).toContain("frame-ancestors 'none'")
+  expect(policy).toContain("base-uri 'none'")
+  expect(headers['x-content-type-options']).toBe('nosniff')
+  expect(headers['referrer-policy']).toBe('no-referrer')
+  expect(headers['cache-control']).toBe('no-store')
+  expect(headers['x-powered-by']).toBeUndefined()
+})
