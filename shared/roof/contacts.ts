@@ -6,7 +6,7 @@ import type { Side } from './trim.ts'
 import { add2, dot2, left2, scale2, sub2 } from './vector.ts'
 
 /** A side of a trimmed piece in plan, as a segment. */
-type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
+export type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
 
 /** Faces this near to one plane bear on each other. */
 const bearingGapMm = 0.1
@@ -25,7 +25,7 @@ const isNear = (a: Segment, b: Segment): boolean =>
   Math.min(b.from.y, b.to.y) <= Math.max(a.from.y, a.to.y) + 1
 
 /** Where along a's side two faces lie on each other in plan, with no more than the gap between; null where they do not. */
-const sharedRange = (a: Segment, b: Segment): [number, number] | null => {
+export const sharedRange = (a: Segment, b: Segment): [number, number] | null => {
   const run = sub2(a.to, a.from)
   const size = Math.hypot(run.x, run.y)
   if (size < leastBearingMm) return null

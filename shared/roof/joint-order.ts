@@ -1,15 +1,17 @@
 import { brokenFootCut, sidesAt } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
-import { bodyDirection, endJobs, inLineRad, phases, turn } from './joint-phases.ts'
-import type { EndJob } from './joint-phases.ts'
+import { jointFaults } from './joint-faults.ts'
+import { bodyDirection, endJobs, phases, usualWay } from './joint-phases.ts'
+import type { EndJob, JointWay, JointWays } from './joint-phases.ts'
+import { jointMitres } from './joint-mitres.ts'
+import { jointGroups, waysToTry } from './joint-ways.ts'
+import { obstacleGrid } from './obstacle-grid.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import { halfObstacle, trimEnd } from './trim.ts'
-import type { Obstacle } from './trim.ts'
-import { add2, distance2, dot2, length2, scale2, sub2 } from './vector.ts'
-
-type State = { pieces: Piece[]; jobs: EndJob[]; placed: EndJob[]; obstacles: Obstacle[] }
+import type { Near, Obstacle } from './trim.ts'
+import { add2, distance2, dot2, scale2, sub2 } from './vector.ts'
 
 /** The verge overhang of the gable that a ridge end stands on; null where it does not. */
 const vergeMm = (ground: Ground, point: Point2): number | null => {
@@ -30,62 +32,12 @@ const ridgeEnd = (ground: Ground, { piece, end }: EndJob): PlanCut => {
 }
 
 /** Trims an end; it may run past its set-out end as far as its joint's centre and a little more. */
-const trimmed = (ground: Ground, job: EndJob, obstacles: Obstacle[], cuts: PlanCut[]) => {
+const trimmed = (ground: Ground, job: EndJob, near: Near, cuts: PlanCut[]) => {
   const { piece, end, joint } = job
   const set = end === 'head' ? piece.head : piece.foot
   const toCentre = joint === null ? 0 : distance2(set, at(ground.joints.joints, joint).point)
-  return trimEnd(piece, end, obstacles, cuts, toCentre + 3 * piece.halfMm)
+  return trimEnd(piece, end, near, cuts, toCentre + 3 * piece.halfMm)
 }
-
-const cutsOfEnd = (ground: Ground, job: EndJob, state: State): PlanCut[] => {
-  const { jobs, placed, obstacles, pieces } = state
-  if (job.phase === phases.ridge) return [ridgeEnd(ground, job)]
-  if (job.phase === phases.brokenFoot) {
-    const isCrown = (j: EndJob) => j.phase === phases.firstCrown && j.joint === job.joint
-    const crown = jobs.find(isCrown)?.piece ?? null
-    return [brokenFootCut(job.piece, crown, sidesAt(job.piece, pieces))]
-  }
-  return trimmed(ground, job, obstacles, distinct(mitres(ground, job, jobs, placed)))
-}
-
-/** Pieces whose centre lines miss the joint's centre by more than this share no mitre: the later one butts. */
-const offCentreMm = 1
-
-const runsThrough = (piece: Piece, centre: Point2): boolean =>
-  Math.abs(dot2(piece.left, sub2(centre, piece.foot))) < offCentreMm
-
-/** Plumb planes between a piece and those of its own phase next to it round the joint. */
-const mitres = (ground: Ground, job: EndJob, jobs: EndJob[], placed: EndJob[]): PlanCut[] => {
-  if (job.joint === null) return []
-  const centre = at(ground.joints.joints, job.joint).point
-  const own = bodyDirection(job.piece, job.end)
-  const round = [...placed, ...jobs.filter((j) => j.phase === job.phase)].filter(
-    (j) => j.joint === job.joint && j.piece !== job.piece,
-  )
-  return ([1, -1] as const).flatMap((sign) => {
-    const angle = (j: EndJob) => {
-      const a = sign * turn(own, bodyDirection(j.piece, j.end))
-      return a < 0 ? a + 2 * Math.PI : a
-    }
-    const next = round.reduce<EndJob | null>(
-      (a, b) => (a === null || angle(b) < angle(a) ? b : a),
-      null,
-    )
-    if (next === null || next.phase !== job.phase || angle(next) > Math.PI + inLineRad) return []
-    if (!runsThrough(job.piece, centre) || !runsThrough(next.piece, centre)) return []
-    const half = angle(next) / 2
-    const cos = Math.cos(half)
-    const sin = sign * Math.sin(half)
-    // along the mitre, out of the joint, then square to it on the far side of the piece
-    const line = { x: own.x * cos - own.y * sin, y: own.x * sin + own.y * cos }
-    const normal = sign === 1 ? { x: -line.y, y: line.x } : { x: line.y, y: -line.x }
-    return [{ point: centre, normal, mitreWith: next.piece.id }]
-  })
-}
-
-/** A mitre that two pieces share once; in-line pairs get theirs from both sides. */
-const distinct = (cuts: PlanCut[]): PlanCut[] =>
-  cuts.filter((cut, k) => !cuts.slice(0, k).some((c) => length2(sub2(c.normal, cut.normal)) < 1e-9))
 
 const endCuts = ({ piece, end }: EndJob): PlanCut[] =>
   end === 'head' ? piece.headCuts : piece.footCuts
@@ -98,40 +50,101 @@ const isShared = (cut: PlanCut, job: EndJob, jobs: EndJob[]): boolean =>
       endCuts(mate).some((c) => c.mitreWith === job.piece.id),
   )
 
-/** When an end was placed; with null, the first end of that piece. */
-type PlacedAt = (piece: number, end: PieceEnd | null) => number
+/** The foot of a broken hip, by the way of its joint. */
+const brokenFoot = (job: EndJob, jobs: EndJob[], ways: JointWays): PlanCut => {
+  const isCrown = (j: EndJob) => j.phase === phases.firstCrown && j.joint === job.joint
+  const heads = jobs.filter((j) => j.joint === job.joint && j.end === 'head')
+  const way = (job.joint === null ? null : ways.get(job.joint)) ?? usualWay
+  const sides = sidesAt(
+    job.piece,
+    heads.map((j) => j.piece),
+  )
+  return brokenFootCut(job.piece, heads.find(isCrown)?.piece ?? null, sides, way.foot)
+}
 
-/**
- * Cuts all ends that meet other timber, in the order of who runs through and who butts; changes the
- * pieces' cut lists. Tails and birdsmouths are not touched.
- */
-export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
-  const jobs = endJobs(ground, pieces)
-  const obstacles: Obstacle[] = []
+/** What stands already, and takes what is placed. */
+type Standing = { near: Near; put: (obstacle: Obstacle, slot: string) => void }
+
+const setCuts = (job: EndJob, cuts: PlanCut[], standing: Standing) => {
+  if (job.end === 'head') job.piece.headCuts = cuts
+  else job.piece.footCuts = cuts
+  standing.put(halfObstacle(job.piece, job.end), `${job.piece.id}${job.end}`)
+}
+
+const hasFootJob = (piece: Piece): boolean =>
+  piece.role === 'ridge' || piece.role === 'broken-hip' || piece.footLine !== null
+
+/** Places ends in their order; changes their pieces' cut lists. */
+const placeJobs = (ground: Ground, jobs: EndJob[], ways: JointWays, standing: Standing): void => {
   const placed: EndJob[] = []
-  const slots = new Map<EndJob, number>()
-  const place = (job: EndJob, cuts: PlanCut[]) => {
-    if (job.end === 'head') job.piece.headCuts = cuts
-    else job.piece.footCuts = cuts
-    const obstacle = halfObstacle(job.piece, job.end)
-    const known = slots.get(job)
-    if (known !== undefined) obstacles[known] = obstacle
-    else slots.set(job, obstacles.push(obstacle) - 1)
-  }
   jobs.forEach((job, k) => {
-    place(job, cutsOfEnd(ground, job, { pieces, jobs, placed, obstacles }))
+    const { phase } = job
+    if (phase === phases.ridge) setCuts(job, [ridgeEnd(ground, job)], standing)
+    else if (phase === phases.brokenFoot) setCuts(job, [brokenFoot(job, jobs, ways)], standing)
+    else {
+      const mitres = job.joint === null ? [] : jointMitres(ground, job, jobs, placed)
+      setCuts(job, trimmed(ground, job, standing.near, mitres), standing)
+    }
     placed.push(job)
-    const hasFoot = jobs.some((j) => j.piece === job.piece && j.end === 'foot')
-    if (!hasFoot) obstacles.push(halfObstacle(job.piece, 'foot'))
-    if (jobs[k + 1]?.phase === job.phase) return
+    if (!hasFootJob(job.piece)) {
+      standing.put(halfObstacle(job.piece, 'foot'), `${job.piece.id}foot`)
+    }
+    if (job.joint === null || jobs[k + 1]?.phase === phase) return
     // a mitre whose mate found something else to bear on is no mitre
-    for (const done of jobs.filter((j) => j.phase === job.phase)) {
+    for (const done of placed.filter((j) => j.phase === phase)) {
       const cuts = endCuts(done)
       const kept = cuts.filter((cut) => cut.mitreWith !== null && isShared(cut, done, jobs))
       if (cuts.every((cut) => cut.mitreWith === null || kept.includes(cut))) continue
-      place(done, trimmed(ground, done, obstacles, kept))
+      setCuts(done, trimmed(ground, done, standing.near, kept), standing)
     }
   })
+}
+
+/** A few obstacles, all near, over what stood before. */
+const overlay = (before: readonly Obstacle[]): Standing => {
+  const own = new Map<string, Obstacle>()
+  return {
+    near: () => [...before, ...own.values()],
+    put: (obstacle, slot) => own.set(slot, obstacle),
+  }
+}
+
+/** Places one group of joints near each other, the usual way or, where that leaves a head open, the first way that does not. */
+const placeGroup = (
+  ground: Ground,
+  pieces: Piece[],
+  group: number[],
+  before: readonly Obstacle[],
+): EndJob[] => {
+  const isOwn = (joint: number | null) => joint !== null && group.includes(joint)
+  const own = pieces.filter((p) => isOwn(p.headJoint) || isOwn(p.footJoint))
+  const place = (ways: JointWays) => {
+    const jobs = endJobs(ground, own, ways).filter(
+      (job) => isOwn(job.joint) && job.phase !== phases.ridge,
+    )
+    placeJobs(ground, jobs, ways, overlay(before))
+    return { jobs, faults: jointFaults(jobs, own, before) }
+  }
+  let ways: JointWays = new Map<number, JointWay>()
+  let best = place(ways)
+  for (const joint of group) {
+    if (!best.faults.needsOther(joint)) continue
+    for (const way of waysToTry(own, joint)) {
+      const tried = new Map(ways).set(joint, way)
+      const result = place(tried)
+      if (result.faults.total >= best.faults.total) continue
+      best = result
+      ways = tried
+      if (!best.faults.needsOther(joint)) break
+    }
+  }
+  return place(ways).jobs
+}
+
+/** When an end was placed; with null, the first end of that piece. */
+type PlacedAt = (piece: number, end: PieceEnd | null) => number
+
+const placedAt = (pieces: Piece[], placed: EndJob[]): PlacedAt => {
   const headAt = pieces.map(() => -1)
   const footAt = pieces.map(() => -1)
   placed.forEach(({ piece, end }, k) => ((end === 'head' ? headAt : footAt)[piece.id] = k))
@@ -140,4 +153,30 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
     if (end !== null) return end === 'head' ? head : foot
     return foot < 0 ? head : Math.min(head, foot)
   }
+}
+
+/**
+ * Cuts all ends that meet other timber, in the order of who runs through and who butts: ridges and
+ * their commons, then joint by joint, then creepers; changes the pieces' cut lists. Tails and
+ * birdsmouths are not touched.
+ */
+export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
+  const all = endJobs(ground, pieces, new Map())
+  const isEarly = (job: EndJob) =>
+    job.phase === phases.ridge || (job.joint === null && job.phase === phases.common)
+  const early = all.filter(isEarly)
+  const grid = obstacleGrid()
+  placeJobs(ground, early, new Map(), grid)
+  const placed = [...early]
+  for (const group of jointGroups(ground)) {
+    const jobs = placeGroup(ground, pieces, group.joints, grid.near(group.box))
+    placed.push(...jobs)
+  }
+  for (const job of placed.slice(early.length)) {
+    grid.put(halfObstacle(job.piece, job.end), `${job.piece.id}${job.end}`)
+    if (!hasFootJob(job.piece)) grid.put(halfObstacle(job.piece, 'foot'), `${job.piece.id}foot`)
+  }
+  const late = all.filter((job) => job.joint === null && !isEarly(job))
+  placeJobs(ground, late, new Map(), grid)
+  return placedAt(pieces, [...placed, ...late])
 }

@@ -1,4 +1,5 @@
 import { sidesAt, standSquare } from './broken-foot.ts'
+import type { FootWay } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Joint } from './clusters.ts'
 import { piecePoint } from './piece.ts'
@@ -10,18 +11,28 @@ import { cross2, dot2, scale2, sub2 } from './vector.ts'
 /** An end of a piece in the order of placing: lower phases run through, higher ones butt. */
 export type EndJob = { piece: Piece; end: PieceEnd; phase: number; joint: number | null }
 
+/** How the pieces of a joint are ordered: the usual way, but for one that goes before the others or after them. */
+export type JointWay = { foot: FootWay; first: number | null; last: number | null }
+
+export const usualWay: JointWay = { foot: 'usual', first: null, last: null }
+
+/** The way of each joint that is not made the usual way. */
+export type JointWays = ReadonlyMap<number, JointWay>
+
 /** Directions that differ by less than this (radians) are in line. */
 export const inLineRad = 1e-3
 
 export const phases = {
   ridge: 0,
   brokenFoot: 1,
+  first: 1.5,
   common: 2,
   pair: 3,
   firstCrown: 4,
   crown: 5,
   side: 6,
   hip: 7,
+  last: 7.5,
   creeper: 8,
 } as const
 
@@ -78,15 +89,14 @@ const isRidgeAt = (piece: Piece, joint: number): boolean =>
   piece.role === 'ridge' && (piece.headJoint === joint || piece.footJoint === joint)
 
 /** Side rafters at the foot of a broken hip butt the crown's sides; those square to it butt its own. */
-const sidePhase = (piece: Piece, pieces: Piece[]): number => {
+const sidePhase = (piece: Piece, pieces: Piece[], way: JointWay): number => {
   const rising = pieces.find((p) => p.role === 'broken-hip' && p.footJoint === piece.headJoint)
-  return rising !== undefined && standSquare(rising, sidesAt(rising, pieces))
+  return rising !== undefined && standSquare(rising, sidesAt(rising, pieces), way.foot)
     ? phases.common
     : phases.side
 }
 
-const headPhase = (ground: Ground, piece: Piece, pieces: Piece[]): number => {
-  const joint = piece.headJoint === null ? null : at(ground.joints.joints, piece.headJoint)
+const headPhase = (piece: Piece, pieces: Piece[], way: JointWay): number => {
   switch (piece.role) {
     case 'ridge':
       return phases.ridge
@@ -98,25 +108,51 @@ const headPhase = (ground: Ground, piece: Piece, pieces: Piece[]): number => {
     case 'crown-end':
       return phases.crown
     default:
-      return joint === null ? phases.creeper : sidePhase(piece, pieces)
+      return piece.headJoint === null ? phases.creeper : sidePhase(piece, pieces, way)
   }
 }
 
-/** Every end that meets other timber, first placed first. */
-export const endJobs = (ground: Ground, pieces: Piece[]): EndJob[] => {
+const wayOf = (ways: JointWays, joint: number | null): JointWay =>
+  (joint === null ? null : ways.get(joint)) ?? usualWay
+
+/** The pieces that reach each joint. */
+const piecesByJoint = (ground: Ground, pieces: Piece[]): Piece[][] => {
+  const reaching = ground.joints.joints.map((): Piece[] => [])
+  for (const piece of pieces) {
+    for (const joint of new Set([piece.headJoint, piece.footJoint])) {
+      if (joint !== null) reaching[joint]?.push(piece)
+    }
+  }
+  return reaching
+}
+
+const headPhases = (ground: Ground, pieces: Piece[], ways: JointWays): Map<Piece, number> => {
   const phaseOf = new Map<Piece, number>()
-  pieces.forEach((piece) => phaseOf.set(piece, headPhase(ground, piece, pieces)))
-  ground.joints.joints.forEach((joint, index) => {
-    const crowns = pieces.filter((p) => p.role === 'crown-end' && p.headJoint === index)
+  piecesByJoint(ground, pieces).forEach((own, index) => {
+    const way = wayOf(ways, index)
+    const heads = own.filter((p) => p.headJoint === index)
+    heads.forEach((piece) => phaseOf.set(piece, headPhase(piece, own, way)))
+    const crowns = heads.filter((p) => p.role === 'crown-end')
     const through =
-      pieces.find((p) => isRidgeAt(p, index)) ??
-      pieces.find((p) => p.role === 'broken-hip' && p.footJoint === index) ??
+      own.find((p) => isRidgeAt(p, index)) ??
+      own.find((p) => p.role === 'broken-hip' && p.footJoint === index) ??
       null
+    const joint = at(ground.joints.joints, index)
     crownPhases(joint, crowns, through).forEach((phase, piece) => phaseOf.set(piece, phase))
+    for (const piece of heads) {
+      if (piece.id === way.first) phaseOf.set(piece, phases.first)
+      if (piece.id === way.last) phaseOf.set(piece, phases.last)
+    }
   })
+  return phaseOf
+}
+
+/** Every end that meets other timber, first placed first. */
+export const endJobs = (ground: Ground, pieces: Piece[], ways: JointWays): EndJob[] => {
+  const phaseOf = headPhases(ground, pieces, ways)
   const jobs: EndJob[] = []
   for (const piece of pieces) {
-    const phase = phaseOf.get(piece) ?? phases.creeper
+    const phase = phaseOf.get(piece) ?? headPhase(piece, [], usualWay)
     jobs.push({ piece, end: 'head', phase, joint: piece.headJoint })
     if (piece.role === 'ridge') jobs.push({ piece, end: 'foot', phase, joint: piece.footJoint })
     if (piece.role === 'broken-hip') {

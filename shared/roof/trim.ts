@@ -12,6 +12,9 @@ export type Side = { kind: 'face' } | { kind: PieceEnd; cut: number } | { kind: 
 /** Part of a piece that is already placed and in the way of later ones, in plan. */
 export type Obstacle = { piece: number; polygon: Labelled<Side>; box: Box }
 
+/** The obstacles that may lie in a box. */
+export type Near = (box: Box) => readonly Obstacle[]
+
 /** Overlaps smaller than this in plan are touching faces. */
 const touchMm2 = 0.01
 /** A cut this near to parallel with the piece (cosine) is no end cut. */
@@ -93,11 +96,11 @@ const bestFace = (
 
 type Hit = { obstacle: Obstacle; nearest: number }
 
-const hits = (polygon: Labelled<Side>, obstacles: readonly Obstacle[], away: Point2): Hit[] => {
+const hits = (piece: Piece, polygon: Labelled<Side>, near: Near, away: Point2): Hit[] => {
   const box = polygonBox(polygon.points)
   const found: Hit[] = []
-  for (const obstacle of obstacles) {
-    if (!boxesMeet(box, obstacle.box)) continue
+  for (const obstacle of near(box)) {
+    if (obstacle.piece === piece.id || !boxesMeet(box, obstacle.box)) continue
     const shared = convexOverlap(polygon.points, obstacle.polygon.points)
     if (shared.length < 3 || polygonSignedArea(shared) < touchMm2) continue
     found.push({ obstacle, nearest: Math.min(...shared.map((p) => dot2(p, away))) })
@@ -133,7 +136,7 @@ const centreReachMm = (piece: Piece, cuts: PlanCut[], stop: Point2, away: Point2
 export const trimEnd = (
   piece: Piece,
   end: PieceEnd,
-  obstacles: readonly Obstacle[],
+  near: Near,
   mitres: PlanCut[],
   allowPastMm: number,
 ): PlanCut[] => {
@@ -144,10 +147,9 @@ export const trimEnd = (
     end === 'head' ? strip(piece, middle, piece.planMm + past) : strip(piece, -past, middle)
   let polygon = mitres.reduce((p, cut) => cutAway(p, cut, { kind: 'face' }), whole)
   const cuts = [...mitres]
-  const others = obstacles.filter((obstacle) => obstacle.piece !== piece.id)
   const clear = () => {
     for (let round = 0; round < 12; round++) {
-      const facing = hits(polygon, others, away)
+      const facing = hits(piece, polygon, near, away)
       const cut = facing.reduce<PlanCut | null>(
         (found, hit) => found ?? bestFace(polygon, hit.obstacle, scale2(away, -1)),
         null,

@@ -1,0 +1,123 @@
+import { planSegments, sharedRange } from './contacts.ts'
+import type { Segment } from './contacts.ts'
+import type { EndJob } from './joint-phases.ts'
+import type { Piece, PlanCut } from './piece.ts'
+import type { Point2 } from './roof-types.ts'
+import { at } from './slopes.ts'
+import { fullPlan } from './trim.ts'
+import type { Obstacle } from './trim.ts'
+import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
+
+/** What is wrong with a group of joints: how much in all, and which of them had better be made another way. */
+export type JointFaults = { total: number; needsOther: (joint: number) => boolean }
+
+/** A head that does not close, in the count of faults; a third cut or a feathered one only adds to it. */
+const open = 10
+const awkward = 1
+/** A cut leaner than this to its piece (cosine) runs out in a feather. */
+const featherFacing = 0.2
+/** Cut faces shorter than this in plan are slivers. */
+const sliverMm = 0.3
+/** Where a face has closed it bears; what lies as far behind it as `behindMm` it was meant to meet. */
+const closedMm = 0.1
+const nearlyMm = 1.2
+const behindMm = 6
+const closedShare = 0.975
+
+/** What stands in plan: the piece and the shape of it. */
+type Body = { piece: number; points: readonly Point2[]; sides: Segment[] }
+
+/** Length of a segment within a convex shape. */
+const lengthWithin = (from: Point2, to: Point2, points: readonly Point2[]): number => {
+  const run = sub2(to, from)
+  let low = 0
+  let high = 1
+  for (let k = 0; k < points.length; k++) {
+    const p = at(points, k)
+    const side = sub2(at(points, k + 1), p)
+    const start = cross2(side, sub2(from, p))
+    const gain = cross2(side, run)
+    if (Math.abs(gain) < 1e-12) {
+      if (start < 0) return 0
+      continue
+    }
+    const crossing = -start / gain
+    if (gain > 0) low = Math.max(low, crossing)
+    else high = Math.min(high, crossing)
+    if (high <= low) return 0
+  }
+  return (high - low) * Math.hypot(run.x, run.y)
+}
+
+const touchesFace = (face: Segment, body: Body): boolean =>
+  body.sides.some((side) => sharedRange(face, side) !== null)
+
+/** Whether the face of a cut closes on the pieces that it may bear on. */
+const closes = (face: Segment, cut: PlanCut, bodies: readonly Body[]): boolean => {
+  const named = bodies.filter((body) => touchesFace(face, body))
+  if (named.length === 0) return false
+  const covered = (offMm: number) => {
+    const off = scale2(cut.normal, offMm)
+    const [from, to] = [add2(face.from, off), add2(face.to, off)]
+    return named.reduce((sum, body) => sum + lengthWithin(from, to, body.points), 0)
+  }
+  const meant = Math.min(covered(behindMm), covered(nearlyMm))
+  return covered(closedMm) >= closedShare * meant && covered(closedMm) > sliverMm
+}
+
+const headFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
+  const cuts = job.piece.headCuts
+  let faults = Math.max(0, cuts.length - 2) * awkward
+  cuts.forEach((cut, k) => {
+    const face = own.sides.find((s) => s.side.kind === 'head' && s.side.cut === k)
+    if (Math.abs(dot2(cut.normal, job.piece.dir)) < featherFacing) faults += awkward
+    const size =
+      face === undefined ? 0 : Math.hypot(face.to.x - face.from.x, face.to.y - face.from.y)
+    if (face === undefined || size < sliverMm || !closes(face, cut, bodies)) faults += open
+  })
+  return faults
+}
+
+/** Looks at all heads of a group of joints as placed in order: whether each bears and closes on what stood before it. */
+export const jointFaults = (
+  jobs: readonly EndJob[],
+  pieces: readonly Piece[],
+  before: readonly Obstacle[],
+): JointFaults => {
+  const bodies = new Map<number, Body>()
+  for (const piece of pieces) {
+    const plan = fullPlan(piece)
+    bodies.set(piece.id, {
+      piece: piece.id,
+      points: plan.points,
+      sides: planSegments(piece.id, plan),
+    })
+  }
+  const standing: Body[] = before
+    .filter((obstacle) => !bodies.has(obstacle.piece))
+    .map(({ piece, polygon }) => ({
+      piece,
+      points: polygon.points,
+      sides: planSegments(piece, polygon),
+    }))
+  // the far end of what starts or ends elsewhere stands already
+  for (const piece of pieces) {
+    const own = bodies.get(piece.id)
+    if (own !== undefined && piece.role === 'ridge') standing.push(own)
+  }
+  const ofJoint = new Map<number, number>()
+  let total = 0
+  for (const job of jobs) {
+    const own = bodies.get(job.piece.id)
+    if (own === undefined) continue
+    if (job.end === 'head' && job.piece.role !== 'ridge') {
+      const mates = job.piece.headCuts.flatMap(({ mitreWith }) => bodies.get(mitreWith ?? -1) ?? [])
+      const others = [...standing, ...mates].filter((body) => body !== own)
+      const faults = headFaults(job, own, [...new Set(others)])
+      total += faults
+      if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
+    }
+    standing.push(own)
+  }
+  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open }
+}
