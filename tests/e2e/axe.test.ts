@@ -1,21 +1,11 @@
 import { AxeBuilder } from '@axe-core/playwright'
-import type { Browser } from '@playwright/test'
-import { afterAll, beforeAll, expect, test } from 'vitest'
-import { desk, launchBrowser, phone, visit } from './browser.ts'
+import { expect, test } from 'vitest'
+import { desk, phone, visit } from './browser.ts'
 import { demoSignIn, serveDemo } from './demo.ts'
 import { screensOf } from './screen-list.ts'
+import { withBrowserAnd } from './with-app.ts'
 
-let browser: Browser
-let app: Awaited<ReturnType<typeof serveDemo>>
-
-beforeAll(async () => {
-  browser = await launchBrowser()
-  app = await serveDemo()
-})
-afterAll(async () => {
-  await browser.close()
-  await app.close()
-})
+const served = withBrowserAnd(serveDemo)
 
 const looks = [
   { name: 'on a phone, light', viewport: phone, dark: false },
@@ -26,6 +16,7 @@ test.each(looks)(
   'axe finds nothing on any screen and none scrolls sideways: $name',
   { timeout: 300_000 },
   async (look) => {
+    const { browser, app } = served()
     const screens = screensOf(app, '2026-12-02')
     const faults: string[] = []
     for (const who of [...new Set(screens.map((screen) => screen.who))]) {

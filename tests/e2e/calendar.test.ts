@@ -1,21 +1,12 @@
-import type { Browser } from '@playwright/test'
-import { afterAll, beforeAll, expect, test } from 'vitest'
-import { launchBrowser, visit } from './browser.ts'
+import { expect, test } from 'vitest'
+import { visit } from './browser.ts'
 import { demoSignIn, jobIdOf, serveDemo } from './demo.ts'
+import { withBrowserAnd } from './with-app.ts'
 
-let browser: Browser
-let app: Awaited<ReturnType<typeof serveDemo>>
-
-beforeAll(async () => {
-  browser = await launchBrowser()
-  app = await serveDemo()
-})
-afterAll(async () => {
-  await browser.close()
-  await app.close()
-})
+const served = withBrowserAnd(serveDemo)
 
 test('with keys alone: a crew is booked, twice on one day only with a reason, and the booking is cancelled and brought back', async () => {
+  const { browser, app } = served()
   const office = await visit(browser, app.url, demoSignIn('marnie'))
   const { page } = office
   await office.goto(`/calendar/book?job=${jobIdOf(app.db, 'QR-104')}&day=2026-12-03`)

@@ -1,21 +1,12 @@
-import type { Browser } from '@playwright/test'
-import { afterAll, beforeAll, expect, test } from 'vitest'
-import { launchBrowser, phone, type ServedApp, serveTestApp, visit } from './browser.ts'
+import { expect, test } from 'vitest'
+import { phone, serveTestApp, visit } from './browser.ts'
 import { mailFor } from './demo.ts'
+import { withBrowserAnd } from './with-app.ts'
 
-let browser: Browser
-let app: ServedApp
-
-beforeAll(async () => {
-  browser = await launchBrowser()
-  app = await serveTestApp()
-})
-afterAll(async () => {
-  await browser.close()
-  await app.close()
-})
+const served = withBrowserAnd(serveTestApp)
 
 test('a forgotten password is reset by the link in the mail, which works once', async () => {
+  const { browser, app } = served()
   const person = app.addPerson('leading-hand', 'Tamsin Rook')
   const mail = mailFor(app)
   const { page, complaints, close } = await visit(browser, app.url, undefined, { viewport: phone })

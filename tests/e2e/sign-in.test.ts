@@ -1,20 +1,11 @@
-import type { Browser } from '@playwright/test'
-import { afterAll, beforeAll, expect, test } from 'vitest'
-import { launchBrowser, phone, type ServedApp, serveTestApp, visit } from './browser.ts'
+import { expect, test } from 'vitest'
+import { phone, serveTestApp, visit } from './browser.ts'
+import { withBrowserAnd } from './with-app.ts'
 
-let browser: Browser
-let app: ServedApp
-
-beforeAll(async () => {
-  browser = await launchBrowser()
-  app = await serveTestApp()
-})
-afterAll(async () => {
-  await browser.close()
-  await app.close()
-})
+const served = withBrowserAnd(serveTestApp)
 
 test('a wrong password says so, a right one leads to where the person was going', async () => {
+  const { browser, app } = served()
   const person = app.addPerson('office', 'Orla Brandt')
   const visitor = await visit(browser, app.url, undefined, { viewport: phone })
   const { page } = visitor

@@ -1,11 +1,12 @@
 import { type FormEvent, useState } from 'react'
 import { roleNames } from '../../../shared/auth/roles.ts'
-import { ApiFailure } from '../../lib/api-client.ts'
+import { issueAt } from '../../lib/failure-text.ts'
 import { setPreference, usePreference } from '../../lib/preferences.ts'
 import { useUser } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { Card } from '../../ui/card.tsx'
 import { Field } from '../../ui/field.tsx'
+import { FormFailure } from '../../ui/form-failure.tsx'
 import { TextInput } from '../../ui/inputs.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { Segmented } from '../../ui/segmented.tsx'
@@ -28,7 +29,6 @@ function PasswordForm() {
   const [next, setNext] = useState('')
   const change = useChangePassword()
   const toast = useToast()
-  const failure = change.error instanceof ApiFailure ? change.error : null
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (change.isPending) return
@@ -45,7 +45,7 @@ function PasswordForm() {
   }
   return (
     <form onSubmit={submit} noValidate className="space-y-4">
-      <Field label="Password now" error={failure?.issueAt('current')}>
+      <Field label="Password now" error={issueAt(change.error, 'current')}>
         <TextInput
           type="password"
           autoComplete="current-password"
@@ -53,7 +53,7 @@ function PasswordForm() {
           onChange={(e) => setCurrent(e.target.value)}
         />
       </Field>
-      <Field label="New password" error={failure?.issueAt('next')}>
+      <Field label="New password" error={issueAt(change.error, 'next')}>
         <TextInput
           type="password"
           autoComplete="new-password"
@@ -61,11 +61,7 @@ function PasswordForm() {
           onChange={(e) => setNext(e.target.value)}
         />
       </Field>
-      {failure && failure.error.issues.length === 0 ? (
-        <p role="alert" className="font-semibold text-stop">
-          {failure.message}
-        </p>
-      ) : null}
+      <FormFailure error={change.error} shownPaths={['current', 'next']} />
       <Button type="submit" busy={change.isPending}>
         Change password
       </Button>

@@ -1,9 +1,10 @@
 import { type FormEvent, Suspense, useState } from 'react'
 import { Link, Navigate, useSearchParams } from 'react-router-dom'
-import { ApiFailure } from '../../lib/api-client.ts'
+import { issueAt } from '../../lib/failure-text.ts'
 import { useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
+import { FormFailure } from '../../ui/form-failure.tsx'
 import { TextInput } from '../../ui/inputs.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { useSignIn } from './auth-queries.ts'
@@ -17,14 +18,13 @@ function SignInForm() {
   const [password, setPassword] = useState('')
   const signIn = useSignIn()
   if (user) return <Navigate to={wayBack(params.get('to'))} replace />
-  const failure = signIn.error instanceof ApiFailure ? signIn.error : null
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (!signIn.isPending) signIn.mutate({ email, password })
   }
   return (
     <form onSubmit={submit} noValidate className="space-y-4">
-      <Field label="E-mail" error={failure?.issueAt('email')}>
+      <Field label="E-mail" error={issueAt(signIn.error, 'email')}>
         <TextInput
           type="email"
           autoComplete="username"
@@ -33,7 +33,7 @@ function SignInForm() {
           onChange={(e) => setEmail(e.target.value)}
         />
       </Field>
-      <Field label="Password" error={failure?.issueAt('password')}>
+      <Field label="Password" error={issueAt(signIn.error, 'password')}>
         <TextInput
           type="password"
           autoComplete="current-password"
@@ -41,11 +41,7 @@ function SignInForm() {
           onChange={(e) => setPassword(e.target.value)}
         />
       </Field>
-      {failure && failure.error.issues.length === 0 ? (
-        <p role="alert" className="font-semibold text-stop">
-          {failure.message}
-        </p>
-      ) : null}
+      <FormFailure error={signIn.error} shownPaths={['email', 'password']} />
       <Button type="submit" busy={signIn.isPending} className="w-full">
         Sign in
       </Button>
