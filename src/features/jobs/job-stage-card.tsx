@@ -28,7 +28,7 @@ function StageTrack({ job }: { job: JobView }) {
           <li key={stage} aria-current={isHere ? 'step' : undefined} className="min-w-0 flex-1">
             <span aria-hidden className={`block h-2 rounded-sm ${fill}`} />
             <span
-              className={`mt-1 text-sm ${isHere ? 'font-extrabold' : 'text-ink-soft max-sm:sr-only'}`}
+              className={`mt-1 text-sm max-sm:sr-only ${isHere ? 'font-extrabold' : 'text-ink-soft'}`}
             >
               {jobStageNames[stage]}
             </span>

@@ -115,7 +115,7 @@ function MarkButton({ card, onPick }: { card: MarkingCard; onPick: Props['onPick
         type="button"
         onClick={() => onPick(card.mark)}
         aria-label={`${card.mark}, ${card.name}: open its card`}
-        className="-my-2 min-h-11 min-w-11 rounded-md px-1 text-left font-extrabold text-chalk underline print:hidden"
+        className="-my-2 -ml-1 min-h-11 min-w-11 rounded-md px-1 text-left font-extrabold text-chalk underline print:hidden"
       >
         {card.mark}
       </button>
@@ -130,10 +130,11 @@ function CutLineCard({ card, onPick }: { card: MarkingCard; onPick: Props['onPic
       <div className="flex items-start justify-between gap-3">
         <div className="min-w-0">
           <MarkButton card={card} onPick={onPick} />
+          <p>{card.name}</p>
           <p>
-            {card.name} · <span className="whitespace-nowrap">{card.section}</span>
+            <span className="whitespace-nowrap tabular-nums">{card.section}</span>,{' '}
+            <span className="font-semibold">{card.quantityWords}</span>
           </p>
-          <p className="font-semibold">{card.quantityWords}</p>
         </div>
         <div className="shrink-0 text-right">
           <p className="numeral text-[1.75rem]">

@@ -72,7 +72,7 @@ function PlateFields({ plate, number }: { plate: FormPlate; number: number }) {
     <li id={fieldId(path)}>
       <fieldset>
         <legend className="mb-1 font-semibold">{title}</legend>
-        <div className="grid grid-cols-3 gap-2">
+        <div className="grid grid-cols-[1.3fr_1fr_1fr] gap-2">
           <ChoiceField path={`${path}.finish`} label="Finish" options={finishWords(plate)} />
           {side.finish === 'eave' ? (
             <MeasureField path={`${path}.pitchDeg`} label="Pitch" placeholder={taken.pitchDeg} />
