@@ -7,7 +7,7 @@ import type { Clock } from '../lib/clock.ts'
 import { newId } from '../lib/ids.ts'
 import { enqueueMail } from '../mail/outbox-store.ts'
 import { dropPasswordLinks, isPasswordTokenGood, spendPasswordToken } from './password-links.ts'
-import { hashPassword, verifyDecoy, verifyPassword } from './passwords.ts'
+import { createDecoy, hashPassword, verifyPassword } from './passwords.ts'
 
 export type SignedInPerson = { id: string; sessionEpoch: number }
 export type AuthService = ReturnType<typeof createAuthService>
@@ -39,6 +39,7 @@ function setPassword(
 }
 
 export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
+  const decoy = createDecoy()
   const activeByEmail = (email: string) =>
     db
       .select()
@@ -51,7 +52,7 @@ export function createAuthService({ db, clock }: { db: Db; clock: Clock }) {
     const person = activeByEmail(email)
     const right = person?.passwordHash
       ? await verifyPassword(person.passwordHash, password)
-      : await verifyDecoy(password)
+      : await decoy.verify(password)
     if (!person || !right) throw new AppError('unauthenticated', wrongSignIn)
     return { id: person.id, sessionEpoch: person.sessionEpoch }
   }

@@ -21,7 +21,8 @@ export function builtScreens(distDir: string): RequestHandler[] {
     (req, res, next) => {
       if (req.method !== 'GET' || !existsSync(indexFile)) return next()
       res.setHeader('Cache-Control', 'no-cache')
-      res.sendFile(indexFile)
+      // By its folder: a dot in the path above it must not hide it.
+      res.sendFile('index.html', { root: distDir })
     },
   ]
 }
