@@ -36,8 +36,8 @@ export const labourRatesSchema = z.strictObject({
 const within = (low: number, high: number, what: string) =>
   z
     .number({ error: `Give ${what} as a number.` })
-    .min(low, `${what}: ${low} or more.`)
-    .max(high, `${what}: ${high} or less.`)
+    .min(low, `Give ${what}, ${low} or more.`)
+    .max(high, `Give ${what}, ${high} or less.`)
 
 export const firmRoofSettingsSchema = z.strictObject({
   sawMaxTiltDeg: within(0, 60, 'the saw’s tilt in degrees'),

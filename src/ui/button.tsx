@@ -1,4 +1,4 @@
-import type { ButtonHTMLAttributes } from 'react'
+import type { ButtonHTMLAttributes, MouseEvent } from 'react'
 
 type Kind = 'primary' | 'plain' | 'quiet' | 'danger'
 type Size = 'desk' | 'site'
@@ -22,19 +22,26 @@ export function buttonClass(kind: Kind = 'primary', size: Size = 'desk'): string
 
 type Props = ButtonHTMLAttributes<HTMLButtonElement> & { kind?: Kind; size?: Size; busy?: boolean }
 
+/** One that starts a call (`busy` given) takes a double click as one. */
 export function Button({
   kind = 'primary',
   size = 'desk',
-  busy = false,
+  busy,
   className = '',
   disabled,
   children,
+  onClick,
   ...rest
 }: Props) {
+  const press = (event: MouseEvent<HTMLButtonElement>) => {
+    if (busy !== undefined && event.detail > 1) event.preventDefault()
+    else onClick?.(event)
+  }
   return (
     <button
       type="button"
       {...rest}
+      onClick={press}
       disabled={disabled || busy}
       aria-busy={busy || undefined}
       className={`${buttonClass(kind, size)} ${className}`}

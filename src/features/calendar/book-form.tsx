@@ -3,6 +3,7 @@ import type { CalendarCrew, UnbookedJob } from '../../../shared/bookings/calenda
 import type { BookingState } from '../../../shared/bookings/booking-schemas.ts'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { Select, TextInput } from '../../ui/inputs.tsx'
@@ -76,6 +77,7 @@ function useBookForm({ jobs, crews, jobId, day, onDone }: Props) {
 export function BookForm(props: Props) {
   const { jobs, crews } = props
   const { form, set, create, send } = useBookForm(props)
+  const formRef = useFaultFocus(create.error)
   const conflict = conflictOf(create.error)
   const issueAt = issuesOf(create.error)
   const job = jobs.find((one) => one.id === form.jobId)
@@ -93,7 +95,7 @@ export function BookForm(props: Props) {
     send()
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-4">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
       <Field label="Job" error={issueAt('jobId')}>
         <Select value={form.jobId} onChange={(e) => set({ jobId: e.target.value })}>
           {jobs.map((one) => (

@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { type FormEvent, useState } from 'react'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { Note } from '../../ui/states.tsx'
 import { BookingFields, CrewField } from './booking-fields.tsx'
@@ -55,6 +56,7 @@ export function BookingEditor(props: BookingEditProps) {
   const { base, draft, setDraft, send, change, cancel } = edit
   const [asked, setAsked] = useState<BookingChange>({})
   const { data } = useQuery(calendarQueries.unbooked())
+  const formRef = useFaultFocus(change.error)
   if (booking.cancelled) return <RestoreBooking edit={edit} />
   const ask = (input: BookingChange) => {
     setAsked(input)
@@ -84,7 +86,7 @@ export function BookingEditor(props: BookingEditProps) {
       {booking.version === base.version ? null : (
         <ChangedMeanwhile onRestart={() => edit.start(booking)} />
       )}
-      <form onSubmit={submit} noValidate className="space-y-4">
+      <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
         <DaysEditor
           days={draft.days}
           worked={booking.days.filter((d) => d.worked).map((d) => d.day)}

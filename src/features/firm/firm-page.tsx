@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query'
 import { type FormEvent, useState } from 'react'
 import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
 import { failureText, issueAt as issueOf } from '../../lib/failure-text.ts'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
@@ -15,6 +16,7 @@ function FirmForm({ saved }: { saved: FirmSettings }) {
   const [firm, setFirm] = useState(saved)
   const save = useSaveFirm()
   const toast = useToast()
+  const formRef = useFaultFocus(save.error)
   const issueAt = (path: string) => issueOf(save.error, path)
   const submit = (event: FormEvent) => {
     event.preventDefault()
@@ -27,7 +29,7 @@ function FirmForm({ saved }: { saved: FirmSettings }) {
     })
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-4">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
       <FirmSections firm={firm} onChange={setFirm} issueAt={issueAt} />
       <LabourSection
         rates={firm.labourRates}

@@ -125,7 +125,7 @@ function DaysAndReminders({ firm, onChange, issueAt }: Props) {
           />
         </Field>
         <NumberInput
-          label="A change settles for"
+          label="Changes are held for"
           unit="min"
           hint="Then those concerned get one notice."
           value={firm.changeHoldMinutes}

@@ -2,6 +2,7 @@ import { type FormEvent, useState } from 'react'
 import type { Crew } from '../../../shared/people/people-schemas.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { issueAt } from '../../lib/failure-text.ts'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { FormFailure } from '../../ui/form-failure.tsx'
 import { Field } from '../../ui/field.tsx'
@@ -22,13 +23,14 @@ export function CrewForm({ crew, crews, onDone }: Props) {
   const [letter, setLetter] = useState(crew?.letter ?? '')
   const [colour, setColour] = useState(crew?.colour ?? freeColour(crews))
   const save = useSaveCrew()
+  const formRef = useFaultFocus(save.error)
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (!save.isPending)
       save.mutate({ id: crew?.id ?? null, name, letter, colour }, { onSuccess: onDone })
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-4">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
       <Field label="Name" error={issueAt(save.error, 'name')}>
         <TextInput value={name} onChange={(event) => setName(event.target.value)} />
       </Field>

@@ -2,6 +2,7 @@ import { type FormEvent, useState } from 'react'
 import { roleNames, roles, type Role } from '../../../shared/auth/roles.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
 import { issueAt } from '../../lib/failure-text.ts'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { Checkbox, Select, TextInput } from '../../ui/inputs.tsx'
@@ -27,6 +28,7 @@ export function PersonForm({ person, crews, onDone }: Props) {
   const edit = useEditPerson()
   const toast = useToast()
   const mutation = person ? edit : add
+  const formRef = useFaultFocus(mutation.error)
   const set = (name: keyof typeof fields) => (event: { target: { value: string } }) =>
     setFields((now) => ({ ...now, [name]: event.target.value }))
 
@@ -53,7 +55,7 @@ export function PersonForm({ person, crews, onDone }: Props) {
     if (!mutation.isPending) save()
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-4">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
       <Field label="Name" error={issueAt(mutation.error, 'name')}>
         <TextInput value={fields.name} onChange={set('name')} autoComplete="off" />
       </Field>

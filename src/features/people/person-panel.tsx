@@ -3,6 +3,7 @@ import { formatDay } from '../../../shared/calendar/days.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
 import { issueAt } from '../../lib/failure-text.ts'
 import { useSession } from '../../lib/session.ts'
+import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { FormFailure } from '../../ui/form-failure.tsx'
@@ -20,6 +21,7 @@ function CrewMove({ person, crews }: Omit<Props, 'onClose'>) {
   const [crewId, setCrewId] = useState(person.crewId ?? '')
   const [from, setFrom] = useState(firm.today)
   const move = useMoveCrew()
+  const formRef = useFaultFocus(move.error)
   const toast = useToast()
   const nameOf = (id: string | null) => crews.find((crew) => crew.id === id)?.name ?? 'no crew'
   const submit = (event: FormEvent) => {
@@ -34,7 +36,7 @@ function CrewMove({ person, crews }: Omit<Props, 'onClose'>) {
     )
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-3">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-3">
       <p className="text-ink-soft">
         Now in {nameOf(person.crewId)}.
         {person.nextMove
@@ -68,13 +70,14 @@ function LeaveForm({ person }: { person: Person }) {
   const [endsOn, setEndsOn] = useState(firm.today)
   const [reason, setReason] = useState('')
   const add = useAddLeave()
+  const formRef = useFaultFocus(add.error)
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (add.isPending) return
     add.mutate({ id: person.id, startsOn, endsOn, reason }, { onSuccess: () => setReason('') })
   }
   return (
-    <form onSubmit={submit} noValidate className="space-y-3">
+    <form ref={formRef} onSubmit={submit} noValidate className="space-y-3">
       <div className="grid gap-3 sm:grid-cols-2">
         <Field label="First day away" error={issueAt(add.error, 'startsOn')}>
           <TextInput
