@@ -44,12 +44,12 @@ export type Bevel = {
   squareEdgeDeg: number
   slopedEdgeDeg: number
   tiltDeg: number
-  /** Which half of the top the cut leans towards: its own side. */
-  leans: 'left' | 'right' | 'none'
+  /** The arris on which the timber reaches further off; beside a backed top not always the side that the plane leans from. */
+  longSide: 'left' | 'right' | 'none'
 }
 
-/** Cuts nearer than this to square across (sine of the lean) are square. */
-const squareLean = 1e-9
+/** Cuts whose arrises end within this are square: no long side. */
+const squareMm = 1e-6
 
 export const bothWays = (fromEdgeDeg: number): Angle => ({
   fromEdgeDeg,
@@ -87,11 +87,10 @@ const slopedTop = (
  * Angle of a plane's line across a top facet, from the arris into the timber, at the long point; over
  * 90 where a planed top turns a nearly square cut past square.
  */
-const edgeDeg = (plane: Plane, timber: Timber, top: Point3): number => {
+const edgeDeg = (plane: Plane, timber: Timber, top: Point3, longSide: 'left' | 'right'): number => {
   const across = unit3(cross3(plane.normal, top))
-  // from the long point to the short one, which lies on the side that the cut leans towards
-  const toShort = dot3(across, timber.left) * dot3(plane.normal, timber.left)
-  const line = toShort < 0 ? scale3(across, -1) : across
+  const isToShort = dot3(across, timber.left) < 0 === (longSide === 'left')
+  const line = isToShort ? across : scale3(across, -1)
   const offTimber = dot3(plane.normal, timber.direction) < 0 ? -1 : 1
   return angleBetweenDeg(line, scale3(timber.direction, -offTimber))
 }
@@ -121,20 +120,23 @@ export const bevelOf = (
 ): Bevel => {
   const crossing = crossingOf(plane, timber)
   const { halfMm, arrisFall } = timber
-  const lean = dot3(plane.normal, timber.left)
-  const leans = Math.abs(lean) < squareLean ? 'none' : lean > 0 ? 'left' : 'right'
+  const leftMm = crossingAt(crossing, halfMm, arrisFall.left)
+  const rightMm = crossingAt(crossing, -halfMm, arrisFall.right)
+  const offTimber = dot3(plane.normal, timber.direction) < 0 ? -1 : 1
+  const spread = offTimber * (leftMm - rightMm)
+  const longSide = Math.abs(spread) < squareMm ? 'none' : spread > 0 ? 'left' : 'right'
   const down = cross3(plane.normal, timber.left)
   const downward = unit3(dot3(down, timber.up) > 0 ? scale3(down, -1) : down)
-  const top = slopedTop(timber, leans === 'right' ? 'right' : 'left', falls)
+  const across = (top: Point3) => (longSide === 'none' ? 90 : edgeDeg(plane, timber, top, longSide))
   return {
     crossing,
     alongMm: crossing.baseMm,
-    leftMm: crossingAt(crossing, halfMm, arrisFall.left),
-    rightMm: crossingAt(crossing, -halfMm, arrisFall.right),
+    leftMm,
+    rightMm,
+    longSide,
     faceFromEdgeDeg: angleBetweenDeg(scale3(timber.direction, -1), downward),
-    squareEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, timber.up),
-    slopedEdgeDeg: leans === 'none' ? 90 : edgeDeg(plane, timber, top),
-    tiltDeg: degrees(Math.asin(Math.min(1, Math.abs(lean)))),
-    leans,
+    squareEdgeDeg: across(timber.up),
+    slopedEdgeDeg: across(slopedTop(timber, longSide === 'left' ? 'right' : 'left', falls)),
+    tiltDeg: degrees(Math.asin(Math.min(1, Math.abs(dot3(plane.normal, timber.left))))),
   }
 }

@@ -161,13 +161,29 @@ const hipGapMm = (ground: Ground, slope: Slope, run: Point2, corner: Point2): nu
   )
 }
 
+/** Plan length on which a rafter hung from a hip has its full section, mm; under 0 where it is all feather. */
+const fullLengthMm = (ground: Ground, slope: Slope, face: Face, alongMm: number): number => {
+  const { rafter, hip } = ground.roof.sections
+  const half = rafter.thicknessMm / 2
+  const spans = [-half, half].map((mm) => squareLineSpan(ground.lines, slope, face, alongMm + mm))
+  const [from, to] = spans.map((span) => span?.low ?? Infinity)
+  if (from === undefined || to === undefined) return -Infinity
+  // how fast the hip runs off beside the rafter, and so how far its side stands up along it
+  const perAside = Math.abs(to - from) / rafter.thicknessMm
+  const hipMm = (hip.thicknessMm / 2) * Math.hypot(1, perAside)
+  const highs = spans.map((span) => span?.high ?? -Infinity)
+  return Math.min(...highs) - Math.max(from, to) - hipMm
+}
+
 /** Whether a rafter `alongMm` along a slope's plate stands clear of the hips at both corners and is worth cutting. */
 const clearOfCorners = (ground: Ground, slope: Slope, face: Face, alongMm: number): boolean => {
   const { lines, settings } = ground
   const span = squareLineSpan(lines, slope, face, alongMm)
   if (span === null) return false
   if ((span.high - span.low) * Math.hypot(1, slope.tan) < settings.minCreeperMm) return false
-  if (alongMm < 0 || alongMm > slope.lengthMm) return span.lowBorder.kind === 'slope'
+  if (alongMm < 0 || alongMm > slope.lengthMm) {
+    return span.lowBorder.kind === 'slope' && fullLengthMm(ground, slope, face, alongMm) > 0
+  }
   return lines.lines.every((line) => {
     if (line.kind !== 'hip' || !line.slopes.includes(slope.index)) return true
     const corner = at(lines.nodes, line.from).point

@@ -33,6 +33,8 @@ export const sharedRange = (a: Segment, b: Segment): [number, number] | null => 
   const across = left2(dir)
   const s = dot2(dir, sub2(b.from, a.from))
   const t = dot2(dir, sub2(b.to, a.from))
+  // going round both pieces one way, faces that look at each other run against each other
+  if (t >= s) return null
   let low = Math.max(0, Math.min(s, t))
   let high = Math.min(size, Math.max(s, t))
   if (high - low < leastBearingMm) return null

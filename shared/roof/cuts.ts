@@ -16,7 +16,7 @@ export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
   crossing: Crossing
 }
 
-/** Cuts across within this are square: no long side. */
+/** A tail plane that lies this much further out at both arrises takes no timber. */
 const squareMm = 1e-6
 
 /** A piece as a timber in space, at its height over plate. */
@@ -58,9 +58,7 @@ const draftCut = (
   listed: number | null,
 ): DraftCut => {
   const bevel = bevelOf(plane, timber, squareFalls(piece))
-  const sign = end === 'head' ? 1 : -1
-  const spread = sign * (bevel.leftMm - bevel.rightMm)
-  const longSide = Math.abs(spread) < squareMm ? 'none' : spread > 0 ? 'left' : 'right'
+  const { longSide } = bevel
   const leftIsLong = longSide !== 'right'
   const shown = piece.backed ? bevel.slopedEdgeDeg : bevel.squareEdgeDeg
   const other = piece.backed ? bevel.squareEdgeDeg : bevel.slopedEdgeDeg
@@ -74,8 +72,8 @@ const draftCut = (
     longPointFromHeelMm: leftIsLong ? bevel.leftMm : bevel.rightMm,
     shortPointFromHeelMm: leftIsLong ? bevel.rightMm : bevel.leftMm,
     face: bothWays(bevel.faceFromEdgeDeg),
-    edge: bothWays(longSide === 'none' ? 90 : shown),
-    edgeOtherTop: isHipLike(piece.role) ? bothWays(longSide === 'none' ? 90 : other) : null,
+    edge: bothWays(shown),
+    edgeOtherTop: isHipLike(piece.role) ? bothWays(other) : null,
     bladeTiltDeg: bevel.tiltDeg,
     pastSaw: bevel.tiltDeg > ground.settings.sawMaxTiltDeg + 1e-9,
   }

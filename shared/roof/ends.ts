@@ -36,10 +36,14 @@ const meetingMm = (
   return share > 0 && share < 1 ? share * outer : null
 }
 
+const isRidged = ({ arrisFall }: Timber): boolean => arrisFall.left > 0 || arrisFall.right > 0
+
 /** Offsets off the centre line at which an end can have a corner. */
 const offsets = (timber: Timber, cuts: DraftCut[], level: Level): number[] => {
-  const isRidged = level === 'top' && (timber.arrisFall.left > 0 || timber.arrisFall.right > 0)
-  const found = isRidged ? [timber.halfMm, 0, -timber.halfMm] : [timber.halfMm, -timber.halfMm]
+  const found =
+    level === 'top' && isRidged(timber)
+      ? [timber.halfMm, 0, -timber.halfMm]
+      : [timber.halfMm, -timber.halfMm]
   for (let i = 0; i < cuts.length; i++) {
     for (let j = i + 1; j < cuts.length; j++) {
       const [a, b] = [cuts[i], cuts[j]]
@@ -69,10 +73,19 @@ const endAlongMm = (
   return alongMm
 }
 
+/** Whether an end has a corner there: at an arris, on the ridge of a backed top, or where two of the cuts that govern meet. */
+const isCorner = (timber: Timber, cuts: DraftCut[], leftMm: number, alongMm: number): boolean => {
+  if (Math.abs(leftMm) === timber.halfMm || (leftMm === 0 && isRidged(timber))) return true
+  const near = (cut: DraftCut) =>
+    Math.abs(crossingMm(timber, cut, leftMm, 'top') - alongMm) < centralGapMm
+  return cuts.filter(near).length > 1
+}
+
 /** The corners of one end of a timber's top, cut by all cuts of that end. */
 export const endCorners = (timber: Timber, cuts: DraftCut[], upper: boolean): EndCorner[] =>
-  offsets(timber, cuts, 'top').map((leftMm) => {
+  offsets(timber, cuts, 'top').flatMap((leftMm) => {
     const alongMm = endAlongMm(timber, cuts, upper, leftMm, 'top')
+    if (!isCorner(timber, cuts, leftMm, alongMm)) return []
     return { leftMm, alongMm, point: timberPoint(timber, alongMm, leftMm, topFall(timber, leftMm)) }
   })
 
