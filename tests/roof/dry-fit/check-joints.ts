@@ -5,6 +5,8 @@ import { cross, dot, length, sub, unit, type Vec } from './vec.ts'
 
 /** A butt joint closes when the other piece is there within this over the bearing face. */
 export const CLOSE_MM = 0.2
+/** Just inside the cut: deeper, the face of a second cheek in nearly the same plane would show too. */
+const FACE_MM = 0.001
 /** How deep behind the cut a piece is still taken to be what the cut was meant to meet. */
 const REACH_MM = 6
 /** Below this share of a bearing face, what is open is an edge of a sloping top, not a gap. */
@@ -55,7 +57,8 @@ function openingMm(face: Flat, bearings: readonly Bearing[]): number {
     const parts = bearings.map((b) => shared(face, b.solid, h))
     return parts.reduce((sum, part) => sum + part.area(), 0)
   }
-  const full = covered(REACH_MM)
+  // the tip of a piece can fill the face and yet be thinner than the reach
+  const full = Math.max(covered(REACH_MM), covered(CLOSE_MM))
   if (full < SPECK_MM2) return REACH_MM
   for (let h = 0.05; h < REACH_MM; h *= 1.25) {
     if (covered(h) >= CLOSED_SHARE * Math.min(full, covered(h + 1))) return h
@@ -68,7 +71,7 @@ function checkCut(complain: Complain, piece: Piece, sawn: SawnPlane, others: Pie
   const { mark } = piece.member
   const normal = directionToBuilding(piece.pose, sawn.normal)
   const point = toBuilding(piece.pose, sawn.point)
-  const face = layLevel(piece.solid, normal, point).slice(-0.01)
+  const face = layLevel(piece.solid, normal, point).slice(-FACE_MM)
   const say = (text: string, out: number, other?: string): void =>
     complain({ check: 'joint', marks: other === undefined ? [mark] : [mark, other], out, text })
   if (face.area() < SPECK_MM2) return say(`its ${cut.end} cut misses the timber, mm²`, face.area())
