@@ -144,7 +144,12 @@ export function taskDetailFor(db: DbOrTx, viewer: Viewer, taskId: string): TaskD
   const hasLine = revision?.spec.cutLines.some((line) => line.mark === mark) ?? false
   const card =
     revision && mark !== null && hasLine
-      ? markingCardOf(revision.spec, mark, markingOptions(viewer.firm, revision.settings))
+      ? markingCardOf(
+          revision.spec,
+          mark,
+          markingOptions(viewer.firm, revision.settings),
+          row.task.memberMarks,
+        )
       : null
   const member = revision?.spec.members.find((one) => one.mark === card?.drawnMark) ?? null
   return {

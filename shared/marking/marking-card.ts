@@ -60,12 +60,14 @@ export type MarkingCard = {
 
 /**
  * The card of one cut line. Lengths mm, angles degrees, exact; texts rounded as the options say.
+ * `share` narrows what is said of single pieces to those of one task.
  * @throws RangeError when the spec has no such cut line.
  */
 export function markingCardOf(
   spec: FrameSpec,
   cutLineMark: string,
   options: MarkingOptions,
+  share?: readonly string[],
 ): MarkingCard {
   const line = spec.cutLines.find((one) => one.mark === cutLineMark)
   const alike = line ? membersOf(spec, line) : []
@@ -98,7 +100,7 @@ export function markingCardOf(
       member.dropMm > 0
         ? figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
         : null,
-    planing: planingWords(spec, line, options),
+    planing: planingWords(spec, { members: share ?? line.members }, options),
     roundDeg: options.roundDeg,
     warnings: spec.cautions
       .filter((caution) => caution.members.some((mark) => line.members.includes(mark)))

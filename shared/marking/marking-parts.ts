@@ -1,5 +1,5 @@
 import { groupBy } from '../collections/group-by.ts'
-import type { CutLine, FrameSpec, Member } from '../roof/roof-types.ts'
+import type { FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   bevelOf,
   figureOf,
@@ -60,8 +60,12 @@ export function backingOf(member: Member, options: MarkingOptions): MarkingBevel
 }
 
 /** Pieces, sides and ends planed alike share a sentence. */
-export function planingWords(spec: FrameSpec, line: CutLine, options: MarkingOptions): string[] {
-  const ofLine = spec.planing.filter((one) => line.members.includes(one.mark))
+export function planingWords(
+  spec: FrameSpec,
+  { members }: { members: readonly string[] },
+  options: MarkingOptions,
+): string[] {
+  const ofLine = spec.planing.filter((one) => members.includes(one.mark))
   const corners = [...groupBy(ofLine, (one) => `${one.mark}|${one.end}`).values()].flatMap(
     (planings) => cornersOfEnd(planings, options),
   )

@@ -24,7 +24,7 @@ export function BevelDial({ dial, roundDeg }: Props) {
           </span>
           {dial.title}
         </p>
-        <p className="text-sm text-ink-soft">
+        <p className="text-sm">
           {whereWords[dial.where]}: {dial.uses.join(' · ')}
         </p>
         <p className="leading-tight">
@@ -50,7 +50,7 @@ function DialNotes({ dial, roundDeg }: Props) {
   return (
     <>
       {[...tilt, ...other].map((note) => (
-        <p key={note} className="text-sm text-ink-soft">
+        <p key={note} className="text-sm">
           {note}
         </p>
       ))}

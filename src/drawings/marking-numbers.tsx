@@ -31,9 +31,7 @@ export function FigureView({
           {figure.text}
         </span>
         {figure.unit ? <span className="text-base print:text-xs"> {figure.unit}</span> : null}
-        {figure.note ? (
-          <span className="block text-sm print:text-xs text-ink-soft">{figure.note}</span>
-        ) : null}
+        {figure.note ? <span className="block text-sm print:text-xs">{figure.note}</span> : null}
       </dd>
     </div>
   )
@@ -90,7 +88,7 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
               <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
             ) : null}
             {first.edgeOtherTop ? (
-              <div className="text-base print:text-xs text-ink-soft">
+              <div className="text-base print:text-xs">
                 <dt className="inline">{first.edgeOtherTop.label}: </dt>
                 <dd className="inline">
                   {first.edgeOtherTop.fromSquareText} {squareWord(first.edgeOtherTop)},{' '}
@@ -122,9 +120,11 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
 export function CutLengthLine({ card }: { card: MarkingCard }) {
   const { cutLength } = card
   return (
-    <p className="flex items-baseline gap-2 text-base print:text-xs">
-      {cutLength.label}
-      <span>
+    <p className="flex-1 text-base leading-tight print:text-xs">
+      <span className="block text-sm font-semibold print:inline print:text-xs">
+        {cutLength.label}{' '}
+      </span>
+      <span className="whitespace-nowrap">
         <span className="numeral text-[1.75rem] print:text-lg">{cutLength.text}</span>{' '}
         {cutLength.unit}
       </span>

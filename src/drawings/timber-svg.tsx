@@ -66,7 +66,7 @@ export function TimberSvg({ drawing, label }: Props) {
         <Letter key={letter} letter={letter} x={at.x} y={at.y} />
       ))}
       {drawing.texts.map(({ text, x, baselineY }) => (
-        <text key={text} x={x} y={baselineY} className="fill-ink-soft">
+        <text key={text} x={x} y={baselineY} className="fill-ink">
           {text}
         </text>
       ))}

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { asc, eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
 import { tasks } from '../../server/db/tables/booking-tables.ts'
 import { plateChecks, roofRevisions } from '../../server/db/tables/job-tables.ts'
@@ -164,4 +164,29 @@ test('a caution that touches several lines is said once', async () => {
   yard.db.update(roofRevisions).set({ spec }).where(eq(roofRevisions.id, yard.revision.id)).run()
   const mail = await sentReminder(yard, yard.lead.email)
   expect(mail.text.split('Past the saw. Finish by hand.')).toHaveLength(2)
+})
+
+test('the link comes first, then the whole day in the order it is worked, then the numbers', async () => {
+  const yard = await createMailYard()
+  yard.book(['2026-12-03'])
+  const mail = await sentReminder(yard, yard.lead.email)
+  const titles = yard.db
+    .select({ mark: tasks.cutLineMark, work: tasks.work, title: tasks.title })
+    .from(tasks)
+    .orderBy(asc(tasks.position))
+    .all()
+  const order = mail.text.slice(mail.text.indexOf('Order of work'), mail.text.indexOf('To cut'))
+  let from = 0
+  const told = new Set<string>()
+  for (const { mark, work, title } of titles) {
+    // A line cut in two goes is told once, with all its pieces.
+    const key = `${work} ${mark ?? title}`
+    if (told.has(key)) continue
+    told.add(key)
+    const words = mark === null ? title : ` ${mark}, x`
+    const at = order.indexOf(words, from)
+    expect(at, key).toBeGreaterThanOrEqual(from)
+    from = at
+  }
+  expect(mail.text.indexOf('/today?day=')).toBeLessThan(mail.text.indexOf('Order of work'))
 })

@@ -33,7 +33,7 @@ function lineTitle(line: ToldLine, card: MarkingCard, roof: Roof): string {
 }
 
 function cardFor(line: ToldLine, roof: Roof): MarkingCard {
-  return markingCardOf(roof.spec, line.mark ?? '', roof.options)
+  return markingCardOf(roof.spec, line.mark ?? '', roof.options, line.members)
 }
 
 function lineCard(line: ToldLine, roof: Roof): MailBlock {
@@ -48,18 +48,31 @@ function lineCard(line: ToldLine, roof: Roof): MailBlock {
 
 /** What was cut the same day has its numbers above; what was cut before gets them again. */
 function standBlocks(toStand: ToldLine[], toCut: ToldLine[], roof: Roof): MailBlock[] {
-  if (toStand.length === 0) return []
   const cutToday = new Set(toCut.map((line) => line.mark))
-  const above = toStand.filter((line) => cutToday.has(line.mark))
-  const others = toStand.filter((line) => !cutToday.has(line.mark))
-  const list: MailBlock[] = [
-    { kind: 'paragraph', text: 'Cut the same day, numbers above:' },
-    { kind: 'list', items: above.map((line) => lineTitle(line, cardFor(line, roof), roof)) },
-  ]
+  const cutBefore = toStand.filter((line) => !cutToday.has(line.mark))
+  if (cutBefore.length === 0) return []
   return [
-    { kind: 'subheading', text: 'To stand' },
-    ...(above.length > 0 ? list : []),
-    ...others.map((line) => lineCard(line, roof)),
+    { kind: 'subheading', text: 'To stand, cut before' },
+    ...cutBefore.map((line) => lineCard(line, roof)),
+  ]
+}
+
+/** 'Cut creeper CR1, x8: 4 left, 4 right'; set-out work has its own words. */
+function orderWords(line: ToldLine, roof: DayMailBooking['roof']): string {
+  if (line.mark === null) return line.title
+  const work = orderOfWork[line.work]
+  if (!roof || !isInRoof(line, roof)) return `${work} ${line.mark}`
+  const name = cardFor(line, roof).name.toLowerCase()
+  return `${work} ${name} ${line.mark}, ${shareWords(roof.spec.members, line.members)}`
+}
+
+/** The whole day in the order it is worked, a line each; the numbers follow. */
+function orderBlocks({ lines, roof }: DayMailBooking): MailBlock[] {
+  if (lines.length === 0) return []
+  const item = (line: ToldLine, i: number) => `${i + 1}. ${orderWords(line, roof)}`
+  return [
+    { kind: 'subheading', text: 'Order of work' },
+    { kind: 'paragraph', text: lines.map(item).join('\n') },
   ]
 }
 
@@ -91,16 +104,9 @@ function cautionBlocks({ cautions }: DayMailBooking): MailBlock[] {
 
 function workBlocks(booking: DayMailBooking): MailBlock[] {
   const { roof } = booking
-  const other = booking.lines.filter((line) => line.mark === null)
   const blocks: MailBlock[] = []
-  if (other.length > 0) {
-    blocks.push(
-      { kind: 'subheading', text: 'Set out, try and brace' },
-      { kind: 'list', items: other.map((line) => line.title) },
-    )
-  }
   if (!roof) {
-    blocks.push({
+    blocks.push(...orderBlocks(booking), {
       kind: 'caution',
       text: 'No roof is issued for this job yet, so there are no lengths. Ask the office.',
     })
@@ -108,7 +114,7 @@ function workBlocks(booking: DayMailBooking): MailBlock[] {
   }
   const toCut = markedLines(booking, roof, 'cut')
   const toStand = markedLines(booking, roof, 'stand')
-  blocks.push(...platesBlocks(roof))
+  blocks.push(...platesBlocks(roof), ...orderBlocks(booking))
   if (toCut.length > 0) {
     blocks.push(
       { kind: 'subheading', text: 'To cut' },
@@ -151,13 +157,13 @@ function bookingBlocks(booking: DayMailBooking): MailBlock[] {
   ]
 }
 
-/** The whole day: each booking with its facts and numbers, the safety words, the link. */
+/** The whole day: the link, each booking with its facts, order and numbers, the safety words. */
 export function dayBlocks(mail: DayMail): MailBlock[] {
   if (mail.bookings.length === 0) return []
   return [
+    { kind: 'link', label: `Open ${mail.dayWords}`, url: mail.url },
     ...mail.bookings.flatMap(bookingBlocks),
     { kind: 'caution', text: workAtHeight },
-    { kind: 'link', label: `Open ${mail.dayWords}`, url: mail.url },
   ]
 }
 

@@ -62,7 +62,11 @@ function factRow([label, value]: [string, string]): string {
 }
 
 function cardHtml(title: string, lines: string[]): string {
-  const rows = lines.map((line) => `<div style="margin-top:4px">${escapeHtml(line)}</div>`).join('')
+  // The first line is the length to saw: it is read first and from furthest off.
+  const size = (i: number) => (i === 0 ? ';font-size:18px;font-weight:600' : '')
+  const rows = lines
+    .map((line, i) => `<div style="margin-top:4px${size(i)}">${escapeHtml(line)}</div>`)
+    .join('')
   return `<div style="margin:0 0 12px;padding:10px 12px;border:1px solid ${rule};border-left:6px solid ${clay};border-radius:6px"><div style="font-size:18px;font-weight:800">${escapeHtml(title)}</div>${rows}</div>`
 }
 

@@ -132,7 +132,12 @@ export function MyTasksPage() {
     <div className="site-screen">
       <PageHeader
         title="My tasks"
-        lead={mine.day === mine.today ? `Today, ${formatDay(mine.day)}` : formatDay(mine.day)}
+        lead={
+          <span className="text-ink">
+            {mine.day === mine.today ? 'Today, ' : ''}
+            {formatDay(mine.day)}
+          </span>
+        }
         actions={<SunlightSwitch />}
       />
       <DayKeys mine={mine} />

@@ -104,10 +104,10 @@ function TaskBody({ detail }: { detail: TaskDetail }) {
       <PageHeader
         title={task.title}
         lead={
-          <>
+          <span className="text-ink">
             {place.jobNumber} {place.jobTitle}, {formatDay(task.day)}
             {place.revisionLetter ? `, revision ${place.revisionLetter}` : ''}
-          </>
+          </span>
         }
         actions={
           <>

@@ -9,7 +9,7 @@ import { hoursWords } from './day-words.ts'
 function Fact({ name, children }: { name: string; children: ReactNode }) {
   return (
     <div className="grid grid-cols-[4.75rem_minmax(0,1fr)] gap-2 py-0.5">
-      <dt className="text-base text-ink-soft">{name}</dt>
+      <dt className="text-base">{name}</dt>
       <dd className="min-w-0 text-base [overflow-wrap:anywhere]">{children}</dd>
     </div>
   )
@@ -55,7 +55,7 @@ function Roster({ roster }: { roster: DaySheet['roster'] }) {
   return (
     <ul className="flex list-none flex-wrap gap-x-4 gap-y-1 p-0">
       {roster.map((person) => (
-        <li key={person.id} className={person.onLeave ? 'text-ink-soft' : 'font-semibold'}>
+        <li key={person.id} className={person.onLeave ? 'line-through' : 'font-semibold'}>
           {person.name}
           {person.onLeave ? <Badge kind="ochre">on leave</Badge> : null}
         </li>

@@ -53,7 +53,7 @@ export function AnyDay({ sheets, onDay }: Props) {
       aria-label="Any day"
       value={sheets.day}
       onChange={(event) => (event.target.value ? onDay(event.target.value) : undefined)}
-      className="min-h-14 min-w-0 flex-1 rounded-md border border-ink-soft bg-sheet px-3 text-ink"
+      className="min-h-14 w-44 flex-1 rounded-md border border-ink-soft bg-sheet px-3 text-ink"
     />
   )
 }

@@ -25,7 +25,7 @@ function SheetPlan({ sheet, roof }: { sheet: DaySheet; roof: DayRoof }) {
       id={planPlaceId(sheet)}
       tabIndex={-1}
       aria-label="Roof plan"
-      className="scroll-mt-2 p-2 sm:p-4 print:mx-auto print:w-[120mm] print:break-inside-avoid"
+      className="scroll-mt-2 self-start p-2 sm:p-4 lg:sticky lg:top-4 print:static print:mx-auto print:w-[120mm] print:break-inside-avoid"
     >
       <RoofPlan
         roof={roof.roof}

@@ -1,18 +1,19 @@
 import { Check, ChevronDown, Hand } from 'lucide-react'
-import { Link } from 'react-router-dom'
 import { isDone } from '../../../shared/day-sheets/day-pieces.ts'
 import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
-import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
+import {
+  type MarkingCard,
+  markingCardLines,
+  markingCardOf,
+} from '../../../shared/marking/marking-card.ts'
 import { shareWords } from '../../../shared/marking/role-words.ts'
 import { PlaningNote } from '../../drawings/marking-card-view.tsx'
 import { CutLengthLine, CutNumbers, MarkingNumbers } from '../../drawings/marking-numbers.tsx'
 import { useMay } from '../../lib/session.ts'
 import { useTicks } from '../../lib/use-ticks.ts'
 import { Badge } from '../../ui/badge.tsx'
-import { buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
-import { Fold } from '../../ui/fold.tsx'
 import { taskPlaceId } from './jump-keys.tsx'
 import { TaskControls } from './task-controls.tsx'
 
@@ -20,7 +21,7 @@ type Props = {
   task: DayTask
   roof: DayRoof | null
   roster: DaySheet['roster']
-  /** Where it stands in the day's order; null for what is left over. */
+  /** Where it stands in the day's order while that is being changed; else null. */
   place: { index: number; count: number } | null
   /** The numbers of this line stand further up on the page. */
   numbersAbove: boolean
@@ -38,7 +39,7 @@ function cardOf(task: DayTask, roof: DayRoof | null): MarkingCard | null {
   const mark = task.cutLineMark
   if (!roof || mark === null) return null
   const hasLine = roof.spec.cutLines.some((line) => line.mark === mark)
-  return hasLine ? markingCardOf(roof.spec, mark, roof.marking) : null
+  return hasLine ? markingCardOf(roof.spec, mark, roof.marking, task.memberMarks) : null
 }
 
 function TaskTitle({ task, card }: { task: DayTask; card: MarkingCard | null }) {
@@ -133,8 +134,8 @@ function OpenTask({ showsTitle = true, ...props }: CardProps & { showsTitle?: bo
       <div className="mt-3 space-y-3 print:mt-1 print:space-y-0">
         {mayOrder ? (
           <>
-            <TaskTicks task={task} hasCard={card !== null} askFirst={props.askFirst} />
-            <TaskControls task={task} roster={roster} place={place} />
+            <TaskTicks task={task} askFirst={props.askFirst} />
+            <TaskControls task={task} roster={roster} place={place} hasCard={card !== null} />
           </>
         ) : (
           <TaskState task={task} />
@@ -149,31 +150,50 @@ function TaskNumbers({ task, card, numbersAbove }: NumbersProps) {
   const isFull = task.work === 'cut' && !numbersAbove && !isDone(task)
   return (
     <div className="mt-2 space-y-2 print:mt-1 print:space-y-1">
-      {isFull ? <CutNumbers card={card} /> : <CutLengthLine card={card} />}
-      {numbersAbove ? null : <PlaningNote card={card} />}
-      <Fold title="All numbers">
-        <p className="text-base">{task.memberMarks.join(', ')}</p>
-        <p className="text-base">{card.handWords}</p>
-        {numbersAbove ? <PlaningNote card={card} /> : null}
-        <MarkingNumbers card={card} />
-      </Fold>
       {isFull ? (
-        <div className="hidden print:block">
-          <p>{card.handWords}</p>
-          <MarkingNumbers card={card} />
+        <div className="space-y-2 print:hidden">
+          <CutNumbers card={card} />
+          <PlaningNote card={card} />
         </div>
       ) : null}
+      {isFull ? <PaperLines card={card} /> : null}
+      <details className="group">
+        <summary
+          className={`flex min-h-14 list-none items-center gap-2 [&::-webkit-details-marker]:hidden ${isFull ? 'print:hidden' : 'print:min-h-0'}`}
+        >
+          {isFull ? null : <CutLengthLine card={card} />}
+          <span className="flex items-center gap-1 whitespace-nowrap font-semibold text-chalk print:hidden">
+            All numbers
+            <ChevronDown size={22} aria-hidden className="shrink-0 group-open:rotate-180" />
+          </span>
+        </summary>
+        <p className="text-base">{task.memberMarks.join(', ')}</p>
+        <p className="text-base">{card.handWords}</p>
+        {isFull ? null : <PlaningNote card={card} />}
+        <MarkingNumbers card={card} />
+      </details>
     </div>
   )
 }
 
-type TicksProps = Pick<Props, 'task' | 'askFirst'> & { hasCard: boolean }
+/** On paper a card is its lines, so that a day is not a ream. */
+function PaperLines({ card }: { card: MarkingCard }) {
+  const [first, ...lines] = markingCardLines(card).slice(1)
+  return (
+    <div className="hidden print:block">
+      <p className="text-sm font-extrabold">{first}</p>
+      {lines.map((line) => (
+        <p key={line}>{line}</p>
+      ))}
+    </div>
+  )
+}
 
-function TaskTicks({ task, hasCard, askFirst }: TicksProps) {
+function TaskTicks({ task, askFirst }: Pick<Props, 'task' | 'askFirst'>) {
   const { count, unsent, step } = useTicks(task)
   return (
     <>
-      <div className="flex flex-wrap items-center justify-between gap-2 print:hidden">
+      <div className="print:hidden">
         <CountStepper
           label={task.title}
           count={count}
@@ -181,11 +201,6 @@ function TaskTicks({ task, hasCard, askFirst }: TicksProps) {
           unsent={unsent}
           onStep={(delta) => askFirst(() => step(delta))}
         />
-        {hasCard ? (
-          <Link to={`/my-tasks/${task.id}`} className={`${buttonClass('plain', 'site')} px-3`}>
-            Card<span className="sr-only"> with drawing, {task.title}</span>
-          </Link>
-        ) : null}
       </div>
       <p className="hidden print:block">
         {count} of {task.quantity} done. {task.assignedTo?.name ?? ''}

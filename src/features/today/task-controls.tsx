@@ -1,14 +1,17 @@
 import { ArrowDown, ArrowUp, Hand } from 'lucide-react'
+import { Link } from 'react-router-dom'
 import type { DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
-import { Button } from '../../ui/button.tsx'
+import { Button, buttonClass } from '../../ui/button.tsx'
 import { Select } from '../../ui/inputs.tsx'
 import { useTaskChange } from './use-task-change.ts'
 
 type Props = {
   task: DayTask
   roster: DaySheet['roster']
+  /** Where it stands, while the order is being changed. */
   place: { index: number; count: number } | null
+  hasCard: boolean
 }
 
 type AssignProps = Pick<Props, 'task' | 'roster'> & {
@@ -27,7 +30,7 @@ function AssignSelect({ task, roster, change }: AssignProps) {
       disabled={change.isPending}
       onChange={(event) => change.mutate({ assignedToId: event.target.value || null })}
     >
-      <option value="">Who? Nobody yet</option>
+      <option value="">Nobody yet</option>
       {there.map((person) => (
         <option key={person.id} value={person.id}>
           {person.name}
@@ -39,7 +42,7 @@ function AssignSelect({ task, roster, change }: AssignProps) {
 }
 
 /** Hand out, try the first piece, answer a raised hand; the order is put away. */
-export function TaskControls({ task, roster, place }: Props) {
+export function TaskControls({ task, roster, place, hasCard }: Props) {
   const { change, hand } = useTaskChange(task)
   return (
     <div className="space-y-3 print:hidden">
@@ -56,9 +59,14 @@ export function TaskControls({ task, roster, place }: Props) {
         </Button>
       ) : null}
       {task.work === 'cut' ? <FirstPiece task={task} change={change} /> : null}
+      {place ? <OrderKeys task={task} place={place} change={change} /> : null}
       <div className="flex items-center gap-2">
         <AssignSelect task={task} roster={roster} change={change} />
-        {place ? <OrderKeys task={task} place={place} change={change} /> : null}
+        {hasCard ? (
+          <Link to={`/my-tasks/${task.id}`} className={`${buttonClass('plain', 'site')} shrink-0`}>
+            Card<span className="sr-only"> with drawing, {task.title}</span>
+          </Link>
+        ) : null}
       </div>
     </div>
   )
@@ -88,29 +96,31 @@ type OrderProps = Pick<AssignProps, 'task' | 'change'> & { place: { index: numbe
 
 function OrderKeys({ task, place, change }: OrderProps) {
   return (
-    <>
+    <div className="flex gap-2">
       <Button
         kind="plain"
         size="site"
-        className="min-w-14 px-0"
-        aria-label={`${task.title}: earlier in the day`}
+        className="flex-1"
+        aria-label={`Earlier in the day: ${task.title}`}
         disabled={place.index === 0}
         busy={change.isPending}
         onClick={() => change.mutate({ position: place.index - 1 })}
       >
         <ArrowUp size={22} aria-hidden />
+        Earlier
       </Button>
       <Button
         kind="plain"
         size="site"
-        className="min-w-14 px-0"
-        aria-label={`${task.title}: later in the day`}
+        className="flex-1"
+        aria-label={`Later in the day: ${task.title}`}
         disabled={place.index === place.count - 1}
         busy={change.isPending}
         onClick={() => change.mutate({ position: place.index + 1 })}
       >
         <ArrowDown size={22} aria-hidden />
+        Later
       </Button>
-    </>
+    </div>
   )
 }

@@ -89,7 +89,7 @@ function TodayBody({
         title={dayTitle(sheets.day, sheets.today)}
         lead={
           sheets.crew ? (
-            <span className="inline-flex items-center gap-2">
+            <span className="inline-flex items-center gap-2 text-ink">
               <CrewPennant
                 letter={sheets.crew.letter}
                 colour={sheets.crew.colour}
@@ -103,15 +103,13 @@ function TodayBody({
           <>
             <SunlightSwitch />
             <AnyDay sheets={sheets} onDay={(day) => set('day', day)} />
-            <Button
-              kind="plain"
-              size="site"
-              className="hidden sm:inline-flex"
-              onClick={() => window.print()}
-            >
-              <Printer size={22} aria-hidden />
-              Print
-            </Button>
+            {/* Paper is printed at the desk. */}
+            <div className="hidden sm:block">
+              <Button kind="plain" size="site" onClick={() => window.print()}>
+                <Printer size={22} aria-hidden />
+                Print
+              </Button>
+            </div>
           </>
         }
       />
