@@ -1,5 +1,5 @@
 import type { Point2 } from '../roof/roof-types.ts'
-import type { RoofForm, SideForm, SideKey } from './roof-form.ts'
+import type { CornerForm, RoofForm, SideForm, SideKey } from './roof-form.ts'
 import { lengthMmOfText } from './typed-measure.ts'
 
 /** One plate of the roof as typed: where it starts, and the form path of what it has of its own. */
@@ -83,4 +83,26 @@ function shapeCorners(form: RoofForm): [SideKey, number, number][] {
       ]
     : [['left', 0, wide]]
   return [['front', from, 0], ...rightEnd, ['back', to, wide], ...leftEnd]
+}
+
+/**
+ * The form with its shape turned into typed corners, to be moved from there; each plate keeps its
+ * finish, pitch and overhang. Corners that somebody typed already stay as they are.
+ */
+export function withTypedCorners(form: RoofForm): RoofForm {
+  const plates = platesOfForm(form)
+  const isRead = plates.every(({ start }) => Number.isFinite(start.x + start.y))
+  const isTyped = form.corners.some(({ x, y }) => x !== '' || y !== '')
+  if (isTyped || !isRead) return { ...form, shape: 'corners' }
+  const corners = plates.map(({ start, side }): CornerForm => ({
+    ...side,
+    x: cornerText(start.x),
+    y: cornerText(start.y),
+  }))
+  return { ...form, shape: 'corners', corners }
+}
+
+/** To a hundredth of a mm, so that a regular octagon stays one. */
+function cornerText(mm: number): string {
+  return String(Math.round(mm * 100) / 100)
 }

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
 import { coveringOf, jobRoofSettings } from '../../shared/revisions/coverings.ts'
+import { withTypedCorners } from '../../shared/revisions/form-outline.ts'
 import { textAt, withText } from '../../shared/revisions/form-paths.ts'
 import { revisionLetter } from '../../shared/revisions/revision-letters.ts'
 import { formOfShape, type RoofForm, type RoofShape } from '../../shared/revisions/roof-form.ts'
@@ -133,6 +134,27 @@ test('a bad pitch for all is said once, at the field where it was typed', () => 
 test('a bad pitch of one plate is said at that plate', () => {
   const problems = problemsOf(typedForm('rectangle', { 'sides.back.pitchDeg': '3' }))
   expect(problems).toEqual({ 'sides.back.pitchDeg': expect.stringContaining('from 5 to 60') })
+})
+
+test('a ready shape turned into corners keeps its outline, pitches and gables', () => {
+  const shape = typedForm('octagonal-end', {
+    'sides.left.finish': 'gable',
+    'sides.front.pitchDeg': '30',
+  })
+  const typed = withTypedCorners(shape)
+  expect(typed.shape).toBe('corners')
+  const [before, after] = [roofOf(shape), roofOf(typed)]
+  expect(after.edges).toEqual(before.edges)
+  for (const [i, corner] of before.outline.entries()) {
+    expect(after.outline[i]!.x).toBeCloseTo(corner.x, 1)
+    expect(after.outline[i]!.y).toBeCloseTo(corner.y, 1)
+  }
+})
+
+test('corners already typed are not overwritten by the shape left behind', () => {
+  const typed = withText(typedForm('rectangle'), 'corners.0.x', '1200')
+  expect(withTypedCorners(typed).corners).toEqual(typed.corners)
+  expect(withTypedCorners(formOfShape('rectangle')).corners).toHaveLength(4)
 })
 
 test('a length typed in metres is told so at its field', () => {

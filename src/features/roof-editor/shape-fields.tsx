@@ -1,4 +1,5 @@
 import { type RoofShape, roofShapes } from '../../../shared/revisions/roof-form.ts'
+import { withTypedCorners } from '../../../shared/revisions/form-outline.ts'
 import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
 import { CornerFields } from './corner-fields.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
@@ -23,7 +24,9 @@ const lengthOfWords = [
 
 /** Which plan it is, and how big. */
 export function ShapeFields() {
-  const { form, problemAt, setText } = useRoofForm()
+  const { form, problemAt, setText, setForm } = useRoofForm()
+  const take = (shape: RoofShape) =>
+    shape === 'corners' ? setForm(withTypedCorners(form), 'shape') : setText('shape', shape)
   const hasCutEnd = form.shape === 'octagonal-end' || form.shape === 'splayed-end'
   const problem = problemAt('shape')
   return (
@@ -44,7 +47,7 @@ export function ShapeFields() {
               name="shape"
               className="sr-only"
               checked={shape === form.shape}
-              onChange={() => setText('shape', shape)}
+              onChange={() => take(shape)}
             />
             {shapeNames[shape]}
           </label>
