@@ -2,7 +2,7 @@ import type { Joint, Joints } from './clusters.ts'
 import { slopeStations } from './layout.ts'
 import type { Station } from './layout.ts'
 import type { Piece } from './piece.ts'
-import type { Border, Face, NodeLine, RoofLines } from './roof-lines.ts'
+import type { Border, Face, NodeLine, RoofLines, SquareSpan } from './roof-lines.ts'
 import { squareLineSpan } from './roof-lines.ts'
 import type { MemberRole, Point2, Roof, RoofSettings } from './roof-types.ts'
 import { at, edgeUnder, slopeGradient, slopePoint } from './slopes.ts'
@@ -161,18 +161,21 @@ const hipGapMm = (ground: Ground, slope: Slope, run: Point2, corner: Point2): nu
   )
 }
 
-/** Plan length on which a rafter hung from a hip has its full section, mm; under 0 where it is all feather. */
-const fullLengthMm = (ground: Ground, slope: Slope, face: Face, alongMm: number): number => {
-  const { rafter, hip } = ground.roof.sections
-  const half = rafter.thicknessMm / 2
-  const spans = [-half, half].map((mm) => squareLineSpan(ground.lines, slope, face, alongMm + mm))
-  const [from, to] = spans.map((span) => span?.low ?? Infinity)
-  if (from === undefined || to === undefined) return -Infinity
-  // how fast the hip runs off beside the rafter, and so how far its side stands up along it
-  const perAside = Math.abs(to - from) / rafter.thicknessMm
-  const hipMm = (hip.thicknessMm / 2) * Math.hypot(1, perAside)
-  const highs = spans.map((span) => span?.high ?? -Infinity)
-  return Math.min(...highs) - Math.max(from, to) - hipMm
+/**
+ * Whether a rafter hung from a hip beyond its plate is worth cutting: its feathered foot clear of the
+ * plate, and some of it of full section.
+ */
+const hangsClear = (ground: Ground, slope: Slope, span: SquareSpan): boolean => {
+  const index = lineIndex(ground, slope.index, span.lowBorder)
+  if (index === null) return false
+  const { lines, roof } = ground
+  const line = at(lines.lines, index)
+  const run = sub2(at(lines.nodes, line.to).point, at(lines.nodes, line.from).point)
+  const perAside = Math.abs(dot2(slope.inward, run) / dot2(slope.along, run))
+  const featherMm = (roof.sections.rafter.thicknessMm / 2) * perAside
+  const hipMm = (roof.sections.hip.thicknessMm / 2) * Math.hypot(1, perAside)
+  const foot = span.low + hipMm
+  return foot - featherMm >= roof.plateWidthMm && foot + featherMm < span.high
 }
 
 /** Whether a rafter `alongMm` along a slope's plate stands clear of the hips at both corners and is worth cutting. */
@@ -182,7 +185,7 @@ const clearOfCorners = (ground: Ground, slope: Slope, face: Face, alongMm: numbe
   if (span === null) return false
   if ((span.high - span.low) * Math.hypot(1, slope.tan) < settings.minCreeperMm) return false
   if (alongMm < 0 || alongMm > slope.lengthMm) {
-    return span.lowBorder.kind === 'slope' && fullLengthMm(ground, slope, face, alongMm) > 0
+    return hangsClear(ground, slope, span)
   }
   return lines.lines.every((line) => {
     if (line.kind !== 'hip' || !line.slopes.includes(slope.index)) return true

@@ -11,6 +11,8 @@ export type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
 /** Faces this near to one plane bear on each other. */
 const bearingGapMm = 0.1
 const leastBearingMm = 0.25
+/** Less of a face than this only touches a corner. */
+const leastShare = 0.025
 
 export const planSegments = (piece: number, plan: Labelled<Side>): Segment[] =>
   plan.points.flatMap((from, k) => {
@@ -46,7 +48,7 @@ export const sharedRange = (a: Segment, b: Segment): [number, number] | null => 
     low = Math.max(low, Math.min(...ends))
     high = Math.min(high, Math.max(...ends))
   } else if (Math.abs(offFrom) > bearingGapMm) return null
-  return high - low < leastBearingMm ? null : [low, high]
+  return high - low < Math.max(leastBearingMm, leastShare * size) ? null : [low, high]
 }
 
 /** Top and underside of a piece over a point of the plan, but for the common height over plate. */

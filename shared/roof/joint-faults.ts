@@ -20,9 +20,9 @@ const featherFacing = 0.2
 const sliverMm = 0.3
 /** Where a face has closed it bears; what lies as far behind it as `behindMm` it was meant to meet. */
 const closedMm = 0.1
-const nearlyMm = 1.2
+const nearlyMm = 1.5
 const behindMm = 6
-const closedShare = 0.975
+const closedShare = 0.985
 
 /** What stands in plan: the piece and the shape of it. */
 type Body = { piece: number; points: readonly Point2[]; sides: Segment[] }

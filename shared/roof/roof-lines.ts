@@ -198,13 +198,16 @@ export const roofLines = (plates: PlateLines): RoofLines => {
   return { nodes, faces, lines: linesOf(plates, nodes, faces) }
 }
 
+/** A square line's part in a slope: how far inside the plate it starts and ends, and what borders the slope there. */
+export type SquareSpan = { low: number; high: number; lowBorder: Border; highBorder: Border }
+
 /** Where a slope's square line `alongMm` from its first corner enters and leaves the slope, mm inside its plate. */
 export const squareLineSpan = (
   lines: RoofLines,
   slope: Slope,
   face: Face,
   alongMm: number,
-): { low: number; high: number; lowBorder: Border; highBorder: Border } | null => {
+): SquareSpan | null => {
   let low = Infinity
   let high = -Infinity
   let lowBorder: Border = { kind: 'open' }
