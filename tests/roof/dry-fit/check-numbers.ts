@@ -147,10 +147,14 @@ function checkBirdsmouth(complain: Complain, piece: Piece): void {
   near('heel angle', mouth.heelFromEdgeDeg, 90 - member.pitchDeg, ANGLE_TOL_DEG)
 }
 
-/** How far left of the centre line the head reaches furthest; 0 when square across. */
+/**
+ * How far left of the centre line the head reaches furthest; 0 when square across. Read as a tape
+ * reads it, from the heel plumb line: a backed arris lies lower and so counts from further back.
+ */
 function headPointLeftMm(piece: Piece): number {
-  const furthest = Math.max(...piece.own.map((p) => p[0]))
-  const sides = piece.own.filter((p) => p[0] > furthest - 1e-5).map((p) => p[1])
+  const fromHeel = (p: Vec): number => p[0] - p[2] * tanDeg(piece.member.pitchDeg)
+  const furthest = Math.max(...piece.own.map(fromHeel))
+  const sides = piece.own.filter((p) => fromHeel(p) > furthest - 1e-5).map((p) => p[1])
   return (Math.min(...sides) + Math.max(...sides)) / 2
 }
 
