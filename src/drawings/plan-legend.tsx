@@ -19,7 +19,7 @@ type Props = {
 export function PlanLegend({ scaleBar, words, hiddenCount }: Props) {
   const lengthPx = scaleBar.segment.to.x
   return (
-    <div className="flex flex-wrap items-center gap-x-5 gap-y-1 text-sm text-ink-soft">
+    <div className="flex flex-wrap items-center gap-x-5 gap-y-1 text-sm">
       <span className="inline-flex items-center gap-2">
         <svg width={lengthPx + 2} height={10} aria-hidden="true" className="shrink-0">
           <path

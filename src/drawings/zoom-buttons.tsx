@@ -14,7 +14,8 @@ export function ZoomButtons({ zoom, onZoom }: Props) {
       <Button
         kind="plain"
         aria-label="Draw smaller"
-        className="min-w-11 px-0!"
+        size="site"
+        className="min-w-14 px-0!"
         disabled={smaller === undefined}
         onClick={() => onZoom(smaller ?? zoom)}
       >
@@ -23,7 +24,8 @@ export function ZoomButtons({ zoom, onZoom }: Props) {
       <Button
         kind="plain"
         aria-label="Draw larger"
-        className="min-w-11 px-0!"
+        size="site"
+        className="min-w-14 px-0!"
         disabled={larger === undefined}
         onClick={() => onZoom(larger ?? zoom)}
       >

@@ -204,7 +204,9 @@ test(
 
     // The leading hand sees the count move without reloading.
     await expect
-      .poll(() => task.getByRole('group').innerText(), { timeout: 15_000 })
+      .poll(() => task.getByRole('group', { name: new RegExp(creeper.mark) }).innerText(), {
+        timeout: 15_000,
+      })
       .toMatch(/^1\s/)
     for (const visitor of visitors) expect(visitor.complaints).toEqual([])
   },

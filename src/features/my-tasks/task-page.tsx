@@ -11,7 +11,7 @@ import { useSession, useUser } from '../../lib/session.ts'
 import { useDayAsk } from '../../lib/use-day-ask.tsx'
 import { useTicks, withTask } from '../../lib/use-ticks.ts'
 import { Badge } from '../../ui/badge.tsx'
-import { Button, buttonClass } from '../../ui/button.tsx'
+import { buttonClass } from '../../ui/button.tsx'
 import { CountStepper } from '../../ui/count-stepper.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { PrintFoot } from '../../ui/print-foot.tsx'
@@ -34,17 +34,17 @@ function HandKey({ task }: { task: DayTask }) {
   })
   const isUp = task.handRaisedAt !== null
   return (
-    <Button
-      kind={isUp ? 'danger' : 'plain'}
-      size="site"
-      className="w-full"
-      aria-pressed={isUp}
-      busy={hand.isPending}
+    <button
+      type="button"
+      aria-label={isUp ? 'Hand is up. Lower it' : 'Stuck? Raise a hand'}
+      disabled={hand.isPending}
+      aria-busy={hand.isPending || undefined}
       onClick={() => hand.mutate(!isUp)}
+      className={`flex h-20 w-16 shrink-0 flex-col items-center justify-center rounded-md border-2 text-sm font-semibold leading-tight disabled:opacity-50 ${isUp ? 'border-stop text-stop' : 'border-ink'}`}
     >
-      <Hand size={22} aria-hidden />
-      {isUp ? 'Hand is up. Lower it' : 'Stuck? Raise a hand'}
-    </Button>
+      <Hand size={28} aria-hidden />
+      <span aria-hidden>{isUp ? 'Hand up' : 'Stuck?'}</span>
+    </button>
   )
 }
 
@@ -79,7 +79,7 @@ function TickBar({ task, today }: { task: DayTask; today: string }) {
   const { askFirst, question } = useDayAsk(task.day, today)
   const { count, unsent, step } = useTicks(task)
   return (
-    <div className="sticky bottom-[calc(3.5rem+env(safe-area-inset-bottom))] z-10 -mx-4 flex justify-center border-t-2 border-ink bg-sheet px-4 py-2 lg:bottom-0 lg:mx-0 lg:rounded-md lg:border-2 print:hidden">
+    <div className="sticky bottom-[calc(3.5rem+env(safe-area-inset-bottom))] z-10 -mx-4 flex items-center justify-between gap-2 border-t-2 border-ink bg-sheet px-3 py-2 sm:justify-center sm:gap-6 lg:bottom-0 lg:mx-0 lg:rounded-md lg:border-2 print:hidden">
       <CountStepper
         label={task.title}
         count={count}
@@ -88,6 +88,7 @@ function TickBar({ task, today }: { task: DayTask; today: string }) {
         onStep={(delta) => askFirst(() => step(delta))}
         size="large"
       />
+      <HandKey task={task} />
       {question}
     </div>
   )
@@ -152,8 +153,7 @@ function TaskBody({ detail }: { detail: TaskDetail }) {
             <p className="text-base">{workAtHeight}</p>
           </Note>
         ) : null}
-        <div className="space-y-4 print:hidden">
-          <HandKey task={task} />
+        <div className="print:hidden">
           <Neighbours task={task} />
         </div>
         <TickBar task={task} today={detail.today} />
