@@ -19,7 +19,9 @@ export function builtScreens(distDir: string): RequestHandler[] {
       },
     }),
     (req, res, next) => {
-      if (req.method !== 'GET' || !existsSync(indexFile)) return next()
+      // An asset of an older build is gone, not a screen.
+      const isAsset = req.path.startsWith('/assets/')
+      if (req.method !== 'GET' || isAsset || !existsSync(indexFile)) return next()
       res.setHeader('Cache-Control', 'no-cache')
       // By its folder: a dot in the path above it must not hide it.
       res.sendFile('index.html', { root: distDir })
