@@ -1,7 +1,10 @@
-import type { Labelled } from './convex.ts'
+import { boxGrid } from './box-grid.ts'
+import type { BoxGrid } from './box-grid.ts'
+import type { Box, Labelled } from './convex.ts'
 import type { Piece, PieceEnd } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
+import { fullPlan } from './trim.ts'
 import type { Side } from './trim.ts'
 import { add2, dot2, left2, scale2, sub2 } from './vector.ts'
 
@@ -20,11 +23,22 @@ export const planSegments = (piece: number, plan: Labelled<Side>): Segment[] =>
     return side.kind === 'open' ? [] : [{ piece, side, from, to: at(plan.points, k + 1) }]
   })
 
-const isNear = (a: Segment, b: Segment): boolean =>
-  Math.max(b.from.x, b.to.x) >= Math.min(a.from.x, a.to.x) - 1 &&
-  Math.min(b.from.x, b.to.x) <= Math.max(a.from.x, a.to.x) + 1 &&
-  Math.max(b.from.y, b.to.y) >= Math.min(a.from.y, a.to.y) - 1 &&
-  Math.min(b.from.y, b.to.y) <= Math.max(a.from.y, a.to.y) + 1
+/** The sides of all pieces, by piece and by where they are. */
+export type SegmentIndex = { ofPiece: Segment[][]; grid: BoxGrid<Segment> }
+
+const boxOf = ({ from, to }: Segment, growMm: number): Box => ({
+  minX: Math.min(from.x, to.x) - growMm,
+  minY: Math.min(from.y, to.y) - growMm,
+  maxX: Math.max(from.x, to.x) + growMm,
+  maxY: Math.max(from.y, to.y) + growMm,
+})
+
+export const segmentIndex = (pieces: readonly Piece[]): SegmentIndex => {
+  const ofPiece = pieces.map((piece) => planSegments(piece.id, fullPlan(piece)))
+  const grid = boxGrid<Segment>()
+  ofPiece.flat().forEach((segment) => grid.put(segment, boxOf(segment, 0)))
+  return { ofPiece, grid }
+}
 
 /** Where along a's side two faces lie on each other in plan, with no more than the gap between; null where they do not. */
 export const sharedRange = (a: Segment, b: Segment): [number, number] | null => {
@@ -82,19 +96,17 @@ const bearingMm2 = (pieces: readonly Piece[], own: Segment, other: Segment): num
 /** Pieces that a piece's cut bears on, most bearing first: `mayBear` says who was placed before it. */
 export const bearings = (
   pieces: readonly Piece[],
-  segments: readonly Segment[],
+  segments: SegmentIndex,
   piece: Piece,
   end: PieceEnd,
   cut: number,
   mayBear: (other: number) => boolean,
 ): number[] => {
-  const own = segments.find(
-    (s) => s.piece === piece.id && s.side.kind === end && s.side.cut === cut,
-  )
+  const own = segments.ofPiece[piece.id]?.find((s) => s.side.kind === end && s.side.cut === cut)
   if (own === undefined) return []
   const sums = new Map<number, number>()
-  for (const other of segments) {
-    if (other.piece === piece.id || !isNear(own, other) || !mayBear(other.piece)) continue
+  for (const other of segments.grid.near(boxOf(own, 1))) {
+    if (other.piece === piece.id || !mayBear(other.piece)) continue
     const shared = bearingMm2(pieces, own, other)
     if (shared > 0) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
   }

@@ -16,8 +16,8 @@ export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
   crossing: Crossing
 }
 
-/** A tail plane that lies this much further out at both arrises takes no timber. */
-const squareMm = 1e-6
+/** A tail plane that takes less than this off the arrises takes no timber that a saw would find. */
+const leastTailMm = 0.3
 
 /** A piece as a timber in space, at its height over plate. */
 export const timberOf = (piece: Piece, standMm: number): Timber => {
@@ -128,7 +128,7 @@ const missesTail = (cut: DraftCut, others: DraftCut[]): boolean =>
         : [c.longPointFromHeelMm, c.shortPointFromHeelMm]
     const [left = 0, right = 0] = ends(cut)
     const [otherLeft = 0, otherRight = 0] = ends(other)
-    return left < otherLeft - squareMm && right < otherRight - squareMm
+    return left < otherLeft + leastTailMm && right < otherRight + leastTailMm
   })
 
 /** All saw cuts of a piece but its birdsmouth: head, then foot, then tail. */
@@ -144,12 +144,9 @@ export const cutsOf = (ground: Ground, piece: Piece, standMm: number): DraftCut[
   return [
     ...piece.headCuts.map(joint('head')),
     ...piece.footCuts.map(joint('foot')),
-    ...tails.filter(
-      (cut) =>
-        !missesTail(
-          cut,
-          tails.filter((other) => other !== cut),
-        ),
-    ),
+    ...tails.reduce((kept, cut) => {
+      const others = kept.filter((other) => other !== cut)
+      return missesTail(cut, others) ? others : kept
+    }, tails),
   ]
 }

@@ -2,7 +2,7 @@ import { buildPieces } from './build-pieces.ts'
 import type { Ground } from './build-pieces.ts'
 import { cautionsOf } from './cautions.ts'
 import { roofJoints } from './clusters.ts'
-import { bearings, planSegments } from './contacts.ts'
+import { bearings, segmentIndex } from './contacts.ts'
 import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
@@ -18,7 +18,6 @@ import { worstRounding } from './rounding.ts'
 import { plateLines } from './slopes.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
-import { fullPlan } from './trim.ts'
 
 /** Ridges, and the feet of broken hips, are there first: others bear on them. */
 const runsThrough = (piece: Piece, end: PieceEnd): boolean =>
@@ -28,7 +27,7 @@ const runsThrough = (piece: Piece, end: PieceEnd): boolean =>
 const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
   const pieces = buildPieces(ground)
   const placedAt = cutJoints(ground, pieces)
-  const segments = pieces.flatMap((piece) => planSegments(piece.id, fullPlan(piece)))
+  const segments = segmentIndex(pieces)
   return pieces.map((piece) =>
     draftMember(ground, piece, standMm, (cut) => {
       if (cut.end === 'tail' || cut.listed === null || runsThrough(piece, cut.end)) return []

@@ -1,3 +1,4 @@
+import { boxGrid } from './box-grid.ts'
 import { brokenFootCut, sidesAt } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import { jointFaults } from './joint-faults.ts'
@@ -5,7 +6,6 @@ import { bodyDirection, endJobs, phases, usualWay } from './joint-phases.ts'
 import type { EndJob, JointWay, JointWays } from './joint-phases.ts'
 import { jointMitres } from './joint-mitres.ts'
 import { jointGroups, waysToTry } from './joint-ways.ts'
-import { obstacleGrid } from './obstacle-grid.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -127,18 +127,19 @@ const placeGroup = (
   }
   let ways: JointWays = new Map<number, JointWay>()
   let best = place(ways)
+  let standing = best
   for (const joint of group) {
     if (!best.faults.needsOther(joint)) continue
     for (const way of waysToTry(own, joint)) {
       const tried = new Map(ways).set(joint, way)
-      const result = place(tried)
-      if (result.faults.total >= best.faults.total) continue
-      best = result
+      standing = place(tried)
+      if (standing.faults.total >= best.faults.total) continue
+      best = standing
       ways = tried
       if (!best.faults.needsOther(joint)) break
     }
   }
-  return place(ways).jobs
+  return standing === best ? best.jobs : place(ways).jobs
 }
 
 /** When an end was placed; with null, the first end of that piece. */
@@ -165,18 +166,19 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   const isEarly = (job: EndJob) =>
     job.phase === phases.ridge || (job.joint === null && job.phase === phases.common)
   const early = all.filter(isEarly)
-  const grid = obstacleGrid()
-  placeJobs(ground, early, new Map(), grid)
+  const grid = boxGrid<Obstacle>()
+  const put = (obstacle: Obstacle) => grid.put(obstacle, obstacle.box)
+  placeJobs(ground, early, new Map(), { near: grid.near, put })
   const placed = [...early]
   for (const group of jointGroups(ground)) {
     const jobs = placeGroup(ground, pieces, group.joints, grid.near(group.box))
     placed.push(...jobs)
   }
   for (const job of placed.slice(early.length)) {
-    grid.put(halfObstacle(job.piece, job.end), `${job.piece.id}${job.end}`)
-    if (!hasFootJob(job.piece)) grid.put(halfObstacle(job.piece, 'foot'), `${job.piece.id}foot`)
+    put(halfObstacle(job.piece, job.end))
+    if (!hasFootJob(job.piece)) put(halfObstacle(job.piece, 'foot'))
   }
   const late = all.filter((job) => job.joint === null && !isEarly(job))
-  placeJobs(ground, late, new Map(), grid)
+  placeJobs(ground, late, new Map(), { near: grid.near, put })
   return placedAt(pieces, [...placed, ...late])
 }

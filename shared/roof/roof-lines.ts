@@ -21,8 +21,9 @@ export type RoofLines = { nodes: RoofNode[]; faces: Face[]; lines: NodeLine[] }
 
 /** Events of the roof nearer together than this are one node: no saw or tape tells them apart. */
 const sameNodeMm = 0.5
-/** A line that climbs less than this over its whole length is level. */
+/** A line that climbs less than this over its whole length, and less than this for each mm, is level. */
 const levelMm = 0.5
+const levelSlope = 0.002
 /** How far beyond the outline a slope is drawn before it is clipped: past any overhang. */
 const marginMm = 10_000
 
@@ -141,7 +142,9 @@ const facesOf = (plans: Labelled<Border>[], owner: number[]): Face[] => {
 
 const creaseKind = (a: RoofNode, b: RoofNode): LineKind => {
   if (a.corner !== null || b.corner !== null) return 'hip'
-  return Math.abs(a.point.z - b.point.z) <= levelMm ? 'ridge' : 'broken-hip'
+  const rise = Math.abs(a.point.z - b.point.z)
+  const isLevel = rise <= levelMm && rise <= levelSlope * distance2(a.point, b.point)
+  return isLevel ? 'ridge' : 'broken-hip'
 }
 
 const linesOf = (plates: PlateLines, nodes: RoofNode[], faces: Face[]): NodeLine[] => {

@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Member, MemberRole, Roof } from '../../shared/roof/roof-types.ts'
-import { makeRoof } from './support/roofs.ts'
+import { makeRoof, regularOutline } from './support/roofs.ts'
 
 /** Source of the rules checked here: the project's written agreement on layout, joints and outputs. */
 const rectangle: [number, number][] = [
@@ -224,6 +224,28 @@ describe('cautions', () => {
   test('an ordinary hip roof and an ordinary splayed pitch raise none', () => {
     expect(codes(plain())).toEqual([])
     expect(codes(plain({ hipTop: 'lowered', tail: 'square' }))).toEqual([])
+  })
+
+  // Common practice, no source: the short cut is known for octagonal ends and splays at 45° only.
+  test('the short cut for a diagonal crown end is spoken of at octagonal ends and nowhere else', () => {
+    const irregular = [
+      [0, 0],
+      [9000, 0],
+      [9000, 7000],
+      [0, 6000],
+    ] as const
+    const pentagon = regularOutline(5, 5000)
+    const octagon = regularOutline(8, 5000)
+    const pitched = (outline: readonly (readonly [number, number])[]) =>
+      codes(
+        makeRoof(
+          outline,
+          outline.map(() => 25),
+        ),
+      )
+    expect(pitched(irregular)).not.toContain('crown-bevel-shortcut')
+    expect(pitched(pentagon)).not.toContain('crown-bevel-shortcut')
+    expect(pitched(octagon)).toContain('crown-bevel-shortcut')
   })
 
   test('unequal pitches with one overhang say how to level the eaves', () => {
