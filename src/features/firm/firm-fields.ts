@@ -1,5 +1,4 @@
 import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
-import type { MemberRole } from '../../../shared/roof/roof-types.ts'
 
 export type NumberField<Key extends string> = {
   key: Key
@@ -40,17 +39,5 @@ export const labourFields: NumberField<Exclude<keyof FirmSettings['labourRates']
   { key: 'braceRidgeMinutes', label: 'Brace a ridge', unit: 'min' },
   { key: 'tailLineMinutesPerEaveM', label: 'Tails to a line, each metre of eave', unit: 'min' },
 ]
-
-export const pieceNames: Record<MemberRole, string> = {
-  ridge: 'Ridge',
-  common: 'Common rafter',
-  'crown-end': 'Crown end rafter',
-  hip: 'Hip',
-  'broken-hip': 'Broken hip',
-  valley: 'Valley',
-  creeper: 'Creeper',
-  'valley-creeper': 'Valley creeper',
-  'cripple-creeper': 'Cripple creeper',
-}
 
 export const weekdays = ['Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat', 'Sun'] as const

@@ -1,7 +1,8 @@
 import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
+import { roleWords } from '../../../shared/marking/role-words.ts'
 import type { MemberRole } from '../../../shared/roof/roof-types.ts'
 import { Card } from '../../ui/card.tsx'
-import { labourFields, pieceNames } from './firm-fields.ts'
+import { labourFields } from './firm-fields.ts'
 import { NumberInput } from './number-input.tsx'
 
 type Rates = FirmSettings['labourRates']
@@ -26,9 +27,9 @@ export function LabourSection({ rates, onChange, issueAt }: Props) {
         correct them from your own days.
       </p>
       <div className="grid gap-x-6 gap-y-3 sm:grid-cols-2 xl:grid-cols-3">
-        {(Object.keys(pieceNames) as MemberRole[]).map((role) => (
+        {(Object.keys(roleWords) as MemberRole[]).map((role) => (
           <fieldset key={role} className="grid grid-cols-2 gap-2">
-            <legend className="mb-1 font-extrabold">{pieceNames[role]}</legend>
+            <legend className="mb-1 font-extrabold">{roleWords[role]}</legend>
             <NumberInput
               label="Cut"
               unit="min"

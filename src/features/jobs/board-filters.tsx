@@ -1,10 +1,10 @@
-import { Search, X } from 'lucide-react'
+import { X } from 'lucide-react'
 import { jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
 import type { Board } from '../../../shared/jobs/job-views.ts'
-import { useSearchKey } from '../../lib/use-search-key.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
-import { Select, TextInput } from '../../ui/inputs.tsx'
+import { Select } from '../../ui/inputs.tsx'
+import { SearchBox } from '../../ui/search-box.tsx'
 import type { BoardFilter } from './job-queries.ts'
 
 type Props = {
@@ -15,27 +15,17 @@ type Props = {
 }
 
 export function BoardFilters({ filter, change, isFiltered, board }: Props) {
-  const input = useSearchKey()
   const crews = board?.crews ?? []
   return (
     <search className="mb-4 grid grid-cols-2 items-end gap-3 lg:flex">
-      <div className="relative col-span-2 lg:w-80">
-        <label htmlFor="board-search" className="mb-1 block font-semibold">
-          Find a job
-        </label>
-        <Search size={18} aria-hidden className="absolute bottom-3.5 left-3 text-ink-soft" />
-        <TextInput
-          ref={input}
-          id="board-search"
-          type="search"
-          className="pl-9"
-          placeholder="Number, title, site or name"
-          aria-keyshortcuts="/"
-          maxLength={80}
-          value={filter.q}
-          onChange={(event) => change({ q: event.target.value })}
-        />
-      </div>
+      <SearchBox
+        className="col-span-2 lg:w-80"
+        label="Find a job"
+        placeholder="Number, title, site or name"
+        maxLength={80}
+        value={filter.q}
+        onChange={(q) => change({ q })}
+      />
       <Field label="Stage" className="lg:w-44">
         <Select
           value={filter.stage ?? ''}

@@ -1,14 +1,14 @@
-import { Search, X } from 'lucide-react'
+import { X } from 'lucide-react'
 import {
   kindWords,
   messageKinds,
   messageStates,
   stateWords,
 } from '../../../shared/messages/message-words.ts'
-import { useSearchKey } from '../../lib/use-search-key.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
-import { Select, TextInput } from '../../ui/inputs.tsx'
+import { Select } from '../../ui/inputs.tsx'
+import { SearchBox } from '../../ui/search-box.tsx'
 import type { MessageFilter } from './message-queries.ts'
 
 type Props = {
@@ -18,26 +18,16 @@ type Props = {
 }
 
 export function MessageFilters({ filter, change, isFiltered }: Props) {
-  const input = useSearchKey()
   return (
     <search className="mb-4 grid grid-cols-2 items-end gap-3 lg:flex">
-      <div className="relative col-span-2 lg:w-80">
-        <label htmlFor="message-search" className="mb-1 block font-semibold">
-          Find a message
-        </label>
-        <Search size={18} aria-hidden className="absolute bottom-3.5 left-3 text-ink-soft" />
-        <TextInput
-          ref={input}
-          id="message-search"
-          type="search"
-          className="pl-9"
-          placeholder="Name, address or subject"
-          aria-keyshortcuts="/"
-          maxLength={100}
-          value={filter.q}
-          onChange={(event) => change({ q: event.target.value })}
-        />
-      </div>
+      <SearchBox
+        className="col-span-2 lg:w-80"
+        label="Find a message"
+        placeholder="Name, address or subject"
+        maxLength={100}
+        value={filter.q}
+        onChange={(q) => change({ q })}
+      />
       <Field label="State" className="lg:w-48">
         <Select
           value={filter.state ?? ''}

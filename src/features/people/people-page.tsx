@@ -6,13 +6,11 @@ import { formatDay } from '../../../shared/calendar/days.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { failureText } from '../../lib/failure-text.ts'
-import { useSearchKey } from '../../lib/use-search-key.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
-import { Field } from '../../ui/field.tsx'
-import { TextInput } from '../../ui/inputs.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
+import { SearchBox } from '../../ui/search-box.tsx'
 import { EmptyState, ErrorState } from '../../ui/states.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { CrewForm } from './crew-form.tsx'
@@ -118,7 +116,6 @@ export function PeoplePage() {
   const [params, setParams] = useSearchParams()
   const { personId } = useParams()
   const navigate = useNavigate()
-  const searchInput = useSearchKey()
   const search = params.get('q') ?? ''
   const close = () => void navigate({ pathname: '/people', search: params.toString() })
   const failed = people.error ?? crews.error
@@ -143,21 +140,21 @@ export function PeoplePage() {
         title="People"
         actions={<Button onClick={() => void navigate('/people/new')}>Add a person</Button>}
       />
+      {personId && personId !== 'new' && !open ? (
+        <div className="mb-4">
+          <ErrorState message="Nobody by that address is here. The link may be old." />
+        </div>
+      ) : null}
       <Crews crews={crews.data.crews} people={everybody} />
       <section>
         <h2 className="mb-2 text-lg font-extrabold">Everybody</h2>
-        <Field label="Find by name or e-mail" className="mb-3 max-w-sm">
-          <TextInput
-            ref={searchInput}
-            type="search"
-            aria-keyshortcuts="/"
-            maxLength={80}
-            value={search}
-            onChange={(event) =>
-              setParams(event.target.value ? { q: event.target.value } : {}, { replace: true })
-            }
-          />
-        </Field>
+        <SearchBox
+          className="mb-3 max-w-sm"
+          label="Find by name or e-mail"
+          maxLength={80}
+          value={search}
+          onChange={(q) => setParams(q ? { q } : {}, { replace: true })}
+        />
         {shown.length === 0 ? (
           <EmptyState title="Nobody by that name">Clear the search to see everybody.</EmptyState>
         ) : null}

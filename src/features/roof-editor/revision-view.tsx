@@ -15,7 +15,7 @@ import { CardDialog } from './card-dialog.tsx'
 import { CutList } from './cut-list.tsx'
 import { useMarkingOptions } from './marking-options.ts'
 import { PrintCards } from './print-cards.tsx'
-import { PrintFoot } from './print-foot.tsx'
+import { PrintFoot } from '../../ui/print-foot.tsx'
 import { SpecCautions, SpecFit, SpecTotals } from './spec-summary.tsx'
 
 const notMeasured = 'From plan, plates not measured'

@@ -5,7 +5,7 @@ import { formatDay, formatDayWithYear } from '../../../shared/calendar/days.ts'
 import type { DaySheets } from '../../../shared/day-sheets/day-sheet-schemas.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { failureText } from '../../lib/failure-text.ts'
-import { useSession } from '../../lib/session.ts'
+import { useMay, useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { Select } from '../../ui/inputs.tsx'
@@ -51,6 +51,7 @@ function CrewPicker({ sheets, onCrew }: { sheets: DaySheets; onCrew: (id: string
 }
 
 function NothingBooked({ sheets, onDay }: { sheets: DaySheets; onDay: (day: string) => void }) {
+  const mayWriteCrews = useMay('crew:write')
   const { nextDay } = sheets
   return (
     <EmptyState
@@ -67,7 +68,9 @@ function NothingBooked({ sheets, onDay }: { sheets: DaySheets; onDay: (day: stri
         ? nextDay
           ? `${sheets.crew.name} is next booked on ${formatDay(nextDay)}.`
           : `${sheets.crew.name} has no later day that you may see. Ask the office.`
-        : 'You are in no crew that day. Ask the office.'}
+        : mayWriteCrews
+          ? 'There is no crew yet. Make one under People.'
+          : 'You are in no crew that day. Ask the office.'}
     </EmptyState>
   )
 }
