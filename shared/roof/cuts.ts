@@ -43,11 +43,11 @@ export const timberOf = (piece: Piece, standMm: number): Timber => {
   }
 }
 
-/** The slopes' falls aside, measured square to the piece's edge instead of plumb. */
-const squareFalls = (piece: Piece) => ({
-  left: piece.fall.left * piece.cos,
-  right: piece.fall.right * piece.cos,
-})
+/** The slopes' falls aside, measured square to the piece's edge instead of plumb; a backed top stays square where its slope rises. */
+const squareFalls = (piece: Piece) => {
+  const fall = (mm: number) => (piece.backed ? Math.max(0, mm) : mm) * piece.cos
+  return { left: fall(piece.fall.left), right: fall(piece.fall.right) }
+}
 
 const draftCut = (
   ground: Ground,

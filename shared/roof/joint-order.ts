@@ -109,12 +109,19 @@ const overlay = (before: readonly Obstacle[]): Standing => {
   }
 }
 
+/** Ends placed on trial for one roof; a house with odd corners needs some hundreds, a second's work is this many. */
+const mostTrials = 5_000
+
+/** What is left of the trials, so that a plan of many small corners does not go on for minutes. */
+type Trials = { left: number }
+
 /** Places one group of joints near each other, the usual way or, where that leaves a head open, the first way that does not. */
 const placeGroup = (
   ground: Ground,
   pieces: Piece[],
   group: number[],
   before: readonly Obstacle[],
+  trials: Trials,
 ): EndJob[] => {
   const isOwn = (joint: number | null) => joint !== null && group.includes(joint)
   const own = pieces.filter((p) => isOwn(p.headJoint) || isOwn(p.footJoint))
@@ -131,6 +138,8 @@ const placeGroup = (
   for (const joint of group) {
     if (!best.faults.needsOther(joint)) continue
     for (const way of waysToTry(own, joint)) {
+      trials.left -= best.jobs.length
+      if (trials.left < 0) break
       const tried = new Map(ways).set(joint, way)
       standing = place(tried)
       if (standing.faults.total >= best.faults.total) continue
@@ -170,8 +179,9 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   const put = (obstacle: Obstacle) => grid.put(obstacle, obstacle.box)
   placeJobs(ground, early, new Map(), { near: grid.near, put })
   const placed = [...early]
+  const trials: Trials = { left: mostTrials }
   for (const group of jointGroups(ground)) {
-    const jobs = placeGroup(ground, pieces, group.joints, grid.near(group.box))
+    const jobs = placeGroup(ground, pieces, group.joints, grid.near(group.box), trials)
     placed.push(...jobs)
   }
   for (const job of placed.slice(early.length)) {

@@ -13,4 +13,4 @@ export const defaultSettings: RoofSettings = {
 }
 
 /** Goes up whenever the same input would give other numbers; a revision stores it. */
-export const engineVersion = '1'
+export const engineVersion = '2'

@@ -11,8 +11,12 @@ const roundTo = (value: number, step: number): number => Math.round(value / step
 /** The side a cut's marks start from: its long point, or either arris of a square cut. */
 const markedSide = (cut: DraftCut): 1 | -1 => (cut.longSide === 'right' ? -1 : 1)
 
-/** Normal of the top as the bevel lies on it: square, or the half planed to a slope on the cut's side. */
+/**
+ * Normal of the top as the bevel lies on it: the half planed to a slope on the cut's side; square for
+ * a square top, and for a cut that is marked square across the bar.
+ */
 const topNormal = (timber: Timber, cut: DraftCut): Point3 => {
+  if (cut.longSide === 'none') return timber.up
   const away = -markedSide(cut)
   const { left, right } = timber.arrisFall
   const fall = (away > 0 ? left : right) / timber.halfMm
