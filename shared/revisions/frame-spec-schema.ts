@@ -122,6 +122,7 @@ const cautionCodes = [
   'overhang-long',
   'crown-bevel-shortcut',
   'rafter-span-long',
+  'joint-open',
 ] as const
 
 export const frameSpecSchema = z.object({

@@ -245,8 +245,22 @@ const crownShortcut = (ground: Ground, members: Member[]): Caution[] => {
   return [caution('crown-bevel-shortcut', crowns, text, remedy)]
 }
 
+/** Where many lines meet at odd angles no order of joints closes every head; better said than hidden. */
+const jointOpen = (members: Member[], openMarks: ReadonlySet<string | undefined>): Caution[] =>
+  about(
+    'joint-open',
+    members.filter((m) => openMarks.has(m.mark)),
+    (m) => `The head of ${m.mark} does not close on its neighbours by any usual order of joints.`,
+    'Set that joint out full size on the deck before cutting, or change the plan so that fewer lines meet there.',
+  )
+
 /** All cautions of a frame, in a fixed order; each says what is wrong and what would answer it. */
-export const cautionsOf = (ground: Ground, standMm: number, members: Member[]): Caution[] => [
+export const cautionsOf = (
+  ground: Ground,
+  standMm: number,
+  members: Member[],
+  openMarks: ReadonlySet<string | undefined>,
+): Caution[] => [
   ...birdsmouthDeep(members),
   ...hipThin(ground, standMm, members),
   ...sectionShallow(ground, members),
@@ -257,4 +271,5 @@ export const cautionsOf = (ground: Ground, standMm: number, members: Member[]): 
   ...overhangLong(ground, members),
   ...spanLong(ground, members),
   ...crownShortcut(ground, members),
+  ...jointOpen(members, openMarks),
 ]

@@ -24,11 +24,11 @@ const runsThrough = (piece: Piece, end: PieceEnd): boolean =>
   piece.role === 'ridge' || (piece.role === 'broken-hip' && end === 'foot')
 
 /** Cuts all joints and gives every piece its numbers. */
-const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
+const draftMembers = (ground: Ground, standMm: number) => {
   const pieces = buildPieces(ground)
-  const placedAt = cutJoints(ground, pieces)
+  const { placedAt, openPieces } = cutJoints(ground, pieces)
   const segments = segmentIndex(pieces)
-  return pieces.map((piece) =>
+  const drafts = pieces.map((piece): DraftMember =>
     draftMember(ground, piece, standMm, (cut) => {
       if (cut.end === 'tail' || cut.listed === null || runsThrough(piece, cut.end)) return []
       const list = cut.end === 'head' ? piece.headCuts : piece.footCuts
@@ -38,6 +38,7 @@ const draftMembers = (ground: Ground, standMm: number): DraftMember[] => {
       return bearings(pieces, segments, piece, cut.end, cut.listed, mayBear)
     }),
   )
+  return { drafts, openPieces }
 }
 
 /**
@@ -53,8 +54,9 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
   const lines = roofLines(plates)
   const ground: Ground = { roof, settings, plates, lines, joints: roofJoints(roof, lines) }
   const standMm = commonStandMm(roof, plates.slopes)
-  const drafts = draftMembers(ground, standMm)
+  const { drafts, openPieces } = draftMembers(ground, standMm)
   const { members, cutLines, markOf } = markMembers(drafts)
+  const openMarks = new Set([...openPieces].map((piece) => markOf.get(piece)))
   const planes = publishedPlanes(plates, lines)
   const published = publishedLines(plates, lines)
   return {
@@ -64,7 +66,7 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
     members,
     cutLines,
     totals: roofTotals(planes, published, members),
-    cautions: cautionsOf(ground, standMm, members),
+    cautions: cautionsOf(ground, standMm, members, openMarks),
     planing: planingOf(drafts, plates.slopes, standMm, markOf),
     rounding: worstRounding(drafts, settings, markOf),
   }

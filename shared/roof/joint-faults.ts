@@ -9,7 +9,12 @@ import type { Obstacle } from './trim.ts'
 import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
 
 /** What is wrong with a group of joints: how much in all, and which of them had better be made another way. */
-export type JointFaults = { total: number; needsOther: (joint: number) => boolean }
+export type JointFaults = {
+  total: number
+  needsOther: (joint: number) => boolean
+  /** Pieces whose heads do not close. */
+  openPieces: readonly number[]
+}
 
 /** A head that does not close, in the count of faults; a third cut or a feathered one only adds to it. */
 const open = 10
@@ -106,6 +111,7 @@ export const jointFaults = (
     if (own !== undefined && piece.role === 'ridge') standing.push(own)
   }
   const ofJoint = new Map<number, number>()
+  const openPieces: number[] = []
   let total = 0
   for (const job of jobs) {
     const own = bodies.get(job.piece.id)
@@ -115,9 +121,10 @@ export const jointFaults = (
       const others = [...standing, ...mates].filter((body) => body !== own)
       const faults = headFaults(job, own, [...new Set(others)])
       total += faults
+      if (faults >= open) openPieces.push(job.piece.id)
       if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
     }
     standing.push(own)
   }
-  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open }
+  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open, openPieces }
 }

@@ -122,7 +122,7 @@ const placeGroup = (
   group: number[],
   before: readonly Obstacle[],
   trials: Trials,
-): EndJob[] => {
+): { jobs: EndJob[]; openPieces: readonly number[] } => {
   const isOwn = (joint: number | null) => joint !== null && group.includes(joint)
   const own = pieces.filter((p) => isOwn(p.headJoint) || isOwn(p.footJoint))
   const place = (ways: JointWays) => {
@@ -148,7 +148,8 @@ const placeGroup = (
       if (!best.faults.needsOther(joint)) break
     }
   }
-  return standing === best ? best.jobs : place(ways).jobs
+  const { jobs, faults } = standing === best ? best : place(ways)
+  return { jobs, openPieces: faults.openPieces }
 }
 
 /** When an end was placed; with null, the first end of that piece. */
@@ -165,12 +166,14 @@ const placedAt = (pieces: Piece[], placed: EndJob[]): PlacedAt => {
   }
 }
 
+type JointsCut = { placedAt: PlacedAt; openPieces: ReadonlySet<number> }
+
 /**
  * Cuts all ends that meet other timber, in the order of who runs through and who butts: ridges and
  * their commons, then joint by joint, then creepers; changes the pieces' cut lists. Tails and
- * birdsmouths are not touched.
+ * birdsmouths are not touched. Says when each end was placed, and whose heads no way closed.
  */
-export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
+export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
   const all = endJobs(ground, pieces, new Map())
   const isEarly = (job: EndJob) =>
     job.phase === phases.ridge || (job.joint === null && job.phase === phases.common)
@@ -180,9 +183,11 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   placeJobs(ground, early, new Map(), { near: grid.near, put })
   const placed = [...early]
   const trials: Trials = { left: mostTrials }
+  const openPieces = new Set<number>()
   for (const group of jointGroups(ground)) {
-    const jobs = placeGroup(ground, pieces, group.joints, grid.near(group.box), trials)
-    placed.push(...jobs)
+    const made = placeGroup(ground, pieces, group.joints, grid.near(group.box), trials)
+    placed.push(...made.jobs)
+    made.openPieces.forEach((piece) => openPieces.add(piece))
   }
   for (const job of placed.slice(early.length)) {
     put(halfObstacle(job.piece, job.end))
@@ -190,5 +195,5 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): PlacedAt => {
   }
   const late = all.filter((job) => job.joint === null && !isEarly(job))
   placeJobs(ground, late, new Map(), { near: grid.near, put })
-  return placedAt(pieces, [...placed, ...late])
+  return { placedAt: placedAt(pieces, [...placed, ...late]), openPieces }
 }

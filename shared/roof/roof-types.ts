@@ -199,6 +199,7 @@ export type CautionCode =
   | 'overhang-long'
   | 'crown-bevel-shortcut'
   | 'rafter-span-long'
+  | 'joint-open'
 
 export type Caution = {
   code: CautionCode
