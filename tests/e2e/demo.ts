@@ -1,9 +1,10 @@
 import { createTransport } from 'nodemailer'
-import { asc, eq } from 'drizzle-orm'
+import { asc, desc, eq } from 'drizzle-orm'
 import { seedDemo } from '../../server/db/demo/seed-demo.ts'
 import { demoPassword } from '../../server/db/demo/demo-people.ts'
 import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
 import { jobs } from '../../server/db/tables/job-tables.ts'
+import { outbox } from '../../server/db/tables/mail-tables.ts'
 import { people } from '../../server/db/tables/people-tables.ts'
 import { createFakeMailTransport } from '../../fakes/mail/fake-mail-transport.ts'
 import { createMailWorker } from '../../server/mail/mail-worker.ts'
@@ -34,6 +35,8 @@ export async function serveDemo(now?: Date) {
   const app = await serveTestApp(now ? { now } : {})
   await seedDemo(app.db, app.clock)
   const mail = mailFor(app)
+  // Half past three, for the reminders of the day after to have gone.
+  app.clock.current = new Date(app.clock.current.getTime() + 5.5 * 3_600_000)
   await mail.worker.runOnce()
   return { ...app, mail }
 }
@@ -61,6 +64,11 @@ export function dayIdOf(db: Db, number: string, day: string): string {
     .where(eq(bookingDays.bookingId, bookingIdOf(db, number)))
     .all()
   return rows.find((row) => row.day === day)?.id ?? ''
+}
+
+/** The newest mail. */
+export function messageIdOf(db: Db): string {
+  return db.select({ id: outbox.id }).from(outbox).orderBy(desc(outbox.createdAt)).get()?.id ?? ''
 }
 
 /** A task of the day that a person was handed. */

@@ -55,7 +55,7 @@ test('a double click saves the settings once, and a form opens at its first fiel
   await office.goto('/firm')
   await page.getByLabel('Phone').fill('(07) 5550 0141')
   await page.getByRole('button', { name: 'Save settings' }).dblclick()
-  await page.getByText('Settings saved.').waitFor()
+  await page.getByText('Settings saved.').first().waitFor()
   await page.waitForLoadState('networkidle')
   expect(await page.getByRole('alert').count()).toBe(0)
 

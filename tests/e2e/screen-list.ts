@@ -1,5 +1,5 @@
 import type { ServedApp } from './browser.ts'
-import { bookingIdOf, dayIdOf, jobIdOf, taskIdOf } from './demo.ts'
+import { bookingIdOf, dayIdOf, jobIdOf, messageIdOf, taskIdOf } from './demo.ts'
 
 export type Screen = { name: string; who: string | null; path: string }
 
@@ -45,6 +45,7 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     office('book', `/calendar/book?job=${octagon}`),
     office('today', '/today'),
     office('messages', '/messages'),
+    office('message', `/messages/${messageIdOf(db)}`),
     office('people', '/people'),
     office('person-new', '/people/new'),
     office('firm', '/firm'),
