@@ -95,15 +95,16 @@ export function restoreBooking(
     const crew = readCrew(tx, row.crewId)
     if (!crew) throw notFound('That crew')
     const days = readBookedDays(tx, id).map((d) => d.day)
+    // What was said on purpose when the days were booked still holds.
+    const reason = input.clashReason ?? row.clashReason ?? undefined
     const { crewTwice } = settleClashes(tx, {
       booking: { bookingId: id, crew, days },
       before: null,
       calendar: readFirm(tx),
-      // It was said when the days were booked.
-      said: { clashReason: input.clashReason, evenIfNotWorked: true },
+      said: { clashReason: reason, evenIfNotWorked: true },
     })
     const now = deps.clock.now()
-    const clashReason = crewTwice ? (input.clashReason ?? null) : null
+    const clashReason = crewTwice ? (reason ?? null) : null
     saveRow(tx, row, { cancelledAt: null, clashReason }, { isRealChange: true, now })
     replanJob(tx, row.jobId, now)
     recordBooking(deps, tx, { user, action: 'booking.restored', id })

@@ -135,10 +135,20 @@ test('a cancelled booking is kept, frees its days, and comes back when they are 
   await firm.booked({ jobId: firm.jobs.creekJob })
   const taken = await firm.officeAgent.post(`${url}/restore`).send({ version: 4 }).expect(409)
   expect(taken.body.message).toContain('QR-2 Creek shed')
-  await firm.officeAgent
+  const meant = await firm.officeAgent
     .post(`${url}/restore`)
     .send({ version: again.body.version, clashReason: 'Both small' })
     .expect(200)
+  // What was said on purpose once holds when that cancellation is undone.
+  const dropped = await firm.officeAgent
+    .post(`${url}/cancel`)
+    .send({ version: meant.body.version })
+    .expect(200)
+  const back = await firm.officeAgent
+    .post(`${url}/restore`)
+    .send({ version: dropped.body.version })
+    .expect(200)
+  expect(back.body).toMatchObject({ cancelled: false, clashReason: 'Both small' })
 })
 
 test('each change is in the audit with who made it', async () => {

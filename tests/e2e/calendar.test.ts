@@ -36,9 +36,10 @@ test('with keys alone: a crew is booked, twice on one day only with a reason, an
   await page.getByRole('button', { name: 'Cancel the booking' }).focus()
   await page.keyboard.press('Enter')
   await cell.waitFor({ state: 'detached' })
-  await page.getByRole('button', { name: 'Undo' }).first().focus()
+  const cancelled = page.locator('li').filter({ hasText: 'Booking cancelled.' })
+  await cancelled.getByRole('button', { name: 'Undo' }).focus()
   await page.keyboard.press('Enter')
-  await page.waitForTimeout(500)
+  await cell.waitFor()
   // The browser reports the refusals (409) by itself.
   expect(office.complaints.filter((line) => !line.includes('409'))).toEqual([])
   await office.close()
