@@ -14,7 +14,17 @@ export type Section = { thicknessMm: number; depthMm: number }
 export type RoofEdge =
   { finish: 'eave'; pitchDeg: number; overhangMm: number } | { finish: 'gable'; overhangMm: number }
 
-export type RoofSections = { rafter: Section; hip: Section; valley: Section; ridge: Section }
+/** The timbers of the frame; the others are set out where a size is typed for them. */
+export type RoofSections = {
+  rafter: Section
+  hip: Section
+  valley: Section
+  ridge: Section
+  underpurlin?: Section | undefined
+  collarTie?: Section | undefined
+  fascia?: Section | undefined
+  barge?: Section | undefined
+}
 
 /** What is entered for a roof; a revision stores it with its settings. */
 export type Roof = {
@@ -61,6 +71,10 @@ export type MemberRole =
   | 'creeper'
   | 'valley-creeper'
   | 'cripple-creeper'
+  | 'underpurlin'
+  | 'collar-tie'
+  | 'fascia'
+  | 'barge'
 
 export type LineKind = 'ridge' | 'hip' | 'valley' | 'broken-hip' | 'verge' | 'eave'
 
