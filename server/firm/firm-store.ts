@@ -26,10 +26,20 @@ export const newFirm: typeof firm.$inferInsert = {
   labourRates: defaultLabourRates,
 }
 
+/** A row stored before a piece or a setting had a name starts from the default for it. */
+function withDefaults(row: Firm): Firm {
+  const pieces = { ...defaultLabourRates.pieces, ...row.labourRates.pieces }
+  return {
+    ...row,
+    roofSettings: { ...defaultSettings, ...row.roofSettings },
+    labourRates: { ...defaultLabourRates, ...row.labourRates, pieces },
+  }
+}
+
 /** The firm's one row; made when it is not there. */
 export function readFirm(db: DbOrTx): Firm {
   const found = db.select().from(firm).where(eq(firm.id, firmId)).get()
-  if (found) return found
+  if (found) return withDefaults(found)
   db.insert(firm).values(newFirm).onConflictDoNothing().run()
   const made = db.select().from(firm).where(eq(firm.id, firmId)).get()
   if (!made) throw new Error('The firm row could not be made.')

@@ -3,7 +3,7 @@ import type { LabourRates } from './labour-rates.ts'
 /**
  * Where a firm starts until its own day logs say better.
  *
- * Minutes a piece are common practice, no source. Together, fascia and tails left out, they come to the
+ * Minutes a piece are common practice, no source. Those of the rafters and lines together come to the
  * 9.3–14.8 h per m³ of hip roofs and the 7.8–12.7 h per m³ of gable rafters in an estimating textbook
  * (figure 13.55, excerpt seen, title not; converted); tests/labour holds them there. Commons count two pairs
  * of hands at the lift, creepers one.
@@ -19,6 +19,10 @@ export const defaultLabourRates: LabourRates = {
     creeper: { cutMinutes: 6, standMinutes: 5 },
     'valley-creeper': { cutMinutes: 6, standMinutes: 5 },
     'cripple-creeper': { cutMinutes: 7, standMinutes: 5 },
+    underpurlin: { cutMinutes: 12, standMinutes: 20 },
+    'collar-tie': { cutMinutes: 5, standMinutes: 6 },
+    fascia: { cutMinutes: 8, standMinutes: 20 },
+    barge: { cutMinutes: 8, standMinutes: 15 },
   },
   setOutMinutes: 20,
   setOutMinutesPerPlateM: 1,

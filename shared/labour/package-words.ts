@@ -9,6 +9,7 @@ const words: Record<PackageKey, string> = {
   hips: 'hips',
   'remaining-commons': 'commons up',
   creepers: 'creepers',
+  purlins: 'purlins and ties',
   tails: 'fascia and tails',
 }
 

@@ -13,12 +13,16 @@ const roleWords: Record<MemberRole, string> = {
   creeper: 'creepers',
   'valley-creeper': 'valley creepers',
   'cripple-creeper': 'cripple creepers',
+  underpurlin: 'underpurlins',
+  'collar-tie': 'collar ties',
+  fascia: 'fascia',
+  barge: 'barges',
 }
 
 /**
  * The roof's work in the order crews do it: set out the plates; cut one pair and try it, cut the commons;
  * stand the ridge on its centring pairs and brace it; crown ends; hips, valleys, broken hips; the other
- * commons; creepers in opposed pairs; fascia and tails to a line.
+ * commons; creepers in opposed pairs; purlins, struts, ties; fascia and tails to a line.
  *
  * Every member is cut in exactly one step and stood in exactly one later step.
  */
@@ -71,7 +75,21 @@ export function workPackagesOf(spec: FrameSpec, rates: LabourRates): WorkPackage
         steps.cutAndStand('creepers', role),
       ),
     },
-    { key: 'tails', title: 'Fascia and tails to a line', steps: tailSteps(spec, rates) },
+    {
+      key: 'purlins',
+      title: 'Purlins, struts, ties',
+      steps: (['underpurlin', 'collar-tie'] as const).flatMap((role) =>
+        steps.cutAndStand('purlins', role),
+      ),
+    },
+    {
+      key: 'tails',
+      title: 'Fascia and tails to a line',
+      steps: [
+        ...tailSteps(spec, rates),
+        ...(['fascia', 'barge'] as const).flatMap((role) => steps.cutAndStand('tails', role)),
+      ],
+    },
   ]
   return packages.filter((p) => p.steps.length > 0)
 }

@@ -8,6 +8,7 @@ export const packageKeys = [
   'hips',
   'remaining-commons',
   'creepers',
+  'purlins',
   'tails',
 ] as const
 export type PackageKey = (typeof packageKeys)[number]

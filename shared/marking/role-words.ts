@@ -11,6 +11,10 @@ export const roleWords: Record<MemberRole, string> = {
   creeper: 'Creeper',
   'valley-creeper': 'Valley creeper',
   'cripple-creeper': 'Cripple creeper',
+  underpurlin: 'Underpurlin',
+  'collar-tie': 'Collar tie',
+  fascia: 'Fascia',
+  barge: 'Barge',
 }
 
 /** `140 × 45`: depth by thickness, as merchants say it. */

@@ -18,6 +18,10 @@ const roleNames = [
   'creeper',
   'valley-creeper',
   'cripple-creeper',
+  'underpurlin',
+  'collar-tie',
+  'fascia',
+  'barge',
 ] as const
 const role = z.enum(roleNames)
 
@@ -32,7 +36,16 @@ export const roofSchema = z.object({
   plateWidthMm: z.number(),
   maxSpacingMm: z.number(),
   spacing: z.enum(['even', 'full']),
-  sections: z.object({ rafter: section, hip: section, valley: section, ridge: section }),
+  sections: z.object({
+    rafter: section,
+    hip: section,
+    valley: section,
+    ridge: section,
+    underpurlin: section.optional(),
+    collarTie: section.optional(),
+    fascia: section.optional(),
+    barge: section.optional(),
+  }),
   tail: z.enum(['plumb', 'square']),
   tailAllowanceMm: z.number(),
   hipTop: z.enum(['backed', 'lowered']),

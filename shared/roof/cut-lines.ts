@@ -16,6 +16,10 @@ const letters: Record<MemberRole, string> = {
   creeper: 'CR',
   'valley-creeper': 'VC',
   'cripple-creeper': 'CC',
+  underpurlin: 'UP',
+  'collar-tie': 'CT',
+  fascia: 'F',
+  barge: 'B',
 }
 const roleOrder = Object.keys(letters)
 
