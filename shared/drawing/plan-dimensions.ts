@@ -1,9 +1,10 @@
 import { formatLength, type LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint, Segment, TurnedBox } from './drawing-geometry.ts'
-import { boxesOverlap, pointAlong, segmentLength, uprightAngleDeg } from './drawing-geometry.ts'
-import { edgeOutward, edgeOverhangMm } from './overhang-outline.ts'
+import { pointAlong, segmentLength } from './drawing-geometry.ts'
+import { drawingPaper } from './drawing-paper.ts'
+import { edgeOutward, edgeOverhangMm, overhangOutline } from './overhang-outline.ts'
+import { type DimensionLabel, dimensionLabel } from './plan-dimension-labels.ts'
 import type { DrawableRoof, PlanView } from './plan-view.ts'
-import { textWidthPx } from './text-size.ts'
 
 export type PlanDimension = {
   /** Index of the plate edge. */
@@ -11,7 +12,8 @@ export type PlanDimension = {
   lengthMm: number
   line: Segment
   ticks: Segment[]
-  label: (TurnedBox & { text: string; sizePx: number }) | null
+  /** Null only where a drawing is too small for it; drawn larger it shows. */
+  label: DimensionLabel | null
 }
 
 export type PlanCorner = { corner: number; at: DrawingPoint; radiusPx: number }
@@ -20,14 +22,11 @@ export type PlanScaleBar = { segment: Segment; lengthMm: number; text: string }
 
 export const dimensionOffsetPx = 16
 const tickPx = 5
-const labelSizePx = 12
 const cornerRadiusPx = 9
-/** Beside its line, or one row further out where that is taken. */
-const labelOffsetsPx = [9, 23]
 
 /**
  * A dimension along every plate, outside the eaves. With corner numbers each says which edge it is.
- * The fullest wording that stands clear of the other words and the corners is taken.
+ * Long sides are written first; a short one has more places to go.
  */
 export function planDimensions(
   roof: DrawableRoof,
@@ -35,19 +34,29 @@ export function planDimensions(
   corners: readonly PlanCorner[],
   units: LengthUnits,
 ): PlanDimension[] {
-  const taken: TurnedBox[] = corners.map(cornerBox)
-  return [...roof.outline.keys()].map((i) => {
+  const paper = drawingPaper(view)
+  for (const corner of corners) paper.addWord({ ...cornerBox(corner), leader: null })
+  for (const side of closedSides(overhangOutline(roof).map(view.place)))
+    paper.addLine(side, 'tails')
+  const dimensions = [...roof.outline.keys()].map((i): PlanDimension => {
     const line = dimensionLine(roof, view, i)
-    const edge = roof.indexes[i] ?? i
+    paper.addLine(line, `${i}`)
     const lengthMm = segmentLength(line) / view.pxPerMm
-    const boxes = edgeTexts(edge, formatLength(lengthMm, units), corners.length > 0).flatMap(
-      (text) =>
-        labelOffsetsPx.map((offPx) => dimensionLabel(line, text, outwardOf(roof, i), offPx)),
-    )
-    const label = boxes.find((box) => !taken.some((other) => boxesOverlap(box, other))) ?? null
-    if (label) taken.push(label)
-    return { edge, lengthMm, line, ticks: slashTicks(line), label }
+    return { edge: roof.indexes[i] ?? i, lengthMm, line, ticks: slashTicks(line), label: null }
   })
+  const longFirst = [...dimensions.keys()].sort(
+    (a, b) => (dimensions[b]?.lengthMm ?? 0) - (dimensions[a]?.lengthMm ?? 0),
+  )
+  for (const i of longFirst) {
+    const dimension = dimensions[i]
+    if (!dimension) continue
+    const { edge, lengthMm, line } = dimension
+    const texts = edgeTexts(edge, formatLength(lengthMm, units), corners.length > 0)
+    const words = { owner: `${i}`, line, outward: outwardOf(roof, i), texts }
+    dimension.label = dimensionLabel(words, paper)
+    if (dimension.label) paper.addWord(dimension.label)
+  }
+  return dimensions
 }
 
 export function cornerBox(corner: PlanCorner): TurnedBox {
@@ -55,15 +64,19 @@ export function cornerBox(corner: PlanCorner): TurnedBox {
   return { centre: corner.at, widthPx: sidePx, heightPx: sidePx, angleDeg: 0 }
 }
 
-/** Corner numbers outside the corners, clear of the dimensions. */
+/** Corner numbers outside the corners, clear of the dimensions; in an inward corner close to it. */
 export function planCorners(roof: DrawableRoof, view: PlanView): PlanCorner[] {
   const count = roof.outline.length
   return roof.outline.map((corner, i) => {
-    const before = outwardOf(roof, (i + count - 1) % count)
+    const previous = (i + count - 1) % count
+    const before = outwardOf(roof, previous)
     const after = outwardOf(roof, i)
     const sum = { x: before.x + after.x, y: before.y + after.y }
     const length = Math.hypot(sum.x, sum.y) || 1
-    const reachPx = Math.max(offsetPx(roof, view, i), offsetPx(roof, view, (i + count - 1) % count))
+    const widestPx = (px: (edge: number) => number) => Math.max(px(i), px(previous))
+    const reachPx = isInward(before, after)
+      ? widestPx((edge) => overhangPx(roof, view, edge)) * (2 / length)
+      : widestPx((edge) => offsetPx(roof, view, edge))
     const at = view.place(corner)
     return {
       corner: roof.indexes[i] ?? i,
@@ -74,6 +87,11 @@ export function planCorners(roof: DrawableRoof, view: PlanView): PlanCorner[] {
       radiusPx: cornerRadiusPx,
     }
   })
+}
+
+/** Whether the outline turns into the roof between two edges; outward normals, y down. */
+function isInward(before: DrawingPoint, after: DrawingPoint): boolean {
+  return before.x * after.y - before.y * after.x > 1e-6
 }
 
 /** One, two or five metres (or tens), whichever comes nearest to a thumb's width. */
@@ -101,8 +119,47 @@ function dimensionLine(roof: DrawableRoof, view: PlanView, i: number): Segment {
   return { from: moved(i), to: moved(i + 1) }
 }
 
+/** Clear of the tails; where two wings stand close together, no further than half way between. */
 function offsetPx(roof: DrawableRoof, view: PlanView, i: number): number {
-  return edgeOverhangMm(roof.edges[i]) * view.pxPerMm + dimensionOffsetPx
+  return Math.min(overhangPx(roof, view, i) + dimensionOffsetPx, freePx(roof, view, i) / 2)
+}
+
+function overhangPx(roof: DrawableRoof, view: PlanView, i: number): number {
+  return edgeOverhangMm(roof.edges[i]) * view.pxPerMm
+}
+
+/** How far it is outward from the middle of a plate to the next one, square to it. */
+function freePx(roof: DrawableRoof, view: PlanView, i: number): number {
+  const sides = closedSides(roof.outline.map(view.place))
+  const own = sides[i]
+  if (!own) return Infinity
+  const outward = outwardOf(roof, i)
+  const middle = pointAlong(own, 0.5)
+  const farPx = view.widthPx + view.heightPx
+  const ray = {
+    from: { x: middle.x + outward.x, y: middle.y + outward.y },
+    to: { x: middle.x + outward.x * farPx, y: middle.y + outward.y * farPx },
+  }
+  const hits = sides.flatMap((side) => {
+    const share = crossingShare(ray, side)
+    return share === null ? [] : [share * farPx]
+  })
+  return Math.min(Infinity, ...hits)
+}
+
+function crossingShare(ray: Segment, side: Segment): number | null {
+  const way = { x: ray.to.x - ray.from.x, y: ray.to.y - ray.from.y }
+  const along = { x: side.to.x - side.from.x, y: side.to.y - side.from.y }
+  const sine = way.x * along.y - way.y * along.x
+  if (Math.abs(sine) < 1e-9) return null
+  const off = { x: side.from.x - ray.from.x, y: side.from.y - ray.from.y }
+  const share = (off.x * along.y - off.y * along.x) / sine
+  const onSide = (off.x * way.y - off.y * way.x) / sine
+  return share > 0 && onSide >= 0 && onSide <= 1 ? share : null
+}
+
+function closedSides(corners: readonly DrawingPoint[]): Segment[] {
+  return corners.map((from, i) => ({ from, to: corners[(i + 1) % corners.length] ?? from }))
 }
 
 /** Outward in drawing coordinates, y down. */
@@ -114,18 +171,6 @@ function outwardOf(roof: DrawableRoof, i: number): DrawingPoint {
 function edgeTexts(edge: number, length: string, numbered: boolean): string[] {
   if (!numbered) return [length]
   return [`Edge ${edge + 1} · ${length}`, `${edge + 1} · ${length}`]
-}
-
-function dimensionLabel(line: Segment, text: string, outward: DrawingPoint, offPx: number) {
-  const middle = pointAlong(line, 0.5)
-  return {
-    text,
-    sizePx: labelSizePx,
-    centre: { x: middle.x + outward.x * offPx, y: middle.y + outward.y * offPx },
-    widthPx: textWidthPx(text, labelSizePx) + 4,
-    heightPx: labelSizePx + 2,
-    angleDeg: uprightAngleDeg(line),
-  }
 }
 
 /** A builder's slash at each end, turned 45° from the line. */

@@ -41,7 +41,6 @@ export type PlanDrawing = {
   problemsElsewhere: RoofProblem[]
 }
 
-const markSizePx = 12
 const marginPx = { read: 40, edit: 46 }
 const problemReachPx = 24
 
@@ -59,7 +58,8 @@ export function planDrawing(
   const corners = options.mode === 'edit' ? planCorners(drawable, view) : []
   const dimensions = planDimensions(drawable, view, corners, options.units)
   const marks = placePlanLabels(members, spec?.cutLines ?? [], {
-    sizePx: markSizePx,
+    widthPx: view.widthPx,
+    heightPx: view.heightPx,
     firstMarks: options.firstMarks,
     taken: takenBoxes(dimensions, corners, problems.drawn),
   })

@@ -1,19 +1,28 @@
 import type { CutLine } from '../roof/roof-types.ts'
 import type { Segment, TurnedBox } from './drawing-geometry.ts'
+import { segmentLength } from './drawing-geometry.ts'
+import { drawingPaper, type DrawingPaper } from './drawing-paper.ts'
 import {
-  boxesOverlap,
-  pointAlong,
-  segmentCrossesBox,
-  segmentLength,
-  uprightAngleDeg,
-} from './drawing-geometry.ts'
+  type LabelPlace,
+  liesAcross,
+  markBox,
+  placesAlong,
+  placesBeside,
+  standsInRow,
+} from './plan-label-places.ts'
 import type { PlanMember } from './plan-members.ts'
-import { textWidthPx } from './text-size.ts'
 
-export type PlanLabel = TurnedBox & { mark: string; text: string; sizePx: number }
+/** A mark on the plan; the fine line leads to its timber where it stands beside it. */
+export type PlanLabel = TurnedBox & {
+  mark: string
+  text: string
+  sizePx: number
+  leader: Segment | null
+}
 
 export type PlanLabelOptions = {
-  sizePx: number
+  widthPx: number
+  heightPx: number
   /** Marks placed first and never left out while there is any room at all. */
   firstMarks: ReadonlySet<string>
   /** Where nothing may be written: problem markers, dimensions. */
@@ -22,14 +31,32 @@ export type PlanLabelOptions = {
 
 export type PlanLabels = { labels: PlanLabel[]; hiddenMarks: string[] }
 
-const paddingPx = 3
-const stepPx = 5
-const lineClearancePx = 1
+const sizePx = 12
+const smallSizePx = 10
+/** Rafters nearer than this leave no room for words between them; a larger drawing does. */
+const leastBayPx = 8
+
+type Way = {
+  sizePx: number
+  places: (member: PlanMember, box: TurnedBox) => Iterable<LabelPlace>
+  mayCross: boolean
+}
+
+const along: Way = { sizePx, places: placesAlong, mayCross: false }
+const alongSmall: Way = { sizePx: smallSizePx, places: placesAlong, mayCross: false }
+const acrossOthers: Way = { sizePx, places: placesAlong, mayCross: true }
+const beside: Way = { sizePx: smallSizePx, places: placesBeside, mayCross: false }
+const inTheMiddle: Way = {
+  sizePx,
+  places: (_, box) => [{ ...box, leader: null }],
+  mayCross: true,
+}
 
 /**
- * Marks written along their timbers: upright, in rows beside the plates, never over one another.
- * Where a drawing is too dense for the full mark its cut line's mark stands in, then nothing: picking
- * the timber or drawing larger shows it. Each cut line keeps at least one mark where there is room.
+ * Marks written along their timbers: upright, in rows beside the plates, never over one another. Where
+ * a drawing is too dense for that they are written smaller, then beside the timber with a fine line to
+ * it; then the cut line's mark stands in; then nothing: picking the timber or drawing larger shows it.
+ * Each cut line keeps at least one mark where there is room.
  */
 export function placePlanLabels(
   members: readonly PlanMember[],
@@ -37,30 +64,39 @@ export function placePlanLabels(
   options: PlanLabelOptions,
 ): PlanLabels {
   const lineMarkOf = new Map(cutLines.flatMap((l) => l.members.map((mark) => [mark, l.mark])))
-  const placed: PlanLabel[] = []
-  const written = new Set<string>()
-  const write = (member: PlanMember, text: string, mayCross: boolean) => {
-    const label = roomFor(member, text, members, placed, options, mayCross)
+  const paper = drawingPaper(options)
+  for (const box of options.taken) paper.addWord({ ...box, leader: null })
+  for (const member of members) paper.addLine(member.centre, member.mark)
+  const labels = new Map<string, PlanLabel>()
+  const write = (member: PlanMember, text: string, way: Way) => {
+    if (labels.has(member.mark)) return
+    const label = roomFor(member, text, paper, way)
     if (!label) return
-    placed.push(label)
-    written.add(member.mark)
+    paper.addWord(label)
+    labels.set(member.mark, label)
   }
   const ordered = inWritingOrder(members, options.firstMarks)
   const isFirst = (member: PlanMember) => options.firstMarks.has(member.mark)
-  for (const member of ordered) write(member, member.mark, isFirst(member))
+  for (const member of ordered) {
+    write(member, member.mark, along)
+    if (isFirst(member) || liesAcross(member)) write(member, member.mark, acrossOthers)
+    if (isFirst(member)) write(member, member.mark, inTheMiddle)
+  }
+  for (const member of ordered) write(member, member.mark, alongSmall)
+  if (bayPx(members) >= leastBayPx) for (const member of ordered) write(member, member.mark, beside)
   for (const member of ordered) {
     const lineMark = lineMarkOf.get(member.mark)
-    if (lineMark && lineMark !== member.mark && !written.has(member.mark))
-      write(member, lineMark, false)
+    if (lineMark && lineMark !== member.mark) write(member, lineMark, alongSmall)
   }
   for (const line of cutLines) {
-    if (line.members.some((mark) => written.has(mark))) continue
+    if (line.members.some((mark) => labels.has(mark))) continue
     const longest = ordered.find((member) => line.members.includes(member.mark))
-    if (longest) write(longest, line.mark, true)
+    if (longest) write(longest, line.mark, acrossOthers)
+    if (longest) write(longest, line.mark, inTheMiddle)
   }
   return {
-    labels: placed,
-    hiddenMarks: members.map((m) => m.mark).filter((mark) => !written.has(mark)),
+    labels: [...labels.values()],
+    hiddenMarks: members.map((m) => m.mark).filter((mark) => !labels.has(mark)),
   }
 }
 
@@ -70,73 +106,39 @@ function inWritingOrder(
   firstMarks: ReadonlySet<string>,
 ): PlanMember[] {
   const rank = (member: PlanMember) =>
-    firstMarks.has(member.mark) ? 0 : isRafterRow(member) ? 2 : 1
+    firstMarks.has(member.mark) ? 0 : standsInRow(member) ? 2 : 1
   return [...members].sort(
     (a, b) => rank(a) - rank(b) || segmentLength(b.centre) - segmentLength(a.centre),
   )
 }
 
-function isRafterRow(member: PlanMember): boolean {
-  return ['common', 'crown-end', 'creeper'].includes(member.role)
-}
-
 function roomFor(
   member: PlanMember,
   text: string,
-  members: readonly PlanMember[],
-  placed: readonly PlanLabel[],
-  options: PlanLabelOptions,
-  mayCross: boolean,
+  paper: DrawingPaper,
+  way: Way,
 ): PlanLabel | null {
-  const widthPx = textWidthPx(text, options.sizePx) + 2 * paddingPx
-  const label = (centre: { x: number; y: number }): PlanLabel => ({
-    mark: member.mark,
-    text,
-    sizePx: options.sizePx,
-    centre,
-    widthPx,
-    heightPx: options.sizePx + 2,
-    angleDeg: uprightAngleDeg(member.centre),
+  const box = markBox(member, text, way.sizePx)
+  let firstFree: LabelPlace | null = null
+  for (const place of way.places(member, box)) {
+    if (!paper.hasRoom(place)) continue
+    // Beside its timber a mark keeps off that too; along it, it stands on it.
+    if (!paper.isCrossed(place, place.leader ? '' : member.mark)) {
+      firstFree = place
+      break
+    }
+    if (way.mayCross) firstFree ??= place
+  }
+  return firstFree ? { ...firstFree, mark: member.mark, text, sizePx: way.sizePx } : null
+}
+
+/** The usual distance of two rafters side by side; how dense the drawing is. */
+function bayPx(members: readonly PlanMember[]): number {
+  const rows = members.filter(standsInRow)
+  const gaps = rows.slice(1).flatMap((member, i) => {
+    const before = rows[i]
+    if (!before || before.role !== member.role) return []
+    return [Math.hypot(member.heel.x - before.heel.x, member.heel.y - before.heel.y)]
   })
-  const along = placesAlong(member, widthPx)
-  const places = along.length > 0 || !mayCross ? along : [pointAlong(member.centre, 0.5)]
-  const isTaken = (box: TurnedBox) =>
-    placed.some((other) => boxesOverlap(box, other)) ||
-    options.taken.some((other) => boxesOverlap(box, other))
-  let firstFree: PlanLabel | null = null
-  for (const place of places) {
-    const box = label(place)
-    if (isTaken(box)) continue
-    if (!crossesAnother(box, member, members)) return box
-    firstFree ??= box
-  }
-  return mayCross ? firstFree : null
-}
-
-function crossesAnother(box: TurnedBox, own: PlanMember, members: readonly PlanMember[]): boolean {
-  const inner = {
-    ...box,
-    widthPx: box.widthPx - 2 * lineClearancePx,
-    heightPx: box.heightPx - 2 * lineClearancePx,
-  }
-  return members.some((other) => other.mark !== own.mark && segmentCrossesBox(other.centre, inner))
-}
-
-/** Rafters from the plate up, so that marks stand in rows; other timbers from the middle out. */
-function placesAlong(member: PlanMember, widthPx: number): { x: number; y: number }[] {
-  const lengthPx = segmentLength(member.centre)
-  if (lengthPx < widthPx) return []
-  const start = widthPx / 2
-  const end = lengthPx - widthPx / 2
-  const places: number[] = []
-  if (isRafterRow(member)) {
-    const tail: Segment = { from: member.centre.from, to: member.heel }
-    const fromPlate = Math.min(Math.max(segmentLength(tail) + start, start), end)
-    for (let at = fromPlate; at <= end; at += stepPx) places.push(at)
-    for (let at = fromPlate - stepPx; at >= start; at -= stepPx) places.push(at)
-  } else {
-    const middle = lengthPx / 2
-    for (let off = 0; middle - off >= start; off += stepPx) places.push(middle + off, middle - off)
-  }
-  return places.map((at) => pointAlong(member.centre, at / lengthPx))
+  return gaps.sort((a, b) => a - b)[Math.floor(gaps.length / 2)] ?? Infinity
 }
