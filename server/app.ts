@@ -20,6 +20,7 @@ import { errorHandler } from './http/error-handler.ts'
 import { requestId, requestIdOf } from './http/request-id.ts'
 import { refuseCrossSiteWrites, refuseOtherBodies } from './http/same-origin.ts'
 import { jobRoutes } from './jobs/job-routes.ts'
+import type { Framer } from './revisions/framer.ts'
 import { revisionRoutes } from './revisions/revision-routes.ts'
 import { createRevisionService } from './revisions/revision-service.ts'
 import type { Clock } from './lib/clock.ts'
@@ -31,6 +32,7 @@ export type AppDeps = {
   db: Db
   clock: Clock
   events: EventHub
+  framer: Framer
   log: Logger
   sessionStore: Store
   /** Serves the screens: built files, or the hot-reloading middleware of `npm run dev`. */
@@ -90,7 +92,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
   messageRoutes(api, deps)
-  revisionRoutes(api, createRevisionService({ db, clock, events: deps.events, takeRevision }))
+  revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
   jobRoutes(api, { db, clock, events: deps.events })
   peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })

@@ -18,6 +18,7 @@ import { builtScreens } from './http/screens.ts'
 import { systemClock } from './lib/clock.ts'
 import { createMailWorker } from './mail/mail-worker.ts'
 import { createMailTransport } from './mail/transport.ts'
+import { createFramer } from './revisions/framer.ts'
 
 const projectDir = path.join(path.dirname(fileURLToPath(import.meta.url)), '..')
 
@@ -56,12 +57,14 @@ async function main(): Promise<void> {
   const SqliteStore = connectSqlite3(session)
   const sessionStore = new SqliteStore({ dir: env.dataDir, db: 'sessions.db' })
   const events = createEventHub()
+  const framer = createFramer()
   const { app } = buildApp(
     {
       env,
       db: database.db,
       clock: systemClock,
       events,
+      framer,
       log,
       sessionStore,
       screens: hot ? await hotScreens() : builtScreens(path.join(projectDir, 'dist')),
@@ -82,14 +85,15 @@ async function main(): Promise<void> {
   server.listen(env.port, env.host, () => {
     dayTurn.start()
     mailWorker.start()
+    framer.warm()
     console.log(`Ridgehand is at ${address(env)}`)
     if (hasDemo(database.db)) console.log(demoSignIns())
   })
   const stop = () => {
     dayTurn.stop()
-    const mailDone = mailWorker.stop()
+    const othersDone = Promise.allSettled([mailWorker.stop(), framer.close()])
     server.close(() => {
-      void mailDone.finally(() => {
+      void othersDone.finally(() => {
         database.close()
         process.exit(0)
       })

@@ -29,10 +29,10 @@ export function revisionRoutes(api: Api, revisions: RevisionService): void {
     send(res, savedDraftSchema, revisions.saveDraft(currentUser(res), jobId, input))
   })
 
-  api.route('post', '/api/jobs/:jobId/revisions', 'roof:write', (req, res) => {
+  api.route('post', '/api/jobs/:jobId/revisions', 'roof:write', async (req, res) => {
     const jobId = jobIdOf(req)
     const { version } = parseInput(issueRevisionSchema, req.body)
-    const answer = revisions.issue(currentUser(res), jobId, version)
+    const answer = await revisions.issue(currentUser(res), jobId, version)
     send(res, issuedSchema, answer, answer.issued ? 201 : 200)
   })
 

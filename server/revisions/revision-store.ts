@@ -5,12 +5,15 @@ import type { DbOrTx } from '../db/client.ts'
 import { jobs, plateChecks, roofDrafts, roofRevisions } from '../db/tables/job-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
 
-export type RevisionRow = typeof roofRevisions.$inferSelect
-
-/** The newest issued roof of a job; undefined before the first. */
-export function latestRevision(db: DbOrTx, jobId: string): RevisionRow | undefined {
+/** The newest issued roof of a job, without the roof itself; undefined before the first. */
+export function latestIssue(db: DbOrTx, jobId: string) {
   return db
-    .select()
+    .select({
+      id: roofRevisions.id,
+      sequence: roofRevisions.sequence,
+      letter: roofRevisions.letter,
+      inputHash: roofRevisions.inputHash,
+    })
     .from(roofRevisions)
     .where(eq(roofRevisions.jobId, jobId))
     .orderBy(desc(roofRevisions.sequence))

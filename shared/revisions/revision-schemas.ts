@@ -52,6 +52,8 @@ export const issuedSchema = z.object({
   /** False: the roof is the same as the revision named, so none was made. */
   issued: z.boolean(),
   revision: revisionSummarySchema,
+  /** Pieces cut already that the new roof has no place for, with the letter they were cut to. */
+  cutButUnused: z.array(z.object({ letter: z.string(), marks: z.array(z.string()) })),
 })
 export type Issued = z.infer<typeof issuedSchema>
 

@@ -11,6 +11,8 @@ import { readEnv } from '../../server/env.ts'
 import { createEventHub } from '../../server/events/event-hub.ts'
 import { readFirm } from '../../server/firm/firm-store.ts'
 import { newId } from '../../server/lib/ids.ts'
+import type { Framer } from '../../server/revisions/framer.ts'
+import { prepareRevision } from '../../server/revisions/prepare-revision.ts'
 
 export const testPassword = 'plumb bob and string line'
 let testHash: Promise<string> | null = null
@@ -21,9 +23,16 @@ export const testNow = new Date('2026-12-02T00:00:00Z')
 export type TestApp = Awaited<ReturnType<typeof createTestApp>>
 export type Agent = ReturnType<typeof request.agent>
 
+/** Frames in the test's own thread; `framing.test.ts` has the threads of the real one. */
+const framerAtHand: Framer = {
+  prepare: (question) => Promise.resolve().then(() => prepareRevision(question)),
+  warm: () => undefined,
+  close: () => Promise.resolve(),
+}
+
 /** A whole server on a fresh in-memory database, its clock in the test's hand. */
 export async function createTestApp(
-  options: { now?: Date; env?: Record<string, string>; log?: Logger } = {},
+  options: { now?: Date; env?: Record<string, string>; log?: Logger; framer?: Framer } = {},
 ) {
   const database = openDatabase(':memory:')
   migrateDatabase(database)
@@ -36,6 +45,7 @@ export async function createTestApp(
     db: database.db,
     clock,
     events,
+    framer: options.framer ?? framerAtHand,
     log: options.log ?? pino({ level: 'silent' }),
     sessionStore: new session.MemoryStore(),
     screens: [],

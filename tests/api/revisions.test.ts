@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { desc, eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
 import { audit } from '../../server/db/tables/audit-tables.ts'
 import { bookingDays, bookings } from '../../server/db/tables/booking-tables.ts'
@@ -6,7 +6,6 @@ import { firm } from '../../server/db/tables/firm-tables.ts'
 import { jobs, plateChecks, roofDrafts, roofRevisions } from '../../server/db/tables/job-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { createRevisionService } from '../../server/revisions/revision-service.ts'
-import { latestRevision } from '../../server/revisions/revision-store.ts'
 import { coveringOf } from '../../shared/revisions/coverings.ts'
 import { withText } from '../../shared/revisions/form-paths.ts'
 import { formOfShape, type RoofForm } from '../../shared/revisions/roof-form.ts'
@@ -23,6 +22,14 @@ function addJob(app: TestApp, number = 'QR-1'): string {
     .run()
   return id
 }
+
+const latestRevision = (app: TestApp, jobId: string) =>
+  app.db
+    .select()
+    .from(roofRevisions)
+    .where(eq(roofRevisions.jobId, jobId))
+    .orderBy(desc(roofRevisions.sequence))
+    .get()
 
 /** Puts a crew on a job for one day, firm. */
 function book(app: TestApp, jobId: string, crewId: string, day: string): void {
@@ -111,7 +118,7 @@ test('the office issues A, changes the pitch and issues B; A never changes', asy
   const rows = app.db.select().from(roofRevisions).orderBy(roofRevisions.sequence).all()
   expect(rows[0]).toEqual(before[0])
   expect(rows.map((row) => row.letter)).toEqual(['A', 'B'])
-  expect(latestRevision(app.db, jobId)?.letter).toBe('B')
+  expect(latestRevision(app, jobId)?.letter).toBe('B')
   expect(heard).toEqual(['roof', 'roof'])
   const { body } = await office.get(`/api/jobs/${jobId}/roof`).expect(200)
   expect(body.revisions.map((one: { letter: string }) => one.letter)).toEqual(['B', 'A'])
@@ -121,7 +128,7 @@ test('the office issues A, changes the pitch and issues B; A never changes', asy
 test('an issued revision holds the frame of just that roof and those settings', async () => {
   const { app, office, jobId } = await officeApp()
   await issue(office, jobId, await save(office, jobId, typedForm(), 0)).expect(201)
-  const row = latestRevision(app.db, jobId)!
+  const row = latestRevision(app, jobId)!
   expect(row.spec).toEqual(JSON.parse(JSON.stringify(frameRoof(row.roof, row.settings))))
   const { body } = await office.get(`/api/jobs/${jobId}/revisions/A`).expect(200)
   expect(body.spec).toEqual(row.spec)
@@ -185,7 +192,7 @@ test('when the booked days cannot take the revision, none is issued', async () =
     },
   })
   const user = { ...person, role: 'office' as const }
-  expect(() => service.issue(user, jobId, version)).toThrow('no day takes it')
+  await expect(service.issue(user, jobId, version)).rejects.toThrow('no day takes it')
   expect(app.db.select().from(roofRevisions).all()).toEqual([])
   expect(app.db.select().from(audit).where(eq(audit.action, 'roof issued')).all()).toEqual([])
 })
@@ -200,7 +207,7 @@ test('plates count as measured from the first check that stands against the revi
     .values({
       id: newId(),
       jobId,
-      revisionId: latestRevision(app.db, jobId)!.id,
+      revisionId: latestRevision(app, jobId)!.id,
       sidesMm: [9000, 6000, 9000, 6000],
       diagonals: [],
       takenById: person.id,

@@ -11,7 +11,8 @@ import { createEventHub } from '../../events/event-hub.ts'
 import { readFirm } from '../../firm/firm-store.ts'
 import type { Clock } from '../../lib/clock.ts'
 import { newId } from '../../lib/ids.ts'
-import { createRevisionService } from '../../revisions/revision-service.ts'
+import { issueAtOnce } from '../../revisions/issue-revision.ts'
+import { saveDraft } from '../../revisions/revision-service.ts'
 import type { Db } from '../client.ts'
 import { firm as firmTable } from '../tables/firm-tables.ts'
 import { jobs, plateChecks, roofRevisions } from '../tables/job-tables.ts'
@@ -156,14 +157,13 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
   const past = { current: now, now: () => past.current }
   const events = createEventHub()
   const deps = { db, clock: past, events }
-  const revisions = createRevisionService({ ...deps, takeRevision })
   const bookings = createBookingService({ ...deps, calendar: createCalendarService(deps) })
   for (const job of demoJobs) {
     const jobId = insertJob(db, job, today, now)
     const firstDay = workingDay(db, today, Math.min(job.booking?.fromWorkingDay ?? 0, 0))
     past.current = instantAt(dayPlus(firstDay, -2), '09:00', timeZone)
-    if (job.roof) revisions.saveDraft(office, jobId, { form: demoRoofs[job.roof], version: 0 })
-    if (job.issued) revisions.issue(office, jobId, 1)
+    if (job.roof) saveDraft(deps, office, jobId, { form: demoRoofs[job.roof], version: 0 })
+    if (job.issued) issueAtOnce({ ...deps, takeRevision }, { user: office, jobId, version: 1 })
     if (job.booking) {
       bookings.create(office, {
         clientId: newId(),

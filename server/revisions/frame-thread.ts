@@ -1,0 +1,4 @@
+import { answerQuestions } from '../lib/answer-questions.ts'
+import { prepareRevision } from './prepare-revision.ts'
+
+answerQuestions(prepareRevision)
