@@ -51,6 +51,7 @@ export const roofSchema = z.object({
   hipTop: z.enum(['backed', 'lowered']),
   valleyTop: z.enum(['square', 'dished']),
   standMm: z.number().optional(),
+  collarTieHeightMm: z.number().optional(),
 }) satisfies z.ZodType<Roof>
 
 export const roofSettingsSchema = z.object({
@@ -62,6 +63,8 @@ export const roofSettingsSchema = z.object({
   roundDeg: z.number(),
   maxRafterSpanMm: z.number(),
   covering: z.object({ name: z.string(), minPitchDeg: z.number() }).nullable(),
+  collarTieSpacingMm: z.number().optional(),
+  battenGaugeMm: z.number().optional(),
 }) satisfies z.ZodType<RoofSettings>
 
 const cut = z.object({
@@ -94,6 +97,7 @@ const birdsmouth = z.object({
 const member = z.object({
   mark: z.string(),
   role,
+  topInSlope: z.boolean().optional(),
   hand: hand.nullable(),
   section,
   axis: z.object({ from: point3, to: point3 }),
@@ -136,6 +140,7 @@ const cautionCodes = [
   'crown-bevel-shortcut',
   'rafter-span-long',
   'joint-open',
+  'collar-tie-moved',
 ] as const
 
 export const frameSpecSchema = z.object({
@@ -174,6 +179,19 @@ export const frameSpecSchema = z.object({
     bySection: z.array(
       z.object({ section, pieces: z.number(), lengthMm: z.number(), weightKg: z.number() }),
     ),
+    covering: z
+      .object({
+        coveringAreaM2: z.number(),
+        underlayAreaM2: z.number(),
+        battenMm: z.number().nullable(),
+        ridgeCappingMm: z.number(),
+        hipCappingMm: z.number(),
+        valleyLiningMm: z.number(),
+        gutterMm: z.number(),
+        fasciaMm: z.number(),
+        bargeMm: z.number(),
+      })
+      .optional(),
   }),
   cautions: z.array(
     z.object({
@@ -181,6 +199,9 @@ export const frameSpecSchema = z.object({
       members: z.array(z.string()),
       text: z.string(),
       remedy: z.string(),
+      answers: z
+        .array(z.object({ path: z.string(), value: z.number(), unit: z.enum(['mm', 'deg']) }))
+        .optional(),
     }),
   ),
   planing: z.array(

@@ -12,24 +12,28 @@ import {
 import type { Angle, Point3 } from './roof-types.ts'
 
 /**
- * A timber as the saw sees it: a straight piece with plumb side faces. `direction` runs along the top
- * edge from foot to head, `left` is level and square to it, `up` square to both, all of length 1.
+ * A timber as the saw sees it: a straight piece. `direction` runs along the top edge from foot to head,
+ * `left` and `up` are square to it and to each other, all of length 1. Of most timbers the side faces
+ * are plumb (`left` level, `down` plumb, so not square to `direction`); of those that lie with their top
+ * in a slope `down` is square to the top.
  */
 export type Timber = {
   origin: Point3
   direction: Point3
   left: Point3
   up: Point3
+  /** How depths under the top are measured: plumb, or square to the top of a timber that lies in a slope. */
+  down: Point3
   halfMm: number
   depthMm: number
-  /** Rise per mm of length, for plumb measures. */
+  /** Rise per mm of length, for plumb measures; 0 and 1 where `down` is square to the top. */
   sin: number
   cos: number
   /** How far each top arris lies plumb under the top centre line; 0 for a square top. */
   arrisFall: { left: number; right: number }
 }
 
-/** Where a plane crosses the lines of a timber: mm along = base + perLeft × mm aside + perDown × mm plumb under the top. */
+/** Where a plane crosses the lines of a timber: mm along = base + perLeft × mm aside + perDown × mm down under the top. */
 export type Crossing = { baseMm: number; perLeft: number; perDown: number }
 
 /** What a plane does to a timber: where it crosses it and at which angles it is marked and sawn. */
@@ -56,7 +60,7 @@ export const bothWays = (fromEdgeDeg: number): Angle => ({
   fromSquareDeg: 90 - fromEdgeDeg,
 })
 
-/** A point of the timber: `alongMm` up its edge, `leftMm` aside, `downMm` plumb under the top centre line. */
+/** A point of the timber: `alongMm` up its edge, `leftMm` aside, `downMm` under the top centre line. */
 export const timberPoint = (
   timber: Timber,
   alongMm: number,
@@ -65,7 +69,7 @@ export const timberPoint = (
 ): Point3 =>
   along3(
     along3(along3(timber.origin, timber.direction, alongMm), timber.left, leftMm),
-    { x: 0, y: 0, z: -1 },
+    timber.down,
     downMm,
   )
 
@@ -101,7 +105,7 @@ export const crossingOf = (plane: Plane, timber: Timber): Crossing => {
   return {
     baseMm: planeCrossing(plane, timber.origin, timber.direction),
     perLeft: -dot3(plane.normal, timber.left) / facing,
-    perDown: plane.normal.z / facing,
+    perDown: -dot3(plane.normal, timber.down) / facing,
   }
 }
 

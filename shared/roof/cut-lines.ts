@@ -87,6 +87,7 @@ const finished = (draft: DraftMember, markOf: Map<number, string>): Member => {
   return {
     mark: mark(draft.piece.id),
     role: draft.role,
+    ...(draft.topInSlope === true ? { topInSlope: true } : {}),
     hand: draft.hand,
     section: draft.section,
     axis: draft.axis,

@@ -29,6 +29,7 @@ export const timberOf = (piece: Piece, standMm: number): Timber => {
     direction: { x: dir.x * cos, y: dir.y * cos, z: sin },
     left: { ...piece.left, z: 0 },
     up: { x: -dir.x * sin, y: -dir.y * sin, z: cos },
+    down: { x: 0, y: 0, z: -1 },
     halfMm: piece.halfMm,
     depthMm: piece.section.depthMm,
     sin,

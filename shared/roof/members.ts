@@ -11,7 +11,7 @@ import { degrees } from './vector.ts'
 
 /** A member whose mark, and the marks it bears on, are still piece numbers. */
 export type DraftMember = Omit<Member, 'mark' | 'cuts'> & {
-  piece: Piece
+  piece: Pick<Piece, 'id'>
   timber: Timber
   cuts: (DraftCut & { bears: number[] })[]
 }

@@ -42,6 +42,8 @@ export type Roof = {
   valleyTop: 'square' | 'dished'
   /** Height over plate; worked out from the sections when absent. */
   standMm?: number | undefined
+  /** Plumb height of the collar ties' underside over the plate; in the upper third of the rise when absent. */
+  collarTieHeightMm?: number | undefined
 }
 
 /** What a covering usually takes, for a caution only. */
@@ -59,6 +61,10 @@ export type RoofSettings = {
   roundDeg: number
   maxRafterSpanMm: number
   covering: Covering | null
+  /** Collar ties stand no further apart than this; 1200 when absent. */
+  collarTieSpacingMm?: number | undefined
+  /** From batten to batten up the slope; no battens are counted when absent. */
+  battenGaugeMm?: number | undefined
 }
 
 export type MemberRole =
@@ -153,6 +159,8 @@ export type Member = {
   /** Unique, short, painted on the timber. Alike pieces share the mark of their `CutLine`'s stem. */
   mark: string
   role: MemberRole
+  /** Its top lies in the slope `planes[0]`, square to it (underpurlins, canted fascias); else its sides are plumb. */
+  topInSlope?: boolean | undefined
   /** Side of the head's long point, looking from foot to head, top edge up; null when central. */
   hand: 'left' | 'right' | null
   section: Section
@@ -200,6 +208,30 @@ export type RoofTotals = {
   eaveMm: number
   vergeMm: number
   bySection: SectionTotal[]
+  /** What covers and trims the roof; specs of engine version 2 lack it. */
+  covering?: CoveringTotals | undefined
+}
+
+/** Net measures: laps and waste are for the merchant's usual allowance. */
+export type CoveringTotals = {
+  /** On the slopes, out to the tail lines and the verge lines. */
+  coveringAreaM2: number
+  /** The same surface; laps not counted. */
+  underlayAreaM2: number
+  /** Covering area over the batten gauge, slope by slope; null without a gauge. */
+  battenMm: number | null
+  /** Ridges, out to the verge lines. */
+  ridgeCappingMm: number
+  /** Hips and broken hips, hips down to the nearer of the two tail lines. */
+  hipCappingMm: number
+  /** Valleys, down to the further of the two tail lines. */
+  valleyLiningMm: number
+  /** Along the tail lines of all eaves (the fascia's back), corner to corner and out to the verge lines. */
+  gutterMm: number
+  /** Cut lengths of the fascia boards; without boards, as the gutters. */
+  fasciaMm: number
+  /** Cut lengths of the barge boards; without boards, the verges from tail line to apex along the slope. */
+  bargeMm: number
 }
 
 export type CautionCode =
@@ -214,6 +246,10 @@ export type CautionCode =
   | 'crown-bevel-shortcut'
   | 'rafter-span-long'
   | 'joint-open'
+  | 'collar-tie-moved'
+
+/** A value of a field of `Roof` that would answer a caution; which one, or none, is for a person to type. */
+export type CautionAnswer = { path: string; value: number; unit: 'mm' | 'deg' }
 
 export type Caution = {
   code: CautionCode
@@ -221,6 +257,8 @@ export type Caution = {
   text: string
   /** What would answer it; a size is always typed by a person. */
   remedy: string
+  /** The same by field, so that it can stand beside it; least values, not choices. */
+  answers?: CautionAnswer[] | undefined
 }
 
 /** A top corner that stands over a neighbouring slope: plane it off by this much. */
