@@ -100,6 +100,16 @@ export function distanceToSegment(point: DrawingPoint, segment: Segment): number
   return Math.hypot(point.x - foot.x, point.y - foot.y)
 }
 
+/** Whether a point lies within a closed shape, by how often a ray from it crosses the sides. */
+export function isInShape(point: DrawingPoint, shape: readonly DrawingPoint[]): boolean {
+  return shape.reduce((isIn, a, i) => {
+    const b = shape[(i + 1) % shape.length] ?? a
+    if (a.y > point.y === b.y > point.y) return isIn
+    const crossX = a.x + ((b.x - a.x) * (point.y - a.y)) / (b.y - a.y)
+    return crossX > point.x ? !isIn : isIn
+  }, false)
+}
+
 /** `x y` pairs for an SVG `points` attribute. */
 export function svgPoints(points: readonly DrawingPoint[]): string {
   return points.map((p) => `${roundPx(p.x)},${roundPx(p.y)}`).join(' ')

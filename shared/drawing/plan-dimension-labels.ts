@@ -12,6 +12,8 @@ export type DimensionWords = {
   line: Segment
   outward: DrawingPoint
   texts: readonly string[]
+  /** Whether a place is over the roof, where its timbers and their marks stand. */
+  isOverRoof: (box: TurnedBox) => boolean
 }
 
 export const dimensionTextPx = 12
@@ -23,13 +25,14 @@ const aroundTurnsDeg = [0, 30, -30, 60, -60, 85, -85]
 
 /**
  * The first place with room: beside its line, along it, a row or two further out, and level beside it;
- * clear of all other lines if there is such a place, over one of them if not; never over other words.
+ * outside the roof and clear of all other lines if there is such a place, over one of them if not;
+ * never over other words.
  */
 export function dimensionLabel(words: DimensionWords, paper: DrawingPaper): DimensionLabel | null {
   let firstFree: DimensionLabel | null = null
   for (const place of labelPlaces(words)) {
     if (!paper.hasRoom(place)) continue
-    if (!paper.isCrossed(place, words.owner)) return place
+    if (!paper.isCrossed(place, words.owner) && !words.isOverRoof(place)) return place
     firstFree ??= place
   }
   return firstFree
@@ -68,9 +71,17 @@ function besideLine(
   }
 }
 
-/** Level words round the middle of a short dimension. */
-function* levelAround({ line, outward }: DimensionWords, text: string): Generator<DimensionLabel> {
-  const middle = pointAlong(line, 0.5)
+/** Level words round the middle of a short dimension, or round a quarter of it. */
+function* levelAround(words: DimensionWords, text: string): Generator<DimensionLabel> {
+  for (const share of [0.5, 0.25, 0.75]) yield* levelAroundPoint(words, text, share)
+}
+
+function* levelAroundPoint(
+  { line, outward }: DimensionWords,
+  text: string,
+  share: number,
+): Generator<DimensionLabel> {
+  const middle = pointAlong(line, share)
   const outDeg = (Math.atan2(outward.y, outward.x) * 180) / Math.PI
   const widthPx = widthOf(text)
   for (const reachPx of aroundPx)

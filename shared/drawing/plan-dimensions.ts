@@ -1,6 +1,6 @@
 import { formatLength, type LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint, Segment, TurnedBox } from './drawing-geometry.ts'
-import { pointAlong, segmentLength } from './drawing-geometry.ts'
+import { isInShape, pointAlong, segmentLength } from './drawing-geometry.ts'
 import { drawingPaper } from './drawing-paper.ts'
 import { edgeOutward, edgeOverhangMm, overhangOutline } from './overhang-outline.ts'
 import { type DimensionLabel, dimensionLabel } from './plan-dimension-labels.ts'
@@ -36,8 +36,9 @@ export function planDimensions(
 ): PlanDimension[] {
   const paper = drawingPaper(view)
   for (const corner of corners) paper.addWord({ ...cornerBox(corner), leader: null })
-  for (const side of closedSides(overhangOutline(roof).map(view.place)))
-    paper.addLine(side, 'tails')
+  const tails = overhangOutline(roof).map(view.place)
+  for (const side of closedSides(tails)) paper.addLine(side, 'tails')
+  const isOverRoof = (box: TurnedBox) => isInShape(box.centre, tails)
   const dimensions = [...roof.outline.keys()].map((i): PlanDimension => {
     const line = dimensionLine(roof, view, i)
     paper.addLine(line, `${i}`)
@@ -52,7 +53,7 @@ export function planDimensions(
     if (!dimension) continue
     const { edge, lengthMm, line } = dimension
     const texts = edgeTexts(edge, formatLength(lengthMm, units), corners.length > 0)
-    const words = { owner: `${i}`, line, outward: outwardOf(roof, i), texts }
+    const words = { owner: `${i}`, line, outward: outwardOf(roof, i), texts, isOverRoof }
     dimension.label = dimensionLabel(words, paper)
     if (dimension.label) paper.addWord(dimension.label)
   }

@@ -1,11 +1,13 @@
 import type { FrameSpec, LineKind, Roof, RoofProblem } from '../roof/roof-types.ts'
 import type { LengthUnits } from '../units/format-length.ts'
-import type { DrawingPoint, Segment, TurnedBox } from './drawing-geometry.ts'
+import type { DrawingPoint, Segment } from './drawing-geometry.ts'
+import type { PaperWord } from './drawing-paper.ts'
 import { overhangOutline, outlineMovedOut } from './overhang-outline.ts'
 import type { PlanCorner, PlanDimension, PlanScaleBar } from './plan-dimensions.ts'
 import { cornerBox, planCorners, planDimensions, planScaleBar } from './plan-dimensions.ts'
 import type { PlanLabel } from './plan-labels.ts'
 import { placePlanLabels } from './plan-labels.ts'
+import { isOnPlan, type PlanLayer } from './plan-layers.ts'
 import type { PlanMember } from './plan-members.ts'
 import { planMember } from './plan-members.ts'
 import type { PlanProblem } from './plan-problems.ts'
@@ -22,6 +24,8 @@ export type PlanDrawingOptions = {
   problems: readonly RoofProblem[]
   /** Marks that must show where there is any room: the picked one, those due. */
   firstMarks: ReadonlySet<string>
+  /** Put away, but for what is picked or due. */
+  hiddenLayers?: ReadonlySet<PlanLayer>
 }
 
 /** A roof plan as shapes in px of its own width: what a screen or a page draws without thinking. */
@@ -41,6 +45,7 @@ export type PlanDrawing = {
   problemsElsewhere: RoofProblem[]
 }
 
+const noLayers: ReadonlySet<PlanLayer> = new Set()
 const marginPx = { read: 40, edit: 46 }
 const problemReachPx = 24
 
@@ -53,7 +58,9 @@ export function planDrawing(
   const drawable = drawableRoof(roof)
   if (!drawable) return null
   const view = planView(drawable, { ...options, marginPx: marginPx[options.mode] })
-  const members = (spec?.members ?? []).map((member) => planMember(member, view))
+  const members = (spec?.members ?? [])
+    .filter((member) => isOnPlan(member, options.hiddenLayers ?? noLayers, options.firstMarks))
+    .map((member) => planMember(member, view))
   const problems = planProblems(options.problems, drawable, view)
   const corners = options.mode === 'edit' ? planCorners(drawable, view) : []
   const dimensions = planDimensions(drawable, view, corners, options.units)
@@ -101,16 +108,17 @@ function takenBoxes(
   dimensions: readonly PlanDimension[],
   corners: readonly PlanCorner[],
   problems: readonly PlanProblem[],
-): TurnedBox[] {
-  const square = (centre: DrawingPoint, sidePx: number): TurnedBox => ({
+): PaperWord[] {
+  const square = (centre: DrawingPoint, sidePx: number): PaperWord => ({
     centre,
     widthPx: sidePx,
     heightPx: sidePx,
     angleDeg: 0,
+    leader: null,
   })
   return [
     ...dimensions.flatMap((d) => (d.label ? [d.label] : [])),
-    ...corners.map(cornerBox),
+    ...corners.map((corner) => ({ ...cornerBox(corner), leader: null })),
     ...problems.map((p) => square(p.at, problemReachPx)),
   ]
 }

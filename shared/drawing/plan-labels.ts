@@ -1,7 +1,7 @@
 import type { CutLine } from '../roof/roof-types.ts'
 import type { Segment, TurnedBox } from './drawing-geometry.ts'
 import { segmentLength } from './drawing-geometry.ts'
-import { drawingPaper, type DrawingPaper } from './drawing-paper.ts'
+import { drawingPaper, type DrawingPaper, type PaperWord } from './drawing-paper.ts'
 import {
   type LabelPlace,
   liesAcross,
@@ -26,7 +26,7 @@ export type PlanLabelOptions = {
   /** Marks placed first and never left out while there is any room at all. */
   firstMarks: ReadonlySet<string>
   /** Where nothing may be written: problem markers, dimensions. */
-  taken: readonly TurnedBox[]
+  taken: readonly PaperWord[]
 }
 
 export type PlanLabels = { labels: PlanLabel[]; hiddenMarks: string[] }
@@ -65,7 +65,7 @@ export function placePlanLabels(
 ): PlanLabels {
   const lineMarkOf = new Map(cutLines.flatMap((l) => l.members.map((mark) => [mark, l.mark])))
   const paper = drawingPaper(options)
-  for (const box of options.taken) paper.addWord({ ...box, leader: null })
+  for (const word of options.taken) paper.addWord(word)
   for (const member of members) paper.addLine(member.centre, member.mark)
   const labels = new Map<string, PlanLabel>()
   const write = (member: PlanMember, text: string, way: Way) => {

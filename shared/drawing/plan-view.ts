@@ -42,6 +42,12 @@ export function planView(
   }
 }
 
+/** Which point of the plan lies under a point of the drawing. */
+export function roofPointAt(view: PlanView, point: DrawingPoint): Point2 {
+  const origin = view.place({ x: 0, y: 0 })
+  return { x: (point.x - origin.x) / view.pxPerMm, y: (origin.y - point.y) / view.pxPerMm }
+}
+
 /** What can be drawn of an outline while it is being typed, each corner with its own index kept. */
 export type DrawableRoof = Pick<Roof, 'outline' | 'edges'> & { indexes: number[] }
 

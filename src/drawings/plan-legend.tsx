@@ -13,10 +13,12 @@ type Props = {
   /** Null where no day is shown. */
   words: LegendWords | null
   hiddenCount: number
+  /** Draws it as large as all marks need; null where that is no help. */
+  onWriteAll: (() => void) | null
 }
 
 /** The scale, what heavy, dashed and thin lines mean, and whether marks were left out. */
-export function PlanLegend({ scaleBar, words, hiddenCount }: Props) {
+export function PlanLegend({ scaleBar, words, hiddenCount, onWriteAll }: Props) {
   const lengthPx = scaleBar.segment.to.x
   return (
     <div className="flex flex-wrap items-center gap-x-5 gap-y-1 text-sm">
@@ -40,9 +42,19 @@ export function PlanLegend({ scaleBar, words, hiddenCount }: Props) {
           ))
         : null}
       {hiddenCount > 0 ? (
-        <span className="print:hidden">
-          {hiddenCount === 1 ? '1 mark' : `${hiddenCount} marks`} not written: draw it larger or
-          pick the timber.
+        <span className="flex flex-wrap items-center gap-x-2 print:hidden">
+          {hiddenCount === 1 ? '1 mark' : `${hiddenCount} marks`} not written: pick the timber, or
+          {onWriteAll ? (
+            <button
+              type="button"
+              onClick={onWriteAll}
+              className="min-h-11 font-semibold text-chalk underline"
+            >
+              draw it large enough for all
+            </button>
+          ) : (
+            ' draw it larger.'
+          )}
         </span>
       ) : null}
     </div>

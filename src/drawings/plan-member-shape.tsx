@@ -73,6 +73,14 @@ function MemberHalo({ member, isSelected }: { member: PlanMember; isSelected: bo
 }
 
 function MemberBody({ member, state }: { member: PlanMember; state: MemberState }) {
+  // Hidden under the rafters that bear on it: dashed, as a drawing shows what lies below.
+  if (member.role === 'underpurlin')
+    return (
+      <line
+        {...centreProps(member)}
+        className={`${lineClasses[state]} ${state === 'plain' || state === 'rest' ? '[stroke-width:2.5]!' : ''} [stroke-dasharray:9_4]!`}
+      />
+    )
   if (member.thicknessPx < outlineFromPx)
     return <line {...centreProps(member)} className={lineClasses[state]} />
   const stroke = state === 'due' ? 'stroke-clay [stroke-width:1.5]' : lineClasses[state]

@@ -1,4 +1,4 @@
-import { svgPoints } from '../../shared/drawing/drawing-geometry.ts'
+import { type Segment, svgPoints } from '../../shared/drawing/drawing-geometry.ts'
 import type { PlanDimension } from '../../shared/drawing/plan-dimensions.ts'
 import type { PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
 
@@ -72,19 +72,36 @@ export function PlanMeasures({ drawing }: { drawing: PlanDrawing }) {
   )
 }
 
+/** From a word to what it names, with a dot at that end. */
+export function FineLine({ line }: { line: Segment }) {
+  return (
+    <g className="pointer-events-none">
+      <line
+        x1={line.from.x}
+        y1={line.from.y}
+        x2={line.to.x}
+        y2={line.to.y}
+        className="stroke-ink-soft [stroke-width:0.75]"
+      />
+      <circle cx={line.to.x} cy={line.to.y} r={1.75} className="fill-ink-soft stroke-none" />
+    </g>
+  )
+}
+
 function Dimension({ dimension: { line, ticks, label } }: { dimension: PlanDimension }) {
   return (
     <g className="stroke-ink-soft [stroke-width:1]">
       {[line, ...ticks].map((part, i) => (
         <line key={i} x1={part.from.x} y1={part.from.y} x2={part.to.x} y2={part.to.y} />
       ))}
+      {label?.leader ? <FineLine line={label.leader} /> : null}
       {label ? (
         <text
           transform={`translate(${label.centre.x} ${label.centre.y}) rotate(${label.angleDeg})`}
           dy="0.35em"
           textAnchor="middle"
           fontSize={label.sizePx}
-          className="fill-ink stroke-none font-semibold tabular-nums"
+          className="fill-ink stroke-sheet font-semibold tabular-nums [stroke-width:3] [paint-order:stroke] [stroke-linejoin:round]"
         >
           {label.text}
         </text>

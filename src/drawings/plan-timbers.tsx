@@ -2,6 +2,7 @@ import { useRef, useState, type KeyboardEvent, type MouseEvent } from 'react'
 import type { PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
 import type { PlanLabel } from '../../shared/drawing/plan-labels.ts'
 import { planMemberAt, type PlanMember } from '../../shared/drawing/plan-members.ts'
+import { FineLine } from './plan-surround.tsx'
 import { PlanMemberShape, type MemberState } from './plan-member-shape.tsx'
 
 type Props = {
@@ -41,6 +42,7 @@ export function PlanTimbers({ drawing, stateOf, selected, onPick }: Props) {
     if (mark !== null) onPick?.(mark)
   }
   const drawn = [...members].sort((a, b) => order(a, stateOf) - order(b, stateOf))
+  const leaders = drawing.labels.flatMap((label) => (label.leader ? [label.leader] : []))
   return (
     <g ref={groupRef} onClick={onPick ? onClick : undefined} className={onPick && 'cursor-pointer'}>
       {onPick ? <rect width="100%" height="100%" className="fill-transparent" /> : null}
@@ -57,6 +59,9 @@ export function PlanTimbers({ drawing, stateOf, selected, onPick }: Props) {
           onFocus={() => setFocused(member.mark)}
           onBlur={() => setFocused(null)}
         />
+      ))}
+      {leaders.map((leader, i) => (
+        <FineLine key={i} line={leader} />
       ))}
       {drawing.labels.map((label) => (
         <MarkText
@@ -115,8 +120,9 @@ function MarkText({ label, state, isSelected }: MarkTextProps) {
   )
 }
 
+/** Underpurlins lie under the rafters, collar ties and boards over nothing; what is due comes last. */
 function order(member: PlanMember, stateOf: Props['stateOf']): number {
-  return drawingOrder[stateOf(member.mark)]
+  return drawingOrder[stateOf(member.mark)] + (member.role === 'underpurlin' ? -0.5 : 0)
 }
 
 function focusMark(group: SVGGElement | null, mark: string): void {

@@ -1,11 +1,14 @@
-import { useLayoutEffect, useMemo, useState, type RefObject } from 'react'
+import { memo, useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { planDrawing, type PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
+import { type PlanLayer, planLayersIn } from '../../shared/drawing/plan-layers.ts'
 import type { FrameSpec, Roof, RoofProblem } from '../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
+import { PlanLayerKeys } from './plan-layer-keys.tsx'
 import { PlanLegend, type LegendWords } from './plan-legend.tsx'
 import type { MemberState } from './plan-member-shape.tsx'
 import { PlanGround, PlanMeasures, PlanProblems } from './plan-surround.tsx'
 import { PlanTimbers } from './plan-timbers.tsx'
+import { usePlanWindow, useRested } from './use-plan-zoom.ts'
 import { useWidth } from './use-width.ts'
 import { ZoomButtons, zoomSteps } from './zoom-buttons.tsx'
 
@@ -17,7 +20,7 @@ type Props = {
   due?: ReadonlySet<string>
   done?: ReadonlySet<string>
   selected?: string | null
-  problems?: readonly RoofProblem[]
+  problems?: readonly RoofProblem[] | undefined
   units?: LengthUnits
   /** What the drawing is of, for a screen reader. */
   label?: string
@@ -28,48 +31,62 @@ type Props = {
 
 const noMarks: ReadonlySet<string> = new Set()
 const noProblems: readonly RoofProblem[] = []
+const noLayers: ReadonlySet<PlanLayer> = new Set()
 const pageWidthPx = 720
+/** Drawn no larger than this, px a millimetre of roof: a rafter as thick as a thumb's half. */
+const largestScale = 0.2
 const dayWords: LegendWords = { due: 'Due today', done: 'Done', rest: 'The rest' }
 
 /** The roof from above: plates, roof lines, every timber with its mark, and what is due and done. */
 export function RoofPlan(props: Props) {
-  const { roof, spec, mode = 'read', units = 'mm', selected = null, onPick } = props
-  const { due = noMarks, done = noMarks, problems = noProblems, maxHeightPx } = props
+  const { spec, selected = null, onPick } = props
+  const { due = noMarks, done = noMarks } = props
   const [boxRef, boxWidthPx] = useWidth<HTMLDivElement>(pageWidthPx)
-  const [zoom, setZoom] = useState<number>(zoomSteps[0])
-  const widthPx = Math.max(boxWidthPx, 200) * zoom
-  const drawing = useMemo(
-    () =>
-      planDrawing(roof, spec, {
-        widthPx,
-        maxHeightPx: (maxHeightPx ?? Math.max(boxWidthPx, 420)) * zoom,
-        mode,
-        units,
-        problems,
-        firstMarks: new Set([...(selected ? [selected] : []), ...due]),
-      }),
-    [roof, spec, widthPx, boxWidthPx, zoom, maxHeightPx, mode, units, problems, selected, due],
-  )
-  useCentreOnZoom(boxRef, zoom, drawing, selected)
+  const [hiddenLayers, setHiddenLayers] = useState(noLayers)
+  const [zoom, setZoom] = useState<number>(1)
+  const laidOutZoom = useRested(zoom)
+  const heightPx = props.maxHeightPx ?? Math.max(boxWidthPx, 420)
+  const draw = useDraw(props, { widthPx: Math.max(boxWidthPx, 200), heightPx, hiddenLayers })
+  const drawing = useMemo(() => draw(laidOutZoom), [draw, laidOutZoom])
+  const maxZoom = largestZoom(drawing, laidOutZoom)
+  const zoomTo = usePlanWindow(boxRef, drawing?.view ?? null, { zoom, setZoom, maxZoom })
+  useBringIntoSight(spec, selected, zoom, zoomTo)
   const showsDay = props.due !== undefined || props.done !== undefined
-  const stateOf = (mark: string): MemberState => {
-    if (!showsDay) return 'plain'
-    if (done.has(mark)) return 'done'
-    return due.has(mark) ? 'due' : 'rest'
+  const stateOf = useCallback(
+    (mark: string): MemberState => {
+      if (!showsDay) return 'plain'
+      if (done.has(mark)) return 'done'
+      return due.has(mark) ? 'due' : 'rest'
+    },
+    [showsDay, due, done],
+  )
+  const layers = useMemo(() => planLayersIn(spec?.members ?? []), [spec])
+  const onWriteAll = () => {
+    const enough = zoomSteps.find((step) => step > zoom && isAllWritten(draw(step)))
+    zoomTo(Math.min(enough ?? maxZoom, maxZoom))
   }
   return (
     <figure className="m-0 flex min-w-0 flex-col gap-2">
-      <div ref={boxRef} className="max-w-full overflow-auto print:overflow-visible">
+      <PlanLayerKeys layers={layers} hidden={hiddenLayers} onChange={setHiddenLayers} />
+      <div
+        ref={boxRef}
+        tabIndex={zoom > 1 ? 0 : undefined}
+        role={zoom > 1 ? 'group' : undefined}
+        aria-label={zoom > 1 ? 'Plan drawn larger: scroll to see the rest' : undefined}
+        style={{ maxHeight: heightPx }}
+        className={`max-w-full overflow-auto overscroll-auto print:max-h-none! print:overflow-visible ${zoom > 1 ? 'cursor-grab rounded-md border border-rule' : ''}`}
+      >
         {drawing ? (
-          <PlanSvg
-            drawing={drawing}
-            label={props.label ?? 'Roof plan'}
-            zoom={zoom}
-            showsRoofLines={!showsDay}
-            stateOf={stateOf}
-            selected={selected}
-            onPick={onPick}
-          />
+          <div style={{ width: `${zoom * 100}%` }} className="print:w-full!">
+            <PlanSvg
+              drawing={drawing}
+              label={props.label ?? 'Roof plan'}
+              showsRoofLines={!showsDay}
+              stateOf={stateOf}
+              selected={selected}
+              onPick={onPick}
+            />
+          </div>
         ) : (
           <p className="p-4 text-ink-soft">The plan is drawn here as its sizes are typed.</p>
         )}
@@ -80,34 +97,82 @@ export function RoofPlan(props: Props) {
             scaleBar={drawing.scaleBar}
             words={showsDay ? (props.legendWords ?? dayWords) : null}
             hiddenCount={drawing.hiddenMarks.length}
+            onWriteAll={maxZoom > zoom + 0.01 ? onWriteAll : null}
           />
-          <ZoomButtons zoom={zoom} onZoom={setZoom} />
+          <ZoomButtons zoom={zoom} maxZoom={maxZoom} onZoom={zoomTo} />
         </figcaption>
       ) : null}
     </figure>
   )
 }
 
+type Room = { widthPx: number; heightPx: number; hiddenLayers: ReadonlySet<PlanLayer> }
+
+/** The drawing at any size. */
+function useDraw(props: Props, room: Room): (zoom: number) => PlanDrawing | null {
+  const { roof, spec, mode = 'read', units = 'mm', selected = null } = props
+  const { due = noMarks, problems = noProblems } = props
+  const { widthPx, heightPx, hiddenLayers } = room
+  return useCallback(
+    (zoom) =>
+      planDrawing(roof, spec, {
+        widthPx: widthPx * zoom,
+        maxHeightPx: heightPx * zoom,
+        mode,
+        units,
+        problems,
+        firstMarks: new Set([...(selected ? [selected] : []), ...due]),
+        hiddenLayers,
+      }),
+    [roof, spec, widthPx, heightPx, mode, units, problems, selected, due, hiddenLayers],
+  )
+}
+
+function isAllWritten(drawing: PlanDrawing | null): boolean {
+  return drawing !== null && drawing.hiddenMarks.length === 0
+}
+
+function largestZoom(drawing: PlanDrawing | null, laidOutZoom: number): number {
+  if (!drawing) return 1
+  const fitted = drawing.view.pxPerMm / laidOutZoom
+  return Math.min(Math.max(largestScale / fitted, 3), zoomSteps.at(-1) ?? 1)
+}
+
+/** In a plan drawn larger, a timber picked elsewhere comes into the middle. */
+function useBringIntoSight(
+  spec: FrameSpec | null,
+  selected: string | null,
+  zoom: number,
+  zoomTo: ReturnType<typeof usePlanWindow>,
+): void {
+  const seen = useRef(selected)
+  useEffect(() => {
+    if (seen.current === selected) return
+    seen.current = selected
+    const axis = spec?.members.find((member) => member.mark === selected)?.axis
+    if (!axis || zoom <= 1) return
+    zoomTo(zoom, { x: (axis.from.x + axis.to.x) / 2, y: (axis.from.y + axis.to.y) / 2 })
+  }, [spec, selected, zoom, zoomTo])
+}
+
 type SvgProps = {
   drawing: PlanDrawing
   label: string
-  zoom: number
   showsRoofLines: boolean
   stateOf: (mark: string) => MemberState
   selected: string | null
   onPick: ((mark: string) => void) | undefined
 }
 
-function PlanSvg(props: SvgProps) {
-  const { drawing, label, zoom, showsRoofLines, stateOf, selected, onPick } = props
+const PlanSvg = memo(function PlanSvg(props: SvgProps) {
+  const { drawing, label, showsRoofLines, stateOf, selected, onPick } = props
   const { widthPx, heightPx } = drawing.view
   return (
     <svg
       viewBox={`0 0 ${widthPx} ${heightPx}`}
-      style={{ width: `${zoom * 100}%` }}
       role={onPick ? 'group' : 'img'}
       aria-label={label}
-      className="block h-auto max-w-none font-sans print:w-full!"
+      className="block h-auto w-full max-w-none font-sans select-none"
     >
       <PlanGround drawing={drawing} showsRoofLines={showsRoofLines} />
       <PlanTimbers drawing={drawing} stateOf={stateOf} selected={selected} onPick={onPick} />
@@ -115,19 +180,4 @@ function PlanSvg(props: SvgProps) {
       <PlanProblems drawing={drawing} />
     </svg>
   )
-}
-
-/** Drawn larger, the picked timber (or the middle of the roof) stays in sight. */
-function useCentreOnZoom(
-  boxRef: RefObject<HTMLDivElement | null>,
-  zoom: number,
-  drawing: PlanDrawing | null,
-  selected: string | null,
-): void {
-  const picked = drawing?.members.find((member) => member.mark === selected)?.centre
-  const share = picked && drawing ? (picked.from.x + picked.to.x) / 2 / drawing.view.widthPx : 0.5
-  useLayoutEffect(() => {
-    const box = boxRef.current
-    if (box) box.scrollLeft = share * box.scrollWidth - box.clientWidth / 2
-  }, [boxRef, zoom, share])
-}
+})

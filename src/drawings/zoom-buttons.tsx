@@ -1,16 +1,16 @@
 import { Minus, Plus } from 'lucide-react'
 import { Button } from '../ui/button.tsx'
 
-export const zoomSteps = [1, 1.5, 2, 3] as const
+export const zoomSteps = [1, 1.5, 2, 3, 4, 6, 8, 12, 16] as const
 
-type Props = { zoom: number; onZoom: (zoom: number) => void }
+type Props = { zoom: number; maxZoom: number; onZoom: (zoom: number) => void }
 
 /** Draws a plan larger in its own window, so that every mark has room. */
-export function ZoomButtons({ zoom, onZoom }: Props) {
-  const smaller = zoomSteps.filter((step) => step < zoom).at(-1)
-  const larger = zoomSteps.find((step) => step > zoom)
+export function ZoomButtons({ zoom, maxZoom, onZoom }: Props) {
+  const smaller = zoomSteps.filter((step) => step < zoom - 0.01).at(-1)
+  const larger = zoomSteps.find((step) => step > zoom + 0.01 && step <= maxZoom)
   return (
-    <div className="flex gap-2 print:hidden">
+    <div className="ml-auto flex gap-2 print:hidden">
       <Button
         kind="plain"
         aria-label="Draw smaller"
