@@ -7,7 +7,7 @@ import { authRoutes } from './auth/auth-routes.ts'
 import { replanUpcoming, takeRevision } from './bookings/replan.ts'
 import { bookingRoutes } from './bookings/booking-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
-import { isStillSignedIn, loadUser, sessionCookieName } from './auth/session.ts'
+import { isStillSignedIn, loadUser, longestSessionMs, sessionCookieName } from './auth/session.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
@@ -38,8 +38,6 @@ export type AppDeps = {
   /** Serves the screens: built files, or the hot-reloading middleware of `npm run dev`. */
   screens: RequestHandler[]
 }
-
-const sessionDays = 30
 
 function securityHeaders(env: Env, hot: boolean): RequestHandler {
   const https = env.appUrl.startsWith('https:')
@@ -80,7 +78,7 @@ function sessions(deps: AppDeps): RequestHandler {
       httpOnly: true,
       sameSite: 'lax',
       secure: deps.env.appUrl.startsWith('https:'),
-      maxAge: sessionDays * 86_400_000,
+      maxAge: longestSessionMs,
     },
   })
 }
@@ -88,7 +86,7 @@ function sessions(deps: AppDeps): RequestHandler {
 function registerRoutes(api: Api, deps: AppDeps): void {
   const { db, clock } = deps
   authRoutes(api, { db, clock, auth: createAuthService({ db, clock }) })
-  eventRoutes(api, deps.events, (req) => isStillSignedIn(db, req))
+  eventRoutes(api, deps.events, (req) => isStillSignedIn(deps, req))
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
   messageRoutes(api, deps)
@@ -131,7 +129,7 @@ export function buildApp(
   app.use('/api', refuseCrossSiteWrites(deps.env.appUrl))
   app.use('/api', refuseOtherBodies)
   app.use('/api', express.json({ limit: '512kb' }))
-  app.use('/api', sessions(deps), loadUser(deps.db))
+  app.use('/api', sessions(deps), loadUser(deps))
   const api = createApi(app)
   registerRoutes(api, deps)
   app.use('/api', (_req, res) => {

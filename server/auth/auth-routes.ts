@@ -72,7 +72,7 @@ export function authRoutes(api: Api, deps: { db: Db; clock: Clock; auth: AuthSer
   const signInLimits = [limit({ most: 60 }), limit({ most: 10, of: accountOf })]
   api.route('post', '/api/session', 'public', ...signInLimits, async (req, res) => {
     const { email, password } = parseInput(signInSchema, req.body)
-    await startSession(req, await auth.signIn(email, password))
+    await startSession(req, await auth.signIn(email, password), clock.now())
     send(res, doneSchema, { done: true }, 201)
   })
 
@@ -94,14 +94,18 @@ export function authRoutes(api: Api, deps: { db: Db; clock: Clock; auth: AuthSer
 
   api.route('put', '/api/password-resets', 'public', limit({ most: 30 }), async (req, res) => {
     const { token, password } = parseInput(useResetSchema, req.body)
-    await startSession(req, await auth.useReset(token, password))
+    await startSession(req, await auth.useReset(token, password), clock.now())
     send(res, doneSchema, { done: true })
   })
 
   const ownLimit = limit({ most: 10, of: (_req, res) => currentUser(res).id })
   api.route('put', '/api/session/password', 'account:own', ownLimit, async (req, res) => {
     const { current, next } = parseInput(changePasswordSchema, req.body)
-    await startSession(req, await auth.changePassword(currentUser(res).id, current, next))
+    await startSession(
+      req,
+      await auth.changePassword(currentUser(res).id, current, next),
+      clock.now(),
+    )
     send(res, doneSchema, { done: true })
   })
 }

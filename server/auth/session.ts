@@ -3,19 +3,29 @@ import type { SessionData } from 'express-session'
 import { and, eq } from 'drizzle-orm'
 import type { Db } from '../db/client.ts'
 import { people } from '../db/tables/people-tables.ts'
+import type { Clock } from '../lib/clock.ts'
 import { type CurrentUser, setCurrentUser } from './current-user.ts'
 
 declare module 'express-session' {
   interface SessionData {
     personId: string
     epoch: number
+    /** Milliseconds since 1970. */
+    startedAt: number
   }
 }
 
 export const sessionCookieName = 'ridgehand.sid'
 
-function personOf(db: Db, { personId, epoch }: Partial<SessionData>): CurrentUser | undefined {
-  if (!personId || !epoch) return undefined
+/** However much it is used: a cookie that got away does not open the firm for good. */
+export const longestSessionMs = 30 * 86_400_000
+
+type Deps = { db: Db; clock: Clock }
+
+function personOf({ db, clock }: Deps, session: Partial<SessionData>): CurrentUser | undefined {
+  const { personId, epoch, startedAt } = session
+  if (!personId || !epoch || !startedAt) return undefined
+  if (clock.now().getTime() - startedAt >= longestSessionMs) return undefined
   return db
     .select({ id: people.id, name: people.name, email: people.email, role: people.role })
     .from(people)
@@ -24,32 +34,34 @@ function personOf(db: Db, { personId, epoch }: Partial<SessionData>): CurrentUse
 }
 
 /** Reads the person afresh for each request: an ended account or an older epoch is signed out at once. */
-export function loadUser(db: Db): RequestHandler {
+export function loadUser(deps: Deps): RequestHandler {
   return (req, res, next) => {
-    const person = personOf(db, req.session)
+    const person = personOf(deps, req.session)
     if (person) setCurrentUser(res, person)
     next()
   }
 }
 
 /** Whether the session of a request that has stayed open holds to this moment. */
-export async function isStillSignedIn(db: Db, req: Request): Promise<boolean> {
+export async function isStillSignedIn(deps: Deps, req: Request): Promise<boolean> {
   const isThere = await new Promise<boolean>((resolve) =>
     req.session.reload((error: unknown) => resolve(!error)),
   )
-  return isThere && personOf(db, req.session) !== undefined
+  return isThere && personOf(deps, req.session) !== undefined
 }
 
 /** A new session id at every sign-in, so that one planted beforehand is worth nothing. */
 export async function startSession(
   req: Request,
   person: { id: string; sessionEpoch: number },
+  now: Date,
 ): Promise<void> {
   await new Promise<void>((resolve, reject) =>
     req.session.regenerate((error: unknown) => (error ? reject(error) : resolve())),
   )
   req.session.personId = person.id
   req.session.epoch = person.sessionEpoch
+  req.session.startedAt = now.getTime()
   await new Promise<void>((resolve, reject) =>
     req.session.save((error: unknown) => (error ? reject(error) : resolve())),
   )

@@ -77,7 +77,8 @@ function readSeen(
   return { rows, days, extents, hours }
 }
 
-function asBookings(seen: Seen, firm: Firm): CalendarBooking[] {
+function asBookings(seen: Seen, view: { firm: Firm; isOffice: boolean }): CalendarBooking[] {
+  const { firm, isOffice } = view
   const byId = new Map<string, CalendarBooking>()
   for (const [i, row] of seen.rows.entries()) {
     const day = seen.days[i]
@@ -94,6 +95,7 @@ function asBookings(seen: Seen, firm: Firm): CalendarBooking[] {
       glyph: null,
       ...extent,
       shortMinutes: completedOn === null ? row.booking.shortMinutes : 0,
+      clashReason: isOffice ? row.booking.clashReason : null,
       days: [],
     }
     booking.days.push(day)
@@ -126,7 +128,7 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
       const visible = both(standingScope(), view.visible)
       const scope = both(visible, daysBetweenScope(span.from, span.to))
       const seen = readSeen(db, { ...view, scope, visible })
-      const shown = asBookings(seen, view.firm)
+      const shown = asBookings(seen, view)
       return {
         ...span,
         today: view.today,
@@ -145,7 +147,7 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
       const visible = view.isOffice ? view.visible : both(standingScope(), view.visible)
       const scope = both(visible, eq(bookings.id, id))
       const seen = readSeen(from, { ...view, scope, visible })
-      const [booking] = asBookings(seen, view.firm)
+      const [booking] = asBookings(seen, view)
       const [row] = seen.rows
       if (!booking || !row) return null
       const lines = readDayTaskLines(from, scope)
@@ -153,7 +155,6 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
         ...booking,
         ownStartAt: row.booking.startAt,
         gear: row.booking.gear,
-        clashReason: view.isOffice ? row.booking.clashReason : null,
         cancelled: row.booking.cancelledAt !== null,
         days: booking.days.map((day) => ({
           ...day,

@@ -1,6 +1,8 @@
 import type { Request } from 'express'
+import { currentUser } from '../auth/current-user.ts'
 import type { Api } from '../http/api.ts'
 import type { EventHub } from './event-hub.ts'
+import { createOpenStreams } from './open-streams.ts'
 
 const heartbeatMs = 25_000
 
@@ -13,6 +15,7 @@ export function eventRoutes(
   hub: EventHub,
   isStillSignedIn: (req: Request) => Promise<boolean>,
 ): void {
+  const streams = createOpenStreams()
   api.route('get', '/api/events', 'event:read', (req, res) => {
     res.writeHead(200, {
       'Content-Type': 'text/event-stream',
@@ -21,9 +24,16 @@ export function eventRoutes(
       'X-Accel-Buffering': 'no',
     })
     res.write('retry: 2000\n\n')
+    const personId = currentUser(res).id
+    streams.add(personId, res)
     const say = (text: string): void => {
+      if (res.writableEnded) return
       isStillSignedIn(req).then(
-        (holds) => (holds ? res.write(text) : res.end()),
+        (holds) => {
+          if (res.writableEnded) return
+          if (holds) res.write(text)
+          else res.end()
+        },
         () => res.end(),
       )
     }
@@ -32,6 +42,7 @@ export function eventRoutes(
     res.on('close', () => {
       clearInterval(heartbeat)
       unsubscribe()
+      streams.remove(personId, res)
     })
   })
 }

@@ -1,4 +1,5 @@
 import { and, eq } from 'drizzle-orm'
+import { z } from 'zod'
 import { emailSchema, lineSchema } from '../../shared/http/fields.ts'
 import { invitationHours, issuePasswordToken } from '../auth/password-links.ts'
 import type { Db } from '../db/client.ts'
@@ -6,17 +7,28 @@ import { people } from '../db/tables/people-tables.ts'
 import { writeAudit } from '../lib/audit.ts'
 import { newId } from '../lib/ids.ts'
 
+const whoSchema = z.object({
+  email: emailSchema,
+  name: lineSchema(80, { required: 'Give a name.' }),
+})
+
+function readWho(input: { email: string; name: string }): z.infer<typeof whoSchema> {
+  const parsed = whoSchema.safeParse(input)
+  if (parsed.success) return parsed.data
+  throw new Error(parsed.error.issues.map((issue) => issue.message).join('\n'))
+}
+
 /**
  * Makes the first office account of a new installation and gives the token of its password link.
  *
- * @throws Error when there is an office account already: the office makes all others.
+ * @throws Error in plain words: an address or a name that cannot be, or an office account already there,
+ * which makes all others.
  */
 export function makeFirstAccount(
   db: Db,
   input: { email: string; name: string; now: Date },
 ): string {
-  const email = emailSchema.parse(input.email)
-  const name = lineSchema(80, { required: 'Give a name.' }).parse(input.name)
+  const { email, name } = readWho(input)
   return db.transaction((tx) => {
     const office = tx
       .select({ id: people.id })

@@ -100,17 +100,16 @@ function write(
     tx.insert(roofRevisions)
       .values({ ...row, jobId, sequence, issuedAt: now, issuedById: user.id })
       .run()
-    const taken = deps.takeRevision(tx, jobId, row.id, now)
+    const cutButUnused = lettered(tx, jobId, deps.takeRevision(tx, jobId, row.id, now))
     writeAudit(tx, {
       at: now,
       personId: user.id,
       action: 'roof issued',
       entity: 'roof revision',
       entityId: row.id,
-      detail: { jobId, letter: row.letter },
+      detail: { jobId, letter: row.letter, cutButUnused },
     })
-    const revision = summaryOf(tx, jobId, row.letter)
-    return { issued: true, revision, cutButUnused: lettered(tx, jobId, taken) }
+    return { issued: true, revision: summaryOf(tx, jobId, row.letter), cutButUnused }
   })
   if (answer.issued) deps.events.publish({ topic: 'roof' })
   return answer

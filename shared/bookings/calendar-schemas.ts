@@ -89,6 +89,8 @@ export const calendarBookingSchema = z.object({
   shortMinutes: z.number(),
   /** Days ahead that hold nothing; over 0 the booking is too long. */
   emptyDays: z.number(),
+  /** Why it shares a day with another job, on purpose; for the office. */
+  clashReason: z.string().nullable(),
   days: z.array(calendarDaySchema),
 })
 export type CalendarBooking = z.infer<typeof calendarBookingSchema>
@@ -109,7 +111,6 @@ export const bookingSchema = calendarBookingSchema.omit({ days: true }).extend({
   /** As typed; null where the firm's start holds. */
   ownStartAt: z.string().nullable(),
   gear: z.string(),
-  clashReason: z.string().nullable(),
   cancelled: z.boolean(),
   days: z.array(
     calendarDaySchema.extend({

@@ -21,20 +21,38 @@ function refresh(client: QueryClient, topic: LiveEvent['topic']): void {
 export function useLiveEvents(): void {
   const client = useQueryClient()
   useEffect(() => {
-    const source = new EventSource('/api/events')
     let wasLost = false
-    source.onmessage = (message: MessageEvent<string>) => {
-      const parsed = liveEventSchema.safeParse(JSON.parse(message.data))
-      if (parsed.success) refresh(client, parsed.data.topic)
+    let source = open()
+    function open(): EventSource {
+      const opened = new EventSource('/api/events')
+      opened.onmessage = (message: MessageEvent<string>) => {
+        const parsed = liveEventSchema.safeParse(JSON.parse(message.data))
+        if (parsed.success) refresh(client, parsed.data.topic)
+      }
+      opened.onerror = () => {
+        wasLost = true
+      }
+      opened.onopen = () => {
+        // What happened while the line was down was not heard.
+        if (wasLost) void client.invalidateQueries()
+        wasLost = false
+      }
+      // Newer tabs took its place; it listens again once somebody looks at it.
+      opened.addEventListener('superseded', () => {
+        opened.close()
+        wasLost = true
+        document.addEventListener('visibilitychange', lookedAt)
+      })
+      return opened
     }
-    source.onerror = () => {
-      wasLost = true
+    function lookedAt(): void {
+      if (document.visibilityState !== 'visible') return
+      document.removeEventListener('visibilitychange', lookedAt)
+      source = open()
     }
-    source.onopen = () => {
-      // What happened while the line was down was not heard.
-      if (wasLost) void client.invalidateQueries()
-      wasLost = false
+    return () => {
+      document.removeEventListener('visibilitychange', lookedAt)
+      source.close()
     }
-    return () => source.close()
   }, [client])
 }

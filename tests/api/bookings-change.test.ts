@@ -1,13 +1,18 @@
 import { eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
-import type { Booking } from '../../shared/bookings/calendar-schemas.ts'
+import {
+  type Booking,
+  type CalendarBooking,
+  calendarSchema,
+} from '../../shared/bookings/calendar-schemas.ts'
 import { audit } from '../../server/db/tables/audit-tables.ts'
 import { bookings, tasks } from '../../server/db/tables/booking-tables.ts'
+import { daysBackTo } from '../../src/features/calendar/days-back.ts'
 import { bookingFirm, daysOf, fri, mon, sat, thu, tue, wed } from './booking-kit.ts'
 
 type Firm = Awaited<ReturnType<typeof bookingFirm>>
 
-const change = (firm: Firm, booking: Booking, body: Record<string, unknown>) =>
+const change = (firm: Firm, booking: Booking | CalendarBooking, body: Record<string, unknown>) =>
   firm.officeAgent.patch(`/api/bookings/${booking.id}`).send({ version: booking.version, ...body })
 const rowOf = (firm: Firm, id: string) =>
   firm.app.db.select().from(bookings).where(eq(bookings.id, id)).get()!
@@ -89,6 +94,20 @@ test('moving onto a day the crew is booked is refused with the reason, and done 
   expect(daysOf(meant.body)).toEqual([thu, tue])
   // Settled once, it is not asked again for another change of the same days.
   await change(firm, meant.body, { gear: 'Crane' }).expect(200)
+})
+
+test('a day dragged off one that two jobs share on purpose goes back there by Undo, reason and all', async () => {
+  const firm = await bookingFirm()
+  await firm.booked({ startsOn: mon })
+  const said = { startsOn: thu, days: [thu, mon], clashReason: 'Same street' }
+  const creek = await firm.booked({ jobId: firm.jobs.creekJob, ...said, startsOn: undefined })
+  const calendar = await firm.officeAgent.get(`/api/calendar?from=${wed}&to=${tue}`).expect(200)
+  const before = calendarSchema.parse(calendar.body).bookings.find((one) => one.id === creek.id)!
+  expect(before.clashReason).toBe('Same street')
+  const dragged = await change(firm, before, { move: { from: mon, to: fri } }).expect(200)
+  expect(dragged.body).toMatchObject({ allDays: [thu, fri], clashReason: null })
+  const back = await change(firm, dragged.body, daysBackTo(before)).expect(200)
+  expect(back.body).toMatchObject({ allDays: [thu, mon], clashReason: 'Same street' })
 })
 
 test('moving onto a day not worked is refused until it is said on purpose', async () => {

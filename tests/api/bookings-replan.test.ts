@@ -1,11 +1,13 @@
 import { eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
+import type { Issued } from '../../shared/revisions/revision-schemas.ts'
 import { replanBooking, replanUpcoming, takeRevision } from '../../server/bookings/replan.ts'
 import { bookings, tasks } from '../../server/db/tables/booking-tables.ts'
 import { leave } from '../../server/db/tables/people-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { rosterOf } from '../../server/people/roster.ts'
 import { readCrewHours } from '../../server/bookings/crew-hours.ts'
+import { typedForm } from '../revisions/typed-form.ts'
 import { bookingFirm, fri, hipRoof, mon, thu, wed } from './booking-kit.ts'
 
 const nextMorning = new Date('2026-12-02T20:00:00Z')
@@ -41,6 +43,28 @@ test('pieces already cut that no longer fit are listed, and cut anew to the new 
   expect(taken.cutButUnused).toEqual([
     { revisionId: firm.revisions.hillRevision, marks: commons.task.memberMarks.slice(0, 2) },
   ])
+})
+
+test('the office is told which cut pieces a new revision has no place for, and which one they were cut to', async () => {
+  const firm = await bookingFirm()
+  const issue = async (version: number, pitchDeg: string) => {
+    const form = typedForm('rectangle', { pitchDeg })
+    const at = `/api/jobs/${firm.jobs.bareJob}`
+    await firm.officeAgent.put(`${at}/roof`).send({ form, version }).expect(200)
+    const answer = await firm.officeAgent
+      .post(`${at}/revisions`)
+      .send({ version: version + 1 })
+      .expect(201)
+    return answer.body as Issued
+  }
+  expect((await issue(0, '25')).cutButUnused).toEqual([])
+  const booking = await firm.booked({ jobId: firm.jobs.bareJob, startsOn: wed, workingDays: 3 })
+  const commons = firm
+    .taskRows(booking.id)
+    .find((r) => r.task.work === 'cut' && r.task.packageKey === 'cut-commons')!
+  firm.tick(commons.task.id, 2)
+  const marks = commons.task.memberMarks.slice(0, 2)
+  expect((await issue(1, '30')).cutButUnused).toEqual([{ letter: 'A', marks }])
 })
 
 test('a revision that leaves a line alike keeps what was cut of it', async () => {

@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest'
+import { people } from '../../server/db/tables/people-tables.ts'
 import { makeFirstAccount } from '../../server/people/first-account.ts'
 import { createTestApp } from './harness.ts'
 
@@ -16,4 +17,14 @@ test('a new installation gets its first office account by a link, and only the f
   expect(() => makeFirstAccount(app.db, { ...who, email: 'another@quillback.example' })).toThrow(
     /already/,
   )
+})
+
+test('an address or a name that cannot be is said in plain words, and makes no account', async () => {
+  const app = await createTestApp()
+  const make = (email: string, name: string) => () =>
+    makeFirstAccount(app.db, { email, name, now: app.clock.current })
+  const words = 'Give a whole e-mail address, like name@firm.example.'
+  expect(make('marnie', 'Marnie Quill')).toThrow(new Error(words))
+  expect(make('marnie', '  ')).toThrow(new Error(`${words}\nGive a name.`))
+  expect(app.db.select().from(people).all()).toEqual([])
 })

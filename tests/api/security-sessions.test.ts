@@ -2,7 +2,7 @@ import type { AddressInfo } from 'node:net'
 import request from 'supertest'
 import { expect, test } from 'vitest'
 import { readEnv } from '../../server/env.ts'
-import { createTestApp, type TestApp, testPassword } from './harness.ts'
+import { createTestApp, testNow, type TestApp, testPassword } from './harness.ts'
 
 const cookieOf = (answer: request.Response) => answer.get('Set-Cookie')?.[0] ?? ''
 
@@ -84,6 +84,45 @@ test('access taken away ends the stream of news', async () => {
       .send({ ...person, id: undefined, phone: '', role: 'apprentice', active: false, version: 1 })
       .expect(200),
   )
+})
+
+test('a thirteenth stream of news of one person closes the oldest, and nobody else’s', async () => {
+  const app = await createTestApp()
+  const { email } = app.addPerson('office', 'Orla Brandt')
+  const other = app.addPerson('leading-hand', 'Tamsin Rook')
+  const cookie = await signIn(app, email)
+  const others = await listen(app, await signIn(app, other.email))
+  const streams = []
+  for (let i = 0; i < 13; i++) streams.push(await listen(app, cookie))
+  const [oldest, ...kept] = streams
+  await oldest!.ended
+  expect(oldest!.heard.join('')).toContain('event: superseded')
+  app.events.publish({ topic: 'jobs' })
+  for (const stream of [...kept, others]) await expect.poll(() => news(stream.heard)).toBe(1)
+  expect(oldest!.heard.join('')).not.toContain('jobs')
+  // A place given up is free again.
+  kept[0]!.stop()
+  await kept[0]!.ended.catch(() => undefined)
+  const again = await listen(app, cookie)
+  app.events.publish({ topic: 'firm' })
+  for (const stream of [...kept.slice(1), others]) {
+    await expect.poll(() => news(stream.heard)).toBe(2)
+  }
+  for (const stream of [...streams, others, again]) stream.stop()
+})
+
+test('a session ends thirty days after signing in, however much it is used', async () => {
+  const app = await createTestApp()
+  const { email } = app.addPerson('office', 'Orla Brandt')
+  const cookie = await signIn(app, email)
+  const userOn = async (day: number) => {
+    app.clock.current = new Date(testNow.getTime() + day * 86_400_000)
+    const { body } = await request(app.app).get('/api/session').set('Cookie', cookie).expect(200)
+    return body.user?.name ?? null
+  }
+  for (const day of [1, 10, 20, 29.9]) expect(await userOn(day)).toBe('Orla Brandt')
+  expect(await userOn(30)).toBeNull()
+  await request(app.app).get('/api/jobs').set('Cookie', cookie).expect(401)
 })
 
 test('signing in gives a new session: one planted beforehand stays signed out', async () => {

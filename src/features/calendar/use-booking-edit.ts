@@ -9,6 +9,7 @@ import {
   useRestoreBooking,
 } from './calendar-queries.ts'
 import type { OnPurpose } from './clash-answer.tsx'
+import { daysBackTo } from './days-back.ts'
 import { useUndoing } from './use-undoing.ts'
 
 type Draft = BookingValues & { days: string[] }
@@ -84,9 +85,7 @@ export const inputOf = (draft: Draft) => ({
   gear: draft.gear,
 })
 
-/** What was settled on purpose before is settled again. */
 const inputBackTo = (before: Booking): BookingChange => ({
   ...inputOf(draftOf(before)),
-  evenIfNotWorked: true,
-  ...(before.clashReason === null ? {} : { clashReason: before.clashReason }),
+  ...daysBackTo(before),
 })

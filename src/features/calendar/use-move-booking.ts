@@ -4,6 +4,7 @@ import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import { useToast } from '../../ui/toast.tsx'
 import { conflictOf, useChangeBooking } from './calendar-queries.ts'
 import type { OnPurpose } from './clash-answer.tsx'
+import { daysBackTo } from './days-back.ts'
 import { useUndoing } from './use-undoing.ts'
 
 type Asked = { booking: CalendarBooking; move: { from: Day; to: Day } }
@@ -16,9 +17,7 @@ export function useMoveBooking() {
   const [asked, setAsked] = useState<Asked | null>(null)
 
   const undo = (before: CalendarBooking, version: number) =>
-    undoing(() =>
-      change.mutateAsync({ id: before.id, version, days: before.allDays, evenIfNotWorked: true }),
-    )
+    undoing(() => change.mutateAsync({ id: before.id, version, ...daysBackTo(before) }))
 
   const send = ({ booking, move }: Asked, said: OnPurpose = {}) => {
     if (change.isPending) return

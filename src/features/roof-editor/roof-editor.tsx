@@ -3,6 +3,7 @@ import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
 import { roofOfForm } from '../../../shared/revisions/roof-of-form.ts'
 import { isTouched } from '../../lib/pointer.ts'
 import { Segmented } from '../../ui/segmented.tsx'
+import { CutButUnused } from './cut-but-unused.tsx'
 import { EditorHeader } from './editor-header.tsx'
 import { ProblemList } from './problem-list.tsx'
 import { fieldId, RoofFormContext, type RoofFormHandle } from './roof-form-context.ts'
@@ -60,6 +61,7 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
             onMine={draft.keepMine}
           />
         ) : null}
+        <CutButUnused issued={issue.last} />
         {issue.problems.length > 0 ? (
           <ProblemList problems={issue.problems} onGo={() => setPart('fields')} />
         ) : null}
