@@ -29,6 +29,8 @@ async function listen(app: TestApp, cookie: string) {
       heard.push(new TextDecoder().decode(value))
     }
   })()
+  // Cut off by the test itself, it is no fault.
+  ended.catch(() => undefined)
   const stop = () => {
     server.closeAllConnections()
     server.close()
