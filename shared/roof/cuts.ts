@@ -93,7 +93,7 @@ const jointPlane = (piece: Piece, timber: Timber, cut: PlanCut): Plane => {
 }
 
 /** The tail plane of an eave: plumb, or square to the slope, through the overhang line of the top plane. */
-const tailPlane = (ground: Ground, edge: PlateEdge, standMm: number): Plane => {
+export const tailPlane = (ground: Ground, edge: PlateEdge, standMm: number): Plane => {
   const pitch = radians(edge.pitchDeg)
   const line = add2(edge.from, scale2(edge.inward, -edge.overhangMm))
   const point: Point3 = { ...line, z: standMm - edge.overhangMm * Math.tan(pitch) }

@@ -6,7 +6,7 @@ import { bearings, segmentIndex } from './contacts.ts'
 import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
-import type { DraftMember } from './members.ts'
+import type { FrameDraft } from './members.ts'
 import type { Piece, PieceEnd } from './piece.ts'
 import { planingOf } from './planing.ts'
 import { publishedLines, publishedPlanes } from './published-lines.ts'
@@ -15,6 +15,7 @@ import { RoofRefusedError, roofProblems } from './roof-problems.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from './roof-types.ts'
 import { worstRounding } from './rounding.ts'
+import { besideFrame } from './secondary/beside-frame.ts'
 import { plateLines } from './slopes.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
@@ -28,7 +29,7 @@ const draftMembers = (ground: Ground, standMm: number) => {
   const pieces = buildPieces(ground)
   const { placedAt, openPieces } = cutJoints(ground, pieces)
   const segments = segmentIndex(pieces)
-  const drafts = pieces.map((piece): DraftMember =>
+  const drafts = pieces.map((piece): FrameDraft =>
     draftMember(ground, piece, standMm, (cut) => {
       if (cut.end === 'tail' || cut.listed === null || runsThrough(piece, cut.end)) return []
       const list = cut.end === 'head' ? piece.headCuts : piece.footCuts
@@ -55,7 +56,8 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
   const ground: Ground = { roof, settings, plates, lines, joints: roofJoints(roof, lines) }
   const standMm = commonStandMm(roof, plates.slopes)
   const { drafts, openPieces } = draftMembers(ground, standMm)
-  const { members, cutLines, markOf } = markMembers(drafts)
+  const all = [...drafts, ...besideFrame({ ...ground, standMm, drafts })]
+  const { members, cutLines, markOf } = markMembers(all)
   const openMarks = new Set([...openPieces].map((piece) => markOf.get(piece)))
   const planes = publishedPlanes(plates, lines)
   const published = publishedLines(plates, lines)
@@ -68,6 +70,6 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
     totals: roofTotals(planes, published, members),
     cautions: cautionsOf(ground, standMm, members, openMarks),
     planing: planingOf(drafts, plates.slopes, standMm, markOf),
-    rounding: worstRounding(drafts, settings, markOf),
+    rounding: worstRounding(all, settings, markOf),
   }
 }

@@ -16,6 +16,9 @@ export type DraftMember = Omit<Member, 'mark' | 'cuts'> & {
   cuts: (DraftCut & { bears: number[] })[]
 }
 
+/** A rafter or a timber of a line: its numbers come from a piece of the frame. */
+export type FrameDraft = DraftMember & { piece: Piece }
+
 /** A long point nearer the middle than this is central. */
 const centralMm = 0.05
 
@@ -60,7 +63,7 @@ export const draftMember = (
   piece: Piece,
   standMm: number,
   bears: (cut: DraftCut) => number[],
-): DraftMember => {
+): FrameDraft => {
   const timber = timberOf(piece, standMm)
   const cuts = cutsOf(ground, piece, standMm)
   const allowanceMm = cuts.some((cut) => cut.end === 'tail') ? ground.roof.tailAllowanceMm : 0

@@ -1,0 +1,167 @@
+import { bevelOf, bothWays, crossingAt, crossingOf, timberPoint } from '../bevel.ts'
+import type { Timber } from '../bevel.ts'
+import type { DraftCut } from '../cuts.ts'
+import { endCorners, endReachMm } from '../ends.ts'
+import type { DraftMember } from '../members.ts'
+import type { Cut, Member, Point3, RoofSettings } from '../roof-types.ts'
+import { degrees, dot3, scale3 } from '../vector.ts'
+import type { Plane } from '../vector.ts'
+
+/** A saw cut of a timber beside the frame: its plane, normal off the timber, and the pieces it bears on. */
+export type EndCut = { end: Cut['end']; plane: Plane; bears: number[] }
+
+/** A timber beside the frame before its numbers; `timber.origin` is where its axis starts. */
+export type BesideTimber = {
+  id: number
+  role: Member['role']
+  timber: Timber
+  thicknessMm: number
+  /** Along the top centre line from the axis' start to its end. */
+  lengthMm: number
+  cuts: EndCut[]
+  dropMm: number
+  planes: number[]
+  topInSlope?: boolean
+}
+
+/** Squares of a top that is not planed. */
+const noFalls = { left: 0, right: 0 }
+/** A long point nearer the middle than this is central. */
+const centralMm = 0.05
+
+/** A timber that lies with its top in a slope or level: depths go square to its top. */
+export const lyingTimber = (
+  at: Pick<Timber, 'origin' | 'direction' | 'left' | 'up'>,
+  section: { thicknessMm: number; depthMm: number },
+): Timber => ({
+  ...at,
+  down: scale3(at.up, -1),
+  halfMm: section.thicknessMm / 2,
+  depthMm: section.depthMm,
+  sin: 0,
+  cos: 1,
+  arrisFall: { left: 0, right: 0 },
+})
+
+/** The same timber taken from its other end. */
+export const turnedTimber = (timber: Timber): Timber => ({
+  ...timber,
+  direction: scale3(timber.direction, -1),
+  left: scale3(timber.left, -1),
+})
+
+/** The four arrises of a timber: mm left of the centre line, mm down under the top. */
+const arrises = (timber: Timber): [number, number][] => {
+  const bottom = timber.depthMm / timber.cos
+  return [
+    [timber.halfMm, 0],
+    [-timber.halfMm, 0],
+    [-timber.halfMm, bottom],
+    [timber.halfMm, bottom],
+  ]
+}
+
+/** Where a plane's face ends on the four arrises, going round. */
+export const cutFace = (timber: Timber, plane: Plane): Point3[] => {
+  const crossing = crossingOf(plane, timber)
+  return arrises(timber).map(([left, down]) =>
+    timberPoint(timber, crossingAt(crossing, left, down), left, down),
+  )
+}
+
+/** The planes of one end that take timber: each is the nearest on some arris. */
+export const governing = <T extends { plane: Plane }>(
+  timber: Timber,
+  cuts: T[],
+  upper: boolean,
+): T[] => {
+  const kept = new Set<T>()
+  for (const [left, down] of arrises(timber)) {
+    let best: T | null = null
+    let bestMm = Infinity
+    for (const cut of cuts) {
+      const along = crossingAt(crossingOf(cut.plane, timber), left, down) * (upper ? 1 : -1)
+      if (along < bestMm - 1e-6) {
+        best = cut
+        bestMm = along
+      }
+    }
+    if (best !== null) kept.add(best)
+  }
+  return cuts.filter((cut) => kept.has(cut))
+}
+
+const draftCut = (settings: RoofSettings, timber: Timber, { end, plane }: EndCut): DraftCut => {
+  const bevel = bevelOf(plane, timber, noFalls)
+  const leftIsLong = bevel.longSide !== 'right'
+  return {
+    end,
+    plane: { point: timberPoint(timber, bevel.alongMm, 0, 0), normal: { ...plane.normal } },
+    listed: null,
+    crossing: bevel.crossing,
+    alongMm: bevel.alongMm,
+    longSide: bevel.longSide,
+    longPointFromHeelMm: leftIsLong ? bevel.leftMm : bevel.rightMm,
+    shortPointFromHeelMm: leftIsLong ? bevel.rightMm : bevel.leftMm,
+    face: bothWays(bevel.faceFromEdgeDeg),
+    edge: bothWays(bevel.squareEdgeDeg),
+    edgeOtherTop: null,
+    bladeTiltDeg: bevel.tiltDeg,
+    pastSaw: bevel.tiltDeg > settings.sawMaxTiltDeg + 1e-9,
+  }
+}
+
+/** The side of the head's long point, looking from foot to head; null when central or square. */
+const handOf = (timber: Timber, heads: DraftCut[]): Member['hand'] => {
+  if (heads.every((cut) => cut.longSide === 'none')) return null
+  const tip = endCorners(timber, heads, true).reduce((a, b) =>
+    b.alongMm > a.alongMm + 1e-6 ? b : a,
+  )
+  if (Math.abs(tip.leftMm) < centralMm) return null
+  return tip.leftMm > 0 ? 'left' : 'right'
+}
+
+const nearest = (distances: number[]): number => (distances.length > 0 ? Math.min(...distances) : 0)
+
+/** The numbers of a timber beside the frame, with the fields and the meaning that rafters have. */
+export const besideMember = (settings: RoofSettings, beside: BesideTimber): DraftMember => {
+  const { timber, lengthMm, thicknessMm } = beside
+  const cuts = beside.cuts.map((cut) => ({
+    ...draftCut(settings, timber, cut),
+    bears: cut.bears,
+  }))
+  const heads = cuts.filter((cut) => cut.end === 'head')
+  const feet = cuts.filter((cut) => cut.end !== 'head')
+  const along = (end: Cut['end']) => cuts.filter((c) => c.end === end).map((c) => c.alongMm)
+  const cutLengthMm = endReachMm(timber, heads, true) - endReachMm(timber, feet, false)
+  const volumeM3 = (cutLengthMm * thicknessMm * timber.depthMm) / 1_000_000_000
+  const { direction } = timber
+  const level = Math.hypot(direction.x, direction.y)
+  return {
+    piece: { id: beside.id },
+    timber,
+    role: beside.role,
+    ...(beside.topInSlope === true ? { topInSlope: true } : {}),
+    hand: handOf(timber, heads),
+    section: { thicknessMm, depthMm: timber.depthMm },
+    axis: { from: { ...timber.origin }, to: timberPoint(timber, lengthMm, 0, 0) },
+    riseMm: lengthMm * direction.z,
+    runMm: lengthMm * level,
+    pitchDeg: degrees(Math.atan2(direction.z, level)),
+    setOutLengthMm: lengthMm,
+    headDeductionMm: nearest(along('head').map((mm) => lengthMm - mm)),
+    footDeductionMm: nearest(along('foot')),
+    tailLengthMm: nearest(along('tail').map((mm) => -mm)),
+    cutLengthMm,
+    cuts,
+    birdsmouth: null,
+    backing: null,
+    dropMm: beside.dropMm,
+    planes: beside.planes,
+    weightKg: volumeM3 * settings.densityKgM3,
+  }
+}
+
+/** Whether a plane cuts a timber's end at all, and not along it. */
+export const facesEnd = (plane: Plane, timber: Timber): boolean =>
+  Math.abs(dot3(plane.normal, timber.direction)) > 0.02
