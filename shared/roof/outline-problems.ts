@@ -108,23 +108,27 @@ const turnProblems = (corners: Point2[]): RoofProblem[] => {
       'The corners run clockwise: enter them counter-clockwise, with the building on your left as you go round.'
     return [{ path: 'outline', message }]
   }
-  return corners.flatMap((corner, k) => {
-    const off = cornerOffLineMm(at(corners, k - 1), corner, at(corners, k + 1))
-    if (off > -straightCornerMm) return []
-    const message = `Corner ${k + 1} turns inwards and would need a valley; roofs with valleys are not framed yet: split the plan or move corner ${k + 1} out.`
-    return [{ path: `outline.${k}`, message }]
-  })
+  return []
 }
 
 type LooseEdge = { finish?: unknown; pitchDeg?: unknown }
 
 const isEdge = (value: unknown): value is LooseEdge => typeof value === 'object' && value !== null
 
+/** Whether the plan turns inwards at corner `k`. */
+const turnsInwards = (corners: Point2[], k: number): boolean =>
+  cornerOffLineMm(at(corners, k - 1), at(corners, k), at(corners, k + 1)) <= -straightCornerMm
+
 const gableProblem = (corners: Point2[], edges: LooseEdge[], k: number): string | null => {
   const [before, after] = [at(edges, k - 1), at(edges, k + 1)]
   const name = `Edge ${k + 1} is a gable`
   if (before.finish === 'gable' || after.finish === 'gable') {
     return `${name} that no slope meets at both ends: make the edge before it and the edge after it eaves.`
+  }
+  const inwards = [k, k + 1].find((n) => turnsInwards(corners, n))
+  if (inwards !== undefined) {
+    const corner = (inwards % corners.length) + 1
+    return `${name}, but the plan turns inwards at its corner ${corner}: make edge ${k + 1} an eave, or move corner ${corner} out.`
   }
   const direction = (n: number) => unit2(sub2(at(corners, n + 1), at(corners, n)))
   const own = direction(k)

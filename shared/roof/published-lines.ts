@@ -1,5 +1,5 @@
 import { polygonSignedArea } from './convex.ts'
-import { planAreaWithEavesMm2 } from './roof-lines.ts'
+import { planAreaWithEavesMm2 } from './eaves.ts'
 import type { RoofLines } from './roof-lines.ts'
 import type { Point3, RoofLine, RoofPlane } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -17,7 +17,7 @@ export const publishedPlanes = (plates: PlateLines, lines: RoofLines): RoofPlane
       edges: [...slope.edges],
       pitchDeg: slope.pitchDeg,
       areaM2: polygonSignedArea(polygon) / lean,
-      areaWithEavesM2: planAreaWithEavesMm2(plates, slope) / lean,
+      areaWithEavesM2: planAreaWithEavesMm2(plates, lines, slope) / lean,
       polygon,
     }
   })

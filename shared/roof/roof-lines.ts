@@ -1,17 +1,21 @@
-import { clipConvex, polygonBox, polygonSignedArea } from './convex.ts'
-import type { Labelled } from './convex.ts'
-import type { LineKind, Point2, Point3 } from './roof-types.ts'
-import { at, insideMm, slopeGradient, slopeHeightMm } from './slopes.ts'
-import type { PlateLines, Slope } from './slopes.ts'
-import { distance2, dot2, scale2, sub2 } from './vector.ts'
+import { roofCreases } from './creases.ts'
+import type { Crease, RoofNode } from './creases.ts'
+import { eaveRuns, readFaces } from './faces.ts'
+import type { RawFace } from './faces.ts'
+import type { LineKind } from './roof-types.ts'
+import { at, slopeGradient } from './slopes.ts'
+import type { PlateLines } from './slopes.ts'
+import { cross2, distance2, sub2 } from './vector.ts'
 
-/** What a side of a slope borders: its own eave, another slope, or a gable edge. */
+/**
+ * What a side of a slope borders: its own eave or a gable edge (by the first of its plate edges), or
+ * another slope. `line` is an index into `RoofLines.lines`.
+ */
 export type Border =
-  { kind: 'plate'; edge: number } | { kind: 'slope'; slope: number } | { kind: 'open' }
+  | { kind: 'plate'; edge: number; line: number | null }
+  | { kind: 'slope'; slope: number; line: number }
 
-type RoofNode = { point: Point3; corner: number | null }
-
-/** A slope's own part of the plan, corner by corner; `borders[k]` runs from node k to node k + 1. */
+/** A slope's own part of the plan, corner by corner, counter-clockwise; `borders[k]` runs from node k to node k + 1. */
 export type Face = { slope: number; nodes: number[]; borders: Border[] }
 
 /** A crease or edge of the roof between two nodes, the lower one first. */
@@ -19,219 +23,111 @@ export type NodeLine = { kind: LineKind; from: number; to: number; slopes: numbe
 
 export type RoofLines = { nodes: RoofNode[]; faces: Face[]; lines: NodeLine[] }
 
-/** Events of the roof nearer together than this are one node: no saw or tape tells them apart. */
-const sameNodeMm = 0.5
 /** A line that climbs less than this over its whole length, and less than this for each mm, is level. */
 const levelMm = 0.5
 const levelSlope = 0.002
-/** How far beyond the outline a slope is drawn before it is clipped: past any overhang. */
-const marginMm = 10_000
 
-const everywhere = (plates: PlateLines): Labelled<Border> => {
-  const open: Border = { kind: 'open' }
-  const box = polygonBox(plates.edges.map((edge) => edge.from))
-  const [minX, maxX] = [box.minX - marginMm, box.maxX + marginMm]
-  const [minY, maxY] = [box.minY - marginMm, box.maxY + marginMm]
-  return {
-    points: [
-      { x: minX, y: minY },
-      { x: maxX, y: minY },
-      { x: maxX, y: maxY },
-      { x: minX, y: maxY },
-    ],
-    labels: [open, open, open, open],
-  }
-}
-
-/** Where `slope` is the lowest of all slopes (lower envelope), without regard to the plates. */
-const whereLowest = (slopes: readonly Slope[], slope: Slope, start: Labelled<Border>) => {
-  let part = start
-  const own = slopeGradient(slope)
-  for (const other of slopes) {
-    if (other.index === slope.index) continue
-    // own height − other height ≤ 0, as a line in plan
-    const fall = sub2(own, slopeGradient(other))
-    const size = Math.hypot(fall.x, fall.y)
-    if (size < 1e-9) continue
-    const level = dot2(own, slope.origin) - dot2(slopeGradient(other), other.origin)
-    part = clipConvex(part, scale2(fall, 1 / size), level / size, {
-      kind: 'slope',
-      slope: other.index,
-    })
-  }
-  return part
-}
-
-/** The plan of one slope, out to `outMm(edge)` beyond each plate edge. */
-const slopePlan = (plates: PlateLines, slope: Slope, outMm: (edge: number) => number) => {
-  let part = everywhere(plates)
-  for (const edge of plates.edges) {
-    const out = scale2(edge.inward, -1)
-    part = clipConvex(part, out, dot2(out, edge.from) + outMm(edge.index), {
-      kind: 'plate',
-      edge: edge.index,
-    })
-  }
-  return whereLowest(plates.slopes, slope, part)
-}
-
-/** Plan area of a slope with its overhangs, each plate edge carrying its own, square mm. */
-export const planAreaWithEavesMm2 = (plates: PlateLines, slope: Slope): number => {
-  let area = 0
-  slope.edges.forEach((index, place) => {
-    const own = at(plates.edges, index)
-    let part = slopePlan(plates, slope, (edge) =>
-      slope.edges.includes(edge) ? own.overhangMm : at(plates.edges, edge).overhangMm,
-    )
-    const open: Border = { kind: 'open' }
-    if (place > 0) {
-      part = clipConvex(part, scale2(own.along, -1), -dot2(own.along, own.from), open)
-    }
-    if (place < slope.edges.length - 1) {
-      part = clipConvex(part, own.along, dot2(own.along, own.to), open)
-    }
-    area += polygonSignedArea(part.points)
-  })
-  return area
-}
-
-type Vertex = { point: Point2; slope: number }
-
-/** Gathers the corners of all slopes into nodes; plate corners keep their exact place. */
-const gatherNodes = (plates: PlateLines, vertices: Vertex[]) => {
-  const groups: { corner: number | null; anchor: Point2; members: Vertex[] }[] = plates.edges.map(
-    (edge) => ({ corner: edge.index, anchor: edge.from, members: [] }),
-  )
-  const owner = vertices.map((vertex) => {
-    const found = groups.findIndex((group) => distance2(group.anchor, vertex.point) <= sameNodeMm)
-    if (found >= 0) {
-      at(groups, found).members.push(vertex)
-      return found
-    }
-    groups.push({ corner: null, anchor: vertex.point, members: [vertex] })
-    return groups.length - 1
-  })
-  const nodes = groups.map((group): RoofNode => {
-    if (group.corner !== null) return { point: { ...group.anchor, z: 0 }, corner: group.corner }
-    const count = group.members.length
-    const sum = { x: 0, y: 0, z: 0 }
-    for (const { point, slope } of group.members) {
-      sum.x += point.x / count
-      sum.y += point.y / count
-      sum.z += slopeHeightMm(at(plates.slopes, slope), point) / count
-    }
-    return { point: sum, corner: null }
-  })
-  return { nodes, owner }
-}
-
-const facesOf = (plans: Labelled<Border>[], owner: number[]): Face[] => {
-  let next = 0
-  return plans.map((plan, slope) => {
-    const ids = plan.points.map(() => at(owner, next++))
-    const nodes: number[] = []
-    const borders: Border[] = []
-    ids.forEach((id, k) => {
-      if (id === at(ids, k + 1)) return
-      nodes.push(id)
-      borders.push(at(plan.labels, k))
-    })
-    return { slope, nodes, borders }
-  })
-}
-
-const creaseKind = (a: RoofNode, b: RoofNode): LineKind => {
-  if (a.corner !== null || b.corner !== null) return 'hip'
+const isLevel = (a: RoofNode, b: RoofNode): boolean => {
   const rise = Math.abs(a.point.z - b.point.z)
-  const isLevel = rise <= levelMm && rise <= levelSlope * distance2(a.point, b.point)
-  return isLevel ? 'ridge' : 'broken-hip'
+  return rise <= levelMm && rise <= levelSlope * distance2(a.point, b.point)
 }
 
-const linesOf = (plates: PlateLines, nodes: RoofNode[], faces: Face[]): NodeLine[] => {
-  const lines: NodeLine[] = []
-  for (const face of faces) {
-    face.borders.forEach((border, k) => {
-      const from = at(face.nodes, k)
-      const to = at(face.nodes, k + 1)
-      if (border.kind === 'slope' && border.slope > face.slope) {
-        const kind = creaseKind(at(nodes, from), at(nodes, to))
-        // going round a slope counter-clockwise its upper side runs against its plate
-        const up = at(nodes, from).point.z <= at(nodes, to).point.z
-        const forward = kind === 'ridge' ? false : up
-        lines.push({
-          kind,
-          from: forward ? from : to,
-          to: forward ? to : from,
-          slopes: [face.slope, border.slope],
-        })
-      }
-      if (border.kind === 'plate' && at(plates.edges, border.edge).finish === 'gable') {
-        const up = at(nodes, from).point.z <= at(nodes, to).point.z
-        lines.push({
-          kind: 'verge',
-          from: up ? from : to,
-          to: up ? to : from,
-          slopes: [face.slope],
-        })
-      }
-    })
+/** The kind of the crease from a to b between the slope on its left and the one on its right. */
+const creaseKind = (
+  plates: PlateLines,
+  a: RoofNode,
+  b: RoofNode,
+  left: number,
+  right: number,
+): LineKind => {
+  const [one, other] = [at(plates.slopes, left), at(plates.slopes, right)]
+  // along the left normal the left slope falls away more than the right one climbs: convex
+  const across = cross2(sub2(b.point, a.point), sub2(slopeGradient(one), slopeGradient(other)))
+  if (across > 0) return 'valley'
+  if (isLevel(a, b)) return 'ridge'
+  return a.corner !== null || b.corner !== null ? 'hip' : 'broken-hip'
+}
+
+/** A line and where it comes from: a crease (by index), or an eave (by its first edge). */
+type Traced = { line: NodeLine; crease: number | null; eave: number | null }
+
+const creaseLine = (
+  plates: PlateLines,
+  nodes: RoofNode[],
+  creases: Crease[],
+  face: RawFace,
+  own: number,
+  k: number,
+): Traced[] => {
+  const border = at(face.borders, k)
+  if (!('crease' in border)) return []
+  const { crease, other } = border
+  const ends = { from: at(face.nodes, k), to: at(face.nodes, k + 1) }
+  const turned = { from: ends.to, to: ends.from }
+  const [a, b] = [at(nodes, ends.from), at(nodes, ends.to)]
+  const isUp = a.point.z <= b.point.z
+  if ('gable' in other) {
+    // the top of a lean-to against its high wall is level; it runs against the plate, as ridges do
+    const kind = isLevel(a, b) ? 'ridge' : 'verge'
+    const line = { kind, ...(isUp && kind === 'verge' ? ends : turned), slopes: [own] } as const
+    return [{ line: { ...line, slopes: [own] }, crease, eave: null }]
   }
-  for (const slope of plates.slopes) {
-    const from = at(slope.edges, 0)
-    const to = (at(slope.edges, slope.edges.length - 1) + 1) % plates.edges.length
-    lines.push({ kind: 'eave', from, to, slopes: [slope.index] })
-  }
-  const order: LineKind[] = ['ridge', 'hip', 'broken-hip', 'valley', 'verge', 'eave']
-  return lines
-    .map((line, place) => ({ line, place }))
-    .sort((a, b) => order.indexOf(a.line.kind) - order.indexOf(b.line.kind) || a.place - b.place)
-    .map(({ line }) => line)
+  if (other.slope < own) return []
+  const { left, right } = at(creases, crease)
+  if (!('slope' in left) || !('slope' in right)) return []
+  const kind = creaseKind(plates, a, b, own, other.slope)
+  // going round a slope counter-clockwise its upper side runs against its plate
+  const forward = kind === 'ridge' ? false : isUp
+  const line = { kind, ...(forward ? ends : turned), slopes: [own, other.slope] }
+  return [{ line, crease, eave: null }]
+}
+
+const eaveLines = (plates: PlateLines): Traced[] =>
+  plates.slopes.flatMap((slope) =>
+    eaveRuns(plates, slope).map((run): Traced => {
+      const from = at(run, 0)
+      const to = (at(run, -1) + 1) % plates.edges.length
+      return { line: { kind: 'eave', from, to, slopes: [slope.index] }, crease: null, eave: from }
+    }),
+  )
+
+const order: LineKind[] = ['ridge', 'hip', 'broken-hip', 'valley', 'verge', 'eave']
+
+const borderOf = (traced: Traced[], border: RawFace['borders'][number]): Border => {
+  const found = traced.findIndex((t) =>
+    'crease' in border ? t.crease === border.crease : t.eave === border.eave,
+  )
+  const line = found < 0 ? null : found
+  if (!('crease' in border)) return { kind: 'plate', edge: border.eave, line }
+  if ('gable' in border.other) return { kind: 'plate', edge: border.other.gable, line }
+  return { kind: 'slope', slope: border.other.slope, line: found }
 }
 
 /**
- * Nodes, slopes and lines of the roof over a convex outline without problems: the lower envelope of
- * the set-out planes. Points that coincide within half a millimetre are one node, so four or more
- * slopes meeting in a point give one apex and no sliver. All heights are of set-out planes.
+ * Nodes, slopes and lines of the roof over an outline without problems: any simple outline, each eave
+ * with its own pitch. Events that coincide within half a millimetre are one node, so four or more slopes
+ * meeting in a point give one apex and no sliver. All heights are of set-out planes. Nodes 0 to n − 1
+ * are the plate corners.
  */
 export const roofLines = (plates: PlateLines): RoofLines => {
-  const plans = plates.slopes.map((slope) => slopePlan(plates, slope, () => 0))
-  const vertices = plans.flatMap((plan, slope) => plan.points.map((point) => ({ point, slope })))
-  const { nodes, owner } = gatherNodes(plates, vertices)
-  const faces = facesOf(plans, owner)
-  return { nodes, faces, lines: linesOf(plates, nodes, faces) }
+  const net = roofCreases(plates)
+  const faces = readFaces(plates, net)
+  const traced = faces
+    .flatMap((face, own) =>
+      face.borders.flatMap((_, k) => creaseLine(plates, net.nodes, net.creases, face, own, k)),
+    )
+    .concat(eaveLines(plates))
+  traced.sort((a, b) => order.indexOf(a.line.kind) - order.indexOf(b.line.kind))
+  return {
+    nodes: net.nodes,
+    faces: faces.map(({ nodes, borders }, slope) => ({
+      slope,
+      nodes,
+      borders: borders.map((border) => borderOf(traced, border)),
+    })),
+    lines: traced.map(({ line }) => line),
+  }
 }
 
-/** A square line's part in a slope: how far inside the plate it starts and ends, and what borders the slope there. */
-export type SquareSpan = { low: number; high: number; lowBorder: Border; highBorder: Border }
-
-/** Where a slope's square line `alongMm` from its first corner enters and leaves the slope, mm inside its plate. */
-export const squareLineSpan = (
-  lines: RoofLines,
-  slope: Slope,
-  face: Face,
-  alongMm: number,
-): SquareSpan | null => {
-  let low = Infinity
-  let high = -Infinity
-  let lowBorder: Border = { kind: 'open' }
-  let highBorder: Border = { kind: 'open' }
-  face.nodes.forEach((id, k) => {
-    const p = at(lines.nodes, id).point
-    const q = at(lines.nodes, at(face.nodes, k + 1)).point
-    const sp = dot2(slope.along, sub2(p, slope.origin)) - alongMm
-    const sq = dot2(slope.along, sub2(q, slope.origin)) - alongMm
-    if (Math.min(sp, sq) > 0 || Math.max(sp, sq) < 0 || Math.abs(sp - sq) < 1e-9) return
-    const t = sp / (sp - sq)
-    const depth = insideMm(slope, p) * (1 - t) + insideMm(slope, q) * t
-    const border = at(face.borders, k)
-    if (depth < low) {
-      low = depth
-      lowBorder = border
-    }
-    if (depth > high) {
-      high = depth
-      highBorder = border
-    }
-  })
-  return high > low ? { low, high, lowBorder, highBorder } : null
-}
+export { squareLineSpan } from './square-spans.ts'
+export type { SquareSpan } from './square-spans.ts'

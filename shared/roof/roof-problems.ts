@@ -3,7 +3,8 @@ import { roofJoints } from './clusters.ts'
 import { roofLines } from './roof-lines.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { Roof, RoofProblem, RoofSettings } from './roof-types.ts'
-import { at, plateLines } from './slopes.ts'
+import { at } from './slopes.ts'
+import { plateLines } from './plate-lines.ts'
 import { commonStandMm, leastSeatMm, rafterSeatMm } from './stand.ts'
 
 /** Thrown by `frameRoof`; `problems` says field by field what to change. */

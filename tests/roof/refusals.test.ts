@@ -48,19 +48,20 @@ const refusals: [string, Roof, string, RegExp][] = [
     /clockwise/,
   ],
   [
-    'a corner that turns inwards',
+    'a gable at a corner that turns inwards',
     makeRoof(
       [
         [0, 0],
         [9000, 0],
-        [6000, 3000],
         [9000, 6000],
-        [0, 6000],
+        [5000, 6000],
+        [5000, 9000],
+        [0, 9000],
       ],
-      [25, 25, 25, 25, 25],
+      [25, 25, 'gable', 25, 25, 25],
     ),
-    'outline.2',
-    /Corner 3 turns inwards.*valley/,
+    'edges.2.finish',
+    /Edge 3 is a gable.*turns inwards at its corner 4/,
   ],
   [
     'an outline over 100 m',
