@@ -13,6 +13,7 @@ import { planMember } from './plan-members.ts'
 import type { PlanProblem } from './plan-problems.ts'
 import { planProblems } from './plan-problems.ts'
 import type { DrawableRoof, PlanView } from './plan-view.ts'
+import { posedMember } from './timber-pose.ts'
 import { drawableRoof, planView } from './plan-view.ts'
 
 export type PlanDrawingOptions = {
@@ -60,7 +61,7 @@ export function planDrawing(
   const view = planView(drawable, { ...options, marginPx: marginPx[options.mode] })
   const members = (spec?.members ?? [])
     .filter((member) => isOnPlan(member, options.hiddenLayers ?? noLayers, options.firstMarks))
-    .map((member) => planMember(member, view))
+    .map((member) => planMember(spec ? posedMember(spec, member) : member, view))
   const problems = planProblems(options.problems, drawable, view)
   const corners = options.mode === 'edit' ? planCorners(drawable, view) : []
   const dimensions = planDimensions(drawable, view, corners, options.units)

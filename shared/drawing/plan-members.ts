@@ -1,4 +1,5 @@
-import type { Member, MemberRole } from '../roof/roof-types.ts'
+import type { MemberRole } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import type { DrawingPoint, Segment } from './drawing-geometry.ts'
 import { distanceToSegment, segmentLength } from './drawing-geometry.ts'
 import type { PlanView } from './plan-view.ts'
@@ -15,7 +16,7 @@ export type PlanMember = {
   thicknessPx: number
 }
 
-export function planMember(member: Member, view: PlanView): PlanMember {
+export function planMember(member: DrawnMember, view: PlanView): PlanMember {
   const placeAt = (alongMm: number) =>
     view.place(timberPointInPlan(member, { alongMm, acrossMm: 0, downMm: 0 }))
   return {

@@ -1,4 +1,4 @@
-import type { Member } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import { formatLength, type LengthUnits } from '../units/format-length.ts'
 import { cutWords, type BevelDialData, type BevelPlace } from './bevel-dials.ts'
 import type { DrawingPoint } from './drawing-geometry.ts'
@@ -14,7 +14,7 @@ export type TimberLetter = { letter: string; at: DrawingPoint }
 
 /** The words below the side view: the cut at each end, heel and seat, with their bevels' letters. */
 export function calloutWishes(
-  member: Member,
+  member: DrawnMember,
   mouth: BirdsmouthPoints | null,
   dials: readonly BevelDialData[],
   layout: TimberLayout,
@@ -58,7 +58,7 @@ function cheekWords(cuts: readonly { longSide: string }[]): string {
 
 /** Letters of the bevels across the top in the margin beside the cut, and of the backing over it. */
 export function topLetters(
-  member: Member,
+  member: DrawnMember,
   dials: readonly BevelDialData[],
   layout: TimberLayout,
 ): TimberLetter[] {
@@ -86,7 +86,7 @@ export function topLetters(
 
 /** Which arris is which, the backing, and the height over plate at the top of its plumb line. */
 export function timberTexts(
-  member: Member,
+  member: DrawnMember,
   mouth: BirdsmouthPoints | null,
   dials: readonly BevelDialData[],
   layout: TimberLayout,

@@ -1,4 +1,4 @@
-import type { Member } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import { formatLength, type LengthUnits } from '../units/format-length.ts'
 import { bevelDialsOf } from './bevel-dials.ts'
 import type { DrawingPoint, Segment } from './drawing-geometry.ts'
@@ -6,9 +6,16 @@ import type { BirdsmouthPoints } from './timber-outline.ts'
 import { birdsmouthPoints, timberEndLines, timberSideOutline } from './timber-outline.ts'
 import { piecesBetweenBreaks } from './timber-pieces.ts'
 import type { MeasuringPoint } from './timber-points.ts'
-import { measuringPoints, measuringPointWords } from './timber-points.ts'
-import { arrisFallMm, timberEndMm, timberTopOutline } from './timber-shape.ts'
-import type { DimensionWish, TimberCallout, TimberDimension } from './timber-texts.ts'
+import { measuringPoints } from './timber-points.ts'
+import {
+  arrisFallMm,
+  dishDepths,
+  timberEndMm,
+  timberTop,
+  timberTopOutline,
+} from './timber-shape.ts'
+import { dimensionWishes } from './timber-dimensions.ts'
+import type { TimberCallout, TimberDimension } from './timber-texts.ts'
 import { dimensionRowPx, placeCallouts, placeDimensions } from './timber-texts.ts'
 import { calloutWishes, timberTexts, topLetters } from './timber-callouts.ts'
 import type { TimberLetter, TimberText } from './timber-callouts.ts'
@@ -42,7 +49,7 @@ const sideMarginPx = 26
 const edgeWordsPx = 20
 const largestDepthPx = 128
 
-export function timberDrawing(member: Member, options: TimberDrawingOptions): TimberDrawing {
+export function timberDrawing(member: DrawnMember, options: TimberDrawingOptions): TimberDrawing {
   const mouth = birdsmouthPoints(member)
   const points = [...measuringPoints(member, 'foot'), ...measuringPoints(member, 'head')]
   const scale = timberScale(zoneWishes(member, mouth), {
@@ -51,9 +58,7 @@ export function timberDrawing(member: Member, options: TimberDrawingOptions): Ti
     maxPxPerMm: largestDepthPx / Math.max(member.section.depthMm, 40),
   })
   const rows = placeDimensions(
-    member.role === 'ridge'
-      ? ridgeDimensions(member, points, scale, options.units)
-      : tapeDimensions(points, scale, options.units),
+    dimensionWishes(member, points, scale, options.units),
     options.widthPx,
   )
   const layout = layoutFor(member, scale, rows.heightPx + edgeWordsPx)
@@ -71,8 +76,8 @@ export function timberDrawing(member: Member, options: TimberDrawingOptions): Ti
     scale,
     topPieces: piecesBetweenBreaks(timberTopOutline(member).map(layout.top), scale.zones),
     sidePieces: piecesBetweenBreaks(timberSideOutline(member).map(layout.side), scale.zones),
-    lines: faceLines(member, layout),
-    fineLines: backingLines(member, layout),
+    lines: [...faceLines(member, layout), ...dishLines(member, layout)],
+    fineLines: topShapeLines(member, layout),
     setOutLines: setOutLines(member, mouth, layout),
     points: points.flatMap((point) => pointDots(point, layout)),
     dimensions: [
@@ -85,51 +90,8 @@ export function timberDrawing(member: Member, options: TimberDrawingOptions): Ti
   }
 }
 
-/** Every reading of the tape, from the heel plumb line. */
-function tapeDimensions(
-  points: readonly MeasuringPoint[],
-  scale: TimberScale,
-  units: LengthUnits,
-): DimensionWish[] {
-  return points.map((point) => ({
-    texts: measuringPointWords(point).map(
-      (words) => `${words} ${formatLength(Math.abs(point.alongMm), units)}`,
-    ),
-    from: { x: scale.xPx(0), y: 0 },
-    to: { x: scale.xPx(point.alongMm), y: 0 },
-    isMain: point.end === 'head' && (point.name === 'long point' || point.name === 'cut'),
-  }))
-}
-
-/** A ridge has no heel: its set-out length from node to node, and what runs past each. */
-function ridgeDimensions(
-  member: Member,
-  points: readonly MeasuringPoint[],
-  scale: TimberScale,
-  units: LengthUnits,
-): DimensionWish[] {
-  const setOutMm = member.setOutLengthMm
-  const span = (name: string, fromMm: number, toMm: number, isMain: boolean): DimensionWish[] =>
-    Math.abs(toMm - fromMm) < 0.5
-      ? []
-      : [
-          {
-            texts: [`${name} ${formatLength(Math.abs(toMm - fromMm), units)}`],
-            from: { x: scale.xPx(fromMm), y: 0 },
-            to: { x: scale.xPx(toMm), y: 0 },
-            isMain,
-          },
-        ]
-  const ends = points.flatMap((point) => {
-    const fromMm = point.end === 'head' ? setOutMm : 0
-    const isPast = point.end === 'head' ? point.alongMm > fromMm : point.alongMm < fromMm
-    return span(isPast ? 'past' : 'short', fromMm, point.alongMm, false)
-  })
-  return [...span('set-out', 0, setOutMm, true), ...ends]
-}
-
 function wholeLength(
-  member: Member,
+  member: DrawnMember,
   layout: TimberLayout,
   lineY: number,
   options: TimberDrawingOptions,
@@ -149,7 +111,7 @@ function wholeLength(
   }
 }
 
-function faceLines(member: Member, layout: TimberLayout): TimberDrawing['lines'] {
+function faceLines(member: DrawnMember, layout: TimberLayout): TimberDrawing['lines'] {
   const ends = (['foot', 'head'] as const).flatMap((end) => timberEndLines(member, end))
   return ends.map((line) => ({
     from: layout.side(line.from),
@@ -158,10 +120,11 @@ function faceLines(member: Member, layout: TimberLayout): TimberDrawing['lines']
   }))
 }
 
-/** Along the timber, broken where it is broken. */
-function backingLines(member: Member, layout: TimberLayout): Segment[] {
-  if (!member.backing) return []
-  const arrisMm = arrisFallMm(member, -member.section.thicknessMm / 2)
+/** Along the timber, broken where it is broken: the middle and near arris of a backed top, or a dish. */
+function topShapeLines(member: DrawnMember, layout: TimberLayout): Segment[] {
+  if (timberTop(member) === 'square') return []
+  const dish = dishDepths(member)
+  const arrisMm = dish?.rightMm ?? arrisFallMm(member, -member.section.thicknessMm / 2)
   const middle = [timberEndMm(member, 'foot', 0, 0), timberEndMm(member, 'head', 0, 0)]
   const near = (['foot', 'head'] as const).map(
     (end) => timberEndLines(member, end)[0]?.from.alongMm ?? 0,
@@ -177,8 +140,24 @@ function backingLines(member: Member, layout: TimberLayout): Segment[] {
   ]
 }
 
+/** The bottom of a dish, out of sight behind the side. */
+function dishLines(member: DrawnMember, layout: TimberLayout): TimberDrawing['lines'] {
+  const dish = dishDepths(member)
+  if (!dish) return []
+  const { y } = layout.side({ alongMm: 0, downMm: dish.middleMm })
+  const ends = (['foot', 'head'] as const).map((end) =>
+    layout.scale.xPx(timberEndMm(member, end, 0, dish.middleMm)),
+  )
+  const [footX = 0, headX = 0] = ends
+  return layout.scale.zones.map((zone) => ({
+    from: { x: Math.max(zone.startPx, footX), y },
+    to: { x: Math.min(zone.endPx, headX), y },
+    isHidden: true,
+  }))
+}
+
 function setOutLines(
-  member: Member,
+  member: DrawnMember,
   mouth: BirdsmouthPoints | null,
   layout: TimberLayout,
 ): Segment[] {
@@ -193,8 +172,10 @@ function setOutLines(
   })
   if (member.role === 'ridge')
     return [0, member.setOutLengthMm].flatMap((alongMm) => [over(alongMm), down(alongMm)])
-  if (!mouth) return [over(0)]
-  return [over(0), { from: layout.side(mouth.heelTop), to: layout.side(mouth.corner) }]
+  if (!mouth) return []
+  const heelLine = { from: layout.side(mouth.heelTop), to: layout.side(mouth.corner) }
+  if (mouth.heelTop.alongMm === 0) return [over(0), heelLine]
+  return [over(0), over(mouth.heelTop.alongMm), heelLine]
 }
 
 function pointDots(point: MeasuringPoint, layout: TimberLayout): TimberDrawing['points'] {

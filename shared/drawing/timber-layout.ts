@@ -1,4 +1,4 @@
-import type { Member } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import type { DrawingPoint } from './drawing-geometry.ts'
 import type { BirdsmouthPoints, SidePoint } from './timber-outline.ts'
 import { timberEndLines } from './timber-outline.ts'
@@ -19,27 +19,29 @@ export type TimberLayout = {
 const betweenPx = 24
 
 /** Tail, birdsmouth and head (a ridge: its two ends), each with a little plain timber beside it. */
-export function zoneWishes(member: Member, mouth: BirdsmouthPoints | null): TimberZoneWish[] {
+export function zoneWishes(member: DrawnMember, mouth: BirdsmouthPoints | null): TimberZoneWish[] {
   const alongs = (end: 'head' | 'foot') =>
     timberEndLines(member, end).flatMap((line) => [line.from.alongMm, line.to.alongMm])
-  const heel = mouth ? [0, mouth.heelFoot.alongMm, mouth.seatEnd.alongMm] : [0]
-  const head = mouth ? alongs('head') : [...alongs('head'), nodeNearHead(member)]
+  const heel = mouth
+    ? [0, mouth.heelTop.alongMm, mouth.heelFoot.alongMm, mouth.seatEnd.alongMm]
+    : [0]
   const zone = (of: number[], beforePx: number, afterPx: number): TimberZoneWish => ({
     fromMm: Math.min(...of),
     toMm: Math.max(...of),
     beforePx,
     afterPx,
   })
-  return [zone(alongs('foot'), 0, 16), zone(heel, 14, 14), zone(head, 40, 0)]
+  const foot = zone(alongs('foot'), 0, 16)
+  if (member.role === 'ridge') {
+    // Where a ridge's set-out ends, so that what runs past it is seen.
+    const head = [...alongs('head'), member.setOutLengthMm]
+    return [foot, zone(heel, 14, 14), zone(head, 40, 0)]
+  }
+  const head = zone(alongs('head'), 40, 0)
+  return mouth ? [foot, zone(heel, 14, 14), head] : [zone(alongs('foot'), 0, 40), head]
 }
 
-/** Where a ridge's set-out ends, so that what runs past it is seen. */
-function nodeNearHead(member: Member): number {
-  const ends = timberEndLines(member, 'head').map((line) => line.from.alongMm)
-  return member.role === 'ridge' ? member.setOutLengthMm : Math.min(...ends)
-}
-
-export function layoutFor(member: Member, scale: TimberScale, topY: number): TimberLayout {
+export function layoutFor(member: DrawnMember, scale: TimberScale, topY: number): TimberLayout {
   const { thicknessMm, depthMm } = member.section
   const topHeightPx = thicknessMm * scale.pxPerMm
   const sideY = topY + topHeightPx + betweenPx

@@ -1,4 +1,4 @@
-import type { Member } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import type { TimberPoint } from './timber-shape.ts'
 import { endCuts, timberTopEnd } from './timber-shape.ts'
 
@@ -20,7 +20,7 @@ const sameMm = 0.05
  * What the tape reads at one end of a timber, the farthest first. A cut square across gives one
  * reading, one cheek two, two cheeks two or three.
  */
-export function measuringPoints(member: Member, end: 'head' | 'foot'): MeasuringPoint[] {
+export function measuringPoints(member: DrawnMember, end: 'head' | 'foot'): MeasuringPoint[] {
   const outward = end === 'head' ? 1 : -1
   const endWord = endCuts(member, end)[0]?.end ?? end
   const groups: TimberPoint[][] = []
@@ -66,7 +66,7 @@ function pointSide(places: readonly TimberPoint[], halfMm: number): MeasuringPoi
 }
 
 /** Which way the head is cut, in words for a card: "Long point on the left, bow up". */
-export function handWords(member: Member): string {
+export function handWords(member: DrawnMember): string {
   if (member.hand) return `Long point on the ${member.hand}, bow up`
   const cheeks = endCuts(member, 'head').filter((cut) => cut.longSide !== 'none').length
   if (cheeks > 1) return 'Long point in the middle, two cheeks, bow up'

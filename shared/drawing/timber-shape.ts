@@ -1,4 +1,5 @@
-import type { Cut, Member, Point2, Point3 } from '../roof/roof-types.ts'
+import type { Cut, Point2, Point3 } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 
 /**
  * A place on a timber: along the top-edge centre line from the heel plumb line (a ridge: from its
@@ -10,22 +11,35 @@ export type TimberPoint = { alongMm: number; acrossMm: number; downMm: number }
 export type TimberAxes = { along: Point3; left: Point3; down: Point3 }
 
 /** The three directions of a timber in space, each of unit length. */
-export function timberAxes(member: Pick<Member, 'axis'>): TimberAxes {
+export function timberAxes(member: Pick<DrawnMember, 'axis' | 'topNormal'>): TimberAxes {
   const { from, to } = member.axis
-  const run = Math.hypot(to.x - from.x, to.y - from.y) || 1
-  const length = Math.hypot(run, to.z - from.z)
-  const ahead = { x: (to.x - from.x) / run, y: (to.y - from.y) / run }
-  const cos = run / length
-  const sin = (to.z - from.z) / length
-  return {
-    along: { x: ahead.x * cos, y: ahead.y * cos, z: sin },
-    left: { x: -ahead.y, y: ahead.x, z: 0 },
-    down: { x: ahead.x * sin, y: ahead.y * sin, z: -cos },
+  const length = Math.hypot(to.x - from.x, to.y - from.y, to.z - from.z) || 1
+  const along = {
+    x: (to.x - from.x) / length,
+    y: (to.y - from.y) / length,
+    z: (to.z - from.z) / length,
   }
+  // The sides of a timber are plumb unless its top lies in a slope.
+  const left = unit(cross(member.topNormal ?? { x: 0, y: 0, z: 1 }, along))
+  return { along, left, down: cross(left, along) }
+}
+
+function cross(a: Point3, b: Point3): Point3 {
+  return { x: a.y * b.z - a.z * b.y, y: a.z * b.x - a.x * b.z, z: a.x * b.y - a.y * b.x }
+}
+
+function unit(a: Point3): Point3 {
+  const length = Math.hypot(a.x, a.y, a.z) || 1
+  return { x: a.x / length, y: a.y / length, z: a.z / length }
 }
 
 /** Where a cut's plane meets the line that runs along the timber at this offset. */
-export function cutAlongMm(member: Member, cut: Cut, acrossMm: number, downMm: number): number {
+export function cutAlongMm(
+  member: DrawnMember,
+  cut: Cut,
+  acrossMm: number,
+  downMm: number,
+): number {
   const axes = timberAxes(member)
   const { point, normal } = cut.plane
   const toPlane = {
@@ -39,7 +53,7 @@ export function cutAlongMm(member: Member, cut: Cut, acrossMm: number, downMm: n
 
 /** Where the timber ends at this offset: the nearest of its cuts at that end. */
 export function timberEndMm(
-  member: Member,
+  member: DrawnMember,
   end: 'head' | 'foot',
   acrossMm: number,
   downMm: number,
@@ -50,7 +64,7 @@ export function timberEndMm(
 }
 
 /** A timber's cuts at one end; the tail of a rafter is its foot end. */
-export function endCuts(member: Member, end: 'head' | 'foot'): Cut[] {
+export function endCuts(member: DrawnMember, end: 'head' | 'foot'): Cut[] {
   return member.cuts.filter((cut) => (cut.end === 'head') === (end === 'head'))
 }
 
@@ -58,7 +72,7 @@ export function endCuts(member: Member, end: 'head' | 'foot'): Cut[] {
  * The timber seen from above its top edge, square to it: round its left side from foot to head and
  * back along its right, with the ridges between two cheeks as corners of their own.
  */
-export function timberTopOutline(member: Member): TimberPoint[] {
+export function timberTopOutline(member: DrawnMember): TimberPoint[] {
   return [...timberTopEnd(member, 'head'), ...timberTopEnd(member, 'foot').reverse()]
 }
 
@@ -66,7 +80,7 @@ export function timberTopOutline(member: Member): TimberPoint[] {
  * The corners of one end on the top, left to right: two arrises, and where two cheeks meet. Each is
  * where the tape reads it: along the top from the heel plumb line, on the arris of a backed top too.
  */
-export function timberTopEnd(member: Member, end: 'head' | 'foot'): TimberPoint[] {
+export function timberTopEnd(member: DrawnMember, end: 'head' | 'foot'): TimberPoint[] {
   const half = member.section.thicknessMm / 2
   const fallPerMm = Math.tan((member.pitchDeg * Math.PI) / 180)
   return [half, ...cheekMeetings(member, end), -half].map((acrossMm) => {
@@ -76,15 +90,41 @@ export function timberTopEnd(member: Member, end: 'head' | 'foot'): TimberPoint[
   })
 }
 
-/** How far below its centre line a backed top lies at this offset. */
-export function arrisFallMm(member: Member, acrossMm: number): number {
-  if (!member.backing) return 0
+export type TimberTop = 'square' | 'backed' | 'dished'
+
+/** Backed: planed down towards its edges. Dished: down towards its middle, after it is cut. */
+export function timberTop({ backing }: Pick<DrawnMember, 'backing'>): TimberTop {
+  if (!backing) return 'square'
+  return backing.leftDeg < 0 || backing.rightDeg < 0 ? 'dished' : 'backed'
+}
+
+/**
+ * How far below its centre line a backed top lies at this offset. A dished one is marked and cut while
+ * it is still square.
+ */
+export function arrisFallMm(member: DrawnMember, acrossMm: number): number {
+  if (!member.backing || timberTop(member) === 'dished') return 0
   const backingDeg = acrossMm > 0 ? member.backing.leftDeg : member.backing.rightDeg
   return Math.abs(acrossMm) * Math.tan((backingDeg * Math.PI) / 180)
 }
 
+/** Depth of a dished top below its square one, square to the edge: in the middle and at its edges. */
+export type DishDepths = { middleMm: number; leftMm: number; rightMm: number }
+
+export function dishDepths(member: DrawnMember): DishDepths | null {
+  const { backing } = member
+  if (!backing || timberTop(member) !== 'dished') return null
+  const middleMm = -member.dropMm * Math.cos((member.pitchDeg * Math.PI) / 180)
+  const atEdge = (backingDeg: number) =>
+    Math.max(
+      0,
+      middleMm - (member.section.thicknessMm / 2) * Math.tan((-backingDeg * Math.PI) / 180),
+    )
+  return { middleMm, leftMm: atEdge(backing.leftDeg), rightMm: atEdge(backing.rightDeg) }
+}
+
 /** A timber point seen in plan; the fall of a backed top is left out. */
-export function timberPointInPlan(member: Member, point: TimberPoint): Point2 {
+export function timberPointInPlan(member: DrawnMember, point: TimberPoint): Point2 {
   const axes = timberAxes(member)
   const { from } = member.axis
   const at = (axis: 'x' | 'y') =>
@@ -96,7 +136,7 @@ export function timberPointInPlan(member: Member, point: TimberPoint): Point2 {
 }
 
 /** Offsets across the top, left to right, at which one cheek of an end gives way to the next. */
-function cheekMeetings(member: Member, end: 'head' | 'foot'): number[] {
+function cheekMeetings(member: DrawnMember, end: 'head' | 'foot'): number[] {
   const half = member.section.thicknessMm / 2
   const cuts = endCuts(member, end)
   const meetings = cuts.flatMap((a, i) =>
@@ -117,4 +157,43 @@ function cheekMeetings(member: Member, end: 'head' | 'foot'): number[] {
 
 function dot(a: Point3, b: Point3): number {
   return a.x * b.x + a.y * b.y + a.z * b.z
+}
+
+/**
+ * From end to end along the top where a tape can be laid: both edges, and the middle where two cheeks
+ * meet there. For timbers with no heel line to hook the tape on.
+ */
+export type EdgeLength = {
+  place: 'left edge' | 'right edge' | 'both edges' | 'middle'
+  fromMm: number
+  toMm: number
+}
+
+const sameLengthMm = 0.05
+
+export function edgeLengths(member: DrawnMember): EdgeLength[] {
+  const half = member.section.thicknessMm / 2
+  const heads = timberTopEnd(member, 'head')
+  const feet = timberTopEnd(member, 'foot')
+  const at = (end: readonly TimberPoint[], acrossMm: number) =>
+    end.find((point) => Math.abs(point.acrossMm - acrossMm) < 1e-6)?.alongMm ?? 0
+  const along = (place: EdgeLength['place'], acrossMm: number): EdgeLength => ({
+    place,
+    fromMm: at(feet, acrossMm),
+    toMm: at(heads, acrossMm),
+  })
+  const left = along('left edge', half)
+  const right = along('right edge', -half)
+  const isSquare =
+    Math.abs(left.fromMm - right.fromMm) < sameLengthMm &&
+    Math.abs(left.toMm - right.toMm) < sameLengthMm
+  const edges: EdgeLength[] = isSquare ? [{ ...left, place: 'both edges' }] : [left, right]
+  const hasPoint = heads.length > 2 || feet.length > 2
+  if (!hasPoint) return edges
+  const middle: EdgeLength = {
+    place: 'middle',
+    fromMm: timberEndMm(member, 'foot', 0, 0),
+    toMm: timberEndMm(member, 'head', 0, 0),
+  }
+  return [...edges, middle]
 }

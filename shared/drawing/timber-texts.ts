@@ -1,6 +1,7 @@
-import type { Member } from '../roof/roof-types.ts'
+import type { DrawnMember } from './timber-pose.ts'
 import { formatLength, type LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint, Segment } from './drawing-geometry.ts'
+import { heelLineStandMm } from './timber-outline.ts'
 import { textWidthPx } from './text-size.ts'
 
 export const timberTextPx = 13
@@ -134,7 +135,7 @@ function freeRow(rows: { from: number; to: number }[][], from: number, to: numbe
   return rows.length - 1
 }
 
-/** The height over plate in words; empty for a timber with no birdsmouth. */
-export function overPlateText(member: Member, units: LengthUnits): string {
-  return member.birdsmouth ? `over plate ${formatLength(member.birdsmouth.standMm, units)}` : ''
+/** The height over plate in words, as it is down the heel line; empty with no birdsmouth. */
+export function overPlateText(member: DrawnMember, units: LengthUnits): string {
+  return member.birdsmouth ? `over plate ${formatLength(heelLineStandMm(member), units)}` : ''
 }
