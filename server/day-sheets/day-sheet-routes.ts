@@ -27,6 +27,7 @@ import { type Api, send } from '../http/api.ts'
 import { parseInput } from '../http/parse-input.ts'
 import { pathId } from '../http/path-id.ts'
 import type { Clock } from '../lib/clock.ts'
+import { keptIssuedRoofs } from '../revisions/issued-roofs.ts'
 import { dayRoofFor, daySheetsFor, myTasksFor, taskDetailFor } from './day-sheet-service.ts'
 import { latestComparison, recordPlateCheck } from './plate-check-service.ts'
 import { addTick, changeTask, raiseHand } from './task-service.ts'
@@ -43,16 +44,17 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
     firm: readFirm(db),
     now: clock.now(),
   })
+  const source = { db, readRoofs: keptIssuedRoofs() }
   const changed = () => events.publish({ topic: 'day-sheet' })
 
   api.route('get', '/api/day-sheets', 'day-sheet:read', (req, res) => {
     const query = parseInput(daySheetsQuerySchema, req.query)
-    send(res, daySheetsSchema, daySheetsFor(db, viewerOf(res), query))
+    send(res, daySheetsSchema, daySheetsFor(source, viewerOf(res), query))
   })
 
   api.route('get', '/api/day-sheets/:bookingDayId/spec', 'roof:read', (req, res) => {
     const id = pathId(req, 'bookingDayId', 'That roof')
-    send(res, dayRoofSchema, dayRoofFor(db, viewerOf(res), id))
+    send(res, dayRoofSchema, dayRoofFor(source, viewerOf(res), id))
   })
 
   api.route('get', '/api/my-tasks', 'task:read', (req, res) => {
@@ -62,7 +64,7 @@ export function daySheetRoutes(api: Api, { db, clock, events }: Deps): void {
 
   api.route('get', '/api/tasks/:taskId', 'task:read', (req, res) => {
     const id = pathId(req, 'taskId', 'That task')
-    send(res, taskDetailSchema, taskDetailFor(db, viewerOf(res), id))
+    send(res, taskDetailSchema, taskDetailFor(source, viewerOf(res), id))
   })
 
   api.route('patch', '/api/tasks/:taskId', 'day-sheet:write', (req, res) => {

@@ -15,6 +15,7 @@ import type { Firm } from '../firm/firm-store.ts'
 import { notFound } from '../http/app-error.ts'
 import { bookingDayVisible } from '../lib/visibility.ts'
 import { crewIdsOf } from '../people/roster.ts'
+import type { ReadIssuedRoofs } from '../revisions/issued-roofs.ts'
 import { neighbouringDays, readDaySheets } from './day-sheet-store.ts'
 import { daySheetView } from './day-sheet-view.ts'
 import {
@@ -25,6 +26,9 @@ import {
   ownTasks,
   type Viewer,
 } from './task-store.ts'
+
+/** Where sheets are read from. */
+export type SheetSource = { db: DbOrTx; readRoofs: ReadIssuedRoofs }
 
 /** Crews whose sheets this person may open on a day: all for the office, else those worked with. */
 function crewsFor(db: DbOrTx, viewer: Viewer, day: Day): CrewRef[] {
@@ -41,7 +45,7 @@ function crewsFor(db: DbOrTx, viewer: Viewer, day: Day): CrewRef[] {
 
 /** Without a crew: the first one with something on that day, or the first there is. */
 export function daySheetsFor(
-  db: DbOrTx,
+  { db, readRoofs }: SheetSource,
   viewer: Viewer,
   query: { day?: Day | undefined; crewId?: string | undefined },
 ): DaySheets {
@@ -51,7 +55,7 @@ export function daySheetsFor(
   if (query.crewId !== undefined && !choices.some((crew) => crew.id === query.crewId))
     throw notFound('That crew')
   const visible = bookingDayVisible(viewer.user, 'day-sheet:read', viewer.firm, viewer.now)
-  const sheetsOf = (crewId: string) => readDaySheets(db, { crewId, day }, viewer.now, visible)
+  const sheetsOf = (crewId: string) => readDaySheets(db, { crewId, day }, readRoofs, visible)
   const wanted = choices.filter((crew) => query.crewId === undefined || crew.id === query.crewId)
   let crew = wanted[0] ?? null
   let sheets = crew ? sheetsOf(crew.id) : []
@@ -81,18 +85,15 @@ function markingOptions(
 }
 
 /** The roof that a booking day is cut to. */
-export function dayRoofFor(db: DbOrTx, viewer: Viewer, bookingDayId: string): DayRoof {
-  const revision = db
-    .select({
-      jobId: roofRevisions.jobId,
-      letter: roofRevisions.letter,
-      roof: roofRevisions.roof,
-      spec: roofRevisions.spec,
-      settings: roofRevisions.settings,
-    })
+export function dayRoofFor(
+  { db, readRoofs }: SheetSource,
+  viewer: Viewer,
+  bookingDayId: string,
+): DayRoof {
+  const found = db
+    .select({ revisionId: bookingDays.revisionId })
     .from(bookingDays)
     .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
-    .innerJoin(roofRevisions, eq(roofRevisions.id, bookingDays.revisionId))
     .where(
       and(
         eq(bookingDays.id, bookingDayId),
@@ -101,6 +102,8 @@ export function dayRoofFor(db: DbOrTx, viewer: Viewer, bookingDayId: string): Da
       ),
     )
     .get()
+  const id = found?.revisionId ?? ''
+  const revision = readRoofs(db, [id]).get(id)
   if (!revision) throw notFound('That roof')
   const { jobId, letter, roof, spec, settings } = revision
   return { jobId, letter, roof, spec, marking: markingOptions(viewer.firm, settings) }
@@ -134,12 +137,14 @@ function placeOf(
 }
 
 /** A task with the marking card of its line and the member that the card describes. */
-export function taskDetailFor(db: DbOrTx, viewer: Viewer, taskId: string): TaskDetail {
+export function taskDetailFor(
+  { db, readRoofs }: SheetSource,
+  viewer: Viewer,
+  taskId: string,
+): TaskDetail {
   const row = findTask(db, viewer, 'task:read', taskId)
   if (!row) throw notFound('That task')
-  const revision = row.revisionId
-    ? db.select().from(roofRevisions).where(eq(roofRevisions.id, row.revisionId)).get()
-    : undefined
+  const revision = row.revisionId ? readRoofs(db, [row.revisionId]).get(row.revisionId) : undefined
   const mark = row.task.cutLineMark
   const hasLine = revision?.spec.cutLines.some((line) => line.mark === mark) ?? false
   const card =

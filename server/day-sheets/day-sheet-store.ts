@@ -10,9 +10,12 @@ import { jobs, plateChecks, roofRevisions } from '../db/tables/job-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
 import { type Firm, readFirm } from '../firm/firm-store.ts'
 import { rosterOf, type RosteredPerson } from '../people/roster.ts'
+import {
+  type IssuedRoof,
+  type ReadIssuedRoofs,
+  readIssuedRoofs,
+} from '../revisions/issued-roofs.ts'
 import { tasksOfBookings } from './task-store.ts'
-
-type RevisionRow = typeof roofRevisions.$inferSelect
 
 /** Everything a crew's day holds for one booking, unfiltered: who may see what is for the caller. */
 export type CrewDaySheet = ReturnType<typeof readDaySheets>[number]
@@ -23,7 +26,7 @@ type DayRow = { bookingId: string; id: string; day: Day; letter: string | null }
 export function readDaySheets(
   db: DbOrTx,
   { crewId, day }: { crewId: string; day: Day },
-  _now: Date,
+  readRoofs: ReadIssuedRoofs = readIssuedRoofs,
   visible?: SQL,
 ) {
   const firm = readFirm(db)
@@ -45,9 +48,9 @@ export function readDaySheets(
   const bookingIds = rows.map(({ booking }) => booking.id)
   const allTasks = tasksOfBookings(db, bookingIds)
   const allDays = daysOfBookings(db, bookingIds)
-  const revisions = revisionsById(
+  const revisions = readRoofs(
     db,
-    rows.map((row) => row.bookingDay.revisionId),
+    rows.map((row) => row.bookingDay.revisionId).filter((id) => id !== null),
   )
   const roster = rows.length > 0 ? rosterOf(db, crewId, day) : []
   return rows.map(({ booking, job, bookingDay }) => {
@@ -106,13 +109,6 @@ function daysOfBookings(db: DbOrTx, bookingIds: string[]): DayRow[] {
     .all()
 }
 
-function revisionsById(db: DbOrTx, ids: (string | null)[]): Map<string, RevisionRow> {
-  const wanted = [...new Set(ids.filter((id) => id !== null))]
-  if (wanted.length === 0) return new Map()
-  const rows = db.select().from(roofRevisions).where(inArray(roofRevisions.id, wanted)).all()
-  return new Map(rows.map((row) => [row.id, row]))
-}
-
 export type LatestPlateCheck = {
   takenAt: Date
   takenBy: string
@@ -124,7 +120,7 @@ export type LatestPlateCheck = {
 /** The latest check of sides and diagonals taken for a revision. */
 export function latestPlateCheck(
   db: DbOrTx,
-  revision: Pick<RevisionRow, 'id' | 'roof'>,
+  revision: Pick<IssuedRoof, 'id' | 'roof'>,
 ): LatestPlateCheck | null {
   const row = db
     .select({ check: plateChecks, takenBy: people.name })
@@ -147,7 +143,7 @@ function minutesThere(firm: Firm, roster: RosteredPerson[]): number {
 /** What is not as it was on the booking's day before. */
 function changesSince(
   before: DayRow,
-  revision: RevisionRow | null,
+  revision: IssuedRoof | null,
   rosterBefore: RosteredPerson[],
   roster: RosteredPerson[],
 ): string[] {

@@ -52,14 +52,14 @@ function siteContactFor(role: Role, job: typeof jobs.$inferSelect): string {
 }
 
 /** The booking's own sheet of the day, as Today shows it. */
-function sheetOf(db: DbOrTx, bookingId: string, day: Day, now: Date): CrewDaySheet | undefined {
+function sheetOf(db: DbOrTx, bookingId: string, day: Day): CrewDaySheet | undefined {
   const booking = db
     .select({ crewId: bookings.crewId })
     .from(bookings)
     .where(eq(bookings.id, bookingId))
     .get()
   if (!booking) return undefined
-  return readDaySheets(db, { crewId: booking.crewId, day }, now).find(
+  return readDaySheets(db, { crewId: booking.crewId, day }).find(
     (sheet) => sheet.booking.id === bookingId,
   )
 }
@@ -87,7 +87,7 @@ export function readDayMail(
 ): DayMail {
   const { firm, person, day, told } = from
   const bookingMails = told.bookings.map((one): DayMailBooking => {
-    const sheet = sheetOf(db, one.bookingId, day, from.now)
+    const sheet = sheetOf(db, one.bookingId, day)
     if (!sheet) throw new Error(`Booking ${one.bookingId} has no sheet on ${day}.`)
     return {
       told: one,
