@@ -1,127 +1,187 @@
+import {
+  drawnIn,
+  facetOf,
+  frameOf,
+  gapAt,
+  inFrame,
+  type Facet,
+  type Facets,
+  type Frame,
+} from './facets.ts'
 import { directionToBuilding, toBuilding, type Piece, type SawnPlane } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
-import { boxesMeet, boxOf, type Flat, type Solid } from './solid-kit.ts'
-import { cross, dot, length, sub, unit, type Vec } from './vec.ts'
+import type { Site } from './site.ts'
+import { boxesMeet, boxOf, type Flat, type SolidKit } from './solid-kit.ts'
+import { cosDeg, dot, scale, sub, type Vec } from './vec.ts'
 
 /** A butt joint closes when the other piece is there within this over the bearing face. */
 export const CLOSE_MM = 0.2
-/** Just inside the cut: deeper, the face of a second cheek in nearly the same plane would show too. */
-const FACE_MM = 0.001
-/** How deep behind the cut a piece is still taken to be what the cut was meant to meet. */
+/** How far behind a cut a face is still taken to be the one that the cut was meant to meet. */
 const REACH_MM = 6
-/** Below this share of a bearing face, what is open is an edge of a sloping top, not a gap. */
-const CLOSED_SHARE = 0.97
+/** Faces that turn further from each other than this were not meant to meet. */
+const FACING = cosDeg(2)
+/** Less than this is a corner's tip, not a face. */
 const SPECK_MM2 = 25
 /** A piece that is named must touch at all. */
 const TOUCH_MM2 = 1
 /** Two cheeks nearly in one plane touch each other's piece by a sliver that needs no name. */
 const ASIDE_SHARE = 0.03
 
-/** Lays a cut plane level at z = 0, the sawn piece under it. */
-function layLevel(solid: Solid, normal: Vec, point: Vec): Solid {
-  const helper: Vec = Math.abs(normal[2]) < 0.9 ? [0, 0, 1] : [1, 0, 0]
-  const x = unit(cross(helper, normal))
-  const y = cross(normal, x)
-  const rows = [x, y, normal]
-  const column = (i: 0 | 1 | 2): [number, number, number, number] => [
-    rows[0]![i],
-    rows[1]![i],
-    rows[2]![i],
-    0,
-  ]
-  const shift = rows.map((r) => -dot(r, point)) as [number, number, number]
-  return solid.transform([...column(0), ...column(1), ...column(2), ...shift, 1])
-}
-
-const shared = (face: Flat, solid: Solid, heightMm: number): Flat =>
-  face.intersect(solid.slice(heightMm))
-
-function faceCorners(piece: Piece, sawn: SawnPlane): Vec[] {
-  return piece.own
-    .filter((p) => Math.abs(dot(sawn.normal, sub(p, sawn.point))) < 0.05)
-    .map((p) => toBuilding(piece.pose, p))
-}
-
 type Bearing = {
   mark: string
-  solid: Solid
-  areaMm2: number
-  touchMm2: number
+  /** Area within CLOSE_MM of the cut, and area that is further off or runs into it. */
+  closedMm2: number
+  openMm2: number
+  /** The widest opening, square to the cut; under 0 where the pieces run into each other. */
+  worstMm: number
   /** It was cut to fit this piece, so this piece need not name it. */
   buttsBack: boolean
 }
 
-/** The least opening at which the other pieces fill the face; REACH_MM when they never do. */
-function openingMm(face: Flat, bearings: readonly Bearing[]): number {
-  const covered = (h: number): number => {
-    const parts = bearings.map((b) => shared(face, b.solid, h))
-    return parts.reduce((sum, part) => sum + part.area(), 0)
-  }
-  // the tip of a piece can fill the face and yet be thinner than the reach
-  const full = Math.max(covered(REACH_MM), covered(CLOSE_MM))
-  if (full < SPECK_MM2) return REACH_MM
-  for (let h = 0.05; h < REACH_MM; h *= 1.25) {
-    if (covered(h) >= CLOSED_SHARE * Math.min(full, covered(h + 1))) return h
-  }
-  return REACH_MM
+/** Part of a flat on which one side of a level line runs: `a · p <= d`. */
+function halfOf(kit: SolidKit, flat: Flat, a: readonly [number, number], d: number): Flat {
+  const size = Math.hypot(a[0], a[1])
+  const big = 20_000
+  const half = kit.CrossSection.square([big, 2 * big], true)
+    .translate([d / size - big / 2, 0])
+    .rotate((Math.atan2(a[1], a[0]) * 180) / Math.PI)
+  const part = flat.intersect(half)
+  half.delete()
+  return part
 }
 
-function checkCut(complain: Complain, piece: Piece, sawn: SawnPlane, others: Piece[]): void {
-  const { cut } = sawn
+/** Area of a face over which another one stands within CLOSE_MM: the gap runs straight across it. */
+function closedArea(kit: SolidKit, frame: Frame, facet: Facet, both: Flat): number {
+  const at = gapAt(frame, facet, [0, 0])
+  const slope = [gapAt(frame, facet, [1, 0]) - at, gapAt(frame, facet, [0, 1]) - at] as const
+  if (Math.hypot(...slope) < 1e-7) return Math.abs(at) <= CLOSE_MM ? both.area() : 0
+  const under = halfOf(kit, both, slope, CLOSE_MM - at)
+  const within = halfOf(kit, under, [-slope[0], -slope[1]], CLOSE_MM + at)
+  const area = within.area()
+  under.delete()
+  within.delete()
+  return area
+}
+
+function bearingOn(
+  site: Site,
+  frame: Frame,
+  face: Flat,
+  facets: Facet[],
+): Omit<Bearing, 'mark' | 'buttsBack'> {
+  const found = { closedMm2: 0, openMm2: 0, worstMm: 0 }
+  for (const facet of facets) {
+    const drawn = drawnIn(site.kit, frame, facet)
+    const both = face.intersect(drawn)
+    drawn.delete()
+    const gaps = both
+      .toPolygons()
+      .flatMap((ring) => ring.map((p) => gapAt(frame, facet, [p[0]!, p[1]!])))
+    const meant = gaps.some((gap) => Math.abs(gap) <= REACH_MM)
+    if (meant) {
+      const area = both.area()
+      const closed = closedArea(site.kit, frame, facet, both)
+      found.closedMm2 += closed
+      found.openMm2 += area - closed
+      for (const gap of gaps) if (Math.abs(gap) > Math.abs(found.worstMm)) found.worstMm = gap
+    }
+    both.delete()
+  }
+  return found
+}
+
+const faceCorners = (piece: Piece, sawn: SawnPlane): Vec[] =>
+  piece.own
+    .filter((p) => Math.abs(dot(sawn.normal, sub(p, sawn.point))) < 0.05)
+    .map((p) => toBuilding(piece.pose, p))
+
+/** What stands on or near a face: every other piece with a face turned to it. */
+function bearingsOn(
+  site: Site,
+  facets: Facets,
+  piece: Piece,
+  sawn: SawnPlane,
+  frame: Frame,
+  face: Flat,
+): Bearing[] {
   const { mark } = piece.member
-  const normal = directionToBuilding(piece.pose, sawn.normal)
-  const point = toBuilding(piece.pose, sawn.point)
-  const face = layLevel(piece.solid, normal, point).slice(-FACE_MM)
-  const say = (text: string, out: number, other?: string): void =>
-    complain({ check: 'joint', marks: other === undefined ? [mark] : [mark, other], out, text })
-  if (face.area() < SPECK_MM2) return say(`its ${cut.end} cut misses the timber, mm²`, face.area())
-
   const near = boxOf(faceCorners(piece, sawn), REACH_MM)
-  const bearings: Bearing[] = others
-    .filter((o) => o !== piece && boxesMeet(o.box, near))
+  return site.pieces
+    .filter((o) => o.member.mark !== mark && boxesMeet(o.box, near))
     .map((o) => {
-      const solid = layLevel(o.solid, normal, point)
-      const areaMm2 = shared(face, solid, REACH_MM / 4).area()
-      const touchMm2 = shared(face, solid, CLOSE_MM / 2).area()
+      const facing = facets.facing(o, scale(frame.normal, -1), FACING)
       const buttsBack = o.member.cuts.some((c) => [c.against, ...c.alsoAgainst].includes(mark))
-      return { mark: o.member.mark, solid, areaMm2, touchMm2, buttsBack }
+      return { mark: o.member.mark, buttsBack, ...bearingOn(site, frame, face, facing) }
     })
-    .filter((b) => b.areaMm2 > TOUCH_MM2)
-    .sort((a, b) => b.areaMm2 - a.areaMm2)
+    .filter((b) => b.closedMm2 + b.openMm2 > TOUCH_MM2)
+    .sort((a, b) => b.closedMm2 - a.closedMm2)
+}
 
-  const aside = Math.max(SPECK_MM2, ASIDE_SHARE * face.area())
+/** Ends that may stand free: tails, the ends of ridges, and the foot of a broken hip. */
+function mayStandFree(piece: Piece, sawn: SawnPlane): boolean {
+  const { role } = piece.member
+  if (sawn.cut.end === 'tail' || role === 'ridge') return true
+  return role === 'broken-hip' && sawn.cut.end === 'foot'
+}
+
+type Say = (text: string, out: number, other?: string) => void
+
+function judgeNames(say: Say, sawn: SawnPlane, bearings: Bearing[], faceMm2: number): void {
+  const { cut } = sawn
+  const aside = Math.max(SPECK_MM2, ASIDE_SHARE * faceMm2)
   const listed = cut.against === null ? [] : [cut.against, ...cut.alsoAgainst]
   for (const name of listed) {
     if (bearings.some((b) => b.mark === name)) continue
     say(`its ${cut.end} cut is said to bear on it and does not`, 0, name)
   }
   for (const b of bearings) {
-    if (listed.includes(b.mark) || b.buttsBack || b.touchMm2 < aside) continue
-    say(`its ${cut.end} cut bears on it unsaid, mm²`, b.areaMm2, b.mark)
-  }
-  if (cut.against === null) {
-    const free = cut.end !== 'head' || piece.member.role === 'ridge'
-    return free ? undefined : say('its head cut is said to bear on nothing', 0)
+    if (listed.includes(b.mark) || b.buttsBack || b.closedMm2 < aside) continue
+    say(`its ${cut.end} cut bears on it unsaid, mm²`, b.closedMm2, b.mark)
   }
   const named = bearings.filter((b) => listed.includes(b.mark))
-  const [most] = bearings
   const first = named.find((b) => b.mark === cut.against)
-  if (most === undefined || first === undefined) return
-  // What only stands behind a corner of the face, in no joint with it, is a void and not a gap.
-  if (named.some((b) => b.areaMm2 - first.areaMm2 > aside)) {
-    say(
-      `its ${cut.end} cut has more bearing on it than on ${cut.against}, mm²`,
-      most.areaMm2,
-      most.mark,
-    )
+  const most = named.find((b) => first !== undefined && b.closedMm2 - first.closedMm2 > aside)
+  if (most !== undefined) {
+    const text = `its ${cut.end} cut has more bearing on it than on ${cut.against}, mm²`
+    say(text, most.closedMm2, most.mark)
   }
-  const opening = openingMm(face, named)
-  if (opening > CLOSE_MM) say(`its ${cut.end} joint stands open, mm`, opening, first.mark)
+  for (const b of named) {
+    if (b.openMm2 > SPECK_MM2) say(`its ${cut.end} joint stands open, mm`, b.worstMm, b.mark)
+  }
+}
+
+function checkCut(
+  complain: Complain,
+  site: Site,
+  facets: Facets,
+  piece: Piece,
+  sawn: SawnPlane,
+): void {
+  const { cut } = sawn
+  const { mark } = piece.member
+  const frame = frameOf(
+    toBuilding(piece.pose, sawn.point),
+    directionToBuilding(piece.pose, sawn.normal),
+  )
+  const facet = facetOf(piece, frame)
+  const say: Say = (text, out, other) =>
+    complain({ check: 'joint', marks: other === undefined ? [mark] : [mark, other], out, text })
+  const face = new site.kit.CrossSection(
+    facet.outlines.map((ring) => ring.map((p) => inFrame(frame, p))),
+    'EvenOdd',
+  )
+  const faceMm2 = face.area()
+  if (faceMm2 < SPECK_MM2) say(`its ${cut.end} cut misses the timber, mm²`, faceMm2)
+  else {
+    if (cut.against === null && !mayStandFree(piece, sawn)) {
+      say(`its ${cut.end} cut is said to bear on nothing`, 0)
+    }
+    judgeNames(say, sawn, bearingsOn(site, facets, piece, sawn, frame, face), faceMm2)
+  }
+  face.delete()
 }
 
 /** Every cut that butts: closed within 0.2 mm over its bearing face, and on the pieces it names. */
-export function checkJoints(complain: Complain, piece: Piece, others: Piece[]): void {
-  for (const sawn of piece.sawn) {
-    if (length(sawn.normal) > 0) checkCut(complain, piece, sawn, others)
-  }
+export function checkJoints(complain: Complain, site: Site, facets: Facets, piece: Piece): void {
+  for (const sawn of piece.sawn) checkCut(complain, site, facets, piece, sawn)
 }

@@ -1,4 +1,5 @@
-import type { Cut, Roof } from '../../../shared/roof/roof-types.ts'
+import type { Cut } from '../../../shared/roof/roof-types.ts'
+import { backingOfSlopes } from './own-slopes.ts'
 import {
   backingDeg,
   directionToBuilding,
@@ -9,6 +10,7 @@ import {
   type SawnPlane,
 } from './rebuild-member.ts'
 import type { Complain, Complaint } from './report.ts'
+import type { Site } from './site.ts'
 import type { Backing } from './slopes.ts'
 import { angleDeg, cosDeg, dot, sinDeg, sub, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
@@ -103,7 +105,7 @@ function checkAngles(complain: Complain, piece: Piece, cut: Cut, sawMaxTiltDeg: 
   }
 }
 
-function checkLengths(complain: Complain, piece: Piece, roof: Roof): void {
+function checkLengths(complain: Complain, piece: Piece, tailAllowanceMm: number): void {
   const { member, own } = piece
   const { from, to } = member.axis
   const run = Math.hypot(to.x - from.x, to.y - from.y)
@@ -129,7 +131,7 @@ function checkLengths(complain: Complain, piece: Piece, roof: Roof): void {
   near('foot deduction', member.footDeductionMm, feet.length > 0 ? Math.min(...feet) : 0)
   near('tail', member.tailLengthMm, tails.length > 0 ? -Math.max(...tails) : 0)
   const alongs = own.map((p) => p[0])
-  const allowance = tails.length > 0 ? roof.tailAllowanceMm : 0
+  const allowance = tails.length > 0 ? tailAllowanceMm : 0
   near('cut length', member.cutLengthMm, Math.max(...alongs) - Math.min(...alongs) + allowance)
 }
 
@@ -171,12 +173,17 @@ function checkHand(complain: Complain, piece: Piece): void {
   complain({ check: 'numbers', marks: [mark], out: left, text })
 }
 
-/** The top edge of the other kind (square where this hip is backed) must give the other bevel. */
+/**
+ * The top edge of the other kind (square where this hip is backed) must give the other bevel. A valley
+ * is marked on its square top; its other one is the dished top, planed or not.
+ */
 function checkOtherTop(complain: Complain, piece: Piece, sawn: SawnPlane, backed: Backing): void {
   const other = sawn.cut.edgeOtherTop
   const side = shortSideSign(sawn.cut)
   if (other === null || side === 0) return
-  const deg = piece.member.backing === null ? (side > 0 ? backed.leftDeg : backed.rightDeg) : 0
+  const { backing, role } = piece.member
+  const planed = role === 'valley' || backing === null
+  const deg = planed ? (side > 0 ? backed.leftDeg : backed.rightDeg) : 0
   const across: Vec = [0, side * cosDeg(deg), -sinDeg(deg)]
   const [a] = sawn.normal
   const rebuilt = toDeg(Math.atan2(1, dot(sawn.normal, across) / Math.abs(a)))
@@ -185,20 +192,15 @@ function checkOtherTop(complain: Complain, piece: Piece, sawn: SawnPlane, backed
 }
 
 /** Compares everything a spec says twice about one member, and its marked cuts with their planes. */
-export function checkNumbers(
-  complain: Complain,
-  piece: Piece,
-  roof: Roof,
-  backed: Backing | null,
-  sawMaxTiltDeg: number,
-): void {
+export function checkNumbers(complain: Complain, site: Site, piece: Piece): void {
+  const backed = backingOfSlopes(piece, site.surface)
   for (const sawn of piece.sawn) {
     checkAgainstSpace(complain, piece, sawn)
     checkPoints(complain, piece, sawn)
-    checkAngles(complain, piece, sawn.cut, sawMaxTiltDeg)
+    checkAngles(complain, piece, sawn.cut, site.settings.sawMaxTiltDeg)
     if (backed !== null) checkOtherTop(complain, piece, sawn, backed)
   }
-  checkLengths(complain, piece, roof)
+  checkLengths(complain, piece, site.roof.tailAllowanceMm)
   checkBirdsmouth(complain, piece)
   checkHand(complain, piece)
 }

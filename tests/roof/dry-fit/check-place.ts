@@ -1,125 +1,123 @@
-import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
-import { toBuilding, type Piece } from './rebuild-member.ts'
+import { ownHeight, backingOfSlopes } from './own-slopes.ts'
+import { toBuilding, toOwn, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
-import {
-  backingFromSlopes,
-  distanceIn,
-  heightOn,
-  isAlongLine,
-  lowest,
-  ownSlopes,
-  type Slope,
-} from './slopes.ts'
-import { tanDeg, type Vec } from './vec.ts'
+import type { Site } from './site.ts'
+import { distanceIn, heightOn, isAlongLine, isRafter } from './slopes.ts'
+import { distanceToRim, nearestOn } from './surface.ts'
+import { cosDeg, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
 const PLACE_TOL_MM = 0.01
 const TOP_TOL_MM = 0.2
-const PLANING_TOL_MM = 0.2
-const BACKING_TOL_DEG = 0.001
+const ANGLE_TOL_DEG = 0.001
+
+type Say = (text: string, out: number) => void
+
+/** Both ends lie over a set-out line of its own slopes, the foot perhaps on its plate line run on. */
+function checkEnds(say: Say, site: Site, piece: Piece): void {
+  const { member } = piece
+  const { faces } = site.surface
+  const own = member.planes.map((index) => faces[index]!)
+  for (const [name, p] of Object.entries(member.axis)) {
+    const rims = own.map((face) => distanceToRim(face.plan, p.x, p.y))
+    const plates = name === 'from' ? own.map((f) => Math.abs(distanceIn(f.slope, p.x, p.y))) : []
+    const out = Math.min(...rims, ...plates)
+    if (out > PLACE_TOL_MM) say(`axis.${name} is over no line of its slopes, mm`, out)
+  }
+  if (!isRafter(member)) return
+  const turn = member.pitchDeg - toDeg(Math.atan(own[0]!.slope.tan))
+  if (Math.abs(turn) > ANGLE_TOL_DEG) say('its pitch is not its slope’s, degrees', turn)
+}
+
+/** A rafter that comes down to a valley starts from the valley's centre line. */
+function checkFromValley(say: Say, site: Site, piece: Piece): void {
+  const { member } = piece
+  const foot = member.cuts.find((cut) => cut.end === 'foot' && cut.against !== null)
+  if (foot === undefined || !isRafter(member)) return
+  const valley = site.spec.members.find((m) => m.mark === foot.against)
+  if (valley?.role !== 'valley') return
+  const { from, to } = valley.axis
+  const { x, y } = member.axis.from
+  const [nx, ny] = nearestOn([from.x, from.y], [to.x, to.y], x, y)
+  const out = Math.hypot(nx - x, ny - y)
+  if (out > PLACE_TOL_MM) say(`starts off the centre line of ${valley.mark}, mm`, out)
+}
 
 /** `axis` stands over the set-out lines by the stand less the drop, and starts on the plate face. */
-export function checkPlace(complain: Complain, piece: Piece, spec: FrameSpec, all: Slope[]): void {
+export function checkPlace(complain: Complain, site: Site, piece: Piece): void {
   const { member } = piece
-  const slopes = ownSlopes(piece, all)
-  const marks = [member.mark]
+  if (!isRafter(member) && !isAlongLine(member)) return
+  const { spec, surface } = site
+  const say: Say = (text, out) => complain({ check: 'place', marks: [member.mark], out, text })
   for (const [name, p] of Object.entries(member.axis)) {
-    for (const slope of slopes) {
-      const out = p.z - (heightOn(slope, p.x, p.y) + spec.standMm - member.dropMm)
+    const slopes =
+      member.role === 'ridge' ? [] : member.planes.map((index) => surface.slopes[index]!)
+    const heights = slopes.map((slope) => heightOn(slope, p.x, p.y))
+    if (slopes.length === 0) heights.push(ownHeight(piece, surface, toOwn(piece.pose, toVec(p))))
+    for (const height of heights) {
+      const out = p.z - (height + spec.standMm - member.dropMm)
       if (Math.abs(out) <= PLACE_TOL_MM) continue
-      const text = `axis.${name} is not stand less drop over its slope, mm`
-      complain({ check: 'place', marks, out, text })
+      say(`axis.${name} is not stand less drop over its slope, mm`, out)
     }
   }
+  checkEnds(say, site, piece)
+  checkFromValley(say, site, piece)
   if (member.birdsmouth !== null) {
     const heel = member.axis.from
-    const off = slopes.map((slope) => distanceIn(slope, heel.x, heel.y))
+    const off = member.planes.map((index) => distanceIn(surface.slopes[index]!, heel.x, heel.y))
     const out = Math.max(...off.map(Math.abs))
-    if (out > PLACE_TOL_MM) {
-      complain({ check: 'place', marks, out, text: 'its heel is not on the outer plate face, mm' })
-    }
+    if (out > PLACE_TOL_MM) say('its heel is not on the outer plate face, mm', out)
     const stand = member.birdsmouth.standMm - (spec.standMm - member.dropMm)
-    if (Math.abs(stand) > PLACE_TOL_MM) {
-      complain({ check: 'place', marks, out: stand, text: 'its stand is not the roof’s, mm' })
-    }
+    if (Math.abs(stand) > PLACE_TOL_MM) say('its stand is not the roof’s, mm', stand)
   }
-  if (member.backing !== null) {
-    const { leftDeg, rightDeg } = backingFromSlopes(piece.pose, slopes)
-    const left = member.backing.leftDeg - leftDeg
-    const right = member.backing.rightDeg - rightDeg
+  const backing = backingOfSlopes(piece, surface)
+  if (member.backing !== null && backing !== null) {
+    const left = member.backing.leftDeg - backing.leftDeg
+    const right = member.backing.rightDeg - backing.rightDeg
     const out = Math.abs(left) > Math.abs(right) ? left : right
-    if (Math.abs(out) > BACKING_TOL_DEG) {
-      complain({ check: 'place', marks, out, text: 'its backing is not its slopes’, degrees' })
-    }
+    if (Math.abs(out) > ANGLE_TOL_DEG) say('its backing is not its slopes’, degrees', out)
   }
 }
 
-/** Points along the top of the bar, at both arrises. */
-function topArrises(piece: Piece): Vec[] {
+/** Height of the planed top over the bar's square top edge, `left` of the centre line. */
+export function topUp(piece: Piece, left: number): number {
   const { member } = piece
-  const half = member.section.thicknessMm / 2
-  const points: Vec[] = []
-  for (const sign of [-1, 1]) {
-    const backed = sign > 0 ? member.backing?.leftDeg : member.backing?.rightDeg
-    const fall = half * tanDeg(backed ?? 0)
-    for (const along of [0, member.setOutLengthMm]) points.push([along, sign * half, -fall])
-  }
-  return points
+  const { backing } = member
+  if (backing === null) return 0
+  const deg = left > 0 ? backing.leftDeg : backing.rightDeg
+  const middle = member.role === 'valley' ? member.dropMm * cosDeg(member.pitchDeg) : 0
+  return Math.min(0, middle - Math.abs(left) * tanDeg(deg))
 }
 
 /** No top arris over its own slopes, and none sunk under both of them. */
-export function checkTop(complain: Complain, piece: Piece, spec: FrameSpec, all: Slope[]): void {
+export function checkTop(complain: Complain, site: Site, piece: Piece): void {
   const { member } = piece
-  const slopes = ownSlopes(piece, all)
+  if (!isRafter(member) && !isAlongLine(member)) return
+  const { surface, spec } = site
   const marks = [member.mark]
-  const proud = Math.max(
-    ...piece.corners.map((p) => p[2] - lowest(slopes, p[0], p[1]) - spec.standMm),
+  const over = (own: Vec): number =>
+    toBuilding(piece.pose, own)[2] - ownHeight(piece, surface, own) - spec.standMm
+  const half = member.section.thicknessMm / 2
+  const along = [0, member.setOutLengthMm]
+  const lines = [-half, 0, half].map((left) =>
+    along.map((at) => over([at, left, topUp(piece, left)])),
   )
+  // over a valley the roof is lowest on the centre line, where no corner of the timber may be
+  const proud = Math.max(...piece.own.map(over), ...lines.flat())
   if (proud > TOP_TOL_MM) {
     complain({ check: 'top edge', marks, out: proud, text: 'stands over its own slopes, mm' })
   }
-  const lies = topArrises(piece).map((own) => {
-    const p = toBuilding(piece.pose, own)
-    return p[2] - lowest(slopes, p[0], p[1]) - spec.standMm
-  })
+  // where a slope rises away from a hip its side of the top stays square, under that slope
+  const rises = (deg: number | undefined): boolean =>
+    member.role !== 'valley' && deg !== undefined && deg < 0
+  const lies = [
+    ...(rises(member.backing?.rightDeg) ? [] : lines[0]!),
+    ...(rises(member.backing?.leftDeg) ? [] : lines[2]!),
+  ]
+  if (member.role === 'valley' && member.backing === null) lies.push(...lines[1]!)
+  // a square top touches its slopes by one arris or by its centre line; a planed one lies in both
   const mayHang = isAlongLine(member) && member.backing === null
   const sunk = mayHang ? Math.max(...lies) : Math.min(...lies)
   if (sunk < -TOP_TOL_MM) {
     complain({ check: 'top edge', marks, out: sunk, text: 'lies under its own slopes, mm' })
-  }
-}
-
-type End = 'head' | 'foot'
-type Side = 'left' | 'right'
-
-function proudAt(piece: Piece, spec: FrameSpec, all: Slope[], end: End, side: Side): number {
-  const middle = piece.member.setOutLengthMm / 2
-  const heights = piece.own.map((own, index) => {
-    const atEnd = end === 'head' ? own[0] > middle : own[0] <= middle
-    const onSide = side === 'left' ? own[1] > -0.01 : own[1] < 0.01
-    if (!atEnd || !onSide) return -Infinity
-    const p = piece.corners[index]!
-    return p[2] - lowest(all, p[0], p[1]) - spec.standMm
-  })
-  return Math.max(...heights)
-}
-
-/** A corner over a neighbouring slope must be in the published planing, by what it stands over. */
-export function checkPlaning(
-  complain: Complain,
-  piece: Piece,
-  spec: FrameSpec,
-  all: Slope[],
-): void {
-  const { mark } = piece.member
-  for (const end of ['head', 'foot'] as const) {
-    for (const side of ['left', 'right'] as const) {
-      const listed = spec.planing.filter((p) => p.mark === mark && p.end === end && p.side === side)
-      const off = Math.max(0, ...listed.map((p) => p.offMm))
-      const proud = Math.max(0, proudAt(piece, spec, all, end, side))
-      const out = proud - off
-      if (Math.abs(out) <= PLANING_TOL_MM) continue
-      const text = `${end} ${side} corner stands ${proud.toFixed(2)} over the roof, planing takes ${off.toFixed(2)}, mm`
-      complain({ check: 'planing', marks: [mark], out, text })
-    }
   }
 }

@@ -1,6 +1,13 @@
 import { expect, test } from 'vitest'
 
-import type { Angle, Cut, FrameSpec, Member, Roof } from '../../../shared/roof/roof-types.ts'
+import type {
+  Angle,
+  Cut,
+  FrameSpec,
+  Member,
+  Roof,
+  RoofPlane,
+} from '../../../shared/roof/roof-types.ts'
 import { makeRoof } from '../support/roofs.ts'
 import { reportLines } from './report.ts'
 import { loadSolidKit } from './solid-kit.ts'
@@ -143,15 +150,21 @@ function handMade(): FrameSpec {
     common('C4', 622.5, -1),
   ]
   const areaM2 = (645 * RUN) / cos / 1e6
-  const slope = { pitchDeg: 25, areaM2, areaWithEavesM2: areaM2, polygon: [] }
+  const slope = { pitchDeg: 25, areaM2, areaWithEavesM2: areaM2 }
+  const half = (from: number, to: number): RoofPlane['polygon'] => [
+    { x: from, y: from === 0 ? 0 : 2 * RUN, z: 0 },
+    { x: to, y: from === 0 ? 0 : 2 * RUN, z: 0 },
+    { x: to, y: RUN, z: RUN * tan },
+    { x: from, y: RUN, z: RUN * tan },
+  ]
   const sum = (from: Member[], key: 'cutLengthMm' | 'weightKg'): number =>
     from.reduce((total, m) => total + m[key], 0)
   const groups = [members.slice(0, 1), members.slice(1)]
   return {
     standMm: STAND,
     planes: [
-      { ...slope, edges: [0] },
-      { ...slope, edges: [2] },
+      { ...slope, edges: [0], polygon: half(0, 645) },
+      { ...slope, edges: [2], polygon: half(645, 0) },
     ],
     lines: [],
     members,

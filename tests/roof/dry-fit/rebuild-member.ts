@@ -1,4 +1,5 @@
 import type { Cut, Member } from '../../../shared/roof/roof-types.ts'
+import { slopeNormal, type Slope } from './slopes.ts'
 import { boxOf, solidVertices, type Box, type Solid, type SolidKit } from './solid-kit.ts'
 import { add, combine, cosDeg, cross, dot, scale, sinDeg, sub, unit, type Vec } from './vec.ts'
 
@@ -24,16 +25,25 @@ export type Piece = {
   box: Box
 }
 
-export function poseOf(member: Member): Pose {
+/** How the timbers beside the frame lie: with their top in their slope, or standing plumb. */
+export type Lie = { slopes: readonly Slope[]; tail: 'plumb' | 'square' }
+
+function liesInSlope(member: Member, tail: Lie['tail']): boolean {
+  return member.role === 'underpurlin' || (member.role === 'fascia' && tail === 'square')
+}
+
+export function poseOf(member: Member, lie: Lie): Pose {
   const { from, to } = member.axis
   const plan = unit([to.x - from.x, to.y - from.y, 0])
-  const up: Vec = [0, 0, 1]
-  return {
-    origin: [from.x, from.y, from.z],
-    along: combine([cosDeg(member.pitchDeg), plan], [sinDeg(member.pitchDeg), up]),
-    left: cross(up, plan),
-    up: combine([-sinDeg(member.pitchDeg), plan], [cosDeg(member.pitchDeg), up]),
+  const plumb: Vec = [0, 0, 1]
+  const origin: Vec = [from.x, from.y, from.z]
+  const along = combine([cosDeg(member.pitchDeg), plan], [sinDeg(member.pitchDeg), plumb])
+  if (liesInSlope(member, lie.tail)) {
+    const up = slopeNormal(lie.slopes[member.planes[0]!]!)
+    return { origin, along, left: cross(up, along), up }
   }
+  const up = combine([-sinDeg(member.pitchDeg), plan], [cosDeg(member.pitchDeg), plumb])
+  return { origin, along, left: cross(plumb, plan), up }
 }
 
 export const toBuilding = (pose: Pose, p: Vec): Vec =>
@@ -53,9 +63,12 @@ export function shortSideSign(cut: Cut): -1 | 0 | 1 {
   return cut.longSide === 'right' ? 1 : -1
 }
 
-/** How the top of one side is planed; a slope that rises away from the centre leaves it square. */
+/**
+ * How the top of one side is planed where the cuts are marked: a slope that rises away from the
+ * centre leaves it square, and a valley is marked on its square top before it is dished.
+ */
 export function backingDeg(member: Member, sideSign: -1 | 0 | 1): number {
-  if (member.backing === null || sideSign === 0) return 0
+  if (member.backing === null || sideSign === 0 || member.role === 'valley') return 0
   return Math.max(0, sideSign > 0 ? member.backing.leftDeg : member.backing.rightDeg)
 }
 
@@ -96,8 +109,13 @@ function blank(kit: SolidKit, member: Member, sawn: readonly SawnPlane[]): Solid
   ])
   if (member.backing === null) return bar
   const { leftDeg, rightDeg } = member.backing
-  const left = keep(bar, [0, sinDeg(leftDeg), cosDeg(leftDeg)], [0, 0, 0])
-  return keep(left, [0, -sinDeg(rightDeg), cosDeg(rightDeg)], [0, 0, 0])
+  const toLeft: Vec = [0, sinDeg(leftDeg), cosDeg(leftDeg)]
+  const toRight: Vec = [0, -sinDeg(rightDeg), cosDeg(rightDeg)]
+  if (member.role !== 'valley') return keep(keep(bar, toLeft, [0, 0, 0]), toRight, [0, 0, 0])
+  // dished: what stands over both slopes goes, and they meet under the bar's top by its rise
+  const middle: Vec = [0, 0, member.dropMm * cosDeg(member.pitchDeg)]
+  const over = keep(keep(bar, scale(toLeft, -1), middle), scale(toRight, -1), middle)
+  return bar.subtract(over)
 }
 
 /** Where heel and seat cut meet: at the plate's outer top edge. Own coordinates. */
@@ -124,14 +142,14 @@ function cutBirdsmouth(kit: SolidKit, member: Member, solid: Solid): Solid {
   return solid.subtract(wedge)
 }
 
-export function rebuildMember(kit: SolidKit, member: Member): Piece {
+export function rebuildMember(kit: SolidKit, member: Member, lie: Lie): Piece {
   const sawn = member.cuts.map((cut) => sawnPlane(member, cut))
   const sawnBar = sawn.reduce(
     (solid, plane) => keep(solid, plane.normal, plane.point),
     blank(kit, member, sawn),
   )
   const ownSolid = cutBirdsmouth(kit, member, sawnBar)
-  const pose = poseOf(member)
+  const pose = poseOf(member, lie)
   const own = solidVertices(ownSolid)
   const corners = own.map((p) => toBuilding(pose, p))
   const { along: a, left: l, up: u, origin: o } = pose

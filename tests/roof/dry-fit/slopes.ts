@@ -1,6 +1,5 @@
-import type { FrameSpec, Member, Roof } from '../../../shared/roof/roof-types.ts'
-import { directionToOwn, type Piece, type Pose } from './rebuild-member.ts'
-import { tanDeg, toDeg, unit, type Vec } from './vec.ts'
+import type { Member, Roof } from '../../../shared/roof/roof-types.ts'
+import { toDeg, tanDeg, unit, type Vec } from './vec.ts'
 
 /** A set-out plane straight from what was typed: height over the plate at any point of the plan. */
 export type Slope = {
@@ -30,13 +29,9 @@ export function distanceIn(slope: Slope, x: number, y: number): number {
   return slope.inward[0] * (x - slope.cornerX) + slope.inward[1] * (y - slope.cornerY)
 }
 
-export function slopesOf(roof: Roof, spec: FrameSpec): Slope[] {
-  return spec.planes.map((plane) => slopeOfEdge(roof, plane.edges[0]!))
-}
-
-/** A convex roof is everywhere under all of its slopes, so its surface is the lowest of them. */
-export function lowest(slopes: readonly Slope[], x: number, y: number): number {
-  return Math.min(...slopes.map((slope) => heightOn(slope, x, y)))
+/** Distance along the plate line from the slope's corner, counter-clockwise. */
+export function distanceAlong(slope: Slope, x: number, y: number): number {
+  return slope.inward[1] * (x - slope.cornerX) - slope.inward[0] * (y - slope.cornerY)
 }
 
 export const slopeNormal = (slope: Slope): Vec =>
@@ -44,17 +39,32 @@ export const slopeNormal = (slope: Slope): Vec =>
 
 export type Backing = { leftDeg: number; rightDeg: number }
 
-/** Which of two slopes falls away to the left of a member, and how much each turns from square. */
-export function backingFromSlopes(pose: Pose, slopes: readonly Slope[]): Backing {
-  const falls = slopes.map((slope) => {
-    const n = directionToOwn(pose, slopeNormal(slope))
-    return toDeg(Math.atan2(n[1], n[2]))
-  })
-  return { leftDeg: Math.max(...falls), rightDeg: -Math.min(...falls) }
+/** How far a slope turns down from square on the side it lies on; under 0 where it rises away. */
+export function backingFromSlopes(
+  left: Vec,
+  up: Vec,
+  slopes: { left: Slope; right: Slope },
+): Backing {
+  const fall = (slope: Slope, sign: 1 | -1): number => {
+    const n = slopeNormal(slope)
+    const across = n[0] * left[0] + n[1] * left[1] + n[2] * left[2]
+    return toDeg(Math.atan2(sign * across, n[0] * up[0] + n[1] * up[1] + n[2] * up[2]))
+  }
+  return { leftDeg: fall(slopes.left, 1), rightDeg: fall(slopes.right, -1) }
 }
 
-export const isAlongLine = (member: Member): boolean =>
-  ['ridge', 'hip', 'broken-hip', 'valley'].includes(member.role)
+const alongLine: readonly Member['role'][] = ['ridge', 'hip', 'broken-hip', 'valley']
+const rafters: readonly Member['role'][] = [
+  'common',
+  'crown-end',
+  'creeper',
+  'valley-creeper',
+  'cripple-creeper',
+]
 
-export const ownSlopes = (piece: Piece, slopes: readonly Slope[]): Slope[] =>
-  piece.member.planes.map((index) => slopes[index]!)
+/** Members that lie under a line between two slopes. */
+export const isAlongLine = (member: Member): boolean => alongLine.includes(member.role)
+/** Members that lie in one slope, square to its plate. */
+export const isRafter = (member: Member): boolean => rafters.includes(member.role)
+/** Members between two slopes with a top that can be planed into both. */
+export const isHipLike = (member: Member): boolean => isAlongLine(member) && member.role !== 'ridge'
