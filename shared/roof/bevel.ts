@@ -31,6 +31,8 @@ export type Timber = {
   cos: number
   /** How far each top arris lies plumb under the top centre line; 0 for a square top. */
   arrisFall: { left: number; right: number }
+  /** How far the middle of a dished top lies plumb under the top centre line of its blank. */
+  dishMm?: number
 }
 
 /** Where a plane crosses the lines of a timber: mm along = base + perLeft × mm aside + perDown × mm down under the top. */
@@ -74,8 +76,11 @@ export const timberPoint = (
   )
 
 /** How far plumb the top lies under its centre line, `leftMm` aside. */
-export const topFall = (timber: Timber, leftMm: number): number =>
-  (Math.abs(leftMm) / timber.halfMm) * (leftMm > 0 ? timber.arrisFall.left : timber.arrisFall.right)
+export const topFall = (timber: Timber, leftMm: number): number => {
+  const { arrisFall, dishMm = 0, halfMm } = timber
+  const arris = leftMm > 0 ? arrisFall.left : arrisFall.right
+  return dishMm + (Math.abs(leftMm) / halfMm) * (arris - dishMm)
+}
 
 /** The face normal of one half of a top planed to the slopes. */
 const slopedTop = (

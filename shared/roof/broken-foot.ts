@@ -6,20 +6,25 @@ import { add2, cross2, dot2, length2, scale2 } from './vector.ts'
  * How the foot of a broken hip is made where the usual way would leave a head open: `fitted` and
  * `flush` slant the foot from where the one side rafter leaves its side to where the other does (a
  * little past, or just there), `parted` halves the turn to the crown end with the side rafters on its
- * own sides, `crown` lets the side rafters bear on the crown end, `sides` on its own sides.
+ * own sides, `crown` lets the side rafters bear on the crown end, `sides` on its own sides; `stand`
+ * cuts it last, to stand on what is there.
  */
-export type FootWay = 'usual' | 'fitted' | 'flush' | 'parted' | 'sides' | 'crown'
+export type FootWay = 'usual' | 'stand' | 'fitted' | 'flush' | 'parted' | 'sides' | 'crown'
 
 /** Side rafters nearer than this (cosine) to square with their broken hip stand to it as commons to a ridge. */
 const squareSideCos = 0.35
 /** Where timbers part at a slant beside a joint they stand this share of a thickness apart, so that one clear face bears. */
 const clearShare = 1 / 30
 
+/** Whether a piece starts at a joint and climbs on from there. */
+export const isRisingAt = (piece: Piece, joint: number): boolean =>
+  (piece.role === 'broken-hip' || piece.role === 'valley') && piece.footJoint === joint
+
 /** The rafters of a broken hip's own two slopes that meet it at its foot. */
 export const sidesAt = (broken: Piece, pieces: Piece[]): Piece[] =>
   pieces.filter(
     (p) =>
-      p.role === 'creeper' &&
+      p.line === null &&
       p.headJoint !== null &&
       p.headJoint === broken.footJoint &&
       p.slopes.some((slope) => broken.slopes.includes(slope)),

@@ -1,4 +1,6 @@
 import type { Roof } from './roof-types.ts'
+import { ridgeChains } from './ridge-chains.ts'
+import type { RidgeChain } from './ridge-chains.ts'
 import type { NodeLine, RoofLines } from './roof-lines.ts'
 import { at } from './slopes.ts'
 import { add2, distance2, scale2 } from './vector.ts'
@@ -6,14 +8,16 @@ import type { Point2 } from './roof-types.ts'
 
 /**
  * A joint of the roof: one node, or several so near together that no timber fits between them.
- * `ridge` and `rising` are lines (indexes) that end here and get a member: a ridge, and a broken hip
- * that starts here and climbs on. A joint with neither is an apex. Its rafters' centre lines all run
- * through `point`.
+ * `ridges` are lines (indexes) that end here and get a member, those of the timber that runs through
+ * (or furthest) first; `rising` is a broken hip or valley that starts here and climbs on. A joint with
+ * neither is an apex. Its rafters' centre lines all run through `point`.
  */
 export type Joint = {
   nodes: number[]
   point: Point2
-  ridge: number | null
+  /** How far its nodes lie from `point`. */
+  radiusMm: number
+  ridges: number[]
   rising: number | null
 }
 
@@ -23,16 +27,22 @@ export type Joints = {
   ofNode: (number | null)[]
   /** Lines too short for a member. */
   swallowed: ReadonlySet<number>
+  /** Ridges as timbers, in the order of who runs through. */
+  chains: RidgeChain[]
 }
 
 /** A broken hip shorter than this many thicknesses in plan is all joint and no timber. */
 const brokenHipThicknesses = 2
 
 const isTooShort = (roof: Roof, lines: RoofLines, line: NodeLine): boolean => {
-  const planMm = distance2(at(lines.nodes, line.from).point, at(lines.nodes, line.to).point)
+  const [from, to] = [at(lines.nodes, line.from), at(lines.nodes, line.to)]
+  const planMm = distance2(from.point, to.point)
   if (line.kind === 'ridge') return planMm <= roof.sections.rafter.thicknessMm
-  const thickest = Math.max(roof.sections.rafter.thicknessMm, roof.sections.hip.thicknessMm)
-  return line.kind === 'broken-hip' && planMm <= brokenHipThicknesses * thickest
+  const isBetween = line.kind === 'broken-hip' || line.kind === 'valley' || line.kind === 'hip'
+  if (!isBetween || from.corner !== null || to.corner !== null) return false
+  const own = line.kind === 'valley' ? roof.sections.valley : roof.sections.hip
+  const thickest = Math.max(roof.sections.rafter.thicknessMm, own.thicknessMm)
+  return planMm <= brokenHipThicknesses * thickest
 }
 
 const unite = (owner: number[], a: number, b: number) => {
@@ -60,18 +70,30 @@ const centreOf = (
   return nodes.map(point).reduce((a, b) => (b.z > a.z ? b : a))
 }
 
-const jointOf = (lines: RoofLines, swallowed: ReadonlySet<number>, nodes: number[]): Joint => {
+const jointOf = (
+  lines: RoofLines,
+  swallowed: ReadonlySet<number>,
+  chains: readonly RidgeChain[],
+  nodes: number[],
+  index: number,
+): Joint => {
   const ends = (line: NodeLine) => nodes.includes(line.from) || nodes.includes(line.to)
   const find = (want: (line: NodeLine, isSwallowed: boolean) => boolean) => {
     const found = lines.lines.findIndex((line, i) => want(line, swallowed.has(i)))
     return found < 0 ? null : found
   }
-  const ridge = find((l, gone) => !gone && l.kind === 'ridge' && ends(l))
-  const rising = find((l, gone) => !gone && l.kind === 'broken-hip' && nodes.includes(l.from))
+  const passes = (chain: RidgeChain) => chain.through.includes(index)
+  const inOrder = [...chains.filter(passes), ...chains.filter((chain) => !passes(chain))]
+  const ridges = inOrder.flatMap((chain) => chain.lines.filter((n) => ends(at(lines.lines, n))))
+  const climbs = (l: NodeLine) =>
+    (l.kind === 'broken-hip' || l.kind === 'valley') && nodes.includes(l.from)
+  const rising = find((l, gone) => !gone && climbs(l))
   const shortRidge = find((l, gone) => gone && l.kind === 'ridge' && ends(l))
-  const line = (index: number | null) => (index === null ? undefined : at(lines.lines, index))
-  const centre = centreOf(lines, nodes, line(ridge), line(rising), line(shortRidge))
-  return { nodes, point: { x: centre.x, y: centre.y }, ridge, rising }
+  const line = (index: number | null | undefined) =>
+    index === null || index === undefined ? undefined : at(lines.lines, index)
+  const centre = centreOf(lines, nodes, line(ridges[0]), line(rising), line(shortRidge))
+  const radiusMm = Math.max(...nodes.map((n) => distance2(at(lines.nodes, n).point, centre)))
+  return { nodes, point: { x: centre.x, y: centre.y }, radiusMm, ridges, rising }
 }
 
 /** Gathers the nodes of a roof into joints. */
@@ -83,13 +105,15 @@ export const roofJoints = (roof: Roof, lines: RoofLines): Joints => {
     swallowed.add(index)
     unite(owner, line.from, line.to)
   })
-  const joints: Joint[] = []
+  const groups: number[][] = []
   const ofNode = lines.nodes.map((): number | null => null)
   owner.forEach((root, k) => {
     if (root !== k || at(lines.nodes, k).corner !== null) return
     const nodes = owner.flatMap((other, n) => (other === root ? [n] : []))
-    nodes.forEach((n) => (ofNode[n] = joints.length))
-    joints.push(jointOf(lines, swallowed, nodes))
+    nodes.forEach((n) => (ofNode[n] = groups.length))
+    groups.push(nodes)
   })
-  return { joints, ofNode, swallowed }
+  const chains = ridgeChains(lines, ofNode, swallowed)
+  const joints = groups.map((nodes, index) => jointOf(lines, swallowed, chains, nodes, index))
+  return { joints, ofNode, swallowed, chains }
 }

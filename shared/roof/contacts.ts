@@ -70,8 +70,8 @@ const heights = (piece: Piece, p: Point2): [number, number] => {
   const off = sub2(p, piece.foot)
   const centre = piece.foot.z - piece.dropMm + dot2(off, piece.dir) * piece.tan
   const aside = dot2(off, piece.left)
-  const fall = aside > 0 ? piece.fall.left : piece.fall.right
-  const top = piece.backed ? centre - fall * Math.abs(aside) : centre
+  const fall = (aside > 0 ? piece.fall.left : piece.fall.right) * Math.abs(aside)
+  const top = piece.backed ? centre - fall : piece.dished ? centre + piece.dropMm - fall : centre
   return [centre - piece.section.depthMm / piece.cos, top]
 }
 
@@ -98,7 +98,7 @@ export const bearings = (
   pieces: readonly Piece[],
   segments: SegmentIndex,
   piece: Piece,
-  end: PieceEnd,
+  end: PieceEnd | 'tail',
   cut: number,
   mayBear: (other: number) => boolean,
 ): number[] => {

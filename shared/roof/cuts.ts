@@ -1,7 +1,7 @@
-import { bevelOf, bothWays } from './bevel.ts'
+import { bevelOf, bothWays, crossingAt, topFall } from './bevel.ts'
 import type { Crossing, Timber } from './bevel.ts'
 import type { Ground } from './build-pieces.ts'
-import { isHipLike, piecePoint } from './piece.ts'
+import { isAlongCrease, piecePoint } from './piece.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Cut, Point3 } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -11,7 +11,7 @@ import type { Plane } from './vector.ts'
 
 /** A cut before the pieces have marks. */
 export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
-  /** Place in the piece's list of joint cuts of this end; null for a tail. */
+  /** Place in the piece's list of joint cuts of this end; null for a tail left free. */
   listed: number | null
   crossing: Crossing
 }
@@ -41,6 +41,17 @@ export const timberOf = (piece: Piece, standMm: number): Timber => {
           right: Math.max(0, piece.fall.right) * piece.halfMm,
         }
       : { left: 0, right: 0 },
+  }
+}
+
+/** A piece as it is when done: a valley's top dished once its cuts are sawn on the square blank. */
+export const finishedTimber = (piece: Piece, timber: Timber): Timber => {
+  if (!piece.dished) return timber
+  const arris = (fall: number) => fall * piece.halfMm - piece.dropMm
+  return {
+    ...timber,
+    arrisFall: { left: arris(piece.fall.left), right: arris(piece.fall.right) },
+    dishMm: -piece.dropMm,
   }
 }
 
@@ -74,7 +85,7 @@ const draftCut = (
     shortPointFromHeelMm: leftIsLong ? bevel.rightMm : bevel.leftMm,
     face: bothWays(bevel.faceFromEdgeDeg),
     edge: bothWays(shown),
-    edgeOtherTop: isHipLike(piece.role) ? bothWays(other) : null,
+    edgeOtherTop: isAlongCrease(piece.role) ? bothWays(other) : null,
     bladeTiltDeg: bevel.tiltDeg,
     pastSaw: bevel.tiltDeg > ground.settings.sawMaxTiltDeg + 1e-9,
   }
@@ -120,34 +131,43 @@ const onCentreLine = (plane: Plane, cut: DraftCut, timber: Timber): Plane => ({
   },
 })
 
-/** Whether a tail plane still takes timber where another one already cuts. */
-const missesTail = (cut: DraftCut, others: DraftCut[]): boolean =>
-  others.some((other) => {
-    const ends = (c: DraftCut) =>
-      c.longSide === 'right'
-        ? [c.shortPointFromHeelMm, c.longPointFromHeelMm]
-        : [c.longPointFromHeelMm, c.shortPointFromHeelMm]
-    const [left = 0, right = 0] = ends(cut)
-    const [otherLeft = 0, otherRight = 0] = ends(other)
-    return left < otherLeft + leastTailMm && right < otherRight + leastTailMm
+/** Whether another cut of the tail leaves a cut nothing to take, on all four arrises. */
+const missesTail = (timber: Timber, cut: DraftCut, others: DraftCut[]): boolean =>
+  others.some((other) =>
+    [timber.halfMm, -timber.halfMm].every((leftMm) =>
+      [topFall(timber, leftMm), timber.depthMm / timber.cos].every(
+        (downMm) =>
+          crossingAt(cut.crossing, leftMm, downMm) <
+          crossingAt(other.crossing, leftMm, downMm) + leastTailMm,
+      ),
+    ),
+  )
+
+/** The eaves' tail planes and the cuts against valleys, those that take timber. */
+const tailCuts = (ground: Ground, piece: Piece, timber: Timber, standMm: number): DraftCut[] => {
+  const free = tailEdges(ground, piece).map((edge) => {
+    const plane = tailPlane(ground, edge, standMm)
+    const cut = draftCut(ground, piece, timber, 'tail', plane, null)
+    return { ...cut, plane: onCentreLine(plane, cut, timber) }
   })
+  const butting = piece.tailCuts.map((cut, place) =>
+    draftCut(ground, piece, timber, 'tail', jointPlane(piece, timber, cut), place),
+  )
+  const all = [...free, ...butting]
+  return all.reduce((kept, cut) => {
+    const others = kept.filter((other) => other !== cut)
+    return missesTail(timber, cut, others) ? others : kept
+  }, all)
+}
 
 /** All saw cuts of a piece but its birdsmouth: head, then foot, then tail. */
 export const cutsOf = (ground: Ground, piece: Piece, standMm: number): DraftCut[] => {
   const timber = timberOf(piece, standMm)
   const joint = (end: 'head' | 'foot') => (cut: PlanCut, place: number) =>
     draftCut(ground, piece, timber, end, jointPlane(piece, timber, cut), place)
-  const tails = tailEdges(ground, piece).map((edge) => {
-    const plane = tailPlane(ground, edge, standMm)
-    const cut = draftCut(ground, piece, timber, 'tail', plane, null)
-    return { ...cut, plane: onCentreLine(plane, cut, timber) }
-  })
   return [
     ...piece.headCuts.map(joint('head')),
     ...piece.footCuts.map(joint('foot')),
-    ...tails.reduce((kept, cut) => {
-      const others = kept.filter((other) => other !== cut)
-      return missesTail(cut, others) ? others : kept
-    }, tails),
+    ...tailCuts(ground, piece, timber, standMm),
   ]
 }

@@ -36,7 +36,8 @@ const meetingMm = (
   return share > 0 && share < 1 ? share * outer : null
 }
 
-const isRidged = ({ arrisFall }: Timber): boolean => arrisFall.left > 0 || arrisFall.right > 0
+const isRidged = ({ arrisFall, dishMm = 0 }: Timber): boolean =>
+  arrisFall.left > 0 || arrisFall.right > 0 || dishMm > 0
 
 /** Offsets off the centre line at which an end can have a corner. */
 const offsets = (timber: Timber, cuts: DraftCut[], level: Level): number[] => {
@@ -101,4 +102,22 @@ export const endReachMm = (timber: Timber, cuts: DraftCut[], upper: boolean): nu
     }
   }
   return furthest
+}
+
+/**
+ * Reach of the lower end of a rafter whose tail may be cut off inside its heel line, by a plumb cut:
+ * what its seat has taken there reaches no further. mm from its origin.
+ */
+export const seatedReachMm = (timber: Timber, cuts: DraftCut[], standMm: number): number => {
+  const { halfMm, sin, cos } = timber
+  const whole = timber.depthMm / cos
+  const alongAt = (leftMm: number, level: Level) => endAlongMm(timber, cuts, false, leftMm, level)
+  const underAt = (alongMm: number) =>
+    alongMm - sin * (alongMm > 0 ? Math.min(whole, standMm + alongMm * sin) : whole)
+  const tops = offsets(timber, cuts, 'top').map((left) => alongAt(left, 'top'))
+  const bottoms = offsets(timber, cuts, 'bottom').map((left) => alongAt(left, 'bottom'))
+  const [left, right] = [alongAt(halfMm, 'bottom'), alongAt(-halfMm, 'bottom')]
+  // where the cut crosses the heel line the timber still has its whole depth
+  if (Math.min(left, right) < 0 && Math.max(left, right) > 0) bottoms.push(0)
+  return Math.min(...tops, ...bottoms.map(underAt))
 }

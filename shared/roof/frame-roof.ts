@@ -7,7 +7,6 @@ import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
 import type { FrameDraft } from './members.ts'
-import type { Piece, PieceEnd } from './piece.ts'
 import { planingOf } from './planing.ts'
 import { publishedLines, publishedPlanes } from './published-lines.ts'
 import { roofLines } from './roof-lines.ts'
@@ -16,22 +15,23 @@ import { defaultSettings } from './roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from './roof-types.ts'
 import { worstRounding } from './rounding.ts'
 import { besideFrame } from './secondary/beside-frame.ts'
-import { plateLines } from './slopes.ts'
+import { plateLines } from './plate-lines.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
-
-/** Ridges, and the feet of broken hips, are there first: others bear on them. */
-const runsThrough = (piece: Piece, end: PieceEnd): boolean =>
-  piece.role === 'ridge' || (piece.role === 'broken-hip' && end === 'foot')
 
 /** Cuts all joints and gives every piece its numbers. */
 const draftMembers = (ground: Ground, standMm: number) => {
   const pieces = buildPieces(ground)
-  const { placedAt, openPieces } = cutJoints(ground, pieces)
+  const { placedAt, standsFree, openPieces } = cutJoints(ground, pieces)
   const segments = segmentIndex(pieces)
   const drafts = pieces.map((piece): FrameDraft =>
     draftMember(ground, piece, standMm, (cut) => {
-      if (cut.end === 'tail' || cut.listed === null || runsThrough(piece, cut.end)) return []
+      if (cut.listed === null) return []
+      if (cut.end === 'tail') {
+        const isValley = (other: number) => pieces[other]?.role === 'valley'
+        return bearings(pieces, segments, piece, cut.end, cut.listed, isValley)
+      }
+      if (standsFree(piece.id, cut.end)) return []
       const list = cut.end === 'head' ? piece.headCuts : piece.footCuts
       const mate = list[cut.listed]?.mitreWith ?? null
       const own = placedAt(piece.id, cut.end)
@@ -69,7 +69,7 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
     cutLines,
     totals: roofTotals(planes, published, members),
     cautions: cautionsOf(ground, standMm, members, openMarks),
-    planing: planingOf(drafts, plates.slopes, standMm, markOf),
+    planing: planingOf(drafts, plates, lines, standMm, markOf),
     rounding: worstRounding(all, settings, markOf),
   }
 }

@@ -1,10 +1,13 @@
 import { planSegments, sharedRange } from './contacts.ts'
 import type { Segment } from './contacts.ts'
+import { boxesMeet, convexOverlap, polygonSignedArea } from './convex.ts'
+import type { Box } from './convex.ts'
+import { phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
-import { fullPlan } from './trim.ts'
+import { halfObstacle } from './trim.ts'
 import type { Obstacle } from './trim.ts'
 import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
 
@@ -28,9 +31,11 @@ const closedMm = 0.1
 const nearlyMm = 1.5
 const behindMm = 6
 const closedShare = 0.985
+/** Pieces that share more of the plan than this are in each other's way. */
+const overlapMm2 = 1
 
 /** What stands in plan: the piece and the shape of it. */
-type Body = { piece: number; points: readonly Point2[]; sides: Segment[] }
+type Body = { piece: number; points: readonly Point2[]; sides: Segment[]; box: Box }
 
 /** Length of a segment within a convex shape. */
 const lengthWithin = (from: Point2, to: Point2, points: readonly Point2[]): number => {
@@ -70,61 +75,61 @@ const closes = (face: Segment, cut: PlanCut, bodies: readonly Body[]): boolean =
   return covered(closedMm) >= closedShare * meant && covered(closedMm) > sliverMm
 }
 
-const headFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
-  const cuts = job.piece.headCuts
+const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
+  const { piece, end } = job
+  const cuts = end === 'head' ? piece.headCuts : piece.footCuts
   let faults = Math.max(0, cuts.length - 2) * awkward
   cuts.forEach((cut, k) => {
-    const face = own.sides.find((s) => s.side.kind === 'head' && s.side.cut === k)
-    if (Math.abs(dot2(cut.normal, job.piece.dir)) < featherFacing) faults += awkward
+    const face = own.sides.find((s) => s.side.kind === end && s.side.cut === k)
+    if (Math.abs(dot2(cut.normal, piece.dir)) < featherFacing) faults += awkward
     const size =
       face === undefined ? 0 : Math.hypot(face.to.x - face.from.x, face.to.y - face.from.y)
     if (face === undefined || size < sliverMm || !closes(face, cut, bodies)) faults += open
   })
-  return faults
+  const overlaps = bodies.some(
+    (body) =>
+      body.piece !== piece.id &&
+      boxesMeet(own.box, body.box) &&
+      polygonSignedArea(convexOverlap(own.points, body.points)) > overlapMm2,
+  )
+  return overlaps ? faults + open : faults
 }
 
-/** Looks at all heads of a group of joints as placed in order: whether each bears and closes on what stood before it. */
+const bodyOf = (obstacle: Obstacle): Body => ({
+  piece: obstacle.piece,
+  points: obstacle.polygon.points,
+  sides: planSegments(obstacle.piece, obstacle.polygon),
+  box: obstacle.box,
+})
+
+/** Looks at all ends of a group of joints as placed in order: whether each bears and closes on what stood before it. */
 export const jointFaults = (
   jobs: readonly EndJob[],
-  pieces: readonly Piece[],
   before: readonly Obstacle[],
+  hasFootJob: (piece: Piece) => boolean,
 ): JointFaults => {
-  const bodies = new Map<number, Body>()
-  for (const piece of pieces) {
-    const plan = fullPlan(piece)
-    bodies.set(piece.id, {
-      piece: piece.id,
-      points: plan.points,
-      sides: planSegments(piece.id, plan),
-    })
+  const heads = new Map<number, Body>()
+  for (const { piece, end } of jobs) {
+    if (end === 'head') heads.set(piece.id, bodyOf(halfObstacle(piece, end)))
   }
-  const standing: Body[] = before
-    .filter((obstacle) => !bodies.has(obstacle.piece))
-    .map(({ piece, polygon }) => ({
-      piece,
-      points: polygon.points,
-      sides: planSegments(piece, polygon),
-    }))
-  // the far end of what starts or ends elsewhere stands already
-  for (const piece of pieces) {
-    const own = bodies.get(piece.id)
-    if (own !== undefined && piece.role === 'ridge') standing.push(own)
-  }
+  const standing: Body[] = before.map(bodyOf)
   const ofJoint = new Map<number, number>()
   const openPieces: number[] = []
   let total = 0
   for (const job of jobs) {
-    const own = bodies.get(job.piece.id)
-    if (own === undefined) continue
-    if (job.end === 'head' && job.piece.role !== 'ridge') {
-      const mates = job.piece.headCuts.flatMap(({ mitreWith }) => bodies.get(mitreWith ?? -1) ?? [])
-      const others = [...standing, ...mates].filter((body) => body !== own)
-      const faults = headFaults(job, own, [...new Set(others)])
+    const { piece, end } = job
+    const own = (end === 'head' ? heads.get(piece.id) : null) ?? bodyOf(halfObstacle(piece, end))
+    if (job.phase !== phases.brokenFoot) {
+      const cuts = end === 'head' ? piece.headCuts : piece.footCuts
+      const mates = cuts.flatMap(({ mitreWith }) => heads.get(mitreWith ?? -1) ?? [])
+      const others = [...standing, ...mates].filter((body) => body.piece !== piece.id)
+      const faults = endFaults(job, own, [...new Set(others)])
       total += faults
-      if (faults >= open) openPieces.push(job.piece.id)
+      if (faults >= open) openPieces.push(piece.id)
       if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
     }
     standing.push(own)
+    if (end === 'head' && !hasFootJob(piece)) standing.push(bodyOf(halfObstacle(piece, 'foot')))
   }
   return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open, openPieces }
 }

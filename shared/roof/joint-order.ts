@@ -2,34 +2,16 @@ import { boxGrid } from './box-grid.ts'
 import { brokenFootCut, sidesAt } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import { jointFaults } from './joint-faults.ts'
-import { bodyDirection, endJobs, phases, usualWay } from './joint-phases.ts'
+import { endJobs, phases, usualWay } from './joint-phases.ts'
 import type { EndJob, JointWay, JointWays } from './joint-phases.ts'
 import { jointMitres } from './joint-mitres.ts'
 import { jointGroups, waysToTry } from './joint-ways.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
-import type { Point2 } from './roof-types.ts'
+import { ridgeDirections, ridgeEnd } from './ridge-ends.ts'
 import { at } from './slopes.ts'
 import { halfObstacle, trimEnd } from './trim.ts'
 import type { Near, Obstacle } from './trim.ts'
-import { add2, distance2, dot2, scale2, sub2 } from './vector.ts'
-
-/** The verge overhang of the gable that a ridge end stands on; null where it does not. */
-const vergeMm = (ground: Ground, point: Point2): number | null => {
-  for (const edge of ground.plates.edges) {
-    if (edge.finish !== 'gable') continue
-    const off = Math.abs(dot2(edge.inward, sub2(point, edge.from)))
-    if (off < 1) return edge.overhangMm
-  }
-  return null
-}
-
-/** Ridges run half a rafter past the joint, or out to the verge. */
-const ridgeEnd = (ground: Ground, { piece, end }: EndJob): PlanCut => {
-  const away = scale2(bodyDirection(piece, end), -1)
-  const node = end === 'head' ? piece.head : piece.foot
-  const past = vergeMm(ground, node) ?? ground.roof.sections.rafter.thicknessMm / 2
-  return { point: add2(node, scale2(away, past)), normal: away, mitreWith: null }
-}
+import { distance2 } from './vector.ts'
 
 /** Trims an end; it may run past its set-out end as far as its joint's centre and a little more. */
 const trimmed = (ground: Ground, job: EndJob, near: Near, cuts: PlanCut[]) => {
@@ -72,17 +54,24 @@ const setCuts = (job: EndJob, cuts: PlanCut[], standing: Standing) => {
 }
 
 const hasFootJob = (piece: Piece): boolean =>
-  piece.role === 'ridge' || piece.role === 'broken-hip' || piece.footLine !== null
+  piece.role === 'ridge' || piece.footJoint !== null || piece.footLine !== null
 
-/** Places ends in their order; changes their pieces' cut lists. */
-const placeJobs = (ground: Ground, jobs: EndJob[], ways: JointWays, standing: Standing): void => {
-  const placed: EndJob[] = []
+/** Places ends in their order, after those of `before`; changes their pieces' cut lists. */
+const placeJobs = (
+  ground: Ground,
+  jobs: EndJob[],
+  ways: JointWays,
+  standing: Standing,
+  before: readonly EndJob[],
+): void => {
+  const placed: EndJob[] = [...before]
   jobs.forEach((job, k) => {
     const { phase } = job
-    if (phase === phases.ridge) setCuts(job, [ridgeEnd(ground, job)], standing)
+    if (phase === phases.ridge) setCuts(job, [ridgeEnd(ground, job, jobs)], standing)
     else if (phase === phases.brokenFoot) setCuts(job, [brokenFoot(job, jobs, ways)], standing)
     else {
-      const mitres = job.joint === null ? [] : jointMitres(ground, job, jobs, placed)
+      const isButt = job.joint === null || phase === phases.ridgeButt
+      const mitres = isButt ? [] : jointMitres(ground, job, jobs, placed)
       setCuts(job, trimmed(ground, job, standing.near, mitres), standing)
     }
     placed.push(job)
@@ -125,12 +114,13 @@ const placeGroup = (
 ): { jobs: EndJob[]; openPieces: readonly number[] } => {
   const isOwn = (joint: number | null) => joint !== null && group.includes(joint)
   const own = pieces.filter((p) => isOwn(p.headJoint) || isOwn(p.footJoint))
+  const ridges = ridgeDirections(pieces, group)
   const place = (ways: JointWays) => {
     const jobs = endJobs(ground, own, ways).filter(
-      (job) => isOwn(job.joint) && job.phase !== phases.ridge,
+      (job) => isOwn(job.joint) && job.phase > phases.ridgeButt,
     )
-    placeJobs(ground, jobs, ways, overlay(before))
-    return { jobs, faults: jointFaults(jobs, own, before) }
+    placeJobs(ground, jobs, ways, overlay(before), ridges)
+    return { jobs, faults: jointFaults(jobs, before, hasFootJob) }
   }
   let ways: JointWays = new Map<number, JointWay>()
   let best = place(ways)
@@ -166,7 +156,14 @@ const placedAt = (pieces: Piece[], placed: EndJob[]): PlacedAt => {
   }
 }
 
-type JointsCut = { placedAt: PlacedAt; openPieces: ReadonlySet<number> }
+type JointsCut = {
+  placedAt: PlacedAt
+  /** Whether an end was there first, cut to bear on nothing. */
+  standsFree: (piece: number, end: PieceEnd) => boolean
+  openPieces: ReadonlySet<number>
+}
+
+const isFree = ({ phase }: EndJob): boolean => phase === phases.ridge || phase === phases.brokenFoot
 
 /**
  * Cuts all ends that meet other timber, in the order of who runs through and who butts: ridges and
@@ -176,11 +173,11 @@ type JointsCut = { placedAt: PlacedAt; openPieces: ReadonlySet<number> }
 export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
   const all = endJobs(ground, pieces, new Map())
   const isEarly = (job: EndJob) =>
-    job.phase === phases.ridge || (job.joint === null && job.phase === phases.common)
+    job.phase <= phases.ridgeButt || (job.joint === null && job.phase === phases.common)
   const early = all.filter(isEarly)
   const grid = boxGrid<Obstacle>()
   const put = (obstacle: Obstacle) => grid.put(obstacle, obstacle.box)
-  placeJobs(ground, early, new Map(), { near: grid.near, put })
+  placeJobs(ground, early, new Map(), { near: grid.near, put }, [])
   const placed = [...early]
   const trials: Trials = { left: mostTrials }
   const openPieces = new Set<number>()
@@ -188,12 +185,18 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
     const made = placeGroup(ground, pieces, group.joints, grid.near(group.box), trials)
     placed.push(...made.jobs)
     made.openPieces.forEach((piece) => openPieces.add(piece))
-  }
-  for (const job of placed.slice(early.length)) {
-    put(halfObstacle(job.piece, job.end))
-    if (!hasFootJob(job.piece)) put(halfObstacle(job.piece, 'foot'))
+    for (const job of made.jobs) {
+      put(halfObstacle(job.piece, job.end))
+      if (!hasFootJob(job.piece)) put(halfObstacle(job.piece, 'foot'))
+    }
   }
   const late = all.filter((job) => job.joint === null && !isEarly(job))
-  placeJobs(ground, late, new Map(), { near: grid.near, put })
-  return { placedAt: placedAt(pieces, [...placed, ...late]), openPieces }
+  placeJobs(ground, late, new Map(), { near: grid.near, put }, [])
+  placed.push(...late)
+  const free = new Set(placed.filter(isFree).map(({ piece, end }) => `${piece.id}${end}`))
+  return {
+    placedAt: placedAt(pieces, placed),
+    standsFree: (piece, end) => free.has(`${piece}${end}`),
+    openPieces,
+  }
 }

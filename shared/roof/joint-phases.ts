@@ -1,4 +1,4 @@
-import { sidesAt, standSquare } from './broken-foot.ts'
+import { isRisingAt, sidesAt, standSquare } from './broken-foot.ts'
 import type { FootWay } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Joint } from './clusters.ts'
@@ -24,6 +24,8 @@ export const inLineRad = 1e-3
 
 export const phases = {
   ridge: 0,
+  /** Ridges that butt the side of one that runs through. */
+  ridgeButt: 0.5,
   brokenFoot: 1,
   first: 1.5,
   common: 2,
@@ -32,6 +34,8 @@ export const phases = {
   crown: 5,
   side: 6,
   hip: 7,
+  /** Feet of broken hips and valleys that stand on what is there. */
+  riser: 7.2,
   last: 7.5,
   creeper: 8,
 } as const
@@ -42,6 +46,18 @@ export const bodyDirection = (piece: Piece, end: PieceEnd): Point2 =>
 
 export const turn = (from: Point2, to: Point2): number =>
   Math.atan2(cross2(from, to), dot2(from, to))
+
+/** The pieces at a joint, as its order sees them. */
+type JointPieces = {
+  joint: Joint
+  index: number
+  own: Piece[]
+  /** The ridge that runs through, or furthest. */
+  ridge: Piece | null
+  /** What starts here and climbs on, where others bear on its foot. */
+  foot: Piece | null
+  way: JointWay
+}
 
 /** The crown that continues a ridge or a broken hip, if any: the one nearest its line, within 45°. */
 const firstCrown = (crowns: Piece[], through: Point2, mustBeExact: boolean): Piece | null => {
@@ -60,13 +76,22 @@ const apexPair = (crowns: Piece[]): [Piece, Piece] | null => {
   return null
 }
 
-const crownPhases = (joint: Joint, crowns: Piece[], through: Piece | null): Map<Piece, number> => {
+const outOfRidge = (ridge: Piece, joint: Joint): Point2 =>
+  dot2(sub2(joint.point, piecePoint(ridge, ridge.planMm / 2, 0)), ridge.dir) > 0
+    ? ridge.dir
+    : scale2(ridge.dir, -1)
+
+const crownPhases = ({ joint, index, ridge, foot }: JointPieces, crowns: Piece[]) => {
   const phase = new Map<Piece, number>(crowns.map((piece) => [piece, phases.crown]))
-  if (through !== null) {
-    const isFoot = joint.rising !== null
-    // out of the joint, away from what runs through it
-    const out = isFoot ? scale2(through.dir, -1) : outOfRidge(through, joint)
-    const first = firstCrown(crowns, out, !isFoot)
+  if (ridge !== null) {
+    if (ridge.through.includes(index)) return phase
+    const first = firstCrown(crowns, outOfRidge(ridge, joint), true)
+    if (first !== null) phase.set(first, phases.firstCrown)
+    return phase
+  }
+  if (foot !== null) {
+    // out of the joint, away from what climbs on
+    const first = firstCrown(crowns, scale2(foot.dir, -1), false)
     if (first !== null) phase.set(first, phases.firstCrown)
     return phase
   }
@@ -80,85 +105,90 @@ const crownPhases = (joint: Joint, crowns: Piece[], through: Piece | null): Map<
   return phase
 }
 
-const outOfRidge = (ridge: Piece, joint: Joint): Point2 =>
-  dot2(sub2(joint.point, piecePoint(ridge, ridge.planMm / 2, 0)), ridge.dir) > 0
-    ? ridge.dir
-    : scale2(ridge.dir, -1)
+const isRafter = (piece: Piece): boolean => piece.line === null
 
-const isRidgeAt = (piece: Piece, joint: number): boolean =>
-  piece.role === 'ridge' && (piece.headJoint === joint || piece.footJoint === joint)
+const sharesSlope = (piece: Piece, other: Piece | null): boolean =>
+  other !== null && piece.slopes.some((slope) => other.slopes.includes(slope))
 
-/** Side rafters at the foot of a broken hip butt the crown's sides; those square to it butt its own. */
-const sidePhase = (piece: Piece, pieces: Piece[], way: JointWay): number => {
-  const rising = pieces.find((p) => p.role === 'broken-hip' && p.footJoint === piece.headJoint)
-  return rising !== undefined && standSquare(rising, sidesAt(rising, pieces), way.foot)
-    ? phases.common
-    : phases.side
+/** Where a rafter's head belongs: on the ridge's side, beside what climbs on, or at the end of either. */
+const rafterPhase = (piece: Piece, { own, ridge, way }: JointPieces, rising: Piece | null) => {
+  if (ridge !== null) return sharesSlope(piece, ridge) ? phases.common : phases.crown
+  if (rising === null || !sharesSlope(piece, rising)) return phases.crown
+  // side rafters at the foot of a broken hip butt the crown's sides; those square to it butt its own
+  return standSquare(rising, sidesAt(rising, own), way.foot) ? phases.common : phases.side
 }
 
-const headPhase = (piece: Piece, pieces: Piece[], way: JointWay): number => {
-  switch (piece.role) {
-    case 'ridge':
-      return phases.ridge
-    case 'common':
-      return phases.common
-    case 'hip':
-    case 'broken-hip':
-      return phases.hip
-    case 'crown-end':
-      return phases.crown
-    default:
-      return piece.headJoint === null ? phases.creeper : sidePhase(piece, pieces, way)
+/** Phases of the heads and feet that meet at one joint, but for ridges. */
+const phasesAt = (at: JointPieces): Map<Piece, number> => {
+  const { own, index, way, ridge, foot } = at
+  const phaseOf = new Map<Piece, number>()
+  const isHead = (p: Piece) => p.headJoint === index
+  const rising = own.find((p) => isRisingAt(p, index)) ?? null
+  const rafters = own.filter((p) => isRafter(p) && isHead(p))
+  rafters.forEach((p) => phaseOf.set(p, rafterPhase(p, at, rising)))
+  crownPhases(
+    at,
+    rafters.filter((p) => phaseOf.get(p) === phases.crown),
+  ).forEach((phase, piece) => phaseOf.set(piece, phase))
+  for (const piece of own) {
+    if (piece.role === 'ridge') continue
+    if (!isRafter(piece)) {
+      const footPhase = piece === foot ? phases.brokenFoot : phases.riser
+      phaseOf.set(piece, isHead(piece) ? phases.hip : footPhase)
+    } else if (!isHead(piece)) phaseOf.set(piece, ridge === null ? phases.riser : phases.firstCrown)
+    if (piece === foot) continue
+    if (piece.id === way.first) phaseOf.set(piece, phases.first)
+    if (piece.id === way.last) phaseOf.set(piece, phases.last)
   }
+  return phaseOf
 }
 
-const wayOf = (ways: JointWays, joint: number | null): JointWay =>
-  (joint === null ? null : ways.get(joint)) ?? usualWay
+/** Whether what climbs on from a joint stands on what is there, instead of others on its foot. */
+const standsThere = (joint: Joint, rising: Piece, way: JointWay): boolean =>
+  joint.ridges.length > 0 ||
+  way.foot === 'stand' ||
+  (way.foot === 'usual' && rising.role === 'valley')
+
+const reaches = (piece: Piece): number[] =>
+  [...new Set([piece.headJoint, piece.footJoint, ...piece.through])].flatMap((j) => j ?? [])
 
 /** The pieces that reach each joint. */
-const piecesByJoint = (ground: Ground, pieces: Piece[]): Piece[][] => {
+const piecesByJoint = (ground: Ground, pieces: Piece[], ways: JointWays): JointPieces[] => {
   const reaching = ground.joints.joints.map((): Piece[] => [])
-  for (const piece of pieces) {
-    for (const joint of new Set([piece.headJoint, piece.footJoint])) {
-      if (joint !== null) reaching[joint]?.push(piece)
-    }
-  }
-  return reaching
-}
-
-const headPhases = (ground: Ground, pieces: Piece[], ways: JointWays): Map<Piece, number> => {
-  const phaseOf = new Map<Piece, number>()
-  piecesByJoint(ground, pieces).forEach((own, index) => {
-    const way = wayOf(ways, index)
-    const heads = own.filter((p) => p.headJoint === index)
-    heads.forEach((piece) => phaseOf.set(piece, headPhase(piece, own, way)))
-    const crowns = heads.filter((p) => p.role === 'crown-end')
-    const through =
-      own.find((p) => isRidgeAt(p, index)) ??
-      own.find((p) => p.role === 'broken-hip' && p.footJoint === index) ??
-      null
-    const joint = at(ground.joints.joints, index)
-    crownPhases(joint, crowns, through).forEach((phase, piece) => phaseOf.set(piece, phase))
-    for (const piece of heads) {
-      if (piece.id === way.first) phaseOf.set(piece, phases.first)
-      if (piece.id === way.last) phaseOf.set(piece, phases.last)
-    }
+  for (const piece of pieces) for (const joint of reaches(piece)) reaching[joint]?.push(piece)
+  return ground.joints.joints.map((joint, index) => {
+    const own = at(reaching, index)
+    const way = ways.get(index) ?? usualWay
+    const [line] = joint.ridges
+    const chain = ground.joints.chains.find((c) => line !== undefined && c.lines.includes(line))
+    const ridge = own.find((p) => p.role === 'ridge' && p.line === chain?.lines[0]) ?? null
+    const rising = own.find((p) => p.line !== null && p.line === joint.rising) ?? null
+    const foot = rising !== null && !standsThere(joint, rising, way) ? rising : null
+    return { joint, index, own, ridge, foot, way }
   })
-  return phaseOf
 }
 
 /** Every end that meets other timber, first placed first. */
 export const endJobs = (ground: Ground, pieces: Piece[], ways: JointWays): EndJob[] => {
-  const phaseOf = headPhases(ground, pieces, ways)
+  const joints = piecesByJoint(ground, pieces, ways)
+  const phasesOf = joints.map((at) =>
+    at.own.length === 0 ? new Map<Piece, number>() : phasesAt(at),
+  )
+  const phaseAt = (piece: Piece, joint: number | null): number => {
+    if (piece.role === 'ridge') {
+      const through = joint === null ? null : (joints[joint]?.ridge ?? null)
+      return through === null || through === piece ? phases.ridge : phases.ridgeButt
+    }
+    if (joint !== null) return phasesOf[joint]?.get(piece) ?? phases.creeper
+    return piece.onRidge ? phases.common : phases.creeper
+  }
   const jobs: EndJob[] = []
   for (const piece of pieces) {
-    const phase = phaseOf.get(piece) ?? headPhase(piece, [], usualWay)
-    jobs.push({ piece, end: 'head', phase, joint: piece.headJoint })
-    if (piece.role === 'ridge') jobs.push({ piece, end: 'foot', phase, joint: piece.footJoint })
-    if (piece.role === 'broken-hip') {
-      jobs.push({ piece, end: 'foot', phase: phases.brokenFoot, joint: piece.footJoint })
-    }
-    if (piece.footLine !== null) {
+    const add = (end: PieceEnd, joint: number | null) =>
+      jobs.push({ piece, end, phase: phaseAt(piece, joint), joint })
+    add('head', piece.headJoint)
+    if (piece.role === 'ridge' || piece.footJoint !== null) add('foot', piece.footJoint)
+    else if (piece.footLine !== null) {
       jobs.push({ piece, end: 'foot', phase: phases.creeper, joint: null })
     }
   }

@@ -1,3 +1,4 @@
+import { isRisingAt } from './broken-foot.ts'
 import type { FootWay } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Box } from './convex.ts'
@@ -43,16 +44,18 @@ export const jointGroups = (ground: Ground): JointGroup[] => {
   })
 }
 
-const footWays: FootWay[] = ['fitted', 'flush', 'parted', 'sides', 'crown']
+const footWays: FootWay[] = ['fitted', 'flush', 'parted', 'sides', 'crown', 'stand']
 
 /**
  * Other ways to make a joint, those nearest the usual order first: another foot for the broken hip
  * that starts there, one piece after all others or before them, then two changes at once.
  */
 export const waysToTry = (pieces: Piece[], joint: number): JointWay[] => {
-  const isFoot = (p: Piece) => p.role === 'broken-hip' && p.footJoint === joint
-  const heads = pieces.filter((p) => p.headJoint === joint && p.role !== 'ridge').map((p) => p.id)
-  const feet = pieces.some(isFoot) ? footWays : []
+  const isRidge = (p: Piece) => p.role === 'ridge'
+  const meets = (p: Piece) => p.headJoint === joint || p.footJoint === joint
+  const heads = pieces.filter((p) => meets(p) && !isRidge(p)).map((p) => p.id)
+  const hasRidge = pieces.some((p) => isRidge(p) && (meets(p) || p.through.includes(joint)))
+  const feet = !hasRidge && pieces.some((p) => isRisingAt(p, joint)) ? footWays : []
   const moved = (foot: FootWay): JointWay[] => [
     ...heads.map((last) => ({ foot, first: null, last })),
     ...heads.map((first) => ({ foot, first, last: null })),

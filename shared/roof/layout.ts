@@ -1,60 +1,66 @@
+import type { Ground } from './build-pieces.ts'
+import type { Piece } from './piece.ts'
+import { raftersAt, reachesJoint } from './rafter-pieces.ts'
+import type { Station } from './rafter-pieces.ts'
+import type { RoofLines } from './roof-lines.ts'
 import type { Roof } from './roof-types.ts'
-import type { Joints } from './clusters.ts'
-import type { Face, RoofLines } from './roof-lines.ts'
-import { squareLineSpan } from './roof-lines.ts'
+import type { SlopeGround } from './slope-ground.ts'
 import { at } from './slopes.ts'
-import type { PlateLines, Slope } from './slopes.ts'
+import { squareLineSpans } from './square-spans.ts'
 import { dot2, sub2 } from './vector.ts'
-
-/** Where a rafter stands on a slope's plate line, mm from the slope's first corner. */
-export type Station = { alongMm: number; joint: number | null }
 
 /** Bays that differ by less than this from a whole number are whole. */
 const bayTolerance = 1e-6
 
-const isGable = (plates: PlateLines, edge: number) => at(plates.edges, edge).finish === 'gable'
-
-/** The stations a slope must have: at joints whose square line it carries, and flush inside gables. */
-const fixedStations = (
-  roof: Roof,
-  plates: PlateLines,
-  lines: RoofLines,
-  joints: Joints,
-  slope: Slope,
-  face: Face,
-): Station[] => {
-  const half = roof.sections.rafter.thicknessMm / 2
-  const stations: (Station & { rank: number })[] = []
-  if (isGable(plates, at(plates.edges, at(slope.edges, 0) - 1).index)) {
-    stations.push({ alongMm: half, joint: null, rank: 0 })
-  }
-  if (isGable(plates, at(plates.edges, at(slope.edges, slope.edges.length - 1) + 1).index)) {
-    stations.push({ alongMm: slope.lengthMm - half, joint: null, rank: 0 })
-  }
-  joints.joints.forEach((joint, index) => {
-    const own = joint.nodes.filter((n) => face.nodes.includes(n))
-    if (own.length === 0 || touchesGable(lines, own)) return
-    const ridge = joint.ridge === null ? null : at(lines.lines, joint.ridge)
-    const onRidge = own.filter((n) => ridge !== null && (ridge.from === n || ridge.to === n))
-    const alongMm = dot2(slope.along, sub2(joint.point, slope.origin))
-    const height = Math.max(...own.map((n) => at(lines.nodes, n).point.z))
-    stations.push({ alongMm, joint: index, rank: onRidge.length > 0 ? 1 : 2 + 1 / (1 + height) })
-  })
-  return keepApart(stations, roof.sections.rafter.thicknessMm)
-}
+type Ranked = Station & { rank: number }
 
 const touchesGable = (lines: RoofLines, nodes: number[]): boolean =>
   lines.lines.some(
     (line) => line.kind === 'verge' && (nodes.includes(line.from) || nodes.includes(line.to)),
   )
 
-/** Two rafters cannot stand in one place: the station of better rank stays. */
-const keepApart = (stations: (Station & { rank: number })[], thicknessMm: number): Station[] => {
+/** Flush inside the gables at the ends of a slope's plates. */
+const gableStations = (ground: Ground, { slope }: SlopeGround): Ranked[] => {
+  const half = ground.roof.sections.rafter.thicknessMm / 2
+  const isGable = (edge: number) => at(ground.plates.edges, edge).finish === 'gable'
+  return slope.plateRuns.flatMap((run) => [
+    ...(isGable(run.edge - 1) ? [{ alongMm: run.fromMm + half, joints: [], rank: 0 }] : []),
+    ...(isGable(run.edge + 1) ? [{ alongMm: run.toMm - half, joints: [], rank: 0 }] : []),
+  ])
+}
+
+/** At joints where one of the slope's square lines ends: a ridge's end first, then the higher one. */
+const jointStations = (ground: Ground, own: SlopeGround): Ranked[] => {
+  const { lines, joints } = ground
+  const { slope, face } = own
+  const onFace = new Set(face.nodes.map((n) => joints.ofNode[n] ?? null))
+  return joints.joints.flatMap((joint, index): Ranked[] => {
+    if (!onFace.has(index)) return []
+    const nodes = joint.nodes.filter((n) => face.nodes.includes(n))
+    if (touchesGable(lines, nodes)) return []
+    const alongMm = dot2(slope.along, sub2(joint.point, slope.origin))
+    const station = { alongMm, joints: [index] }
+    if (!reachesJoint(ground, own, station)) return []
+    const isRidgeEnd = joint.ridges.some((ridge) => {
+      const { from, to } = at(lines.lines, ridge)
+      return nodes.includes(from) || nodes.includes(to)
+    })
+    const height = Math.max(...nodes.map((n) => at(lines.nodes, n).point.z))
+    return [{ ...station, rank: isRidgeEnd ? 1 : 2 + 1 / (1 + height) }]
+  })
+}
+
+/** Two rafters cannot stand in one place: the station of better rank stays, and takes in the joints of the other. */
+const keepApart = (stations: Ranked[], thicknessMm: number): Station[] => {
   const kept: Station[] = []
   const byRank = [...stations].sort((a, b) => a.rank - b.rank || a.alongMm - b.alongMm)
-  for (const { alongMm, joint } of byRank) {
-    const clear = kept.every((other) => Math.abs(other.alongMm - alongMm) >= thicknessMm - 1e-6)
-    if (clear) kept.push({ alongMm, joint })
+  for (const { alongMm, joints } of byRank) {
+    const near = kept.findIndex((s) => Math.abs(s.alongMm - alongMm) < thicknessMm - 1e-6)
+    if (near < 0) kept.push({ alongMm, joints })
+    else {
+      const found = at(kept, near)
+      kept[near] = { ...found, joints: [...found.joints, ...joints] }
+    }
   }
   return kept.sort((a, b) => a.alongMm - b.alongMm)
 }
@@ -64,55 +70,53 @@ const between = (roof: Roof, from: number, to: number, backwards: boolean): numb
   const run = to - from
   const bays = Math.max(1, Math.ceil(run / roof.maxSpacingMm - bayTolerance))
   const step = roof.spacing === 'even' ? run / bays : roof.maxSpacingMm
-  return Array.from({ length: bays - 1 }, (_, k) =>
+  const inner = Array.from({ length: bays - 1 }, (_, k) =>
     backwards ? to - step * (k + 1) : from + step * (k + 1),
   )
+  return inner.sort((a, b) => a - b)
 }
 
 /** Both slopes of a ridge count full bays from the same end: the one its lower-numbered slope starts at. */
-const countsBackwards = (lines: RoofLines, slope: Slope, face: Face, middle: number): boolean => {
-  const border = squareLineSpan(lines, slope, face, middle)?.highBorder
+const countsBackwards = (ground: Ground, { slope, face }: SlopeGround, middle: number): boolean => {
+  const spans = squareLineSpans(ground.lines, slope, face, middle)
+  const border = spans[spans.length - 1]?.highBorder
   return border?.kind === 'slope' && border.slope < slope.index
 }
 
-/** Steps from the last station towards a corner, at the spacing exactly, until `isClear` fails. */
-const towards = (roof: Roof, from: number, sign: 1 | -1, isClear: (s: number) => boolean) => {
-  const out: number[] = []
-  for (let s = from + sign * roof.maxSpacingMm; isClear(s); s += sign * roof.maxSpacingMm) {
-    out.push(s)
-  }
-  return out
+/** Steps from the last station outwards to the slope's reach, at the spacing exactly. */
+const towards = (roof: Roof, from: number, end: number): number[] => {
+  const sign = end < from ? -1 : 1
+  const count = Math.floor(Math.abs(end - from) / roof.maxSpacingMm)
+  return Array.from({ length: count }, (_, k) => from + sign * roof.maxSpacingMm * (k + 1))
 }
 
-/** All stations of a slope, in order along its plate line. */
-export const slopeStations = (
-  roof: Roof,
-  plates: PlateLines,
-  lines: RoofLines,
-  joints: Joints,
-  slope: Slope,
-  face: Face,
-  isClear: (alongMm: number) => boolean,
-): Station[] => {
-  const fixed = fixedStations(roof, plates, lines, joints, slope, face).filter(
-    (s) => s.alongMm >= 0 && s.alongMm <= slope.lengthMm && isClear(s.alongMm),
+/** All rafters of a slope, in order along its plate line. */
+export const slopeRafters = (ground: Ground, own: SlopeGround): Piece[] => {
+  const { roof } = ground
+  const { slope } = own
+  const found = keepApart(
+    [...gableStations(ground, own), ...jointStations(ground, own)],
+    roof.sections.rafter.thicknessMm,
   )
-  if (fixed.length === 0 && isClear(slope.lengthMm / 2)) {
-    fixed.push({ alongMm: slope.lengthMm / 2, joint: null })
+  const make = (station: Station) => ({ station, pieces: raftersAt(ground, own, station) })
+  const free = (alongMm: number) => make({ alongMm, joints: [] })
+  let fixed = found.map(make).filter(({ pieces }) => pieces.length > 0)
+  if (fixed.length === 0) {
+    const [first] = slope.plateRuns
+    const middle = first === undefined ? 0 : (first.fromMm + first.toMm) / 2
+    fixed = [slope.lengthMm / 2, middle].map(free).filter(({ pieces }) => pieces.length > 0)
+    fixed = fixed.slice(0, 1)
   }
   if (fixed.length === 0) return []
-  const free = (alongMm: number): Station => ({ alongMm, joint: null })
-  const first = at(fixed, 0).alongMm
-  const last = at(fixed, fixed.length - 1).alongMm
-  const out = towards(roof, first, -1, isClear).map(free).reverse()
-  fixed.forEach((station, k) => {
-    out.push(station)
+  const made = towards(roof, at(fixed, 0).station.alongMm, own.fromMm).reverse().map(free)
+  fixed.forEach((entry, k) => {
+    made.push(entry)
     const next = fixed[k + 1]
     if (next === undefined) return
-    const middle = (station.alongMm + next.alongMm) / 2
-    const backwards = countsBackwards(lines, slope, face, middle)
-    const inner = between(roof, station.alongMm, next.alongMm, backwards).map(free)
-    out.push(...inner.sort((a, b) => a.alongMm - b.alongMm))
+    const [from, to] = [entry.station.alongMm, next.station.alongMm]
+    const backwards = countsBackwards(ground, own, (from + to) / 2)
+    made.push(...between(roof, from, to, backwards).map(free))
   })
-  return [...out, ...towards(roof, last, 1, isClear).map(free)]
+  made.push(...towards(roof, at(fixed, -1).station.alongMm, own.toMm).map(free))
+  return made.flatMap(({ pieces }) => pieces)
 }

@@ -1,8 +1,8 @@
 import type { Ground } from './build-pieces.ts'
 import { birdsmouthOf } from './birdsmouth.ts'
-import { cutsOf, timberOf } from './cuts.ts'
+import { cutsOf, finishedTimber, timberOf } from './cuts.ts'
 import type { DraftCut } from './cuts.ts'
-import { endCorners, endReachMm } from './ends.ts'
+import { endCorners, endReachMm, seatedReachMm } from './ends.ts'
 import { setOutLengthMm } from './piece.ts'
 import type { Piece } from './piece.ts'
 import type { Cut, Member } from './roof-types.ts'
@@ -17,7 +17,11 @@ export type DraftMember = Omit<Member, 'mark' | 'cuts'> & {
 }
 
 /** A rafter or a timber of a line: its numbers come from a piece of the frame. */
-export type FrameDraft = DraftMember & { piece: Piece }
+export type FrameDraft = DraftMember & {
+  piece: Piece
+  /** The timber with its top dished where it is. */
+  finished: Timber
+}
 
 /** A long point nearer the middle than this is central. */
 const centralMm = 0.05
@@ -50,7 +54,7 @@ const deductions = (piece: Piece, cuts: DraftCut[]) => {
 }
 
 const backingOf = (piece: Piece): Member['backing'] =>
-  piece.backed
+  piece.backed || piece.dished
     ? {
         leftDeg: degrees(Math.atan(piece.fall.left * piece.cos)),
         rightDeg: degrees(Math.atan(piece.fall.right * piece.cos)),
@@ -66,19 +70,22 @@ export const draftMember = (
 ): FrameDraft => {
   const timber = timberOf(piece, standMm)
   const cuts = cutsOf(ground, piece, standMm)
-  const allowanceMm = cuts.some((cut) => cut.end === 'tail') ? ground.roof.tailAllowanceMm : 0
-  const upper = endReachMm(timber, cuts.filter(atHead), true)
-  const lower = endReachMm(
-    timber,
-    cuts.filter((cut) => !atHead(cut)),
-    false,
-  )
+  const finished = finishedTimber(piece, timber)
+  const isLong = cuts.some((cut) => cut.end === 'tail' && cut.listed === null)
+  const allowanceMm = isLong ? ground.roof.tailAllowanceMm : 0
+  const lowerCuts = cuts.filter((cut) => !atHead(cut))
+  const upper = endReachMm(finished, cuts.filter(atHead), true)
+  const lower =
+    piece.tailCuts.length > 0
+      ? seatedReachMm(finished, lowerCuts, standMm)
+      : endReachMm(finished, lowerCuts, false)
   const cutLengthMm = upper - lower + allowanceMm
   const volumeM3 = (cutLengthMm * piece.section.thicknessMm * piece.section.depthMm) / 1_000_000_000
   const riseMm = piece.head.z - piece.foot.z
   return {
     piece,
     timber,
+    finished,
     role: piece.role,
     hand: handOf(piece, timber, cuts),
     section: { ...piece.section },

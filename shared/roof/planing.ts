@@ -1,8 +1,9 @@
-import type { DraftMember } from './members.ts'
+import type { FrameDraft } from './members.ts'
 import { endCorners } from './ends.ts'
 import type { Planing } from './roof-types.ts'
-import { slopeHeightMm } from './slopes.ts'
-import type { Slope } from './slopes.ts'
+import type { RoofLines } from './roof-lines.ts'
+import { surfaceHeightMm } from './eaves.ts'
+import type { PlateLines } from './slopes.ts'
 
 /** Less than this over a slope is no work for a plane. */
 const leastOffMm = 0.1
@@ -12,8 +13,9 @@ const leastOffMm = 0.1
  * with the plumb height to plane off, mm, by end and side. A corner on the centre line counts for both.
  */
 export const planingOf = (
-  drafts: DraftMember[],
-  slopes: readonly Slope[],
+  drafts: FrameDraft[],
+  plates: PlateLines,
+  lines: RoofLines,
   standMm: number,
   markOf: Map<number, string>,
 ): Planing[] =>
@@ -21,13 +23,10 @@ export const planingOf = (
     (['head', 'foot'] as const).flatMap((end) => {
       const cuts = draft.cuts.filter((cut) => cut.end === end)
       if (cuts.length === 0) return []
-      const { timber } = draft
-      const corners = endCorners(timber, cuts, end === 'head').map((corner) => ({
+      const { finished } = draft
+      const corners = endCorners(finished, cuts, end === 'head').map((corner) => ({
         leftMm: corner.leftMm,
-        overMm:
-          corner.point.z -
-          standMm -
-          Math.min(...slopes.map((slope) => slopeHeightMm(slope, corner.point))),
+        overMm: corner.point.z - standMm - surfaceHeightMm(plates, lines, corner.point),
       }))
       return (['left', 'right'] as const).flatMap((side): Planing[] => {
         const sign = side === 'left' ? 1 : -1

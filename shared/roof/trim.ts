@@ -7,7 +7,7 @@ import { at } from './slopes.ts'
 import { dot2, scale2, sub2 } from './vector.ts'
 
 /** What a side of a trimmed piece's plan is: a long side, a cut (by place in its list), or no face at all. */
-export type Side = { kind: 'face' } | { kind: PieceEnd; cut: number } | { kind: 'open' }
+export type Side = { kind: 'face' } | { kind: PieceEnd | 'tail'; cut: number } | { kind: 'open' }
 
 /** Part of a piece that is already placed and in the way of later ones, in plan. */
 export type Obstacle = { piece: number; polygon: Labelled<Side>; box: Box }
@@ -46,6 +46,7 @@ const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side>
   let polygon = strip(piece, fromMm, toMm)
   piece.headCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'head', cut: k })))
   piece.footCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'foot', cut: k })))
+  piece.tailCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'tail', cut: k })))
   return polygon
 }
 

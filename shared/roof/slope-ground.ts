@@ -1,0 +1,129 @@
+import { clipConvex } from './convex.ts'
+import type { Labelled } from './convex.ts'
+import type { Ground } from './build-pieces.ts'
+import type { Face, NodeLine } from './roof-lines.ts'
+import type { Point2, Section } from './roof-types.ts'
+import { at, slopeGradient } from './slopes.ts'
+import type { PlateEdge, Slope } from './slopes.ts'
+import { add2, dot2, left2, scale2, sub2, unit2 } from './vector.ts'
+
+/** A valley that borders a slope and starts at a plate corner, seen from that slope. */
+export type ValleySide = {
+  line: number
+  corner: Point2
+  dir: Point2
+  /** Plumb plane of the valley's side on this slope: normal into the valley. */
+  side: { point: Point2; normal: Point2 }
+  /** The other plate edge of its corner. */
+  otherEdge: PlateEdge
+  /** The valley's timber in plan, tail included. */
+  plan: Point2[]
+}
+
+/** A hip that borders a slope and starts at a plate corner: how near to that corner a rafter may stand. */
+type HipCorner = { alongMm: number; gapMm: number }
+
+/** What a slope's rafters have to mind: looked up once a slope. */
+export type SlopeGround = {
+  slope: Slope
+  face: Face
+  valleys: ValleySide[]
+  hips: HipCorner[]
+  /** Reach of the slope along its plate line. */
+  fromMm: number
+  toMm: number
+}
+
+const runOf = (ground: Ground, line: NodeLine): Point2 =>
+  sub2(at(ground.lines.nodes, line.to).point, at(ground.lines.nodes, line.from).point)
+
+const alongOf = (slope: Slope, p: Point2): number => dot2(slope.along, sub2(p, slope.origin))
+
+/** How near a rafter may stand to a hip's corner: clear of its side at the plate, and of its tail where it leans back. */
+const hipCorner = (ground: Ground, slope: Slope, line: NodeLine): HipCorner => {
+  const { sections } = ground.roof
+  const corner = at(ground.lines.nodes, line.from).point
+  const run = unit2(runOf(ground, line))
+  const alongMm = alongOf(slope, corner)
+  const starts = slope.plateRuns.find((r) => Math.abs(r.fromMm - alongMm) < 1)
+  const ends = slope.plateRuns.find((r) => Math.abs(r.toMm - alongMm) < 1)
+  const sine = dot2(slope.inward, run)
+  const leansBack = Math.max(0, dot2(slope.along, run) * (starts === undefined ? 1 : -1))
+  const edge = (starts ?? ends ?? at(slope.plateRuns, 0)).edge
+  const { overhangMm } = at(ground.plates.edges, edge)
+  const gapMm =
+    sections.rafter.thicknessMm / 2 +
+    sections.hip.thicknessMm / 2 / sine +
+    (overhangMm * leansBack) / sine
+  return { alongMm, gapMm }
+}
+
+const planOf = (ground: Ground, line: NodeLine, corner: number, section: Section): Point2[] => {
+  const from = at(ground.lines.nodes, line.from).point
+  const run = runOf(ground, line)
+  const dir = unit2(run)
+  const aside = scale2(left2(dir), section.thicknessMm / 2)
+  const edges = [at(ground.plates.edges, corner - 1), at(ground.plates.edges, corner)]
+  const farMm = 20 * Math.max(...edges.map((e) => e.overhangMm), section.thicknessMm)
+  const start = add2(from, scale2(dir, -farMm))
+  const end = add2(from, run)
+  let plan: Labelled<null> = {
+    points: [sub2(start, aside), sub2(end, aside), add2(end, aside), add2(start, aside)],
+    labels: [null, null, null, null],
+  }
+  for (const edge of edges) {
+    const out = scale2(edge.inward, -1)
+    plan = clipConvex(plan, out, dot2(out, edge.from) + edge.overhangMm, null)
+  }
+  return plan.points
+}
+
+const valleySide = (
+  ground: Ground,
+  slope: Slope,
+  line: NodeLine,
+  index: number,
+  corner: number,
+): ValleySide | null => {
+  const { plates, roof } = ground
+  const from = at(ground.lines.nodes, line.from).point
+  const dir = unit2(runOf(ground, line))
+  const left = left2(dir)
+  const other = at(plates.slopes, line.slopes.find((s) => s !== slope.index) ?? slope.index)
+  const rises = dot2(sub2(slopeGradient(slope), slopeGradient(other)), left)
+  const into = scale2(left, rises > 0 ? -1 : 1)
+  // where the slope does not rise off its valley its rafters run up to it, not from it
+  if (dot2(into, slope.inward) > -1e-6) return null
+  const halfMm = roof.sections.valley.thicknessMm / 2
+  const edges = [at(plates.edges, corner - 1), at(plates.edges, corner)]
+  return {
+    line: index,
+    corner: { x: from.x, y: from.y },
+    dir,
+    side: { point: add2(from, scale2(into, -halfMm)), normal: into },
+    otherEdge: edges.find((e) => !slope.edges.includes(e.index)) ?? at(edges, 0),
+    plan: planOf(ground, line, corner, roof.sections.valley),
+  }
+}
+
+/** Hips, valleys and reach of one slope. */
+export const slopeGround = (ground: Ground, slope: Slope): SlopeGround => {
+  const { lines, joints } = ground
+  const face = at(lines.faces, slope.index)
+  const own = new Set(
+    face.borders.flatMap((border) => (border.kind === 'slope' ? [border.line] : [])),
+  )
+  const valleys: ValleySide[] = []
+  const hips: HipCorner[] = []
+  for (const index of [...own].sort((a, b) => a - b)) {
+    const line = at(lines.lines, index)
+    const { corner } = at(lines.nodes, line.from)
+    if (corner === null || joints.swallowed.has(index)) continue
+    if (line.kind === 'hip') hips.push(hipCorner(ground, slope, line))
+    if (line.kind !== 'valley') continue
+    const side = valleySide(ground, slope, line, index, corner)
+    if (side !== null) valleys.push(side)
+  }
+  const alongs = face.nodes.map((n) => alongOf(slope, at(lines.nodes, n).point))
+  return { slope, face, valleys, hips, fromMm: Math.min(...alongs), toMm: Math.max(...alongs) }
+}
