@@ -4,6 +4,7 @@ import type { Day } from '../../shared/calendar/days.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
 import type { CrewRef, DayRoof, DaySheets } from '../../shared/day-sheets/day-sheet-schemas.ts'
 import type { MyTasks, TaskDetail } from '../../shared/day-sheets/task-schemas.ts'
+import { posedMemberOf } from '../../shared/drawing/timber-pose.ts'
 import { markingCardOf } from '../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../shared/marking/marking-figures.ts'
 import { shareWords } from '../../shared/marking/role-words.ts'
@@ -156,7 +157,7 @@ export function taskDetailFor(
           row.task.memberMarks,
         )
       : null
-  const member = revision?.spec.members.find((one) => one.mark === card?.drawnMark) ?? null
+  const member = revision ? posedMemberOf(revision.spec, card?.drawnMark) : null
   return {
     today: localDayOf(viewer.now, viewer.firm.timeZone),
     task: asDayTask(row),

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { idSchema, versionSchema } from '../http/fields.ts'
+import type { PosedMember } from '../drawing/timber-pose.ts'
 import type { MarkingCard } from '../marking/marking-card.ts'
-import type { Member } from '../roof/roof-types.ts'
 
 const personNameSchema = z.object({ id: z.string(), name: z.string() })
 
@@ -43,7 +43,7 @@ const taskPlaceSchema = z.object({
 // Cards and members are made by our own pure code from a stored spec; they are passed on as they are.
 const isObject = (value: unknown) => typeof value === 'object' && value !== null
 const cardSchema = z.custom<MarkingCard>(isObject)
-const memberSchema = z.custom<Member>(isObject)
+const memberSchema = z.custom<PosedMember>(isObject)
 
 export const taskDetailSchema = z.object({
   /** The firm's day now: a task may be of another. */

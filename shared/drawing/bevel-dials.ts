@@ -1,4 +1,5 @@
 import type { Angle, Cut, Member } from '../roof/roof-types.ts'
+import { timberTop } from './timber-shape.ts'
 
 /** What a bevel marks; the drawing puts its letter there. */
 export type BevelPlace = 'heel' | 'seat' | 'tail' | 'foot' | 'head' | 'backing'
@@ -68,7 +69,7 @@ function sideDial(member: Member, cut: Cut): LooseDial {
 function topDials(member: Member, cut: Cut, beside: readonly Cut[]): LooseDial[] {
   if (cut.longSide === 'none') return []
   const cheek = beside.length > 1 ? `, ${cut.longSide === 'left' ? 'right' : 'left'} cheek` : ''
-  const otherTop = member.backing ? 'On a square top' : 'On a backed top'
+  const otherTop = otherTopWords(member)
   return [
     {
       title: 'Edge bevel',
@@ -84,6 +85,12 @@ function topDials(member: Member, cut: Cut, beside: readonly Cut[]): LooseDial[]
         : null,
     },
   ]
+}
+
+function otherTopWords(member: Member): string {
+  const top = timberTop(member)
+  if (top === 'backed') return 'On a square top'
+  return member.role === 'valley' ? 'On a dished top' : 'On a backed top'
 }
 
 function birdsmouthDials(member: Member): LooseDial[] {
@@ -105,9 +112,11 @@ function birdsmouthDials(member: Member): LooseDial[] {
 
 function backingDials(member: Member): LooseDial[] {
   if (!member.backing) return []
-  const { leftDeg, rightDeg } = member.backing
+  const title = timberTop(member) === 'dished' ? 'Dish' : 'Backing'
+  const leftDeg = Math.abs(member.backing.leftDeg)
+  const rightDeg = Math.abs(member.backing.rightDeg)
   const dial = (use: string, fromSquareDeg: number): LooseDial => ({
-    title: 'Backing',
+    title,
     where: 'end',
     angle: { fromEdgeDeg: 90 - fromSquareDeg, fromSquareDeg },
     uses: [use],

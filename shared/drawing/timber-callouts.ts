@@ -6,7 +6,7 @@ import { textWidthPx } from './text-size.ts'
 import type { TimberLayout } from './timber-layout.ts'
 import type { BirdsmouthPoints, SidePoint } from './timber-outline.ts'
 import { timberEndLines } from './timber-outline.ts'
-import { endCuts, timberTopOutline } from './timber-shape.ts'
+import { endCuts, timberTop, timberTopOutline } from './timber-shape.ts'
 import { overPlateText, timberTextPx, type CalloutWish } from './timber-texts.ts'
 
 export type TimberText = { text: string; x: number; baselineY: number }
@@ -96,7 +96,16 @@ export function timberTexts(
   const underY = layout.topY + layout.topHeightPx + timberTextPx + 3
   const heelX = layout.scale.xPx(0) + 7
   const backing = dials.filter((dial) => dial.where === 'end').length
-  const over = backing > 0 ? [{ text: 'backing', x: heelX + backing * 20, baselineY: overY }] : []
+  const over =
+    backing > 0
+      ? [
+          {
+            text: timberTop(member) === 'dished' ? 'dish' : 'backing',
+            x: heelX + backing * 20,
+            baselineY: overY,
+          },
+        ]
+      : []
   const plate = mouth ? [{ text: overPlateText(member, units), x: heelX, baselineY: underY }] : []
   const taken = [...over, ...plate].map((t) => t.x + textWidthPx(t.text, timberTextPx) + 8)
   const headZone = layout.scale.zones.at(-1)

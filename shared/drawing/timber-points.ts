@@ -1,3 +1,4 @@
+import { pieceHand } from './timber-hand.ts'
 import type { DrawnMember } from './timber-pose.ts'
 import type { TimberPoint } from './timber-shape.ts'
 import { endCuts, timberTopEnd } from './timber-shape.ts'
@@ -65,10 +66,12 @@ function pointSide(places: readonly TimberPoint[], halfMm: number): MeasuringPoi
   return acrossMm > 0 ? 'left of centre' : 'right of centre'
 }
 
-/** Which way the head is cut, in words for a card: "Long point on the left, bow up". */
+/** Which way round a timber is cut, in words over its drawing: "Long point on the left, bow up". */
 export function handWords(member: DrawnMember): string {
-  if (member.hand) return `Long point on the ${member.hand}, bow up`
+  const hand = pieceHand(member)
+  if (hand?.end === 'head') return `Long point on the ${hand.side}, bow up`
   const cheeks = endCuts(member, 'head').filter((cut) => cut.longSide !== 'none').length
-  if (cheeks > 1) return 'Long point in the middle, two cheeks, bow up'
-  return 'Square across the head, bow up'
+  const foot = hand ? `, foot's long point on the ${hand.side}` : ''
+  if (cheeks > 1) return `Long point in the middle, two cheeks${foot}, bow up`
+  return `Square across the head${foot}, bow up`
 }

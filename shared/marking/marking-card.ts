@@ -1,3 +1,4 @@
+import { pieceHand } from '../drawing/timber-hand.ts'
 import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
 import {
   bevelsWords,
@@ -14,9 +15,16 @@ import {
   type MarkingFigure,
   type MarkingOptions,
 } from './marking-figures.ts'
-import { backingOf, birdsmouthOf, furtherFigures, planingWords } from './marking-parts.ts'
-import { ridgeWayWords } from './ridge-words.ts'
-import { quantityWords, roleWords, sectionWords } from './role-words.ts'
+import {
+  backingOf,
+  birdsmouthOf,
+  dishWords,
+  dropOf,
+  furtherFigures,
+  planingWords,
+} from './marking-parts.ts'
+import { handCounts, quantityWords, roleWords, sectionWords } from './role-words.ts'
+import { wayWords } from './way-words.ts'
 
 /** Wherever numbers leave for the saw. */
 export const cutOneFirst = 'Cut one, try it, then cut the rest.'
@@ -52,6 +60,8 @@ export type MarkingCard = {
   tailLength: MarkingFigure | null
   backing: MarkingBevel[]
   drop: MarkingFigure | null
+  /** How the top is dished after it is cut, or null. */
+  dish: string | null
   planing: string[]
   /** What its bevels are set to, for the dials beside it. */
   roundDeg: number
@@ -71,20 +81,21 @@ export function markingCardOf(
 ): MarkingCard {
   const line = spec.cutLines.find((one) => one.mark === cutLineMark)
   const alike = line ? membersOf(spec, line) : []
-  const member = alike.find((one) => one.hand === 'left') ?? alike[0]
+  const member = alike.find((one) => pieceHand(one)?.side === 'left') ?? alike[0]
   if (!line || !member) throw new RangeError(`This roof has no cut line ${cutLineMark}.`)
+  const { left, right } = handCounts(alike)
   return {
     mark: line.mark,
     role: line.role,
     name: roleWords[line.role],
     section: sectionWords(line.section),
     quantity: line.quantity,
-    left: line.left,
-    right: line.right,
-    quantityWords: quantityWords(line.quantity, line.left, line.right),
+    left,
+    right,
+    quantityWords: quantityWords(line.quantity, left, right),
     memberMarks: line.members,
     drawnMark: member.mark,
-    handWords: handWords(spec, line, member),
+    handWords: wayWords(spec, line, member, alike),
     cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to point'),
     setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
     further: furtherFigures(member, options),
@@ -96,10 +107,8 @@ export function markingCardOf(
         ? figureOf('Tail length', member.tailLengthMm, options, 'heel line to tail, along the edge')
         : null,
     backing: backingOf(member, options),
-    drop:
-      member.dropMm > 0
-        ? figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
-        : null,
+    drop: dropOf(member, options),
+    dish: dishWords(member, options),
     planing: planingWords(spec, { members: share ?? line.members }, options),
     roundDeg: options.roundDeg,
     warnings: spec.cautions
@@ -113,17 +122,11 @@ function membersOf(spec: FrameSpec, line: CutLine): Member[] {
   return spec.members.filter((member) => marks.has(member.mark))
 }
 
-function handWords(spec: FrameSpec, line: CutLine, member: Member): string {
-  if (member.role === 'ridge') return ridgeWayWords(spec, member)
-  const along = 'up the rafter'
-  if (line.left > 0 && line.right > 0)
-    return `Left hand: long point on the left looking ${along}, bow up. Right hand: the same, mirrored.`
-  if (member.hand) return `Long point on the ${member.hand} looking ${along}, bow up.`
-  return 'No left or right, bow up.'
-}
-
 function setOutNote(member: Member): string {
-  return member.role === 'ridge' ? 'node to node' : `${tapeBase(member)} to centre, nothing off`
+  if (member.role === 'ridge') return 'node to node'
+  return member.birdsmouth
+    ? `${tapeBase(member)} to centre, nothing off`
+    : 'centre to centre, nothing off'
 }
 
 function figureWords(figure: MarkingFigure, note = false): string {
@@ -178,6 +181,7 @@ export function markingCardLines(card: MarkingCard): string[] {
     ...tailLines(card),
     ...card.backing.map((one) => `${one.label}: ${bevelWords(one)}.`),
     ...(card.drop ? [`${figureWords(card.drop, true)}.`] : []),
+    ...(card.dish ? [card.dish] : []),
     card.handWords,
     ...card.planing,
   ]

@@ -1,7 +1,8 @@
 import { groupBy } from '../collections/group-by.ts'
 import { cutWords } from '../drawing/bevel-dials.ts'
 import { type MeasuringPoint, measuringPoints } from '../drawing/timber-points.ts'
-import { endCuts } from '../drawing/timber-shape.ts'
+import { heelOutAlongMm } from '../drawing/timber-outline.ts'
+import { edgeLengths, endCuts, timberTop } from '../drawing/timber-shape.ts'
 import type { Cut, FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   angleText,
@@ -12,6 +13,7 @@ import {
   type MarkingFigure,
   type MarkingOptions,
 } from './marking-figures.ts'
+import { cornerLine } from './marking-parts.ts'
 import { piecesWords } from './role-words.ts'
 import { pastSawWords } from './saw-words.ts'
 
@@ -87,8 +89,7 @@ function markingCut(
 ): MarkingCut {
   const across = Math.abs(cut.edge.fromSquareDeg) > squareDeg
   const kind = cutWords(member, cut)
-  const topName = member.backing ? 'Across the backed top' : 'Across the top'
-  const otherName = member.backing ? 'Across a square top' : 'Across a backed top'
+  const { topName, otherName } = topNames(member)
   return {
     cheek: cutCount > 1 ? cheekName(cut) : '',
     kind,
@@ -102,6 +103,23 @@ function markingCut(
     bladeTiltText: angleText(cut.bladeTiltDeg, options),
     pastSaw: cut.pastSaw,
     sawWords: pastSawWords(member, cut, options),
+  }
+}
+
+/** Edge bevels are marked on the top as it is when the timber is sawn. */
+function topNames(member: Member): { topName: string; otherName: string } {
+  switch (timberTop(member)) {
+    case 'backed':
+      return { topName: 'Across the backed top', otherName: 'Across a square top' }
+    case 'dished':
+      return {
+        topName: 'Across the square top, before dishing',
+        otherName: 'Across the dished top',
+      }
+    case 'square': {
+      const other = member.role === 'valley' ? 'dished' : 'backed'
+      return { topName: 'Across the top', otherName: `Across a ${other} top` }
+    }
   }
 }
 
@@ -122,15 +140,16 @@ function bearsOnWords(
   cut: Cut,
   cutCount: number,
 ): string {
-  if (cut.end === 'tail') return ''
   // Left and right cheeks change places from piece to piece, so the drawn one's are named.
   const onlyDrawn = cutCount > 1
   const cuts = onlyDrawn ? [cut] : alike.flatMap((m) => m.cuts.filter((c) => c.end === cut.end))
   const marks = new Set(cuts.flatMap((c) => [c.against, ...c.alsoAgainst]))
   const met = spec.members.filter((m) => marks.has(m.mark))
   if (met.length === 0) return ''
-  const whose = onlyDrawn && alike.length > 1 ? `${member.mark} bears` : 'Bears'
-  return `${whose} on ${piecesWords(met)}`
+  const whose = onlyDrawn && alike.length > 1 ? `${member.mark} ` : ''
+  // A head bears on what it meets; a foot or tail is cut against the side of what runs past it.
+  const verb = cut.end === 'head' ? 'bears on' : 'against'
+  return capital(`${whose}${verb} ${piecesWords(met)}`)
 }
 
 function endPoints(
@@ -139,6 +158,8 @@ function endPoints(
   cuts: readonly Cut[],
   options: MarkingOptions,
 ): MarkingFigure[] {
+  if (!member.birdsmouth && member.role !== 'ridge')
+    return end === 'head' ? endToEndPoints(member, options) : []
   const only = cuts.length === 1 ? cuts[0] : undefined
   const points = only
     ? singleCutPoints(only)
@@ -148,6 +169,13 @@ function endPoints(
       }))
   return points.map(({ label, alongMm }) =>
     figureOf(label, Math.abs(alongMm), options, fromWords(member, cuts, alongMm)),
+  )
+}
+
+/** With no heel line to hook the tape on, a timber is measured from its own foot. */
+function endToEndPoints(member: Member, options: MarkingOptions): MarkingFigure[] {
+  return edgeLengths(member).map(({ place, fromMm, toMm }) =>
+    figureOf(capital(place), toMm - fromMm, options, 'along the top, from the foot to the head'),
   )
 }
 
@@ -181,8 +209,8 @@ function fromWords(member: Member, cuts: readonly Cut[], alongMm: number): strin
 }
 
 export function tapeBase(member: Member): string {
-  if (member.birdsmouth) return 'the heel line'
-  return member.role === 'ridge' ? 'the first node' : 'the foot set-out point'
+  if (member.role === 'ridge') return 'the first node'
+  return heelOutAlongMm(member) > 0 ? cornerLine : 'the heel line'
 }
 
 function capital(text: string): string {

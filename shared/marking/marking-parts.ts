@@ -1,4 +1,6 @@
 import { groupBy } from '../collections/group-by.ts'
+import { heelLineStandMm, heelOutAlongMm } from '../drawing/timber-outline.ts'
+import { dishDepths, timberTop } from '../drawing/timber-shape.ts'
 import type { FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   bevelOf,
@@ -9,6 +11,9 @@ import {
   type MarkingOptions,
 } from './marking-figures.ts'
 import { listWords } from './role-words.ts'
+
+/** A valley is measured from the plumb line over the plate corner; its heel stands further out. */
+export const cornerLine = 'the corner line'
 
 export function furtherFigures(member: Member, options: MarkingOptions): MarkingFigure[] {
   const past = (mm: number) => (mm < 0 ? 'runs past' : 'taken off along the edge')
@@ -30,18 +35,22 @@ export function birdsmouthOf(
   if (!mouth) return null
   const bevel = (label: string, fromEdgeDeg: number) =>
     bevelOf(label, 'side', { fromEdgeDeg, fromSquareDeg: 90 - fromEdgeDeg }, options)
+  const outMm = heelOutAlongMm(member)
   const offset =
-    mouth.heelOffsetMm > 0
-      ? [figureOf('Heel moved out', mouth.heelOffsetMm, options, 'level, to clear both plates')]
-      : []
+    outMm > 0 ? [figureOf('Heel line', outMm, options, `down the edge from ${cornerLine}`)] : []
   return {
     figures: [
-      figureOf('Height over plate', mouth.standMm, options, 'plumb, top edge to heel'),
+      ...offset,
+      figureOf(
+        'Height over plate',
+        heelLineStandMm(member),
+        options,
+        'plumb down the heel line, top edge to seat',
+      ),
       figureOf('Heel', mouth.heelMm, options, 'plumb'),
       figureOf('Seat', mouth.seatMm, options, 'level'),
       figureOf('Depth', mouth.depthMm, options, 'square to the edge'),
       figureOf('Bearing', mouth.bearingMm, options, 'on the plate'),
-      ...offset,
     ],
     bevels: [
       bevel('Heel, plumb', mouth.heelFromEdgeDeg),
@@ -50,13 +59,40 @@ export function birdsmouthOf(
   }
 }
 
+/** Backing, planed down to the edges; or the dish of a valley, down to the middle. */
 export function backingOf(member: Member, options: MarkingOptions): MarkingBevel[] {
   if (!member.backing) return []
-  const { leftDeg, rightDeg } = member.backing
-  const bevel = (label: string, fromSquareDeg: number) =>
-    bevelOf(label, 'end', { fromEdgeDeg: 90 - fromSquareDeg, fromSquareDeg }, options)
-  if (Math.abs(leftDeg - rightDeg) <= 0.05) return [bevel('Backing, both edges', leftDeg)]
-  return [bevel('Backing, left edge', leftDeg), bevel('Backing, right edge', rightDeg)]
+  const name = timberTop(member) === 'dished' ? 'Dish' : 'Backing'
+  const leftDeg = Math.abs(member.backing.leftDeg)
+  const rightDeg = Math.abs(member.backing.rightDeg)
+  const bevel = (side: string, fromSquareDeg: number) =>
+    bevelOf(`${name}, ${side}`, 'end', { fromEdgeDeg: 90 - fromSquareDeg, fromSquareDeg }, options)
+  if (Math.abs(leftDeg - rightDeg) <= 0.05) return [bevel('both edges', leftDeg)]
+  return [bevel('left edge', leftDeg), bevel('right edge', rightDeg)]
+}
+
+export function dropOf(member: Member, options: MarkingOptions): MarkingFigure | null {
+  if (member.dropMm > 0)
+    return figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
+  if (member.dropMm < 0)
+    return figureOf(
+      'Raised',
+      -member.dropMm,
+      options,
+      'plumb: the square top before it is dished, over the line where the slopes meet',
+    )
+  return null
+}
+
+/** A dished top is marked and cut while it is square; then the lines it is planed to. */
+export function dishWords(member: Member, options: MarkingOptions): string | null {
+  const dish = dishDepths(member)
+  if (!dish) return null
+  const edges =
+    Math.abs(dish.leftMm - dish.rightMm) < 0.05
+      ? `${lengthWords(dish.leftMm, options)} at both edges`
+      : `${lengthWords(dish.leftMm, options)} at the left edge, ${lengthWords(dish.rightMm, options)} at the right`
+  return `Mark and cut square, then dish to the lines: ${lengthWords(dish.middleMm, options)} deep along the middle, square to the top, ${edges}.`
 }
 
 /** Pieces, sides and ends planed alike share a sentence. */

@@ -1,4 +1,5 @@
-import type { MemberRole, Section } from '../roof/roof-types.ts'
+import { pieceHand } from '../drawing/timber-hand.ts'
+import type { Member, MemberRole, Section } from '../roof/roof-types.ts'
 
 /** What a carpenter calls each piece. */
 export const roleWords: Record<MemberRole, string> = {
@@ -41,12 +42,21 @@ export function listWords(parts: readonly string[]): string {
 
 /** How many pieces, and which hands they are: 'x3: 2 left, 1 right'. */
 export function shareWords(
-  members: readonly { mark: string; hand: 'left' | 'right' | null }[],
+  members: readonly Pick<Member, 'mark' | 'hand' | 'cuts'>[],
   marks: readonly string[],
 ): string {
-  const share = members.filter((member) => marks.includes(member.mark))
-  const count = (hand: 'left' | 'right') => share.filter((member) => member.hand === hand).length
-  return quantityWords(marks.length, count('left'), count('right'))
+  const { left, right } = handCounts(members.filter((member) => marks.includes(member.mark)))
+  return quantityWords(marks.length, left, right)
+}
+
+/** How many pieces are of each hand, those told apart by their foot too. */
+export function handCounts(pieces: readonly Pick<Member, 'hand' | 'cuts'>[]): {
+  left: number
+  right: number
+} {
+  const sides = pieces.map((piece) => pieceHand(piece)?.side)
+  const count = (side: 'left' | 'right') => sides.filter((one) => one === side).length
+  return { left: count('left'), right: count('right') }
 }
 
 /** 'x4: 2 left, 2 right', 'x6'. */

@@ -1,4 +1,4 @@
-import { timberAxes } from '../drawing/timber-shape.ts'
+import { timberAxes, timberTop } from '../drawing/timber-shape.ts'
 import type { Cut, Member } from '../roof/roof-types.ts'
 import { angleText, type MarkingOptions } from './marking-figures.ts'
 
@@ -22,11 +22,14 @@ export function pastSawWords(member: Member, cut: Cut, options: MarkingOptions):
     limit === undefined
       ? `Past the saw: needs ${tilt} of tilt.`
       : `Past the saw: needs ${tilt} of tilt, the saw has ${angleText(limit, options)}.`
-  const squareTop = member.backing ? cut.edgeOtherTop : cut.edge
+  const top = timberTop(member)
+  const squareTop = top === 'backed' ? cut.edgeOtherTop : cut.edge
   const finish = 'then finish down the marked side lines with a handsaw.'
   if (!squareTop || topTiltDeg(member, cut) > (limit ?? 45))
     return [past, `Way round: mark it on all faces and cut it with a handsaw.`, pastSawSafety]
-  const before = member.backing ? 'before backing, run' : 'run'
+  const before = { backed: 'before backing, run', dished: 'before dishing, run', square: 'run' }[
+    top
+  ]
   const line = angleText(squareTop.fromEdgeDeg, options)
   const topTilt = angleText(topTiltDeg(member, cut), options)
   return [

@@ -115,22 +115,25 @@ function ticks(): string {
     .join('')
 }
 
-/** The end of the timber: its square top dashed, the backed top heavy, as far as it is planed. */
+/** The end of the timber: its square top dashed, the planed top heavy, as far as it is planed. */
 function BackingDrawing({ dial }: Pick<Props, 'dial'>) {
   const fall = Math.tan((dial.angle.fromSquareDeg * Math.PI) / 180) * 30
   const isLeft = !dial.uses.includes('right edge')
   const isRight = !dial.uses.includes('left edge')
-  const left = 22 + (isLeft ? fall : 0)
-  const right = 22 + (isRight ? fall : 0)
+  // Backed it falls to its edges, dished to its middle.
+  const isDish = dial.title === 'Dish'
+  const middle = isDish ? 22 + fall : 22
+  const left = isDish ? 22 + (isLeft ? 0 : fall) : 22 + (isLeft ? fall : 0)
+  const right = isDish ? 22 + (isRight ? 0 : fall) : 22 + (isRight ? fall : 0)
   return (
     <svg viewBox="0 0 132 104" width={132} height={104} aria-hidden="true" className="shrink-0">
       <path
-        d={`M36 ${left}L66 22L96 ${right}V98H36Z`}
+        d={`M36 ${left}L66 ${middle}L96 ${right}V98H36Z`}
         className="fill-paper stroke-ink [stroke-width:2]"
       />
       <path d="M36 22H96" className="stroke-ink-soft [stroke-width:1.25] [stroke-dasharray:4_3]" />
       <path
-        d={`${isLeft ? `M36 ${left}L66 22` : ''}${isRight ? `M66 22L96 ${right}` : ''}`}
+        d={`${isLeft ? `M36 ${left}L66 ${middle}` : ''}${isRight ? `M66 ${middle}L96 ${right}` : ''}`}
         strokeLinecap="round"
         className="fill-none stroke-clay [stroke-width:3.5]"
       />

@@ -1,5 +1,6 @@
+import { pieceHand } from '../../shared/drawing/timber-hand.ts'
+import type { PosedMember } from '../../shared/drawing/timber-pose.ts'
 import { cutOneFirst, type MarkingCard } from '../../shared/marking/marking-card.ts'
-import type { Member } from '../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
 import { Fold } from '../ui/fold.tsx'
 import { Note } from '../ui/states.tsx'
@@ -8,7 +9,7 @@ import { TimberDrawing } from './timber-drawing.tsx'
 
 type Props = {
   card: MarkingCard
-  member: Member | null
+  member: PosedMember | null
   units: LengthUnits
   /** What the plates say of these numbers; shown first. */
   platesMeasured: boolean
@@ -16,6 +17,7 @@ type Props = {
 
 /** A whole marking card: numbers at reading size, the timber with its bevels, and what to mind. */
 export function MarkingCardView({ card, member, units, platesMeasured }: Props) {
+  const hand = member ? pieceHand(member) : null
   return (
     <div className="space-y-4">
       <div>
@@ -30,7 +32,7 @@ export function MarkingCardView({ card, member, units, platesMeasured }: Props) 
         <div className="border-t border-rule pt-3">
           <p className="mb-2 font-extrabold">
             Drawn: {member.mark}
-            {member.hand ? `, ${member.hand} hand` : ''}
+            {hand ? `, ${hand.side} hand` : ''}
           </p>
           <TimberDrawing member={member} units={units} roundDeg={card.roundDeg} />
         </div>

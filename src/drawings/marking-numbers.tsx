@@ -60,7 +60,8 @@ export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: strin
 /** What the bevels below do not say by themselves. */
 function CutName({ name, cut }: { name: string; cut: MarkingCut }) {
   const kind = cut.kind === 'plumb cut' ? '' : cut.kind
-  const across = cut.edge || cut.kind === 'square cut' ? '' : 'square across the top'
+  const saysSquare = cut.edge || cut.kind === 'square cut' || name === 'Square across'
+  const across = saysSquare ? '' : 'square across the top'
   const words = [name, kind, across].filter(Boolean).join(', ')
   if (words === '') return null
   return (
@@ -182,12 +183,17 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
       ))}
       <BirdsmouthNumbers card={card} />
       {card.backing.length > 0 || card.drop ? (
-        <dl className="space-y-1 border-t border-rule pt-3 print:pt-1">
-          {card.backing.map((bevel) => (
-            <BevelView key={bevel.label} bevel={bevel} />
-          ))}
-          {card.drop ? <FigureView figure={card.drop} /> : null}
-        </dl>
+        <div className="border-t border-rule pt-3 print:pt-1">
+          {card.dish ? (
+            <p className="mb-1 text-base print:text-xs font-semibold">{card.dish}</p>
+          ) : null}
+          <dl className="space-y-1">
+            {card.backing.map((bevel) => (
+              <BevelView key={bevel.label} bevel={bevel} />
+            ))}
+            {card.drop ? <FigureView figure={card.drop} /> : null}
+          </dl>
+        </div>
       ) : null}
     </div>
   )

@@ -14,7 +14,7 @@ type Props = {
   words: LegendWords | null
   hiddenCount: number
   /** Draws it as large as all marks need; null where that is no help. */
-  onWriteAll: (() => void) | null
+  onWriteAll?: (() => void) | null
 }
 
 /** The scale, what heavy, dashed and thin lines mean, and whether marks were left out. */

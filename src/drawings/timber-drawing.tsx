@@ -2,7 +2,7 @@ import { useMemo } from 'react'
 import { bevelDialsOf } from '../../shared/drawing/bevel-dials.ts'
 import { timberDrawing } from '../../shared/drawing/timber-drawing.ts'
 import { handWords } from '../../shared/drawing/timber-points.ts'
-import type { Member } from '../../shared/roof/roof-types.ts'
+import type { PosedMember } from '../../shared/drawing/timber-pose.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
 import { BevelDial } from './bevel-dial.tsx'
 import { roleWords } from './plan-member-shape.tsx'
@@ -10,7 +10,7 @@ import { TimberSvg } from './timber-svg.tsx'
 import { useWidth } from './use-width.ts'
 
 type Props = {
-  member: Member
+  member: PosedMember
   units?: LengthUnits
   /** What bevels are set to. */
   roundDeg?: number

@@ -2,6 +2,7 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/react'
 import { afterEach, expect, test, vi } from 'vitest'
 import { roofGlyphOf } from '../../shared/drawing/roof-glyph.ts'
+import { posedMember } from '../../shared/drawing/timber-pose.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { RoofGlyph } from '../../src/drawings/roof-glyph.tsx'
 import { RoofPlan } from '../../src/drawings/roof-plan.tsx'
@@ -76,7 +77,7 @@ test('a glyph has a title when it stands alone and is silent beside its name', (
 test('a creeper says which side its long point is, and to keep the bow up', () => {
   const creeper = spec.members.find((member) => member.hand === 'left')
   if (!creeper) throw new Error('no left-hand creeper')
-  render(<TimberDrawing member={creeper} />)
+  render(<TimberDrawing member={posedMember(spec, creeper)} />)
   expect(screen.getByText('Long point on the left, bow up')).toBeTruthy()
   expect(screen.getAllByText('from edge').length).toBeGreaterThan(1)
 })

@@ -1,3 +1,5 @@
+import { pieceHand } from '../../../shared/drawing/timber-hand.ts'
+import { posedMemberOf } from '../../../shared/drawing/timber-pose.ts'
 import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
@@ -18,9 +20,10 @@ export function CardDialog({ spec, mark, options, platesMeasured, onClose }: Pro
   const line = spec.cutLines.find((one) => one.mark === mark || one.members.includes(mark ?? ''))
   if (!line || mark === null) return null
   const card = markingCardOf(spec, line.mark, options)
-  const picked = spec.members.find((one) => one.mark === mark)
-  const member = picked ?? spec.members.find((one) => one.mark === card.drawnMark)
-  const hand = picked?.hand ? `, ${picked.hand} hand` : ''
+  const picked = posedMemberOf(spec, mark)
+  const member = picked ?? posedMemberOf(spec, card.drawnMark)
+  const side = picked ? pieceHand(picked)?.side : undefined
+  const hand = side ? `, ${side} hand` : ''
   return (
     <Dialog
       open
@@ -33,7 +36,7 @@ export function CardDialog({ spec, mark, options, platesMeasured, onClose }: Pro
       </p>
       <MarkingCardView
         card={card}
-        member={member ?? null}
+        member={member}
         units={options.units}
         platesMeasured={platesMeasured}
       />

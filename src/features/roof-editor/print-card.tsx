@@ -1,12 +1,12 @@
 import type { ReactNode } from 'react'
+import type { PosedMember } from '../../../shared/drawing/timber-pose.ts'
 import { cutOneFirst, type MarkingCard } from '../../../shared/marking/marking-card.ts'
 import { bevelWords, type MarkingFigure } from '../../../shared/marking/marking-figures.ts'
-import type { Member } from '../../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
 import { TimberDrawing } from '../../drawings/timber-drawing.tsx'
 import { Note } from '../../ui/states.tsx'
 
-type Props = { card: MarkingCard; member: Member; units: LengthUnits }
+type Props = { card: MarkingCard; member: PosedMember; units: LengthUnits }
 
 /** One line of the cut list on one sheet: everything to mark it from. */
 export function PrintCard({ card, member, units }: Props) {
@@ -67,6 +67,7 @@ export function PrintCard({ card, member, units }: Props) {
               {bevel.label}: {bevelWords(bevel)}
             </p>
           ))}
+          {card.dish ? <p className="font-semibold">{card.dish}</p> : null}
           {card.planing.map((words) => (
             <p key={words}>{words}</p>
           ))}

@@ -1,3 +1,4 @@
+import { posedMemberOf } from '../../../shared/drawing/timber-pose.ts'
 import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
@@ -13,7 +14,7 @@ export function PrintCards({ spec, options }: Props) {
     <div>
       {spec.cutLines.map((line) => {
         const card = markingCardOf(spec, line.mark, options)
-        const member = spec.members.find((one) => one.mark === card.drawnMark)
+        const member = posedMemberOf(spec, card.drawnMark)
         return member ? (
           <section key={line.mark} className="break-before-page [zoom:0.74]">
             <h2 className="mb-2 text-xl font-extrabold">

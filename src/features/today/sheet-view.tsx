@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import { useMemo, useState } from 'react'
 import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
+import { posedMemberOf } from '../../../shared/drawing/timber-pose.ts'
 import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import { MarkingCardView } from '../../drawings/marking-card-view.tsx'
 import { RoofPlan } from '../../drawings/roof-plan.tsx'
@@ -49,7 +50,7 @@ function PickedCard({ sheet, roof, mark, onClose }: PickedProps) {
   const line = roof.spec.cutLines.find((one) => mark !== null && one.members.includes(mark))
   if (!line) return null
   const card = markingCardOf(roof.spec, line.mark, roof.marking)
-  const member = roof.spec.members.find((one) => one.mark === mark) ?? null
+  const member = posedMemberOf(roof.spec, mark)
   return (
     <Dialog open place="panel" onClose={onClose} title={`${mark}, ${card.name}`}>
       <div className="site-screen">
