@@ -3,6 +3,7 @@ import { type RoofGlyphData, roofGlyphOf } from '../../shared/drawing/roof-glyph
 import type { FormProblem } from '../../shared/revisions/form-typing.ts'
 import type { RoofForm } from '../../shared/revisions/roof-form.ts'
 import { type FormFirm, roofOfForm } from '../../shared/revisions/roof-of-form.ts'
+import { unsizedProblems } from '../../shared/revisions/unsized-sections.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { engineVersion } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from '../../shared/roof/roof-types.ts'
@@ -41,6 +42,8 @@ export function prepareRevision(question: RevisionQuestion): PreparedRevision {
   const inputHash = hashOf(roof, settings)
   if (inputHash === latestHash) return { kind: 'same' }
   const spec = frameRoof(roof, settings)
+  const unsized = unsizedProblems(form, spec)
+  if (unsized.length > 0) return { kind: 'refused', problems: unsized }
   const glyph = roofGlyphOf(spec, roof)
   return { kind: 'framed', framed: { roof, settings, spec, glyph, engineVersion, inputHash } }
 }

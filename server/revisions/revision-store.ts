@@ -1,6 +1,6 @@
 import { and, desc, eq, type SQL } from 'drizzle-orm'
 import type { RevisionSummary } from '../../shared/revisions/revision-schemas.ts'
-import type { RoofForm } from '../../shared/revisions/roof-form.ts'
+import { type RoofForm, roofFormSchema } from '../../shared/revisions/roof-form.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { jobs, plateChecks, roofDrafts, roofRevisions } from '../db/tables/job-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
@@ -23,10 +23,11 @@ export function latestIssue(db: DbOrTx, jobId: string) {
 
 export type DraftRow = { form: RoofForm; version: number; updatedAt: Date }
 
-/** Only forms that passed their schema are ever written. */
+/** Only forms that passed their schema are ever written; one from before a field was added gets it empty. */
 export function readDraft(db: DbOrTx, jobId: string): DraftRow | undefined {
   const row = db.select().from(roofDrafts).where(eq(roofDrafts.jobId, jobId)).get()
-  return row && { form: row.form as RoofForm, version: row.version, updatedAt: row.updatedAt }
+  if (!row) return undefined
+  return { form: roofFormSchema.parse(row.form), version: row.version, updatedAt: row.updatedAt }
 }
 
 /** Writes the draft over the version the writer had seen; null when it has moved on. */

@@ -1,10 +1,14 @@
 import type { Point2 } from '../roof/roof-types.ts'
-import type { CornerForm, RoofForm, SideForm, SideKey } from './roof-form.ts'
+import { mmText } from '../outline/outline-geometry.ts'
+import { plainSide, type SideForm } from './form-parts.ts'
+import type { CornerForm, RoofForm, SideKey } from './roof-form.ts'
 import { lengthMmOfText } from './typed-measure.ts'
+import { isWingShape } from './wing-form.ts'
+import { wingPlates, wingSideNames } from './wing-measures.ts'
 
 /** One plate of the roof as typed: where it starts, and the form path of what it has of its own. */
 export type FormPlate = {
-  /** 'sides.front' or 'corners.3'. */
+  /** 'sides.front', 'wings.l.sides.2' or 'corners.3'. */
   path: string
   name: string
   start: Point2
@@ -33,7 +37,9 @@ export function endCutMm(form: RoofForm): number {
 }
 
 export function endsCut(form: RoofForm): { right: boolean; left: boolean } {
-  if (form.shape === 'rectangle') return { right: false, left: false }
+  if (form.shape !== 'octagonal-end' && form.shape !== 'splayed-end') {
+    return { right: false, left: false }
+  }
   return { right: form.endAt !== 'left', left: form.endAt !== 'right' }
 }
 
@@ -53,6 +59,15 @@ export function platesOfForm(form: RoofForm): FormPlate[] {
       name: `Plate ${i + 1}`,
       start: { x: lengthMmOfText(corner.x), y: lengthMmOfText(corner.y) },
       side: corner,
+    }))
+  }
+  const { shape } = form
+  if (isWingShape(shape)) {
+    return wingPlates(form, shape).map(({ side, start }) => ({
+      path: `wings.${shape}.sides.${side}`,
+      name: wingSideNames[shape][side] ?? `Side ${side + 1}`,
+      start,
+      side: form.wings[shape].sides[side] ?? plainSide(),
     }))
   }
   return shapeCorners(form).map(([key, x, y]) => ({
@@ -90,19 +105,19 @@ function shapeCorners(form: RoofForm): [SideKey, number, number][] {
  * finish, pitch and overhang. Corners that somebody typed already stay as they are.
  */
 export function withTypedCorners(form: RoofForm): RoofForm {
-  const plates = platesOfForm(form)
-  const isRead = plates.every(({ start }) => Number.isFinite(start.x + start.y))
   const isTyped = form.corners.some(({ x, y }) => x !== '' || y !== '')
-  if (isTyped || !isRead) return { ...form, shape: 'corners' }
-  const corners = plates.map(({ start, side }): CornerForm => ({
-    ...side,
-    x: cornerText(start.x),
-    y: cornerText(start.y),
-  }))
-  return { ...form, shape: 'corners', corners }
+  return (isTyped ? null : asCorners(form)) ?? { ...form, shape: 'corners' }
 }
 
-/** To a hundredth of a mm, so that a regular octagon stays one. */
-function cornerText(mm: number): string {
-  return String(Math.round(mm * 100) / 100)
+/** The plan on screen as a list of corners, over whatever the list held; null where it cannot be read. */
+export function asCorners(form: RoofForm): RoofForm | null {
+  if (form.shape === 'corners') return form
+  const plates = platesOfForm(form)
+  if (!plates.every(({ start }) => Number.isFinite(start.x + start.y))) return null
+  const corners = plates.map(({ start, side }): CornerForm => ({
+    ...side,
+    x: mmText(start.x),
+    y: mmText(start.y),
+  }))
+  return { ...form, shape: 'corners', corners }
 }

@@ -1,7 +1,10 @@
 import type { RoofProblem } from '../roof/roof-types.ts'
 import type { FormPlate } from './form-outline.ts'
 import type { FormProblem } from './form-typing.ts'
-import type { RoofForm } from './roof-form.ts'
+import { heldWalk } from './form-walk.ts'
+import { besideKeys, type RoofForm } from './roof-form.ts'
+import { isWingShape } from './wing-form.ts'
+import { wingSidePaths } from './wing-measures.ts'
 
 /** Faults of a roof, each at the field it was typed in; one a field. */
 export function formProblemsOf(
@@ -17,11 +20,13 @@ export function formProblemsOf(
   return [...byPath.values()]
 }
 
-function formPath(path: string, form: RoofForm, plates: FormPlate[]): string {
+/** The form's field of a path in `Roof`. */
+export function formPath(path: string, form: RoofForm, plates: FormPlate[]): string {
   const [field = '', index = '', key = ''] = path.split('.')
   const plate = index === '' ? undefined : plates[Number(index)]
   if (field === 'outline') {
-    return form.shape === 'corners' ? cornerPath(index, plate) : shapePath(index, form, plates)
+    if (form.shape !== 'corners') return shapePath(index, form, plates)
+    return heldWalk(form) ? 'walk' : cornerPath(index, plate)
   }
   if (field === 'edges') return plate ? edgePath(key, plate) : wholePath(form)
   if (field === 'sections') return sectionPath(index, key, form)
@@ -39,6 +44,11 @@ function cornerPath(index: string, plate: FormPlate | undefined): string {
 /** A ready shape has no typed corners: what is wrong at one is the measure of the plate before it. */
 function shapePath(index: string, form: RoofForm, plates: FormPlate[]): string {
   const before = index === '' ? undefined : plates.at(Number(index) - 1)
+  const { shape } = form
+  if (isWingShape(shape)) {
+    const side = Number(before?.path.split('.').at(-1) ?? 0)
+    return wingSidePaths[shape][side] ?? 'lengthMm'
+  }
   if (!before || before.path === 'sides.front' || before.path === 'sides.back') return 'lengthMm'
   const isEnd = before.path === 'sides.right' || before.path === 'sides.left'
   return isEnd || form.shape === 'octagonal-end' ? 'widthMm' : 'splayMm'
@@ -60,6 +70,7 @@ function edgePath(key: string, plate: FormPlate): string {
 /** A section left empty was read as another's: the fault lies where a size was typed. */
 function sectionPath(name: string, key: string, form: RoofForm): string {
   const suffix = key ? `.${key}` : ''
+  if (besideKeys.some((key) => key === name)) return `sections.${name}${suffix}`
   const typedAs = (wanted: 'rafter' | 'hip' | 'ridge' | 'valley'): string => {
     const { depthMm, thicknessMm } = form.sections[wanted]
     const isEmpty = depthMm.trim() === '' && thicknessMm.trim() === ''

@@ -1,5 +1,8 @@
-import { endCutMm, endsCut, type FormPlate, straightSideMm } from './form-outline.ts'
-import { type RoofForm, type SectionKey, sectionKeys } from './roof-form.ts'
+import { outlineSignedArea2 } from '../outline/outline-geometry.ts'
+import type { Point2 } from '../roof/roof-types.ts'
+import type { FormPlate } from './form-outline.ts'
+import { besideKeys, type RoofForm, type SectionKey, sectionKeys } from './roof-form.ts'
+import { shapeFields, shapeProblems } from './shape-typing.ts'
 import { angleDegOfText, lengthMmOfText } from './typed-measure.ts'
 
 /** What is wrong at one field of the form, and what to do about it. */
@@ -15,23 +18,26 @@ export const sectionNames: Record<SectionKey, string> = {
   hip: 'hip',
   ridge: 'ridge',
   valley: 'valley',
+  underpurlin: 'underpurlin',
+  collarTie: 'collar tie',
+  fascia: 'fascia',
+  barge: 'barge',
 }
 
-type Field = { path: string; text: string; what: string; kind: 'length' | 'angle' }
+export type TypedField = { path: string; text: string; what: string; kind: 'length' | 'angle' }
 
 /** Measures left out or not readable, and ends that leave nothing; the roof itself is judged after. */
 export function typingProblems(form: RoofForm, plates: FormPlate[]): FormProblem[] {
-  const fields = [
-    ...shapeFields(form),
+  const plan = shapeFields(form).flatMap(fieldProblem)
+  const others = [
     ...plateFields(form, plates),
     ...layoutFields(form),
     ...sectionFields(form, plates),
-  ]
-  const unread = fields.flatMap(fieldProblem)
-  return unread.length > 0 ? unread : shapeProblems(form)
+  ].flatMap(fieldProblem)
+  return [...(plan.length > 0 ? plan : shapeProblems(form)), ...others]
 }
 
-function fieldProblem({ path, text, what, kind }: Field): FormProblem[] {
+function fieldProblem({ path, text, what, kind }: TypedField): FormProblem[] {
   if (text.trim() === '') return [{ path, message: `Type the ${what}.`, isMissing: true }]
   const value = kind === 'angle' ? angleDegOfText(text) : lengthMmOfText(text)
   if (!Number.isNaN(value)) return []
@@ -45,32 +51,15 @@ function fieldProblem({ path, text, what, kind }: Field): FormProblem[] {
   ]
 }
 
-function shapeFields(form: RoofForm): Field[] {
-  if (form.shape === 'corners') {
-    return form.corners.flatMap((corner, i): Field[] => [
-      { path: `corners.${i}.x`, text: corner.x, what: `x of corner ${i + 1}`, kind: 'length' },
-      { path: `corners.${i}.y`, text: corner.y, what: `y of corner ${i + 1}`, kind: 'length' },
-    ])
-  }
-  const fields: Field[] = [
-    { path: 'lengthMm', text: form.lengthMm, what: 'length', kind: 'length' },
-    { path: 'widthMm', text: form.widthMm, what: 'width', kind: 'length' },
-  ]
-  if (form.shape === 'splayed-end') {
-    fields.push({ path: 'splayMm', text: form.splayMm, what: 'splay', kind: 'length' })
-  }
-  return fields
-}
-
 /** Own measures of a plate where typed; the ones for all where a plate leans on them. */
-function plateFields(form: RoofForm, plates: FormPlate[]): Field[] {
+function plateFields(form: RoofForm, plates: FormPlate[]): TypedField[] {
   const eaves = plates.filter((plate) => plate.side.finish === 'eave')
   const gables = plates.filter((plate) => plate.side.finish === 'gable')
   const leans = (list: FormPlate[], key: 'pitchDeg' | 'overhangMm') =>
     list.some((plate) => plate.side[key].trim() === '')
-  const own = plates.flatMap((plate): Field[] => {
+  const own = plates.flatMap((plate): TypedField[] => {
     const { pitchDeg, overhangMm, finish } = plate.side
-    const fields: Field[] = []
+    const fields: TypedField[] = []
     if (finish === 'eave' && pitchDeg.trim() !== '') {
       fields.push({ path: `${plate.path}.pitchDeg`, text: pitchDeg, what: 'pitch', kind: 'angle' })
     }
@@ -80,7 +69,7 @@ function plateFields(form: RoofForm, plates: FormPlate[]): Field[] {
     }
     return fields
   })
-  const forAll: Field[] = []
+  const forAll: TypedField[] = []
   if (leans(eaves, 'pitchDeg')) {
     forAll.push({ path: 'pitchDeg', text: form.pitchDeg, what: 'pitch', kind: 'angle' })
   }
@@ -95,8 +84,8 @@ function plateFields(form: RoofForm, plates: FormPlate[]): Field[] {
   return [...forAll, ...own]
 }
 
-function layoutFields(form: RoofForm): Field[] {
-  const fields: Field[] = [
+function layoutFields(form: RoofForm): TypedField[] {
+  const fields: TypedField[] = [
     { path: 'plateWidthMm', text: form.plateWidthMm, what: 'plate width', kind: 'length' },
     { path: 'maxSpacingMm', text: form.maxSpacingMm, what: 'rafter spacing', kind: 'length' },
     { path: 'tailAllowanceMm', text: form.tailAllowanceMm, what: 'tail allowance', kind: 'length' },
@@ -104,19 +93,23 @@ function layoutFields(form: RoofForm): Field[] {
   if (form.standMm.trim() !== '') {
     fields.push({ path: 'standMm', text: form.standMm, what: 'height over plate', kind: 'length' })
   }
+  if (form.collarTieHeightMm.trim() !== '') {
+    const what = 'height of the collar ties'
+    fields.push({ path: 'collarTieHeightMm', text: form.collarTieHeightMm, what, kind: 'length' })
+  }
   return fields
 }
 
-function sectionFields(form: RoofForm, plates: FormPlate[]): Field[] {
-  const mayBeEmpty: Record<SectionKey, boolean> = {
-    rafter: false,
-    ridge: false,
-    hip: !hasHips(plates),
-    valley: true,
-  }
-  return sectionKeys.flatMap((key): Field[] => {
+/** Every section of the frame that the plan needs; the others where either figure is typed. */
+function sectionFields(form: RoofForm, plates: FormPlate[]): TypedField[] {
+  const isNeeded = (key: SectionKey) =>
+    key === 'rafter' ||
+    key === 'ridge' ||
+    (key === 'hip' && hasHips(plates)) ||
+    (key === 'valley' && hasValleys(plates))
+  return [...sectionKeys, ...besideKeys].flatMap((key): TypedField[] => {
     const { depthMm, thicknessMm } = form.sections[key]
-    if (mayBeEmpty[key] && depthMm.trim() === '' && thicknessMm.trim() === '') return []
+    if (!isNeeded(key) && depthMm.trim() === '' && thicknessMm.trim() === '') return []
     const path = `sections.${key}`
     const name = sectionNames[key]
     return [
@@ -131,51 +124,33 @@ function sectionFields(form: RoofForm, plates: FormPlate[]): Field[] {
   })
 }
 
-/** A hip rises wherever two eaves meet at a corner; gables on either side leave none. */
+/** Neighbouring plates run in one line within this (sine): neither hip nor valley between them. */
+const straightSine = 1e-3
+
+/** A hip rises wherever two eaves meet at an outer corner; gables on either side leave none. */
 export function hasHips(plates: FormPlate[]): boolean {
-  return plates.some((plate, i) => {
-    const next = plates[(i + 1) % plates.length]
-    return plate.side.finish === 'eave' && next?.side.finish === 'eave'
+  return cornersOfEaves(plates).some((sine) => !(Math.abs(sine) < straightSine) && !(sine < 0))
+}
+
+/** A valley rises wherever two eaves meet at an inner corner. */
+export function hasValleys(plates: FormPlate[]): boolean {
+  return cornersOfEaves(plates).some((sine) => sine <= -straightSine)
+}
+
+/** Sine of the turn at each corner between two eaves: over 0 outer, under 0 inner, NaN not typed yet. */
+function cornersOfEaves(plates: FormPlate[]): number[] {
+  const at = (i: number) => plates[(i + plates.length) % plates.length]
+  // A list in clockwise order is refused elsewhere; its outer corners are still outer.
+  const way = outlineSignedArea2(plates.map(({ start }) => start)) < 0 ? -1 : 1
+  return plates.flatMap((plate, i) => {
+    const [before, after] = [at(i - 1), at(i + 1)]
+    if (plate.side.finish !== 'eave' || before?.side.finish !== 'eave' || !after) return []
+    return [way * turnSine(before.start, plate.start, after.start)]
   })
 }
 
-function problem(path: string, message: string): FormProblem {
-  return { path, message, isMissing: false }
-}
-
-const largestLikelyMetres = 100
-
-/** Measures of a ready shape that leave no plan at all. */
-function shapeProblems(form: RoofForm): FormProblem[] {
-  if (form.shape === 'corners') return []
-  const [lengthMm, widthMm] = [lengthMmOfText(form.lengthMm), lengthMmOfText(form.widthMm)]
-  return [
-    ...sideProblems('lengthMm', 'length', lengthMm),
-    ...sideProblems('widthMm', 'width', widthMm),
-    ...(form.shape === 'splayed-end' ? splayProblems(endCutMm(form), widthMm) : []),
-    ...overallProblems(form),
-  ]
-}
-
-/** A house is not 9 mm long: whoever typed that meant metres. */
-function sideProblems(path: string, what: string, sideMm: number): FormProblem[] {
-  if (!(sideMm > 0)) return [problem(path, `The ${what} must be more than 0 mm.`)]
-  if (sideMm >= largestLikelyMetres) return []
-  const typed = Math.round(sideMm * 1000)
-  return [problem(path, `The ${what} is in mm: for ${sideMm} m type ${typed}.`)]
-}
-
-function splayProblems(splayMm: number, widthMm: number): FormProblem[] {
-  if (!(splayMm > 0)) return [problem('splayMm', 'The splay must be more than 0 mm.')]
-  if (2 * splayMm < widthMm) return []
-  const sizes = `Two splays of ${Math.round(splayMm)} mm leave nothing of an end ${Math.round(widthMm)} mm wide.`
-  return [problem('splayMm', `${sizes} Type a smaller splay.`)]
-}
-
-function overallProblems(form: RoofForm): FormProblem[] {
-  const { right, left } = endsCut(form)
-  if (form.lengthOf !== 'overall' || straightSideMm(form) > 0) return []
-  const endsMm = Math.round(endCutMm(form) * (Number(right) + Number(left)))
-  const message = `The ${form.shape === 'octagonal-end' ? 'octagonal' : 'splayed'} end alone takes ${endsMm} mm. Type a longer length over all.`
-  return [problem('lengthMm', message)]
+function turnSine(before: Point2, corner: Point2, after: Point2): number {
+  const [ux, uy] = [corner.x - before.x, corner.y - before.y]
+  const [vx, vy] = [after.x - corner.x, after.y - corner.y]
+  return (ux * vy - uy * vx) / (Math.hypot(ux, uy) * Math.hypot(vx, vy))
 }

@@ -1,13 +1,20 @@
 import { z } from 'zod'
+import { mostCorners, plainSide, sideSchema, typed } from './form-parts.ts'
+import { emptyWalk, walkSchema } from './walk-form.ts'
+import { emptyWings, wingShapes, wingsSchema } from './wing-form.ts'
 
 /**
  * The roof as the office types it: every measure is kept as text, wrong ones included, so that nothing
  * typed is lost. `roofOfForm` reads it into a `Roof`.
  */
 
-const typed = z.string().max(20, 'That is too long for a measure.')
-
-export const roofShapes = ['rectangle', 'octagonal-end', 'splayed-end', 'corners'] as const
+export const roofShapes = [
+  'rectangle',
+  ...wingShapes,
+  'octagonal-end',
+  'splayed-end',
+  'corners',
+] as const
 export const roofShapeSchema = z.enum(roofShapes)
 export type RoofShape = z.infer<typeof roofShapeSchema>
 
@@ -24,14 +31,6 @@ export const sideKeys = [
 ] as const
 export type SideKey = (typeof sideKeys)[number]
 
-/** What one plate has of its own; an empty measure takes the one typed for all. */
-const sideSchema = z.strictObject({
-  finish: z.enum(['eave', 'gable']),
-  pitchDeg: typed,
-  overhangMm: typed,
-})
-export type SideForm = z.infer<typeof sideSchema>
-
 /** A typed corner, and the plate that runs from it to the next. */
 const cornerSchema = z.strictObject({ x: typed, y: typed, ...sideSchema.shape })
 export type CornerForm = z.infer<typeof cornerSchema>
@@ -39,10 +38,13 @@ export type CornerForm = z.infer<typeof cornerSchema>
 const sectionSchema = z.strictObject({ depthMm: typed, thicknessMm: typed })
 export type SectionForm = z.infer<typeof sectionSchema>
 
+/** The timbers of the frame, and those beside it, which are set out only where a size is typed. */
 export const sectionKeys = ['rafter', 'hip', 'ridge', 'valley'] as const
-export type SectionKey = (typeof sectionKeys)[number]
+export const besideKeys = ['underpurlin', 'collarTie', 'fascia', 'barge'] as const
+export type BesideKey = (typeof besideKeys)[number]
+export type SectionKey = (typeof sectionKeys)[number] | BesideKey
 
-export const mostCorners = 64
+const optionalSection = () => sectionSchema.default(() => ({ depthMm: '', thicknessMm: '' }))
 
 export const roofFormSchema = z.strictObject({
   shape: roofShapeSchema,
@@ -60,7 +62,13 @@ export const roofFormSchema = z.strictObject({
       typeof sideSchema
     >,
   ),
+  wings: wingsSchema.default(emptyWings),
   corners: z.array(cornerSchema).max(mostCorners, `A plan has at most ${mostCorners} corners.`),
+  /**
+   * The sides and turns that `corners` were walked by, as typed; empty where the corners were moved or
+   * typed since, which then hold alone.
+   */
+  walk: walkSchema.default(emptyWalk),
   pitchDeg: typed,
   overhangMm: typed,
   vergeOverhangMm: typed,
@@ -73,6 +81,10 @@ export const roofFormSchema = z.strictObject({
     hip: sectionSchema,
     ridge: sectionSchema,
     valley: sectionSchema,
+    underpurlin: optionalSection(),
+    collarTie: optionalSection(),
+    fascia: optionalSection(),
+    barge: optionalSection(),
   }),
   tail: z.enum(['plumb', 'square']),
   tailAllowanceMm: typed,
@@ -80,21 +92,21 @@ export const roofFormSchema = z.strictObject({
   valleyTop: z.enum(['square', 'dished']),
   /** Height over plate; empty: worked out. */
   standMm: typed,
+  /** Of the underside over the plate; empty: in the upper third of the rise. */
+  collarTieHeightMm: typed.default(''),
 })
 export type RoofForm = z.infer<typeof roofFormSchema>
 
-const plainSide: SideForm = { finish: 'eave', pitchDeg: '', overhangMm: '' }
 const emptySection: SectionForm = { depthMm: '', thicknessMm: '' }
 
 /** A new line of the corner list. */
-export const emptyCorner: CornerForm = { x: '', y: '', ...plainSide }
+export const emptyCorner: CornerForm = { x: '', y: '', ...plainSide() }
 
 /**
  * Where a new roof starts. Plate width and spacing are the everyday ones (common practice, no source);
  * sections are empty, because a person types every size.
  */
 export function formOfShape(shape: RoofShape): RoofForm {
-  const side = (): SideForm => ({ ...plainSide })
   const section = (): SectionForm => ({ ...emptySection })
   return {
     shape,
@@ -103,8 +115,10 @@ export function formOfShape(shape: RoofShape): RoofForm {
     lengthOf: 'straight-side',
     splayMm: '',
     endAt: 'right',
-    sides: Object.fromEntries(sideKeys.map((key) => [key, side()])) as RoofForm['sides'],
+    sides: Object.fromEntries(sideKeys.map((key) => [key, plainSide()])) as RoofForm['sides'],
+    wings: emptyWings(),
     corners: Array.from({ length: 4 }, () => ({ ...emptyCorner })),
+    walk: emptyWalk(),
     pitchDeg: '',
     overhangMm: '',
     vergeOverhangMm: '',
@@ -112,11 +126,21 @@ export function formOfShape(shape: RoofShape): RoofForm {
     plateWidthMm: '90',
     maxSpacingMm: '600',
     spacing: 'even',
-    sections: { rafter: section(), hip: section(), ridge: section(), valley: section() },
+    sections: {
+      rafter: section(),
+      hip: section(),
+      ridge: section(),
+      valley: section(),
+      underpurlin: section(),
+      collarTie: section(),
+      fascia: section(),
+      barge: section(),
+    },
     tail: 'plumb',
     tailAllowanceMm: '0',
     hipTop: 'lowered',
     valleyTop: 'square',
     standMm: '',
+    collarTieHeightMm: '',
   }
 }

@@ -10,7 +10,7 @@ import type {
 import { type FormPlate, platesOfForm } from './form-outline.ts'
 import { formProblemsOf } from './form-problem-paths.ts'
 import { type FormProblem, typingProblems } from './form-typing.ts'
-import type { RoofForm, SectionForm } from './roof-form.ts'
+import { besideKeys, type RoofForm, type SectionForm } from './roof-form.ts'
 import { angleDegOfText, lengthMmOfText } from './typed-measure.ts'
 
 /** What a firm and job bring to a typed roof. */
@@ -37,19 +37,37 @@ export type FormReading =
  * The browser runs it while a person types, the server before it issues: one code, one answer.
  */
 export function roofOfForm(form: RoofForm, firm: FormFirm): FormReading {
+  const typed = typedRoof(form, firm)
+  if (typed.problems.length > 0) return refusedReading(typed.drawn, typed.problems, [])
+  const found = roofProblems(typed.drawn, firm.settings)
+  return found.length > 0
+    ? refusedReading(typed.drawn, formProblemsOf(found, form, platesOfForm(form)), found)
+    : { roof: typed.drawn, problems: null }
+}
+
+/** What can be read at a keystroke, without any geometry of the roof. */
+export type TypedRoof = { drawn: Roof; problems: FormProblem[] }
+
+export function typedRoof(form: RoofForm, { brickOffsetMm }: Pick<FormFirm, 'brickOffsetMm'>) {
   const plates = platesOfForm(form)
-  const drawn = roofAsTyped(form, plates, firm.brickOffsetMm)
-  const typing = typingProblems(form, plates)
-  if (typing.length > 0) {
-    return { roof: null, problems: typing, drawn, drawnProblems: [] }
-  }
-  const found = roofProblems(drawn, firm.settings)
-  if (found.length === 0) return { roof: drawn, problems: null }
-  return { roof: null, problems: formProblemsOf(found, form, plates), drawn, drawnProblems: found }
+  const drawn = roofAsTyped(form, plates, brickOffsetMm)
+  return { drawn, problems: typingProblems(form, plates) } satisfies TypedRoof
+}
+
+export function refusedReading(
+  drawn: Roof,
+  problems: FormProblem[],
+  drawnProblems: RoofProblem[],
+): FormReading {
+  return { roof: null, problems, drawn, drawnProblems }
 }
 
 function roofAsTyped(form: RoofForm, plates: FormPlate[], brickOffsetMm: number): Roof {
   const standMm = form.standMm.trim() === '' ? {} : { standMm: lengthMmOfText(form.standMm) }
+  const collarTie =
+    form.collarTieHeightMm.trim() === '' || isEmptySection(form.sections.collarTie)
+      ? {}
+      : { collarTieHeightMm: lengthMmOfText(form.collarTieHeightMm) }
   return {
     outline: plates.map((plate) => plate.start),
     edges: plates.map((plate) => edgeAsTyped(form, plate, brickOffsetMm)),
@@ -62,6 +80,7 @@ function roofAsTyped(form: RoofForm, plates: FormPlate[], brickOffsetMm: number)
     hipTop: form.hipTop,
     valleyTop: form.valleyTop,
     ...standMm,
+    ...collarTie,
   }
 }
 
@@ -90,7 +109,14 @@ function sectionsAsTyped(form: RoofForm): RoofSections {
   const rafter = sectionAsTyped(form.sections.rafter)
   const hip = isEmptySection(form.sections.hip) ? rafter : sectionAsTyped(form.sections.hip)
   const valley = isEmptySection(form.sections.valley) ? hip : sectionAsTyped(form.sections.valley)
-  return { rafter, hip, valley, ridge: sectionAsTyped(form.sections.ridge) }
+  const beside = besideKeys.filter((key) => !isEmptySection(form.sections[key]))
+  return {
+    rafter,
+    hip,
+    valley,
+    ridge: sectionAsTyped(form.sections.ridge),
+    ...Object.fromEntries(beside.map((key) => [key, sectionAsTyped(form.sections[key])])),
+  }
 }
 
 function sectionAsTyped(section: SectionForm): Section {

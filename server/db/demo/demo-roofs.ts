@@ -8,7 +8,9 @@ const sections = {
 }
 
 function form(shape: RoofShape, changes: Partial<RoofForm>): RoofForm {
-  return { ...formOfShape(shape), overhangMm: '450', vergeOverhangMm: '300', sections, ...changes }
+  const plain = formOfShape(shape)
+  const sizes = { ...plain.sections, ...sections }
+  return { ...plain, overhangMm: '450', vergeOverhangMm: '300', sections: sizes, ...changes }
 }
 
 function withGables(roof: RoofForm, ...sides: (keyof RoofForm['sides'])[]): RoofForm {

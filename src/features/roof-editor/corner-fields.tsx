@@ -1,5 +1,7 @@
 import { Plus, Repeat, Trash2 } from 'lucide-react'
-import { emptyCorner, mostCorners, type RoofForm } from '../../../shared/revisions/roof-form.ts'
+import { outlineTurnedRound } from '../../../shared/outline/outline-geometry.ts'
+import { mostCorners } from '../../../shared/revisions/form-parts.ts'
+import { emptyCorner, type RoofForm } from '../../../shared/revisions/roof-form.ts'
 import { Button } from '../../ui/button.tsx'
 import { MeasureField } from './form-fields.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
@@ -8,21 +10,21 @@ const leastCorners = 3
 
 /** The list read the other way round; each plate keeps its finish, pitch and overhang. */
 function turnedRound({ corners }: RoofForm): RoofForm['corners'] {
-  const count = corners.length
-  return corners.map((_, i) => {
-    const corner = corners[(count - i) % count] ?? emptyCorner
-    const plate = corners[count - 1 - i] ?? emptyCorner
-    return { ...plate, x: corner.x, y: corner.y }
-  })
+  const round = outlineTurnedRound(corners)
+  return round.corners.map(({ x, y }, k) => ({
+    ...(corners[round.edgeOf[k] ?? k] ?? emptyCorner),
+    x,
+    y,
+  }))
 }
 
-/** Corners of any outline without inside corners, counter-clockwise. */
+/** The corners of any outline, counter-clockwise. */
 export function CornerFields() {
   const { form, problemAt, setForm } = useRoofForm()
   const { corners } = form
   const problem = problemAt('corners')
   return (
-    <div id={fieldId('corners')} className="col-span-2 space-y-2">
+    <div id={fieldId('corners')} className="space-y-2">
       <p className="text-sm text-ink-soft">
         Counter-clockwise: the building on your left as you go round. x to the right, y up.
       </p>

@@ -4,9 +4,13 @@ import { Field } from '../../ui/field.tsx'
 import { Select, TextInput } from '../../ui/inputs.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
 
-type Props = { path: string; label: string; hint?: string; className?: string }
+type Props = { path: string; label: string; hint?: string | undefined; className?: string }
 
-type MeasureProps = Props & { placeholder?: string }
+type MeasureProps = Props & {
+  placeholder?: string | undefined
+  /** Stands elsewhere too: links lead to the other one. */
+  isCopy?: boolean
+}
 type BoxProps = {
   text: string
   problem: string | undefined
@@ -24,9 +28,9 @@ export function MeasureField(props: MeasureProps) {
 
 /** Drawn again only when its own text or problem changes, so that a key in one field costs one field. */
 const MeasureBox = memo(function MeasureBox(props: MeasureProps & BoxProps) {
-  const { path, label, hint, className, placeholder, text, problem, setText } = props
+  const { path, label, hint, className, placeholder, isCopy, text, problem, setText } = props
   return (
-    <div id={fieldId(path)} className={`min-w-0 ${className ?? ''}`}>
+    <div id={isCopy ? undefined : fieldId(path)} className={`min-w-0 ${className ?? ''}`}>
       <Field label={label} hint={hint} error={problem}>
         <TextInput
           inputMode="decimal"

@@ -1,18 +1,16 @@
-import { frameRoof } from '../../../shared/roof/frame-roof.ts'
-import { RoofRefusedError } from '../../../shared/roof/roof-problems.ts'
+import { frameOfForm } from '../../../shared/revisions/frame-of-form.ts'
 import type { FrameAnswer, FrameQuestion } from './frame-messages.ts'
 
-function answerOf({ id, roof, settings }: FrameQuestion): FrameAnswer {
+function answerOf({ id, form, firm }: FrameQuestion): FrameAnswer {
   try {
-    return { id, spec: frameRoof(roof, settings), message: null }
+    return { id, frame: frameOfForm(form, firm) }
   } catch (error) {
-    const refused = error instanceof RoofRefusedError
-    const first = refused ? error.problems[0]?.message : undefined
-    return { id, spec: null, message: first ?? 'This roof could not be framed.' }
+    console.warn(error)
+    return { id, frame: null }
   }
 }
 
-/** Frames off the main thread, so that typing never waits. */
+/** Reads and frames off the main thread, so that typing never waits. */
 self.onmessage = (event: MessageEvent<FrameQuestion>) => {
   self.postMessage(answerOf(event.data))
 }

@@ -1,6 +1,5 @@
 import { type KeyboardEvent, useDeferredValue, useEffect, useMemo, useState } from 'react'
 import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
-import { roofOfForm } from '../../../shared/revisions/roof-of-form.ts'
 import { isTouched } from '../../lib/pointer.ts'
 import { Segmented } from '../../ui/segmented.tsx'
 import { CutButUnused } from './cut-but-unused.tsx'
@@ -31,8 +30,7 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
   const { settings, brickOffsetMm } = opened
   const firm = useMemo(() => ({ settings, brickOffsetMm }), [settings, brickOffsetMm])
   const settled = useDeferredValue(form)
-  const reading = useMemo(() => roofOfForm(settled, firm), [settled, firm])
-  const framed = useFramedRoof(reading.roof, settings)
+  const { reading, framed } = useFramedRoof(settled, firm)
   useStartTyping(form.lengthMm === '')
   const issue = useIssue(opened, { form, firm, saver })
 

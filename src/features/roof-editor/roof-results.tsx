@@ -1,11 +1,10 @@
 import { memo, useState } from 'react'
 import type { FormReading } from '../../../shared/revisions/roof-of-form.ts'
 import type { RoofSettings } from '../../../shared/roof/roof-types.ts'
-import { RoofPlan } from '../../drawings/roof-plan.tsx'
 import { Card } from '../../ui/card.tsx'
-import { Note } from '../../ui/states.tsx'
 import { CardDialog } from './card-dialog.tsx'
 import { CutList } from './cut-list.tsx'
+import { EditorPlan } from './editor-plan.tsx'
 import { useMarkingOptions } from './marking-options.ts'
 import { SpecCautions, SpecFit, SpecTotals } from './spec-summary.tsx'
 import type { Framed } from './use-framed-roof.ts'
@@ -23,24 +22,17 @@ export const RoofResults = memo(function RoofResults({ reading, framed, settings
   const [picked, setPicked] = useState<string | null>(null)
   const options = useMarkingOptions(settings)
   const shown = reading.roof ? framed : null
-  const roof = shown?.roof ?? reading.roof ?? reading.drawn
   const spec = shown?.spec ?? null
   return (
     <div className="space-y-4">
       <Card aria-label="Plan" className={part === 'plan' ? '' : 'hidden lg:block'}>
-        <RoofPlan
-          roof={roof}
-          spec={spec}
-          mode="edit"
+        <EditorPlan
+          reading={reading}
+          framed={framed}
           units={options.units}
-          problems={reading.roof ? undefined : reading.drawnProblems}
           selected={picked}
-          label="Plan of the roof as typed"
-          maxHeightPx={560}
           onPick={setPicked}
         />
-        <StillToType reading={reading} />
-        {shown?.message ? <Note kind="stop" title={shown.message} /> : null}
       </Card>
       {spec ? (
         <div className={`space-y-4 ${part === 'numbers' ? '' : 'hidden lg:block'}`}>
@@ -76,23 +68,3 @@ export const RoofResults = memo(function RoofResults({ reading, framed, settings
     </div>
   )
 })
-
-function StillToType({ reading }: { reading: FormReading }) {
-  if (reading.problems === null) return null
-  const missing = reading.problems.filter((problem) => problem.isMissing)
-  const names = missing.map((problem) => problem.message.replace(/^Type the (.*)\.$/, '$1'))
-  return (
-    <div className="mt-2">
-      {names.length > 0 ? (
-        <p className="text-ink-soft">Still to type: {names.join(', ')}.</p>
-      ) : null}
-      {reading.problems
-        .filter((problem) => !problem.isMissing)
-        .map((problem) => (
-          <p key={problem.path} className="font-semibold text-stop">
-            {problem.message}
-          </p>
-        ))}
-    </div>
-  )
-}

@@ -9,6 +9,10 @@ const sectionTitles: Record<SectionKey, string> = {
   hip: 'Hip',
   ridge: 'Ridge',
   valley: 'Valley',
+  underpurlin: 'Underpurlins',
+  collarTie: 'Collar ties',
+  fascia: 'Fascia',
+  barge: 'Barge boards',
 }
 const sectionHints: Partial<Record<SectionKey, string>> = {
   hip: 'Leave empty on a roof without hips.',
