@@ -1,0 +1,190 @@
+import { frameRoof } from '../../../shared/roof/frame-roof.ts'
+import { RoofRefusedError } from '../../../shared/roof/roof-problems.ts'
+import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
+import { makeRoof } from '../support/roofs.ts'
+import { numbersFrom } from './random-roofs.ts'
+
+/** Houses with wings: a main body with parts built out from its sides. */
+type Next = () => number
+type Pitch = number | 'gable'
+/** One plate edge: where it starts, and which part of the house it belongs to. */
+type Side = { x: number; y: number; wing: number; isEnd: boolean }
+/** A part built out from one side of the body, from `from` to `to` along it. */
+type Wing = { from: number; to: number; out: number }
+
+/** No plate shorter than this; wings no narrower and no wider than these. */
+const LEAST_SIDE = 900
+const WING = [2500, 8000] as const
+
+const between = (next: Next, low: number, high: number): number =>
+  Math.round(low + next() * (high - low))
+const oneOf = <T>(next: Next, items: readonly T[]): T => items[Math.floor(next() * items.length)]!
+
+/** Wings along one side, apart from each other; flush with a corner or well clear of it. */
+function wingsOf(next: Next, sideMm: number, most: number): Wing[] {
+  const wings: Wing[] = []
+  let start = next() < 0.4 ? 0 : LEAST_SIDE + next() * 1500
+  while (wings.length < most) {
+    const width = between(next, WING[0], Math.min(WING[1], Math.max(WING[0], sideMm * 0.6)))
+    const from = Math.round(start)
+    let to = from + width
+    if (to > sideMm + 1) break
+    if (sideMm - to < LEAST_SIDE) to = sideMm
+    if (to - from > sideMm - LEAST_SIDE) break
+    const jog = next() < 0.2
+    const out = jog ? between(next, LEAST_SIDE, 1500) : between(next, 1800, 6000)
+    wings.push({ from, to, out })
+    start = to + LEAST_SIDE + next() * 2500
+  }
+  return wings
+}
+
+type Body = { long: number; wide: number; sides: Wing[][] }
+
+function bodyOf(next: Next): Body {
+  const wide = between(next, 4500, 8000)
+  const long = between(next, Math.max(7000, wide + 500), 15000)
+  const lengths = [long, wide, long, wide]
+  const chance = [0.75, 0.35, 0.6, 0.35]
+  let left = oneOf(next, [1, 1, 2, 2, 2, 3, 3])
+  const sides = lengths.map((sideMm, i) => {
+    if (left === 0 || next() > chance[i]!) return []
+    const wings = wingsOf(next, sideMm, i % 2 === 0 ? Math.min(2, left) : 1)
+    left -= wings.length
+    return wings
+  })
+  if (sides.flat().length === 0) {
+    sides[0] = [{ from: 0, to: between(next, WING[0], long - 2 * LEAST_SIDE), out: 3000 }]
+  }
+  return { long, wide, sides }
+}
+
+/** Walks round the body and its wings, counter-clockwise. */
+function sidesOf({ long, wide, sides }: Body): Side[] {
+  const corners = [
+    [0, 0],
+    [long, 0],
+    [long, wide],
+    [0, wide],
+  ] as const
+  const found: Side[] = []
+  let wing = 0
+  sides.forEach((wings, i) => {
+    const [cx, cy] = corners[i]!
+    const [nx, ny] = corners[(i + 1) % 4]!
+    const size = Math.hypot(nx - cx, ny - cy)
+    const [dx, dy] = [(nx - cx) / size, (ny - cy) / size]
+    const at = (along: number, out: number): { x: number; y: number } => ({
+      x: cx + along * dx + out * dy,
+      y: cy + along * dy - out * dx,
+    })
+    found.push({ ...at(0, 0), wing: 0, isEnd: i % 2 === 1 && wings.length === 0 })
+    for (const { from, to, out } of wings) {
+      wing += 1
+      found.push({ ...at(from, 0), wing, isEnd: false })
+      found.push({ ...at(from, out), wing, isEnd: true })
+      found.push({ ...at(to, out), wing, isEnd: false })
+      found.push({ ...at(to, 0), wing: 0, isEnd: false })
+    }
+  })
+  return withoutIdle(found)
+}
+
+/** Leaves out corners that are none: two in one place, and those in the middle of a straight side. */
+function withoutIdle(sides: Side[]): Side[] {
+  const apart = sides.filter((side, i) => {
+    const after = sides[(i + 1) % sides.length]!
+    return Math.hypot(after.x - side.x, after.y - side.y) > 1
+  })
+  return apart.filter((side, i) => {
+    const before = apart.at(i - 1)!
+    const after = apart[(i + 1) % apart.length]!
+    const turn = (side.x - before.x) * (after.y - side.y) - (side.y - before.y) * (after.x - side.x)
+    return Math.abs(turn) > 1
+  })
+}
+
+/** One pitch, one for each way the eaves face, or one for each wing; some wing ends gables. */
+function pitchesOf(next: Next, sides: Side[], gables: boolean): Pitch[] {
+  const one = between(next, 16, 40)
+  const kind = oneOf(next, ['one', 'one', 'one', 'facing', 'wing'] as const)
+  const byKey = new Map<string, number>()
+  return sides.map((side, i) => {
+    if (side.isEnd && gables && next() < 0.4) return 'gable'
+    if (kind === 'one') return one
+    const after = sides[(i + 1) % sides.length]!
+    const facing = Math.round(Math.atan2(after.y - side.y, after.x - side.x) / (Math.PI / 2))
+    const key = kind === 'facing' ? `${facing}` : `${side.wing}`
+    const pitch = byKey.get(key) ?? Math.max(14, one - 5 + between(next, 0, 10))
+    byKey.set(key, pitch)
+    return pitch
+  })
+}
+
+const waysOf = (next: Next): Parameters<typeof makeRoof>[2] => ({
+  hipTop: oneOf(next, ['backed', 'lowered']),
+  valleyTop: oneOf(next, ['square', 'dished']),
+  tail: oneOf(next, ['plumb', 'plumb', 'square']),
+  spacing: oneOf(next, ['even', 'even', 'full']),
+  maxSpacingMm: oneOf(next, [600, 600, 900]),
+  overhangMm: oneOf(next, [300, 450, 600]),
+})
+
+function rectilinear(next: Next): Roof {
+  const sides = sidesOf(bodyOf(next))
+  const pitches = pitchesOf(next, sides, next() < 0.6)
+  const outline = sides.map(({ x, y }): [number, number] => [x, y])
+  return makeRoof(outline, pitches, waysOf(next))
+}
+
+/** The same with every corner moved, or with each wing's end pushed aside: odd angles, splayed ends. */
+function skewed(next: Next): Roof {
+  const sides = sidesOf(bodyOf(next))
+  const moves = oneOf(next, ['corners', 'ends', 'one'] as const)
+  const moved = sides.map(({ x, y, isEnd }, i): [number, number] => {
+    const afterEnd = sides.at(i - 1)!.isEnd
+    const chosen =
+      moves === 'corners' || (moves === 'ends' ? isEnd || afterEnd : i % sides.length === 2)
+    const by = moves === 'corners' ? 250 : 900
+    const [dx, dy] = [(2 * next() - 1) * by, (2 * next() - 1) * by]
+    return chosen ? [x + dx, y + dy] : [x, y]
+  })
+  const turn = next() < 0.5 ? 0 : next() * 2 * Math.PI
+  const [c, s] = [Math.cos(turn), Math.sin(turn)]
+  const outline = moved.map(([x, y]): [number, number] => [x * c - y * s, x * s + y * c])
+  return makeRoof(outline, pitchesOf(next, sides, false), waysOf(next))
+}
+
+export type House = { roof: Roof; spec: FrameSpec; refused: string[] }
+
+/** More than this in a row from one stream is a fault of the program, not of the plan. */
+const MOST_REFUSALS = 12
+
+/**
+ * A house from a seed. A plan that is refused with a reason is drawn again from the same stream; the
+ * reasons come with the house, and the test counts them.
+ */
+function drawnHouse(seed: number, draw: (next: Next) => Roof): House {
+  const next = numbersFrom(seed)
+  const refused: string[] = []
+  while (refused.length <= MOST_REFUSALS) {
+    const roof = draw(next)
+    try {
+      return { roof, spec: frameRoof(roof), refused }
+    } catch (error) {
+      if (!(error instanceof RoofRefusedError)) throw error
+      refused.push(error.problems.map((p) => `${p.path}: ${p.message}`).join('; '))
+    }
+  }
+  throw new Error(`seed ${seed}: every plan is refused: ${refused.join(' | ')}`)
+}
+
+/** L, T, U, Z and cross plans, jogs: all corners square. */
+export const rectilinearHouse = (seed: number): House => drawnHouse(seed + 20_000, rectilinear)
+
+/** The same kinds with corners moved and wings at odd angles. */
+export const skewedHouse = (seed: number): House => drawnHouse(seed + 40_000, skewed)
+
+/** The plans alone, drawn once each. */
+export const rectilinearPlan = (seed: number): Roof => rectilinear(numbersFrom(seed + 20_000))
+export const skewedPlan = (seed: number): Roof => skewed(numbersFrom(seed + 40_000))
