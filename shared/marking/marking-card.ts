@@ -1,8 +1,10 @@
 import { pieceHand } from '../drawing/timber-hand.ts'
 import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
 import {
+  bearsText,
   bevelsWords,
   cutsSawnAlike,
+  edgeFigures,
   type MarkingEnd,
   markingEnds,
   tapeBase,
@@ -52,6 +54,8 @@ export type MarkingCard = {
   /** What the saw needs, longest point to longest point. */
   cutLength: MarkingFigure
   setOutLength: MarkingFigure
+  /** From end to end along its edges, where there is no heel line to measure from. */
+  edges: MarkingFigure[]
   /** Deductions, rise, run: not needed to mark out, kept for who wants to check. */
   further: MarkingFigure[]
   pitchText: string
@@ -98,6 +102,7 @@ export function markingCardOf(
     handWords: wayWords(spec, line, member, alike),
     cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to point'),
     setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
+    edges: edgeFigures(member, options),
     further: furtherFigures(member, options),
     pitchText: angleText(member.pitchDeg, options),
     ends: markingEnds(spec, member, alike, options),
@@ -138,12 +143,10 @@ function figureWords(figure: MarkingFigure, note = false): string {
 function cutLines(end: MarkingEnd, place: string): string[] {
   return cutsSawnAlike(end)
     .map(({ name, cuts, first }) => {
-      const bears = cuts.map(({ cheek, bearsOn }) =>
-        bearsOn && cheek ? `${cheek}: ${bearsOn}` : bearsOn,
-      )
-      const bearsText = bears.filter(Boolean).map((text) => ` ${text}.`)
+      const bears = cuts.map(bearsText)
+      const bearsTexts = bears.filter(Boolean).map((text) => ` ${text}.`)
       const title = place || [end.title, name.toLowerCase()].filter(Boolean).join(', ')
-      return [`${title}: ${bevelsWords(first)}.${bearsText.join('')}`, ...first.sawWords]
+      return [`${title}: ${bevelsWords(first)}.${bearsTexts.join('')}`, ...first.sawWords]
     })
     .flat()
 }
@@ -155,6 +158,13 @@ function endLines(end: MarkingEnd): string[] {
   const points = end.points.map((point) => figureWords(point).toLowerCase()).join('; ')
   const place = points ? [`${end.title}: ${points}; ${from}.`] : []
   return [...place, ...cutLines(end, '')]
+}
+
+function edgeLines({ edges }: MarkingCard): string[] {
+  const [first, ...rest] = edges
+  if (!first) return []
+  const words = [figureWords(first), ...rest.map((one) => figureWords(one).toLowerCase())]
+  return [`${words.join(', ')}, ${first.note}.`]
 }
 
 /** The tail's length where no tail point has said it. */
@@ -171,6 +181,7 @@ export function markingCardLines(card: MarkingCard): string[] {
   return [
     `${card.mark}  ${card.name}  ${card.section}  ${card.quantityWords}`,
     `${figureWords(card.cutLength)}, ${figureWords(card.setOutLength).toLowerCase()}.`,
+    ...edgeLines(card),
     ...card.ends.flatMap(endLines),
     ...(mouth
       ? [

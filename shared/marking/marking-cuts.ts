@@ -152,14 +152,23 @@ function bearsOnWords(
   return capital(`${whose}${verb} ${piecesWords(met)}`)
 }
 
+function isMeasuredByEdges({ birdsmouth, role }: Member): boolean {
+  return birdsmouth === null && role !== 'ridge'
+}
+
+/** 'Left cheek: bears on the hip H1', 'Against the valley V1'; empty for a cut that meets nothing. */
+export function bearsText({ cheek, bearsOn }: MarkingCut): string {
+  if (!bearsOn || !cheek) return bearsOn
+  return `${cheek}: ${bearsOn.replace(/^(Bears|Against)/, (word) => word.toLowerCase())}`
+}
+
 function endPoints(
   member: Member,
   end: 'head' | 'foot',
   cuts: readonly Cut[],
   options: MarkingOptions,
 ): MarkingFigure[] {
-  if (!member.birdsmouth && member.role !== 'ridge')
-    return end === 'head' ? endToEndPoints(member, options) : []
+  if (isMeasuredByEdges(member)) return []
   const only = cuts.length === 1 ? cuts[0] : undefined
   const points = only
     ? singleCutPoints(only)
@@ -172,10 +181,11 @@ function endPoints(
   )
 }
 
-/** With no heel line to hook the tape on, a timber is measured from its own foot. */
-function endToEndPoints(member: Member, options: MarkingOptions): MarkingFigure[] {
+/** With no heel line to hook the tape on, a timber is measured from its own foot; else nothing. */
+export function edgeFigures(member: Member, options: MarkingOptions): MarkingFigure[] {
+  if (!isMeasuredByEdges(member)) return []
   return edgeLengths(member).map(({ place, fromMm, toMm }) =>
-    figureOf(capital(place), toMm - fromMm, options, 'along the top, from the foot to the head'),
+    figureOf(capital(place), toMm - fromMm, options, 'along the top, foot to head'),
   )
 }
 

@@ -1,5 +1,6 @@
 import type { MarkingCard } from '../../shared/marking/marking-card.ts'
 import {
+  bearsText,
   cutsSawnAlike,
   type CutsSawnAlike,
   type MarkingCut,
@@ -75,11 +76,13 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
   return (
     <div className="border-t border-rule pt-3 print:pt-1">
       <p className="mb-1 text-base print:text-xs font-extrabold">{end.title}</p>
-      <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
-        {end.points.map((point) => (
-          <FigureView key={point.label} figure={point} />
-        ))}
-      </dl>
+      {end.points.length > 0 ? (
+        <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
+          {end.points.map((point) => (
+            <FigureView key={point.label} figure={point} />
+          ))}
+        </dl>
+      ) : null}
       {cutsSawnAlike(end).map(({ name, first, cuts }) => (
         <div key={name} className="mt-2">
           <CutName name={name} cut={first} />
@@ -98,11 +101,10 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
               </div>
             ) : null}
           </dl>
-          {cuts.map(({ cheek, bearsOn }) =>
-            bearsOn ? (
-              <p key={cheek + bearsOn} className="text-base print:text-xs">
-                {cheek ? `${cheek}: ` : ''}
-                {bearsOn}.
+          {cuts.map(bearsText).map((text) =>
+            text ? (
+              <p key={text} className="text-base print:text-xs">
+                {text}.
               </p>
             ) : null,
           )}
@@ -142,7 +144,7 @@ export function CutNumbers({ card }: { card: MarkingCard }) {
       <dl className="grid grid-cols-2 gap-x-4 gap-y-2">
         <FigureView figure={card.cutLength} isMain />
         <FigureView figure={{ ...card.setOutLength, note: '' }} />
-        {points.map((point) => (
+        {[...card.edges, ...points].map((point) => (
           <FigureView key={point.label} figure={point} />
         ))}
       </dl>
@@ -177,6 +179,9 @@ export function MarkingNumbers({ card }: { card: MarkingCard }) {
       <dl className="grid grid-cols-2 gap-x-4 gap-y-3">
         <FigureView figure={card.cutLength} isMain />
         <FigureView figure={card.setOutLength} isMain />
+        {card.edges.map((figure) => (
+          <FigureView key={figure.label} figure={figure} />
+        ))}
       </dl>
       {card.ends.map((end) => (
         <EndNumbers key={end.end} end={end} />

@@ -1,6 +1,7 @@
 import { useMemo } from 'react'
 import { type MarkingCard, markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingFigure, MarkingOptions } from '../../../shared/marking/marking-figures.ts'
+import { roundingWords } from '../../../shared/marking/rounding-words.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
 
 type Props = { spec: FrameSpec; options: MarkingOptions; onPick: (cutLineMark: string) => void }
@@ -34,6 +35,7 @@ export function CutList({ spec, options, onPick }: Props) {
   )
   return (
     <>
+      <p className="text-sm text-ink-soft">{roundingWords(spec, options)}</p>
       <p className="mb-2 text-sm text-ink-soft">
         Bevels from the edge: down the side / across the top.
       </p>

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react'
 import type { PosedMember } from '../../../shared/drawing/timber-pose.ts'
 import { cutOneFirst, type MarkingCard } from '../../../shared/marking/marking-card.ts'
+import { bearsText } from '../../../shared/marking/marking-cuts.ts'
 import { bevelWords, type MarkingFigure } from '../../../shared/marking/marking-figures.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
 import { TimberDrawing } from '../../drawings/timber-drawing.tsx'
@@ -22,6 +23,9 @@ export function PrintCard({ card, member, units }: Props) {
       <dl className="grid grid-cols-2 gap-3">
         <BigFigure figure={card.cutLength} />
         <BigFigure figure={card.setOutLength} />
+        {card.edges.map((figure) => (
+          <BigFigure key={figure.label} figure={figure} />
+        ))}
       </dl>
       <TimberDrawing member={member} units={units} />
       <div className="grid grid-cols-2 items-start gap-x-8 gap-y-3">
@@ -31,9 +35,7 @@ export function PrintCard({ card, member, units }: Props) {
               <Figures figures={end.points} />
               {end.cuts.map((cut) => (
                 <div key={`${cut.cheek}${cut.bearsOn}`}>
-                  {cut.bearsOn ? (
-                    <p>{[cut.cheek, cut.bearsOn].filter(Boolean).join(': ')}.</p>
-                  ) : null}
+                  {cut.bearsOn ? <p>{bearsText(cut)}.</p> : null}
                   {cut.sawWords.map((words) => (
                     <p key={words} className="font-semibold text-stop">
                       {words}

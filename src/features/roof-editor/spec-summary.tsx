@@ -1,7 +1,7 @@
 import { lengthWords, type MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import { planingWords } from '../../../shared/marking/marking-parts.ts'
 import { sectionWords } from '../../../shared/marking/role-words.ts'
-import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
+import type { CoveringTotals, FrameSpec } from '../../../shared/roof/roof-types.ts'
 import { Note } from '../../ui/states.tsx'
 
 type Props = { spec: FrameSpec; options: MarkingOptions }
@@ -16,55 +16,100 @@ export function SpecTotals({ spec, options }: Props) {
     ['Eaves', totals.eaveMm],
     ['Verges', totals.vergeMm],
   ] as const
-  const rows: [string, string][] = [
-    ['Roof area with eaves', `${totals.roofAreaWithEavesM2.toFixed(1)} m²`],
-    ['Roof area to the plates', `${totals.roofAreaM2.toFixed(1)} m²`],
+  const rows: Row[] = [
+    ['Roof area with eaves', areaWords(totals.roofAreaWithEavesM2)],
+    ['Roof area to the plates', areaWords(totals.roofAreaM2)],
     ...lengths
       .filter(([, mm]) => mm > 0)
-      .map(([name, mm]): [string, string] => [name, lengthWords(mm, options)]),
+      .map(([name, mm]): Row => [name, lengthWords(mm, options)]),
     ['Height over plate', lengthWords(spec.standMm, options)],
   ]
   return (
     <div className="grid gap-x-8 gap-y-4 xl:grid-cols-2">
-      <dl className="divide-y divide-rule">
-        {rows.map(([name, text]) => (
-          <div key={name} className="flex justify-between gap-3 py-1">
-            <dt>{name}</dt>
-            <dd className="font-semibold tabular-nums">{text}</dd>
-          </div>
-        ))}
-      </dl>
-      <table className="h-fit w-full border-collapse">
-        <thead>
-          <tr className="border-b-2 border-ink-soft text-right text-sm">
-            <th scope="col" className="py-1 pr-2 text-left">
-              Section
-            </th>
-            <th scope="col" className="px-2 py-1">
-              Pieces
-            </th>
-            <th scope="col" className="px-2 py-1">
-              Length
-            </th>
-            <th scope="col" className="py-1 pl-2">
-              Weight
-            </th>
-          </tr>
-        </thead>
-        <tbody>
-          {totals.bySection.map((total) => (
-            <tr key={sectionWords(total.section)} className="border-b border-rule text-right">
-              <th scope="row" className="py-1 pr-2 text-left font-semibold tabular-nums">
-                {sectionWords(total.section)}
-              </th>
-              <td className="px-2 py-1 tabular-nums">{total.pieces}</td>
-              <td className="px-2 py-1 tabular-nums">{(total.lengthMm / 1000).toFixed(1)} m</td>
-              <td className="py-1 pl-2 tabular-nums">{Math.round(total.weightKg)} kg</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <div className="space-y-4">
+        <Rows rows={rows} />
+        {totals.covering ? <CoveringRows covering={totals.covering} /> : null}
+      </div>
+      <SectionTable totals={totals} />
     </div>
+  )
+}
+
+type Row = [string, string]
+
+const areaWords = (areaM2: number) => `${areaM2.toFixed(1)} m²`
+const metreWords = (mm: number) => `${(mm / 1000).toFixed(1)} m`
+
+function Rows({ rows }: { rows: readonly Row[] }) {
+  return (
+    <dl className="divide-y divide-rule">
+      {rows.map(([name, text]) => (
+        <div key={name} className="flex justify-between gap-3 py-1">
+          <dt>{name}</dt>
+          <dd className="font-semibold tabular-nums">{text}</dd>
+        </div>
+      ))}
+    </dl>
+  )
+}
+
+/** What the roofer, the plumber and the yard ask for; what a roof has none of is left out. */
+function CoveringRows({ covering }: { covering: CoveringTotals }) {
+  const lengths = [
+    ['Battens', covering.battenMm ?? 0],
+    ['Ridge capping', covering.ridgeCappingMm],
+    ['Hip capping', covering.hipCappingMm],
+    ['Valley lining', covering.valleyLiningMm],
+    ['Gutter', covering.gutterMm],
+    ['Fascia', covering.fasciaMm],
+    ['Barge', covering.bargeMm],
+  ] as const
+  const rows: Row[] = [
+    ['Covering', areaWords(covering.coveringAreaM2)],
+    ['Underlay', areaWords(covering.underlayAreaM2)],
+    ...lengths.filter(([, mm]) => mm > 0).map(([name, mm]): Row => [name, metreWords(mm)]),
+  ]
+  return (
+    <div>
+      <h3 className="font-extrabold">Covering and trim</h3>
+      <Rows rows={rows} />
+      <p className="mt-1 text-sm text-ink-soft">Net: laps and waste are not in these.</p>
+    </div>
+  )
+}
+
+function SectionTable({ totals }: Pick<FrameSpec, 'totals'>) {
+  return (
+    <table className="h-fit w-full border-collapse">
+      <thead>
+        <tr className="border-b-2 border-ink-soft text-right text-sm">
+          <th scope="col" className="py-1 pr-2 text-left">
+            Section
+          </th>
+          <th scope="col" className="px-2 py-1">
+            Pieces
+          </th>
+          <th scope="col" className="px-2 py-1">
+            Length
+          </th>
+          <th scope="col" className="py-1 pl-2">
+            Weight
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {totals.bySection.map((total) => (
+          <tr key={sectionWords(total.section)} className="border-b border-rule text-right">
+            <th scope="row" className="py-1 pr-2 text-left font-semibold tabular-nums">
+              {sectionWords(total.section)}
+            </th>
+            <td className="px-2 py-1 tabular-nums">{total.pieces}</td>
+            <td className="px-2 py-1 tabular-nums">{metreWords(total.lengthMm)}</td>
+            <td className="py-1 pl-2 tabular-nums">{Math.round(total.weightKg)} kg</td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
   )
 }
 
@@ -87,25 +132,16 @@ export function SpecCautions({ spec }: Pick<Props, 'spec'>) {
   )
 }
 
-/** Corners to plane, and what rounding the marks costs at the worst joint. */
+/** Corners to plane. */
 export function SpecFit({ spec, options }: Props) {
-  const { joint, worstMm } = spec.rounding
   const planing = spec.cutLines.flatMap((line) => planingWords(spec, line, options))
+  if (planing.length === 0)
+    return <p>No corner stands over a neighbouring slope: nothing to plane.</p>
   return (
-    <div className="space-y-2">
-      {planing.length > 0 ? (
-        <ul className="list-disc pl-5">
-          {planing.map((words) => (
-            <li key={words}>{words}</li>
-          ))}
-        </ul>
-      ) : (
-        <p>No corner stands over a neighbouring slope: nothing to plane.</p>
-      )}
-      <p>
-        Marked to {options.roundMm} mm and {options.roundDeg}°, the worst joint is{' '}
-        {worstMm.toFixed(1)} mm out{joint ? `: ${joint[0]} on ${joint[1]}` : ''}.
-      </p>
-    </div>
+    <ul className="list-disc pl-5">
+      {planing.map((words) => (
+        <li key={words}>{words}</li>
+      ))}
+    </ul>
   )
 }

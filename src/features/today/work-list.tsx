@@ -4,6 +4,7 @@ import type { DayRoof, DaySheet } from '../../../shared/day-sheets/day-sheet-sch
 import type { DayTask } from '../../../shared/day-sheets/task-schemas.ts'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { cutOneFirst } from '../../../shared/marking/marking-card.ts'
+import { roundingWords } from '../../../shared/marking/rounding-words.ts'
 import { useMay } from '../../lib/session.ts'
 import { useDayAsk } from '../../lib/use-day-ask.tsx'
 import { Button } from '../../ui/button.tsx'
@@ -59,7 +60,12 @@ export function WorkList({ sheet, roof, today }: Props) {
       aria-label="Work of the day"
       className="space-y-5 print:columns-2 print:gap-4 print:space-y-3"
     >
-      <p className="text-xl font-extrabold">{cutOneFirst}</p>
+      <div>
+        <p className="text-xl font-extrabold">{cutOneFirst}</p>
+        {roof ? (
+          <p className="text-base print:text-xs">{roundingWords(roof.spec, roof.marking)}</p>
+        ) : null}
+      </div>
       {question}
       {leftOver.length > 0 ? (
         <div className="space-y-3 print:space-y-2">
