@@ -15,6 +15,8 @@ import { defaultSettings } from './roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from './roof-types.ts'
 import { worstRounding } from './rounding.ts'
 import { besideFrame } from './secondary/beside-frame.ts'
+import type { BesideGround } from './secondary/beside-ground.ts'
+import { coveringTotals } from './secondary/covering-totals.ts'
 import { plateLines } from './plate-lines.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
@@ -56,7 +58,9 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
   const ground: Ground = { roof, settings, plates, lines, joints: roofJoints(roof, lines) }
   const standMm = commonStandMm(roof, plates.slopes)
   const { drafts, openPieces } = draftMembers(ground, standMm)
-  const all = [...drafts, ...besideFrame({ ...ground, standMm, drafts })]
+  const standing: BesideGround = { ...ground, standMm, drafts }
+  const beside = besideFrame(standing)
+  const all = [...drafts, ...beside.drafts]
   const { members, cutLines, markOf } = markMembers(all)
   const openMarks = new Set([...openPieces].map((piece) => markOf.get(piece)))
   const planes = publishedPlanes(plates, lines)
@@ -67,8 +71,11 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
     lines: published,
     members,
     cutLines,
-    totals: roofTotals(planes, published, members),
-    cautions: cautionsOf(ground, standMm, members, openMarks),
+    totals: {
+      ...roofTotals(planes, published, members),
+      covering: coveringTotals(standing, planes, members),
+    },
+    cautions: [...cautionsOf(ground, standMm, members, openMarks), ...beside.cautions],
     planing: planingOf(drafts, plates, lines, standMm, markOf),
     rounding: worstRounding(all, settings, markOf),
   }

@@ -3,6 +3,7 @@ import { roofJoints } from './clusters.ts'
 import { roofLines } from './roof-lines.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { Roof, RoofProblem, RoofSettings } from './roof-types.ts'
+import { besideProblems } from './secondary/beside-problems.ts'
 import { at } from './slopes.ts'
 import { plateLines } from './plate-lines.ts'
 import { commonStandMm, leastSeatMm, rafterSeatMm } from './stand.ts'
@@ -201,6 +202,7 @@ export const roofProblems = (
     ...list.slice(0, 64).flatMap(edgeProblems),
     ...choiceProblems(input),
     ...settingsProblems(settings),
+    ...besideProblems(roof, settings),
   ]
   if (fields.length > 0) return fields
   const seats = seatProblems(roof)

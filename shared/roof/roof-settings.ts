@@ -10,6 +10,7 @@ export const defaultSettings: RoofSettings = {
   roundDeg: 0.5,
   maxRafterSpanMm: 3600,
   covering: null,
+  collarTieSpacingMm: 1200,
 }
 
 /** Goes up whenever the same input would give other numbers; a revision stores it. */

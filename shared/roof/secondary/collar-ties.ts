@@ -73,8 +73,11 @@ const purlinBands = (ground: BesideGround, row: PairRow, purlins: DraftMember[])
       return { lowMm: z - purlin.section.depthMm * cos - lean, highMm: z + lean }
     })
 
-/** How high the ties of a row lie: underside over the plate; null where the ridge leaves no room. */
-export type TieHeight = { askedMm: number; heightMm: number | null }
+/**
+ * How high the ties of a row lie, underside over the plate: as asked for, as they are set out (null where
+ * the ridge leaves no room), and the most that the ridge leaves room for (null where underpurlins take it).
+ */
+export type TieHeight = { askedMm: number; heightMm: number | null; mostMm: number | null }
 
 export const tieHeight = (
   ground: BesideGround,
@@ -86,17 +89,21 @@ export const tieHeight = (
   const riseMm = Math.min(...heads)
   const askedMm = ground.roof.collarTieHeightMm ?? riseMm * upperThird
   const bands = purlinBands(ground, row, purlins).sort((a, b) => a.lowMm - b.lowMm)
+  const meets = (mm: number, band: Band) =>
+    mm + section.depthMm > band.lowMm + 1e-6 && mm < band.highMm - 1e-6
   let heightMm = askedMm
-  for (const band of bands) {
-    const meets = heightMm + section.depthMm > band.lowMm + 1e-6 && heightMm < band.highMm - 1e-6
-    if (meets) heightMm = band.highMm
-  }
+  for (const band of bands) if (meets(heightMm, band)) heightMm = band.highMm
   const over = ground.drafts.filter((d) => d.role === 'ridge' && sharesRow(d, row))
   const ridgeMm = Math.min(
     Infinity,
     ...over.map((ridge) => ridge.timber.origin.z - ridge.section.depthMm),
   )
-  return { askedMm, heightMm: heightMm + section.depthMm <= ridgeMm + 1e-6 ? heightMm : null }
+  const mostMm = ridgeMm - section.depthMm
+  return {
+    askedMm,
+    heightMm: heightMm <= mostMm + 1e-6 ? heightMm : null,
+    mostMm: bands.some((band) => meets(mostMm, band)) ? null : mostMm,
+  }
 }
 
 const sharesRow = (ridge: FrameDraft, row: PairRow): boolean =>

@@ -81,9 +81,8 @@ const bearsOn = (
       (barge) => barge.edge === end.edge && laid.run.edges.includes(barge.eave),
     )
     if (cover === undefined) return []
-    const { timber, tailLengthMm, setOutLengthMm, piece } = cover.draft
-    const side = dot3(timber.left, plane.normal) < 0 ? 1 : -1
-    return meets(sideFace(timber, side, -tailLengthMm, setOutLengthMm)) ? [piece.id] : []
+    const side = dot3(cover.draft.timber.left, plane.normal) < 0 ? 1 : -1
+    return meets(sideFace(cover.draft, side)) ? [cover.draft.piece.id] : []
   }
   const place = all.findIndex((other) => other.run.edges.includes(end.edge))
   const mate = all[place]

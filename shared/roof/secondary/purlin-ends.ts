@@ -62,8 +62,8 @@ const stopAt = (
 const bearsOn = (timber: Timber, { plane, timber: other }: Stop): boolean => {
   if (other === null) return false
   const side = dot3(plane.normal, other.timber.left) < 0 ? 1 : -1
-  const face = sideFace(other.timber, side, -other.tailLengthMm, other.setOutLengthMm)
-  return sharedFaceMm2(cutFace(timber, plane), face, plane.normal) > leastBearingMm2
+  const ends = cutFace(timber, plane)
+  return sharedFaceMm2(ends, sideFace(other, side), plane.normal) > leastBearingMm2
 }
 
 const alongMm = (timber: Timber, plane: Plane): number => crossingOf(plane, timber).baseMm

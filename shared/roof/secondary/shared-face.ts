@@ -1,16 +1,21 @@
-import { timberPoint } from '../bevel.ts'
-import type { Timber } from '../bevel.ts'
+import { crossingAt, timberPoint } from '../bevel.ts'
 import { convexOverlap, polygonSignedArea } from '../convex.ts'
+import type { DraftMember } from '../members.ts'
 import type { Point2, Point3 } from '../roof-types.ts'
 import { cross3, dot3, unit3 } from '../vector.ts'
 
 /** A face that shares less than this with another does not bear on it, mm². */
 export const leastBearingMm2 = 10
 
-/** One side face of a timber between two plumb-measured places along its top, as a polygon in space. */
-export const sideFace = (timber: Timber, side: 1 | -1, fromMm: number, toMm: number): Point3[] => {
+/** One side face of a timber, its left or its right, between its cuts, as a polygon in space. */
+export const sideFace = ({ timber, cuts }: DraftMember, side: 1 | -1): Point3[] => {
   const left = side * timber.halfMm
   const bottom = timber.depthMm / timber.cos
+  const reaches = (upper: boolean) =>
+    cuts
+      .filter((cut) => (cut.end === 'head') === upper)
+      .map((cut) => crossingAt(cut.crossing, left, 0))
+  const [fromMm, toMm] = [Math.max(...reaches(false)), Math.min(...reaches(true))]
   return [
     timberPoint(timber, fromMm, left, 0),
     timberPoint(timber, toMm, left, 0),
