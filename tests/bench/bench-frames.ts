@@ -46,7 +46,7 @@ const headings = `${'lines'.padStart(9)} ${'whole'.padStart(9)} ${'library'.padS
 
 /** The whole frame of each reference roof against the library's skeleton alone, on the same outline. */
 export function benchReferences(library: Library): void {
-  console.log('\nReference roofs: median ms of our lines alone, the whole frame, and the')
+  console.log('\nReference roofs: median processor ms of our lines alone, the whole frame, and the')
   console.log('straight-skeleton package’s lines alone on the same outline (one pitch, no gables)')
   console.log(`  ${''.padEnd(30)} members ${headings}`)
   const roofs = referenceRoofs()
@@ -79,7 +79,9 @@ export function benchReferences(library: Library): void {
 /** Growth with the number of corners, as the exponent of the closest power. */
 export function benchGrowth(library: Library): void {
   for (const alike of [false, true]) {
-    console.log(`\nComb houses, wings ${alike ? 'all alike' : 'of different sizes'}: median ms`)
+    console.log(
+      `\nComb houses, wings ${alike ? 'all alike' : 'of different sizes'}: median processor ms`,
+    )
     console.log(`  corners members ${headings}`)
     const points: (Medians & { n: number })[] = []
     for (const n of [8, 16, 32, 64] as const) {
