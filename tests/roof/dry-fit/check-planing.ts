@@ -3,7 +3,7 @@ import { toBuilding, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
 import { isAlongLine, isRafter } from './slopes.ts'
-import { surfaceHeight, type Plan, type Surface } from './surface.ts'
+import { distanceInside, surfaceHeight, type Plan, type Surface } from './surface.ts'
 import { dot, sub, type Vec } from './vec.ts'
 
 const PLANING_TOL_MM = 0.2
@@ -63,9 +63,11 @@ export function checkPlaning(complain: Complain, site: Site, piece: Piece): void
   if (!isRafter(piece.member) && !isAlongLine(piece.member)) return
   const { spec, surface } = site
   const middle = piece.member.setOutLengthMm / 2
-  const tops = [...piece.own, ...crossings(piece, surface)].map((own) => {
+  // over an overhang a member keeps to its own slopes, and is judged by them
+  const tops = [...piece.own, ...crossings(piece, surface)].flatMap((own) => {
     const [x, y, z] = toBuilding(piece.pose, own)
-    return { own, over: z - surfaceHeight(surface, x, y) - spec.standMm }
+    if (distanceInside(surface.roof, x, y) < -ON_CENTRE_MM) return []
+    return [{ own, over: z - surfaceHeight(surface, x, y) - spec.standMm }]
   })
   for (const end of ['head', 'foot'] as const) {
     for (const side of ['left', 'right'] as const) {

@@ -130,6 +130,35 @@ const waysOf = (next: Next): Parameters<typeof makeRoof>[2] => ({
   overhangMm: oneOf(next, [300, 450, 600]),
 })
 
+type Corner = [number, number]
+
+/** Corners no sharper than this, in or out, and no two sides nearer than this: what a house is built with. */
+const SHARPEST_DEG = 40
+const LEAST_GAP = 700
+
+function gapMm(a: Corner, [p, q]: [Corner, Corner]): number {
+  const [dx, dy] = [q[0] - p[0], q[1] - p[1]]
+  const share = ((a[0] - p[0]) * dx + (a[1] - p[1]) * dy) / (dx * dx + dy * dy)
+  const t = Math.min(1, Math.max(0, share))
+  return Math.hypot(a[0] - p[0] - t * dx, a[1] - p[1] - t * dy)
+}
+
+/** Whether a plan with moved corners is still one that somebody would build. */
+function isHouse(outline: Corner[]): boolean {
+  const n = outline.length
+  const at = (i: number): Corner => outline[(i + n) % n]!
+  return outline.every((corner, i) => {
+    const [before, after] = [at(i - 1), at(i + 1)]
+    const turn = (p: Corner): number => Math.atan2(p[1] - corner[1], p[0] - corner[0])
+    const opening = Math.abs(Math.sin((turn(before) - turn(after)) / 2))
+    if (opening < Math.sin((SHARPEST_DEG / 2) * (Math.PI / 180))) return false
+    return outline.every((_, k) => {
+      if (k === i || (k + 1) % n === i) return true
+      return gapMm(corner, [at(k), at(k + 1)]) >= LEAST_GAP
+    })
+  })
+}
+
 function rectilinear(next: Next): Roof {
   const sides = sidesOf(bodyOf(next))
   const pitches = pitchesOf(next, sides, next() < 0.6)
@@ -137,11 +166,17 @@ function rectilinear(next: Next): Roof {
   return makeRoof(outline, pitches, waysOf(next))
 }
 
-/** The same with every corner moved, or with each wing's end pushed aside: odd angles, splayed ends. */
 function skewed(next: Next): Roof {
   const sides = sidesOf(bodyOf(next))
+  const outline = movedOutline(next, sides)
+  if (!isHouse(outline)) return skewed(next)
+  return makeRoof(outline, pitchesOf(next, sides, false), waysOf(next))
+}
+
+/** Every corner moved, or each wing's end pushed aside, or one corner: odd angles, splayed ends. */
+function movedOutline(next: Next, sides: readonly Side[]): Corner[] {
   const moves = oneOf(next, ['corners', 'ends', 'one'] as const)
-  const moved = sides.map(({ x, y, isEnd }, i): [number, number] => {
+  const moved = sides.map(({ x, y, isEnd }, i): Corner => {
     const afterEnd = sides.at(i - 1)!.isEnd
     const chosen =
       moves === 'corners' || (moves === 'ends' ? isEnd || afterEnd : i % sides.length === 2)
@@ -151,8 +186,7 @@ function skewed(next: Next): Roof {
   })
   const turn = next() < 0.5 ? 0 : next() * 2 * Math.PI
   const [c, s] = [Math.cos(turn), Math.sin(turn)]
-  const outline = moved.map(([x, y]): [number, number] => [x * c - y * s, x * s + y * c])
-  return makeRoof(outline, pitchesOf(next, sides, false), waysOf(next))
+  return moved.map(([x, y]): Corner => [x * c - y * s, x * s + y * c])
 }
 
 export type House = { roof: Roof; spec: FrameSpec; refused: string[] }

@@ -1,5 +1,5 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
-import { distanceIn, heightOn, slopeOfEdge, type Slope } from './slopes.ts'
+import { heightOn, slopeOfEdge, type Slope } from './slopes.ts'
 
 export type Plan = readonly [number, number]
 
@@ -7,8 +7,8 @@ export type Plan = readonly [number, number]
 export type Face = { slope: Slope; plan: Plan[] }
 
 /**
- * The top of the roof over any point of the plan, set-out planes only (add the stand): inside the
- * outline the slope that the point lies under, outside it the slope whose overhang it is.
+ * The top of the roof over the plan, set-out planes only (add the stand): at each point the slope that
+ * it lies under. Over an overhang a member keeps to its own slopes, run on.
  */
 export type Surface = { roof: Roof; faces: Face[]; slopes: Slope[] }
 
@@ -65,50 +65,8 @@ export function faceAt(faces: readonly Face[], x: number, y: number): Face {
   return best
 }
 
-const isReflex = (before: Plan, corner: Plan, after: Plan): boolean =>
-  (corner[0] - before[0]) * (after[1] - corner[1]) -
-    (corner[1] - before[1]) * (after[0] - corner[0]) <
-  0
-
-/**
- * Over an overhang. Beside a corner two overhangs meet on the line that the hip or valley runs out
- * on: there the lower slope covers at an outward corner, the higher at an inward one. Past a gable
- * the roof runs on level, square to the wall.
- */
-function heightOutside(surface: Surface, outline: readonly Plan[], x: number, y: number): number {
-  const { roof } = surface
-  const n = outline.length
-  const at = (i: number): Plan => outline[(i + n) % n]!
-  const edgeOf = (i: number) => roof.edges[(i + n) % n]!
-  const gapTo = (i: number): number => {
-    const [px, py] = nearestOn(at(i), at(i + 1), x, y)
-    // where a gable and an eave are equally near, their corner, the eave has it
-    return Math.hypot(x - px, y - py) + (edgeOf(i).finish === 'gable' ? 1e-6 : 0)
-  }
-  const gaps = outline.map((_, i) => gapTo(i))
-  const edge = gaps.indexOf(Math.min(...gaps))
-  const [px, py] = nearestOn(at(edge), at(edge + 1), x, y)
-  if (edgeOf(edge).finish === 'gable') {
-    const face = faceAt(surface.faces, px, py)
-    return heightOn(face.slope, x, y)
-  }
-  const nearStart =
-    Math.hypot(px - at(edge)[0], py - at(edge)[1]) <
-    Math.hypot(px - at(edge + 1)[0], py - at(edge + 1)[1])
-  const [corner, other] = nearStart ? [edge, edge - 1] : [edge + 1, edge + 1]
-  const own = heightOn(slopeOfEdge(roof, edge), x, y)
-  if (edgeOf(other).finish === 'gable') return own
-  const next = heightOn(slopeOfEdge(roof, (other + n) % n), x, y)
-  const reflex = isReflex(at(corner - 1), at(corner), at(corner + 1))
-  return reflex ? Math.max(own, next) : Math.min(own, next)
-}
-
-/** Height of the set-out surface over any point of the plan, overhangs too. */
+/** Height of the set-out surface over a point of the plan, inside the outline. */
 export function surfaceHeight(surface: Surface, x: number, y: number): number {
-  const outline = planOutline(surface.roof)
-  if (!isInside(outline, x, y) && distanceToRim(outline, x, y) > 1e-6) {
-    return heightOutside(surface, outline, x, y)
-  }
   return heightOn(faceAt(surface.faces, x, y).slope, x, y)
 }
 
@@ -118,6 +76,3 @@ export function distanceInside(roof: Roof, x: number, y: number): number {
   const rim = distanceToRim(outline, x, y)
   return isInside(outline, x, y) ? rim : -rim
 }
-
-export const isOnPlateLine = (slope: Slope, x: number, y: number, looseMm: number): boolean =>
-  Math.abs(distanceIn(slope, x, y)) <= looseMm
