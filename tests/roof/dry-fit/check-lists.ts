@@ -5,6 +5,8 @@ import type { Complain } from './report.ts'
 const ALIKE_MM = 0.1
 const SUM_TOL = 0.01
 const MM3_PER_M3 = 1e9
+/** Two ways to one figure. */
+const SAME_SHARE = 1e-6
 
 const isSection = (a: Section, b: Section): boolean =>
   a.thicknessMm === b.thicknessMm && a.depthMm === b.depthMm
@@ -55,18 +57,21 @@ function checkTotals(complain: Complain, spec: FrameSpec): void {
     sum(spec.lines.filter((l) => kinds.includes(l.kind)).map((l) => l.trueLengthMm))
   near('ridge', spec.totals.ridgeMm, along('ridge'))
   near('hips', spec.totals.hipMm, along('hip', 'broken-hip'))
+  near('valleys', spec.totals.valleyMm, along('valley'))
+  near('eaves', spec.totals.eaveMm, along('eave'))
+  near('verges', spec.totals.vergeMm, along('verge'))
   near('roof area', spec.totals.roofAreaM2, sum(spec.planes.map((p) => p.areaM2)))
   const withEaves = sum(spec.planes.map((p) => p.areaWithEavesM2))
   near('roof area with eaves', spec.totals.roofAreaWithEavesM2, withEaves)
 }
 
-/** A piece weighs no less than its finished timber and no more than the bar it is cut from. */
+/** A piece is charged and carried as the bar it is cut from; what is sawn off weighs nothing extra. */
 export function checkWeight(complain: Complain, piece: Piece, densityKgM3: number): void {
   const { section, cutLengthMm, weightKg, mark } = piece.member
   const bar = (section.thicknessMm * section.depthMm * cutLengthMm * densityKgM3) / MM3_PER_M3
   const finished = (piece.solid.volume() * densityKgM3) / MM3_PER_M3
-  if (weightKg <= bar * 1.0001 && weightKg >= finished * 0.9999) return
-  const text = `weighs ${weightKg.toFixed(2)} kg; its bar ${bar.toFixed(2)}, finished ${finished.toFixed(2)}`
+  if (Math.abs(weightKg - bar) <= bar * SAME_SHARE && finished <= bar * (1 + SAME_SHARE)) return
+  const text = `weighs ${weightKg.toFixed(3)} kg; its bar ${bar.toFixed(3)}, finished ${finished.toFixed(3)}`
   complain({ check: 'numbers', marks: [mark], out: weightKg - bar, text })
 }
 

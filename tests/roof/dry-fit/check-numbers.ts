@@ -1,4 +1,4 @@
-import type { Cut } from '../../../shared/roof/roof-types.ts'
+import type { Cut, Member, Roof } from '../../../shared/roof/roof-types.ts'
 import { backingOfSlopes } from './own-slopes.ts'
 import {
   backingDeg,
@@ -12,7 +12,18 @@ import {
 import type { Complain, Complaint } from './report.ts'
 import type { Site } from './site.ts'
 import type { Backing } from './slopes.ts'
-import { angleDeg, cosDeg, dot, sinDeg, sub, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
+import {
+  angleDeg,
+  cosDeg,
+  dot,
+  length,
+  sinDeg,
+  sub,
+  tanDeg,
+  toDeg,
+  toVec,
+  type Vec,
+} from './vec.ts'
 
 /** The spec is exact, so what it says twice must agree to a hundredth of a millimetre. */
 export const LENGTH_TOL_MM = 0.01
@@ -20,6 +31,7 @@ export const ANGLE_TOL_DEG = 0.001
 
 /** A head's point this near the centre line is called central. */
 const CENTRAL_MM = 0.1
+const UNIT_TOL = 1e-9
 
 type Check = Complaint['check']
 
@@ -49,6 +61,15 @@ function checkAgainstSpace(complain: Complain, piece: Piece, sawn: SawnPlane): v
   const { point, normal } = sawn.cut.plane
   const n = toVec(normal)
   const marks = [piece.member.mark]
+  if (Math.abs(length(n) - 1) > UNIT_TOL) {
+    const text = `the normal of the ${sawn.cut.end} cut is not of length 1`
+    complain({ check: 'cut plane', marks, out: length(n) - 1, text })
+  }
+  const off = length(sub(toBuilding(piece.pose, sawn.point), toVec(point)))
+  if (off > LENGTH_TOL_MM) {
+    const text = `the plane of the ${sawn.cut.end} cut is not given where it crosses the top centre line, mm`
+    complain({ check: 'cut plane', marks, out: off, text })
+  }
   const turn = angleDeg(n, directionToBuilding(piece.pose, sawn.normal))
   if (turn > ANGLE_TOL_DEG) {
     const text = `the ${sawn.cut.end} cut marked from its angles is turned off its plane, degrees`
@@ -97,11 +118,43 @@ function checkAngles(complain: Complain, piece: Piece, cut: Cut, sawMaxTiltDeg: 
   }
   for (const angle of [cut.face, cut.edge, cut.edgeOtherTop]) {
     if (angle === null) continue
+    if (cut.longSide === 'none' && angle !== cut.face) {
+      const of = `edge bevel of the square ${cut.end} cut`
+      expectNear(complain, piece, 'numbers', of, angle.fromEdgeDeg, 90, ANGLE_TOL_DEG)
+    }
     const sum = angle.fromEdgeDeg + angle.fromSquareDeg
     if (Math.abs(sum - 90) > 1e-9) {
       const text = `an angle of the ${cut.end} cut does not sum to 90`
       complain({ check: 'numbers', marks, out: sum - 90, text })
     }
+  }
+}
+
+const sectionNames: Record<Member['role'], keyof Roof['sections']> = {
+  ridge: 'ridge',
+  hip: 'hip',
+  'broken-hip': 'hip',
+  valley: 'valley',
+  common: 'rafter',
+  'crown-end': 'rafter',
+  creeper: 'rafter',
+  'valley-creeper': 'rafter',
+  'cripple-creeper': 'rafter',
+  underpurlin: 'underpurlin',
+  'collar-tie': 'collarTie',
+  fascia: 'fascia',
+  barge: 'barge',
+}
+
+/** Every member is of the timber typed in for its role. */
+function checkSection(complain: Complain, piece: Piece, roof: Roof): void {
+  const { role, section, mark } = piece.member
+  const typed = roof.sections[sectionNames[role]]
+  for (const key of ['thicknessMm', 'depthMm'] as const) {
+    const out = section[key] - (typed?.[key] ?? 0)
+    if (Math.abs(out) <= LENGTH_TOL_MM) continue
+    const text = `its section's ${key} is not the one typed in, mm`
+    complain({ check: 'numbers', marks: [mark], out, text })
   }
 }
 
@@ -200,6 +253,7 @@ export function checkNumbers(complain: Complain, site: Site, piece: Piece): void
     checkAngles(complain, piece, sawn.cut, site.settings.sawMaxTiltDeg)
     if (backed !== null) checkOtherTop(complain, piece, sawn, backed)
   }
+  checkSection(complain, piece, site.roof)
   checkLengths(complain, piece, site.roof.tailAllowanceMm)
   checkBirdsmouth(complain, piece)
   checkHand(complain, piece)

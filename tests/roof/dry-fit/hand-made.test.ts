@@ -85,11 +85,11 @@ function common(mark: string, x: number, way: 1 | -1): Member {
     cutLengthMm,
     cuts: [
       squareCut('head', HEAD, 'R1', {
-        point: { x, y: RUN - way * RIDGE_HALF, z: 0 },
+        point: { x, y: RUN - way * RIDGE_HALF, z: STAND + (RUN - RIDGE_HALF) * tan },
         normal: { x: 0, y: way, z: 0 },
       }),
       squareCut('tail', -tail, null, {
-        point: { x, y: heelY - way * 300, z: 0 },
+        point: { x, y: heelY - way * 300, z: STAND - 300 * tan },
         normal: { x: 0, y: -way, z: 0 },
       }),
     ],

@@ -25,21 +25,15 @@ export type Piece = {
   box: Box
 }
 
-/** How the timbers beside the frame lie: with their top in their slope, or standing plumb. */
-export type Lie = { slopes: readonly Slope[]; tail: 'plumb' | 'square' }
-
-function liesInSlope(member: Member, tail: Lie['tail']): boolean {
-  return member.role === 'underpurlin' || (member.role === 'fascia' && tail === 'square')
-}
-
-export function poseOf(member: Member, lie: Lie): Pose {
+/** Stands plumb, or lies with its top in its slope where the spec says so. */
+export function poseOf(member: Member, slopes: readonly Slope[]): Pose {
   const { from, to } = member.axis
   const plan = unit([to.x - from.x, to.y - from.y, 0])
   const plumb: Vec = [0, 0, 1]
   const origin: Vec = [from.x, from.y, from.z]
   const along = combine([cosDeg(member.pitchDeg), plan], [sinDeg(member.pitchDeg), plumb])
-  if (liesInSlope(member, lie.tail)) {
-    const up = slopeNormal(lie.slopes[member.planes[0]!]!)
+  if (member.topInSlope === true) {
+    const up = slopeNormal(slopes[member.planes[0]!]!)
     return { origin, along, left: cross(up, along), up }
   }
   const up = combine([-sinDeg(member.pitchDeg), plan], [cosDeg(member.pitchDeg), plumb])
@@ -142,14 +136,14 @@ function cutBirdsmouth(kit: SolidKit, member: Member, solid: Solid): Solid {
   return solid.subtract(wedge)
 }
 
-export function rebuildMember(kit: SolidKit, member: Member, lie: Lie): Piece {
+export function rebuildMember(kit: SolidKit, member: Member, slopes: readonly Slope[]): Piece {
   const sawn = member.cuts.map((cut) => sawnPlane(member, cut))
   const sawnBar = sawn.reduce(
     (solid, plane) => keep(solid, plane.normal, plane.point),
     blank(kit, member, sawn),
   )
   const ownSolid = cutBirdsmouth(kit, member, sawnBar)
-  const pose = poseOf(member, lie)
+  const pose = poseOf(member, slopes)
   const own = solidVertices(ownSolid)
   const corners = own.map((p) => toBuilding(pose, p))
   const { along: a, left: l, up: u, origin: o } = pose

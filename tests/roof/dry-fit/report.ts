@@ -1,6 +1,7 @@
 /** One thing that the dry fit complains of: which check, which pieces, how far out. */
 export type Complaint = {
   check:
+    | 'surface'
     | 'numbers'
     | 'cut plane'
     | 'long and short points'

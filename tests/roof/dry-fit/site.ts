@@ -1,6 +1,6 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { plateFlat, plateSolid } from './plates.ts'
-import { rebuildMember, type Lie, type Piece } from './rebuild-member.ts'
+import { rebuildMember, type Piece } from './rebuild-member.ts'
 import type { Flat, Solid, SolidKit } from './solid-kit.ts'
 import { surfaceOf, type Surface } from './surface.ts'
 
@@ -29,7 +29,6 @@ export type Site = {
   spec: FrameSpec
   settings: JudgeSettings
   surface: Surface
-  lie: Lie
   ring: Flat
   plates: Solid
   pieces: Piece[]
@@ -42,11 +41,10 @@ export function standUp(
   settings: JudgeSettings = plainSettings,
 ): Site {
   const surface = surfaceOf(roof, spec)
-  const lie = { slopes: surface.slopes, tail: roof.tail }
   const ring = plateFlat(kit, roof)
   const plates = plateSolid(ring)
-  const pieces = spec.members.map((member) => rebuildMember(kit, member, lie))
-  return { kit, roof, spec, settings, surface, lie, ring, plates, pieces }
+  const pieces = spec.members.map((member) => rebuildMember(kit, member, surface.slopes))
+  return { kit, roof, spec, settings, surface, ring, plates, pieces }
 }
 
 /** Gives the library its memory back. */

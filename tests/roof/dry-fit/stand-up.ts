@@ -7,6 +7,7 @@ import { checkPlace, checkTop } from './check-place.ts'
 import { checkPlaning } from './check-planing.ts'
 import { checkRounding } from './check-rounding.ts'
 import { checkSeat } from './check-seats.ts'
+import { checkSurface } from './check-surface.ts'
 import { Facets } from './facets.ts'
 import type { Piece } from './rebuild-member.ts'
 import { collector, type Complain, type Complaint } from './report.ts'
@@ -73,6 +74,7 @@ export function dryFit(
   const facets = new Facets()
   checkMarks(complain, spec)
   checkLists(complain, spec)
+  checkSurface(complain, site)
   site.pieces.forEach((piece, index) => {
     checkPiece(complain, site, facets, piece)
     checkOverlaps(complain, site, piece, site.pieces.slice(index + 1))
