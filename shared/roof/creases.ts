@@ -1,5 +1,5 @@
 import type { Point2, Point3 } from './roof-types.ts'
-import { at } from './slopes.ts'
+import { at, slopeHeightMm } from './slopes.ts'
 import type { PlateLines } from './slopes.ts'
 import { distance2 } from './vector.ts'
 
@@ -103,6 +103,28 @@ const joinStraight = ({ nodes, creases }: CreaseNet): CreaseNet => {
   return { nodes, creases: left }
 }
 
+/** Two creases between the same two nodes lie on each other: what is between them is no part of a slope. */
+const dropDoubles = ({ nodes, creases }: CreaseNet): CreaseNet => {
+  const left = [...creases]
+  for (let a = 0; a < left.length; a++) {
+    for (let b = a + 1; b < left.length; b++) {
+      const one = at(left, a)
+      const other = seenFrom(at(left, b), one.from)
+      if (other.from !== one.from || other.to !== one.to) continue
+      const [inRight, inLeft] = [
+        isSameSide(one.right, other.left),
+        isSameSide(one.left, other.right),
+      ]
+      left.splice(b, 1)
+      if (inRight && inLeft) left.splice(a, 1)
+      else if (inRight) left[a] = { ...one, right: other.right }
+      else if (inLeft) left[a] = { ...one, left: other.left }
+      b = a
+    }
+  }
+  return { nodes, creases: left }
+}
+
 /** Leaves out nodes that no crease ends in; plate corners stay. */
 const usedNodes = ({ nodes, creases }: CreaseNet): CreaseNet => {
   const used = new Set(creases.flatMap((c) => [c.from, c.to]))
@@ -115,6 +137,27 @@ const usedNodes = ({ nodes, creases }: CreaseNet): CreaseNet => {
   }
 }
 
+/** Nodes drawn together lie a little off some slopes: their height is the mean of those that meet there. */
+const settleHeights = (plates: PlateLines, { nodes, creases }: CreaseNet): CreaseNet => {
+  const settled = nodes.map((node, n): RoofNode => {
+    if (node.corner !== null) return node
+    const sides = creases
+      .filter((c) => c.from === n || c.to === n)
+      .flatMap((c) => [c.left, c.right])
+      .flatMap((side) => ('slope' in side ? [side.slope] : []))
+    const slopes = [...new Set(sides)].map((slope) => at(plates.slopes, slope))
+    const sum = slopes.reduce((total, slope) => total + slopeHeightMm(slope, node.point), 0)
+    return { ...node, point: { ...node.point, z: sum / slopes.length } }
+  })
+  return { nodes: settled, creases }
+}
+
 /** Nodes and creases of the roof: no crease shorter than half a millimetre, none broken without a reason. */
-export const roofCreases = (plates: PlateLines): CreaseNet =>
-  usedNodes(joinStraight(joinNear(rawNet(plates))))
+export const roofCreases = (plates: PlateLines): CreaseNet => {
+  let net = rawNet(plates)
+  for (let count = Infinity; net.creases.length < count;) {
+    count = net.creases.length
+    net = joinStraight(dropDoubles(joinNear(net)))
+  }
+  return settleHeights(plates, usedNodes(net))
+}

@@ -9,6 +9,8 @@ import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
  * below what a tape tells apart.
  */
 export const touchMm = 0.001
+/** What comes this near to a node takes part in it: no saw or tape tells the two apart. */
+export const nearMm = 0.5
 /** A corner that nears a front by less than this per mm of height does not come to it within a roof. */
 const leastApproach = 1e-9
 /** Fronts this near to antiparallel (sine) have no corner that can be followed. */
@@ -65,8 +67,8 @@ const splitHeight = (
   const rate = dot2(inward, sub2(corner.velocity, start.velocity))
   if (rate > -leastApproach) return Infinity
   const gapMm = dot2(inward, sub2(cornerAt(corner, loop.zMm), cornerAt(start, loop.zMm)))
-  if (gapMm < 0) return Infinity
-  const zMm = loop.zMm + gapMm / -rate
+  if (gapMm < -2 * nearMm) return Infinity
+  const zMm = loop.zMm + Math.max(0, gapMm) / -rate
   if (zMm >= beforeMm) return Infinity
   const point = cornerAt(corner, zMm)
   const past = dot2(along, sub2(point, cornerAt(start, zMm)))

@@ -1,16 +1,19 @@
-import type { Point3 } from './roof-types.ts'
+import type { Point2, Point3 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import { contactsAt } from './wavefront-contacts.ts'
 import type { Contacts, WavePiece } from './wavefront-contacts.ts'
-import { cornerVelocity, nextEvent } from './wavefront-events.ts'
+import { cornerAt, cornerVelocity, nearMm, nextEvent } from './wavefront-events.ts'
 import type { WaveEvent } from './wavefront-events.ts'
 import { alignFronts, fitOf, runOneWay } from './wavefront-lines.ts'
 import { closePairs, linkPieces } from './wavefront-links.ts'
 import type { Front, Wave, WaveArc, WaveCorner, WaveLoop, WaveRefusal } from './wavefront-types.ts'
-import { cross2, distance2, sub2 } from './vector.ts'
+import { add2, cross2, distance2, scale2, sub2 } from './vector.ts'
 
 /** A front this short between two plates in one line is there because the plates are a little off it. */
 const jogMm = 2.5
+
+/** Fronts this near to parallel (sine) cross too far off to say where. */
+const leastCrossing = 1e-4
 
 /** The wave while it runs. */
 type Run = {
@@ -63,9 +66,9 @@ const meet = (run: Run, before: number, after: number): boolean => {
 /** Plates a little off one line, with a short piece of another front left between them. */
 const noteJogs = (run: Run, loop: WaveLoop) => {
   loop.fronts.forEach((_, k) => {
-    const lengthMm = distance2(at(loop.corners, k).point, at(loop.corners, k + 1).point)
-    if (lengthMm > jogMm || at(loop.corners, k).fromMm !== loop.zMm) return
-    if (at(loop.corners, k + 1).fromMm !== loop.zMm) return
+    const [start, end] = [at(loop.corners, k), at(loop.corners, k + 1)]
+    if (start.fromMm !== loop.zMm && end.fromMm !== loop.zMm) return
+    if (distance2(cornerAt(start, loop.zMm), cornerAt(end, loop.zMm)) > jogMm) return
     const [before, after] = [at(loop.fronts, k - 1), at(loop.fronts, k + 1)]
     const [a, b] = [at(run.fronts, before), at(run.fronts, after)]
     if (before === after || a.gable || b.gable || a.speed !== b.speed || !runOneWay(a, b)) return
@@ -147,27 +150,31 @@ const overEvent = (run: Run, loop: WaveLoop, event: WaveEvent): WaveLoop[] => {
     const { place, corners, touched } = at(contacts.points, after.from)
     if (!touched) return at(loop.corners, at(corners, 0))
     if (meet(run, before.front, after.front)) return null
-    const velocity = cornerVelocity(at(run.fronts, before.front), at(run.fronts, after.front))
-    return { point: place, fromMm: event.zMm, velocity, node: nodeAt(after.from) }
+    const [a, b] = [at(run.fronts, before.front), at(run.fronts, after.front)]
+    const point = crossingAt(a, b, event.zMm, place)
+    return { point, fromMm: event.zMm, velocity: cornerVelocity(a, b), node: nodeAt(after.from) }
   }
   const loops = followLoops(open, linkPieces(run.fronts, contacts, open), cornerOf, event.zMm)
   for (const left of loops) noteJogs(run, left)
   return loops
 }
 
-/** Where the lines of two fronts cross, near the corner they share. */
-const startCorner = (before: Front, after: Front): { x: number; y: number } => {
-  const sine = cross2(before.along, after.along)
-  if (Math.abs(sine) < 1e-6) return after.from
-  const t = cross2(sub2(after.from, before.from), after.along) / sine
-  return { x: before.from.x + before.along.x * t, y: before.from.y + before.along.y * t }
+/** Where two fronts cross at a height, when that is near to `place`; otherwise `place` itself. */
+const crossingAt = (a: Front, b: Front, zMm: number, place: Point2): Point2 => {
+  const sine = cross2(a.along, b.along)
+  if (Math.abs(sine) < leastCrossing) return place
+  const [p, q] = [a, b].map((front) => add2(front.from, scale2(front.inward, front.speed * zMm)))
+  if (p === undefined || q === undefined) return place
+  const found = add2(p, scale2(a.along, cross2(sub2(q, p), b.along) / sine))
+  return distance2(found, place) <= 4 * nearMm ? found : place
 }
 
 const runOnce = (fronts: readonly Front[], owner: number[]): Run => {
   const corners = fronts.map((front, k): WaveCorner => {
     const before = at(fronts, k - 1)
-    const moved = distance2(before.to, front.from) > 0 ? startCorner(before, front) : front.from
-    return { point: moved, fromMm: 0, velocity: cornerVelocity(before, front), node: k }
+    const isKept = distance2(before.to, front.from) === 0
+    const point = isKept ? front.from : crossingAt(before, front, 0, front.from)
+    return { point, fromMm: 0, velocity: cornerVelocity(before, front), node: k }
   })
   const nodes = corners.map(({ point }) => ({ ...point, z: 0 }))
   const run: Run = { fronts, nodes, arcs: [], owner, align: null, refusal: null }
