@@ -18,6 +18,8 @@ type Props = {
  */
 export function PopPanel({ anchor, title, onClose, children }: Props) {
   const titleRef = useRef<HTMLHeadingElement>(null)
+  const contentRef = useRef<HTMLDivElement>(null)
+  const bodyRef = useRef<HTMLDivElement>(null)
   const virtual = useMemo(
     () => ({ current: { getBoundingClientRect: () => rectOf(anchor) } }),
     [anchor],
@@ -27,15 +29,17 @@ export function PopPanel({ anchor, title, onClose, children }: Props) {
       <Popover.Anchor virtualRef={virtual} />
       <Popover.Portal>
         <Popover.Content
+          ref={contentRef}
           aria-label={title}
-          side="bottom"
+          side={isTall(anchor) ? 'left' : 'bottom'}
           sideOffset={10}
           collisionPadding={12}
           onOpenAutoFocus={(event) => {
-            // Under a finger a field would bring the keyboard up over the drawing.
-            if (!isTouched()) return
             event.preventDefault()
-            titleRef.current?.focus()
+            // Under a finger a field would bring the keyboard up over the drawing.
+            const first = isTouched() ? null : firstField(bodyRef.current)
+            ;(first ?? titleRef.current)?.focus()
+            if (anchor) clearOf(anchor, contentRef.current)
           }}
           onCloseAutoFocus={(event) => {
             event.preventDefault()
@@ -54,11 +58,32 @@ export function PopPanel({ anchor, title, onClose, children }: Props) {
               <X size={22} aria-hidden />
             </Popover.Close>
           </div>
-          {children}
+          <div ref={bodyRef}>{children}</div>
         </Popover.Content>
       </Popover.Portal>
     </Popover.Root>
   )
+}
+
+/** The choice that is taken, or the first field. */
+function firstField(body: HTMLElement | null): HTMLElement | null {
+  return body?.querySelector<HTMLElement>('input:checked') ?? body?.querySelector('input') ?? null
+}
+
+function isTall(anchor: Element | null): boolean {
+  const { width, height } = rectOf(anchor)
+  return height > width
+}
+
+const sheetGapPx = 24
+const headRoomPx = 72
+
+/** Scrolls what a sheet is about up from under it. */
+function clearOf(anchor: Element, sheet: HTMLElement | null): void {
+  if (!sheet || !window.matchMedia('(max-width: 639px)').matches) return
+  const { top, bottom } = rectOf(anchor)
+  const overPx = bottom + sheetGapPx - (window.innerHeight - sheet.offsetHeight)
+  if (overPx > 0) window.scrollBy(0, Math.min(overPx, Math.max(top - headRoomPx, 0)))
 }
 
 function rectOf(anchor: Element | null): DOMRect {

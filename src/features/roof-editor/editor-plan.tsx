@@ -1,6 +1,7 @@
-import { memo, useMemo, useState } from 'react'
+import { memo, useCallback, useMemo, useState } from 'react'
 import { platesOfForm } from '../../../shared/revisions/form-outline.ts'
 import type { FormReading } from '../../../shared/revisions/roof-of-form.ts'
+import { isWingShape } from '../../../shared/revisions/wing-form.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
 import { RoofPlan } from '../../drawings/roof-plan.tsx'
 import { Field } from '../../ui/field.tsx'
@@ -63,7 +64,9 @@ export function EditorPlan({ reading, framed, units, selected, onPick }: Props) 
           {view === 'outline' ? <GridField gridMm={gridMm} onChange={setGridMm} /> : null}
         </div>
       ) : null}
-      {view === 'outline' ? (
+      {!isWhole && isWingShape(form.shape) ? (
+        <p className="p-4 text-ink-soft">The plan is drawn here once its measures are typed.</p>
+      ) : view === 'outline' ? (
         <OutlineEditor
           key={form.shape}
           roof={current}
@@ -106,7 +109,7 @@ function useFaults(reading: FormReading) {
 
 function GridField({ gridMm, onChange }: { gridMm: number; onChange: (mm: number) => void }) {
   return (
-    <Field label="Snap to" className="flex items-center gap-2 [&>label]:mb-0">
+    <Field label="Snap to" className="flex items-center gap-2 whitespace-nowrap [&>label]:mb-0">
       <Select value={gridMm} onChange={(event) => onChange(Number(event.target.value))}>
         {grids.map((mm) => (
           <option key={mm} value={mm}>
@@ -125,13 +128,17 @@ function OutlineEditor({ roof, spec, faults, units, gridMm }: EditorProps & { gr
   const actions = useOutlineActions()
   const [picked, setPicked] = useState<{ part: OutlinePart; handle: Element | null } | null>(null)
   const close = () => setPicked(null)
+  const pick = useCallback(
+    (next: OutlinePart, handle: Element | null) => setPicked({ part: next, handle }),
+    [],
+  )
   const part = picked?.part ?? null
   return (
     <>
       <OutlineDrawing
         {...{ roof, spec, faults, units, gridMm, maxHeightPx, actions }}
         picked={part}
-        onPick={(next, handle) => setPicked({ part: next, handle })}
+        onPick={pick}
       />
       {part?.kind === 'edge' ? (
         <EdgePanel
@@ -158,8 +165,14 @@ function OutlineEditor({ roof, spec, faults, units, gridMm }: EditorProps & { gr
           onClose={close}
         />
       ) : null}
+      {part ? <SheetRoom /> : null}
     </>
   )
+}
+
+/** On a phone the panel is a sheet over the foot of the page: what it is about can be scrolled clear of it. */
+function SheetRoom() {
+  return <div aria-hidden className="h-[45dvh] sm:hidden" />
 }
 
 function StillToType({ reading }: { reading: FormReading }) {

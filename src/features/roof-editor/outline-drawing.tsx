@@ -1,4 +1,4 @@
-import { memo, type RefObject, useEffect, useMemo, useRef, useState } from 'react'
+import { memo, type RefObject, useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { type PlanDrawing, planDrawing } from '../../../shared/drawing/plan-drawing.ts'
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
@@ -35,64 +35,73 @@ const largestZoom = 8
 
 /** The plan as an outline to change: corners to drag, edges to tap, what is wrong marked on it. */
 export function OutlineDrawing(props: Props) {
-  const { roof, spec, units, gridMm, maxHeightPx, actions, onPick } = props
+  const { roof, units, gridMm, maxHeightPx, picked, faults, actions, onPick } = props
   const [boxRef, boxWidthPx] = useWidth<HTMLDivElement>(pageWidthPx)
   const svgRef = useRef<SVGSVGElement>(null)
   const [zoom, setZoom] = useState(1)
-  const laidOutZoom = useRested(zoom)
   const [moved, setMoved] = useState<number | null>(null)
-  const drawing = useMemo(
-    () =>
-      planDrawing(roof, spec && { ...spec, members: [], cutLines: [] }, {
-        widthPx: Math.max(boxWidthPx, 200) * laidOutZoom,
-        maxHeightPx: maxHeightPx * laidOutZoom,
-        mode: 'edit',
-        units,
-        problems: [],
-        firstMarks: noMarks,
-      }),
-    [roof, spec, boxWidthPx, maxHeightPx, laidOutZoom, units],
-  )
-  const zoomTo = usePlanWindow(boxRef, drawing?.view ?? null, {
-    zoom,
-    setZoom,
-    maxZoom: largestZoom,
-  })
-  const focusNextRef = useFocusAfter(svgRef, roof)
-  const pick = (part: OutlinePart) =>
-    onPick(part, svgRef.current?.querySelector(`[data-${part.kind}="${part.index}"]`) ?? null)
-  const handles: HandleActions = {
-    onPick: pick,
-    onNudge: (corner, byMm) => {
+  const drawing = useOutlinePlan(props, boxWidthPx, useRested(zoom))
+  const { view } = drawing
+  const zoomTo = usePlanWindow(boxRef, view, { zoom, setZoom, maxZoom: largestZoom })
+  const focusCorner = useFocusAfter(svgRef, roof)
+  const handles = useMemo((): HandleActions => {
+    return {
+      onPick: (part) =>
+        onPick(part, svgRef.current?.querySelector(`[data-${part.kind}="${part.index}"]`) ?? null),
+      onNudge: (corner, byMm) => {
+        setMoved(corner)
+        actions.nudge(corner, byMm)
+      },
+      onTakeOut: (corner) => {
+        if (actions.takeOut(corner)) focusCorner(Math.max(corner - 1, 0))
+      },
+      onAddOn: (edge) => {
+        if (actions.addOn(edge)) focusCorner(edge + 1)
+      },
+    }
+  }, [actions, focusCorner, onPick])
+  const drag = useCornerDrag(svgRef, {
+    view,
+    outline: roof.outline,
+    gridMm,
+    onDrop: (corner, at) => {
       setMoved(corner)
-      actions.nudge(corner, byMm)
+      actions.drop(corner, at)
     },
-    onTakeOut: (corner) => {
-      if (actions.takeOut(corner)) focusNextRef.current = Math.max(corner - 1, 0)
-    },
-    onAddOn: (edge) => {
-      if (actions.addOn(edge)) focusNextRef.current = edge + 1
-    },
-  }
-  if (!drawing) return null
+    onTap: (index) => handles.onPick({ kind: 'corner', index }),
+  })
+  const underWay = drag ? roof.outline.with(drag.corner, drag.at) : null
   return (
     <figure className="m-0 flex min-w-0 flex-col gap-2">
+      <p
+        role="status"
+        aria-live={drag ? 'off' : 'polite'}
+        className="flex min-h-11 items-center text-sm font-semibold tabular-nums"
+      >
+        {sayWhere(drag, underWay ?? roof.outline, moved, units)}
+      </p>
       <div
         ref={boxRef}
         style={{ maxHeight: maxHeightPx }}
         className={`max-w-full overflow-auto ${zoom > 1 ? 'cursor-grab rounded-md border border-rule' : ''}`}
       >
         <div style={{ width: `${zoom * 100}%` }}>
-          <OutlineSvg
-            {...props}
-            svgRef={svgRef}
-            drawing={drawing}
-            gridMm={gridMm}
-            handles={handles}
-            moved={moved}
-            onMoved={setMoved}
-            onPickPart={pick}
-          />
+          <svg
+            ref={svgRef}
+            viewBox={`0 0 ${view.widthPx} ${view.heightPx}`}
+            role="group"
+            aria-label="Outline of the plates: edges and corners"
+            className="block h-auto w-full max-w-none font-sans select-none"
+          >
+            <OutlineGround drawing={drawing} isFaint={drag !== null} />
+            <g className={drag ? 'invisible' : undefined}>
+              <OutlineHandles {...{ roof, view, units, picked }} actions={handles} />
+              <OutlineFaultMarks {...{ roof, view, faults }} />
+            </g>
+            {drag && underWay ? (
+              <OutlineUnderWay outline={underWay} {...{ drag, view, units }} />
+            ) : null}
+          </svg>
         </div>
       </div>
       <figcaption className="flex flex-wrap items-center justify-between gap-2">
@@ -103,58 +112,21 @@ export function OutlineDrawing(props: Props) {
   )
 }
 
-type SvgProps = Props & {
-  svgRef: RefObject<SVGSVGElement | null>
-  drawing: PlanDrawing
-  handles: HandleActions
-  /** The corner that was moved last, whose measures are said. */
-  moved: number | null
-  onMoved: (corner: number) => void
-  onPickPart: (part: OutlinePart) => void
-}
-
-/** Only this follows the pointer: the plan under it stands still until the corner is let go. */
-function OutlineSvg(props: SvgProps) {
-  const { svgRef, drawing, roof, units, gridMm, faults, picked, handles, actions } = props
-  const { view } = drawing
-  const drag = useCornerDrag(svgRef, {
-    view,
-    outline: roof.outline,
-    gridMm,
-    onDrop: (corner, at) => {
-      props.onMoved(corner)
-      actions.drop(corner, at)
-    },
-    onTap: (index) => props.onPickPart({ kind: 'corner', index }),
-  })
-  const underWay = drag ? roof.outline.with(drag.corner, drag.at) : null
-  return (
-    <>
-      <svg
-        ref={svgRef}
-        viewBox={`0 0 ${view.widthPx} ${view.heightPx}`}
-        role="group"
-        aria-label="Outline of the plates: edges and corners"
-        className="block h-auto w-full max-w-none font-sans select-none"
-      >
-        <OutlineGround drawing={drawing} isFaint={drag !== null} />
-        <g className={drag ? 'invisible' : undefined}>
-          <OutlineHandles {...{ roof, view, units, picked }} actions={handles} />
-          <OutlineFaultMarks {...{ roof, view, faults }} />
-        </g>
-        {drag && underWay ? (
-          <OutlineUnderWay outline={underWay} {...{ drag, view, units }} />
-        ) : null}
-      </svg>
-      <p
-        role="status"
-        aria-live={drag ? 'off' : 'polite'}
-        className="min-h-12 text-sm font-semibold tabular-nums"
-      >
-        {sayWhere(drag, underWay ?? roof.outline, props.moved, units)}
-      </p>
-    </>
-  )
+/** Plates, tails, roof lines and dimensions; no timbers, so that the outline is easy to take hold of. */
+function useOutlinePlan(props: Props, boxWidthPx: number, zoom: number): PlanDrawing {
+  const { roof, spec, maxHeightPx, units } = props
+  return useMemo(() => {
+    const drawing = planDrawing(roof, spec && { ...spec, members: [], cutLines: [] }, {
+      widthPx: Math.max(boxWidthPx, 200) * zoom,
+      maxHeightPx: maxHeightPx * zoom,
+      mode: 'edit',
+      units,
+      problems: [],
+      firstMarks: noMarks,
+    })
+    if (!drawing) throw new Error('An outline is drawn only where every corner can be read.')
+    return drawing
+  }, [roof, spec, boxWidthPx, maxHeightPx, zoom, units])
 }
 
 const OutlineGround = memo(function OutlineGround(props: {
@@ -185,11 +157,13 @@ function sayWhere(
 
 /** Once the outline has followed a corner added or taken out, the cursor stands on a corner again. */
 function useFocusAfter(svgRef: RefObject<SVGSVGElement | null>, roof: Roof) {
-  const next = useRef<number | null>(null)
+  const nextRef = useRef<number | null>(null)
   useEffect(() => {
-    if (next.current === null) return
-    svgRef.current?.querySelector<SVGElement>(`[data-corner="${next.current}"]`)?.focus()
-    next.current = null
+    if (nextRef.current === null) return
+    svgRef.current?.querySelector<SVGElement>(`[data-corner="${nextRef.current}"]`)?.focus()
+    nextRef.current = null
   }, [svgRef, roof.outline.length])
-  return next
+  return useCallback((corner: number) => {
+    nextRef.current = corner
+  }, [])
 }

@@ -2,8 +2,8 @@ import { pointAlong } from '../../../shared/drawing/drawing-geometry.ts'
 import type { PlanView } from '../../../shared/drawing/plan-view.ts'
 import { outlineCrossings } from '../../../shared/outline/outline-geometry.ts'
 import type { Point2, Roof } from '../../../shared/roof/roof-types.ts'
+import { edgeLine } from './outline-chips.ts'
 import type { OutlineFault } from './outline-faults.ts'
-import { edgeLine } from './outline-handles.tsx'
 
 type Props = { roof: Roof; view: PlanView; faults: readonly OutlineFault[] }
 

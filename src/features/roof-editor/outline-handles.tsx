@@ -1,10 +1,8 @@
-import type { KeyboardEvent } from 'react'
-import { pointAlong, segmentLength } from '../../../shared/drawing/drawing-geometry.ts'
-import { edgeOutward } from '../../../shared/drawing/overhang-outline.ts'
+import { type KeyboardEvent, memo } from 'react'
 import type { PlanView } from '../../../shared/drawing/plan-view.ts'
-import { textWidthPx } from '../../../shared/drawing/text-size.ts'
 import type { Roof } from '../../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
+import { edgeChips, edgeLine, type PlanChip } from './outline-chips.ts'
 import { cornerWords, edgeWords } from './outline-words.ts'
 
 /** What can be picked on an outline: a plate edge or a corner, counted from 0. */
@@ -27,9 +25,11 @@ type Props = {
 }
 
 /** The edges to tap and the corners to drag, all of them in reach of the Tab key. */
-export function OutlineHandles({ roof, view, units, picked, actions }: Props) {
+export const OutlineHandles = memo(function OutlineHandles(props: Props) {
+  const { roof, view, units, picked, actions } = props
   const isPicked = (kind: OutlinePart['kind'], index: number) =>
     picked?.kind === kind && picked.index === index
+  const chips = edgeChips(roof, view)
   return (
     <>
       <g>
@@ -37,6 +37,7 @@ export function OutlineHandles({ roof, view, units, picked, actions }: Props) {
           <EdgeHandle
             key={index}
             index={index}
+            chip={chips.find(({ edge }) => edge === index)}
             {...{ roof, view, units, actions }}
             isPicked={isPicked('edge', index)}
           />
@@ -54,13 +55,15 @@ export function OutlineHandles({ roof, view, units, picked, actions }: Props) {
       </g>
     </>
   )
-}
+})
 
 type HandleProps = Omit<Props, 'picked'> & { index: number; isPicked: boolean }
 
 const fingerPx = 30
 
-function EdgeHandle({ roof, view, units, index, isPicked, actions }: HandleProps) {
+type EdgeProps = HandleProps & { chip: PlanChip | undefined }
+
+function EdgeHandle({ roof, view, units, index, isPicked, actions, chip }: EdgeProps) {
   const line = edgeLine(roof, view, index)
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.key === 'Enter' || event.key === ' ') actions.onPick({ kind: 'edge', index })
@@ -86,42 +89,30 @@ function EdgeHandle({ roof, view, units, index, isPicked, actions }: HandleProps
         strokeLinecap="round"
         className={`[stroke-width:6] group-focus-visible:stroke-chalk ${isPicked ? 'stroke-chalk' : 'stroke-transparent group-hover:stroke-rule'}`}
       />
-      <EdgeChip roof={roof} view={view} index={index} />
+      <EdgeChip chip={chip} />
     </g>
   )
 }
 
-const chipSizePx = 12
-const chipOffPx = 15
-
 /** Its pitch, or that it is a gable, inside the plate. */
-function EdgeChip({ roof, view, index }: Pick<HandleProps, 'roof' | 'view' | 'index'>) {
-  const edge = roof.edges[index]
-  const line = edgeLine(roof, view, index)
-  if (!edge) return null
-  const pitch = edge.finish === 'eave' && Number.isFinite(edge.pitchDeg) ? `${edge.pitchDeg}°` : ''
-  const text = edge.finish === 'gable' ? 'Gable' : pitch
-  const widthPx = textWidthPx(text, chipSizePx) + 8
-  if (text === '' || segmentLength(line) < widthPx + 12) return null
-  const outward = edgeOutward(roof.outline, index)
-  const middle = pointAlong(line, 0.5)
-  const reachPx = chipOffPx + (Math.abs(outward.x) * widthPx) / 2
-  const at = { x: middle.x - outward.x * reachPx, y: middle.y + outward.y * reachPx }
+function EdgeChip({ chip }: { chip: PlanChip | undefined }) {
+  if (!chip) return null
+  const { centre, widthPx, heightPx, text, sizePx } = chip
   return (
-    <g aria-hidden="true" transform={`translate(${at.x} ${at.y})`}>
+    <g aria-hidden="true" transform={`translate(${centre.x} ${centre.y})`}>
       <rect
         x={-widthPx / 2}
-        y={-9}
+        y={-heightPx / 2}
         width={widthPx}
-        height={18}
+        height={heightPx}
         rx={4}
         className="fill-sheet stroke-rule"
       />
       <text
         dy="0.35em"
         textAnchor="middle"
-        fontSize={chipSizePx}
-        className={`tabular-nums ${edge.finish === 'gable' ? 'fill-ink font-extrabold' : 'fill-chalk font-semibold'}`}
+        fontSize={sizePx}
+        className={`tabular-nums ${chip.isStrong ? 'fill-ink font-extrabold' : 'fill-chalk font-semibold'}`}
       >
         {text}
       </text>
@@ -187,10 +178,4 @@ function CornerHandle({ roof, view, units, index, isPicked, actions }: HandlePro
       />
     </g>
   )
-}
-
-export function edgeLine({ outline }: Pick<Roof, 'outline'>, view: PlanView, edge: number) {
-  const from = outline[edge] ?? { x: 0, y: 0 }
-  const to = outline[(edge + 1) % outline.length] ?? from
-  return { from: view.place(from), to: view.place(to) }
 }

@@ -111,8 +111,8 @@ function WalkRow({ index, side, isLast, onChange, onTakeOut }: RowProps) {
       {isLast ? (
         <p className="mt-7 flex min-h-11 items-center text-sm text-ink-soft">Back to corner 1</p>
       ) : (
-        <div className={isBy ? 'grid grid-cols-[1fr_4.5rem] gap-2' : ''}>
-          <Field label="then turn">
+        <div>
+          <Field label="Then turn">
             <Select
               aria-label={`Turn after side ${index + 1}`}
               value={side.turn}
@@ -129,13 +129,13 @@ function WalkRow({ index, side, isLast, onChange, onTakeOut }: RowProps) {
             </Select>
           </Field>
           {isBy ? (
-            <div id={fieldId(`${path}.turnDeg`)}>
-              <Field label="°" error={problemAt(`${path}.turnDeg`)}>
+            <div id={fieldId(`${path}.turnDeg`)} className="mt-1">
+              <Field label="Degrees" error={problemAt(`${path}.turnDeg`)}>
                 <TextInput
                   inputMode="decimal"
                   autoComplete="off"
                   aria-label={`Degrees turned after side ${index + 1}`}
-                  className="px-2! tabular-nums"
+                  className="tabular-nums"
                   maxLength={20}
                   value={side.turnDeg}
                   onChange={(event) => onChange({ turnDeg: event.target.value }, 'turnDeg')}
