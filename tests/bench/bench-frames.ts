@@ -1,12 +1,10 @@
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
-import { plateLines } from '../../shared/roof/plate-lines.ts'
-import { roofLines } from '../../shared/roof/roof-lines.ts'
-import { roofProblems } from '../../shared/roof/roof-problems.ts'
 import type { Point2, Roof } from '../../shared/roof/roof-types.ts'
 import { combHouse, referenceRoofs } from './bench-roofs.ts'
+import type { Engine } from './built-engine.ts'
 import { growthExponent, median, mediansMs } from './timing.ts'
 
-type Library = (outline: readonly Point2[]) => () => unknown
+/** What is measured against what. */
+type Rivals = { engine: Engine; library: (outline: readonly Point2[]) => () => unknown }
 type Medians = { lines: number; whole: number; library: number }
 
 const ms = (value: number) => value.toFixed(2).padStart(9)
@@ -14,7 +12,7 @@ const ratio = (value: number) => `× ${value.toFixed(2)}`.padStart(9)
 const verdict = (isMet: boolean) => (isMet ? 'met' : 'NOT met')
 
 /** Why a roof is not framed; null when it is. */
-function whyNot(roof: Roof): string | null {
+function whyNot({ roofProblems, frameRoof }: Engine, roof: Roof): string | null {
   try {
     const [problem] = roofProblems(roof)
     if (problem) return problem.message
@@ -25,18 +23,18 @@ function whyNot(roof: Roof): string | null {
   }
 }
 
-const measure = (roof: Roof, library: Library): Medians =>
+const measure = ({ engine, library }: Rivals, roof: Roof): Medians =>
   mediansMs({
-    lines: () => roofLines(plateLines(roof)),
-    whole: () => frameRoof(roof),
+    lines: () => engine.roofLines(engine.plateLines(roof)),
+    whole: () => engine.frameRoof(roof),
     library: library(roof.outline),
   })
 
 /** All of them first: the first one measured must not pay for the compiling. */
-function warmUp(roofs: readonly Roof[], library: Library): void {
+function warmUp({ engine, library }: Rivals, roofs: readonly Roof[]): void {
   for (let i = 0; i < 12; i++) {
     for (const roof of roofs) {
-      frameRoof(roof)
+      engine.frameRoof(roof)
       library(roof.outline)()
     }
   }
@@ -45,24 +43,25 @@ function warmUp(roofs: readonly Roof[], library: Library): void {
 const headings = `${'lines'.padStart(9)} ${'whole'.padStart(9)} ${'library'.padStart(9)}   whole / library`
 
 /** The whole frame of each reference roof against the library's skeleton alone, on the same outline. */
-export function benchReferences(library: Library): void {
+export function benchReferences(rivals: Rivals): void {
+  const { engine } = rivals
   console.log('\nReference roofs: median processor ms of our lines alone, the whole frame, and the')
   console.log('straight-skeleton package’s lines alone on the same outline (one pitch, no gables)')
   console.log(`  ${''.padEnd(30)} members ${headings}`)
   const roofs = referenceRoofs()
-  const framed = roofs.filter(({ roof }) => whyNot(roof) === null)
+  const framed = roofs.filter(({ roof }) => whyNot(engine, roof) === null)
   warmUp(
+    rivals,
     framed.map(({ roof }) => roof),
-    library,
   )
   const ratios = roofs.flatMap(({ name, roof }) => {
-    const reason = whyNot(roof)
+    const reason = whyNot(engine, roof)
     if (reason !== null) {
       console.log(`  ${name.padEnd(30)} NOT FRAMED: ${reason}`)
       return []
     }
-    const members = String(frameRoof(roof).members.length).padStart(7)
-    const { lines, whole, library: theirs } = measure(roof, library)
+    const members = String(engine.frameRoof(roof).members.length).padStart(7)
+    const { lines, whole, library: theirs } = measure(rivals, roof)
     console.log(
       `  ${name.padEnd(30)} ${members} ${ms(lines)} ${ms(whole)} ${ms(theirs)} ${ratio(whole / theirs)}`,
     )
@@ -77,7 +76,8 @@ export function benchReferences(library: Library): void {
 }
 
 /** Growth with the number of corners, as the exponent of the closest power. */
-export function benchGrowth(library: Library): void {
+export function benchGrowth(rivals: Rivals): void {
+  const { engine } = rivals
   for (const alike of [false, true]) {
     console.log(
       `\nComb houses, wings ${alike ? 'all alike' : 'of different sizes'}: median processor ms`,
@@ -86,13 +86,13 @@ export function benchGrowth(library: Library): void {
     const points: (Medians & { n: number })[] = []
     for (const n of [8, 16, 32, 64] as const) {
       const roof = combHouse(n, alike)
-      const reason = whyNot(roof)
+      const reason = whyNot(engine, roof)
       if (reason !== null) {
         console.log(`  ${String(n).padStart(7)} NOT FRAMED: ${reason}`)
         continue
       }
-      const members = String(frameRoof(roof).members.length).padStart(7)
-      const found = measure(roof, library)
+      const members = String(engine.frameRoof(roof).members.length).padStart(7)
+      const found = measure(rivals, roof)
       points.push({ n, ...found })
       const { lines, whole, library: theirs } = found
       console.log(

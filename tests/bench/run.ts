@@ -1,10 +1,11 @@
 import { benchDaySheet } from './bench-day-sheet.ts'
 import { benchGrowth, benchReferences } from './bench-frames.ts'
+import { builtEngine } from './built-engine.ts'
 import { loadLibrary } from './library-skeleton.ts'
 
 console.log('Medians of one run on one machine: only their ratios say anything.')
-const library = await loadLibrary()
-benchReferences(library)
-benchGrowth(library)
+const rivals = { engine: await builtEngine(), library: await loadLibrary() }
+benchReferences(rivals)
+benchGrowth(rivals)
 await benchDaySheet()
 process.exit(0)
