@@ -55,7 +55,7 @@ export type Bevel = {
 }
 
 /** Cuts whose arrises end within this are square: no long side. */
-const squareMm = 1e-6
+const squareMm = 1e-5
 
 export const bothWays = (fromEdgeDeg: number): Angle => ({
   fromEdgeDeg,

@@ -1,12 +1,14 @@
-import { bevelOf, bothWays, crossingAt, topFall } from './bevel.ts'
+import { bevelOf, bothWays } from './bevel.ts'
 import type { Crossing, Timber } from './bevel.ts'
 import type { Ground } from './build-pieces.ts'
+import { clipConvex, polygonSignedArea } from './convex.ts'
+import type { Labelled } from './convex.ts'
 import { isAlongCrease, piecePoint } from './piece.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Cut, Point3 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import type { PlateEdge } from './slopes.ts'
-import { add2, radians, scale2 } from './vector.ts'
+import { add2, dot3, length2, radians, scale2 } from './vector.ts'
 import type { Plane } from './vector.ts'
 
 /** A cut before the pieces have marks. */
@@ -16,8 +18,8 @@ export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
   crossing: Crossing
 }
 
-/** A tail plane that takes less than this off the arrises takes no timber that a saw would find. */
-const leastTailMm = 0.3
+/** A tail cut with a face smaller than this takes no timber that a saw would find. */
+const leastTailMm2 = 30
 
 /** A piece as a timber in space, at its height over plate. */
 export const timberOf = (piece: Piece, standMm: number): Timber => {
@@ -131,17 +133,32 @@ const onCentreLine = (plane: Plane, cut: DraftCut, timber: Timber): Plane => ({
   },
 })
 
-/** Whether another cut of the tail leaves a cut nothing to take, on all four arrises. */
-const missesTail = (timber: Timber, cut: DraftCut, others: DraftCut[]): boolean =>
-  others.some((other) =>
-    [timber.halfMm, -timber.halfMm].every((leftMm) =>
-      [topFall(timber, leftMm), timber.depthMm / timber.cos].every(
-        (downMm) =>
-          crossingAt(cut.crossing, leftMm, downMm) <
-          crossingAt(other.crossing, leftMm, downMm) + leastTailMm,
-      ),
-    ),
-  )
+/** What a tail cut has left to take beside the other cuts of the tail, mm² on its own plane. */
+const tailFaceMm2 = (timber: Timber, cut: DraftCut, others: DraftCut[]): number => {
+  const { halfMm, depthMm, cos } = timber
+  let face: Labelled<null> = {
+    points: [
+      { x: -halfMm, y: 0 },
+      { x: halfMm, y: 0 },
+      { x: halfMm, y: depthMm / cos },
+      { x: -halfMm, y: depthMm / cos },
+    ],
+    labels: [null, null, null, null],
+  }
+  for (const { crossing } of others) {
+    // x left, y down: where the other cut lies further off the timber than this one
+    const normal = {
+      x: crossing.perLeft - cut.crossing.perLeft,
+      y: crossing.perDown - cut.crossing.perDown,
+    }
+    const offMm = cut.crossing.baseMm - crossing.baseMm
+    const size = length2(normal)
+    if (size > 1e-12) face = clipConvex(face, scale2(normal, 1 / size), offMm / size, null)
+    else if (offMm < 0) return 0
+  }
+  const facing = Math.abs(dot3(cut.plane.normal, timber.direction))
+  return (polygonSignedArea(face.points) * cos) / facing
+}
 
 /** The eaves' tail planes and the cuts against valleys, those that take timber. */
 const tailCuts = (ground: Ground, piece: Piece, timber: Timber, standMm: number): DraftCut[] => {
@@ -156,7 +173,7 @@ const tailCuts = (ground: Ground, piece: Piece, timber: Timber, standMm: number)
   const all = [...free, ...butting]
   return all.reduce((kept, cut) => {
     const others = kept.filter((other) => other !== cut)
-    return missesTail(timber, cut, others) ? others : kept
+    return tailFaceMm2(timber, cut, others) < leastTailMm2 ? others : kept
   }, all)
 }
 

@@ -6,10 +6,11 @@ import { endJobs, phases, usualWay } from './joint-phases.ts'
 import type { EndJob, JointWay, JointWays } from './joint-phases.ts'
 import { jointMitres } from './joint-mitres.ts'
 import { jointGroups, waysToTry } from './joint-ways.ts'
+import { isAlongCrease } from './piece.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import { ridgeDirections, ridgeEnd } from './ridge-ends.ts'
 import { at } from './slopes.ts'
-import { halfObstacle, trimEnd } from './trim.ts'
+import { bodyObstacle, halfObstacle, trimEnd } from './trim.ts'
 import type { Near, Obstacle } from './trim.ts'
 import { distance2 } from './vector.ts'
 
@@ -67,8 +68,7 @@ const placeJobs = (
   const placed: EndJob[] = [...before]
   jobs.forEach((job, k) => {
     const { phase } = job
-    if (phase === phases.ridge) setCuts(job, [ridgeEnd(ground, job, jobs)], standing)
-    else if (phase === phases.brokenFoot) setCuts(job, [brokenFoot(job, jobs, ways)], standing)
+    if (phase === phases.brokenFoot) setCuts(job, [brokenFoot(job, jobs, ways)], standing)
     else {
       const isButt = job.joint === null || phase === phases.ridgeButt
       const mitres = isButt ? [] : jointMitres(ground, job, jobs, placed)
@@ -177,7 +177,16 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
   const early = all.filter(isEarly)
   const grid = boxGrid<Obstacle>()
   const put = (obstacle: Obstacle) => grid.put(obstacle, obstacle.box)
-  placeJobs(ground, early, new Map(), { near: grid.near, put }, [])
+  for (const piece of pieces) {
+    const body = isAlongCrease(piece.role) ? bodyObstacle(piece) : null
+    if (body !== null) put(body)
+  }
+  const isFirst = (job: EndJob) => job.phase === phases.ridge
+  for (const job of early.filter(isFirst)) {
+    setCuts(job, [ridgeEnd(ground, job, early, grid.near)], { near: grid.near, put })
+  }
+  const rest = early.filter((job) => !isFirst(job))
+  placeJobs(ground, rest, new Map(), { near: grid.near, put }, [])
   const placed = [...early]
   const trials: Trials = { left: mostTrials }
   const openPieces = new Set<number>()

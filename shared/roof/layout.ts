@@ -65,15 +65,27 @@ const keepApart = (stations: Ranked[], thicknessMm: number): Station[] => {
   return kept.sort((a, b) => a.alongMm - b.alongMm)
 }
 
+/** An odd bay narrower than this many rafters is shared with the one beside it: two rafters need room. */
+const oddBayRafters = 2
+
+/** Full bays, and an odd one last; the distances from the first station. */
+const fullBays = (roof: Roof, run: number, bays: number): number[] => {
+  const steps = Array.from({ length: bays - 1 }, (_, k) => roof.maxSpacingMm * (k + 1))
+  const odd = run - at(steps, -1)
+  if (odd >= oddBayRafters * roof.sections.rafter.thicknessMm) return steps
+  return [...steps.slice(0, -1), run - (odd + roof.maxSpacingMm) / 2]
+}
+
 /** Rafters between two stations: even bays not over the spacing, or full bays and an odd one last. */
 const between = (roof: Roof, from: number, to: number, backwards: boolean): number[] => {
   const run = to - from
   const bays = Math.max(1, Math.ceil(run / roof.maxSpacingMm - bayTolerance))
-  const step = roof.spacing === 'even' ? run / bays : roof.maxSpacingMm
-  const inner = Array.from({ length: bays - 1 }, (_, k) =>
-    backwards ? to - step * (k + 1) : from + step * (k + 1),
-  )
-  return inner.sort((a, b) => a - b)
+  if (bays === 1) return []
+  const steps =
+    roof.spacing === 'even'
+      ? Array.from({ length: bays - 1 }, (_, k) => (run / bays) * (k + 1))
+      : fullBays(roof, run, bays)
+  return backwards ? steps.map((mm) => to - mm).reverse() : steps.map((mm) => from + mm)
 }
 
 /** Both slopes of a ridge count full bays from the same end: the one its lower-numbered slope starts at. */

@@ -37,7 +37,8 @@ const dropOf = (piece: Piece): number => {
   return Math.max(left, right, 0) * piece.halfMm
 }
 
-const creasePiece = (ground: Ground, line: NodeLine, index: number): Piece => {
+/** The timber of a hip, broken hip or valley. */
+export const creasePiece = (ground: Ground, line: NodeLine, index: number): Piece => {
   const { roof, lines, joints } = ground
   const role = line.kind === 'valley' ? 'valley' : line.kind === 'hip' ? 'hip' : 'broken-hip'
   const section = role === 'valley' ? roof.sections.valley : roof.sections.hip

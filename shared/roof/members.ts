@@ -34,7 +34,7 @@ const handOf = (piece: Piece, timber: Timber, cuts: DraftCut[]): Member['hand'] 
   if (piece.role === 'ridge' || heads.length === 0) return null
   if (heads.every((cut) => cut.longSide === 'none')) return null
   const corners = endCorners(timber, heads, true)
-  const tip = corners.reduce((a, b) => (b.alongMm > a.alongMm + 1e-6 ? b : a))
+  const tip = corners.reduce((a, b) => (b.alongMm > a.alongMm + 1e-5 ? b : a))
   if (Math.abs(tip.leftMm) < centralMm) return null
   return tip.leftMm > 0 ? 'left' : 'right'
 }

@@ -1,12 +1,16 @@
 import type { Ground } from './build-pieces.ts'
+import { convexOverlap, polygonBox, polygonSignedArea } from './convex.ts'
 import { bodyDirection, phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
-import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
+import type { Near } from './trim.ts'
+import { add2, cross2, dot2, left2, scale2, sub2 } from './vector.ts'
 
 /** A ridge end this near to a gable's line stands on it. */
 const onGableMm = 1
+/** Overlaps smaller than this in plan are touching faces. */
+const touchMm2 = 0.01
 
 /** The verge overhang of the gable that a ridge end stands on; null where it does not. */
 const vergeMm = (ground: Ground, ridge: Piece, point: Point2): number | null => {
@@ -29,23 +33,42 @@ const coverMm = (ridge: Piece, away: Point2, other: EndJob): number => {
   return (ridge.halfMm * dot2(away, out) + other.piece.halfMm) / aside
 }
 
+/** How far past its node a ridge can run before it meets a hip or valley that passes, mm. */
+const clearMm = (piece: Piece, node: Point2, away: Point2, pastMm: number, near: Near): number => {
+  const aside = scale2(left2(away), piece.halfMm)
+  const [start, end] = [add2(node, scale2(away, -piece.halfMm)), add2(node, scale2(away, pastMm))]
+  const own = [sub2(start, aside), sub2(end, aside), add2(end, aside), add2(start, aside)]
+  let clear = pastMm
+  for (const { polygon } of near(polygonBox(own))) {
+    const shared = convexOverlap(own, polygon.points)
+    if (polygonSignedArea(shared) < touchMm2) continue
+    clear = Math.min(clear, ...shared.map((p) => dot2(sub2(p, node), away)))
+  }
+  return clear
+}
+
 /**
  * Where a ridge that butts nothing ends: out to the verge on a gable, otherwise half a rafter past its
- * joint, or further where another ridge bears on its side there.
+ * joint, further where another ridge bears on its side there, and short of a hip or valley in `near`
+ * that passes.
  */
-export const ridgeEnd = (ground: Ground, job: EndJob, jobs: readonly EndJob[]): PlanCut => {
+export const ridgeEnd = (
+  ground: Ground,
+  job: EndJob,
+  jobs: readonly EndJob[],
+  near: Near,
+): PlanCut => {
   const { piece, end, joint } = job
   const away = scale2(bodyDirection(piece, end), -1)
   const node = end === 'head' ? piece.head : piece.foot
   const butting = jobs.filter(
     (other) => other.phase === phases.ridgeButt && other.joint === joint && joint !== null,
   )
-  const past =
-    vergeMm(ground, piece, node) ??
-    Math.max(
-      ground.roof.sections.rafter.thicknessMm / 2,
-      ...butting.map((other) => coverMm(piece, away, other)),
-    )
+  const wanted = Math.max(
+    ground.roof.sections.rafter.thicknessMm / 2,
+    ...butting.map((other) => coverMm(piece, away, other)),
+  )
+  const past = vergeMm(ground, piece, node) ?? clearMm(piece, node, away, wanted, near)
   return { point: add2(node, scale2(away, past)), normal: away, mitreWith: null }
 }
 

@@ -2,10 +2,12 @@ import { clipConvex } from './convex.ts'
 import type { Labelled } from './convex.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Face, NodeLine } from './roof-lines.ts'
-import type { Point2, Section } from './roof-types.ts'
+import { creasePiece } from './line-pieces.ts'
+import type { Piece } from './piece.ts'
+import type { Point2 } from './roof-types.ts'
 import { at, slopeGradient } from './slopes.ts'
 import type { PlateEdge, Slope } from './slopes.ts'
-import { add2, dot2, left2, scale2, sub2, unit2 } from './vector.ts'
+import { add2, dot2, left2, length2, radians, scale2, sub2, unit2 } from './vector.ts'
 
 /** A valley that borders a slope and starts at a plate corner, seen from that slope. */
 export type ValleySide = {
@@ -58,22 +60,41 @@ const hipCorner = (ground: Ground, slope: Slope, line: NodeLine): HipCorner => {
   return { alongMm, gapMm }
 }
 
-const planOf = (ground: Ground, line: NodeLine, corner: number, section: Section): Point2[] => {
-  const from = at(ground.lines.nodes, line.from).point
-  const run = runOf(ground, line)
-  const dir = unit2(run)
-  const aside = scale2(left2(dir), section.thicknessMm / 2)
+/** The plane of an eave's tails where a valley's top meets it, as a line in plan: its normal and offset. */
+const tailLine = (
+  ground: Ground,
+  edge: PlateEdge,
+  valley: Piece,
+): { normal: Point2; offset: number } => {
+  const out = scale2(edge.inward, -1)
+  const { tan } = valley
+  const lean = ground.roof.tail === 'square' ? Math.tan(radians(edge.pitchDeg)) : 0
+  // the top over a point p stands at dir · (p − foot) × tan − drop, the eave's line at −overhang × its own tangent
+  const normal = sub2(out, scale2(valley.dir, lean * tan))
+  const size = length2(normal)
+  const level = edge.overhangMm * Math.tan(radians(edge.pitchDeg)) - valley.dropMm
+  const offset =
+    dot2(out, edge.from) + edge.overhangMm + lean * (level - tan * dot2(valley.dir, valley.foot))
+  return { normal: scale2(normal, 1 / size), offset: offset / size }
+}
+
+const planOf = (ground: Ground, valley: Piece, corner: number): Point2[] => {
+  const aside = scale2(valley.left, valley.halfMm)
   const edges = [at(ground.plates.edges, corner - 1), at(ground.plates.edges, corner)]
-  const farMm = 20 * Math.max(...edges.map((e) => e.overhangMm), section.thicknessMm)
-  const start = add2(from, scale2(dir, -farMm))
-  const end = add2(from, run)
+  const farMm = 20 * Math.max(...edges.map((e) => e.overhangMm), 2 * valley.halfMm)
+  const start = add2(valley.foot, scale2(valley.dir, -farMm))
   let plan: Labelled<null> = {
-    points: [sub2(start, aside), sub2(end, aside), add2(end, aside), add2(start, aside)],
+    points: [
+      sub2(start, aside),
+      sub2(valley.head, aside),
+      add2(valley.head, aside),
+      add2(start, aside),
+    ],
     labels: [null, null, null, null],
   }
   for (const edge of edges) {
-    const out = scale2(edge.inward, -1)
-    plan = clipConvex(plan, out, dot2(out, edge.from) + edge.overhangMm, null)
+    const { normal, offset } = tailLine(ground, edge, valley)
+    plan = clipConvex(plan, normal, offset, null)
   }
   return plan.points
 }
@@ -102,7 +123,7 @@ const valleySide = (
     dir,
     side: { point: add2(from, scale2(into, -halfMm)), normal: into },
     otherEdge: edges.find((e) => !slope.edges.includes(e.index)) ?? at(edges, 0),
-    plan: planOf(ground, line, corner, roof.sections.valley),
+    plan: planOf(ground, creasePiece(ground, line, index), corner),
   }
 }
 

@@ -68,6 +68,18 @@ export const halfObstacle = (piece: Piece, end: PieceEnd): Obstacle => {
   return { piece: piece.id, polygon, box: polygonBox(polygon.points) }
 }
 
+/** This much of a hip or valley at a joint is made with that joint. */
+const jointMm = 400
+
+/** A hip or valley between its joints, where nothing cuts it, as an obstacle to what is made at others; null where it is short. */
+export const bodyObstacle = (piece: Piece): Obstacle | null => {
+  const from = piece.corner === null ? jointMm : -piece.tailPlanMm
+  const to = piece.planMm - jointMm
+  if (to <= from) return null
+  const polygon = strip(piece, from, to)
+  return { piece: piece.id, polygon, box: polygonBox(polygon.points) }
+}
+
 /** The cut, in one of the obstacle's faces, that clears it and leaves most timber. */
 const bestFace = (
   polygon: Labelled<Side>,
