@@ -1,11 +1,14 @@
+import { finishProblems, isEdge } from './finish-problems.ts'
 import type { Point2, RoofProblem } from './roof-types.ts'
-import { at, cornerOffLineMm, straightCornerMm } from './slopes.ts'
-import { cross2, distance2, dot2, sub2, unit2 } from './vector.ts'
+import { at } from './slopes.ts'
+import { add2, cross2, distance2, dot2, scale2, sub2 } from './vector.ts'
 
 const leastEdgeMm = 300
 const mostMm = 100_000
-/** A gable this near to square with its slopes (cosine) is square: 0.1°. */
-const squareCos = 0.00175
+/** Walls nearer together than this, outside to outside, touch. */
+const leastGapMm = 10
+/** A corner that folds back by more than this (cosine of its turn): sharper than 2°. */
+const foldedCos = -0.9994
 
 type Corner = { x: number; y: number }
 
@@ -80,25 +83,49 @@ const sizeProblems = (corners: Point2[]): RoofProblem[] => {
   })
 }
 
+const pointToSegmentMm = (p: Point2, a: Point2, b: Point2): number => {
+  const run = sub2(b, a)
+  const t = Math.min(1, Math.max(0, dot2(sub2(p, a), run) / dot2(run, run)))
+  return distance2(p, add2(a, scale2(run, t)))
+}
+
+const segmentsApartMm = (a: Point2, b: Point2, c: Point2, d: Point2): number =>
+  segmentsMeet(a, b, c, d)
+    ? 0
+    : Math.min(
+        pointToSegmentMm(a, c, d),
+        pointToSegmentMm(b, c, d),
+        pointToSegmentMm(c, a, b),
+        pointToSegmentMm(d, a, b),
+      )
+
+const foldProblems = (corners: Point2[]): RoofProblem[] =>
+  corners.flatMap((corner, k) => {
+    const [before, after] = [sub2(corner, at(corners, k - 1)), sub2(at(corners, k + 1), corner)]
+    const cosine = dot2(before, after) / Math.sqrt(dot2(before, before) * dot2(after, after))
+    if (cosine > foldedCos) return []
+    const other = ((k - 1 + corners.length) % corners.length) + 1
+    const message = `Edges ${other} and ${k + 1} touch: the plan doubles back on itself at corner ${k + 1}. Move corner ${k + 1}.`
+    return [{ path: `outline.${k}`, message }]
+  })
+
 const crossingProblems = (corners: Point2[]): RoofProblem[] => {
   const count = corners.length
   for (let i = 0; i < count; i++) {
-    for (let j = i + 1; j < count; j++) {
+    for (let j = i + 2; j < count; j++) {
+      if (i === 0 && j === count - 1) continue
       const [a, b] = [at(corners, i), at(corners, i + 1)]
       const [c, d] = [at(corners, j), at(corners, j + 1)]
-      const follows = j === i + 1
-      const wraps = i === 0 && j === count - 1
-      const meet = follows
-        ? side(a, b, d) === 0 && dot2(sub2(b, a), sub2(d, b)) < 0
-        : wraps
-          ? side(c, d, b) === 0 && dot2(sub2(d, c), sub2(b, a)) < 0
-          : segmentsMeet(a, b, c, d)
-      if (!meet) continue
-      const message = `Edges ${i + 1} and ${j + 1} cross or touch: put the corners in order round the building.`
-      return [{ path: `outline.${j}`, message }]
+      const apartMm = segmentsApartMm(a, b, c, d)
+      if (apartMm >= leastGapMm) continue
+      const way =
+        apartMm > 0
+          ? `are ${Math.round(apartMm)} mm apart, under ${leastGapMm} mm: move them apart, or draw them as one wall. A courtyard cannot be drawn this way.`
+          : 'cross or touch: put the corners in order round the building. A courtyard cannot be drawn by running back along a wall.'
+      return [{ path: `outline.${j}`, message: `Edges ${i + 1} and ${j + 1} ${way}` }]
     }
   }
-  return []
+  return foldProblems(corners)
 }
 
 const turnProblems = (corners: Point2[]): RoofProblem[] => {
@@ -109,53 +136,6 @@ const turnProblems = (corners: Point2[]): RoofProblem[] => {
     return [{ path: 'outline', message }]
   }
   return []
-}
-
-type LooseEdge = { finish?: unknown; pitchDeg?: unknown }
-
-const isEdge = (value: unknown): value is LooseEdge => typeof value === 'object' && value !== null
-
-/** Whether the plan turns inwards at corner `k`. */
-const turnsInwards = (corners: Point2[], k: number): boolean =>
-  cornerOffLineMm(at(corners, k - 1), at(corners, k), at(corners, k + 1)) <= -straightCornerMm
-
-const gableProblem = (corners: Point2[], edges: LooseEdge[], k: number): string | null => {
-  const [before, after] = [at(edges, k - 1), at(edges, k + 1)]
-  const name = `Edge ${k + 1} is a gable`
-  if (before.finish === 'gable' || after.finish === 'gable') {
-    return `${name} that no slope meets at both ends: make the edge before it and the edge after it eaves.`
-  }
-  const inwards = [k, k + 1].find((n) => turnsInwards(corners, n))
-  if (inwards !== undefined) {
-    const corner = (inwards % corners.length) + 1
-    return `${name}, but the plan turns inwards at its corner ${corner}: make edge ${k + 1} an eave, or move corner ${corner} out.`
-  }
-  const direction = (n: number) => unit2(sub2(at(corners, n + 1), at(corners, n)))
-  const own = direction(k)
-  const askew = [k - 1, k + 1].find((n) => Math.abs(dot2(own, direction(n))) > squareCos)
-  if (askew === undefined) return null
-  const other = ((askew + corners.length) % corners.length) + 1
-  return `${name}, but not square to the slope of edge ${other}: make them square, or make edge ${k + 1} an eave.`
-}
-
-const finishProblems = (corners: Point2[], edges: LooseEdge[]): RoofProblem[] => {
-  if (edges.every((edge) => edge.finish === 'gable')) {
-    const message = 'Every edge is a gable: give at least two facing edges an eave and a pitch.'
-    return [{ path: 'edges.0.finish', message }]
-  }
-  return edges.flatMap((edge, k) => {
-    if (edge.finish === 'gable') {
-      const message = gableProblem(corners, edges, k)
-      return message === null ? [] : [{ path: `edges.${k}.finish`, message }]
-    }
-    const before = at(edges, k - 1)
-    const off = cornerOffLineMm(at(corners, k - 1), at(corners, k), at(corners, k + 1))
-    const straight = Math.abs(off) < straightCornerMm
-    if (!straight || before.finish === 'gable' || before.pitchDeg === edge.pitchDeg) return []
-    const other = ((k - 1 + edges.length) % edges.length) + 1
-    const message = `Edges ${other} and ${k + 1} run in one line with two pitches: give both the same pitch.`
-    return [{ path: `edges.${k}.pitchDeg`, message }]
-  })
 }
 
 /** What is wrong with the corners and with eaves and gables as placed; takes any value. */

@@ -128,6 +128,3 @@ export const roofLines = (plates: PlateLines): RoofLines => {
     lines: traced.map(({ line }) => line),
   }
 }
-
-export { squareLineSpan } from './square-spans.ts'
-export type { SquareSpan } from './square-spans.ts'

@@ -1,12 +1,12 @@
 import { outlineProblems } from './outline-problems.ts'
-import { roofJoints } from './clusters.ts'
-import { roofLines } from './roof-lines.ts'
+import { plateLines } from './plate-lines.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { Roof, RoofProblem, RoofSettings } from './roof-types.ts'
 import { besideProblems } from './secondary/beside-problems.ts'
 import { at } from './slopes.ts'
-import { plateLines } from './plate-lines.ts'
+import type { PlateLines } from './slopes.ts'
 import { commonStandMm, leastSeatMm, rafterSeatMm } from './stand.ts'
+import { ridgeProblems, waveProblems } from './wave-problems.ts'
 
 /** Thrown by `frameRoof`; `problems` says field by field what to change. */
 export class RoofRefusedError extends Error {
@@ -130,9 +130,19 @@ const settingsProblems = (settings: unknown): RoofProblem[] => {
   )
 }
 
+const holeProblems = (holes: unknown): RoofProblem[] =>
+  holes === undefined || holes === null || (Array.isArray(holes) && holes.length === 0)
+    ? []
+    : [
+        {
+          path: 'holes',
+          message:
+            'A courtyard, a hole in the plan, is not framed: leave it out, or frame each wing round it as a roof of its own.',
+        },
+      ]
+
 /** Slopes whose rafters would find too little seat at the common height over plate. */
-const seatProblems = (roof: Roof): RoofProblem[] => {
-  const { slopes } = plateLines(roof)
+const seatProblems = (roof: Roof, { slopes }: PlateLines): RoofProblem[] => {
   const standMm = commonStandMm(roof, slopes)
   return slopes.flatMap((slope) => {
     const seatMm = rafterSeatMm(roof, slope.pitchDeg, standMm)
@@ -149,34 +159,6 @@ const seatProblems = (roof: Roof): RoofProblem[] => {
         message:
           `Edge ${edge + 1}: at a height over plate of ${Math.round(standMm)} mm its rafters would seat ` +
           `${found} mm on the plate, under ${leastSeatMm} mm: ${way}.`,
-      },
-    ]
-  })
-}
-
-/** Gables under which the roof leaves no ridge to run out to the verge. */
-const gableProblems = (roof: Roof): RoofProblem[] => {
-  const plates = plateLines(roof)
-  const lines = roofLines(plates)
-  const { swallowed } = roofJoints(roof, lines)
-  return plates.edges.flatMap((edge) => {
-    if (edge.finish !== 'gable') return []
-    const sides = [edge.index, (edge.index + 1) % plates.edges.length]
-    const verges = lines.lines.filter(
-      (line) => line.kind === 'verge' && sides.some((n) => line.from === n),
-    )
-    const tops = new Set(verges.map((line) => line.to))
-    const [top] = [...tops]
-    const ridge = lines.lines.findIndex(
-      (line) => line.kind === 'ridge' && (line.from === top || line.to === top),
-    )
-    if (tops.size === 1 && ridge >= 0 && !swallowed.has(ridge)) return []
-    return [
-      {
-        path: `edges.${edge.index}.finish`,
-        message:
-          `Edge ${edge.index + 1} is a gable, but the far end's slope climbs to it and leaves no ridge: ` +
-          'make the building longer, give the far end a steeper pitch, or make this edge an eave.',
       },
     ]
   })
@@ -199,12 +181,17 @@ export const roofProblems = (
   const shape = outlineProblems(input['outline'], list)
   const fields = [
     ...shape,
+    ...holeProblems(input['holes']),
     ...list.slice(0, 64).flatMap(edgeProblems),
     ...choiceProblems(input),
     ...settingsProblems(settings),
     ...besideProblems(roof, settings),
   ]
   if (fields.length > 0) return fields
-  const seats = seatProblems(roof)
-  return seats.length > 0 ? seats : gableProblems(roof)
+  const plates = plateLines(roof)
+  for (const problems of [seatProblems, waveProblems, ridgeProblems]) {
+    const found = problems(roof, plates)
+    if (found.length > 0) return found
+  }
+  return []
 }

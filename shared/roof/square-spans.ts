@@ -47,11 +47,3 @@ export const squareLineSpans = (
   }
   return spans
 }
-
-/** @deprecated the lowest part only: use `squareLineSpans`. */
-export const squareLineSpan = (
-  lines: RoofLines,
-  slope: Slope,
-  face: Face,
-  alongMm: number,
-): SquareSpan | null => squareLineSpans(lines, slope, face, alongMm)[0] ?? null
