@@ -1,5 +1,5 @@
-import type { DrawingPoint, Segment, TurnedBox } from './drawing-geometry.ts'
-import { boxCorners, pointAlong, segmentLength } from './drawing-geometry.ts'
+import type { DrawingPoint, Segment } from './drawing-geometry.ts'
+import { pointAlong, segmentLength } from './drawing-geometry.ts'
 
 /** An upright rectangle of the paper. */
 export type PaperBounds = { left: number; right: number; top: number; bottom: number }
@@ -66,8 +66,4 @@ export function putSegment<T>(grid: DrawingGrid<T>, item: T, segment: Segment): 
     const to = pointAlong(segment, (i + 1) / pieces)
     grid.put(item, segmentBounds({ from, to }))
   }
-}
-
-export function boxBounds(box: TurnedBox): PaperBounds {
-  return boundsOf(boxCorners(box))
 }

@@ -3,8 +3,9 @@ import type { LengthUnits } from '../units/format-length.ts'
 import type { DrawingPoint, Segment } from './drawing-geometry.ts'
 import type { PaperWord } from './drawing-paper.ts'
 import { overhangOutline, outlineMovedOut } from './overhang-outline.ts'
-import type { PlanCorner, PlanDimension, PlanScaleBar } from './plan-dimensions.ts'
-import { cornerBox, planCorners, planDimensions, planScaleBar } from './plan-dimensions.ts'
+import { cornerBox, type PlanCorner, planCorners } from './plan-corners.ts'
+import type { PlanDimension, PlanScaleBar } from './plan-dimensions.ts'
+import { planDimensions, planScaleBar } from './plan-dimensions.ts'
 import type { PlanLabel } from './plan-labels.ts'
 import { placePlanLabels } from './plan-labels.ts'
 import { isOnPlan, type PlanLayer } from './plan-layers.ts'
@@ -119,7 +120,7 @@ function takenBoxes(
   })
   return [
     ...dimensions.flatMap((d) => (d.label ? [d.label] : [])),
-    ...corners.map((corner) => ({ ...cornerBox(corner), leader: null })),
+    ...corners.map((corner) => ({ ...cornerBox(corner), leader: corner.leader })),
     ...problems.map((p) => square(p.at, problemReachPx)),
   ]
 }

@@ -10,8 +10,8 @@ const paddingPx = 3
 const stepPx = 5
 const besideStepPx = 9
 const gapPx = 4
-/** How far from its timber, square to it, a mark may stand: the next bay or the one after. */
-const besideRowsPx = [1, 2, 3.2]
+/** How far from its timber, square to it, a mark may stand, in rows: some bays away at most. */
+const besideRows = [1, 2, 3.2, 4.6, 6.2]
 
 /** What a mark takes up, turned along its timber. */
 export function markBox(member: PlanMember, text: string, sizePx: number): TurnedBox {
@@ -75,7 +75,7 @@ export function* placesBeside(member: PlanMember, box: TurnedBox): Generator<Lab
     }
   }
   const rowPx = box.heightPx / 2 + gapPx
-  for (const row of besideRowsPx)
+  for (const row of besideRows)
     for (let alongPx = 0; alongPx <= lengthPx; alongPx += besideStepPx)
       for (const side of [1, -1]) {
         const offPx = side * row * rowPx
@@ -102,7 +102,7 @@ const rowRoles: ReadonlySet<PlanMember['role']> = new Set([
   'cripple-creeper',
 ])
 
-/** Timbers that lie across the rafters: their marks may stand over those. */
-export function liesAcross({ role }: Pick<PlanMember, 'role'>): boolean {
-  return role === 'ridge' || role === 'underpurlin' || role === 'fascia'
+/** Timbers that the rafters run on to or over: their marks may stand on those where they must. */
+export function mayStandOverRafters(member: Pick<PlanMember, 'role'>): boolean {
+  return !standsInRow(member) && member.role !== 'collar-tie' && member.role !== 'barge'
 }

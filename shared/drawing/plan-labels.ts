@@ -4,7 +4,7 @@ import { segmentLength } from './drawing-geometry.ts'
 import { drawingPaper, type DrawingPaper, type PaperWord } from './drawing-paper.ts'
 import {
   type LabelPlace,
-  liesAcross,
+  mayStandOverRafters,
   markBox,
   placesAlong,
   placesBeside,
@@ -35,6 +35,8 @@ const sizePx = 12
 const smallSizePx = 10
 /** Rafters nearer than this leave no room for words between them; a larger drawing does. */
 const leastBayPx = 8
+const openBayPx = 20
+const mostOverOthers = 16
 
 type Way = {
   sizePx: number
@@ -46,6 +48,7 @@ const along: Way = { sizePx, places: placesAlong, mayCross: false }
 const alongSmall: Way = { sizePx: smallSizePx, places: placesAlong, mayCross: false }
 const acrossOthers: Way = { sizePx, places: placesAlong, mayCross: true }
 const beside: Way = { sizePx: smallSizePx, places: placesBeside, mayCross: false }
+const besideOverOthers: Way = { ...beside, mayCross: true }
 const inTheMiddle: Way = {
   sizePx,
   places: (_, box) => [{ ...box, leader: null }],
@@ -79,11 +82,16 @@ export function placePlanLabels(
   const isFirst = (member: PlanMember) => options.firstMarks.has(member.mark)
   for (const member of ordered) {
     write(member, member.mark, along)
-    if (isFirst(member) || liesAcross(member)) write(member, member.mark, acrossOthers)
+    if (!standsInRow(member)) write(member, member.mark, alongSmall)
+    if (isFirst(member) || mayStandOverRafters(member)) write(member, member.mark, acrossOthers)
     if (isFirst(member)) write(member, member.mark, inTheMiddle)
   }
   for (const member of ordered) write(member, member.mark, alongSmall)
   if (bayPx(members) >= leastBayPx) for (const member of ordered) write(member, member.mark, beside)
+  // The last few of an open drawing, as where short creepers crowd at a crossing, stand over others.
+  const left = ordered.filter((member) => !labels.has(member.mark))
+  if (left.length <= mostOverOthers && bayPx(members) >= openBayPx)
+    for (const member of left) write(member, member.mark, besideOverOthers)
   for (const member of ordered) {
     const lineMark = lineMarkOf.get(member.mark)
     if (lineMark && lineMark !== member.mark) write(member, lineMark, alongSmall)

@@ -49,8 +49,9 @@ export function PlanMeasures({ drawing }: { drawing: PlanDrawing }) {
       {drawing.dimensions.map((dimension) => (
         <Dimension key={dimension.edge} dimension={dimension} />
       ))}
-      {drawing.corners.map(({ corner, at, radiusPx }) => (
+      {drawing.corners.map(({ corner, at, radiusPx, leader }) => (
         <g key={corner}>
+          {leader ? <FineLine line={leader} /> : null}
           <circle
             cx={at.x}
             cy={at.y}

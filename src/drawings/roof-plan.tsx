@@ -35,6 +35,8 @@ const noLayers: ReadonlySet<PlanLayer> = new Set()
 const pageWidthPx = 720
 /** Drawn no larger than this, px a millimetre of roof: a rafter as thick as a thumb's half. */
 const largestScale = 0.2
+/** The rule round the window, which stays when nothing is drawn larger so that nothing jumps. */
+const frameRulePx = 1
 const dayWords: LegendWords = { due: 'Due today', done: 'Done', rest: 'The rest' }
 
 /** The roof from above: plates, roof lines, every timber with its mark, and what is due and done. */
@@ -73,8 +75,8 @@ export function RoofPlan(props: Props) {
         tabIndex={zoom > 1 ? 0 : undefined}
         role={zoom > 1 ? 'group' : undefined}
         aria-label={zoom > 1 ? 'Plan drawn larger: scroll to see the rest' : undefined}
-        style={{ maxHeight: heightPx }}
-        className={`max-w-full overflow-auto overscroll-auto print:max-h-none! print:overflow-visible ${zoom > 1 ? 'cursor-grab rounded-md border border-rule' : ''}`}
+        style={{ maxHeight: heightPx + 2 * frameRulePx }}
+        className={`max-w-full overflow-auto rounded-md border print:max-h-none! print:overflow-visible print:border-0 ${zoom > 1 ? 'cursor-grab border-rule' : 'border-transparent'}`}
       >
         {drawing ? (
           <div style={{ width: `${zoom * 100}%` }} className="print:w-full!">

@@ -6,7 +6,7 @@ import {
   segmentLength,
 } from '../../shared/drawing/drawing-geometry.ts'
 import { overhangOutline } from '../../shared/drawing/overhang-outline.ts'
-import { cornerBox } from '../../shared/drawing/plan-dimensions.ts'
+import { cornerBox } from '../../shared/drawing/plan-corners.ts'
 import { planDrawing, type PlanDrawingOptions } from '../../shared/drawing/plan-drawing.ts'
 import { planMemberAt } from '../../shared/drawing/plan-members.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'

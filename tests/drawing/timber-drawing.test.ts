@@ -8,17 +8,17 @@ import { timberTopEnd } from '../../shared/drawing/timber-shape.ts'
 import { timberTextPx } from '../../shared/drawing/timber-texts.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import type { Cut, Member } from '../../shared/roof/roof-types.ts'
-import { convexReferences, referenceRoof } from '../roof/support/roofs.ts'
+import { convexReferences, hollowReferences, referenceRoof } from '../roof/support/roofs.ts'
 
 const phonePx = 358
 const ways = [
-  { hipTop: 'backed', tail: 'plumb' },
-  { hipTop: 'lowered', tail: 'square' },
-  { hipTop: 'backed', tail: 'square' },
+  { hipTop: 'backed', tail: 'plumb', valleyTop: 'square' },
+  { hipTop: 'lowered', tail: 'square', valleyTop: 'dished' },
+  { hipTop: 'backed', tail: 'square', valleyTop: 'square' },
 ] as const
-const cases = convexReferences.flatMap((reference) =>
+const cases = [...convexReferences, ...hollowReferences].flatMap((reference) =>
   ways.map((way) => ({
-    title: `${reference.title}, hips ${way.hipTop}, tails ${way.tail}`,
+    title: `${reference.title}, hips ${way.hipTop}, valleys ${way.valleyTop}, tails ${way.tail}`,
     members: frameRoof(referenceRoof(reference, way)).members,
   })),
 )
