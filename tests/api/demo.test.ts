@@ -17,7 +17,7 @@ test.each([
   '2026-12-13T02:00:00Z',
   '2026-12-30T23:00:00Z',
 ])(
-  'the demo seeded at %s has two crews, eight people and ten jobs over every stage',
+  'the demo seeded at %s has two crews, eight people and fourteen jobs over every stage',
   async (now) => {
     const app = await createTestApp({ now: new Date(now) })
     expect(isEmpty(app.db)).toBe(true)
@@ -31,7 +31,7 @@ test.each([
     const { body } = await agent.get('/api/jobs').expect(200)
     const stages = new Set(body.jobs.map((job: { stage: string }) => job.stage))
     expect([...stages].sort()).toEqual([...jobStages].sort())
-    expect(body.jobs).toHaveLength(10)
+    expect(body.jobs).toHaveLength(14)
     expect((await agent.get('/api/crews')).body.crews).toHaveLength(2)
     const everybody = app.db.select().from(people).all()
     expect(everybody).toHaveLength(8)
@@ -53,11 +53,17 @@ test('the demo’s roofs are of every shape and each frames into a cut list', as
       .flatMap((row) => row.spec.members.map((m) => m.role)),
   )
   expect([...roles].sort()).toEqual([
+    'barge',
     'broken-hip',
+    'collar-tie',
     'common',
     'creeper',
     'crown-end',
+    'fascia',
     'hip',
     'ridge',
+    'underpurlin',
+    'valley',
+    'valley-creeper',
   ])
 })
