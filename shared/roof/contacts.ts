@@ -6,7 +6,7 @@ import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import { fullPlan } from './trim.ts'
 import type { Side } from './trim.ts'
-import { add2, dot2, left2, scale2, sub2 } from './vector.ts'
+import { add2, cross2, distance2, dot2, left2, length2, scale2, sub2 } from './vector.ts'
 
 /** A side of a trimmed piece in plan, as a segment. */
 export type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
@@ -93,7 +93,36 @@ const bearingMm2 = (pieces: readonly Piece[], own: Segment, other: Segment): num
   return (high - low) * mean
 }
 
-/** Pieces that a piece's cut bears on, most bearing first: `mayBear` says who was placed before it. */
+/** A cheek all but in one plane with the one beside it lies on what that one bears on, as far as they part by less. */
+const partMm = 0.001
+
+/** A cut's side of the plan, drawn out over the cheeks beside it while it stays in their plane. */
+const drawnOut = (own: Segment, ofPiece: readonly Segment[]): Segment => {
+  const run = sub2(own.to, own.from)
+  const dir = scale2(run, 1 / length2(run))
+  const beside = (end: Point2, atStart: boolean): number => {
+    const next = ofPiece.find(
+      (s) =>
+        s !== own &&
+        s.side.kind === own.side.kind &&
+        distance2(atStart ? s.to : s.from, end) < leastBearingMm / 10,
+    )
+    if (next === undefined) return 0
+    const far = sub2(atStart ? next.from : next.to, end)
+    const aside = Math.abs(cross2(dir, far))
+    return length2(far) * Math.min(1, partMm / Math.max(aside, 1e-12))
+  }
+  return {
+    ...own,
+    from: sub2(own.from, scale2(dir, beside(own.from, true))),
+    to: add2(own.to, scale2(dir, beside(own.to, false))),
+  }
+}
+
+/**
+ * Pieces that a piece's cut bears on, most bearing first: on the sides of any, and on the cuts of those
+ * placed before it, as `mayBear` says.
+ */
 export const bearings = (
   pieces: readonly Piece[],
   segments: SegmentIndex,
@@ -104,10 +133,12 @@ export const bearings = (
 ): number[] => {
   const own = segments.ofPiece[piece.id]?.find((s) => s.side.kind === end && s.side.cut === cut)
   if (own === undefined) return []
+  const face = drawnOut(own, segments.ofPiece[piece.id] ?? [])
   const sums = new Map<number, number>()
-  for (const other of segments.grid.near(boxOf(own, 1))) {
-    if (other.piece === piece.id || !mayBear(other.piece)) continue
-    const shared = bearingMm2(pieces, own, other)
+  for (const other of segments.grid.near(boxOf(face, 1))) {
+    if (other.piece === piece.id) continue
+    if (other.side.kind !== 'face' && !mayBear(other.piece)) continue
+    const shared = bearingMm2(pieces, face, other)
     if (shared > 0) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
   }
   return [...sums].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([id]) => id)
