@@ -3,7 +3,6 @@ import {
   facetOf,
   frameOf,
   gapAt,
-  inFrame,
   type Facet,
   type Facets,
   type Frame,
@@ -11,6 +10,7 @@ import {
 import { directionToBuilding, toBuilding, type Piece, type SawnPlane } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
+import { isFrameMember } from './slopes.ts'
 import { boxesMeet, boxOf, type Flat, type SolidKit } from './solid-kit.ts'
 import { cosDeg, dot, scale, sub, type Vec } from './vec.ts'
 
@@ -22,7 +22,7 @@ const REACH_MM = 6
 const FACING = cosDeg(2)
 /** Less than this is a corner's tip, not a face. */
 const SPECK_MM2 = 25
-/** A piece that is named must touch at all. */
+/** A cut that is listed must take some timber, and a piece that is named must touch. */
 const TOUCH_MM2 = 1
 /** Two cheeks nearly in one plane touch each other's piece by a sliver that needs no name. */
 const ASIDE_SHARE = 0.03
@@ -34,16 +34,18 @@ type Bearing = {
   openMm2: number
   /** The widest opening, square to the cut; under 0 where the pieces run into each other. */
   worstMm: number
-  /** It was cut to fit this piece, so this piece need not name it. */
-  buttsBack: boolean
+  /** It was cut to fit this piece, or is a board nailed over its end: it needs no name here. */
+  needsNoName: boolean
 }
 
 /** Part of a flat on which one side of a level line runs: `a · p <= d`. */
 function halfOf(kit: SolidKit, flat: Flat, a: readonly [number, number], d: number): Flat {
   const size = Math.hypot(a[0], a[1])
   const big = 20_000
+  // faces all but parallel part far outside the drawing: the whole of it is on one side
+  const edge = Math.min(d / size, big / 2)
   const half = kit.CrossSection.square([big, 2 * big], true)
-    .translate([d / size - big / 2, 0])
+    .translate([edge - big / 2, 0])
     .rotate((Math.atan2(a[1], a[0]) * 180) / Math.PI)
   const part = flat.intersect(half)
   half.delete()
@@ -68,7 +70,7 @@ function bearingOn(
   frame: Frame,
   face: Flat,
   facets: Facet[],
-): Omit<Bearing, 'mark' | 'buttsBack'> {
+): Omit<Bearing, 'mark' | 'needsNoName'> {
   const found = { closedMm2: 0, openMm2: 0, worstMm: 0 }
   for (const facet of facets) {
     const drawn = drawnIn(site.kit, frame, facet)
@@ -111,16 +113,18 @@ function bearingsOn(
     .map((o) => {
       const facing = facets.facing(o, scale(frame.normal, -1), FACING)
       const buttsBack = o.member.cuts.some((c) => [c.against, ...c.alsoAgainst].includes(mark))
-      return { mark: o.member.mark, buttsBack, ...bearingOn(site, frame, face, facing) }
+      const covers = isFrameMember(piece.member) && ['fascia', 'barge'].includes(o.member.role)
+      const needsNoName = buttsBack || covers
+      return { mark: o.member.mark, needsNoName, ...bearingOn(site, frame, face, facing) }
     })
     .filter((b) => b.closedMm2 + b.openMm2 > TOUCH_MM2)
     .sort((a, b) => b.closedMm2 - a.closedMm2)
 }
 
-/** Ends that may stand free: tails, the ends of ridges, and the foot of a broken hip. */
+/** Ends that may stand free: tails, the ends of ridges, the foot of a broken hip, boards and ties. */
 function mayStandFree(piece: Piece, sawn: SawnPlane): boolean {
   const { role } = piece.member
-  if (sawn.cut.end === 'tail' || role === 'ridge') return true
+  if (sawn.cut.end === 'tail' || role === 'ridge' || !isFrameMember(piece.member)) return true
   return role === 'broken-hip' && sawn.cut.end === 'foot'
 }
 
@@ -135,7 +139,7 @@ function judgeNames(say: Say, sawn: SawnPlane, bearings: Bearing[], faceMm2: num
     say(`its ${cut.end} cut is said to bear on it and does not`, 0, name)
   }
   for (const b of bearings) {
-    if (listed.includes(b.mark) || b.buttsBack || b.closedMm2 < aside) continue
+    if (listed.includes(b.mark) || b.needsNoName || b.closedMm2 < aside) continue
     say(`its ${cut.end} cut bears on it unsaid, mm²`, b.closedMm2, b.mark)
   }
   const named = bearings.filter((b) => listed.includes(b.mark))
@@ -166,12 +170,9 @@ function checkCut(
   const facet = facetOf(piece, frame)
   const say: Say = (text, out, other) =>
     complain({ check: 'joint', marks: other === undefined ? [mark] : [mark, other], out, text })
-  const face = new site.kit.CrossSection(
-    facet.outlines.map((ring) => ring.map((p) => inFrame(frame, p))),
-    'EvenOdd',
-  )
+  const face = drawnIn(site.kit, frame, facet)
   const faceMm2 = face.area()
-  if (faceMm2 < SPECK_MM2) say(`its ${cut.end} cut misses the timber, mm²`, faceMm2)
+  if (faceMm2 < TOUCH_MM2) say(`its ${cut.end} cut misses the timber, mm²`, faceMm2)
   else {
     if (cut.against === null && !mayStandFree(piece, sawn)) {
       say(`its ${cut.end} cut is said to bear on nothing`, 0)

@@ -2,8 +2,8 @@ import { ownHeight, backingOfSlopes } from './own-slopes.ts'
 import { toBuilding, toOwn, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
-import { distanceIn, heightOn, isAlongLine, isRafter } from './slopes.ts'
-import { distanceToRim, nearestOn } from './surface.ts'
+import { distanceIn, heightOn, isAlongLine, isFrameMember, isRafter } from './slopes.ts'
+import { distanceToRim, distanceToStretch } from './surface.ts'
 import { cosDeg, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
 const PLACE_TOL_MM = 0.01
@@ -28,24 +28,25 @@ function checkEnds(say: Say, site: Site, piece: Piece): void {
   if (Math.abs(turn) > ANGLE_TOL_DEG) say('its pitch is not its slope’s, degrees', turn)
 }
 
-/** A rafter that comes down to a valley starts from the valley's centre line. */
+/** A rafter that comes down to a valley starts from a valley's centre line. */
 function checkFromValley(say: Say, site: Site, piece: Piece): void {
   const { member } = piece
   const foot = member.cuts.find((cut) => cut.end === 'foot' && cut.against !== null)
   if (foot === undefined || !isRafter(member)) return
-  const valley = site.spec.members.find((m) => m.mark === foot.against)
-  if (valley?.role !== 'valley') return
-  const { from, to } = valley.axis
+  const met = site.spec.members.find((m) => m.mark === foot.against)
+  if (met?.role !== 'valley') return
   const { x, y } = member.axis.from
-  const [nx, ny] = nearestOn([from.x, from.y], [to.x, to.y], x, y)
-  const out = Math.hypot(nx - x, ny - y)
-  if (out > PLACE_TOL_MM) say(`starts off the centre line of ${valley.mark}, mm`, out)
+  const gaps = site.spec.lines
+    .filter((line) => line.kind === 'valley' && line.planes.includes(member.planes[0]!))
+    .map(({ from, to }) => distanceToStretch([from.x, from.y], [to.x, to.y], x, y))
+  const out = Math.min(Infinity, ...gaps)
+  if (out > PLACE_TOL_MM) say('comes down to a valley and starts off its centre line, mm', out)
 }
 
 /** `axis` stands over the set-out lines by the stand less the drop, and starts on the plate face. */
 export function checkPlace(complain: Complain, site: Site, piece: Piece): void {
   const { member } = piece
-  if (!isRafter(member) && !isAlongLine(member)) return
+  if (!isFrameMember(member)) return
   const { spec, surface } = site
   const say: Say = (text, out) => complain({ check: 'place', marks: [member.mark], out, text })
   for (const [name, p] of Object.entries(member.axis)) {
@@ -91,7 +92,7 @@ export function topUp(piece: Piece, left: number): number {
 /** No top arris over its own slopes, and none sunk under both of them. */
 export function checkTop(complain: Complain, site: Site, piece: Piece): void {
   const { member } = piece
-  if (!isRafter(member) && !isAlongLine(member)) return
+  if (!isFrameMember(member)) return
   const { surface, spec } = site
   const marks = [member.mark]
   const over = (own: Vec): number =>

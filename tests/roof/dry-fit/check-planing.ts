@@ -2,7 +2,7 @@ import { topUp } from './check-place.ts'
 import { toBuilding, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
-import { isAlongLine, isRafter } from './slopes.ts'
+import { isFrameMember } from './slopes.ts'
 import { distanceInside, surfaceHeight, type Plan, type Surface } from './surface.ts'
 import { dot, sub, type Vec } from './vec.ts'
 
@@ -60,7 +60,7 @@ function crossings(piece: Piece, surface: Surface): Vec[] {
 /** A corner over a neighbouring slope must be in the published planing, by what it stands over. */
 export function checkPlaning(complain: Complain, site: Site, piece: Piece): void {
   const { mark } = piece.member
-  if (!isRafter(piece.member) && !isAlongLine(piece.member)) return
+  if (!isFrameMember(piece.member)) return
   const { spec, surface } = site
   const middle = piece.member.setOutLengthMm / 2
   // over an overhang a member keeps to its own slopes, and is judged by them

@@ -82,7 +82,8 @@ export function facetOf(piece: Piece, frame: Frame): Facet {
 /** A facet drawn in another plane, square to that plane. */
 export function drawnIn(kit: SolidKit, frame: Frame, facet: Facet): Flat {
   const rings = facet.outlines.map((ring) => ring.map((p) => inFrame(frame, p)))
-  return new kit.CrossSection(rings, 'EvenOdd')
+  // the library takes no empty list
+  return new kit.CrossSection(rings.length > 0 ? rings : [[]], 'EvenOdd')
 }
 
 /** How far a facet's plane stands off a point of a frame, square to the frame; 0 where they touch. */

@@ -12,6 +12,7 @@ export type Complaint = {
     | 'planing'
     | 'seat'
     | 'layout'
+    | 'beside'
     | 'rounding'
   marks: string[]
   /** How far out, in millimetres (degrees or cubic millimetres where the text says so). */

@@ -68,3 +68,5 @@ export const isAlongLine = (member: Member): boolean => alongLine.includes(membe
 export const isRafter = (member: Member): boolean => rafters.includes(member.role)
 /** Members between two slopes with a top that can be planed into both. */
 export const isHipLike = (member: Member): boolean => isAlongLine(member) && member.role !== 'ridge'
+/** Part of the frame; the others lie beside it. */
+export const isFrameMember = (member: Member): boolean => isRafter(member) || isAlongLine(member)

@@ -1,4 +1,5 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
+import { checkBeside } from './check-beside.ts'
 import { checkJoints } from './check-joints.ts'
 import { checkLayout } from './check-layout.ts'
 import { checkLists, checkWeight } from './check-lists.ts'
@@ -59,6 +60,7 @@ export function checkPiece(complain: Complain, site: Site, facets: Facets, piece
   checkTop(complain, site, piece)
   checkPlaning(complain, site, piece)
   checkSeat(complain, site, piece)
+  checkBeside(complain, site, facets, piece)
   checkJoints(complain, site, facets, piece)
 }
 

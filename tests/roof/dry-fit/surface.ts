@@ -39,16 +39,18 @@ export function nearestOn(a: Plan, b: Plan, x: number, y: number): Plan {
   return [a[0] + t * dx, a[1] + t * dy]
 }
 
+export function distanceToStretch(a: Plan, b: Plan, x: number, y: number): number {
+  const [nx, ny] = nearestOn(a, b, x, y)
+  return Math.hypot(x - nx, y - ny)
+}
+
 /** How far outside a polygon a point is; 0 inside. */
 export function distanceOff(polygon: readonly Plan[], x: number, y: number): number {
   return isInside(polygon, x, y) ? 0 : distanceToRim(polygon, x, y)
 }
 
 export function distanceToRim(polygon: readonly Plan[], x: number, y: number): number {
-  const gaps = polygon.map((a, i) => {
-    const [nx, ny] = nearestOn(a, polygon[(i + 1) % polygon.length]!, x, y)
-    return Math.hypot(x - nx, y - ny)
-  })
+  const gaps = polygon.map((a, i) => distanceToStretch(a, polygon[(i + 1) % polygon.length]!, x, y))
   return Math.min(...gaps)
 }
 
