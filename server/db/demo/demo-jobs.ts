@@ -1,60 +1,10 @@
-import type { DemoRoofKey } from './demo-roofs.ts'
-
-/** Days are counted in working days from today: 0 today, −1 the one before. */
-export type DemoBooking = {
-  crew: 'A' | 'B'
-  fromWorkingDay: number
-  days: number
-  state: 'pencilled' | 'firm'
-  gear: string
-  /** Share of the tasks of days up to today that is ticked: 'all', 'half' of the last one, or 'none'. */
-  done: 'all' | 'half' | 'none'
-}
-
-export type DemoJob = {
-  number: string
-  title: string
-  siteAddress: string
-  accessNotes: string
-  siteContactName: string
-  siteContactPhone: string
-  customerName: string
-  customerPhone: string
-  customerEmail: string
-  covering: 'tiles' | 'sheet' | 'shingles' | 'other'
-  wantedInDays: number | null
-  priceDollars: number | null
-  /** Days before today. */
-  priceSentAgo: number | null
-  acceptedAgo: number | null
-  completedAgo: number | null
-  notes: string
-  crewNotes: string
-  roof: DemoRoofKey | null
-  issued: boolean
-  platesMeasured: boolean
-  booking: DemoBooking | null
-}
-
-const blank = {
-  accessNotes: '',
-  wantedInDays: null,
-  priceDollars: null,
-  priceSentAgo: null,
-  acceptedAgo: null,
-  completedAgo: null,
-  notes: '',
-  crewNotes: '',
-  roof: null,
-  issued: false,
-  platesMeasured: false,
-  booking: null,
-}
+import { blankJob, type DemoJob } from './demo-job.ts'
+import { demoWingJobs } from './demo-wing-jobs.ts'
 
 /** Fourteen jobs over every stage. Sites, customers and builders are invented; numbers are the regulator's for fiction. */
 export const demoJobs: DemoJob[] = [
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-101',
     title: 'Garden room',
     siteAddress: '4 Tern Lane, Marrow Creek',
@@ -67,7 +17,7 @@ export const demoJobs: DemoJob[] = [
     notes: 'Rang on Friday; plan to follow by mail.',
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-102',
     title: 'Carport behind the bakery',
     siteAddress: '19 Millrace Road, Marrow Creek',
@@ -81,7 +31,7 @@ export const demoJobs: DemoJob[] = [
     roof: 'carport',
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-103',
     title: 'Two-bay studio',
     siteAddress: '2 Saltbush Court, Upper Marrow',
@@ -98,7 +48,7 @@ export const demoJobs: DemoJob[] = [
     issued: true,
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-104',
     title: 'House with octagonal end',
     siteAddress: '31 Heron Street, Marrow Creek',
@@ -117,7 +67,7 @@ export const demoJobs: DemoJob[] = [
     issued: true,
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-105',
     title: 'Granny flat on a skew block',
     siteAddress: '7 Curlew Close, Upper Marrow',
@@ -135,7 +85,7 @@ export const demoJobs: DemoJob[] = [
     roof: 'skewPlan',
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-106',
     title: 'Lookout shelter',
     siteAddress: 'Wickham Park, Marrow Creek',
@@ -155,7 +105,7 @@ export const demoJobs: DemoJob[] = [
     booking: { crew: 'A', fromWorkingDay: 2, days: 1, state: 'pencilled', gear: '', done: 'none' },
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-107',
     title: 'Surgery with splayed end',
     siteAddress: '88 Marrow Road, Marrow Creek',
@@ -183,7 +133,7 @@ export const demoJobs: DemoJob[] = [
     },
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-108',
     title: 'House, four hips',
     siteAddress: '12 Pardalote Drive, Marrow Creek',
@@ -212,7 +162,7 @@ export const demoJobs: DemoJob[] = [
     },
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-109',
     title: 'Hall, one hip and one gable',
     siteAddress: '3 Chapel Rise, Upper Marrow',
@@ -239,7 +189,7 @@ export const demoJobs: DemoJob[] = [
     },
   },
   {
-    ...blank,
+    ...blankJob,
     number: 'QR-110',
     title: 'Workshop, gable both ends',
     siteAddress: '55 Quarry Track, Marrow Creek',
@@ -266,88 +216,5 @@ export const demoJobs: DemoJob[] = [
       done: 'all',
     },
   },
-  {
-    ...blank,
-    number: 'QR-111',
-    title: 'House with a garage wing',
-    siteAddress: '16 Spoonbill Way, Marrow Creek',
-    accessNotes: 'Corner block: unload from the side street.',
-    siteContactName: 'Imre Saltley',
-    siteContactPhone: '0491 575 789',
-    customerName: 'Saltley Building Co',
-    customerPhone: '(07) 5550 0159',
-    customerEmail: 'plans@saltley.example',
-    covering: 'tiles',
-    wantedInDays: 16,
-    priceDollars: 12_480,
-    priceSentAgo: 17,
-    acceptedAgo: 9,
-    crewNotes: 'Two ridges, two heights: set the higher one first.',
-    roof: 'twoWings',
-    issued: true,
-    booking: {
-      crew: 'A',
-      fromWorkingDay: 5,
-      days: 2,
-      state: 'firm',
-      gear: 'Drop saw, long level, harness kit',
-      done: 'none',
-    },
-  },
-  {
-    ...blank,
-    number: 'QR-112',
-    title: 'Kindergarten with an entry gable',
-    siteAddress: '40 Bandicoot Street, Upper Marrow',
-    accessNotes: 'No deliveries from 08:15 to 09:15, nor from 14:30.',
-    siteContactName: 'Dilys Orme',
-    siteContactPhone: '0491 576 398',
-    customerName: 'Upper Marrow kindergarten',
-    customerPhone: '(07) 5550 0160',
-    customerEmail: 'office@marrowkindy.example',
-    covering: 'sheet',
-    wantedInDays: 24,
-    priceDollars: 13_150,
-    priceSentAgo: 14,
-    acceptedAgo: 6,
-    roof: 'gabledWing',
-    issued: true,
-    booking: { crew: 'B', fromWorkingDay: 6, days: 2, state: 'pencilled', gear: '', done: 'none' },
-  },
-  {
-    ...blank,
-    number: 'QR-113',
-    title: 'Homestead round a yard',
-    siteAddress: '212 Old Weir Road, Upper Marrow',
-    siteContactName: 'Gilda Trask',
-    siteContactPhone: '0491 576 801',
-    customerName: 'Gilda Trask',
-    customerPhone: '0491 576 801',
-    customerEmail: 'gilda.trask@customer.example',
-    covering: 'sheet',
-    wantedInDays: 45,
-    priceDollars: 16_900,
-    priceSentAgo: 10,
-    acceptedAgo: 3,
-    notes: 'Three wings; wants the yard side finished first.',
-    roof: 'threeWings',
-    issued: true,
-  },
-  {
-    ...blank,
-    number: 'QR-114',
-    title: 'House bent along the creek',
-    siteAddress: '9 Reedbed Lane, Marrow Creek',
-    siteContactName: 'Tove Garrick',
-    siteContactPhone: '0491 577 426',
-    customerName: 'Tove Garrick',
-    customerPhone: '0491 577 426',
-    customerEmail: 'tove.garrick@customer.example',
-    covering: 'tiles',
-    wantedInDays: 50,
-    priceDollars: 8740,
-    priceSentAgo: 3,
-    roof: 'bentPlan',
-    issued: true,
-  },
+  ...demoWingJobs,
 ]
