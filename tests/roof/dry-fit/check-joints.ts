@@ -1,12 +1,4 @@
-import {
-  drawnIn,
-  facetOf,
-  frameOf,
-  gapAt,
-  type Facet,
-  type Facets,
-  type Frame,
-} from './facets.ts'
+import { drawnIn, facetOf, frameOf, gapAt, type Facet, type Facets, type Frame } from './facets.ts'
 import { directionToBuilding, toBuilding, type Piece, type SawnPlane } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'

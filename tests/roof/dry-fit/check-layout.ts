@@ -1,3 +1,4 @@
+import type { Roof } from '../../../shared/roof/roof-types.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
 import { bordersOf, levelStrips, squareStrips, type Border, type Strip } from './slope-strips.ts'
@@ -17,6 +18,7 @@ type SlopeLayout = {
   rafters: Rafter[]
   pitchDeg: number
   maxSpacingMm: number
+  spacing: Roof['spacing']
   thicknessMm: number
   minCreeperMm: number
   /** A rafter whose centre line is nearer than this to the end of its slope has no room there. */
@@ -41,6 +43,7 @@ function layoutOf(site: Site, index: number): SlopeLayout {
     rafters,
     pitchDeg: spec.planes[index]!.pitchDeg,
     maxSpacingMm: roof.maxSpacingMm,
+    spacing: roof.spacing,
     thicknessMm: roof.sections.rafter.thicknessMm,
     minCreeperMm: site.settings.minCreeperMm,
     besideHipMm: (roof.sections.rafter.thicknessMm + roof.sections.hip.thicknessMm) / 2,
@@ -93,6 +96,25 @@ function judgeEnd(
   say([rafter.mark], 'a rafter is missing beside it, mm', setOutAt(layout, next, inward))
 }
 
+/** Where rafters are left out of a bay: evenly, or in full bays from either side. */
+function leftOut(layout: SlopeLayout, from: number, to: number): number[][] {
+  const { maxSpacingMm: most } = layout
+  const bays = Math.ceil((to - from) / most - LOOSE_MM)
+  const places = (step: number): number[] =>
+    Array.from({ length: bays - 1 }, (_, k) => step * (k + 1))
+  if (layout.spacing === 'even') return [places((to - from) / bays).map((mm) => from + mm)]
+  return [places(most).map((mm) => from + mm), places(most).map((mm) => to - mm)]
+}
+
+/** Two rafters that follow each other, where between them none is long enough to be cut. */
+function judgeBay(say: Say, layout: SlopeLayout, inward: number, a: Rafter, b: Rafter): void {
+  const bay = b.along - a.along
+  if (bay <= layout.maxSpacingMm + LOOSE_MM) return
+  const missing = leftOut(layout, a.along, b.along)
+  const wrongly = missing.every((places) => places.some((along) => isLong(layout, along, inward)))
+  if (wrongly) say([a.mark, b.mark], 'bay between them, mm', bay)
+}
+
 /** A stretch with no rafter at all: wider than a bay of places long enough for one. */
 function judgeBare(say: Say, layout: SlopeLayout, inward: number, strip: Strip): void {
   const step = layout.maxSpacingMm / 10
@@ -107,9 +129,9 @@ function judgeBare(say: Say, layout: SlopeLayout, inward: number, strip: Strip):
 /**
  * The rule: follow a level line of the slope at any height. Where it crosses the slope, what carries
  * the battens are the rafters that pass there, and the hips, valleys and broken hips at its ends.
- * No two rafters that follow each other stand further apart than the spacing. From the last one to a
- * hip or valley it may be further only where a rafter one spacing on would be under the shortest
- * creeper. In a gable the last one stands flush with the wall.
+ * No two that follow each other stand further apart than the spacing, and from the last one to a hip or
+ * valley it is no further either; only where a rafter between would be under the shortest creeper may
+ * it be left out. In a gable the last one stands flush with the wall.
  */
 function judgeLevel(say: Say, layout: SlopeLayout, inward: number): void {
   for (const strip of levelStrips(layout.borders, inward)) {
@@ -127,11 +149,7 @@ function judgeLevel(say: Say, layout: SlopeLayout, inward: number): void {
     }
     judgeEnd(say, layout, inward, strip.lowBorder, strip.low, first)
     judgeEnd(say, layout, inward, strip.highBorder, strip.high, last)
-    here.slice(1).forEach((rafter, i) => {
-      const bay = rafter.along - here[i]!.along
-      if (bay <= layout.maxSpacingMm + LOOSE_MM) return
-      say([here[i]!.mark, rafter.mark], 'bay between them, mm', bay)
-    })
+    here.slice(1).forEach((rafter, i) => judgeBay(say, layout, inward, here[i]!, rafter))
   }
 }
 
