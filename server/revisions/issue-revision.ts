@@ -96,7 +96,8 @@ function write(
     }
     if (!framed) throw new Error('Nothing was framed, and no revision is the same.')
     const sequence = (latest?.sequence ?? 0) + 1
-    const row = { ...framed, id: newId(), letter: revisionLetter(sequence) }
+    const sizesTyped = readDraft(tx, jobId)?.sizesTyped ?? {}
+    const row = { ...framed, sizesTyped, id: newId(), letter: revisionLetter(sequence) }
     tx.insert(roofRevisions)
       .values({ ...row, jobId, sequence, issuedAt: now, issuedById: user.id })
       .run()

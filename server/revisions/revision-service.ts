@@ -1,6 +1,7 @@
 import type { JobRoof, Revision } from '../../shared/revisions/revision-schemas.ts'
 import { revisionLetter } from '../../shared/revisions/revision-letters.ts'
 import type { RoofForm } from '../../shared/revisions/roof-form.ts'
+import { sizesTypedAfter } from '../../shared/revisions/sizes-typed.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import type { Db } from '../db/client.ts'
 import { readFirm } from '../firm/firm-store.ts'
@@ -57,7 +58,9 @@ export function saveDraft(
   const now = deps.clock.now()
   return deps.db.transaction((tx) => {
     roofJobOf(tx, user, jobId, now)
-    const written = writeDraft(tx, jobId, { ...input, now })
+    const saver = { by: user.name, at: now.toISOString() }
+    const sizesTyped = sizesTypedAfter(readDraft(tx, jobId) ?? null, input.form, saver)
+    const written = writeDraft(tx, jobId, { ...input, sizesTyped, now })
     if (!written) throw staleVersion(draftBody(readDraft(tx, jobId)))
     writeAudit(tx, {
       at: now,
@@ -67,7 +70,7 @@ export function saveDraft(
       entityId: jobId,
       detail: { version: written.version },
     })
-    return { version: written.version, updatedAt: now.toISOString() }
+    return { version: written.version, updatedAt: now.toISOString(), sizesTyped }
   })
 }
 
@@ -92,6 +95,7 @@ function wholeRevision(
     settings: revision.settings,
     spec: revision.spec,
     engineVersion: revision.engineVersion,
+    sizesTyped: revision.sizesTyped,
     platesMeasured: hasPlateCheck(db, revision.id),
     latestLetter: latestIssue(db, jobId)?.letter ?? revision.letter,
   }

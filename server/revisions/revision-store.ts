@@ -1,6 +1,7 @@
 import { and, desc, eq, type SQL } from 'drizzle-orm'
 import type { RevisionSummary } from '../../shared/revisions/revision-schemas.ts'
 import { type RoofForm, roofFormSchema } from '../../shared/revisions/roof-form.ts'
+import type { SizesTyped } from '../../shared/revisions/sizes-typed.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { jobs, plateChecks, roofDrafts, roofRevisions } from '../db/tables/job-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
@@ -21,22 +22,29 @@ export function latestIssue(db: DbOrTx, jobId: string) {
     .get()
 }
 
-export type DraftRow = { form: RoofForm; version: number; updatedAt: Date }
+export type DraftRow = {
+  form: RoofForm
+  version: number
+  updatedAt: Date
+  sizesTyped: SizesTyped
+}
 
 /** Only forms that passed their schema are ever written; one from before a field was added gets it empty. */
 export function readDraft(db: DbOrTx, jobId: string): DraftRow | undefined {
   const row = db.select().from(roofDrafts).where(eq(roofDrafts.jobId, jobId)).get()
   if (!row) return undefined
-  return { form: roofFormSchema.parse(row.form), version: row.version, updatedAt: row.updatedAt }
+  const { version, updatedAt, sizesTyped } = row
+  return { form: roofFormSchema.parse(row.form), version, updatedAt, sizesTyped }
 }
 
 /** Writes the draft over the version the writer had seen; null when it has moved on. */
 export function writeDraft(
   db: DbOrTx,
   jobId: string,
-  input: { form: RoofForm; version: number; now: Date },
+  input: { form: RoofForm; version: number; sizesTyped: SizesTyped; now: Date },
 ): { version: number } | null {
-  const values = { form: input.form, updatedAt: input.now, version: input.version + 1 }
+  const { form, sizesTyped, now } = input
+  const values = { form, sizesTyped, updatedAt: now, version: input.version + 1 }
   if (input.version === 0) {
     const made = db
       .insert(roofDrafts)

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { coverings } from '../jobs/job-schemas.ts'
 import { frameSpecSchema, roofSchema, roofSettingsSchema } from './frame-spec-schema.ts'
 import { roofFormSchema } from './roof-form.ts'
+import { sizesTypedSchema } from './sizes-typed.ts'
 
 export const revisionSummarySchema = z.object({
   id: z.string(),
@@ -15,6 +16,8 @@ const draftSchema = z.object({
   form: roofFormSchema,
   version: z.number(),
   updatedAt: z.string(),
+  /** Who typed each size; the server says so, from who was signed in. */
+  sizesTyped: sizesTypedSchema,
 })
 export type RoofDraft = z.infer<typeof draftSchema>
 
@@ -42,7 +45,11 @@ export const saveDraftSchema = z.strictObject({
   form: roofFormSchema,
   version: z.number().int().min(0),
 })
-export const savedDraftSchema = z.object({ version: z.number(), updatedAt: z.string() })
+export const savedDraftSchema = z.object({
+  version: z.number(),
+  updatedAt: z.string(),
+  sizesTyped: sizesTypedSchema,
+})
 
 /** In a conflict's detail: what somebody else saved. */
 export const staleDraftSchema = z.object({ current: draftSchema.nullable() })
@@ -64,6 +71,7 @@ export const revisionSchema = revisionSummarySchema.extend({
   settings: roofSettingsSchema,
   spec: frameSpecSchema,
   engineVersion: z.string(),
+  sizesTyped: sizesTypedSchema,
   /** False until a check of sides and diagonals stands against this revision. */
   platesMeasured: z.boolean(),
   /** Letter of the job's newest revision. */

@@ -25,6 +25,18 @@ const groups: Group[] = [
     ],
   },
   {
+    title: 'On the outline of a roof',
+    roles: ['office'],
+    keys: [
+      { keys: ['↑', '↓', '←', '→'], does: 'Move the corner by 100 mm' },
+      { keys: ['Shift', '↑'], does: 'By 10 mm' },
+      { keys: ['Ctrl', '↑'], does: 'By 1 mm' },
+      { keys: ['Enter'], does: 'Open the edge or corner' },
+      { keys: ['Insert'], does: 'Put a corner on the edge' },
+      { keys: ['Delete'], does: 'Take out the corner' },
+    ],
+  },
+  {
     title: 'On a roof plan',
     keys: [
       { keys: ['←', '→'], does: 'To the timber before or after' },

@@ -13,7 +13,11 @@ const pitched = (pitchDeg: string) => typedForm('rectangle', { pitchDeg })
 function failure(status: number, current?: { form: RoofForm; version: number }): ApiFailure {
   const detail =
     status === 409
-      ? { current: current ? { ...current, updatedAt: '2026-12-02T00:00:00.000Z' } : null }
+      ? {
+          current: current
+            ? { ...current, updatedAt: '2026-12-02T00:00:00.000Z', sizesTyped: {} }
+            : null,
+        }
       : undefined
   const code = status === 409 ? 'conflict' : 'internal'
   return new ApiFailure({ code, message: 'No answer.', requestId: 'r', issues: [], detail }, status)

@@ -1,5 +1,6 @@
 import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { RoofGlyphData } from '../../../shared/drawing/roof-glyph.ts'
+import type { SizesTyped } from '../../../shared/revisions/sizes-typed.ts'
 import type { FrameSpec, Roof, RoofSettings } from '../../../shared/roof/roof-types.ts'
 import { people } from './people-tables.ts'
 
@@ -47,6 +48,8 @@ export const roofDrafts = sqliteTable('roof_drafts', {
   form: text('form', { mode: 'json' }).$type<unknown>().notNull(),
   updatedAt: integer('updated_at', { mode: 'timestamp_ms' }).notNull(),
   version: integer('version').notNull().default(1),
+  /** Who typed each size as it now stands. */
+  sizesTyped: text('sizes_typed', { mode: 'json' }).$type<SizesTyped>().notNull().default({}),
 })
 
 /** Issued and never changed again. */
@@ -71,6 +74,7 @@ export const roofRevisions = sqliteTable(
     issuedById: text('issued_by_id')
       .notNull()
       .references(() => people.id),
+    sizesTyped: text('sizes_typed', { mode: 'json' }).$type<SizesTyped>().notNull().default({}),
   },
   (t) => [uniqueIndex('roof_revisions_job').on(t.jobId, t.sequence)],
 )

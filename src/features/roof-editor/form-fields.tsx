@@ -19,10 +19,16 @@ type BoxProps = {
 
 /** A measure, kept as typed. */
 export function MeasureField(props: MeasureProps) {
-  const { form, problemAt, setText } = useRoofForm()
-  const { path } = props
+  const { form, problemAt, hintAt, setText } = useRoofForm()
+  const { path, hint } = props
   return (
-    <MeasureBox {...props} text={textAt(form, path)} problem={problemAt(path)} setText={setText} />
+    <MeasureBox
+      {...props}
+      hint={[hint, hintAt(path)].filter(Boolean).join(' ') || undefined}
+      text={textAt(form, path)}
+      problem={problemAt(path)}
+      setText={setText}
+    />
   )
 }
 

@@ -6,6 +6,8 @@ import { fieldId } from './roof-form-context.ts'
 /** Moves to a field and puts the cursor in it. */
 function goToField(path: string): void {
   const place = document.getElementById(fieldId(path))
+  const fold = place?.closest('details')
+  if (fold) fold.open = true
   place?.scrollIntoView({ block: 'center' })
   place?.querySelector<HTMLElement>('input, select, button')?.focus()
 }

@@ -5,6 +5,7 @@ import { formatDayWithYear } from '../../../shared/calendar/days.ts'
 import { localDayOf, localTimeOf } from '../../../shared/calendar/local-time.ts'
 import { cutOneFirst, workAtHeight } from '../../../shared/marking/marking-card.ts'
 import type { Revision } from '../../../shared/revisions/revision-schemas.ts'
+import { sizesTypedWords } from '../../../shared/revisions/sizes-typed.ts'
 import { RoofPlan } from '../../drawings/roof-plan.tsx'
 import { useMay, useSession } from '../../lib/session.ts'
 import { Button, buttonClass } from '../../ui/button.tsx'
@@ -83,6 +84,7 @@ function useIssuedText({ issuedAt }: Revision): string {
 
 function RevisionHeader({ revision, issuedOn }: { revision: Revision; issuedOn: string }) {
   const { job, letter } = revision
+  const sizesBy = sizesTypedWords(revision.sizesTyped, useSession().firm.timeZone)
   const mayEdit = useMay('roof:write')
   const mayOpenJob = useMay('job:read')
   return (
@@ -98,6 +100,7 @@ function RevisionHeader({ revision, issuedOn }: { revision: Revision; issuedOn: 
             job.title
           )}{' '}
           · {issuedOn} by {revision.issuedBy}
+          {sizesBy ? <p>{sizesBy}</p> : null}
         </>
       }
       actions={

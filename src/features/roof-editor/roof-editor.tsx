@@ -1,5 +1,7 @@
 import { type KeyboardEvent, useDeferredValue, useEffect, useMemo, useState } from 'react'
+import { answerHints } from '../../../shared/revisions/answer-hints.ts'
 import type { JobRoof } from '../../../shared/revisions/revision-schemas.ts'
+import type { SizesTyped } from '../../../shared/revisions/sizes-typed.ts'
 import { isTouched } from '../../lib/pointer.ts'
 import { Segmented } from '../../ui/segmented.tsx'
 import { CutButUnused } from './cut-but-unused.tsx'
@@ -10,7 +12,7 @@ import { RoofResults } from './roof-results.tsx'
 import { DraftConflict } from './save-state.tsx'
 import { ShapeFields } from './shape-fields.tsx'
 import { SlopeFields } from './slope-fields.tsx'
-import { CutFields, LayoutFields, SectionFields } from './timber-fields.tsx'
+import { BesideFields, CutFields, LayoutFields, SectionFields } from './timber-fields.tsx'
 import { useFramedRoof } from './use-framed-roof.ts'
 import { useIssue } from './use-issue.ts'
 import { useRoofDraft } from './use-roof-draft.ts'
@@ -21,6 +23,8 @@ const parts = [
   { value: 'numbers', label: 'Numbers' },
 ] as const
 type Part = (typeof parts)[number]['value']
+
+const noSizes: SizesTyped = {}
 
 /** Fields on the left, the roof they make on the right; on a phone one part at a time. */
 export function RoofEditor({ opened }: { opened: JobRoof }) {
@@ -34,6 +38,11 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
   useStartTyping(form.lengthMm === '')
   const issue = useIssue(opened, { form, firm, saver })
 
+  const hints = useMemo(
+    () => answerHints(settled, reading.roof ? (framed?.spec?.cautions ?? []) : [], firm),
+    [settled, reading, framed, firm],
+  )
+
   const handle = useMemo((): RoofFormHandle => {
     const shown = new Map(
       (reading.problems ?? [])
@@ -43,10 +52,11 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
     return {
       form,
       problemAt: (path) => shown.get(path),
+      hintAt: (path) => hints.get(path),
       setText,
       setForm,
     }
-  }, [form, reading, setForm, setText, issue.wasRefused])
+  }, [form, reading, hints, setForm, setText, issue.wasRefused])
 
   return (
     <RoofFormContext value={handle}>
@@ -70,7 +80,8 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
           <div className={`space-y-4 ${part === 'fields' ? '' : 'hidden lg:block'}`}>
             <ShapeFields />
             <SlopeFields brickOffsetMm={brickOffsetMm} />
-            <SectionFields />
+            <SectionFields sizesTyped={opened.draft?.sizesTyped ?? noSizes} />
+            <BesideFields sizesTyped={opened.draft?.sizesTyped ?? noSizes} />
             <LayoutFields />
             <CutFields />
           </div>

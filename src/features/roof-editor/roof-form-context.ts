@@ -5,6 +5,8 @@ export type RoofFormHandle = {
   form: RoofForm
   /** What to show at a field; undefined where all is well. */
   problemAt: (path: string) => string | undefined
+  /** What would answer a caution, at the field where it could be typed. */
+  hintAt: (path: string) => string | undefined
   setText: (path: string, text: string) => void
   /** A change of more than one text; `what` names the step for undo. */
   setForm: (form: RoofForm, what: string) => void

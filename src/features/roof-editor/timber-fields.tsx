@@ -1,5 +1,13 @@
-import { type SectionKey, sectionKeys } from '../../../shared/revisions/roof-form.ts'
+import { useState } from 'react'
+import { formatDay } from '../../../shared/calendar/days.ts'
+import { localDayOf } from '../../../shared/calendar/local-time.ts'
+import { besideKeys, type SectionKey, sectionKeys } from '../../../shared/revisions/roof-form.ts'
+import { isEmptySection } from '../../../shared/revisions/roof-of-form.ts'
+import type { SizesTyped } from '../../../shared/revisions/sizes-typed.ts'
+import { useSession } from '../../lib/session.ts'
+import { Fold } from '../../ui/fold.tsx'
 import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
+import { useRoofForm } from './roof-form-context.ts'
 
 export const sizesRule =
   'Sized by span tables or an engineer, not by this program. Type what they say.'
@@ -36,23 +44,61 @@ const valleyTops = [
   ['dished', 'Dished'],
 ] as const
 
-/** Every size is typed by a person; none is offered. */
-export function SectionFields() {
+type SizesProps = { sizesTyped: SizesTyped }
+
+/** Every size is typed by a person; none is offered. Who typed it stands beside it. */
+export function SectionFields({ sizesTyped }: SizesProps) {
   return (
     <FieldGroup title="Timber sizes" note={sizesRule}>
       {sectionKeys.map((key) => (
-        <fieldset key={key} className="col-span-2">
-          <legend className="mb-1 font-semibold">{sectionTitles[key]}</legend>
-          <div className="grid grid-cols-2 gap-2">
-            <MeasureField path={`sections.${key}.depthMm`} label="Depth, mm" />
-            <MeasureField path={`sections.${key}.thicknessMm`} label="Thickness, mm" />
-          </div>
-          {sectionHints[key] ? (
-            <p className="mt-1 text-sm text-ink-soft">{sectionHints[key]}</p>
-          ) : null}
-        </fieldset>
+        <SectionPair key={key} name={key} sizesTyped={sizesTyped} />
       ))}
     </FieldGroup>
+  )
+}
+
+/** Timbers that are set out only where a size is typed for them. */
+export function BesideFields({ sizesTyped }: SizesProps) {
+  const { form } = useRoofForm()
+  const [wasUsed] = useState(() => besideKeys.some((key) => !isEmptySection(form.sections[key])))
+  return (
+    <section className="rounded-md border border-rule bg-sheet px-4">
+      <Fold title="Timbers beside the frame" isOpen={wasUsed}>
+        <p className="text-sm text-ink-soft">Empty: not set out. {sizesRule}</p>
+        <div className="mt-3 grid grid-cols-2 gap-3 pb-4">
+          {besideKeys.map((key) => (
+            <SectionPair key={key} name={key} sizesTyped={sizesTyped} />
+          ))}
+          <MeasureField
+            path="collarTieHeightMm"
+            label="Collar tie height, mm"
+            hint="Plate to the tie’s underside. Empty: in the upper third of the rise."
+            className="col-span-2"
+          />
+        </div>
+      </Fold>
+    </section>
+  )
+}
+
+function SectionPair({ name, sizesTyped }: { name: SectionKey } & SizesProps) {
+  const { timeZone } = useSession().firm
+  const typed = sizesTyped[name]
+  const day = typed ? formatDay(localDayOf(new Date(typed.at), timeZone)) : ''
+  const hint = sectionHints[name]
+  return (
+    <fieldset className="col-span-2">
+      <legend className="mb-1 font-semibold">{sectionTitles[name]}</legend>
+      <div className="grid grid-cols-2 gap-2">
+        <MeasureField path={`sections.${name}.depthMm`} label="Depth, mm" />
+        <MeasureField path={`sections.${name}.thicknessMm`} label="Thickness, mm" />
+      </div>
+      {typed ? (
+        <p className="mt-1 text-sm text-ink-soft">{`Typed by ${typed.by}, ${day}.`}</p>
+      ) : hint ? (
+        <p className="mt-1 text-sm text-ink-soft">{hint}</p>
+      ) : null}
+    </fieldset>
   )
 }
 
