@@ -11,19 +11,23 @@ import type { Plane } from '../vector.ts'
 import type { BesideGround } from './beside-ground.ts'
 import { besideMember } from './beside-member.ts'
 
-/** A barge with the gable it stands on and the eave that it comes down to. */
-export type BargeDraft = { edge: number; eave: number; draft: DraftMember }
+/** A barge with the plate corner at its foot. */
+export type BargeDraft = { corner: number; draft: DraftMember }
 
 /** A verge line with its gable, the eave at its foot, and the verge beyond its apex, if any. */
-type Verge = { line: NodeLine; gable: PlateEdge; eave: PlateEdge; mate: NodeLine | null }
+type Verge = {
+  line: NodeLine
+  gable: PlateEdge
+  eave: PlateEdge
+  corner: number
+  mate: NodeLine | null
+}
 
 const gableUnder = (ground: BesideGround, line: NodeLine): PlateEdge | null => {
   const face = at(ground.lines.faces, line.slopes[0] ?? 0)
-  const place = face.nodes.findIndex((from, k) => {
-    const to = at(face.nodes, k + 1)
-    return (from === line.from && to === line.to) || (from === line.to && to === line.from)
-  })
-  const border = face.borders[place]
+  const border = face.borders.find(
+    (one) => one.line !== null && at(ground.lines.lines, one.line) === line,
+  )
   return border?.kind === 'plate' ? at(ground.plates.edges, border.edge) : null
 }
 
@@ -41,7 +45,7 @@ const verges = (ground: BesideGround): Verge[] => {
       all.find(
         (other) => other !== line && other.to === line.to && gableUnder(ground, other) === gable,
       ) ?? null
-    return [{ line, gable, eave, mate }]
+    return [{ line, gable, eave, corner, mate }]
   })
 }
 
@@ -128,6 +132,6 @@ export const barges = (ground: BesideGround, firstId: number): BargeDraft[] => {
       dropMm,
       planes: [...verge.line.slopes],
     })
-    return { edge: verge.gable.index, eave: verge.eave.index, draft }
+    return { corner: verge.corner, draft }
   })
 }

@@ -1,11 +1,12 @@
-import { bevelOf, bothWays, crossingAt, crossingOf, timberPoint } from '../bevel.ts'
+import { bevelOf, bothWays, timberPoint } from '../bevel.ts'
 import type { Timber } from '../bevel.ts'
 import type { DraftCut } from '../cuts.ts'
-import { endCorners, endReachMm } from '../ends.ts'
+import { endCorners } from '../ends.ts'
 import type { DraftMember } from '../members.ts'
-import type { Cut, Member, Point3, RoofSettings } from '../roof-types.ts'
-import { degrees, dot3, scale3 } from '../vector.ts'
+import type { Cut, Member, RoofSettings } from '../roof-types.ts'
+import { degrees, scale3 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
+import { endFaces, facesReachMm } from './end-faces.ts'
 
 /** A saw cut of a timber beside the frame: its plane, normal off the timber, and the pieces it bears on. */
 export type EndCut = { end: Cut['end']; plane: Plane; bears: number[] }
@@ -24,7 +25,7 @@ export type BesideTimber = {
   topInSlope?: boolean
 }
 
-/** Squares of a top that is not planed. */
+/** A top that is not planed. */
 const noFalls = { left: 0, right: 0 }
 /** A long point nearer the middle than this is central. */
 const centralMm = 0.05
@@ -49,47 +50,6 @@ export const turnedTimber = (timber: Timber): Timber => ({
   direction: scale3(timber.direction, -1),
   left: scale3(timber.left, -1),
 })
-
-/** The four arrises of a timber: mm left of the centre line, mm down under the top. */
-const arrises = (timber: Timber): [number, number][] => {
-  const bottom = timber.depthMm / timber.cos
-  return [
-    [timber.halfMm, 0],
-    [-timber.halfMm, 0],
-    [-timber.halfMm, bottom],
-    [timber.halfMm, bottom],
-  ]
-}
-
-/** Where a plane's face ends on the four arrises, going round. */
-export const cutFace = (timber: Timber, plane: Plane): Point3[] => {
-  const crossing = crossingOf(plane, timber)
-  return arrises(timber).map(([left, down]) =>
-    timberPoint(timber, crossingAt(crossing, left, down), left, down),
-  )
-}
-
-/** The planes of one end that take timber: each is the nearest on some arris. */
-export const governing = <T extends { plane: Plane }>(
-  timber: Timber,
-  cuts: T[],
-  upper: boolean,
-): T[] => {
-  const kept = new Set<T>()
-  for (const [left, down] of arrises(timber)) {
-    let best: T | null = null
-    let bestMm = Infinity
-    for (const cut of cuts) {
-      const along = crossingAt(crossingOf(cut.plane, timber), left, down) * (upper ? 1 : -1)
-      if (along < bestMm - 1e-6) {
-        best = cut
-        bestMm = along
-      }
-    }
-    if (best !== null) kept.add(best)
-  }
-  return cuts.filter((cut) => kept.has(cut))
-}
 
 const draftCut = (settings: RoofSettings, timber: Timber, { end, plane }: EndCut): DraftCut => {
   const bevel = bevelOf(plane, timber, noFalls)
@@ -133,7 +93,9 @@ export const besideMember = (settings: RoofSettings, beside: BesideTimber): Draf
   const heads = cuts.filter((cut) => cut.end === 'head')
   const feet = cuts.filter((cut) => cut.end !== 'head')
   const along = (end: Cut['end']) => cuts.filter((c) => c.end === end).map((c) => c.alongMm)
-  const cutLengthMm = endReachMm(timber, heads, true) - endReachMm(timber, feet, false)
+  const reach = (ends: DraftCut[], upper: boolean) =>
+    facesReachMm(timber, endFaces(timber, ends, upper), upper)
+  const cutLengthMm = reach(heads, true) - reach(feet, false)
   const volumeM3 = (cutLengthMm * thicknessMm * timber.depthMm) / 1_000_000_000
   const { direction } = timber
   const level = Math.hypot(direction.x, direction.y)
@@ -161,7 +123,3 @@ export const besideMember = (settings: RoofSettings, beside: BesideTimber): Draf
     weightKg: volumeM3 * settings.densityKgM3,
   }
 }
-
-/** Whether a plane cuts a timber's end at all, and not along it. */
-export const facesEnd = (plane: Plane, timber: Timber): boolean =>
-  Math.abs(dot3(plane.normal, timber.direction)) > 0.02

@@ -1,17 +1,23 @@
 import type { DraftMember, FrameDraft } from '../members.ts'
 import type { Point3, Section } from '../roof-types.ts'
-import { at, insideMm, slopeHeightMm } from '../slopes.ts'
-import { add2, distance2, dot2, left2, scale2 } from '../vector.ts'
+import { at, slopeHeightMm } from '../slopes.ts'
+import { add2, distance2, dot2, left2, scale2, sub2 } from '../vector.ts'
+import type { Plane } from '../vector.ts'
 import { besideMember, lyingTimber } from './beside-member.ts'
+import type { EndCut } from './beside-member.ts'
 import type { BesideGround } from './beside-ground.ts'
+import { runsInto } from './clear-of.ts'
+import { endFaces } from './end-faces.ts'
 import { slopeAxes } from './slope-axes.ts'
 
 /** Collar ties: upper third of the rise, at most 1.2 m apart: IRC R802.3.1, as quoted by a secondary page. */
 const upperThird = 2 / 3
 export const defaultTieSpacingMm = 1200
 
-/** Rafters whose heads are nearer than this stand opposite each other. */
-const oppositeMm = 0.5
+/** Rafters whose sides are this near to one plane stand opposite each other. */
+const sideMm = 0.05
+/** Heads of opposite rafters lie this near together, but for what the ridge's set-out leaves. */
+const headMm = 0.5
 const slackMm = 0.5
 /** A tie shorter than this along its top is no tie. */
 const leastTieMm = 300
@@ -34,7 +40,9 @@ export const commonPairs = (ground: BesideGround): PairRow[] => {
   commons.forEach((a, k) => {
     for (const b of commons.slice(k + 1)) {
       if (dot2(a.piece.dir, b.piece.dir) > -1 + 1e-9) continue
-      if (distance2(a.piece.head, b.piece.head) > oppositeMm) continue
+      if (distance2(a.piece.head, b.piece.head) > headMm) continue
+      const aside = dot2(left2(a.piece.dir), sub2(b.piece.head, a.piece.head))
+      if (Math.abs(aside) > sideMm) continue
       const slopes: [number, number] = [soleSlope(a), soleSlope(b)]
       let row = rows.find((r) => r.slopes[0] === slopes[0] && r.slopes[1] === slopes[1])
       if (row === undefined) {
@@ -109,42 +117,16 @@ export const tieHeight = (
 const sharesRow = (ridge: FrameDraft, row: PairRow): boolean =>
   row.slopes.every((slope) => ridge.planes.includes(slope))
 
-/** The side of a pair that has room for a tie beside the rafters: towards the row's middle first. */
-const sideOf = (
-  ground: BesideGround,
-  row: PairRow,
-  pair: Pair,
-  section: Section,
-): 1 | -1 | null => {
-  const first = at(row.pairs, 0).alongMm
-  const last = at(row.pairs, -1).alongMm
-  const inwards = pair.alongMm <= (first + last) / 2 ? 1 : -1
-  const rafterMm = ground.roof.sections.rafter.thicknessMm
-  const isFree = (side: 1 | -1) => {
-    const centre = pair.alongMm + (side * (rafterMm + section.thicknessMm)) / 2
-    return ground.drafts.every((draft) => {
-      const [slope] = draft.planes
-      if (draft.planes.length !== 1 || slope === undefined || !row.slopes.includes(slope))
-        return true
-      const off = Math.abs(dot2(row.ridgeDir, draft.piece.head) - centre)
-      return off >= (rafterMm + section.thicknessMm) / 2 - 1e-6
-    })
-  }
-  if (isFree(inwards)) return inwards
-  return isFree(inwards === 1 ? -1 : 1) ? (inwards === 1 ? -1 : 1) : null
-}
-
-const tieOf = (
+/** A tie beside one side of a pair of commons, as a timber between the planes of their tops. */
+const layTie = (
   ground: BesideGround,
   row: PairRow,
   pair: Pair,
   section: Section,
   heightMm: number,
-  id: number,
-): DraftMember | null => {
-  const { plates, settings, standMm } = ground
-  const side = sideOf(ground, row, pair, section)
-  if (side === null) return null
+  side: 1 | -1,
+) => {
+  const { plates, standMm } = ground
   const offMm = (side * (ground.roof.sections.rafter.thicknessMm + section.thicknessMm)) / 2
   const topMm = heightMm + section.depthMm
   const centre = add2(pair.a.piece.head, scale2(row.ridgeDir, offMm))
@@ -153,33 +135,75 @@ const tieOf = (
     const backMm = (slopeHeightMm(slope, centre) + standMm - topMm) / slope.tan
     return { ...add2(centre, scale2(slope.inward, -backMm)), z: topMm }
   }
-  const [from, to] = [end(pair.a), end(pair.b)]
-  const lengthMm = distance2(from, to)
-  const inMm = insideMm(at(plates.slopes, soleSlope(pair.a)), from)
-  if (lengthMm < leastTieMm || inMm < 0) return null
-  const { dir, left } = pair.a.piece
-  const plane = (draft: FrameDraft, point: Point3) => ({
+  const plane = (draft: FrameDraft, point: Point3): Plane => ({
     point,
     normal: slopeAxes(at(plates.slopes, soleSlope(draft))).normal,
   })
-  return besideMember(settings, {
+  const [from, to] = [end(pair.a), end(pair.b)]
+  const { dir, left } = pair.a.piece
+  const cuts: EndCut[] = [
+    { end: 'head', plane: plane(pair.b, to), bears: [] },
+    { end: 'foot', plane: plane(pair.a, from), bears: [] },
+  ]
+  const timber = lyingTimber(
+    {
+      origin: from,
+      direction: { ...dir, z: 0 },
+      left: { ...left, z: 0 },
+      up: { x: 0, y: 0, z: 1 },
+    },
+    section,
+  )
+  return {
+    timber,
+    cuts,
+    lengthMm: dot2(dir, { x: to.x - from.x, y: to.y - from.y }),
+    alongMm: pair.alongMm + offMm,
+  }
+}
+
+/** Whether a tie finds its place free: no other rafter of its slopes there, no hip or ridge that it runs into. */
+const isFree = (
+  ground: BesideGround,
+  row: PairRow,
+  section: Section,
+  { timber, cuts, alongMm }: ReturnType<typeof layTie>,
+): boolean => {
+  const faces = [
+    ...endFaces(timber, cuts.slice(0, 1), true),
+    ...endFaces(timber, cuts.slice(1), false),
+  ]
+  const apartMm = (ground.roof.sections.rafter.thicknessMm + section.thicknessMm) / 2
+  return ground.drafts.every((draft) => {
+    if (draft.piece.line !== null) return !runsInto(timber, faces, draft)
+    if (!row.slopes.includes(soleSlope(draft))) return true
+    return Math.abs(dot2(row.ridgeDir, draft.piece.head) - alongMm) >= apartMm - sideMm
+  })
+}
+
+/** The tie of a pair, on the side towards the row's middle or else on the other; null where neither has room. */
+const tieOf = (
+  ground: BesideGround,
+  row: PairRow,
+  pair: Pair,
+  section: Section,
+  heightMm: number,
+  id: number,
+): DraftMember | null => {
+  const middleMm = (at(row.pairs, 0).alongMm + at(row.pairs, -1).alongMm) / 2
+  const inwards = pair.alongMm <= middleMm ? 1 : -1
+  const sides: (1 | -1)[] = inwards === 1 ? [1, -1] : [-1, 1]
+  const laid = sides
+    .map((side) => layTie(ground, row, pair, section, heightMm, side))
+    .find((tie) => tie.lengthMm >= leastTieMm && isFree(ground, row, section, tie))
+  if (laid === undefined) return null
+  return besideMember(ground.settings, {
     id,
     role: 'collar-tie',
-    timber: lyingTimber(
-      {
-        origin: from,
-        direction: { ...dir, z: 0 },
-        left: { ...left, z: 0 },
-        up: { x: 0, y: 0, z: 1 },
-      },
-      section,
-    ),
+    timber: laid.timber,
     thicknessMm: section.thicknessMm,
-    lengthMm,
-    cuts: [
-      { end: 'head', plane: plane(pair.b, to), bears: [] },
-      { end: 'foot', plane: plane(pair.a, from), bears: [] },
-    ],
+    lengthMm: laid.lengthMm,
+    cuts: laid.cuts,
     dropMm: 0,
     planes: [...row.slopes],
   })

@@ -1,10 +1,20 @@
 import type { BesideGround } from './beside-ground.ts'
 import type { NodeLine } from '../roof-lines.ts'
-import type { CoveringTotals, LineKind, Member, MemberRole, RoofPlane } from '../roof-types.ts'
+import type {
+  CoveringTotals,
+  LineKind,
+  Member,
+  MemberRole,
+  Point2,
+  RoofPlane,
+} from '../roof-types.ts'
 import { at } from '../slopes.ts'
 import type { PlateEdge } from '../slopes.ts'
 import { distance2, distance3, dot2, scale2, sub2, unit2 } from '../vector.ts'
 import { tailLine } from './tail-lines.ts'
+
+/** A gable that a line's end faces less squarely than this (cosine) is beside it, not before it. */
+const leastFacing = 0.1
 
 const sum = (mm: number[]): number => mm.reduce((total, one) => total + one, 0)
 
@@ -31,11 +41,12 @@ const ridgeLengthMm = (ground: BesideGround, line: NodeLine): number => {
   const [from, to] = [line.from, line.to].map((node) => at(ground.lines.nodes, node).point)
   if (from === undefined || to === undefined) return 0
   const along = unit2(sub2(to, from))
-  const past = [
-    ...gablesAt(ground, line.from).map((gable) => reachMm(gable, scale2(along, -1))),
-    ...gablesAt(ground, line.to).map((gable) => reachMm(gable, along)),
-  ]
-  return distance3(from, to) + sum(past)
+  const past = (node: number, out: Point2) =>
+    gablesAt(ground, node)
+      .filter((gable) => -dot2(gable.inward, out) > leastFacing)
+      .map((gable) => reachMm(gable, out))
+  const ends = [...past(line.from, scale2(along, -1)), ...past(line.to, along)]
+  return distance3(from, to) + sum(ends)
 }
 
 /** True length of a hip or valley, run on down from its plate corner to the tail lines by `choose`. */

@@ -6,7 +6,8 @@ import { runsStraightOn, tailLine } from './tail-lines.ts'
 /** What a fascia meets at an end: another eave's fascia, a gable's verge, or an eave that runs on at another height. */
 export type RunEnd = {
   kind: 'mitre' | 'verge' | 'square'
-  /** The edge beyond the corner. */
+  /** The plate corner, and the edge beyond it. */
+  corner: number
   edge: number
   /** An inward corner of the plan. */
   inward: boolean
@@ -28,6 +29,7 @@ const sharesTail = (before: PlateEdge, after: PlateEdge): boolean =>
 
 const runEnd = (before: PlateEdge, after: PlateEdge, beyond: PlateEdge): RunEnd => ({
   kind: beyond.finish === 'gable' ? 'verge' : runsStraightOn(before, after) ? 'square' : 'mitre',
+  corner: after.index,
   edge: beyond.index,
   inward: cross2(before.along, after.along) < 0,
 })

@@ -9,9 +9,10 @@ import { along3, cross3, dot3, radians, scale3, unit3 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import type { BargeDraft } from './barges.ts'
 import type { BesideGround } from './beside-ground.ts'
-import { besideMember, cutFace, lyingTimber, turnedTimber } from './beside-member.ts'
+import { besideMember, lyingTimber, turnedTimber } from './beside-member.ts'
 import type { EndCut } from './beside-member.ts'
 import { eaveRuns } from './eave-runs.ts'
+import { planeSection } from './end-faces.ts'
 import type { EaveRun, RunEnd } from './eave-runs.ts'
 import { leastBearingMm2, sharedFaceMm2, sideFace } from './shared-face.ts'
 
@@ -50,7 +51,7 @@ const sharedPoint = (a: Plane, b: Plane): Point3 => {
 /** The plane of a fascia's end. A mitre runs through the lines in which backs and fronts of both boards cross. */
 const endPlane = (ground: BesideGround, laid: Laid, end: RunEnd, upper: boolean): Plane => {
   const { edge } = laid
-  const corner = at(ground.plates.edges, upper ? at(laid.run.edges, -1) + 1 : edge.index).from
+  const corner = at(ground.plates.edges, end.corner).from
   const beyond = at(ground.plates.edges, end.edge)
   const ahead = scale3({ x: edge.along.x, y: edge.along.y, z: 0 }, upper ? 1 : -1)
   if (end.kind === 'square') return { point: { ...corner, z: 0 }, normal: ahead }
@@ -74,19 +75,17 @@ const bearsOn = (
   plane: Plane,
   firstId: number,
 ): number[] => {
-  const face = cutFace(laid.timber, plane)
+  const face = planeSection(laid.timber, plane)
   const meets = (other: Point3[]) => sharedFaceMm2(face, other, plane.normal) > leastBearingMm2
   if (end.kind === 'verge') {
-    const cover = barges.find(
-      (barge) => barge.edge === end.edge && laid.run.edges.includes(barge.eave),
-    )
+    const cover = barges.find((barge) => barge.corner === end.corner)
     if (cover === undefined) return []
     const side = dot3(cover.draft.timber.left, plane.normal) < 0 ? 1 : -1
     return meets(sideFace(cover.draft, side)) ? [cover.draft.piece.id] : []
   }
   const place = all.findIndex((other) => other.run.edges.includes(end.edge))
   const mate = all[place]
-  return mate !== undefined && meets(cutFace(mate.timber, plane)) ? [firstId + place] : []
+  return mate !== undefined && meets(planeSection(mate.timber, plane)) ? [firstId + place] : []
 }
 
 /** Heads are where the rarer cut is: square ends first, then inside corners, then outside ones. */

@@ -7,15 +7,21 @@ import { cross3, dot3, unit3 } from '../vector.ts'
 /** A face that shares less than this with another does not bear on it, mm². */
 export const leastBearingMm2 = 10
 
-/** One side face of a timber, its left or its right, between its cuts, as a polygon in space. */
-export const sideFace = ({ timber, cuts }: DraftMember, side: 1 | -1): Point3[] => {
-  const left = side * timber.halfMm
-  const bottom = timber.depthMm / timber.cos
+/** Where a line along a timber, mm left of the top centre line, starts and ends at its cuts. */
+export const timberEnds = ({ cuts }: DraftMember, leftMm = 0): [number, number] => {
   const reaches = (upper: boolean) =>
     cuts
       .filter((cut) => (cut.end === 'head') === upper)
-      .map((cut) => crossingAt(cut.crossing, left, 0))
-  const [fromMm, toMm] = [Math.max(...reaches(false)), Math.min(...reaches(true))]
+      .map((cut) => crossingAt(cut.crossing, leftMm, 0))
+  return [Math.max(...reaches(false)), Math.min(...reaches(true))]
+}
+
+/** One side face of a timber, its left or its right, between its cuts, as a polygon in space. */
+export const sideFace = (member: DraftMember, side: 1 | -1): Point3[] => {
+  const { timber } = member
+  const left = side * timber.halfMm
+  const bottom = timber.depthMm / timber.cos
+  const [fromMm, toMm] = timberEnds(member, left)
   return [
     timberPoint(timber, fromMm, left, 0),
     timberPoint(timber, toMm, left, 0),
