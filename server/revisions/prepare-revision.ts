@@ -1,10 +1,9 @@
 import { createHash } from 'node:crypto'
 import { type RoofGlyphData, roofGlyphOf } from '../../shared/drawing/roof-glyph.ts'
 import type { FormProblem } from '../../shared/revisions/form-typing.ts'
+import { frameOfForm } from '../../shared/revisions/frame-of-form.ts'
 import type { RoofForm } from '../../shared/revisions/roof-form.ts'
-import { type FormFirm, roofOfForm } from '../../shared/revisions/roof-of-form.ts'
-import { unsizedProblems } from '../../shared/revisions/unsized-sections.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
+import { type FormFirm, typedRoof } from '../../shared/revisions/roof-of-form.ts'
 import { engineVersion } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from '../../shared/roof/roof-types.ts'
 import { canonicalJson } from './canonical-json.ts'
@@ -35,15 +34,14 @@ export type PreparedRevision =
 /** Everything that issuing a draft works out, as plain data in and out: it can run in a thread. */
 export function prepareRevision(question: RevisionQuestion): PreparedRevision {
   const { form, firm, latestHash } = question
-  const reading = roofOfForm(form, firm)
-  if (reading.problems !== null) return { kind: 'refused', problems: reading.problems }
-  const { roof } = reading
   const { settings } = firm
-  const inputHash = hashOf(roof, settings)
-  if (inputHash === latestHash) return { kind: 'same' }
-  const spec = frameRoof(roof, settings)
-  const unsized = unsizedProblems(form, spec)
-  if (unsized.length > 0) return { kind: 'refused', problems: unsized }
+  const typed = typedRoof(form, firm)
+  const inputHash = hashOf(typed.drawn, settings)
+  if (typed.problems.length === 0 && inputHash === latestHash) return { kind: 'same' }
+  const { reading, spec } = frameOfForm(form, firm)
+  if (reading.problems !== null) return { kind: 'refused', problems: reading.problems }
+  if (spec === null) throw new Error('A roof without a fault was not framed.')
+  const { roof } = reading
   const glyph = roofGlyphOf(spec, roof)
   return { kind: 'framed', framed: { roof, settings, spec, glyph, engineVersion, inputHash } }
 }

@@ -129,7 +129,7 @@ export const demoRoofs = {
     { lengthMm: '17400', widthMm: '11400', pitchDeg: '22.5', sections: withValley },
     { frontWidthMm: '6600', leftWidthMm: '6000', rightWidthMm: '5200', rightLengthMm: '10200' },
   ),
-  // Two straight parts that meet at 30°, each gable square to its own.
+  // Two straight parts, 3 in 4 out of line with each other, each gable square to its own.
   bentPlan: form('corners', {
     pitchDeg: '27.5',
     sections: withValley,
@@ -137,9 +137,9 @@ export const demoRoofs = {
       [
         [0, 0],
         [9000, 0],
-        [15_062.2, 3500],
-        [12_062.2, 8696.2],
-        [7392.3, 6000],
+        [15_000, 4500],
+        [11_400, 9300],
+        [7000, 6000],
         [0, 6000],
       ],
       [2, 5],
