@@ -41,7 +41,8 @@ const rawNet = (plates: PlateLines): CreaseNet => {
     left: at(sideOf, left),
     right: at(sideOf, right),
   }))
-  return { nodes, creases }
+  // where two gables meet is a corner of the walls, not a line of the roof
+  return { nodes, creases: creases.filter((c) => 'slope' in c.left || 'slope' in c.right) }
 }
 
 const middleOf = (nodes: readonly RoofNode[], members: number[]): Point3 => {

@@ -18,7 +18,17 @@ export type Front = {
 }
 
 /** Where two fronts meet: at height z it stands at `point` + `velocity` · (z − `fromMm`). */
-export type WaveCorner = { point: Point2; fromMm: number; velocity: Point2; node: number }
+export type WaveCorner = {
+  point: Point2
+  fromMm: number
+  velocity: Point2
+  node: number
+  /** The first front this corner runs into, as last looked up; see `nextEvent`. */
+  next: WaveHit | null
+}
+
+/** A corner comes to the front between corners `start` and `end` at a height; `start` null when to none. */
+export type WaveHit = { zMm: number; start: WaveCorner | null; end: WaveCorner | null }
 
 /** A closed part of the level cut, its inside on the left; corner k is where front k starts. */
 export type WaveLoop = { fronts: number[]; corners: WaveCorner[]; zMm: number }
