@@ -217,7 +217,7 @@ function closingWords(closing: WalkClosing, count: number): string {
   return `Close it with a side of ${formatMm(closing.lengthMm)} mm${turned}`
 }
 
-/** Enter in a length goes on to the next side, and adds one after the last. */
+/** Enter in a length goes on to the next side, and adds one after the last that is typed. */
 function goOnByEnter(event: KeyboardEvent<HTMLOListElement>, add: () => void): void {
   if (event.key !== 'Enter' || !(event.target instanceof HTMLInputElement)) return
   if (event.target.dataset['walkLength'] === undefined) return
@@ -226,7 +226,7 @@ function goOnByEnter(event: KeyboardEvent<HTMLOListElement>, add: () => void): v
   const inputs = () => [...list.querySelectorAll<HTMLInputElement>('[data-walk-length]')]
   const next = inputs().indexOf(event.target) + 1
   if (inputs()[next]) inputs()[next]?.focus()
-  else {
+  else if (event.target.value.trim() !== '') {
     add()
     requestAnimationFrame(() => inputs()[next]?.focus())
   }
