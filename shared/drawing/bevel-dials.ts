@@ -40,9 +40,13 @@ export function bevelDialsOf(member: Member): BevelDialData[] {
   return gathered(dials).map((dial, i) => ({ ...dial, letter: letterFor(i) }))
 }
 
-/** "plumb cut" when it follows the plumb line down the side, "square cut" when square to the edge. */
+/**
+ * "plumb cut" when it follows the plumb line down the side, "square cut" when square to the edge, "mitre"
+ * when square to the edge and not square across.
+ */
 export function cutWords(member: Member, cut: Cut): string {
-  if (Math.abs(cut.face.fromSquareDeg) <= sameDeg) return 'square cut'
+  if (Math.abs(cut.face.fromSquareDeg) <= sameDeg)
+    return cut.longSide === 'none' ? 'square cut' : 'mitre'
   return isPlumb(member, cut) ? 'plumb cut' : 'cut'
 }
 
@@ -52,7 +56,11 @@ function isPlumb(member: Member, cut: Cut): boolean {
 
 function sideDial(member: Member, cut: Cut): LooseDial {
   const words = cutWords(member, cut)
-  const titles: Record<string, string> = { 'plumb cut': 'Plumb bevel', 'square cut': 'Square' }
+  const titles: Record<string, string> = {
+    'plumb cut': 'Plumb bevel',
+    'square cut': 'Square',
+    mitre: 'Square',
+  }
   return {
     title: titles[words] ?? 'Bevel down the side',
     where: 'side',

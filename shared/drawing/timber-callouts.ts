@@ -26,7 +26,8 @@ export function calloutWishes(
     const cut = endCuts(member, end)[0]
     const near = timberEndLines(member, end)[0]
     if (!cut || !near) return []
-    const text = `${cutWords(member, cut)}${cheekWords(endCuts(member, end))}`
+    const words = cutWords(member, cut)
+    const text = words === 'mitre' ? words : `${words}${cheekWords(endCuts(member, end))}`
     return [{ text, letter: letterOf(cut.end), anchor: layout.side(near.to), lean: 'middle' }]
   })
   if (!mouth || !member.birdsmouth) return ends

@@ -164,7 +164,7 @@ function dot(a: Point3, b: Point3): number {
  * meet there. For timbers with no heel line to hook the tape on.
  */
 export type EdgeLength = {
-  place: 'left edge' | 'right edge' | 'both edges' | 'middle'
+  place: 'left edge' | 'right edge' | 'along the top' | 'middle'
   fromMm: number
   toMm: number
 }
@@ -187,7 +187,7 @@ export function edgeLengths(member: DrawnMember): EdgeLength[] {
   const isSquare =
     Math.abs(left.fromMm - right.fromMm) < sameLengthMm &&
     Math.abs(left.toMm - right.toMm) < sameLengthMm
-  const edges: EdgeLength[] = isSquare ? [{ ...left, place: 'both edges' }] : [left, right]
+  const edges: EdgeLength[] = isSquare ? [{ ...left, place: 'along the top' }] : [left, right]
   const hasPoint = heads.length > 2 || feet.length > 2
   if (!hasPoint) return edges
   const middle: EdgeLength = {

@@ -1,4 +1,5 @@
 import { pieceHand } from '../drawing/timber-hand.ts'
+import { posedMember } from '../drawing/timber-pose.ts'
 import type { CutLine, FrameSpec, Member, MemberRole } from '../roof/roof-types.ts'
 import {
   bearsText,
@@ -25,6 +26,7 @@ import {
   furtherFigures,
   planingWords,
 } from './marking-parts.ts'
+import { placeFigures } from './place-figures.ts'
 import { handCounts, quantityWords, roleWords, sectionWords } from './role-words.ts'
 import { wayWords } from './way-words.ts'
 
@@ -54,7 +56,7 @@ export type MarkingCard = {
   /** What the saw needs, longest point to longest point. */
   cutLength: MarkingFigure
   setOutLength: MarkingFigure
-  /** From end to end along its edges, where there is no heel line to measure from. */
+  /** From end to end along its edges, where there is no heel line to measure from; and where it goes. */
   edges: MarkingFigure[]
   /** Deductions, rise, run: not needed to mark out, kept for who wants to check. */
   further: MarkingFigure[]
@@ -102,7 +104,7 @@ export function markingCardOf(
     handWords: wayWords(spec, line, member, alike),
     cutLength: figureOf('Cut length', line.cutLengthMm, options, 'longest point to point'),
     setOutLength: figureOf('Set-out length', member.setOutLengthMm, options, setOutNote(member)),
-    edges: edgeFigures(member, options),
+    edges: [...edgeFigures(member, options), ...placeFigures(spec, member, options)],
     further: furtherFigures(member, options),
     pitchText: angleText(member.pitchDeg, options),
     ends: markingEnds(spec, member, alike, options),
@@ -124,11 +126,22 @@ export function markingCardOf(
 
 function membersOf(spec: FrameSpec, line: CutLine): Member[] {
   const marks = new Set(line.members)
-  return spec.members.filter((member) => marks.has(member.mark))
+  return spec.members
+    .filter((member) => marks.has(member.mark))
+    .map((member) => posedMember(spec, member))
 }
+
+/** Timbers beside the frame run between points of their own, not to another's centre. */
+const besideRoles: ReadonlySet<MemberRole> = new Set([
+  'underpurlin',
+  'collar-tie',
+  'fascia',
+  'barge',
+])
 
 function setOutNote(member: Member): string {
   if (member.role === 'ridge') return 'node to node'
+  if (besideRoles.has(member.role)) return 'set-out point to set-out point'
   return member.birdsmouth
     ? `${tapeBase(member)} to centre, nothing off`
     : 'centre to centre, nothing off'
@@ -161,10 +174,7 @@ function endLines(end: MarkingEnd): string[] {
 }
 
 function edgeLines({ edges }: MarkingCard): string[] {
-  const [first, ...rest] = edges
-  if (!first) return []
-  const words = [figureWords(first), ...rest.map((one) => figureWords(one).toLowerCase())]
-  return [`${words.join(', ')}, ${first.note}.`]
+  return edges.length > 0 ? [`${edges.map((one) => figureWords(one, true)).join('; ')}.`] : []
 }
 
 /** The tail's length where no tail point has said it. */

@@ -2,7 +2,7 @@ import { groupBy } from '../collections/group-by.ts'
 import { cutWords } from '../drawing/bevel-dials.ts'
 import { type MeasuringPoint, measuringPoints } from '../drawing/timber-points.ts'
 import { heelOutAlongMm } from '../drawing/timber-outline.ts'
-import { edgeLengths, endCuts, timberTop } from '../drawing/timber-shape.ts'
+import { edgeLengths, endCuts, timberEndMm, timberTop } from '../drawing/timber-shape.ts'
 import type { Cut, FrameSpec, Member } from '../roof/roof-types.ts'
 import {
   angleText,
@@ -184,9 +184,18 @@ function endPoints(
 /** With no heel line to hook the tape on, a timber is measured from its own foot; else nothing. */
 export function edgeFigures(member: Member, options: MarkingOptions): MarkingFigure[] {
   if (!isMeasuredByEdges(member)) return []
-  return edgeLengths(member).map(({ place, fromMm, toMm }) =>
-    figureOf(capital(place), toMm - fromMm, options, 'along the top, foot to head'),
+  const edges = edgeLengths(member).map(({ place, fromMm, toMm }) =>
+    figureOf(
+      capital(place),
+      toMm - fromMm,
+      options,
+      place === 'along the top' ? 'foot to head' : 'along the top, foot to head',
+    ),
   )
+  if (member.role !== 'collar-tie') return edges
+  const under = (end: 'head' | 'foot') => timberEndMm(member, end, 0, member.section.depthMm)
+  const underMm = under('head') - under('foot')
+  return [...edges, figureOf('Along the underside', underMm, options, 'foot to head')]
 }
 
 function pointLabel({ name, end, side }: MeasuringPoint): string {
@@ -230,6 +239,8 @@ function capital(text: string): string {
 /** A cut's bevels in one run of words. */
 export function bevelsWords(cut: MarkingCut): string {
   if (cut.kind === 'square cut' && !cut.edge) return 'square cut'
+  if (cut.kind === 'mitre')
+    return `mitre, square down the side${cut.edge ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}` : ''}`
   const across = cut.edge
     ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
     : '; square across the top'

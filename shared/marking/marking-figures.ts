@@ -88,9 +88,12 @@ export function bevelWords(bevel: MarkingBevel): string {
   return `${bevel.fromSquareText} ${squareWord(bevel)}, ${bevel.fromEdgeText} from the ${edgeWord(bevel)}`
 }
 
+/** Under this a bevel is square, degrees. */
+const squareDeg = 0.05
+
 /** A line down the side usually leans towards the foot; past square, towards the head. */
 export function squareWord(bevel: Pick<MarkingBevel, 'fromSquareDeg'>): string {
-  return bevel.fromSquareDeg < 0 ? 'past square, towards the head' : 'from square'
+  return bevel.fromSquareDeg < -squareDeg ? 'past square, towards the head' : 'from square'
 }
 
 /** What the second reading is taken from: backing is read on the end of the timber. */

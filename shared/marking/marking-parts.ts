@@ -72,6 +72,7 @@ export function backingOf(member: Member, options: MarkingOptions): MarkingBevel
 }
 
 export function dropOf(member: Member, options: MarkingOptions): MarkingFigure | null {
+  if (!droppedRoles.has(member.role)) return null
   if (member.dropMm > 0)
     return figureOf('Drop', member.dropMm, options, 'lowered, plumb, under the slopes')
   if (member.dropMm < 0)
@@ -83,6 +84,9 @@ export function dropOf(member: Member, options: MarkingOptions): MarkingFigure |
     )
   return null
 }
+
+/** Timbers whose tops are set down (or up) to meet the slopes of both sides. */
+const droppedRoles: ReadonlySet<Member['role']> = new Set(['ridge', 'hip', 'broken-hip', 'valley'])
 
 /** A dished top is marked and cut while it is square; then the lines it is planed to. */
 export function dishWords(member: Member, options: MarkingOptions): string | null {

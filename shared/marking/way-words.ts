@@ -26,13 +26,17 @@ export function wayWords(
 /** Timbers that lie along or across the roof: neither end is up. */
 const lyingRoles: ReadonlySet<MemberRole> = new Set(['underpurlin', 'collar-tie', 'fascia'])
 
-/** Both ends look alike on the trestles, so the foot is named by what it meets. */
+/** Both ends look alike on the trestles, so one is named by what it meets. */
 function lyingWords(spec: FrameSpec, line: CutLine, member: Member): string {
-  const marks = new Set(endCuts(member, 'foot').flatMap((cut) => [cut.against, ...cut.alsoAgainst]))
-  const met = spec.members.filter((one) => marks.has(one.mark))
+  const metAt = (end: 'head' | 'foot') => {
+    const marks = endCuts(member, end).flatMap((cut) => [cut.against, ...cut.alsoAgainst])
+    return spec.members.filter((one) => marks.includes(one.mark))
+  }
   const whose = line.members.length > 1 ? ` of ${member.mark}` : ''
-  const foot = met.length > 0 ? `Foot${whose}: the end at ${piecesWords(met)}. ` : ''
-  return `${foot}Left and right looking along it from its foot, bow up.`
+  const named = (['foot', 'head'] as const).find((end) => metAt(end).length > 0)
+  const place = named ? `${capital(named)}${whose}: the end at ${piecesWords(metAt(named))}. ` : ''
+  const up = member.role === 'fascia' ? 'top edge up' : 'bow up'
+  return `${place}Left and right looking along it from foot to head, ${up}.`
 }
 
 function upWhat(role: MemberRole): string {

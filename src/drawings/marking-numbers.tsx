@@ -58,9 +58,14 @@ export function BevelView({ bevel, extra }: { bevel: MarkingBevel; extra?: strin
   )
 }
 
+function isSquareDown({ kind }: MarkingCut): boolean {
+  return kind === 'square cut' || kind === 'mitre'
+}
+
 /** What the bevels below do not say by themselves. */
 function CutName({ name, cut }: { name: string; cut: MarkingCut }) {
-  const kind = cut.kind === 'plumb cut' ? '' : cut.kind
+  const kinds: Record<string, string> = { 'plumb cut': '', mitre: 'mitre, square down the side' }
+  const kind = kinds[cut.kind] ?? cut.kind
   const saysSquare = cut.edge || cut.kind === 'square cut' || name === 'Square across'
   const across = saysSquare ? '' : 'square across the top'
   const words = [name, kind, across].filter(Boolean).join(', ')
@@ -87,7 +92,7 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
         <div key={name} className="mt-2">
           <CutName name={name} cut={first} />
           <dl className="space-y-1">
-            {first.kind === 'square cut' ? null : <BevelView bevel={first.face} />}
+            {isSquareDown(first) ? null : <BevelView bevel={first.face} />}
             {first.edge ? (
               <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
             ) : null}
@@ -163,7 +168,7 @@ function CutBevels({ name, first }: Pick<CutsSawnAlike, 'name' | 'first'>) {
     <>
       <CutName name={name} cut={first} />
       <dl className="space-y-1">
-        {first.kind === 'square cut' ? null : <BevelView bevel={first.face} />}
+        {isSquareDown(first) ? null : <BevelView bevel={first.face} />}
         {first.edge ? (
           <BevelView bevel={first.edge} extra={`blade tilt ${first.bladeTiltText}`} />
         ) : null}

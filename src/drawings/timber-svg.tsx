@@ -62,8 +62,8 @@ export function TimberSvg({ drawing, label }: Props) {
           className={`stroke-clay [stroke-width:2] ${isLong ? 'fill-clay' : 'fill-sheet'}`}
         />
       ))}
-      {drawing.letters.map(({ letter, at }) => (
-        <Letter key={letter} letter={letter} x={at.x} y={at.y} />
+      {drawing.letters.map(({ letter, at }, i) => (
+        <Letter key={i} letter={letter} x={at.x} y={at.y} />
       ))}
       {drawing.texts.map(({ text, x, baselineY }) => (
         <text key={text} x={x} y={baselineY} className="fill-ink">

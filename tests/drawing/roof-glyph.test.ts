@@ -1,9 +1,9 @@
 import { describe, expect, test } from 'vitest'
 import { roofGlyphOf } from '../../shared/drawing/roof-glyph.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
-import { convexReferences, referenceRoof } from '../roof/support/roofs.ts'
+import { convexReferences, hollowReferences, referenceRoof } from '../roof/support/roofs.ts'
 
-describe.each(convexReferences)('the glyph of $title', (reference) => {
+describe.each([...convexReferences, ...hollowReferences])('the glyph of $title', (reference) => {
   const roof = referenceRoof(reference)
   const glyph = roofGlyphOf(frameRoof(roof), roof)
 

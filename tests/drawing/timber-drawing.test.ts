@@ -6,21 +6,37 @@ import { birdsmouthPoints } from '../../shared/drawing/timber-outline.ts'
 import { handWords, measuringPoints } from '../../shared/drawing/timber-points.ts'
 import { timberTopEnd } from '../../shared/drawing/timber-shape.ts'
 import { timberTextPx } from '../../shared/drawing/timber-texts.ts'
+import { posedMember } from '../../shared/drawing/timber-pose.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
+import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { Cut, Member } from '../../shared/roof/roof-types.ts'
 import { convexReferences, hollowReferences, referenceRoof } from '../roof/support/roofs.ts'
 
 const phonePx = 358
+const sections = {
+  rafter: { thicknessMm: 45, depthMm: 140 },
+  hip: { thicknessMm: 35, depthMm: 190 },
+  valley: { thicknessMm: 35, depthMm: 190 },
+  ridge: { thicknessMm: 35, depthMm: 190 },
+  underpurlin: { thicknessMm: 70, depthMm: 140 },
+  collarTie: { thicknessMm: 35, depthMm: 90 },
+  fascia: { thicknessMm: 30, depthMm: 190 },
+  barge: { thicknessMm: 30, depthMm: 190 },
+}
 const ways = [
   { hipTop: 'backed', tail: 'plumb', valleyTop: 'square' },
-  { hipTop: 'lowered', tail: 'square', valleyTop: 'dished' },
+  { hipTop: 'lowered', tail: 'square', valleyTop: 'dished', sections },
   { hipTop: 'backed', tail: 'square', valleyTop: 'square' },
 ] as const
+const closeSpans = { ...defaultSettings, maxRafterSpanMm: 2200 }
 const cases = [...convexReferences, ...hollowReferences].flatMap((reference) =>
-  ways.map((way) => ({
-    title: `${reference.title}, hips ${way.hipTop}, valleys ${way.valleyTop}, tails ${way.tail}`,
-    members: frameRoof(referenceRoof(reference, way)).members,
-  })),
+  ways.slice(0, hollowReferences.includes(reference) ? 2 : 3).map((way) => {
+    const spec = frameRoof(referenceRoof(reference, way), closeSpans)
+    return {
+      title: `${reference.title}, hips ${way.hipTop}, valleys ${way.valleyTop}, tails ${way.tail}`,
+      members: spec.members.map((member) => posedMember(spec, member)),
+    }
+  }),
 )
 
 /** What the tape reads on one arris, from the published numbers of the cuts alone. */
