@@ -89,6 +89,23 @@ const placeJobs = (
   })
 }
 
+/**
+ * Ends of ridges that butt nothing, longer ridges first; one that would run into a longer ridge near its
+ * joint butts that after all.
+ */
+const placeRidges = (ground: Ground, jobs: EndJob[], creases: Near, standing: Standing): void => {
+  const { chains } = ground.joints
+  const rank = ({ piece }: EndJob) => chains.findIndex((c) => c.lines[0] === piece.line)
+  const free = jobs.filter(({ phase }) => phase === phases.ridge)
+  for (const job of free.sort((a, b) => rank(a) - rank(b))) {
+    const { piece, end } = job
+    const cut = ridgeEnd(ground, job, jobs, creases)
+    const found = trimEnd(piece, end, standing.near, [cut], Infinity)
+    if (found.length === 1 && found[0] === cut) setCuts(job, [cut], standing)
+    else job.phase = phases.ridgeButt
+  }
+}
+
 /** A few obstacles, all near, over what stood before. */
 const overlay = (before: readonly Obstacle[]): Standing => {
   const own = new Map<string, Obstacle>()
@@ -177,21 +194,32 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
   const early = all.filter(isEarly)
   const grid = boxGrid<Obstacle>()
   const put = (obstacle: Obstacle) => grid.put(obstacle, obstacle.box)
+  const bodies = boxGrid<Obstacle>()
   for (const piece of pieces) {
     const body = isAlongCrease(piece.role) ? bodyObstacle(piece) : null
-    if (body !== null) put(body)
+    if (body === null) continue
+    put(body)
+    bodies.put(body, body.box)
   }
-  const isFirst = (job: EndJob) => job.phase === phases.ridge
-  for (const job of early.filter(isFirst)) {
-    setCuts(job, [ridgeEnd(ground, job, early, grid.near)], { near: grid.near, put })
-  }
-  const rest = early.filter((job) => !isFirst(job))
+  const ridges = boxGrid<Obstacle>()
+  placeRidges(ground, early, bodies.near, {
+    near: ridges.near,
+    put: (ridge) => {
+      put(ridge)
+      ridges.put(ridge, ridge.box)
+    },
+  })
+  const rest = early.filter(({ phase }) => phase !== phases.ridge)
   placeJobs(ground, rest, new Map(), { near: grid.near, put }, [])
   const placed = [...early]
   const trials: Trials = { left: mostTrials }
   const openPieces = new Set<number>()
   for (const group of jointGroups(ground)) {
-    const made = placeGroup(ground, pieces, group.joints, grid.near(group.box), trials)
+    const isOther = ({ runsTo }: Obstacle) =>
+      runsTo === undefined ||
+      !runsTo.some((joint) => joint !== null && group.joints.includes(joint))
+    const before = grid.near(group.box).filter(isOther)
+    const made = placeGroup(ground, pieces, group.joints, before, trials)
     placed.push(...made.jobs)
     made.openPieces.forEach((piece) => openPieces.add(piece))
     for (const job of made.jobs) {

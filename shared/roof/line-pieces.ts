@@ -5,7 +5,8 @@ import type { RidgeChain } from './ridge-chains.ts'
 import type { NodeLine } from './roof-lines.ts'
 import type { Point2 } from './roof-types.ts'
 import { at, slopeGradient } from './slopes.ts'
-import { dot2 } from './vector.ts'
+import type { PlateEdge } from './slopes.ts'
+import { dot2, length2, radians, scale2, sub2 } from './vector.ts'
 
 /**
  * How the slopes of a ridge, hip or valley fall away on either side of it, per mm; under 0 where they
@@ -37,6 +38,24 @@ const dropOf = (piece: Piece): number => {
   return Math.max(left, right, 0) * piece.halfMm
 }
 
+/** The plane of an eave's tails where a hip's or valley's top meets it, as a line in plan: its normal and offset. */
+const tailLine = (
+  ground: Ground,
+  edge: PlateEdge,
+  piece: Piece,
+): { normal: Point2; offset: number } => {
+  const out = scale2(edge.inward, -1)
+  const { tan } = piece
+  const lean = ground.roof.tail === 'square' ? Math.tan(radians(edge.pitchDeg)) : 0
+  // the top over a point p stands at dir · (p − foot) × tan − drop, the eave's line at −overhang × its own tangent
+  const normal = sub2(out, scale2(piece.dir, lean * tan))
+  const size = length2(normal)
+  const level = edge.overhangMm * Math.tan(radians(edge.pitchDeg)) - piece.dropMm
+  const offset =
+    dot2(out, edge.from) + edge.overhangMm + lean * (level - tan * dot2(piece.dir, piece.foot))
+  return { normal: scale2(normal, 1 / size), offset: offset / size }
+}
+
 /** The timber of a hip, broken hip or valley. */
 export const creasePiece = (ground: Ground, line: NodeLine, index: number): Piece => {
   const { roof, lines, joints } = ground
@@ -55,7 +74,10 @@ export const creasePiece = (ground: Ground, line: NodeLine, index: number): Piec
     headJoint: at(joints.ofNode, line.to),
     tailPlanMm: foot.corner === null ? 0 : tailPlanMm(ground, foot.corner, piece.dir),
   })
-  return Object.assign(piece, { dropMm: dropOf(piece) })
+  Object.assign(piece, { dropMm: dropOf(piece) })
+  if (foot.corner === null) return piece
+  const edges = [at(ground.plates.edges, foot.corner - 1), at(ground.plates.edges, foot.corner)]
+  return Object.assign(piece, { tailLines: edges.map((edge) => tailLine(ground, edge, piece)) })
 }
 
 const ridgePiece = (ground: Ground, chain: RidgeChain): Piece => {

@@ -45,6 +45,8 @@ export type Piece = {
   footLine: number | null
   /** How far the piece reaches past its foot in plan before any tail cut. */
   tailPlanMm: number
+  /** Where the tail planes of a hip's or valley's two eaves meet its top, in plan: normals off the piece. */
+  tailLines: { normal: Point2; offset: number }[]
   /** Where a rafter's centre line is over a plate, plan mm from its foot. */
   overPlate: { fromMm: number; toMm: number }
   headCuts: PlanCut[]
@@ -87,6 +89,7 @@ export const rawPiece = (start: Start): Piece => {
     through: [],
     footLine: null,
     tailPlanMm: 0,
+    tailLines: [],
     overPlate: { fromMm: 0, toMm: 0 },
     headCuts: [],
     footCuts: [],

@@ -1,13 +1,11 @@
-import { clipConvex } from './convex.ts'
-import type { Labelled } from './convex.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Face, NodeLine } from './roof-lines.ts'
 import { creasePiece } from './line-pieces.ts'
-import type { Piece } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at, slopeGradient } from './slopes.ts'
 import type { PlateEdge, Slope } from './slopes.ts'
-import { add2, dot2, left2, length2, radians, scale2, sub2, unit2 } from './vector.ts'
+import { add2, dot2, left2, scale2, sub2, unit2 } from './vector.ts'
+import { fullPlan } from './trim.ts'
 
 /** A valley that borders a slope and starts at a plate corner, seen from that slope. */
 export type ValleySide = {
@@ -60,45 +58,6 @@ const hipCorner = (ground: Ground, slope: Slope, line: NodeLine): HipCorner => {
   return { alongMm, gapMm }
 }
 
-/** The plane of an eave's tails where a valley's top meets it, as a line in plan: its normal and offset. */
-const tailLine = (
-  ground: Ground,
-  edge: PlateEdge,
-  valley: Piece,
-): { normal: Point2; offset: number } => {
-  const out = scale2(edge.inward, -1)
-  const { tan } = valley
-  const lean = ground.roof.tail === 'square' ? Math.tan(radians(edge.pitchDeg)) : 0
-  // the top over a point p stands at dir · (p − foot) × tan − drop, the eave's line at −overhang × its own tangent
-  const normal = sub2(out, scale2(valley.dir, lean * tan))
-  const size = length2(normal)
-  const level = edge.overhangMm * Math.tan(radians(edge.pitchDeg)) - valley.dropMm
-  const offset =
-    dot2(out, edge.from) + edge.overhangMm + lean * (level - tan * dot2(valley.dir, valley.foot))
-  return { normal: scale2(normal, 1 / size), offset: offset / size }
-}
-
-const planOf = (ground: Ground, valley: Piece, corner: number): Point2[] => {
-  const aside = scale2(valley.left, valley.halfMm)
-  const edges = [at(ground.plates.edges, corner - 1), at(ground.plates.edges, corner)]
-  const farMm = 20 * Math.max(...edges.map((e) => e.overhangMm), 2 * valley.halfMm)
-  const start = add2(valley.foot, scale2(valley.dir, -farMm))
-  let plan: Labelled<null> = {
-    points: [
-      sub2(start, aside),
-      sub2(valley.head, aside),
-      add2(valley.head, aside),
-      add2(start, aside),
-    ],
-    labels: [null, null, null, null],
-  }
-  for (const edge of edges) {
-    const { normal, offset } = tailLine(ground, edge, valley)
-    plan = clipConvex(plan, normal, offset, null)
-  }
-  return plan.points
-}
-
 const valleySide = (
   ground: Ground,
   slope: Slope,
@@ -123,7 +82,7 @@ const valleySide = (
     dir,
     side: { point: add2(from, scale2(into, -halfMm)), normal: into },
     otherEdge: edges.find((e) => !slope.edges.includes(e.index)) ?? at(edges, 0),
-    plan: planOf(ground, creasePiece(ground, line, index), corner),
+    plan: fullPlan(creasePiece(ground, line, index)).points,
   }
 }
 

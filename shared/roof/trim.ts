@@ -10,7 +10,13 @@ import { dot2, scale2, sub2 } from './vector.ts'
 export type Side = { kind: 'face' } | { kind: PieceEnd | 'tail'; cut: number } | { kind: 'open' }
 
 /** Part of a piece that is already placed and in the way of later ones, in plan. */
-export type Obstacle = { piece: number; polygon: Labelled<Side>; box: Box }
+export type Obstacle = {
+  piece: number
+  polygon: Labelled<Side>
+  box: Box
+  /** Of a timber not cut yet: the joints that it runs to, where it is no obstacle. */
+  runsTo?: readonly (number | null)[]
+}
 
 /** The obstacles that may lie in a box. */
 export type Near = (box: Box) => readonly Obstacle[]
@@ -41,9 +47,16 @@ const cutAway = (polygon: Labelled<Side>, cut: PlanCut, label: Side): Labelled<S
 /** How far past its set-out end a piece is drawn before it is trimmed. */
 const reachPastMm = (piece: Piece): number => 12 * piece.halfMm + 400
 
+/** How far out a tail is drawn: a hip's or valley's to its own tail lines, whose sides may reach past its middle. */
+const tailReachMm = (piece: Piece): number =>
+  piece.tailLines.length > 0 ? 2 * piece.tailPlanMm + 20 * piece.halfMm : piece.tailPlanMm
+
 /** The plan of a piece with its cuts, from `fromMm` to `toMm`. */
 const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side> => {
   let polygon = strip(piece, fromMm, toMm)
+  for (const { normal, offset } of piece.tailLines) {
+    polygon = clipConvex(polygon, normal, offset, { kind: 'open' })
+  }
   piece.headCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'head', cut: k })))
   piece.footCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'foot', cut: k })))
   piece.tailCuts.forEach((cut, k) => (polygon = cutAway(polygon, cut, { kind: 'tail', cut: k })))
@@ -53,7 +66,7 @@ const trimmedPlan = (piece: Piece, fromMm: number, toMm: number): Labelled<Side>
 /** The whole plan of a piece, tail included. */
 export const fullPlan = (piece: Piece): Labelled<Side> => {
   const past = reachPastMm(piece)
-  const foot = piece.footCuts.length > 0 ? past : piece.tailPlanMm
+  const foot = piece.footCuts.length > 0 ? past : tailReachMm(piece)
   return trimmedPlan(piece, -foot, piece.planMm + (piece.headCuts.length > 0 ? past : 0))
 }
 
@@ -64,7 +77,7 @@ export const halfObstacle = (piece: Piece, end: PieceEnd): Obstacle => {
   const polygon =
     end === 'head'
       ? trimmedPlan(piece, middle, piece.planMm + past)
-      : trimmedPlan(piece, piece.footCuts.length > 0 ? -past : -piece.tailPlanMm, middle)
+      : trimmedPlan(piece, piece.footCuts.length > 0 ? -past : -tailReachMm(piece), middle)
   return { piece: piece.id, polygon, box: polygonBox(polygon.points) }
 }
 
@@ -73,11 +86,12 @@ const jointMm = 400
 
 /** A hip or valley between its joints, where nothing cuts it, as an obstacle to what is made at others; null where it is short. */
 export const bodyObstacle = (piece: Piece): Obstacle | null => {
-  const from = piece.corner === null ? jointMm : -piece.tailPlanMm
+  const from = piece.corner === null ? jointMm : -tailReachMm(piece)
   const to = piece.planMm - jointMm
   if (to <= from) return null
-  const polygon = strip(piece, from, to)
-  return { piece: piece.id, polygon, box: polygonBox(polygon.points) }
+  const polygon = trimmedPlan(piece, from, to)
+  const runsTo = [piece.footJoint, piece.headJoint]
+  return { piece: piece.id, polygon, box: polygonBox(polygon.points), runsTo }
 }
 
 /** The cut, in one of the obstacle's faces, that clears it and leaves most timber. */
