@@ -1,3 +1,4 @@
+export { typedRoof } from '../../shared/revisions/roof-of-form.ts'
 export { frameRoof } from '../../shared/roof/frame-roof.ts'
 export { plateLines } from '../../shared/roof/plate-lines.ts'
 export { roofLines } from '../../shared/roof/roof-lines.ts'

@@ -12,7 +12,7 @@ type Limits = { warmUps: number; mostRuns: number; leastRuns: number; budgetMs: 
 const everyday: Limits = { warmUps: 8, mostRuns: 60, leastRuns: 7, budgetMs: 3000 }
 
 /** Processor time that this process has taken: other programs on the machine do not count. */
-function takenMs(): number {
+export function takenMs(): number {
   const { user, system } = process.cpuUsage()
   return (user + system) / 1000
 }
