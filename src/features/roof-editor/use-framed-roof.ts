@@ -1,5 +1,4 @@
 import { startTransition, useEffect, useMemo, useRef, useState } from 'react'
-import type { FormFrame } from '../../../shared/revisions/frame-of-form.ts'
 import type { RoofForm } from '../../../shared/revisions/roof-form.ts'
 import {
   type FormFirm,
@@ -8,38 +7,15 @@ import {
   typedRoof,
 } from '../../../shared/revisions/roof-of-form.ts'
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
-import type { FrameAnswer, FrameQuestion } from './frame-messages.ts'
+import type { LayOutPlan } from '../../drawings/use-laid-plan.ts'
+import { type Answered, type FrameLine, openFrameLine } from './frame-line.ts'
 
-export type Framed = { roof: Roof; spec: FrameSpec | null; message: string | null }
-
-type Answered = { form: RoofForm; frame: FormFrame | null }
-type Line = { ask: (form: RoofForm, firm: FormFirm) => void; close: () => void }
-
-/** One question at a time; of those that queue up while it works, only the newest is asked. */
-function openLine(onAnswer: (answered: Answered) => void): Line {
-  const worker = new Worker(new URL('./frame-worker.ts', import.meta.url), { type: 'module' })
-  let asked: FrameQuestion | null = null
-  let next: FrameQuestion | null = null
-  let count = 0
-  const send = () => {
-    if (asked !== null || next === null) return
-    asked = next
-    next = null
-    worker.postMessage(asked)
-  }
-  worker.onmessage = ({ data }: MessageEvent<FrameAnswer>) => {
-    const answered = asked
-    asked = null
-    if (answered?.id === data.id) onAnswer({ form: answered.form, frame: data.frame })
-    send()
-  }
-  return {
-    ask(form, firm) {
-      next = { id: ++count, form, firm }
-      send()
-    },
-    close: () => worker.terminate(),
-  }
+export type Framed = {
+  roof: Roof
+  spec: FrameSpec | null
+  message: string | null
+  /** Lays out its plan beside the screen. */
+  layOut: LayOutPlan | undefined
 }
 
 export type RoofReading = { reading: FormReading; framed: Framed | null }
@@ -49,10 +25,10 @@ export type RoofReading = { reading: FormReading; framed: Framed | null }
  * last answer stands until the next is there.
  */
 export function useFramedRoof(form: RoofForm, firm: FormFirm): RoofReading {
-  const line = useRef<Line | null>(null)
+  const line = useRef<FrameLine | null>(null)
   const [answered, setAnswered] = useState<Answered | null>(null)
   useEffect(() => {
-    const opened = openLine((answer) => startTransition(() => setAnswered(answer)))
+    const opened = openFrameLine((answer) => startTransition(() => setAnswered(answer)))
     line.current = opened
     return () => {
       opened.close()
@@ -73,10 +49,14 @@ export function useFramedRoof(form: RoofForm, firm: FormFirm): RoofReading {
 
 const ready = (roof: Roof): FormReading => ({ roof, problems: null })
 
-function readingOf({ form, frame }: Answered, current: RoofForm, drawn: Roof): RoofReading {
+function readingOf(answered: Answered, current: RoofForm, drawn: Roof): RoofReading {
+  const { form, frame, layOut } = answered
   if (!frame) {
     const message = 'This roof could not be framed.'
-    return { reading: ready(drawn), framed: { roof: drawn, spec: null, message } }
+    return {
+      reading: ready(drawn),
+      framed: { roof: drawn, spec: null, message, layOut: undefined },
+    }
   }
   const { reading, spec } = frame
   if (reading.roof === null) {
@@ -86,6 +66,6 @@ function readingOf({ form, frame }: Answered, current: RoofForm, drawn: Roof): R
   const isCurrent = form === current
   return {
     reading: isCurrent ? reading : ready(drawn),
-    framed: { roof: reading.roof, spec, message: null },
+    framed: { roof: reading.roof, spec, message: null, layOut },
   }
 }
