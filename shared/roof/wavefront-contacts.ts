@@ -77,7 +77,10 @@ const drawNear = (ring: Ring, corner: number): boolean => {
   }
   for (let j = 0; j < ring.count; j++) {
     if (!liesOn(ring, j, corner) || isKnownOn(ring, j, corner)) continue
-    putOn(ring, j, corner)
+    // on the last millimetre of a front: at its end, or a small triangle could close in two ways
+    const end = [j, j + 1].find((k) => distance2(place, at(ring.places, k)) <= 2 * nearMm)
+    if (end === undefined) putOn(ring, j, corner)
+    else unite(ring, corner, end)
     found = true
   }
   return found
@@ -126,6 +129,20 @@ const closeWedges = (ring: Ring, corners: readonly number[]): boolean => {
   return found
 }
 
+/** A front whose ends have come together takes what lies on it into their point. */
+const drawIn = (ring: Ring): boolean => {
+  let found = false
+  for (const [j, on] of ring.onFront) {
+    if (pointOf(ring, j) !== pointOf(ring, j + 1)) continue
+    for (const corner of on) {
+      if (pointOf(ring, corner) === pointOf(ring, j)) continue
+      unite(ring, j, corner)
+      found = true
+    }
+  }
+  return found
+}
+
 /**
  * What touches what in a loop where `event` happens, and all that hangs together with it. What lies within
  * half a millimetre of a point where something happens takes part in it: such events are one, and no
@@ -144,8 +161,13 @@ export const contactsAt = (fronts: readonly Front[], loop: WaveLoop, event: Wave
   }
   if ('join' in event) unite(ring, event.join, event.join + 1)
   else putOn(ring, event.onto, event.corner)
+  const [first] = ring.places
+  if (first !== undefined && ring.places.every((place) => distance2(place, first) <= 2 * nearMm)) {
+    // what is left is smaller than anything a saw can cut
+    for (let k = 1; k < count; k++) unite(ring, 0, k)
+  }
   for (let found = true; found;) {
-    found = false
+    found = drawIn(ring)
     for (const point of [...ring.live]) {
       const corners = ring.owner.flatMap((_, k) => (pointOf(ring, k) === point ? [k] : []))
       for (const corner of corners) found = drawNear(ring, corner) || found

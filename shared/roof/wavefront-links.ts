@@ -12,7 +12,8 @@ const piecesOf = (ring: Ring, j: number): WavePiece[] => {
   const front = at(ring.loop.fronts, j)
   const [start, end] = [pointOf(ring, j), pointOf(ring, j + 1)]
   const on = ring.onFront.get(j)
-  if (on === undefined) return start === end ? [] : [{ front, from: start, to: end }]
+  if (start === end) return []
+  if (on === undefined) return [{ front, from: start, to: end }]
   const { along } = at(ring.fronts, front)
   const stops = [...on]
     .map((corner) => ({ point: pointOf(ring, corner), past: dot2(along, at(ring.places, corner)) }))
