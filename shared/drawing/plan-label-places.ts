@@ -12,6 +12,7 @@ const besideStepPx = 9
 const gapPx = 4
 /** How far from its timber, square to it, a mark may stand, in rows: some bays away at most. */
 const besideRows = [1, 2, 3.2, 4.6, 6.2]
+const farRows = [...besideRows, 8, 10, 12]
 
 /** What a mark takes up, turned along its timber. */
 export function markBox(member: PlanMember, text: string, sizePx: number): TurnedBox {
@@ -52,7 +53,20 @@ export function* placesAlong(member: PlanMember, box: TurnedBox): Generator<Labe
  * Beside a timber with no room of its own: beyond its ends in its own line, in the bays along it, and
  * level beside its ends, always with a fine line to it.
  */
-export function* placesBeside(member: PlanMember, box: TurnedBox): Generator<LabelPlace> {
+export function placesBeside(member: PlanMember, box: TurnedBox): Generator<LabelPlace> {
+  return placesBesideIn(member, box, besideRows)
+}
+
+/** The same, further off where all that is nearer is taken. */
+export function placesFurtherOff(member: PlanMember, box: TurnedBox): Generator<LabelPlace> {
+  return placesBesideIn(member, box, farRows)
+}
+
+function* placesBesideIn(
+  member: PlanMember,
+  box: TurnedBox,
+  rows: readonly number[],
+): Generator<LabelPlace> {
   const { centre } = member
   const lengthPx = segmentLength(centre) || 1
   const way = {
@@ -75,7 +89,7 @@ export function* placesBeside(member: PlanMember, box: TurnedBox): Generator<Lab
     }
   }
   const rowPx = box.heightPx / 2 + gapPx
-  for (const row of besideRows)
+  for (const row of rows)
     for (let alongPx = 0; alongPx <= lengthPx; alongPx += besideStepPx)
       for (const side of [1, -1]) {
         const offPx = side * row * rowPx

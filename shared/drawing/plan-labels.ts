@@ -8,6 +8,7 @@ import {
   markBox,
   placesAlong,
   placesBeside,
+  placesFurtherOff,
   standsInRow,
 } from './plan-label-places.ts'
 import type { PlanMember } from './plan-members.ts'
@@ -48,7 +49,11 @@ const along: Way = { sizePx, places: placesAlong, mayCross: false }
 const alongSmall: Way = { sizePx: smallSizePx, places: placesAlong, mayCross: false }
 const acrossOthers: Way = { sizePx, places: placesAlong, mayCross: true }
 const beside: Way = { sizePx: smallSizePx, places: placesBeside, mayCross: false }
-const besideOverOthers: Way = { ...beside, mayCross: true }
+const besideOverOthers: Way = {
+  sizePx: smallSizePx,
+  places: placesFurtherOff,
+  mayCross: true,
+}
 const inTheMiddle: Way = {
   sizePx,
   places: (_, box) => [{ ...box, leader: null }],

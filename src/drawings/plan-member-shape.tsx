@@ -81,6 +81,20 @@ function MemberBody({ member, state }: { member: PlanMember; state: MemberState 
         className={`${lineClasses[state]} ${state === 'plain' || state === 'rest' ? '[stroke-width:2.5]!' : ''} [stroke-dasharray:9_4]!`}
       />
     )
+  // Dashed and heavier, so that water's way down is told from a hip at a glance.
+  if (member.role === 'valley' && state === 'plain')
+    return member.thicknessPx < outlineFromPx ? (
+      <line
+        {...centreProps(member)}
+        className="stroke-ink [stroke-width:2.25] [stroke-dasharray:10_3]"
+      />
+    ) : (
+      <polygon
+        points={svgPoints(member.outline)}
+        strokeLinejoin="round"
+        className="fill-paper stroke-ink [stroke-width:1.75] [stroke-dasharray:10_3]"
+      />
+    )
   if (member.thicknessPx < outlineFromPx)
     return <line {...centreProps(member)} className={lineClasses[state]} />
   const stroke = state === 'due' ? 'stroke-clay [stroke-width:1.5]' : lineClasses[state]

@@ -3,7 +3,7 @@ import { markingCardOf } from '../../../shared/marking/marking-card.ts'
 import type { MarkingOptions } from '../../../shared/marking/marking-figures.ts'
 import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
 import { PrintCard } from './print-card.tsx'
-import { usePrinting } from './use-printing.ts'
+import { usePrinting } from '../../lib/use-printing.ts'
 
 type Props = { spec: FrameSpec; options: MarkingOptions }
 
