@@ -1,12 +1,12 @@
 import { bevelOf, bothWays, timberPoint } from '../bevel.ts'
 import type { Timber } from '../bevel.ts'
 import type { DraftCut } from '../cuts.ts'
-import { endCorners } from '../ends.ts'
 import type { DraftMember } from '../members.ts'
-import type { Cut, Member, RoofSettings } from '../roof-types.ts'
-import { degrees, scale3 } from '../vector.ts'
+import type { Cut, Member, Point3, RoofSettings } from '../roof-types.ts'
+import { degrees, dot3, scale3 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import { endFaces, facesReachMm } from './end-faces.ts'
+import type { EndFace } from './end-faces.ts'
 
 /** A saw cut of a timber beside the frame: its plane, normal off the timber, and the pieces it bears on. */
 export type EndCut = { end: Cut['end']; plane: Plane; bears: number[] }
@@ -29,6 +29,7 @@ export type BesideTimber = {
 const noFalls = { left: 0, right: 0 }
 /** A long point nearer the middle than this is central. */
 const centralMm = 0.05
+const samePointMm = 1e-6
 
 /** A timber that lies with its top in a slope or level: depths go square to its top. */
 export const lyingTimber = (
@@ -72,14 +73,24 @@ const draftCut = (settings: RoofSettings, timber: Timber, { end, plane }: EndCut
 }
 
 /** The side of the head's long point, looking from foot to head; null when central or square. */
-const handOf = (timber: Timber, heads: DraftCut[]): Member['hand'] => {
-  if (heads.every((cut) => cut.longSide === 'none')) return null
-  const tip = endCorners(timber, heads, true).reduce((a, b) =>
-    b.alongMm > a.alongMm + 1e-6 ? b : a,
+const handOf = (timber: Timber, heads: EndFace<unknown>[]): Member['hand'] => {
+  const corners = heads.flatMap(({ corners, alongMm }) =>
+    corners.map((p, k) => ({ along: alongMm[k] ?? 0, left: asideMm(timber, p) })),
   )
-  if (Math.abs(tip.leftMm) < centralMm) return null
-  return tip.leftMm > 0 ? 'left' : 'right'
+  const furthest = Math.max(...corners.map(({ along }) => along))
+  const tips = corners.filter(({ along }) => along > furthest - samePointMm)
+  const lefts = tips.map(({ left }) => left)
+  const middle = (Math.min(...lefts) + Math.max(...lefts)) / 2
+  if (Math.abs(middle) < centralMm) return null
+  return middle > 0 ? 'left' : 'right'
 }
+
+const asideMm = (timber: Timber, p: Point3): number =>
+  dot3(timber.left, {
+    x: p.x - timber.origin.x,
+    y: p.y - timber.origin.y,
+    z: p.z - timber.origin.z,
+  })
 
 const nearest = (distances: number[]): number => (distances.length > 0 ? Math.min(...distances) : 0)
 
@@ -93,9 +104,9 @@ export const besideMember = (settings: RoofSettings, beside: BesideTimber): Draf
   const heads = cuts.filter((cut) => cut.end === 'head')
   const feet = cuts.filter((cut) => cut.end !== 'head')
   const along = (end: Cut['end']) => cuts.filter((c) => c.end === end).map((c) => c.alongMm)
-  const reach = (ends: DraftCut[], upper: boolean) =>
-    facesReachMm(timber, endFaces(timber, ends, upper), upper)
-  const cutLengthMm = reach(heads, true) - reach(feet, false)
+  const headFaces = endFaces(timber, heads, true)
+  const footFaces = endFaces(timber, feet, false)
+  const cutLengthMm = facesReachMm(timber, headFaces, true) - facesReachMm(timber, footFaces, false)
   const volumeM3 = (cutLengthMm * thicknessMm * timber.depthMm) / 1_000_000_000
   const { direction } = timber
   const level = Math.hypot(direction.x, direction.y)
@@ -104,7 +115,7 @@ export const besideMember = (settings: RoofSettings, beside: BesideTimber): Draf
     timber,
     role: beside.role,
     ...(beside.topInSlope === true ? { topInSlope: true } : {}),
-    hand: handOf(timber, heads),
+    hand: handOf(timber, headFaces),
     section: { thicknessMm, depthMm: timber.depthMm },
     axis: { from: { ...timber.origin }, to: timberPoint(timber, lengthMm, 0, 0) },
     riseMm: lengthMm * direction.z,
