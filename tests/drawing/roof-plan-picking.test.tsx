@@ -23,6 +23,13 @@ const [first, second] = spec.members.map((member) => member.mark)
 const button = (mark: string | undefined) =>
   screen.getByRole('button', { name: new RegExp(`^${mark},`) })
 
+// The test page has no media queries; the plan asks whether it is being printed.
+vi.stubGlobal('matchMedia', () => ({
+  matches: false,
+  addEventListener: () => {},
+  removeEventListener: () => {},
+}))
+
 afterEach(cleanup)
 
 test('a timber is picked by a tap, and by Enter after the arrow keys', () => {
