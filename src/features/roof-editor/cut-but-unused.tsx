@@ -1,6 +1,16 @@
 import type { Issued } from '../../../shared/revisions/revision-schemas.ts'
 import { Note } from '../../ui/states.tsx'
 
+/** 'C1 × 48, H1 × 3': pieces of a line share the mark before their own letters. */
+function byLine(marks: readonly string[]): string {
+  const counts = new Map<string, number>()
+  for (const mark of marks) {
+    const line = mark.replace(/[a-z]+$/, '')
+    counts.set(line, (counts.get(line) ?? 0) + 1)
+  }
+  return [...counts].map(([line, count]) => `${line} × ${count}`).join(', ')
+}
+
 /** After an issue: what has been cut already and the new roof has no place for. */
 export function CutButUnused({ issued }: { issued: Issued | null }) {
   if (!issued || issued.cutButUnused.length === 0) return null
@@ -10,13 +20,14 @@ export function CutButUnused({ issued }: { issued: Issued | null }) {
         kind="caution"
         title={`Already cut, and not used in revision ${issued.revision.letter}`}
       >
-        <ul>
-          {issued.cutButUnused.map(({ letter, marks }) => (
-            <li key={letter}>
-              Cut to {letter}: {marks.join(', ')}
-            </li>
-          ))}
-        </ul>
+        {issued.cutButUnused.map(({ letter, marks }) => (
+          <details key={letter}>
+            <summary className="min-h-11 content-center">
+              Cut to {letter}: {byLine(marks)}
+            </summary>
+            <p>{marks.join(', ')}</p>
+          </details>
+        ))}
         <p>Tell the crew to put them aside; the pieces of the new roof are planned to be cut.</p>
       </Note>
     </div>
