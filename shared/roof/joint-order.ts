@@ -8,7 +8,7 @@ import { jointMitres } from './joint-mitres.ts'
 import { jointGroups, waysToTry } from './joint-ways.ts'
 import { isAlongCrease } from './piece.ts'
 import type { Piece, PieceEnd, PlanCut } from './piece.ts'
-import { ridgeDirections, ridgeEnd } from './ridge-ends.ts'
+import { ridgeDirections, ridgeEnd, runsInto } from './ridge-ends.ts'
 import { at } from './slopes.ts'
 import { bodyObstacle, halfObstacle, trimEnd } from './trim.ts'
 import type { Near, Obstacle } from './trim.ts'
@@ -90,19 +90,28 @@ const placeJobs = (
 }
 
 /**
- * Ends of ridges that butt nothing, longer ridges first; one that would run into a longer ridge near its
- * joint butts that after all.
+ * Ends of ridges that butt nothing. One that would run into the side of a ridge of another joint butts
+ * it after all; of two ends that would run into each other, that of the shorter ridge.
  */
 const placeRidges = (ground: Ground, jobs: EndJob[], creases: Near, standing: Standing): void => {
   const { chains } = ground.joints
   const rank = ({ piece }: EndJob) => chains.findIndex((c) => c.lines[0] === piece.line)
   const free = jobs.filter(({ phase }) => phase === phases.ridge)
-  for (const job of free.sort((a, b) => rank(a) - rank(b))) {
-    const { piece, end } = job
-    const cut = ridgeEnd(ground, job, jobs, creases)
-    const found = trimEnd(piece, end, standing.near, [cut], Infinity)
-    if (found.length === 1 && found[0] === cut) setCuts(job, [cut], standing)
-    else job.phase = phases.ridgeButt
+  free.sort((a, b) => rank(a) - rank(b))
+  const cuts = new Map(free.map((job) => [job, ridgeEnd(ground, job, jobs, creases)]))
+  const hits = (job: EndJob, other: EndJob) => {
+    const cut = cuts.get(job)
+    return job.joint !== other.joint && cut !== undefined && runsInto(job, cut, other.piece)
+  }
+  for (const job of free) {
+    const isStopped = free.some(
+      (other) =>
+        hits(job, other) &&
+        !free.some((end) => end.piece === other.piece && hits(end, job) && rank(end) > rank(job)),
+    )
+    const cut = cuts.get(job)
+    if (isStopped) job.phase = phases.ridgeButt
+    else if (cut !== undefined) setCuts(job, [cut], standing)
   }
 }
 
@@ -201,14 +210,7 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
     put(body)
     bodies.put(body, body.box)
   }
-  const ridges = boxGrid<Obstacle>()
-  placeRidges(ground, early, bodies.near, {
-    near: ridges.near,
-    put: (ridge) => {
-      put(ridge)
-      ridges.put(ridge, ridge.box)
-    },
-  })
+  placeRidges(ground, early, bodies.near, { near: grid.near, put })
   const rest = early.filter(({ phase }) => phase !== phases.ridge)
   placeJobs(ground, rest, new Map(), { near: grid.near, put }, [])
   const placed = [...early]

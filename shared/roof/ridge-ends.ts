@@ -33,11 +33,29 @@ const coverMm = (ridge: Piece, away: Point2, other: EndJob): number => {
   return (ridge.halfMm * dot2(away, out) + other.piece.halfMm) / aside
 }
 
+const stripOf = (start: Point2, end: Point2, along: Point2, halfMm: number): Point2[] => {
+  const aside = scale2(left2(along), halfMm)
+  return [sub2(start, aside), sub2(end, aside), add2(end, aside), add2(start, aside)]
+}
+
+/** Whether a ridge's end, as cut, would run into another ridge between that one's ends. */
+export const runsInto = ({ piece, end }: EndJob, cut: PlanCut, other: Piece): boolean => {
+  if (piece === other) return false
+  const away = end === 'head' ? piece.dir : scale2(piece.dir, -1)
+  const own = stripOf(
+    sub2(cut.point, scale2(away, 3 * piece.halfMm)),
+    cut.point,
+    away,
+    piece.halfMm,
+  )
+  const shared = convexOverlap(own, stripOf(other.foot, other.head, other.dir, other.halfMm))
+  return polygonSignedArea(shared) > touchMm2
+}
+
 /** How far past its node a ridge can run before it meets a hip or valley that passes, mm. */
 const clearMm = (piece: Piece, node: Point2, away: Point2, pastMm: number, near: Near): number => {
-  const aside = scale2(left2(away), piece.halfMm)
   const [start, end] = [add2(node, scale2(away, -piece.halfMm)), add2(node, scale2(away, pastMm))]
-  const own = [sub2(start, aside), sub2(end, aside), add2(end, aside), add2(start, aside)]
+  const own = stripOf(start, end, away, piece.halfMm)
   let clear = pastMm
   for (const { polygon } of near(polygonBox(own))) {
     const shared = convexOverlap(own, polygon.points)
