@@ -7,6 +7,8 @@ import { distanceToRim, distanceToStretch } from './surface.ts'
 import { cosDeg, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
 const PLACE_TOL_MM = 0.01
+/** Nodes nearer than this are one. */
+const ON_LINE_MM = 0.5
 const TOP_TOL_MM = 0.2
 const ANGLE_TOL_DEG = 0.001
 
@@ -26,6 +28,18 @@ function checkEnds(say: Say, site: Site, piece: Piece): void {
   if (!isRafter(member)) return
   const turn = member.pitchDeg - toDeg(Math.atan(own[0]!.slope.tan))
   if (Math.abs(turn) > ANGLE_TOL_DEG) say('its pitch is not its slope’s, degrees', turn)
+}
+
+/** Each slope that a hip, valley or ridge names lies along it: two corners of it, or more, are on its line. */
+function checkBeside(say: Say, site: Site, piece: Piece): void {
+  const { from, to } = piece.member.axis
+  for (const index of piece.member.planes) {
+    const gaps = site.surface.faces[index]!.plan.map(([x, y]) =>
+      distanceToStretch([from.x, from.y], [to.x, to.y], x, y),
+    )
+    const [, second = Infinity] = gaps.sort((a, b) => a - b)
+    if (second > ON_LINE_MM) say(`slope ${index} does not lie along it, mm`, second)
+  }
 }
 
 /** A rafter that comes down to a valley starts from a valley's centre line. */
@@ -61,6 +75,7 @@ export function checkPlace(complain: Complain, site: Site, piece: Piece): void {
     }
   }
   checkEnds(say, site, piece)
+  if (isAlongLine(member)) checkBeside(say, site, piece)
   checkFromValley(say, site, piece)
   if (member.birdsmouth !== null) {
     const heel = member.axis.from

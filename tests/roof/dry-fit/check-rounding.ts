@@ -3,15 +3,15 @@ import {
   backingDeg,
   sawnPlane,
   shortSideSign,
-  toBuilding,
   type Piece,
   type SawnPlane,
 } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { JudgeSettings, Site } from './site.ts'
-import { dot, sub, tanDeg, toVec, type Vec } from './vec.ts'
+import { dot, sub, tanDeg, type Vec } from './vec.ts'
 
 const AGREES_MM = 0.02
+const ON_FACE_MM = 0.05
 
 const near = (value: number, step: number): number => Math.round(value / step) * step
 const nearAngle = (angle: Angle, roundDeg: number): Angle => {
@@ -20,9 +20,9 @@ const nearAngle = (angle: Angle, roundDeg: number): Angle => {
 }
 
 const arrisFall = (piece: Piece, side: -1 | 1): number =>
-  (piece.member.section.thicknessMm / 2) * Math.max(0, tanDeg(backingDeg(piece.member, side)))
+  (piece.member.section.thicknessMm / 2) * tanDeg(backingDeg(piece.member, side))
 
-/** The cut marked from its long point to the millimetre, with both bevels to the half degree. */
+/** The cut marked from its long point to the firm's millimetre, with both bevels to its half degree. */
 function roughPlane(piece: Piece, { cut }: SawnPlane, to: JudgeSettings): SawnPlane {
   const { member } = piece
   const long = shortSideSign(cut) === 1 ? -1 : 1
@@ -37,39 +37,41 @@ function roughPlane(piece: Piece, { cut }: SawnPlane, to: JudgeSettings): SawnPl
   return { ...sawnPlane(member, rough), point: [along, left, -fall] }
 }
 
-/** How far the roughly marked cut stands off its true plane at the four arrises of the bar. */
+/** Corners of the finished face: what a rough cut gapes or runs in at. */
+const faceCorners = (piece: Piece, sawn: SawnPlane): Vec[] =>
+  piece.own.filter((p) => Math.abs(dot(sawn.normal, sub(p, sawn.point))) < ON_FACE_MM)
+
+/** How far the roughly marked cut stands off the joint's face at its corners, square to it. */
 function worstOff(piece: Piece, sawn: SawnPlane, to: JudgeSettings): number {
   const { normal, point } = roughPlane(piece, sawn, to)
-  const { thicknessMm, depthMm } = piece.member.section
-  const offs = ([-1, 1] as const).flatMap((side) =>
-    [-arrisFall(piece, side), -depthMm].map((up) => {
-      const left = (side * thicknessMm) / 2
-      const along =
-        point[0] - (normal[1] * (left - point[1]) + normal[2] * (up - point[2])) / normal[0]
-      const corner: Vec = toBuilding(piece.pose, [along, left, up])
-      const { plane } = sawn.cut
-      return Math.abs(dot(toVec(plane.normal), sub(corner, toVec(plane.point))))
-    }),
-  )
-  return Math.max(...offs)
+  const offs = faceCorners(piece, sawn).map((corner) => {
+    const along = dot(normal, sub(point, corner)) / normal[0]
+    return Math.abs(along * sawn.normal[0])
+  })
+  return Math.max(0, ...offs)
 }
 
 /** The published worst joint error is the one that rounding the published numbers really causes. */
 export function checkRounding(complain: Complain, site: Site): void {
   const { spec, pieces, settings } = site
-  let worst = 0
-  let joint = ['none']
-  for (const piece of pieces) {
-    for (const sawn of piece.sawn) {
-      if (sawn.cut.against === null) continue
-      const off = worstOff(piece, sawn, settings)
-      if (off <= worst) continue
-      worst = off
-      joint = [piece.member.mark, sawn.cut.against]
-    }
+  const errors = pieces.flatMap((piece) =>
+    piece.sawn.flatMap((sawn) => {
+      const { against } = sawn.cut
+      if (against === null) return []
+      return [{ joint: [piece.member.mark, against], off: worstOff(piece, sawn, settings) }]
+    }),
+  )
+  const worst = Math.max(0, ...errors.map((error) => error.off))
+  const { worstMm, joint } = spec.rounding
+  const out = worstMm - worst
+  const marks = errors.find((error) => error.off === worst)?.joint ?? ['none']
+  if (Math.abs(out) > AGREES_MM) {
+    const text = `worst error by rounding is given as ${worstMm.toFixed(3)}, found ${worst.toFixed(3)} mm`
+    complain({ check: 'rounding', marks, out, text })
   }
-  const out = spec.rounding.worstMm - worst
-  if (Math.abs(out) <= AGREES_MM) return
-  const text = `worst error by rounding is given as ${spec.rounding.worstMm.toFixed(3)}, found ${worst.toFixed(3)} mm`
-  complain({ check: 'rounding', marks: joint, out, text })
+  const said = errors.filter((error) => error.joint.join() === joint?.join()).map((e) => e.off)
+  const short = worst - Math.max(0, ...said)
+  if (short > AGREES_MM) {
+    complain({ check: 'rounding', marks, out: short, text: 'the worst joint is another one, mm' })
+  }
 }

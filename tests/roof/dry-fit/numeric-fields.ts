@@ -84,7 +84,7 @@ export const fieldRules: FieldRule[] = [
   },
   { path: 'tailLengthMm', by: 'mm', caught: 'rule', check: ['numbers'], says: /^tail/ },
   { path: 'cutLengthMm', by: 'mm', caught: 'rebuild', check: ['numbers'], says: /^cut length/ },
-  { path: 'dropMm', by: 'mm', caught: 'rule', check: ['place'], says: /stand less drop|set down/ },
+  { path: 'dropMm', by: 'mm', caught: 'rule', check: ['place', 'beside'], says: /stand less drop/ },
   { path: 'weightKg', by: 'share', caught: 'rule', check: ['numbers'], says: /^weighs/ },
   {
     path: 'planes',

@@ -7,6 +7,7 @@ import { numbersFrom } from './random-roofs.ts'
 /** Houses with wings: a main body with parts built out from its sides. */
 type Next = () => number
 type Pitch = number | 'gable'
+type Corner = [number, number]
 /** One plate edge: where it starts, and which part of the house it belongs to. */
 type Side = { x: number; y: number; wing: number; isEnd: boolean }
 /** A part built out from one side of the body, from `from` to `to` along it. */
@@ -121,16 +122,30 @@ function pitchesOf(next: Next, sides: Side[], gables: boolean): Pitch[] {
   })
 }
 
-const waysOf = (next: Next): Parameters<typeof makeRoof>[2] => ({
+/** Width of the narrowest notch: a side between two inward corners. */
+function notchMm(outline: readonly Corner[]): number {
+  const n = outline.length
+  const at = (i: number): Corner => outline[(i + n) % n]!
+  const turnsIn = (i: number): boolean => {
+    const [[ax, ay], [bx, by], [cx, cy]] = [at(i - 1), at(i), at(i + 1)]
+    return (bx - ax) * (cy - by) - (by - ay) * (cx - bx) < 0
+  }
+  const widths = outline.map(([x, y], i) => {
+    const [ex, ey] = at(i + 1)
+    return turnsIn(i) && turnsIn(i + 1) ? Math.hypot(ex - x, ey - y) : Infinity
+  })
+  return Math.min(...widths)
+}
+
+/** Eaves across a notch do not run into each other: nobody would type that overhang. */
+const waysOf = (next: Next, outline: readonly Corner[]): Parameters<typeof makeRoof>[2] => ({
   hipTop: oneOf(next, ['backed', 'lowered']),
   valleyTop: oneOf(next, ['square', 'dished']),
   tail: oneOf(next, ['plumb', 'plumb', 'square']),
   spacing: oneOf(next, ['even', 'even', 'full']),
   maxSpacingMm: oneOf(next, [600, 600, 900]),
-  overhangMm: oneOf(next, [300, 450, 600]),
+  overhangMm: Math.min(oneOf(next, [300, 450, 600]), notchMm(outline) > 1400 ? 600 : 300),
 })
-
-type Corner = [number, number]
 
 /** Corners no sharper than this, in or out, and no two sides nearer than this: what a house is built with. */
 const SHARPEST_DEG = 40
@@ -163,14 +178,14 @@ function rectilinear(next: Next): Roof {
   const sides = sidesOf(bodyOf(next))
   const pitches = pitchesOf(next, sides, next() < 0.6)
   const outline = sides.map(({ x, y }): [number, number] => [x, y])
-  return makeRoof(outline, pitches, waysOf(next))
+  return makeRoof(outline, pitches, waysOf(next, outline))
 }
 
 function skewed(next: Next): Roof {
   const sides = sidesOf(bodyOf(next))
   const outline = movedOutline(next, sides)
   if (!isHouse(outline)) return skewed(next)
-  return makeRoof(outline, pitchesOf(next, sides, false), waysOf(next))
+  return makeRoof(outline, pitchesOf(next, sides, false), waysOf(next, outline))
 }
 
 /** Every corner moved, or each wing's end pushed aside, or one corner: odd angles, splayed ends. */

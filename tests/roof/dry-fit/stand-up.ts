@@ -64,6 +64,15 @@ export function checkPiece(complain: Complain, site: Site, facets: Facets, piece
   checkJoints(complain, site, facets, piece)
 }
 
+/** What a spec says of the whole roof, before any timber is looked at. */
+export function checkWhole(complain: Complain, site: Site): void {
+  checkMarks(complain, site.spec)
+  checkLists(complain, site.spec)
+  checkSurface(complain, site)
+  checkLayout(complain, site)
+  checkRounding(complain, site)
+}
+
 /** Saws every member from its published numbers, stands the frame up and judges it. */
 export function dryFit(
   kit: SolidKit,
@@ -74,15 +83,11 @@ export function dryFit(
   const { complain, complaints } = collector()
   const site = standUp(kit, roof, spec, settings)
   const facets = new Facets()
-  checkMarks(complain, spec)
-  checkLists(complain, spec)
-  checkSurface(complain, site)
+  checkWhole(complain, site)
   site.pieces.forEach((piece, index) => {
     checkPiece(complain, site, facets, piece)
     checkOverlaps(complain, site, piece, site.pieces.slice(index + 1))
   })
-  checkLayout(complain, site)
-  checkRounding(complain, site)
   takeDown(site)
   return complaints
 }

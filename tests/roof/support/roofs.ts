@@ -55,6 +55,7 @@ export function referenceRoof(
   return makeRoof(outline, pitchesOf(roof), changes)
 }
 
+export const allReferences = reference.roofs
 export const convexReferences = reference.roofs.filter((roof) => isConvex(roof.outline_mm))
 export const hollowReferences = reference.roofs.filter((roof) => !isConvex(roof.outline_mm))
 
