@@ -90,6 +90,23 @@ export const endCorners = (timber: Timber, cuts: DraftCut[], upper: boolean): En
     return { leftMm, alongMm, point: timberPoint(timber, alongMm, leftMm, topFall(timber, leftMm)) }
   })
 
+/** The corners of one cut's face, among all cuts of its end: mm off the centre line and plumb under the top. */
+export const faceCorners = (
+  timber: Timber,
+  cuts: DraftCut[],
+  cut: DraftCut,
+  upper: boolean,
+): { leftMm: number; downMm: number }[] =>
+  (['top', 'bottom'] as const).flatMap((level) =>
+    offsets(timber, cuts, level)
+      .filter((leftMm) => {
+        const beyond =
+          crossingMm(timber, cut, leftMm, level) - endAlongMm(timber, cuts, upper, leftMm, level)
+        return Math.abs(beyond) < centralGapMm
+      })
+      .map((leftMm) => ({ leftMm, downMm: downMm(timber, leftMm, level) })),
+  )
+
 /** Furthest reach of a timber's end along its own axis, mm from its origin. */
 export const endReachMm = (timber: Timber, cuts: DraftCut[], upper: boolean): number => {
   let furthest = upper ? -Infinity : Infinity

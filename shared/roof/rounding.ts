@@ -1,6 +1,7 @@
 import { crossingAt, crossingOf, timberPoint, topFall } from './bevel.ts'
 import type { Timber } from './bevel.ts'
 import type { DraftCut } from './cuts.ts'
+import { faceCorners } from './ends.ts'
 import type { DraftMember } from './members.ts'
 import type { FrameSpec, Point3, RoofSettings } from './roof-types.ts'
 import { along3, cross3, dot3, radians, scale3, unit3 } from './vector.ts'
@@ -44,18 +45,16 @@ const rebuiltPlane = (timber: Timber, cut: DraftCut, roundMm: number, roundDeg: 
   return { point, normal: dot3(normal, cut.plane.normal) < 0 ? scale3(normal, -1) : normal }
 }
 
-/** Largest gap between a cut and its rebuilt self over the timber's four arrises, mm square to the cut. */
-const gapMm = (timber: Timber, cut: DraftCut, rebuilt: Plane): number => {
+/** Largest gap between a cut's face and its rebuilt self, over the face's corners, mm square to the cut. */
+const gapMm = (timber: Timber, cuts: DraftCut[], cut: DraftCut, rebuilt: Plane): number => {
   const facing = Math.abs(dot3(cut.plane.normal, timber.direction))
   const marked = crossingOf(rebuilt, timber)
-  let worst = 0
-  for (const leftMm of [timber.halfMm, -timber.halfMm]) {
-    for (const downMm of [topFall(timber, leftMm), timber.depthMm / timber.cos]) {
-      const off = crossingAt(marked, leftMm, downMm) - crossingAt(cut.crossing, leftMm, downMm)
-      worst = Math.max(worst, Math.abs(off) * facing)
-    }
-  }
-  return worst
+  const upper = cut.end === 'head'
+  const sameEnd = cuts.filter((other) => (other.end === 'head') === upper)
+  const offs = faceCorners(timber, sameEnd, cut, upper).map(({ leftMm, downMm }) =>
+    Math.abs(crossingAt(marked, leftMm, downMm) - crossingAt(cut.crossing, leftMm, downMm)),
+  )
+  return facing * Math.max(0, ...offs)
 }
 
 /** The joint that suffers most when every number is marked to the settings' steps, mm. */
@@ -70,7 +69,7 @@ export const worstRounding = (
       const [against] = cut.bears
       if (against === undefined) continue
       const rebuilt = rebuiltPlane(timber, cut, settings.roundMm, settings.roundDeg)
-      const gap = gapMm(timber, cut, rebuilt)
+      const gap = gapMm(timber, cuts, cut, rebuilt)
       if (gap > worst.worstMm + 1e-9) {
         const joint: [string, string] = [markOf.get(piece.id) ?? '', markOf.get(against) ?? '']
         worst = { worstMm: gap, joint }
