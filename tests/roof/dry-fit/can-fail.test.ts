@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { frameRoof } from '../../../shared/roof/frame-roof.ts'
 import { defaultSettings } from '../../../shared/roof/roof-settings.ts'
 import type { Cut, Member, MemberRole, Roof } from '../../../shared/roof/roof-types.ts'
-import type { makeRoof} from '../support/roofs.ts';
+import type { makeRoof } from '../support/roofs.ts'
 import { hollowReferences, referenceRoof } from '../support/roofs.ts'
 import { Facets } from './facets.ts'
 import { fieldRules, numberPaths, type BentBy, type FieldRule } from './numeric-fields.ts'
