@@ -34,8 +34,9 @@ export const waveProblems = (_roof: Roof, { wave }: PlateLines): RoofProblem[] =
 
 /** Gables under which the roof leaves no ridge to run out to the verge. */
 export const ridgeProblems = (roof: Roof, plates: PlateLines): RoofProblem[] => {
+  const hasGable = plates.edges.some((edge) => edge.finish === 'gable')
   // a lean-to has a high wall in place of a ridge
-  if (plates.slopes.length === 1) return []
+  if (!hasGable || plates.slopes.length === 1) return []
   const lines = roofLines(plates)
   const { swallowed } = roofJoints(roof, lines)
   return plates.edges.flatMap((edge) => {
