@@ -51,6 +51,7 @@ export const firmRoofSettingsSchema = z.strictObject({
   roundMm: within(0.1, 10, 'the rounding in mm'),
   roundDeg: within(0.1, 5, 'the rounding in degrees'),
   maxRafterSpanMm: within(500, 10_000, 'the longest rafter span in mm'),
+  collarTieSpacingMm: within(300, 3000, 'the widest spacing of collar ties in mm').default(1200),
 })
 
 const firmFields = {

@@ -27,6 +27,12 @@ export const roofFields: NumberField<keyof FirmSettings['roofSettings']>[] = [
     unit: 'mm',
     hint: 'From the span tables or the engineer for your timber.',
   },
+  {
+    key: 'collarTieSpacingMm',
+    label: 'Collar ties no further apart than',
+    unit: 'mm',
+    hint: 'Set out where a size is typed for them.',
+  },
   { key: 'densityKgM3', label: 'Timber weighs', unit: 'kg/m³' },
   { key: 'roundMm', label: 'Lengths are marked to', unit: 'mm' },
   { key: 'roundDeg', label: 'Bevels are marked to', unit: '°' },
