@@ -3,7 +3,9 @@ import { describe, expect, test } from 'vitest'
 
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { roofProblems } from '../../shared/roof/roof-problems.ts'
+import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Point2, Roof } from '../../shared/roof/roof-types.ts'
+import { randomLinesRoof } from './lines/random-outlines.ts'
 import { makeRoof } from './support/roofs.ts'
 
 /** Corners on an ellipse, in order: convex whatever is drawn. Runs with a fixed seed. */
@@ -132,6 +134,66 @@ describe('over random convex plans', () => {
   })
 })
 
+/**
+ * The frame of plans of any shape; their lines alone are tried on 2,000 in lines/line-properties.test.ts.
+ * `PROOF=1` frames 400 of them, otherwise a sample.
+ */
+describe('over random plans of any shape', () => {
+  const count = process.env['PROOF'] === '1' ? 400 : 40
+  const framed = Array.from({ length: count }, (_, n) => n)
+    .map((n) => ({ n, roof: randomLinesRoof(n, n % 2 === 0) }))
+    .filter(({ roof }) => roof.outline.length <= 20 && roofProblems(roof).length === 0)
+    .map(({ n, roof }) => ({ n, roof, spec: frameRoof(roof) }))
+
+  test('most are framed', () => {
+    expect(framed.length).toBeGreaterThan(count * 0.6)
+  })
+
+  test('every number of the spec is a number, every member has length and every mark is its own', () => {
+    for (const { n, spec } of framed) {
+      expect(numbersOf(spec).every(Number.isFinite), `roof ${n}`).toBe(true)
+      const short = spec.members.filter((m) => !(m.cutLengthMm > 0)).map((m) => m.mark)
+      expect(short, `roof ${n}`).toEqual([])
+      const marks = spec.members.map((m) => m.mark)
+      expect(new Set(marks).size, `roof ${n}`).toBe(marks.length)
+      const listed = spec.cutLines.flatMap((line) => line.members)
+      expect(listed.sort(), `roof ${n}`).toEqual([...marks].sort())
+    }
+  })
+
+  test('the slopes cover the plan once, whatever their pitches', () => {
+    for (const { n, roof, spec } of framed) {
+      const plan = spec.planes.reduce(
+        (sum, p) => sum + p.areaM2 * Math.cos((p.pitchDeg * Math.PI) / 180),
+        0,
+      )
+      expect(plan, `roof ${n}`).toBeCloseTo(planAreaM2(roof.outline), 3)
+    }
+  })
+
+  test('every valley has a timber, and every timber of a line runs along it', () => {
+    for (const { n, spec } of framed) {
+      for (const role of ['valley', 'hip'] as const) {
+        const lines = spec.lines.filter((line) => line.kind === role)
+        const members = spec.members.filter((m) => m.role === role)
+        const stray = members.filter(
+          (m) =>
+            !lines.some(
+              ({ from, to }) =>
+                Math.hypot(from.x - m.axis.from.x, from.y - m.axis.from.y) < 1 &&
+                Math.hypot(to.x - m.axis.to.x, to.y - m.axis.to.y) < 1,
+            ),
+        )
+        expect(
+          stray.map((m) => m.mark),
+          `roof ${n}`,
+        ).toEqual([])
+        expect(members.length, `roof ${n}: ${role}s`).toBe(lines.length)
+      }
+    }
+  })
+})
+
 /** What a member is whatever way the building faces: role, lengths and angles. */
 const signature = (spec: FrameSpec, scale = 1): [string, number[]][] =>
   spec.members.map((m) => [
@@ -175,16 +237,48 @@ const splayed = (): Roof =>
     ],
     [25, 27, 30, 24, 22, 'gable'],
   )
+/** An L with a narrow wing, two pitches and a gable: valley, broken hip, all three creepers. */
+const winged = (): Roof =>
+  makeRoof(
+    [
+      [0, 0],
+      [12000, 0],
+      [12000, 6000],
+      [4000, 6000],
+      [4000, 11000],
+      [0, 11000],
+    ],
+    [25, 'gable', 25, 28, 25, 28],
+  )
+/** A T whose wing dies into the main roof: one slope over two plates. */
+const tee = (): Roof =>
+  makeRoof(
+    [
+      [0, 0],
+      [12000, 0],
+      [12000, 6000],
+      [8000, 6000],
+      [8000, 9500],
+      [4000, 9500],
+      [4000, 6000],
+      [0, 6000],
+    ],
+    [30, 25, 30, 30, 'gable', 30, 30, 25],
+  )
 const moved = (roof: Roof, to: (p: Point2) => Point2): Roof => ({
   ...roof,
   outline: roof.outline.map(to),
 })
 
-describe('a building set down another way', () => {
-  const straight = signature(frameRoof(splayed()))
+describe.each([
+  ['a splayed end', splayed],
+  ['a narrow wing', winged],
+  ['a T', tee],
+])('a building set down another way: %s', (_name, building) => {
+  const straight = signature(frameRoof(building()))
 
   test('shifted, its members are the same', () => {
-    const spec = frameRoof(moved(splayed(), (p) => ({ x: p.x + 31234.5, y: p.y - 20987.25 })))
+    const spec = frameRoof(moved(building(), (p) => ({ x: p.x + 31234.5, y: p.y - 20987.25 })))
     sameMembers(straight, signature(spec))
   })
 
@@ -192,14 +286,14 @@ describe('a building set down another way', () => {
     for (const angle of [0.3, Math.PI / 2, 2.5, 4]) {
       const [c, s] = [Math.cos(angle), Math.sin(angle)]
       const spec = frameRoof(
-        moved(splayed(), (p) => ({ x: p.x * c - p.y * s, y: p.x * s + p.y * c })),
+        moved(building(), (p) => ({ x: p.x * c - p.y * s, y: p.x * s + p.y * c })),
       )
       sameMembers(straight, signature(spec))
     }
   })
 
   test('mirrored, its members are the same and every hand is the other hand', () => {
-    const roof = splayed()
+    const roof = building()
     // backwards round the mirrored plan; edge k then comes from edge n − 1 − k
     const mirrored: Roof = {
       ...roof,
@@ -216,14 +310,14 @@ describe('a building set down another way', () => {
   })
 
   test('started at another corner, its members are the same', () => {
-    const roof = splayed()
+    const roof = building()
     const turned = <T>(list: T[]): T[] => [...list.slice(2), ...list.slice(0, 2)]
     const spec = frameRoof({ ...roof, outline: turned(roof.outline), edges: turned(roof.edges) })
     sameMembers(straight, signature(spec))
   })
 
   test('outline, sections and spacing scaled, every length scales and no angle changes', () => {
-    const roof = splayed()
+    const roof = building()
     const k = 1.25
     const scaled: Roof = {
       ...moved(roof, (p) => ({ x: p.x * k, y: p.y * k })),
@@ -237,7 +331,9 @@ describe('a building set down another way', () => {
         ridge: { thicknessMm: 35 * k, depthMm: 190 * k },
       },
     }
-    sameMembers(straight, signature(frameRoof(scaled), k))
+    // the shortest creeper worth cutting is a length too
+    const settings = { ...defaultSettings, minCreeperMm: defaultSettings.minCreeperMm * k }
+    sameMembers(straight, signature(frameRoof(scaled, settings), k))
   })
 })
 
