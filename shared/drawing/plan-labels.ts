@@ -37,7 +37,7 @@ const smallSizePx = 10
 /** Rafters nearer than this leave no room for words between them; a larger drawing does. */
 const leastBayPx = 8
 const openBayPx = 20
-const mostOverOthers = 16
+const mostOverOthers = 24
 
 type Way = {
   sizePx: number

@@ -1,6 +1,9 @@
 import type { FrameSpec } from '../roof/roof-types.ts'
 import type { MarkingOptions } from './marking-figures.ts'
 
+/** What was worked out for a tape in mm is not promised for a coarser one. */
+const sixteenths = 'A sixteenth of an inch is 1.6 mm: allow more where the tape reads sixteenths.'
+
 /** Under this a joint is as good as closed, mm. */
 const closedMm = 0.05
 
@@ -10,12 +13,13 @@ const closedMm = 0.05
  */
 export function roundingWords(
   { rounding }: Pick<FrameSpec, 'rounding'>,
-  { roundMm, roundDeg }: Pick<MarkingOptions, 'roundMm' | 'roundDeg'>,
+  { roundMm, roundDeg, units }: Pick<MarkingOptions, 'roundMm' | 'roundDeg' | 'units'>,
 ): string {
   const marked = `Marked to the nearest ${lengthStep(roundMm)} and ${angleStep(roundDeg)}`
   const { worstMm, joint } = rounding
   if (joint === null || worstMm < closedMm) return `${marked}, every joint closes.`
-  return `${marked}, the worst joint is ${worstMm.toFixed(1)} mm out: ${joint[0]} on ${joint[1]}.`
+  const worst = `${marked}, the worst joint is ${worstMm.toFixed(1)} mm out: ${joint[0]} on ${joint[1]}.`
+  return units === 'feet-inches' ? `${worst} ${sixteenths}` : worst
 }
 
 function lengthStep(roundMm: number): string {

@@ -1,7 +1,7 @@
 import { Minus, Plus } from 'lucide-react'
 import { Button } from '../ui/button.tsx'
 
-export const zoomSteps = [1, 1.5, 2, 3, 4, 6, 8, 12, 16] as const
+export const zoomSteps = [1, 1.5, 2, 3, 4, 6, 8, 12, 16, 24, 32] as const
 
 type Props = { zoom: number; maxZoom: number; onZoom: (zoom: number) => void }
 

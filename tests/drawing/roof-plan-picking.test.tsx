@@ -67,6 +67,20 @@ test('a plan that is only read is one picture, with no buttons in it', () => {
   expect(document.querySelectorAll('[data-mark][role]')).toHaveLength(0)
 })
 
+test('layers are shown and put away by name, and only where a roof has them', () => {
+  const { rerender } = render(<RoofPlan roof={roof} spec={spec} onPick={() => {}} />)
+  expect(screen.queryByRole('checkbox')).toBeNull()
+  const rafter = spec.members.find((member) => member.role === 'common')
+  if (!rafter) throw new Error('no common rafter')
+  const tie = { ...rafter, mark: 'CT1', role: 'collar-tie' as const }
+  const withTie = { ...spec, members: [...spec.members, tie] }
+  rerender(<RoofPlan roof={roof} spec={withTie} onPick={() => {}} />)
+  expect(button('CT1')).toBeTruthy()
+  fireEvent.click(screen.getByRole('checkbox', { name: 'Collar ties' }))
+  expect(screen.queryByRole('button', { name: /^CT1,/ })).toBeNull()
+  expect(button(rafter.mark)).toBeTruthy()
+})
+
 test('a problem can be read where it is drawn', () => {
   const problem = { path: 'edges.1.pitchDeg', message: 'Edge 2: pitch is from 5 to 60' }
   render(<RoofPlan roof={roof} spec={null} mode="edit" problems={[problem]} onPick={() => {}} />)

@@ -215,9 +215,15 @@ describe('what rounding costs, in words', () => {
   })
 
   test('the steps are the firm’s own', () => {
-    expect(roundingWords(spec(2.04, ['V1', 'R2']), { roundMm: 2, roundDeg: 1 })).toBe(
+    expect(roundingWords(spec(2.04, ['V1', 'R2']), { ...options, roundMm: 2, roundDeg: 1 })).toBe(
       'Marked to the nearest 2 mm and degree, the worst joint is 2.0 mm out: V1 on R2.',
     )
+  })
+
+  test('a tape in sixteenths is not promised what one in mm gives', () => {
+    // Source: 25.4 / 16 = 1.5875.
+    const words = roundingWords(spec(0.82, ['CR3', 'H1']), { ...options, units: 'feet-inches' })
+    expect(words).toContain('A sixteenth of an inch is 1.6 mm')
   })
 
   test('where nothing is out it says that every joint closes', () => {
