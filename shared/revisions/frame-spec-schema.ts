@@ -141,6 +141,7 @@ const cautionCodes = [
   'rafter-span-long',
   'joint-open',
   'collar-tie-moved',
+  'eaves-meet',
 ] as const
 
 export const frameSpecSchema = z.object({

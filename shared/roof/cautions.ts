@@ -1,7 +1,7 @@
 import type { Ground } from './build-pieces.ts'
 import { cautionAbout, halfDeg } from './caution-words.ts'
 import { crownShortcut } from './crown-cautions.ts'
-import { eavesNotLevel, lowPitch, overhangLong } from './eave-cautions.ts'
+import { eavesMeet, eavesNotLevel, lowPitch, overhangLong } from './eave-cautions.ts'
 import type { Caution, Member } from './roof-types.ts'
 import { sizeCautions } from './size-cautions.ts'
 import { longerThanStock, spanLong } from './span-cautions.ts'
@@ -36,6 +36,7 @@ export const cautionsOf = (
 ): Caution[] => [
   ...sizeCautions(ground, standMm, members),
   ...eavesNotLevel(ground),
+  ...eavesMeet(ground),
   ...pastSaw(ground, members),
   ...longerThanStock(ground, members),
   ...lowPitch(ground),

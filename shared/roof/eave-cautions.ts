@@ -1,6 +1,7 @@
 import type { Ground } from './build-pieces.ts'
 import { cautionAbout, cautionOf, halfDeg, isRafter, tenthMm, wholeMm } from './caution-words.ts'
 import type { Caution, CautionAnswer, Member } from './roof-types.ts'
+import { eavesThatMeet } from './secondary/tail-lines.ts'
 import { at } from './slopes.ts'
 import type { PlateEdge } from './slopes.ts'
 import { cross2, radians } from './vector.ts'
@@ -49,6 +50,29 @@ const unlevelAt = (before: PlateEdge, edge: PlateEdge): Caution[] => {
 export const eavesNotLevel = (ground: Ground): Caution[] => {
   const { edges } = ground.plates
   return edges.flatMap((edge, k) => unlevelAt(at(edges, k - 1), edge))
+}
+
+/** Eaves that meet over a recess: no boards or gutters go between them. */
+export const eavesMeet = (ground: Ground): Caution[] => {
+  const { plates, roof } = ground
+  const boardMm = roof.sections.fascia?.thicknessMm ?? 0
+  return eavesThatMeet(plates, boardMm).map((k) => {
+    const sides = [at(plates.edges, k - 1), at(plates.edges, k + 1)]
+    const most = Math.floor(at(plates.edges, k).lengthMm / 2 - boardMm)
+    const answers = sides
+      .filter((edge) => edge.overhangMm > most)
+      .flatMap((edge) => overhang(edge.index, most))
+    const [a, b] = sides.map((edge) => edge.index + 1)
+    return cautionOf(
+      'eaves-meet',
+      [],
+      `The eaves of edges ${a} and ${b} meet over edge ${k + 1}: no ${boardMm > 0 ? 'fascia or gutter' : 'gutter'} goes between them, and none is set out there.`,
+      most > 0
+        ? `Overhangs of at most ${most} mm on both leave room for the boards alone; a gutter needs more.`
+        : 'Widen the recess, or carry the roof across it.',
+      answers,
+    )
+  })
 }
 
 const longest = (members: Member[], of: (m: Member) => number): number =>

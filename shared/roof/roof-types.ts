@@ -247,6 +247,7 @@ export type CautionCode =
   | 'rafter-span-long'
   | 'joint-open'
   | 'collar-tie-moved'
+  | 'eaves-meet'
 
 /** A value of a field of `Roof` that would answer a caution; which one, or none, is for a person to type. */
 export type CautionAnswer = { path: string; value: number; unit: 'mm' | 'deg' }

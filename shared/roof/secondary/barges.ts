@@ -80,17 +80,10 @@ const layBarge = (ground: BesideGround, { line, gable }: Verge, section: Section
 const facing = (plane: Plane, direction: Timber['direction'], sign: 1 | -1): Plane =>
   dot3(plane.normal, direction) * sign > 0 ? plane : { ...plane, normal: scale3(plane.normal, -1) }
 
-/** At the apex, the plumb plane of the ridge; without a ridge there, square in plan to the verge. */
+/** At the apex, the plumb plane of the ridge, which under a lean-to is the high wall's; without a ridge there, square in plan to the verge. */
 const headPlane = (ground: BesideGround, verge: Verge, dir: { x: number; y: number }): Plane => {
-  const { lines, plates } = ground
+  const { lines } = ground
   const top = at(lines.nodes, verge.line.to)
-  if (verge.mate === null && top.corner !== null) {
-    // one slope only: up to the verge of the high wall
-    const index = top.corner === verge.gable.index ? top.corner - 1 : top.corner
-    const wall = at(plates.edges, index)
-    const out = { x: -wall.inward.x, y: -wall.inward.y, z: 0 }
-    return { point: along3({ ...wall.from, z: 0 }, out, wall.overhangMm), normal: out }
-  }
   const ridge = lines.lines.find(
     (line) => line.kind === 'ridge' && (line.from === verge.line.to || line.to === verge.line.to),
   )

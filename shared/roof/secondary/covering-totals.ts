@@ -11,7 +11,7 @@ import type {
 import { at } from '../slopes.ts'
 import type { PlateEdge } from '../slopes.ts'
 import { distance2, distance3, dot2, scale2, sub2, unit2 } from '../vector.ts'
-import { tailLine } from './tail-lines.ts'
+import { tailLineMm } from './tail-lines.ts'
 
 /** A gable that a line's end faces less squarely than this (cosine) is beside it, not before it. */
 const leastFacing = 0.1
@@ -101,7 +101,7 @@ export const coveringTotals = (
   const coveringAreaM2 = sum(planes.map((plane) => plane.areaWithEavesM2))
   const gaugeMm = settings.battenGaugeMm
   const eaves = plates.edges.filter((edge) => edge.finish === 'eave')
-  const gutterMm = sum(eaves.map((edge) => tailLine(plates, edge.index).lengthMm))
+  const gutterMm = sum(eaves.map((edge) => tailLineMm(plates, edge.index)))
   const boardsMm = (role: MemberRole) =>
     sum(members.filter((m) => m.role === role).map((m) => m.cutLengthMm))
   const { fascia, barge } = ground.roof.sections

@@ -1,7 +1,7 @@
 import { cornerOffLineMm, at } from '../slopes.ts'
 import type { PlateEdge, PlateLines } from '../slopes.ts'
 import { cross2 } from '../vector.ts'
-import { runsStraightOn, tailLine } from './tail-lines.ts'
+import { eavesThatMeet, runsStraightOn, tailLineMm } from './tail-lines.ts'
 
 /** What a fascia meets at an end: another eave's fascia, a gable's verge, or an eave that runs on at another height. */
 export type RunEnd = {
@@ -34,9 +34,14 @@ const runEnd = (before: PlateEdge, after: PlateEdge, beyond: PlateEdge): RunEnd 
   inward: cross2(before.along, after.along) < 0,
 })
 
-/** The runs of eaves that take one fascia each, in the order of their first edges. */
-export const eaveRuns = (plates: PlateLines): EaveRun[] => {
+/** The runs of eaves that take one fascia of this thickness each, in the order of their first edges; none where two meet over a recess. */
+export const eaveRuns = (plates: PlateLines, boardMm: number): EaveRun[] => {
   const { edges } = plates
+  const taken = eavesThatMeet(plates, boardMm).flatMap((k) => [
+    at(edges, k - 1),
+    at(edges, k),
+    at(edges, k + 1),
+  ])
   return edges.flatMap((edge): EaveRun[] => {
     const before = at(edges, edge.index - 1)
     if (edge.finish === 'gable' || sharesTail(before, edge)) return []
@@ -46,8 +51,8 @@ export const eaveRuns = (plates: PlateLines): EaveRun[] => {
     }
     const last = at(own, -1)
     const after = at(edges, last.index + 1)
-    const lengthMm = own.reduce((sum, { index }) => sum + tailLine(plates, index).lengthMm, 0)
-    if (lengthMm <= 0) return []
+    const lengthMm = own.reduce((sum, { index }) => sum + tailLineMm(plates, index), 0)
+    if (lengthMm <= 0 || own.some((one) => taken.includes(one))) return []
     return [
       {
         edges: own.map(({ index }) => index),

@@ -105,7 +105,9 @@ export const fascias = (
 ): DraftMember[] => {
   const section = ground.roof.sections.fascia
   if (section === undefined) return []
-  const all = eaveRuns(ground.plates).map((run) => layFascia(ground, run, section))
+  const all = eaveRuns(ground.plates, section.thicknessMm).map((run) =>
+    layFascia(ground, run, section),
+  )
   return all.map((laid, place) => {
     const { run, timber } = laid
     const ends = [run.from, run.to].map((end, k) => {

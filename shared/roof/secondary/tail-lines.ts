@@ -25,13 +25,28 @@ const outerCorner = (edge: PlateEdge, other: PlateEdge, corner: Point2): Point2 
   return add2(own, scale2(edge.along, alongMm))
 }
 
-/** An edge's outer line in plan, from corner to corner of the roof's own outline, mm; 0 long where its neighbours leave none of it. */
-export const tailLine = (
-  plates: PlateLines,
-  index: number,
-): { from: Point2; to: Point2; lengthMm: number } => {
+/** An edge's outer line in plan, from corner to corner of the roof's own outline; under 0 long where its neighbours' lines cross before it. */
+const outerLine = (plates: PlateLines, index: number) => {
   const edge = at(plates.edges, index)
   const from = outerCorner(edge, at(plates.edges, index - 1), edge.from)
   const to = outerCorner(edge, at(plates.edges, index + 1), edge.to)
-  return { from, to, lengthMm: Math.max(0, dot2(sub2(to, from), edge.along)) }
+  return { from, to, lengthMm: dot2(sub2(to, from), edge.along) }
 }
+
+/** Length of an edge's tail or verge line, mm; 0 where its neighbours leave none of it. */
+export const tailLineMm = (plates: PlateLines, index: number): number =>
+  Math.max(0, outerLine(plates, index).lengthMm)
+
+/** Slack on what two boards face to face need. */
+const roomMm = 0.01
+
+/**
+ * Edges at the back of a recess, between two inward corners, over which the eaves on both sides come
+ * nearer together than two boards of this thickness.
+ */
+export const eavesThatMeet = (plates: PlateLines, boardMm: number): number[] =>
+  plates.edges.flatMap((edge, k) => {
+    const [before, after] = [at(plates.edges, k - 1), at(plates.edges, k + 1)]
+    const isRecess = cross2(before.along, edge.along) < 0 && cross2(edge.along, after.along) < 0
+    return isRecess && outerLine(plates, k).lengthMm < 2 * boardMm - roomMm ? [k] : []
+  })

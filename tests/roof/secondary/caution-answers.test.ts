@@ -123,6 +123,40 @@ describe('eaves', () => {
   })
 })
 
+describe('a narrow recess', () => {
+  // a U whose court is 950 mm wide: two overhangs of 450 leave 50 mm, two boards of 30 mm want 60
+  const court = [
+    [0, 0],
+    [4000, 0],
+    [4000, 2000],
+    [4950, 2000],
+    [4950, 0],
+    [9000, 0],
+    [9000, 6000],
+    [0, 6000],
+  ] as const
+  const recessed = (overhangMm: number): Roof => {
+    const roof = makeRoof(court, Array(8).fill(25), { overhangMm })
+    return { ...roof, sections: { ...roof.sections, fascia: section(30, 190) } }
+  }
+
+  test('no boards are set out where they would run together, and the overhang that leaves room is named', () => {
+    const spec = framed(recessed(450))
+    // five of eight eaves are left
+    expect(spec.members.filter((m) => m.role === 'fascia')).toHaveLength(5)
+    const [caution] = said(recessed(450), 'eaves-meet')
+    expect(caution?.text).toContain('edges 2 and 4 meet over edge 3')
+    // (950 − 2 × 30) / 2
+    expect(caution?.answers?.map((a) => [a.path, a.value])).toEqual([
+      ['edges.1.overhangMm', 445],
+      ['edges.3.overhangMm', 445],
+    ])
+    const answered = framed(recessed(445))
+    expect(answered.members.filter((m) => m.role === 'fascia')).toHaveLength(8)
+    expect(answered.cautions.map((c) => c.code)).not.toContain('eaves-meet')
+  })
+})
+
 describe('thickness and height', () => {
   test('a deeper hip has no more over its seat, so a thickness is named', () => {
     // a lowered hip drops sin-free: half its thickness times the slope's fall across it, tan 30 / √2 a side
