@@ -14,6 +14,8 @@ export type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
 /** Faces this near to one plane bear on each other. */
 const bearingGapMm = 0.1
 const leastBearingMm = 0.25
+/** Faces that turn from each other by more than this (tangent, two degrees) only touch along an edge. */
+const mostTurn = 0.035
 /** Less of a face than this only touches a corner. */
 const leastShare = 0.025
 
@@ -57,6 +59,7 @@ export const sharedRange = (a: Segment, b: Segment): [number, number] | null => 
   // b's distance off a's plane runs straight from one end of b to the other
   const offFrom = dot2(across, sub2(b.from, a.from))
   const slope = (dot2(across, sub2(b.to, a.from)) - offFrom) / (t - s)
+  if (Math.abs(slope) > mostTurn) return null
   const ends = [bearingGapMm, -bearingGapMm].map((gap) => s + (gap - offFrom) / slope)
   if (Math.abs(slope) > 1e-9) {
     low = Math.max(low, Math.min(...ends))

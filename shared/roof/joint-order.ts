@@ -139,7 +139,9 @@ const placeGroup = (
   trials: Trials,
 ): { jobs: EndJob[]; openPieces: readonly number[] } => {
   const isOwn = (joint: number | null) => joint !== null && group.includes(joint)
-  const own = pieces.filter((p) => isOwn(p.headJoint) || isOwn(p.footJoint))
+  const own = pieces.filter(
+    (p) => isOwn(p.headJoint) || isOwn(p.footJoint) || p.through.some(isOwn),
+  )
   const ridges = ridgeDirections(pieces, group)
   const place = (ways: JointWays) => {
     const jobs = endJobs(ground, own, ways).filter(
