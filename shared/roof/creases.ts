@@ -17,7 +17,7 @@ export type CreaseNet = { nodes: RoofNode[]; creases: Crease[] }
 /** Events of the roof nearer together than this are one node: no saw or tape tells them apart. */
 const sameNodeMm = 0.5
 
-export const isSameSide = (a: CreaseSide, b: CreaseSide): boolean =>
+const isSameSide = (a: CreaseSide, b: CreaseSide): boolean =>
   'slope' in a ? 'slope' in b && a.slope === b.slope : 'gable' in b && a.gable === b.gable
 
 /** The creases as the wave left them; nodes 0 to n − 1 are the plate corners, in their exact places. */

@@ -114,7 +114,7 @@ const distanceToPolygon = (points: readonly Point2[], p: Point2): number => {
 }
 
 /** The slope over (or overhanging) a point of the plan; the nearest one beyond all overhangs. */
-export const slopeOver = (plates: PlateLines, lines: RoofLines, p: Point2): Slope => {
+const slopeOver = (plates: PlateLines, lines: RoofLines, p: Point2): Slope => {
   const distances = plates.slopes.map((slope) =>
     Math.min(
       ...slopePieces(plates, lines, slope)

@@ -42,8 +42,11 @@ export type PlateLines = {
   slopeOf: (number | null)[]
 }
 
-/** Three corners are in one line when the middle one is this near to the line of the outer two. */
-export const straightCornerMm = 0.5
+/**
+ * Three corners are in one line when the middle one is this near to the line of the outer two: a plan
+ * turned and read off in whole millimetres is that far out.
+ */
+export const straightCornerMm = 1
 
 /** The item at `index`, going round; only for lists that are not empty. */
 export const at = <T>(list: readonly T[], index: number): T => {

@@ -40,7 +40,7 @@ const commonLine = (fronts: readonly Front[]) => {
   return { middle, along, inward, offMm }
 }
 
-export type Fit = 'exact' | 'near' | 'apart'
+type Fit = 'exact' | 'near' | 'apart'
 
 /** Whether fronts of one speed that run one way lie in one line. */
 export const fitOf = (a: Front, b: Front): Fit => {

@@ -28,7 +28,7 @@ const piecesOf = (ring: Ring, j: number): WavePiece[] => {
 }
 
 /** Two pieces that have come to lie on each other: a ridge between their slopes. */
-export type ClosedPair = { one: WavePiece; other: WavePiece }
+type ClosedPair = { one: WavePiece; other: WavePiece }
 
 /** The fronts of a ring in pieces, without those that lie on each other. */
 export const openPieces = (ring: Ring): { open: WavePiece[]; closed: ClosedPair[] } => {

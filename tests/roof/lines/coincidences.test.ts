@@ -206,6 +206,34 @@ describe('plates out of square give a roof without slivers:', () => {
     expect(plates.slopes.map((slope) => slope.edges)).toContainEqual([2, 6])
   })
 
+  test('a plan turned and read off in whole millimetres has the slopes of the plan', () => {
+    for (const name of ['a T with a narrow wing', 'a cross with two narrow wings']) {
+      const [, plan, wanted] = plans.find((one) => one[0] === name)!
+      for (let n = 1; n < 40; n += 1) {
+        const read = turned(plan, n * 0.155).map(([x, y]): [number, number] => [
+          Math.round(x),
+          Math.round(y),
+        ])
+        expect(counted(read), `${name}, ${n}`).toMatchObject({
+          nodes: wanted.nodes,
+          slopes: wanted.slopes,
+        })
+      }
+    }
+  })
+
+  test('a corner 0.9 mm out of a straight plate is no corner of the roof', () => {
+    const { plates, lines } = solve([
+      [0, 0],
+      [4000, -0.9],
+      [9000, 0],
+      [9000, 6000],
+      [0, 6000],
+    ])
+    expect(plates.slopes.map((slope) => slope.edges)).toEqual([[0, 1], [2], [3], [4]])
+    expect(lines.lines.filter((line) => line.kind === 'hip')).toHaveLength(4)
+  })
+
   test('two plates 20 mm out of one line stay two slopes', () => {
     const { roof, plates, lines } = solve([
       [0, 0],

@@ -43,9 +43,9 @@ const numbersOf = (value: unknown): number[] => {
   return Object.values(value).flatMap(numbersOf)
 }
 
-/** Corners of the plan within half a millimetre of a straight eave are left out of its slope. */
+/** Corners of the plan within a millimetre of a straight eave are left out of its slope. */
 const straightCornersMm2 = (roof: Roof): number =>
-  roof.outline.length * 0.5 * Math.sqrt(planAreaMm2(roof.outline))
+  roof.outline.length * Math.sqrt(planAreaMm2(roof.outline))
 
 /**
  * Round a slope counter-clockwise the slope is on the left of each side: where its plane is the lower one
