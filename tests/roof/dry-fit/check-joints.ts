@@ -120,6 +120,9 @@ function mayStandFree(piece: Piece, sawn: SawnPlane): boolean {
   return role === 'broken-hip' && sawn.cut.end === 'foot'
 }
 
+/** A head or foot that bears over less than this share of its face is held by nothing. No source. */
+const BORNE_SHARE = 0.25
+
 type Say = (text: string, out: number, other?: string) => void
 
 function judgeNames(say: Say, sawn: SawnPlane, bearings: Bearing[], faceMm2: number): void {
@@ -146,35 +149,60 @@ function judgeNames(say: Say, sawn: SawnPlane, bearings: Bearing[], faceMm2: num
   }
 }
 
+type Borne = { faceMm2: number; closedMm2: number }
+
+/** Judges one cut; gives back how much of its face is borne. */
 function checkCut(
   complain: Complain,
   site: Site,
   facets: Facets,
   piece: Piece,
   sawn: SawnPlane,
-): void {
+): Borne {
   const { cut } = sawn
   const { mark } = piece.member
   const frame = frameOf(
     toBuilding(piece.pose, sawn.point),
     directionToBuilding(piece.pose, sawn.normal),
   )
-  const facet = facetOf(piece, frame)
   const say: Say = (text, out, other) =>
     complain({ check: 'joint', marks: other === undefined ? [mark] : [mark, other], out, text })
-  const face = drawnIn(site.kit, frame, facet)
+  const face = drawnIn(site.kit, frame, facetOf(piece, frame))
   const faceMm2 = face.area()
+  let closedMm2 = 0
   if (faceMm2 < TOUCH_MM2) say(`its ${cut.end} cut misses the timber, mm²`, faceMm2)
   else {
     if (cut.against === null && !mayStandFree(piece, sawn)) {
       say(`its ${cut.end} cut is said to bear on nothing`, 0)
     }
-    judgeNames(say, sawn, bearingsOn(site, facets, piece, sawn, frame, face), faceMm2)
+    const bearings = bearingsOn(site, facets, piece, sawn, frame, face)
+    judgeNames(say, sawn, bearings, faceMm2)
+    closedMm2 = bearings.reduce((sum, b) => sum + b.closedMm2, 0)
   }
   face.delete()
+  return { faceMm2, closedMm2 }
 }
 
-/** Every cut that butts: closed within 0.2 mm over its bearing face, and on the pieces it names. */
+/**
+ * Every cut that butts: closed within 0.2 mm over its bearing face, and on the pieces it names; and no
+ * head or foot that hangs by a corner while the rest of it faces nothing.
+ */
 export function checkJoints(complain: Complain, site: Site, facets: Facets, piece: Piece): void {
-  for (const sawn of piece.sawn) checkCut(complain, site, facets, piece, sawn)
+  const borne = piece.sawn.map((sawn) => ({
+    sawn,
+    ...checkCut(complain, site, facets, piece, sawn),
+  }))
+  for (const end of ['head', 'foot'] as const) {
+    const cuts = borne.filter(({ sawn }) => sawn.cut.end === end && !mayStandFree(piece, sawn))
+    const sum = (key: keyof Borne): number => cuts.reduce((all, cut) => all + cut[key], 0)
+    if (cuts.length === 0 || sum('closedMm2') >= BORNE_SHARE * sum('faceMm2')) continue
+    const share = (100 * sum('closedMm2')) / sum('faceMm2')
+    const marks = [piece.member.mark]
+    complain({
+      check: 'joint',
+      marks,
+      out: share,
+      text: `its ${end} bears on this little of its face, %`,
+    })
+  }
 }

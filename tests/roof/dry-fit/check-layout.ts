@@ -156,21 +156,24 @@ function judgeLevel(say: Say, layout: SlopeLayout, inward: number): void {
 /** Nodes nearer together than this many rafters are one joint, with one rafter for all of them. */
 const JOINT_RAFTERS = 4
 
-/** A rafter stands at every node that a square line of the slope reaches, or at the joint it is in. */
+/** A rafter stands at every node where a square line of the slope ends, or at the joint it is in. */
 function judgeNodes(say: Say, layout: SlopeLayout): void {
   const reach = JOINT_RAFTERS * layout.thicknessMm
   layout.borders.forEach((border, i) => {
     const before = layout.borders.at(i - 1)!
     const { along, inward } = border.a
     if (inward < BESIDE_MM || border.isVerge || before.isVerge) return
-    for (const beside of [inward - BESIDE_MM, inward + BESIDE_MM]) {
-      if (!isLong(layout, along, beside)) continue
-      const near = layout.rafters.some(
-        (r) => Math.abs(r.along - along) < reach && r.low < beside && beside < r.high + reach,
-      )
-      if (near) continue
-      say([layout.name], `no rafter stands at its node ${along.toFixed(0)} along, mm in`, inward)
-    }
+    const beside = [inward - BESIDE_MM, inward + BESIDE_MM].filter((mm) =>
+      isLong(layout, along, mm),
+    )
+    const [ending] = beside
+    // a square line that runs on past the node needs no rafter there
+    if (ending === undefined || beside.length > 1) return
+    const near = layout.rafters.some(
+      (r) => Math.abs(r.along - along) < reach && r.low < ending && ending < r.high + reach,
+    )
+    if (near) return
+    say([layout.name], `no rafter stands at its node ${along.toFixed(0)} along, mm in`, inward)
   })
 }
 
