@@ -4,6 +4,7 @@ import type { DraftCut } from './cuts.ts'
 import { faceCorners } from './ends.ts'
 import type { DraftMember } from './members.ts'
 import type { FrameSpec, Point3, RoofSettings } from './roof-types.ts'
+import { sectionCorners } from './secondary/end-faces.ts'
 import { along3, cross3, dot3, radians, scale3, unit3 } from './vector.ts'
 import type { Plane } from './vector.ts'
 
@@ -46,12 +47,18 @@ const rebuiltPlane = (timber: Timber, cut: DraftCut, roundMm: number, roundDeg: 
 }
 
 /** Largest gap between a cut's face and its rebuilt self, over the face's corners, mm square to the cut. */
-const gapMm = (timber: Timber, cuts: DraftCut[], cut: DraftCut, rebuilt: Plane): number => {
+const gapMm = (
+  { timber, cuts, topInSlope }: DraftMember,
+  cut: DraftCut,
+  rebuilt: Plane,
+): number => {
   const facing = Math.abs(dot3(cut.plane.normal, timber.direction))
   const marked = crossingOf(rebuilt, timber)
   const upper = cut.end === 'head'
   const sameEnd = cuts.filter((other) => (other.end === 'head') === upper)
-  const offs = faceCorners(timber, sameEnd, cut, upper).map(({ leftMm, downMm }) =>
+  // the cuts of a timber that lies in a slope meet across its sides too
+  const corners = topInSlope === true ? sectionCorners : faceCorners
+  const offs = corners(timber, sameEnd, cut, upper).map(({ leftMm, downMm }) =>
     Math.abs(crossingAt(marked, leftMm, downMm) - crossingAt(cut.crossing, leftMm, downMm)),
   )
   return facing * Math.max(0, ...offs)
@@ -64,12 +71,13 @@ export const worstRounding = (
   markOf: Map<number, string>,
 ): FrameSpec['rounding'] => {
   let worst: FrameSpec['rounding'] = { worstMm: 0, joint: null }
-  for (const { piece, timber, cuts } of drafts) {
+  for (const draft of drafts) {
+    const { piece, timber, cuts } = draft
     for (const cut of cuts) {
       const [against] = cut.bears
       if (against === undefined) continue
       const rebuilt = rebuiltPlane(timber, cut, settings.roundMm, settings.roundDeg)
-      const gap = gapMm(timber, cuts, cut, rebuilt)
+      const gap = gapMm(draft, cut, rebuilt)
       if (gap > worst.worstMm + 1e-9) {
         const joint: [string, string] = [markOf.get(piece.id) ?? '', markOf.get(against) ?? '']
         worst = { worstMm: gap, joint }

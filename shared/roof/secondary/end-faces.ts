@@ -2,7 +2,7 @@ import { crossingAt, crossingOf, timberPoint } from '../bevel.ts'
 import type { Crossing, Timber } from '../bevel.ts'
 import { clipConvex } from '../convex.ts'
 import type { Labelled } from '../convex.ts'
-import type { Point3 } from '../roof-types.ts'
+import type { Point2, Point3 } from '../roof-types.ts'
 import { at } from '../slopes.ts'
 import { cross3, dot3 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
@@ -54,6 +54,34 @@ export const faceAreaMm2 = (corners: Point3[]): number => {
   return Math.sqrt(dot3(sum, sum)) / 2
 }
 
+const isTwin = (a: Crossing, b: Crossing): boolean =>
+  Math.abs(a.baseMm - b.baseMm) < samePlaneMm &&
+  Math.abs(a.perLeft - b.perLeft) < 1e-9 &&
+  Math.abs(a.perDown - b.perDown) < 1e-9
+
+/** The part of a timber's section on which one of some planes ends it: corners mm left and mm down. */
+const ownPart = (timber: Timber, crossings: Crossing[], k: number, upper: boolean): Point2[] => {
+  const own = at(crossings, k)
+  if (crossings.some((other, n) => n < k && isTwin(own, other))) return []
+  const sign = upper ? 1 : -1
+  return crossings.reduce(
+    (left, other, n) => (n === k ? left : whereNearer(left, own, other, sign)),
+    sectionOf(timber),
+  ).points
+}
+
+/** The corners of one cut's face among all cuts of its end: mm off the centre line and mm down under the top. */
+export const sectionCorners = (
+  timber: Timber,
+  cuts: readonly { crossing: Crossing }[],
+  cut: { crossing: Crossing },
+  upper: boolean,
+): { leftMm: number; downMm: number }[] => {
+  const crossings = cuts.map(({ crossing }) => crossing)
+  const part = ownPart(timber, crossings, crossings.indexOf(cut.crossing), upper)
+  return part.map(({ x, y }) => ({ leftMm: x, downMm: y }))
+}
+
 /** The faces that some planes leave at a timber's end; planes that find no timber give none. */
 export const endFaces = <T extends { plane: Plane }>(
   timber: Timber,
@@ -61,20 +89,10 @@ export const endFaces = <T extends { plane: Plane }>(
   upper: boolean,
 ): EndFace<T>[] => {
   const crossings = cuts.map((cut) => crossingOf(cut.plane, timber))
-  const sign = upper ? 1 : -1
-  const isTwin = (a: Crossing, b: Crossing) =>
-    Math.abs(a.baseMm - b.baseMm) < samePlaneMm &&
-    Math.abs(a.perLeft - b.perLeft) < 1e-9 &&
-    Math.abs(a.perDown - b.perDown) < 1e-9
   return cuts.flatMap((cut, k): EndFace<T>[] => {
-    const own = at(crossings, k)
-    if (crossings.some((other, n) => n < k && isTwin(own, other))) return []
-    const part = crossings.reduce(
-      (left, other, n) => (n === k ? left : whereNearer(left, own, other, sign)),
-      sectionOf(timber),
-    )
-    const alongMm = part.points.map(({ x, y }) => crossingAt(own, x, y))
-    const corners = part.points.map(({ x, y }, n) => timberPoint(timber, at(alongMm, n), x, y))
+    const part = ownPart(timber, crossings, k, upper)
+    const alongMm = part.map(({ x, y }) => crossingAt(at(crossings, k), x, y))
+    const corners = part.map(({ x, y }, n) => timberPoint(timber, at(alongMm, n), x, y))
     return faceAreaMm2(corners) < leastFaceMm2 ? [] : [{ cut, corners, alongMm }]
   })
 }
