@@ -88,14 +88,23 @@ const seenFrom = (crease: Crease, node: number): Crease =>
     ? crease
     : { from: crease.to, to: crease.from, left: crease.right, right: crease.left }
 
+/** How many creases end in each node. */
+const degrees = (count: number, creases: readonly Crease[]): number[] => {
+  const ends = Array.from({ length: count }, () => 0)
+  for (const { from, to } of creases) {
+    ends[from] = at(ends, from) + 1
+    ends[to] = at(ends, to) + 1
+  }
+  return ends
+}
+
 /** Two creases that run on through a node where nothing else happens are one. */
 const joinStraight = ({ nodes, creases }: CreaseNet): CreaseNet => {
   let left = creases
-  nodes.forEach((node, n) => {
-    if (node.corner !== null) return
-    const ends = left.filter((c) => c.from === n || c.to === n)
-    const [one, other] = ends
-    if (ends.length !== 2 || one === undefined || other === undefined) return
+  degrees(nodes.length, creases).forEach((degree, n) => {
+    if (degree !== 2 || at(nodes, n).corner !== null) return
+    const [one, other] = left.filter((c) => c.from === n || c.to === n)
+    if (one === undefined || other === undefined) return
     const [a, b] = [seenFrom(one, n), seenFrom(other, n)]
     if (!isSameSide(a.left, b.right) || !isSameSide(a.right, b.left)) return
     const through = { from: a.to, to: b.to, left: a.right, right: a.left }
@@ -106,6 +115,8 @@ const joinStraight = ({ nodes, creases }: CreaseNet): CreaseNet => {
 
 /** Two creases between the same two nodes lie on each other: what is between them is no part of a slope. */
 const dropDoubles = ({ nodes, creases }: CreaseNet): CreaseNet => {
+  const keys = creases.map(({ from, to }) => Math.min(from, to) * nodes.length + Math.max(from, to))
+  if (new Set(keys).size === keys.length) return { nodes, creases }
   const left = [...creases]
   for (let a = 0; a < left.length; a++) {
     for (let b = a + 1; b < left.length; b++) {
@@ -140,15 +151,21 @@ const usedNodes = ({ nodes, creases }: CreaseNet): CreaseNet => {
 
 /** Nodes drawn together lie a little off some slopes: their height is the mean of those that meet there. */
 const settleHeights = (plates: PlateLines, { nodes, creases }: CreaseNet): CreaseNet => {
+  const meeting = nodes.map(() => new Set<number>())
+  for (const { from, to, left, right } of creases) {
+    for (const side of [left, right]) {
+      if ('slope' in side) {
+        at(meeting, from).add(side.slope)
+        at(meeting, to).add(side.slope)
+      }
+    }
+  }
   const settled = nodes.map((node, n): RoofNode => {
-    if (node.corner !== null) return node
-    const sides = creases
-      .filter((c) => c.from === n || c.to === n)
-      .flatMap((c) => [c.left, c.right])
-      .flatMap((side) => ('slope' in side ? [side.slope] : []))
-    const slopes = [...new Set(sides)].map((slope) => at(plates.slopes, slope))
-    const sum = slopes.reduce((total, slope) => total + slopeHeightMm(slope, node.point), 0)
-    return { ...node, point: { ...node.point, z: sum / slopes.length } }
+    const slopes = at(meeting, n)
+    if (node.corner !== null || slopes.size === 0) return node
+    let sum = 0
+    for (const slope of slopes) sum += slopeHeightMm(at(plates.slopes, slope), node.point)
+    return { ...node, point: { ...node.point, z: sum / slopes.size } }
   })
   return { nodes: settled, creases }
 }

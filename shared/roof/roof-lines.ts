@@ -93,14 +93,24 @@ const eaveLines = (plates: PlateLines): Traced[] =>
 
 const order: LineKind[] = ['ridge', 'hip', 'broken-hip', 'valley', 'verge', 'eave']
 
-const borderOf = (traced: Traced[], border: RawFace['borders'][number]): Border => {
-  const found = traced.findIndex((t) =>
-    'crease' in border ? t.crease === border.crease : t.eave === border.eave,
-  )
-  const line = found < 0 ? null : found
-  if (!('crease' in border)) return { kind: 'plate', edge: border.eave, line }
-  if ('gable' in border.other) return { kind: 'plate', edge: border.other.gable, line }
-  return { kind: 'slope', slope: border.other.slope, line: found }
+/** Gives each side of a face the line that was traced from its crease or eave. */
+const borderReader = (traced: Traced[]) => {
+  const ofCrease = new Map<number, number>()
+  const ofEave = new Map<number, number>()
+  traced.forEach(({ crease, eave }, line) => {
+    if (crease !== null) ofCrease.set(crease, line)
+    if (eave !== null) ofEave.set(eave, line)
+  })
+  return (border: RawFace['borders'][number]): Border => {
+    if (!('crease' in border)) {
+      return { kind: 'plate', edge: border.eave, line: ofEave.get(border.eave) ?? null }
+    }
+    const line = ofCrease.get(border.crease)
+    if ('gable' in border.other) {
+      return { kind: 'plate', edge: border.other.gable, line: line ?? null }
+    }
+    return { kind: 'slope', slope: border.other.slope, line: line ?? -1 }
+  }
 }
 
 /**
@@ -118,12 +128,13 @@ export const roofLines = (plates: PlateLines): RoofLines => {
     )
     .concat(eaveLines(plates))
   traced.sort((a, b) => order.indexOf(a.line.kind) - order.indexOf(b.line.kind))
+  const borderOf = borderReader(traced)
   return {
     nodes: net.nodes,
     faces: faces.map(({ nodes, borders }, slope) => ({
       slope,
       nodes,
-      borders: borders.map((border) => borderOf(traced, border)),
+      borders: borders.map(borderOf),
     })),
     lines: traced.map(({ line }) => line),
   }

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest'
 
-import { planAreaWithEavesMm2, surfaceHeightMm } from '../../../shared/roof/eaves.ts'
+import { planAreaWithEavesMm2, roofSurface } from '../../../shared/roof/eaves.ts'
 import { outlineProblems } from '../../../shared/roof/outline-problems.ts'
 import { plateLines } from '../../../shared/roof/plate-lines.ts'
 import { roofLines } from '../../../shared/roof/roof-lines.ts'
@@ -126,13 +126,13 @@ describe('the surface of the roof', () => {
     ['outside the inward corner, on the other side', { x: 6150, y: 6400 }, -150],
     ['outside a hip', { x: -200, y: -100 }, -200],
   ] as const)('%s', (_name, p, insideMm) => {
-    expect(surfaceHeightMm(plates, lines, p)).toBeCloseTo(insideMm * tan(25), 6)
+    expect(roofSurface(plates, lines)(p)).toBeCloseTo(insideMm * tan(25), 6)
   })
 
   test('beyond a gable it is the slope run on', () => {
     const plan = [lPlan[0]!, [9000, 0], [9000, 6000], [0, 6000]] as [number, number][]
     const gabled = solve(makeRoof(plan, [30, 'gable', 30, 'gable']))
-    const at = (x: number, y: number) => surfaceHeightMm(gabled.plates, gabled.lines, { x, y })
+    const at = (x: number, y: number) => roofSurface(gabled.plates, gabled.lines)({ x, y })
     expect(at(9200, 1000)).toBeCloseTo(1000 * tan(30), 6)
     expect(at(9200, 5500)).toBeCloseTo(500 * tan(30), 6)
     expect(at(9200, -200)).toBeCloseTo(-200 * tan(30), 6)
