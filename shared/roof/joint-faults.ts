@@ -86,14 +86,16 @@ const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
       face === undefined ? 0 : Math.hypot(face.to.x - face.from.x, face.to.y - face.from.y)
     if (face === undefined || size < sliverMm || !closes(face, cut, bodies)) faults += open
   })
-  const overlaps = bodies.some(
+  return faults
+}
+
+const overlaps = (own: Body, bodies: readonly Body[]): boolean =>
+  bodies.some(
     (body) =>
-      body.piece !== piece.id &&
+      body.piece !== own.piece &&
       boxesMeet(own.box, body.box) &&
       polygonSignedArea(convexOverlap(own.points, body.points)) > overlapMm2,
   )
-  return overlaps ? faults + open : faults
-}
 
 const bodyOf = (obstacle: Obstacle): Body => ({
   piece: obstacle.piece,
@@ -119,15 +121,15 @@ export const jointFaults = (
   for (const job of jobs) {
     const { piece, end } = job
     const own = (end === 'head' ? heads.get(piece.id) : null) ?? bodyOf(halfObstacle(piece, end))
-    if (job.phase !== phases.brokenFoot) {
-      const cuts = end === 'head' ? piece.headCuts : piece.footCuts
-      const mates = cuts.flatMap(({ mitreWith }) => heads.get(mitreWith ?? -1) ?? [])
-      const others = [...standing, ...mates].filter((body) => body.piece !== piece.id)
-      const faults = endFaults(job, own, [...new Set(others)])
-      total += faults
-      if (faults >= open) openPieces.push(piece.id)
-      if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
-    }
+    const cuts = end === 'head' ? piece.headCuts : piece.footCuts
+    const mates = cuts.flatMap(({ mitreWith }) => heads.get(mitreWith ?? -1) ?? [])
+    const others = [...new Set([...standing, ...mates])].filter((body) => body.piece !== piece.id)
+    // a foot that others bear on bears on nothing itself
+    const bearing = job.phase === phases.brokenFoot ? 0 : endFaults(job, own, others)
+    const faults = bearing + (overlaps(own, others) ? open : 0)
+    total += faults
+    if (faults >= open) openPieces.push(piece.id)
+    if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
     standing.push(own)
     if (end === 'head' && !hasFootJob(piece)) standing.push(bodyOf(halfObstacle(piece, 'foot')))
   }

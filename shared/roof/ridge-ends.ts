@@ -11,6 +11,8 @@ import { add2, cross2, dot2, left2, scale2, sub2 } from './vector.ts'
 const onGableMm = 1
 /** Overlaps smaller than this in plan are touching faces. */
 const touchMm2 = 0.01
+/** A ridge end can be kept back as far as this from its node by what passes there. */
+const backMm = 300
 
 /** The verge overhang of the gable that a ridge end stands on; null where it does not. */
 const vergeMm = (ground: Ground, ridge: Piece, point: Point2): number | null => {
@@ -54,7 +56,7 @@ export const runsInto = ({ piece, end }: EndJob, cut: PlanCut, other: Piece): bo
 
 /** How far past its node a ridge can run before it meets a hip or valley that passes, mm. */
 const clearMm = (piece: Piece, node: Point2, away: Point2, pastMm: number, near: Near): number => {
-  const [start, end] = [add2(node, scale2(away, -piece.halfMm)), add2(node, scale2(away, pastMm))]
+  const [start, end] = [add2(node, scale2(away, -backMm)), add2(node, scale2(away, pastMm))]
   const own = stripOf(start, end, away, piece.halfMm)
   let clear = pastMm
   for (const { polygon } of near(polygonBox(own))) {
