@@ -1,4 +1,5 @@
-import { polygonSignedArea } from './convex.ts'
+import { polygonBox, polygonSignedArea } from './convex.ts'
+import type { Box } from './convex.ts'
 import type { Face, RoofLines } from './roof-lines.ts'
 import type { Point2 } from './roof-types.ts'
 import { at, slopeHeightMm } from './slopes.ts'
@@ -113,18 +114,30 @@ const distanceToPolygon = (points: readonly Point2[], p: Point2): number => {
   return inside ? 0 : nearest
 }
 
+type Covered = { slope: Slope; piece: Point2[]; box: Box }
+
 /** The slope over (or overhanging) a point of the plan; the nearest one beyond all overhangs. */
-const slopeOver = (plates: PlateLines, lines: RoofLines, p: Point2): Slope => {
-  const distances = plates.slopes.map((slope) =>
-    Math.min(
-      ...slopePieces(plates, lines, slope)
-        .filter((piece) => piece.length > 2)
-        .map((piece) => distanceToPolygon(piece, p)),
-    ),
-  )
-  return at(plates.slopes, distances.indexOf(Math.min(...distances)))
+const slopeOver = (covered: readonly Covered[], p: Point2): Slope => {
+  let nearest = at(covered, 0).slope
+  let leastMm = Infinity
+  for (const { slope, piece, box } of covered) {
+    const asideMm = Math.max(box.minX - p.x, p.x - box.maxX, box.minY - p.y, p.y - box.maxY)
+    if (asideMm >= leastMm) continue
+    const awayMm = distanceToPolygon(piece, p)
+    if (awayMm >= leastMm) continue
+    if (awayMm === 0) return slope
+    nearest = slope
+    leastMm = awayMm
+  }
+  return nearest
 }
 
-/** Set-out height of the roof's surface over a point of the plan, mm over the plate; overhangs included. */
-export const surfaceHeightMm = (plates: PlateLines, lines: RoofLines, p: Point2): number =>
-  slopeHeightMm(slopeOver(plates, lines, p), p)
+/** The roof's surface: set-out height over any point of the plan, mm over the plate; overhangs included. */
+export const roofSurface = (plates: PlateLines, lines: RoofLines): ((p: Point2) => number) => {
+  const covered = plates.slopes.flatMap((slope) =>
+    slopePieces(plates, lines, slope)
+      .filter((piece) => piece.length > 2)
+      .map((piece): Covered => ({ slope, piece, box: polygonBox(piece) })),
+  )
+  return (p) => slopeHeightMm(slopeOver(covered, p), p)
+}

@@ -2,7 +2,7 @@ import type { FrameDraft } from './members.ts'
 import { endCorners } from './ends.ts'
 import type { Planing } from './roof-types.ts'
 import type { RoofLines } from './roof-lines.ts'
-import { surfaceHeightMm } from './eaves.ts'
+import { roofSurface } from './eaves.ts'
 import type { PlateLines } from './slopes.ts'
 
 /** Less than this over a slope is no work for a plane. */
@@ -18,15 +18,16 @@ export const planingOf = (
   lines: RoofLines,
   standMm: number,
   markOf: Map<number, string>,
-): Planing[] =>
-  drafts.flatMap((draft) =>
+): Planing[] => {
+  const surfaceMm = roofSurface(plates, lines)
+  return drafts.flatMap((draft) =>
     (['head', 'foot'] as const).flatMap((end) => {
       const cuts = draft.cuts.filter((cut) => cut.end === end)
       if (cuts.length === 0) return []
       const { finished } = draft
       const corners = endCorners(finished, cuts, end === 'head').map((corner) => ({
         leftMm: corner.leftMm,
-        overMm: corner.point.z - standMm - surfaceHeightMm(plates, lines, corner.point),
+        overMm: corner.point.z - standMm - surfaceMm(corner.point),
       }))
       return (['left', 'right'] as const).flatMap((side): Planing[] => {
         const sign = side === 'left' ? 1 : -1
@@ -37,3 +38,4 @@ export const planingOf = (
       })
     }),
   )
+}
