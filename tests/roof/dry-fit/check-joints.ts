@@ -120,8 +120,11 @@ function mayStandFree(piece: Piece, sawn: SawnPlane): boolean {
   return role === 'broken-hip' && sawn.cut.end === 'foot'
 }
 
-/** A head or foot that bears over less than this share of its face is held by nothing. No source. */
-const BORNE_SHARE = 0.25
+/**
+ * A head or foot that bears over less than this share of its face hangs by a corner. No source: side
+ * rafters at a short broken hip bear on the crown end over a sixth of theirs, in the order agreed on.
+ */
+const BORNE_SHARE = 1 / 8
 
 type Say = (text: string, out: number, other?: string) => void
 
