@@ -1,13 +1,19 @@
 import { memo, useCallback, useEffect, useMemo, useRef, useState } from 'react'
-import { planDrawing, type PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
+import {
+  planDrawing,
+  type PlanDrawing,
+  type PlanDrawingOptions,
+} from '../../shared/drawing/plan-drawing.ts'
 import { type PlanLayer, planLayersIn } from '../../shared/drawing/plan-layers.ts'
 import type { FrameSpec, Roof, RoofProblem } from '../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../shared/units/format-length.ts'
+import { usePrinting } from '../lib/use-printing.ts'
 import { PlanLayerKeys } from './plan-layer-keys.tsx'
 import { PlanLegend, type LegendWords } from './plan-legend.tsx'
 import type { MemberState } from './plan-member-shape.tsx'
 import { PlanGround, PlanMeasures, PlanProblems } from './plan-surround.tsx'
 import { PlanTimbers } from './plan-timbers.tsx'
+import { type LayOutPlan, useLaidPlan } from './use-laid-plan.ts'
 import { usePlanWindow, useRested } from './use-plan-zoom.ts'
 import { useWidth } from './use-width.ts'
 import { ZoomButtons, zoomSteps } from './zoom-buttons.tsx'
@@ -26,6 +32,8 @@ type Props = {
   label?: string
   legendWords?: LegendWords
   maxHeightPx?: number
+  /** Given where the roof changes as somebody types: no key waits for the words on the plan. */
+  layOut?: LayOutPlan | undefined
   onPick?: (mark: string) => void
 }
 
@@ -37,6 +45,7 @@ const pageWidthPx = 720
 const largestScale = 0.2
 /** The rule round the window, which stays when nothing is drawn larger so that nothing jumps. */
 const frameRulePx = 1
+const paperSteps = [1, 1.25, 1.5, 1.8]
 const dayWords: LegendWords = { due: 'Due today', done: 'Done', rest: 'The rest' }
 
 /** The roof from above: plates, roof lines, every timber with its mark, and what is due and done. */
@@ -48,8 +57,8 @@ export function RoofPlan(props: Props) {
   const [zoom, setZoom] = useState<number>(1)
   const laidOutZoom = useRested(zoom)
   const heightPx = props.maxHeightPx ?? Math.max(boxWidthPx, 420)
-  const draw = useDraw(props, { widthPx: Math.max(boxWidthPx, 200), heightPx, hiddenLayers })
-  const drawing = useMemo(() => draw(laidOutZoom), [draw, laidOutZoom])
+  const room = { widthPx: Math.max(boxWidthPx, 200), heightPx, hiddenLayers }
+  const { draw, drawing } = useDrawing(props, room, laidOutZoom)
   const maxZoom = largestZoom(drawing, laidOutZoom)
   const zoomTo = usePlanWindow(boxRef, drawing?.view ?? null, { zoom, setZoom, maxZoom })
   useBringIntoSight(spec, selected, zoom, zoomTo)
@@ -110,24 +119,45 @@ export function RoofPlan(props: Props) {
 
 type Room = { widthPx: number; heightPx: number; hiddenLayers: ReadonlySet<PlanLayer> }
 
-/** The drawing at any size. */
-function useDraw(props: Props, room: Room): (zoom: number) => PlanDrawing | null {
-  const { roof, spec, mode = 'read', units = 'mm', selected = null } = props
+/** The drawing as it is laid out now, and at any other size. */
+function useDrawing(props: Props, room: Room, zoom: number) {
+  const { roof, spec, layOut } = props
+  const optionsAt = useOptions(props, room)
+  const options = useMemo(() => optionsAt(zoom), [optionsAt, zoom])
+  const draw = useCallback(
+    (size: number) => planDrawing(roof, spec, optionsAt(size)),
+    [roof, spec, optionsAt],
+  )
+  const drawNow = useCallback(() => draw(zoom), [draw, zoom])
+  const drawBare = useCallback(() => planDrawing(roof, null, options), [roof, options])
+  const laid = useLaidPlan({ draw: drawNow, drawBare, layOut, options })
+  const isPrinting = usePrinting()
+  const forPaper = useMemo(() => (isPrinting ? drawForPaper(draw) : null), [isPrinting, draw])
+  return { draw, drawing: forPaper ?? laid }
+}
+
+function useOptions(props: Props, room: Room): (zoom: number) => PlanDrawingOptions {
+  const { mode = 'read', units = 'mm', selected = null } = props
   const { due = noMarks, problems = noProblems } = props
   const { widthPx, heightPx, hiddenLayers } = room
   return useCallback(
-    (zoom) =>
-      planDrawing(roof, spec, {
-        widthPx: widthPx * zoom,
-        maxHeightPx: heightPx * zoom,
-        mode,
-        units,
-        problems,
-        firstMarks: new Set([...(selected ? [selected] : []), ...due]),
-        hiddenLayers,
-      }),
-    [roof, spec, widthPx, heightPx, mode, units, problems, selected, due, hiddenLayers],
+    (zoom) => ({
+      widthPx: widthPx * zoom,
+      maxHeightPx: heightPx * zoom,
+      mode,
+      units,
+      problems,
+      firstMarks: new Set([...(selected ? [selected] : []), ...due]),
+      hiddenLayers,
+    }),
+    [widthPx, heightPx, mode, units, problems, selected, due, hiddenLayers],
   )
+}
+
+/** Paper is not drawn larger by hand: its words are set as small as all of them need, within reason. */
+function drawForPaper(draw: (zoom: number) => PlanDrawing | null): PlanDrawing | null {
+  const enough = paperSteps.find((step) => isAllWritten(draw(step))) ?? paperSteps.at(-1) ?? 1
+  return draw(enough)
 }
 
 function isAllWritten(drawing: PlanDrawing | null): boolean {
