@@ -90,8 +90,8 @@ const placeJobs = (
 }
 
 /**
- * Ends of ridges that butt nothing. One that would run into the side of a ridge of another joint butts
- * it after all; of two ends that would run into each other, that of the shorter ridge.
+ * Ends of ridges that butt nothing. One that would run into the side of a ridge that passes its joint
+ * butts it after all; of two ends that would run into each other, that of the shorter ridge.
  */
 const placeRidges = (ground: Ground, jobs: EndJob[], creases: Near, standing: Standing): void => {
   const { chains } = ground.joints
@@ -101,7 +101,9 @@ const placeRidges = (ground: Ground, jobs: EndJob[], creases: Near, standing: St
   const cuts = new Map(free.map((job) => [job, ridgeEnd(ground, job, jobs, creases)]))
   const hits = (job: EndJob, other: EndJob) => {
     const cut = cuts.get(job)
-    return job.joint !== other.joint && cut !== undefined && runsInto(job, cut, other.piece)
+    const { headJoint, footJoint } = other.piece
+    const isOwn = job.joint !== null && (headJoint === job.joint || footJoint === job.joint)
+    return !isOwn && cut !== undefined && runsInto(job, cut, other.piece)
   }
   for (const job of free) {
     const isStopped = free.some(
@@ -153,18 +155,23 @@ const placeGroup = (
   let ways: JointWays = new Map<number, JointWay>()
   let best = place(ways)
   let standing = best
-  for (const joint of group) {
-    if (!best.faults.needsOther(joint)) continue
+  const tryWays = (joint: number, isDone: () => boolean) => {
     for (const way of waysToTry(own, joint)) {
+      if (isDone()) return
       trials.left -= best.jobs.length
-      if (trials.left < 0) break
+      if (trials.left < 0) return
       const tried = new Map(ways).set(joint, way)
       standing = place(tried)
       if (standing.faults.total >= best.faults.total) continue
       best = standing
       ways = tried
-      if (!best.faults.needsOther(joint)) break
     }
+  }
+  for (const joint of group) tryWays(joint, () => !best.faults.needsOther(joint))
+  // what leaves a head open can be the joint beside it
+  const isClosed = () => best.faults.openPieces.length === 0
+  for (let round = 0; round < 2 && group.length > 1; round++) {
+    for (const joint of group) tryWays(joint, isClosed)
   }
   const { jobs, faults } = standing === best ? best : place(ways)
   return { jobs, openPieces: faults.openPieces }
