@@ -164,11 +164,11 @@ function judgeNodes(say: Say, layout: SlopeLayout): void {
     const { along, inward } = border.a
     if (inward < BESIDE_MM || border.isVerge || before.isVerge) return
     const beside = [inward - BESIDE_MM, inward + BESIDE_MM].filter((mm) =>
-      isLong(layout, along, mm),
+      squareStrips(layout.borders, along).some((s) => s.low < mm && mm < s.high),
     )
     const [ending] = beside
     // a square line that runs on past the node needs no rafter there
-    if (ending === undefined || beside.length > 1) return
+    if (ending === undefined || beside.length > 1 || !isLong(layout, along, ending)) return
     const near = layout.rafters.some(
       (r) => Math.abs(r.along - along) < reach && r.low < ending && ending < r.high + reach,
     )
