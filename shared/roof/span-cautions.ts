@@ -20,15 +20,13 @@ const rowUnderMm = (ground: Ground, slope: Slope, rafter: Member, purlin: Member
 }
 
 /** The longest part of a rafter between plate or foot, rows of underpurlins, and head, mm along it. */
-export const longestSpanMm = (ground: Ground, rafter: Member, members: Member[]): number => {
+export const longestSpanMm = (ground: Ground, rafter: Member, purlins: Member[]): number => {
   const slope = at(ground.plates.slopes, rafter.planes[0] ?? 0)
   const cos = Math.cos(radians(slope.pitchDeg))
   const foot = insideMm(slope, rafter.axis.from) / cos
   const head = insideMm(slope, rafter.axis.to) / cos
-  const rows = members.flatMap((m) =>
-    m.role === 'underpurlin' && m.planes[0] === slope.index
-      ? (rowUnderMm(ground, slope, rafter, m) ?? [])
-      : [],
+  const rows = purlins.flatMap((purlin) =>
+    purlin.planes[0] === slope.index ? (rowUnderMm(ground, slope, rafter, purlin) ?? []) : [],
   )
   const held = [foot, ...rows.filter((mm) => mm > foot && mm < head), head].sort((a, b) => a - b)
   return Math.max(...held.map((mm, k) => mm - (held[k - 1] ?? mm)))
@@ -37,8 +35,9 @@ export const longestSpanMm = (ground: Ground, rafter: Member, members: Member[])
 /** Rafters that span further than the firm's setting, between underpurlins where they are set out. */
 export const spanLong = (ground: Ground, members: Member[]): Caution[] => {
   const mostMm = ground.settings.maxRafterSpanMm
+  const rows = members.filter((m) => m.role === 'underpurlin')
   const span = new Map(
-    members.filter(isRafter).map((m) => [m.mark, longestSpanMm(ground, m, members)]),
+    members.filter(isRafter).map((m) => [m.mark, longestSpanMm(ground, m, rows)]),
   )
   const spanOf = (m: Member) => span.get(m.mark) ?? 0
   const purlins = ground.roof.sections.underpurlin !== undefined

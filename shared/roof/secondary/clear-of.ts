@@ -1,5 +1,7 @@
 import { timberPoint } from '../bevel.ts'
 import type { Timber } from '../bevel.ts'
+import { boxesMeet, polygonBox } from '../convex.ts'
+import type { Box } from '../convex.ts'
 import type { FrameDraft } from '../members.ts'
 import type { Point3 } from '../roof-types.ts'
 import { cross3, dot3, unit2 } from '../vector.ts'
@@ -18,18 +20,27 @@ const touchMm = 1e-3
 /** More obstacles than this on one length are no house's. */
 const mostStops = 6
 
-/** The corners of a standing timber as a straight bar, its ends at the furthest points of its arrises. */
-const barCorners = (stands: FrameDraft): Point3[] => {
+/** A standing timber as a straight bar, its ends at the furthest points of its arrises. */
+export type Obstacle = { stands: FrameDraft; corners: Point3[]; axes: Point3[]; box: Box }
+
+/** The timbers of the roof's lines, as what others must keep clear of. */
+export const lineObstacles = (drafts: readonly FrameDraft[]): Obstacle[] =>
+  drafts.filter((draft) => draft.piece.line !== null).map(obstacleOf)
+
+const obstacleOf = (stands: FrameDraft): Obstacle => {
   const { timber } = stands
   const sides = [timber.halfMm, -timber.halfMm]
   const ends = sides.map((left) => timberEnds(stands, left))
   const from = Math.min(...ends.map(([mm]) => mm))
   const to = Math.max(...ends.map(([, mm]) => mm))
-  return [from, to].flatMap((along) =>
+  const corners = [from, to].flatMap((along) =>
     sides.flatMap((left) =>
       [0, timber.depthMm / timber.cos].map((down) => timberPoint(timber, along, left, down)),
     ),
   )
+  const level = unit2(timber.direction)
+  const axes = [{ x: 0, y: 0, z: 1 }, timber.left, timber.up, { ...level, z: 0 }]
+  return { stands, corners, axes, box: polygonBox(corners) }
 }
 
 const isApart = (axis: Point3, a: Point3[], b: Point3[]): boolean => {
@@ -43,23 +54,18 @@ const isApart = (axis: Point3, a: Point3[], b: Point3[]): boolean => {
 export const runsInto = (
   timber: Timber,
   faces: readonly EndFace<{ plane: Plane }>[],
-  stands: FrameDraft,
+  { stands, corners, axes, box }: Obstacle,
 ): boolean => {
   const own = faces.flatMap((face) => face.corners)
-  const other = barCorners(stands)
-  const { direction, left, up } = stands.timber
-  const level = unit2(direction)
-  const axes = [
-    { x: 0, y: 0, z: 1 },
-    left,
-    up,
-    { ...level, z: 0 },
+  if (!boxesMeet(polygonBox(own), box)) return false
+  const all = [
+    ...axes,
     timber.left,
     timber.up,
     ...faces.map((face) => face.cut.plane.normal),
-    cross3(timber.direction, direction),
+    cross3(timber.direction, stands.timber.direction),
   ]
-  return !axes.some((axis) => dot3(axis, axis) > 1e-6 && isApart(axis, own, other))
+  return !all.some((axis) => dot3(axis, axis) > 1e-6 && isApart(axis, own, corners))
 }
 
 /** Top centre length between the nearest corners of both ends. */
@@ -80,20 +86,24 @@ export const clearOf = (
   timber: Timber,
   from: Stop[],
   to: Stop[],
-  obstacles: readonly FrameDraft[],
+  obstacles: readonly Obstacle[],
   leastMm: number,
   stopsLeft = mostStops,
 ): Trimmed[] => {
   const whole = trim(timber, from, to)
   if (whole.from.length === 0 || whole.to.length === 0 || clearMm(whole) < leastMm) return []
-  const hit = obstacles.find((stands) => runsInto(timber, [...whole.from, ...whole.to], stands))
+  const hit = obstacles.find((one) => runsInto(timber, [...whole.from, ...whole.to], one))
   if (hit === undefined) return [whole]
   if (stopsLeft === 0) return []
   const next = (f: Stop[], t: Stop[]) => clearOf(timber, f, t, obstacles, leastMm, stopsLeft - 1)
   const longest = (parts: Trimmed[][]): Trimmed[] =>
     parts.reduce((a, b) => (lengthOf(b) > lengthOf(a) ? b : a), [])
-  const short = longest(standingStops(hit, timber, true).map((stop) => next(from, [...to, stop])))
-  const rest = longest(standingStops(hit, timber, false).map((stop) => next([...from, stop], to)))
+  const short = longest(
+    standingStops(hit.stands, timber, true).map((stop) => next(from, [...to, stop])),
+  )
+  const rest = longest(
+    standingStops(hit.stands, timber, false).map((stop) => next([...from, stop], to)),
+  )
   return [...short, ...rest]
 }
 

@@ -3,8 +3,8 @@ import type { DraftMember } from '../members.ts'
 import type { Caution, CautionAnswer } from '../roof-types.ts'
 import { at } from '../slopes.ts'
 import type { BesideGround } from './beside-ground.ts'
-import { commonPairs, tieHeight } from './collar-ties.ts'
-import type { PairRow, TieHeight } from './collar-ties.ts'
+import { commonPairs, tieHeight } from './common-pairs.ts'
+import type { PairRow, TieHeight } from './common-pairs.ts'
 
 const height = (value: number): CautionAnswer[] =>
   value > 0 ? [{ path: 'collarTieHeightMm', value, unit: 'mm' }] : []

@@ -8,8 +8,8 @@ import { along3 } from '../vector.ts'
 import { besideMember, lyingTimber, turnedTimber } from './beside-member.ts'
 import type { EndCut } from './beside-member.ts'
 import type { BesideGround } from './beside-ground.ts'
-import { clearOf } from './clear-of.ts'
-import type { Trimmed } from './clear-of.ts'
+import { clearOf, lineObstacles } from './clear-of.ts'
+import type { Obstacle, Trimmed } from './clear-of.ts'
 import { faceAreaMm2 } from './end-faces.ts'
 import type { EndFace } from './end-faces.ts'
 import { levelRuns, sharedRuns } from './level-runs.ts'
@@ -71,8 +71,8 @@ const rowLengths = (
   slope: Slope,
   timber: Timber,
   runs: LevelRun[],
+  obstacles: readonly Obstacle[],
 ): Trimmed[] => {
-  const obstacles = ground.drafts.filter((draft) => draft.piece.line !== null)
   const stops = (borders: number[], upper: boolean): Stop[] =>
     borders
       .map((border) => borderStop(ground, slope, timber, border, upper))
@@ -150,13 +150,14 @@ const purlinOf = (
 export const underpurlins = (ground: BesideGround, firstId: number): DraftMember[] => {
   const section = ground.roof.sections.underpurlin
   if (section === undefined) return []
+  const obstacles = lineObstacles(ground.drafts)
   const made: DraftMember[] = []
   for (const slope of ground.plates.slopes) {
     const rows = purlinRowsMm(longestRafterMm(ground, slope), ground.settings.maxRafterSpanMm)
     for (const rowMm of rows) {
       const timber = layRow(ground, slope, section, rowMm)
       const runs = rowRuns(ground, slope, section, rowMm)
-      for (const trimmed of rowLengths(ground, slope, timber, runs)) {
+      for (const trimmed of rowLengths(ground, slope, timber, runs, obstacles)) {
         made.push(purlinOf(ground, slope, timber, trimmed, firstId + made.length))
       }
     }
