@@ -110,9 +110,12 @@ export const jointFaults = (
   before: readonly Obstacle[],
   hasFootJob: (piece: Piece) => boolean,
 ): JointFaults => {
-  const heads = new Map<number, Body>()
+  const made = new Map<number, Body[]>()
   for (const { piece, end } of jobs) {
-    if (end === 'head') heads.set(piece.id, bodyOf(halfObstacle(piece, end)))
+    const bodies = made.get(piece.id) ?? []
+    made.set(piece.id, bodies)
+    bodies.push(bodyOf(halfObstacle(piece, end)))
+    if (end === 'head' && !hasFootJob(piece)) bodies.push(bodyOf(halfObstacle(piece, 'foot')))
   }
   const standing: Body[] = before.map(bodyOf)
   const ofJoint = new Map<number, number>()
@@ -120,9 +123,9 @@ export const jointFaults = (
   let total = 0
   for (const job of jobs) {
     const { piece, end } = job
-    const own = (end === 'head' ? heads.get(piece.id) : null) ?? bodyOf(halfObstacle(piece, end))
+    const own = bodyOf(halfObstacle(piece, end))
     const cuts = end === 'head' ? piece.headCuts : piece.footCuts
-    const mates = cuts.flatMap(({ mitreWith }) => heads.get(mitreWith ?? -1) ?? [])
+    const mates = cuts.flatMap(({ mitreWith }) => made.get(mitreWith ?? -1) ?? [])
     const others = [...new Set([...standing, ...mates])].filter((body) => body.piece !== piece.id)
     // a foot that others bear on bears on nothing itself
     const bearing = job.phase === phases.brokenFoot ? 0 : endFaults(job, own, others)
@@ -130,8 +133,9 @@ export const jointFaults = (
     total += faults
     if (faults >= open) openPieces.push(piece.id)
     if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)
-    standing.push(own)
-    if (end === 'head' && !hasFootJob(piece)) standing.push(bodyOf(halfObstacle(piece, 'foot')))
+    // once one end stands, what bears on the timber bears on all of it
+    standing.push(...(made.get(piece.id) ?? []))
+    made.delete(piece.id)
   }
   return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open, openPieces }
 }
