@@ -1,9 +1,10 @@
+import { memo, useCallback, useEffect, useRef } from 'react'
 import { Plus, Repeat, Trash2 } from 'lucide-react'
 import { outlineTurnedRound } from '../../../shared/outline/outline-geometry.ts'
 import { mostCorners } from '../../../shared/revisions/form-parts.ts'
 import { emptyCorner, type RoofForm } from '../../../shared/revisions/roof-form.ts'
 import { Button } from '../../ui/button.tsx'
-import { MeasureField } from './form-fields.tsx'
+import { MeasureBox } from './form-fields.tsx'
 import { fieldId, useRoofForm } from './roof-form-context.ts'
 
 const leastCorners = 3
@@ -20,9 +21,20 @@ function turnedRound({ corners }: RoofForm): RoofForm['corners'] {
 
 /** The corners of any outline, counter-clockwise. */
 export function CornerFields() {
-  const { form, problemAt, setForm } = useRoofForm()
+  const { form, problemAt, setText, setForm } = useRoofForm()
   const { corners } = form
   const problem = problemAt('corners')
+  const now = useRef(form)
+  useEffect(() => {
+    now.current = form
+  }, [form])
+  const takeOut = useCallback(
+    (i: number) => {
+      const left = now.current.corners.toSpliced(i, 1)
+      setForm({ ...now.current, corners: left }, `corners.${i}.out`)
+    },
+    [setForm],
+  )
   return (
     <div id={fieldId('corners')} className="space-y-2">
       <p className="text-sm text-ink-soft">
@@ -34,25 +46,18 @@ export function CornerFields() {
         </p>
       ) : null}
       <ol className="space-y-2">
-        {corners.map((_, i) => (
-          <li key={i} id={fieldId(`corners.${i}`)}>
-            <div className="grid grid-cols-[1fr_1fr_auto] items-start gap-2">
-              <MeasureField path={`corners.${i}.x`} label={`Corner ${i + 1}, x`} />
-              <MeasureField path={`corners.${i}.y`} label={`Corner ${i + 1}, y`} />
-              <button
-                type="button"
-                aria-label={`Take out corner ${i + 1}`}
-                disabled={corners.length <= leastCorners}
-                onClick={() =>
-                  setForm({ ...form, corners: corners.toSpliced(i, 1) }, `corners.${i}.out`)
-                }
-                className="mt-7 flex h-11 w-11 items-center justify-center rounded-md border border-transparent text-stop disabled:text-ink-soft disabled:opacity-50"
-              >
-                <Trash2 size={20} aria-hidden />
-              </button>
-            </div>
-            <CornerProblem path={`corners.${i}`} />
-          </li>
+        {corners.map(({ x, y }, i) => (
+          <CornerRow
+            key={i}
+            index={i}
+            x={x}
+            y={y}
+            problem={problemAt(`corners.${i}`)}
+            problemX={problemAt(`corners.${i}.x`)}
+            problemY={problemAt(`corners.${i}.y`)}
+            setText={setText}
+            onTakeOut={corners.length > leastCorners ? takeOut : null}
+          />
         ))}
       </ol>
       <div className="flex flex-wrap gap-2">
@@ -74,11 +79,54 @@ export function CornerFields() {
   )
 }
 
-function CornerProblem({ path }: { path: string }) {
-  const problem = useRoofForm().problemAt(path)
-  return problem ? (
-    <p role="alert" className="mt-1 text-sm font-semibold text-stop">
-      {problem}
-    </p>
-  ) : null
+type RowProps = {
+  index: number
+  x: string
+  y: string
+  problem: string | undefined
+  problemX: string | undefined
+  problemY: string | undefined
+  setText: (path: string, text: string) => void
+  onTakeOut: ((index: number) => void) | null
 }
+
+/** Drawn again only when it changes itself: a plan has up to 64 of them. */
+const CornerRow = memo(function CornerRow(props: RowProps) {
+  const { index, x, y, problem, problemX, problemY, setText, onTakeOut } = props
+  const path = `corners.${index}`
+  const name = `Corner ${index + 1}`
+  return (
+    <li id={fieldId(path)}>
+      <div className="grid grid-cols-[1fr_1fr_auto] items-start gap-2">
+        <MeasureBox
+          path={`${path}.x`}
+          label={`${name}, x`}
+          text={x}
+          problem={problemX}
+          setText={setText}
+        />
+        <MeasureBox
+          path={`${path}.y`}
+          label={`${name}, y`}
+          text={y}
+          problem={problemY}
+          setText={setText}
+        />
+        <button
+          type="button"
+          aria-label={`Take out corner ${index + 1}`}
+          disabled={onTakeOut === null}
+          onClick={() => onTakeOut?.(index)}
+          className="mt-7 flex h-11 w-11 items-center justify-center rounded-md border border-transparent text-stop disabled:text-ink-soft disabled:opacity-50"
+        >
+          <Trash2 size={20} aria-hidden />
+        </button>
+      </div>
+      {problem ? (
+        <p role="alert" className="mt-1 text-sm font-semibold text-stop">
+          {problem}
+        </p>
+      ) : null}
+    </li>
+  )
+})

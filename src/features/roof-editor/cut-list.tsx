@@ -29,10 +29,7 @@ function FigureText({ figure }: { figure: MarkingFigure }) {
 
 /** Every line of the cut list; a table at the desk and on paper, cards on a phone. */
 export function CutList({ spec, options, onPick }: Props) {
-  const cards = useMemo(
-    () => spec.cutLines.map((line) => markingCardOf(spec, line.mark, options)),
-    [spec, options],
-  )
+  const cardOf = useMemo(() => cardsAsNeeded(spec, options), [spec, options])
   return (
     <>
       <p className="text-sm text-ink-soft">{roundingWords(spec, options)}</p>
@@ -40,19 +37,34 @@ export function CutList({ spec, options, onPick }: Props) {
         Bevels from the edge: down the side / across the top.
       </p>
       <ul className="space-y-2 sm:hidden print:hidden">
-        {cards.map((card) => (
-          <CutLineCard key={card.mark} card={card} onPick={onPick} />
+        {spec.cutLines.map(({ mark }) => (
+          <CutLineCard key={mark} mark={mark} cardOf={cardOf} onPick={onPick} />
         ))}
       </ul>
-      <CutTable cards={cards} onPick={onPick} />
+      <CutTable spec={spec} cardOf={cardOf} onPick={onPick} />
     </>
   )
+}
+
+type CardOf = (mark: string) => MarkingCard
+type RowProps = { mark: string; cardOf: CardOf; onPick: Props['onPick'] }
+
+/** Each card is made when its line is drawn, so that a key typed meanwhile waits for one line at most. */
+function cardsAsNeeded(spec: FrameSpec, options: MarkingOptions): CardOf {
+  const made = new Map<string, MarkingCard>()
+  return (mark) => {
+    const card = made.get(mark) ?? markingCardOf(spec, mark, options)
+    made.set(mark, card)
+    return card
+  }
 }
 
 const headings = ['Mark', 'Piece', 'Section', 'Cut length', 'No.', 'L', 'R', 'Set-out', 'Bevels']
 const numberHeadings = new Set(['Cut length', 'No.', 'L', 'R', 'Set-out'])
 
-function CutTable({ cards, onPick }: { cards: MarkingCard[]; onPick: Props['onPick'] }) {
+type TableProps = Pick<Props, 'spec' | 'onPick'> & { cardOf: CardOf }
+
+function CutTable({ spec, cardOf, onPick }: TableProps) {
   return (
     <div className="hidden overflow-x-auto sm:block print:block print:overflow-visible">
       <table className="w-full border-collapse text-left">
@@ -72,8 +84,8 @@ function CutTable({ cards, onPick }: { cards: MarkingCard[]; onPick: Props['onPi
           </tr>
         </thead>
         <tbody>
-          {cards.map((card) => (
-            <CutRow key={card.mark} card={card} onPick={onPick} />
+          {spec.cutLines.map(({ mark }) => (
+            <CutRow key={mark} mark={mark} cardOf={cardOf} onPick={onPick} />
           ))}
         </tbody>
       </table>
@@ -81,7 +93,8 @@ function CutTable({ cards, onPick }: { cards: MarkingCard[]; onPick: Props['onPi
   )
 }
 
-function CutRow({ card, onPick }: { card: MarkingCard; onPick: Props['onPick'] }) {
+function CutRow({ mark, cardOf, onPick }: RowProps) {
+  const card = cardOf(mark)
   const number = 'px-2 py-1 text-right tabular-nums'
   return (
     <tr className="border-b border-rule align-top break-inside-avoid">
@@ -126,7 +139,8 @@ function MarkButton({ card, onPick }: { card: MarkingCard; onPick: Props['onPick
   )
 }
 
-function CutLineCard({ card, onPick }: { card: MarkingCard; onPick: Props['onPick'] }) {
+function CutLineCard({ mark, cardOf, onPick }: RowProps) {
+  const card = cardOf(mark)
   return (
     <li className="rounded-md border border-rule bg-sheet p-3">
       <div className="flex items-start justify-between gap-3">

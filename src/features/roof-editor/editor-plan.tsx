@@ -2,6 +2,7 @@ import { memo, useCallback, useMemo, useState } from 'react'
 import { platesOfForm } from '../../../shared/revisions/form-outline.ts'
 import type { FormReading } from '../../../shared/revisions/roof-of-form.ts'
 import { isWingShape } from '../../../shared/revisions/wing-form.ts'
+import type { Roof } from '../../../shared/roof/roof-types.ts'
 import type { LengthUnits } from '../../../shared/units/format-length.ts'
 import { RoofPlan } from '../../drawings/roof-plan.tsx'
 import { Field } from '../../ui/field.tsx'
@@ -15,7 +16,7 @@ import { OutlineDrawing } from './outline-drawing.tsx'
 import { outlineFaults } from './outline-faults.ts'
 import type { OutlinePart } from './outline-handles.tsx'
 import { useRoofForm } from './roof-form-context.ts'
-import type { Framed } from './use-framed-roof.ts'
+import type { RoofReading } from './use-framed-roof.ts'
 import { useOutlineActions } from './use-outline-actions.ts'
 
 const StillPlan = memo(RoofPlan)
@@ -29,8 +30,9 @@ type View = (typeof views)[number]['value']
 const grids = [100, 10, 1] as const
 
 type Props = {
-  reading: FormReading
-  framed: Framed | null
+  /** As it is typed, and as it shows while typing goes on. */
+  now: RoofReading
+  steady: RoofReading
   units: LengthUnits
   selected: string | null
   onPick: (mark: string) => void
@@ -39,21 +41,19 @@ type Props = {
 const maxHeightPx = 560
 
 /** The plan of what is typed: its timbers to pick, or its outline to change. */
-export function EditorPlan({ reading, framed, units, selected, onPick }: Props) {
+export function EditorPlan({ now, steady, units, selected, onPick }: Props) {
   const { form } = useRoofForm()
   const [chosen, setChosen] = useState<View | null>(null)
   const [gridMm, setGridMm] = useState<number>(grids[0])
-  const spec = reading.roof ? (framed?.spec ?? null) : null
-  const current = reading.roof ?? reading.drawn
-  const roof = spec && framed ? framed.roof : current
-  const isWhole = current.outline.length > 1 && current.outline.every((p) => isKnown(p))
-  const isWrong = reading.roof === null
+  const outlined = outlineOf(now.reading)
   // What is wrong with an outline is put right on the outline, so that is what shows.
-  const view = isWhole ? (chosen ?? (isWrong ? 'outline' : 'timbers')) : 'timbers'
+  const wanted = chosen ?? (steady.reading.roof ? 'timbers' : 'outline')
+  const view = outlined.isWhole ? wanted : 'timbers'
+  const { reading, framed } = view === 'outline' ? now : steady
   const faults = useFaults(reading)
   return (
     <div className="space-y-2">
-      {isWhole ? (
+      {outlined.isWhole ? (
         <div className="flex flex-wrap items-end justify-between gap-2">
           <Segmented
             label="What the plan shows"
@@ -64,33 +64,49 @@ export function EditorPlan({ reading, framed, units, selected, onPick }: Props) 
           {view === 'outline' ? <GridField gridMm={gridMm} onChange={setGridMm} /> : null}
         </div>
       ) : null}
-      {!isWhole && isWingShape(form.shape) ? (
+      {!outlined.isWhole && isWingShape(form.shape) ? (
         <p className="p-4 text-ink-soft">The plan is drawn here once its measures are typed.</p>
       ) : view === 'outline' ? (
         <OutlineEditor
           key={form.shape}
-          roof={current}
+          roof={outlined.roof}
           spec={framed && framed.roof === reading.roof ? framed.spec : null}
           {...{ faults, units, gridMm }}
         />
       ) : (
-        <StillPlan
-          roof={roof}
-          spec={spec}
-          mode="edit"
-          units={units}
-          problems={reading.roof ? undefined : reading.drawnProblems}
-          selected={selected}
-          label="Plan of the roof as typed"
-          maxHeightPx={maxHeightPx}
-          onPick={onPick}
-        />
+        <TimberPlan {...{ reading, framed, units, selected, onPick }} />
       )}
       <FaultList faults={faults} />
       <StillToType reading={reading} />
       {reading.roof && framed?.message ? <Note kind="stop" title={framed.message} /> : null}
     </div>
   )
+}
+
+type TimberProps = RoofReading & Pick<Props, 'units' | 'selected' | 'onPick'>
+
+function TimberPlan({ reading, framed, units, selected, onPick }: TimberProps) {
+  const spec = reading.roof ? (framed?.spec ?? null) : null
+  return (
+    <StillPlan
+      roof={spec && framed ? framed.roof : (reading.roof ?? reading.drawn)}
+      spec={spec}
+      layOut={spec ? framed?.layOut : undefined}
+      mode="edit"
+      units={units}
+      problems={reading.roof ? undefined : reading.drawnProblems}
+      selected={selected}
+      label="Plan of the roof as typed"
+      maxHeightPx={maxHeightPx}
+      onPick={onPick}
+    />
+  )
+}
+
+/** The outline as typed, and whether all of it can be read. */
+function outlineOf(reading: FormReading): { roof: Roof; isWhole: boolean } {
+  const roof = reading.roof ?? reading.drawn
+  return { roof, isWhole: roof.outline.length > 1 && roof.outline.every((p) => isKnown(p)) }
 }
 
 const isKnown = ({ x, y }: { x: number; y: number }) => Number.isFinite(x + y)

@@ -11,7 +11,7 @@ type MeasureProps = Props & {
   /** Stands elsewhere too: links lead to the other one. */
   isCopy?: boolean
 }
-type BoxProps = {
+export type BoxProps = {
   text: string
   problem: string | undefined
   setText: (path: string, text: string) => void
@@ -32,8 +32,11 @@ export function MeasureField(props: MeasureProps) {
   )
 }
 
-/** Drawn again only when its own text or problem changes, so that a key in one field costs one field. */
-const MeasureBox = memo(function MeasureBox(props: MeasureProps & BoxProps) {
+/**
+ * Drawn again only when its own text or problem changes, so that a key in one field costs one field. In long
+ * lists it stands by itself, with what it shows handed to it.
+ */
+export const MeasureBox = memo(function MeasureBox(props: MeasureProps & BoxProps) {
   const { path, label, hint, className, placeholder, isCopy, text, problem, setText } = props
   return (
     <div id={isCopy ? undefined : fieldId(path)} className={`min-w-0 ${className ?? ''}`}>
@@ -63,7 +66,7 @@ export function ChoiceField(props: ChoiceProps) {
   )
 }
 
-const ChoiceBox = memo(function ChoiceBox(props: ChoiceProps & BoxProps) {
+export const ChoiceBox = memo(function ChoiceBox(props: ChoiceProps & BoxProps) {
   const { path, label, hint, className, options, text, problem, setText } = props
   return (
     <div id={fieldId(path)} className={`min-w-0 ${className ?? ''}`}>

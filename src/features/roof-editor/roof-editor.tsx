@@ -34,7 +34,8 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
   const { settings, brickOffsetMm } = opened
   const firm = useMemo(() => ({ settings, brickOffsetMm }), [settings, brickOffsetMm])
   const settled = useDeferredValue(form)
-  const { reading, framed } = useFramedRoof(settled, firm)
+  const now = useFramedRoof(settled, firm)
+  const { reading, framed } = now
   useStartTyping(form.lengthMm === '')
   const issue = useIssue(opened, { form, firm, saver })
 
@@ -89,8 +90,7 @@ export function RoofEditor({ opened }: { opened: JobRoof }) {
             className={`lg:sticky lg:top-4 lg:max-h-[calc(100dvh-2rem)] lg:self-start lg:overflow-y-auto ${part === 'fields' ? 'hidden lg:block' : ''}`}
           >
             <RoofResults
-              reading={reading}
-              framed={framed}
+              now={now}
               settings={settings}
               part={part === 'numbers' ? 'numbers' : 'plan'}
             />

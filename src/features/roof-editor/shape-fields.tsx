@@ -1,3 +1,4 @@
+import { memo } from 'react'
 import { MousePointerClick } from 'lucide-react'
 import { asCorners, withTypedCorners } from '../../../shared/revisions/form-outline.ts'
 import { type RoofShape, roofShapes } from '../../../shared/revisions/roof-form.ts'
@@ -32,7 +33,7 @@ const lengthOfWords = [
 ] as const
 
 /** Which plan it is, and how big. */
-export function ShapeFields() {
+export const ShapeFields = memo(function ShapeFields() {
   const { form, problemAt } = useRoofForm()
   const problem = problemAt('shape')
   return (
@@ -46,7 +47,7 @@ export function ShapeFields() {
       {form.shape === 'corners' ? <OutlineFields /> : <ShapeMeasures />}
     </FieldGroup>
   )
-}
+})
 
 function ShapeChoice() {
   const { form, setText, setForm } = useRoofForm()

@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { memo, useState } from 'react'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { localDayOf } from '../../../shared/calendar/local-time.ts'
 import { besideKeys, type SectionKey, sectionKeys } from '../../../shared/revisions/roof-form.ts'
@@ -47,7 +47,7 @@ const valleyTops = [
 type SizesProps = { sizesTyped: SizesTyped }
 
 /** Every size is typed by a person; none is offered. Who typed it stands beside it. */
-export function SectionFields({ sizesTyped }: SizesProps) {
+export const SectionFields = memo(function SectionFields({ sizesTyped }: SizesProps) {
   return (
     <FieldGroup title="Timber sizes" note={sizesRule}>
       {sectionKeys.map((key) => (
@@ -55,10 +55,10 @@ export function SectionFields({ sizesTyped }: SizesProps) {
       ))}
     </FieldGroup>
   )
-}
+})
 
 /** Timbers that are set out only where a size is typed for them. */
-export function BesideFields({ sizesTyped }: SizesProps) {
+export const BesideFields = memo(function BesideFields({ sizesTyped }: SizesProps) {
   const { form } = useRoofForm()
   const [wasUsed] = useState(() => besideKeys.some((key) => !isEmptySection(form.sections[key])))
   return (
@@ -79,7 +79,7 @@ export function BesideFields({ sizesTyped }: SizesProps) {
       </Fold>
     </section>
   )
-}
+})
 
 function SectionPair({ name, sizesTyped }: { name: SectionKey } & SizesProps) {
   const { timeZone } = useSession().firm
@@ -102,7 +102,7 @@ function SectionPair({ name, sizesTyped }: { name: SectionKey } & SizesProps) {
   )
 }
 
-export function LayoutFields() {
+export const LayoutFields = memo(function LayoutFields() {
   return (
     <FieldGroup title="Plates and spacing">
       <MeasureField path="plateWidthMm" label="Plate width, mm" />
@@ -119,9 +119,9 @@ export function LayoutFields() {
       />
     </FieldGroup>
   )
-}
+})
 
-export function CutFields() {
+export const CutFields = memo(function CutFields() {
   return (
     <FieldGroup title="Tails, hips and seats">
       <ChoiceField path="tail" label="Tail cut" options={tails} />
@@ -140,4 +140,4 @@ export function CutFields() {
       />
     </FieldGroup>
   )
-}
+})
