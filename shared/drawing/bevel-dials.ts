@@ -47,7 +47,18 @@ export function bevelDialsOf(member: Member): BevelDialData[] {
 export function cutWords(member: Member, cut: Cut): string {
   if (Math.abs(cut.face.fromSquareDeg) <= sameDeg)
     return cut.longSide === 'none' ? 'square cut' : 'mitre'
+  if (member.role === 'collar-tie') return 'splay cut'
   return isPlumb(member, cut) ? 'plumb cut' : 'cut'
+}
+
+/**
+ * The bevel down the side. Both ends of a collar tie follow the rafters' slope and run out below, so one
+ * setting, turned over, marks both.
+ */
+export function faceAngle(member: Pick<Member, 'role'>, cut: Cut): Angle {
+  const { fromEdgeDeg } = cut.face
+  if (member.role !== 'collar-tie' || fromEdgeDeg <= 90) return cut.face
+  return { fromEdgeDeg: 180 - fromEdgeDeg, fromSquareDeg: fromEdgeDeg - 90 }
 }
 
 function isPlumb(member: Member, cut: Cut): boolean {
@@ -60,11 +71,12 @@ function sideDial(member: Member, cut: Cut): LooseDial {
     'plumb cut': 'Plumb bevel',
     'square cut': 'Square',
     mitre: 'Square',
+    'splay cut': 'Splay, longer below',
   }
   return {
     title: titles[words] ?? 'Bevel down the side',
     where: 'side',
-    angle: cut.face,
+    angle: faceAngle(member, cut),
     uses: [cut.end],
     places: [cut.end],
     longSide: 'none',

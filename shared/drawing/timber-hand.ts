@@ -14,11 +14,17 @@ const sameMm = 0.05
  */
 export function pieceHand(member: Handed): PieceHand | null {
   if (member.hand) return { side: member.hand, end: 'head' }
-  const feet = member.cuts.filter((cut) => cut.end !== 'head')
+  const side = footSide(member)
+  return side ? { side, end: 'foot' } : null
+}
+
+/** The side on which a foot or tail reaches further, or null where it is alike on both. */
+export function footSide({ cuts }: Pick<Member, 'cuts'>): 'left' | 'right' | null {
+  const feet = cuts.filter((cut) => cut.end !== 'head')
   const leftMm = footReadingMm(feet, 'left')
   const rightMm = footReadingMm(feet, 'right')
   if (feet.length === 0 || Math.abs(leftMm - rightMm) <= sameMm) return null
-  return { side: leftMm < rightMm ? 'left' : 'right', end: 'foot' }
+  return leftMm < rightMm ? 'left' : 'right'
 }
 
 /** What the tape reads on one arris at the foot: the cut that is met first. */

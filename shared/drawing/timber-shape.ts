@@ -170,6 +170,8 @@ export type EdgeLength = {
 }
 
 const sameLengthMm = 0.05
+/** A point of two cheeks that stands out less than this is none to measure to. */
+const pointMm = 0.5
 
 export function edgeLengths(member: DrawnMember): EdgeLength[] {
   const half = member.section.thicknessMm / 2
@@ -188,12 +190,14 @@ export function edgeLengths(member: DrawnMember): EdgeLength[] {
     Math.abs(left.fromMm - right.fromMm) < sameLengthMm &&
     Math.abs(left.toMm - right.toMm) < sameLengthMm
   const edges: EdgeLength[] = isSquare ? [{ ...left, place: 'along the top' }] : [left, right]
-  const hasPoint = heads.length > 2 || feet.length > 2
-  if (!hasPoint) return edges
   const middle: EdgeLength = {
     place: 'middle',
     fromMm: timberEndMm(member, 'foot', 0, 0),
     toMm: timberEndMm(member, 'head', 0, 0),
   }
-  return [...edges, middle]
+  const hasPoint = heads.length > 2 || feet.length > 2
+  const isOwn = edges.every((edge) =>
+    [middle.fromMm - edge.fromMm, middle.toMm - edge.toMm].some((mm) => Math.abs(mm) > pointMm),
+  )
+  return hasPoint && isOwn ? [...edges, middle] : edges
 }

@@ -27,7 +27,7 @@ import {
   planingWords,
 } from './marking-parts.ts'
 import { placeFigures } from './place-figures.ts'
-import { handCounts, quantityWords, roleWords, sectionWords } from './role-words.ts'
+import { handCounts, isBesideFrame, quantityWords, roleWords, sectionWords } from './role-words.ts'
 import { wayWords } from './way-words.ts'
 
 /** Wherever numbers leave for the saw. */
@@ -110,7 +110,7 @@ export function markingCardOf(
     ends: markingEnds(spec, member, alike, options),
     birdsmouth: birdsmouthOf(member, options),
     tailLength:
-      member.tailLengthMm > 0
+      member.tailLengthMm > 0 && member.role !== 'barge'
         ? figureOf('Tail length', member.tailLengthMm, options, 'heel line to tail, along the edge')
         : null,
     backing: backingOf(member, options),
@@ -131,17 +131,9 @@ function membersOf(spec: FrameSpec, line: CutLine): Member[] {
     .map((member) => posedMember(spec, member))
 }
 
-/** Timbers beside the frame run between points of their own, not to another's centre. */
-const besideRoles: ReadonlySet<MemberRole> = new Set([
-  'underpurlin',
-  'collar-tie',
-  'fascia',
-  'barge',
-])
-
 function setOutNote(member: Member): string {
   if (member.role === 'ridge') return 'node to node'
-  if (besideRoles.has(member.role)) return 'set-out point to set-out point'
+  if (isBesideFrame(member)) return 'set-out point to set-out point'
   return member.birdsmouth
     ? `${tapeBase(member)} to centre, nothing off`
     : 'centre to centre, nothing off'
@@ -200,9 +192,9 @@ export function markingCardLines(card: MarkingCard): string[] {
         ]
       : []),
     ...tailLines(card),
+    ...(card.dish ? [card.dish] : []),
     ...card.backing.map((one) => `${one.label}: ${bevelWords(one)}.`),
     ...(card.drop ? [`${figureWords(card.drop, true)}.`] : []),
-    ...(card.dish ? [card.dish] : []),
     card.handWords,
     ...card.planing,
   ]

@@ -1,5 +1,5 @@
 import { groupBy } from '../collections/group-by.ts'
-import { cutWords } from '../drawing/bevel-dials.ts'
+import { cutWords, faceAngle } from '../drawing/bevel-dials.ts'
 import { type MeasuringPoint, measuringPoints } from '../drawing/timber-points.ts'
 import { heelOutAlongMm } from '../drawing/timber-outline.ts'
 import { edgeLengths, endCuts, timberEndMm, timberTop } from '../drawing/timber-shape.ts'
@@ -14,7 +14,7 @@ import {
   type MarkingOptions,
 } from './marking-figures.ts'
 import { cornerLine } from './marking-parts.ts'
-import { piecesWords } from './role-words.ts'
+import { isBesideFrame, piecesWords } from './role-words.ts'
 import { pastSawWords } from './saw-words.ts'
 
 export type MarkingCut = {
@@ -95,7 +95,7 @@ function markingCut(
     kind,
     longSide: cut.longSide,
     bearsOn: bearsOnWords(spec, alike, member, cut, cutCount),
-    face: bevelOf(faceName(kind), 'side', cut.face, options),
+    face: bevelOf(faceName(kind), 'side', faceAngle(member, cut), options),
     edge: across ? bevelOf(topName, 'top', cut.edge, options) : null,
     edgeOtherTop:
       across && cut.edgeOtherTop ? bevelOf(otherName, 'top', cut.edgeOtherTop, options) : null,
@@ -124,6 +124,7 @@ function topNames(member: Member): { topName: string; otherName: string } {
 }
 
 function faceName(kind: string): string {
+  if (kind === 'splay cut') return 'Down the side, longer below'
   return kind === 'plumb cut' ? 'Plumb bevel, down the side' : 'Down the side'
 }
 
@@ -148,7 +149,7 @@ function bearsOnWords(
   if (met.length === 0) return ''
   const whose = onlyDrawn && alike.length > 1 ? `${member.mark} ` : ''
   // A head bears on what it meets; a foot or tail is cut against the side of what runs past it.
-  const verb = cut.end === 'head' ? 'bears on' : 'against'
+  const verb = cut.end === 'head' && !isBesideFrame(member) ? 'bears on' : 'against'
   return capital(`${whose}${verb} ${piecesWords(met)}`)
 }
 
@@ -244,7 +245,8 @@ export function bevelsWords(cut: MarkingCut): string {
   const across = cut.edge
     ? `; across the top ${bevelWords(cut.edge)}; blade tilt ${cut.bladeTiltText}`
     : '; square across the top'
-  return `${cut.kind}, down the side ${bevelWords(cut.face)}${across}`
+  const below = cut.kind === 'splay cut' ? ', longer below' : ''
+  return `${cut.kind}, down the side ${bevelWords(cut.face)}${below}${across}`
 }
 
 export type CutsSawnAlike = { name: string; first: MarkingCut; cuts: MarkingCut[] }

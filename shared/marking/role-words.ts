@@ -18,6 +18,11 @@ export const roleWords: Record<MemberRole, string> = {
   barge: 'Barge',
 }
 
+/** Timbers that trim or stiffen the frame: they run between points of their own and carry no head. */
+export function isBesideFrame({ role }: Pick<Member, 'role'>): boolean {
+  return role === 'underpurlin' || role === 'collar-tie' || role === 'fascia' || role === 'barge'
+}
+
 /** `140 × 45`: depth by thickness, as merchants say it. */
 export function sectionWords(section: Section): string {
   return `${section.depthMm} × ${section.thicknessMm}`

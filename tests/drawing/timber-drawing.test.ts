@@ -149,7 +149,10 @@ describe.each(cases)('$title', ({ members }) => {
           (dial) => dial.where === where && Math.abs(dial.angle.fromEdgeDeg - fromEdgeDeg) < 0.06,
         ).length
       for (const cut of member.cuts) {
-        expect(isOn('side', cut.face.fromEdgeDeg)).toBe(1)
+        // One setting of the bevel, turned over, marks both ends of a collar tie.
+        const { fromEdgeDeg } = cut.face
+        const isTurned = member.role === 'collar-tie' && fromEdgeDeg > 90
+        expect(isOn('side', isTurned ? 180 - fromEdgeDeg : fromEdgeDeg), member.mark).toBe(1)
         if (cut.longSide !== 'none') expect(isOn('top', cut.edge.fromEdgeDeg)).toBeGreaterThan(0)
       }
       for (const dial of dials)

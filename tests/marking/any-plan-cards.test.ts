@@ -201,6 +201,11 @@ describe('timbers beside the frame', () => {
     // Source: geometry; each end runs out by the depth over the tangent of the pitch.
     expect(under!.valueMm - top!.valueMm).toBeCloseTo((2 * 90) / Math.tan(deg(25)), 1)
     expect(height!.valueMm).toBeCloseTo(tie.axis.from.z - 90, 6)
+    for (const { cuts } of card.ends) {
+      expect(cuts[0]!.kind).toBe('splay cut')
+      expect(cuts[0]!.face.fromEdgeText).toBe('25.0°')
+    }
+    expect(card.handWords).toBe('No left or right, bow up.')
   })
 })
 
@@ -231,6 +236,34 @@ describe('what rounding costs, in words', () => {
       'Marked to the nearest mm and half degree, every joint closes.',
     )
   })
+})
+
+test('a piece with a long point at both ends says both, for they may be on different sides', () => {
+  const foot = {
+    ...creeperLeft.cuts[0]!,
+    end: 'foot' as const,
+    longSide: 'right' as const,
+    longPointFromHeelMm: 2,
+    shortPointFromHeelMm: 52,
+  }
+  const cripple = {
+    ...creeperLeft,
+    mark: 'CC1',
+    role: 'cripple-creeper' as const,
+    birdsmouth: null,
+  }
+  const words = (side: 'left' | 'right') =>
+    markingCardOf(
+      specOf([{ ...cripple, cuts: [creeperLeft.cuts[0]!, { ...foot, longSide: side }] }]),
+      'CC1',
+      options,
+    ).handWords
+  expect(words('right')).toBe(
+    "Head's long point on the left, foot's on the right, looking up the rafter, bow up.",
+  )
+  expect(words('left')).toBe(
+    'Long points of head and foot on the left looking up the rafter, bow up.',
+  )
 })
 
 describe('the hand of a piece', () => {
