@@ -6,7 +6,7 @@ import { textWidthPx } from './text-size.ts'
 import type { TimberLayout } from './timber-layout.ts'
 import type { BirdsmouthPoints, SidePoint } from './timber-outline.ts'
 import { timberEndLines } from './timber-outline.ts'
-import { endCuts, timberTop, timberTopOutline } from './timber-shape.ts'
+import { endCuts, timberTop, timberTopEnd, timberTopOutline } from './timber-shape.ts'
 import { overPlateText, timberTextPx, type CalloutWish } from './timber-texts.ts'
 
 export type TimberText = { text: string; x: number; baselineY: number }
@@ -72,17 +72,27 @@ export function topLetters(
     )
     const x = end === 'head' ? Math.max(...xs) + 15 : Math.min(...xs) - 15
     // The long side's bevel cuts the other side away, and stands beside it.
-    return across.map((dial) => {
+    return across.map((dial, i) => {
       const awayPx = across.length === 1 ? 0 : dial.longSide === 'left' ? 10 : -10
-      return { letter: dial.letter, at: { x, y: middleY + awayPx } }
+      // Two cheeks one behind the other on one side stand beside one another.
+      const before = across.slice(0, i).filter((one) => one.longSide === dial.longSide).length
+      const outPx = 20 * before * (end === 'head' ? 1 : -1)
+      return { letter: dial.letter, at: { x: x + outPx, y: middleY + awayPx } }
     })
   })
   const backing = dials.filter((dial) => dial.where === 'end')
   const backingLetters = backing.map((dial, i) => ({
     letter: dial.letter,
-    at: { x: layout.scale.xPx(0) + 16 + i * 20, y: layout.topY - 10 },
+    at: { x: backingX(member, layout) + 9 + i * 20, y: layout.topY - 10 },
   }))
   return [...endLetters, ...backingLetters]
+}
+
+/** Where the backing is named: at the heel line, or clear of the foot's points. */
+function backingX(member: DrawnMember, layout: TimberLayout): number {
+  if (member.birdsmouth) return layout.scale.xPx(0) + 7
+  const left = timberTopEnd(member, 'foot')[0]?.alongMm ?? 0
+  return layout.scale.xPx(left) + 11
 }
 
 /** Which arris is which, the backing, and the height over plate at the top of its plumb line. */
@@ -96,13 +106,14 @@ export function timberTexts(
   const overY = layout.topY - 5
   const underY = layout.topY + layout.topHeightPx + timberTextPx + 3
   const heelX = layout.scale.xPx(0) + 7
+  const overX = backingX(member, layout)
   const backing = dials.filter((dial) => dial.where === 'end').length
   const over =
     backing > 0
       ? [
           {
             text: timberTop(member) === 'dished' ? 'dish' : 'backing',
-            x: heelX + backing * 20,
+            x: overX + backing * 20,
             baselineY: overY,
           },
         ]

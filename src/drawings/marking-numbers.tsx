@@ -88,8 +88,8 @@ function EndNumbers({ end }: { end: MarkingEnd }) {
           ))}
         </dl>
       ) : null}
-      {cutsSawnAlike(end).map(({ name, first, cuts }) => (
-        <div key={name} className="mt-2">
+      {cutsSawnAlike(end).map(({ name, first, cuts }, i) => (
+        <div key={i} className="mt-2">
           <CutName name={name} cut={first} />
           <dl className="space-y-1">
             {isSquareDown(first) ? null : <BevelView bevel={first.face} />}
@@ -153,7 +153,7 @@ export function CutNumbers({ card }: { card: MarkingCard }) {
           <FigureView key={point.label} figure={point} />
         ))}
       </dl>
-      {head ? cutsSawnAlike(head).map((alike) => <CutBevels key={alike.name} {...alike} />) : null}
+      {head ? cutsSawnAlike(head).map((alike, i) => <CutBevels key={i} {...alike} />) : null}
       {card.ends.some((end) => end.cuts.some((cut) => cut.pastSaw)) ? (
         <p className="border-l-8 border-ochre pl-2 text-base font-semibold">
           Past the saw: the way round is under all numbers. {pastSawSafety}

@@ -33,8 +33,8 @@ export function PrintCard({ card, member, units }: Props) {
           end.points.length > 0 || end.cuts.some((cut) => cut.bearsOn || cut.pastSaw) ? (
             <Part key={end.title} title={end.title}>
               <Figures figures={end.points} />
-              {end.cuts.map((cut) => (
-                <div key={`${cut.cheek}${cut.bearsOn}`}>
+              {end.cuts.map((cut, i) => (
+                <div key={i}>
                   {cut.bearsOn ? <p>{bearsText(cut)}.</p> : null}
                   {cut.sawWords.map((words) => (
                     <p key={words} className="font-semibold text-stop">
