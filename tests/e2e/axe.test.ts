@@ -21,9 +21,10 @@ test.each(looks)(
     const faults: string[] = []
     for (const who of [...new Set(screens.map((screen) => screen.who))]) {
       const visitor = await visit(browser, app.url, who ? demoSignIn(who) : undefined, look)
-      for (const { name, path } of screens.filter((screen) => screen.who === who)) {
+      for (const { name, path, first } of screens.filter((screen) => screen.who === who)) {
         await visitor.goto(path)
         await visitor.page.waitForLoadState('networkidle')
+        await first?.(visitor.page)
         const { violations } = await new AxeBuilder({ page: visitor.page }).analyze()
         for (const violation of violations) {
           faults.push(

@@ -1,7 +1,14 @@
+import type { Page } from '@playwright/test'
 import type { ServedApp } from './browser.ts'
 import { bookingIdOf, dayIdOf, jobIdOf, messageIdOf, taskIdOf } from './demo.ts'
 
-export type Screen = { name: string; who: string | null; path: string }
+export type Screen = {
+  name: string
+  who: string | null
+  path: string
+  /** What somebody does there first, for a state without an address. */
+  first?: (page: Page) => Promise<void>
+}
 
 /** Every screen, as whoever uses it; on the demo firm. */
 export function screensOf({ db }: ServedApp, today: string): Screen[] {
@@ -11,10 +18,11 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
   const todaysDay = dayIdOf(db, 'QR-108', today)
   const task = taskIdOf(db, 'wil@quillback.example', todaysDay)
   const signedOut = (name: string, path: string): Screen => ({ name, who: null, path })
-  const office = (name: string, path: string): Screen => ({
+  const office = (name: string, path: string, first?: Screen['first']): Screen => ({
     name: `office-${name}`,
     who: 'marnie',
     path,
+    ...(first ? { first } : {}),
   })
   const lead = (name: string, path: string): Screen => ({
     name: `leading-hand-${name}`,
@@ -36,6 +44,11 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     office('job-edit', `/jobs/${house}/edit`),
     office('job-new', '/jobs/new'),
     office('roof-editor', `/jobs/${octagon}/roof`),
+    office('roof-editor-l', `/jobs/${jobIdOf(db, 'QR-111')}/roof`),
+    office('roof-editor-outline', `/jobs/${jobIdOf(db, 'QR-112')}/roof`, showOutline),
+    office('roof-editor-edge', `/jobs/${jobIdOf(db, 'QR-113')}/roof`, openEdge),
+    office('roof-editor-walk', `/jobs/${jobIdOf(db, 'QR-114')}/roof`, showSides),
+    office('roof-editor-paste', `/jobs/${jobIdOf(db, 'QR-114')}/roof`, openPaste),
     office('roof-editor-empty', `/jobs/${jobIdOf(db, 'QR-101')}/roof`),
     office('revision-octagonal', `/jobs/${octagon}/revisions/A`),
     office('revision-splayed', `/jobs/${splay}/revisions/A`),
@@ -65,4 +78,29 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     apprentice('task', `/my-tasks/${task}`),
     apprentice('today', '/today'),
   ]
+}
+
+const pick = (page: Page, name: string) =>
+  page.getByRole('radio', { name, exact: true }).check({ force: true })
+
+async function showOutline(page: Page): Promise<void> {
+  // On a phone the plan is a part of its own.
+  if ((page.viewportSize()?.width ?? 0) < 1024) await pick(page, 'Plan')
+  await pick(page, 'Outline')
+  await page.locator('[data-edge="1"]').waitFor()
+}
+
+async function openEdge(page: Page): Promise<void> {
+  await showOutline(page)
+  await page.locator('[data-edge="1"]').focus()
+  await page.keyboard.press('Enter')
+  await page.getByRole('dialog', { name: /^Edge 2/ }).waitFor()
+}
+
+const showSides = (page: Page) => pick(page, 'Sides and turns')
+
+async function openPaste(page: Page): Promise<void> {
+  await page.getByRole('button', { name: 'Paste coordinates' }).click()
+  const box = page.getByLabel('Corners, one a line: x, then y')
+  await box.fill('0; 0\n0; 8,0\n4,0; 8,0\n4,0; 4,0\n10,0; 4,0\n10,0; 0\n0; 0')
 }

@@ -32,6 +32,7 @@ for (const look of looks) {
     for (const screen of wanted.filter((each) => each.who === who)) {
       await visitor.goto(screen.path)
       await visitor.page.waitForLoadState('networkidle')
+      await screen.first?.(visitor.page)
       await visitor.page.waitForTimeout(400)
       await visitor.page.screenshot({
         path: path.join(outDir, `${screen.name}-${look.name}.png`),
