@@ -158,7 +158,6 @@ function CornerHandle({ roof, view, units, index, isPicked, actions }: HandlePro
         if (event.detail === 0) actions.onPick({ kind: 'corner', index })
       }}
       onKeyDown={onKeyDown}
-      style={{ touchAction: 'none' }}
       className="group cursor-move outline-none"
     >
       <circle cx={at.x} cy={at.y} r={22} className="fill-transparent" />

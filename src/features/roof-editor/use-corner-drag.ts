@@ -70,6 +70,14 @@ function listenToCorners(svg: SVGSVGElement, options: () => Options, setDrag: Se
     const from = { x: event.clientX, y: event.clientY }
     held = { corner, pointerId: event.pointerId, from, grip, isMoved: false }
   }
+  // A finger on a corner does not scroll the page; anywhere else on the plan it does.
+  const onTouch = (event: TouchEvent) => {
+    const [finger] = event.touches
+    const at = finger && pointOfEvent(svg, options().view, finger)
+    if (at && event.touches.length === 1 && cornerUnder(options(), at.drawn) !== null) {
+      event.preventDefault()
+    }
+  }
   const onMove = (event: PointerEvent) => {
     if (held?.pointerId !== event.pointerId) return
     const apart = Math.hypot(event.clientX - held.from.x, event.clientY - held.from.y)
@@ -97,12 +105,14 @@ function listenToCorners(svg: SVGSVGElement, options: () => Options, setDrag: Se
     event.stopPropagation()
     cancel()
   }
+  svg.addEventListener('touchstart', onTouch, { passive: false })
   svg.addEventListener('pointerdown', onDown)
   svg.addEventListener('pointermove', onMove)
   svg.addEventListener('pointerup', onUp)
   svg.addEventListener('pointercancel', cancel)
   window.addEventListener('keydown', onKey, { capture: true })
   return () => {
+    svg.removeEventListener('touchstart', onTouch)
     svg.removeEventListener('pointerdown', onDown)
     svg.removeEventListener('pointermove', onMove)
     svg.removeEventListener('pointerup', onUp)
@@ -112,7 +122,9 @@ function listenToCorners(svg: SVGSVGElement, options: () => Options, setDrag: Se
 }
 
 /** Where the pointer is, in px of the drawing and in mm of the roof. */
-function pointOfEvent(svg: SVGSVGElement, view: PlanView, event: PointerEvent) {
+type OnScreen = { clientX: number; clientY: number }
+
+function pointOfEvent(svg: SVGSVGElement, view: PlanView, event: OnScreen) {
   const { left, top, width } = svg.getBoundingClientRect()
   if (width === 0) return null
   const scale = view.widthPx / width
