@@ -22,8 +22,12 @@ export type JointFaults = {
 /** A head that does not close, in the count of faults; a third cut or a feathered one only adds to it. */
 const open = 10
 const awkward = 1
+/** A cut that runs along its piece is worth looking for another way, though it may close. */
+const ripped = 5
 /** A cut leaner than this to its piece (cosine) runs out in a feather. */
 const featherFacing = 0.2
+/** And one leaner than this would have to be ripped along it. */
+const ripFacing = 0.1
 /** Cut faces shorter than this in plan are slivers. */
 const sliverMm = 0.3
 /** Where a face has closed it bears; what lies as far behind it as `behindMm` it was meant to meet. */
@@ -81,7 +85,8 @@ const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
   let faults = Math.max(0, cuts.length - 2) * awkward
   cuts.forEach((cut, k) => {
     const face = own.sides.find((s) => s.side.kind === end && s.side.cut === k)
-    if (Math.abs(dot2(cut.normal, piece.dir)) < featherFacing) faults += awkward
+    const facing = Math.abs(dot2(cut.normal, piece.dir))
+    if (facing < featherFacing) faults += facing < ripFacing ? ripped : awkward
     const size =
       face === undefined ? 0 : Math.hypot(face.to.x - face.from.x, face.to.y - face.from.y)
     if (face === undefined || size < sliverMm || !closes(face, cut, bodies)) faults += open
@@ -137,5 +142,5 @@ export const jointFaults = (
     standing.push(...(made.get(piece.id) ?? []))
     made.delete(piece.id)
   }
-  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= open, openPieces }
+  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= ripped, openPieces }
 }

@@ -11,6 +11,8 @@ import { add2, cross2, dot2, left2, scale2, sub2 } from './vector.ts'
 const onGableMm = 1
 /** Overlaps smaller than this in plan are touching faces. */
 const touchMm2 = 0.01
+/** A ridge's end stands at least this clear of another one on its side. */
+const leastClearMm = 1
 /** A ridge end can be kept back as far as this from its node by what passes there. */
 const backMm = 300
 
@@ -27,12 +29,23 @@ const vergeMm = (ground: Ground, ridge: Piece, point: Point2): number | null => 
   return null
 }
 
-/** How far past its node a ridge must run so that another timber from that node bears fully on its side, mm. */
-const coverMm = (ridge: Piece, away: Point2, other: EndJob): number => {
+/**
+ * How far past its node a ridge must run so that another one bears fully on its side there and its end
+ * still stands clear of that one's far side, mm.
+ */
+const coverMm = (ground: Ground, job: EndJob, away: Point2, other: EndJob): number => {
+  const { piece, end } = job
+  const node = end === 'head' ? piece.head : piece.foot
+  const start = other.end === 'head' ? other.piece.head : other.piece.foot
   const out = bodyDirection(other.piece, other.end)
-  const aside = Math.abs(cross2(away, out))
-  if (aside < 1e-6) return 0
-  return (ridge.halfMm * dot2(away, out) + other.piece.halfMm) / aside
+  const turn = cross2(away, out)
+  if (Math.abs(turn) < 1e-6) return 0
+  // where the other's centre line crosses the side that it bears on, then half of it further
+  const off = sub2(start, node)
+  const aside = Math.sign(turn) * piece.halfMm - cross2(away, off)
+  const centre = dot2(away, off) + (aside / turn) * dot2(away, out)
+  const half = ground.roof.sections.rafter.thicknessMm / 2
+  return centre + other.piece.halfMm / Math.abs(turn) + Math.max(leastClearMm, half - piece.halfMm)
 }
 
 const stripOf = (start: Point2, end: Point2, along: Point2, halfMm: number): Point2[] => {
@@ -86,7 +99,7 @@ export const ridgeEnd = (
   )
   const wanted = Math.max(
     ground.roof.sections.rafter.thicknessMm / 2,
-    ...butting.map((other) => coverMm(piece, away, other)),
+    ...butting.map((other) => coverMm(ground, job, away, other)),
   )
   const past = vergeMm(ground, piece, node) ?? clearMm(piece, node, away, wanted, near)
   return { point: add2(node, scale2(away, past)), normal: away, mitreWith: null }
