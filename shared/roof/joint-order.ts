@@ -219,7 +219,7 @@ export const cutJoints = (ground: Ground, pieces: Piece[]): JointsCut => {
     put(body)
     bodies.put(body, body.box)
   }
-  placeRidges(ground, early, bodies.near, { near: grid.near, put })
+  placeRidges(ground, all, bodies.near, { near: grid.near, put })
   const rest = early.filter(({ phase }) => phase !== phases.ridge)
   placeJobs(ground, rest, new Map(), { near: grid.near, put }, [])
   const placed = [...early]

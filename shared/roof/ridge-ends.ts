@@ -82,8 +82,8 @@ const clearMm = (piece: Piece, node: Point2, away: Point2, pastMm: number, near:
 
 /**
  * Where a ridge that butts nothing ends: out to the verge on a gable, otherwise half a rafter past its
- * joint, further where another ridge bears on its side there, and short of a hip or valley in `near`
- * that passes.
+ * joint, further where another ridge or a rafter beside the joint bears on its side there, and short of
+ * a hip or valley in `near` that passes.
  */
 export const ridgeEnd = (
   ground: Ground,
@@ -97,9 +97,15 @@ export const ridgeEnd = (
   const butting = jobs.filter(
     (other) => other.phase === phases.ridgeButt && other.joint === joint && joint !== null,
   )
+  const commons = jobs.filter(
+    (other) => other.piece.onRidge && other.end === 'head' && other.joint === joint && joint !== null,
+  )
   const wanted = Math.max(
     ground.roof.sections.rafter.thicknessMm / 2,
     ...butting.map((other) => coverMm(ground, job, away, other)),
+    ...commons
+      .filter((other) => other.piece.slopes.some((slope) => piece.slopes.includes(slope)))
+      .map((other) => dot2(away, sub2(other.piece.head, node)) + other.piece.halfMm),
   )
   const past = vergeMm(ground, piece, node) ?? clearMm(piece, node, away, wanted, near)
   return { point: add2(node, scale2(away, past)), normal: away, mitreWith: null }
