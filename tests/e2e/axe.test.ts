@@ -14,7 +14,7 @@ const looks = [
 
 test.each(looks)(
   'axe finds nothing on any screen and none scrolls sideways: $name',
-  { timeout: 300_000 },
+  { timeout: 480_000 },
   async (look) => {
     const { browser, app } = served()
     const screens = screensOf(app, '2026-12-02')

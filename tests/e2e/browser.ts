@@ -58,7 +58,7 @@ export type Visitor = {
   close(): Promise<void>
 }
 
-type Look = { viewport?: { width: number; height: number }; dark?: boolean }
+type Look = { viewport?: { width: number; height: number }; dark?: boolean; touch?: boolean }
 
 /** Somebody with a browser of their own; signed in when told as whom. */
 export async function visit(
@@ -71,6 +71,7 @@ export async function visit(
     baseURL: url,
     viewport: look.viewport ?? desk,
     colorScheme: look.dark ? 'dark' : 'light',
+    hasTouch: look.touch ?? false,
     reducedMotion: 'reduce',
     locale: 'en-AU',
     timezoneId: 'Australia/Brisbane',

@@ -24,10 +24,10 @@ function addJob(app: ServedApp): string {
 }
 
 /** The office at a roof nobody has typed yet. */
-async function emptyRoof(viewport = desk) {
+async function emptyRoof(viewport = desk, touch = false) {
   const { browser, app } = served()
   office ??= app.addPerson('office', 'Maren Tolhurst')
-  const visitor = await visit(browser, app.url, { email: office.email }, { viewport })
+  const visitor = await visit(browser, app.url, { email: office.email }, { viewport, touch })
   await visitor.goto(`/jobs/${addJob(app)}/roof`)
   return visitor
 }
@@ -203,6 +203,42 @@ test('a corner is moved by keys, and edges that cross are marked where they cros
   await corner.focus()
   await page.keyboard.press('Delete')
   await expect.poll(async () => (await cornersDrawn(page)).length).toBe(3)
+  expect(complaints).toEqual([])
+  await close()
+})
+
+test('a finger on a corner moves the corner and not the page; beside it the page scrolls', async () => {
+  const { page, complaints, close } = await emptyRoof({ width: 390, height: 600 }, true)
+  await pick(page, 'Any outline')
+  await page.getByRole('button', { name: 'Start with 10 × 8 m and drag' }).click()
+  await pick(page, 'Plan')
+  const corner = page.locator('[data-corner="2"] rect')
+  await corner.waitFor()
+  const cdp = await page.context().newCDPSession(page)
+  const swipe = async (from: { x: number; y: number }, by: { x: number; y: number }) => {
+    const touch = (type: 'touchStart' | 'touchMove' | 'touchEnd', share: number) =>
+      cdp.send('Input.dispatchTouchEvent', {
+        type,
+        touchPoints:
+          type === 'touchEnd' ? [] : [{ x: from.x + by.x * share, y: from.y + by.y * share }],
+      })
+    await touch('touchStart', 0)
+    for (let step = 1; step <= 8; step++) await touch('touchMove', step / 8)
+    await touch('touchEnd', 1)
+  }
+  const scrolled = () => page.evaluate(() => window.scrollY)
+  const box = (await corner.boundingBox())!
+  const places = await placesOnScreen(page)
+  const before = await scrolled()
+  const pxOf2m = places.of(0, 0).y - places.of(0, 2000).y
+  await swipe({ x: box.x + 6, y: box.y + 6 }, { x: 0, y: pxOf2m })
+  await expect.poll(async () => (await cornersDrawn(page))[2]).toBe('10000, 6000')
+  expect(await scrolled()).toBe(before)
+  // Towards the top or the foot of the page, whichever is further.
+  const way = before > 60 ? 1 : -1
+  await swipe((await placesOnScreen(page)).of(5000, 3000), { x: 0, y: way * 120 })
+  await expect.poll(async () => Math.abs((await scrolled()) - before)).toBeGreaterThan(40)
+  expect((await cornersDrawn(page))[2]).toBe('10000, 6000')
   expect(complaints).toEqual([])
   await close()
 })
