@@ -9,7 +9,7 @@ import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import { halfObstacle } from './trim.ts'
 import type { Obstacle } from './trim.ts'
-import { add2, cross2, dot2, scale2, sub2 } from './vector.ts'
+import { add2, cross2, distance2, dot2, scale2, sub2 } from './vector.ts'
 
 /** What is wrong with a group of joints: how much in all, and which of them had better be made another way. */
 export type JointFaults = {
@@ -22,8 +22,10 @@ export type JointFaults = {
 /** A head that does not close, in the count of faults; a third cut or a feathered one only adds to it. */
 const open = 10
 const awkward = 1
-/** A cut that runs along its piece is worth looking for another way, though it may close. */
-const ripped = 5
+/** A cut that runs along its piece, or an end that hangs by a corner, is worth another way though it closes. */
+const poor = 5
+/** An end hangs by a corner where less than this share of its faces bears. */
+const leastBorne = 0.2
 /** A cut leaner than this to its piece (cosine) runs out in a feather. */
 const featherFacing = 0.2
 /** And one leaner than this would have to be ripped along it. */
@@ -66,32 +68,40 @@ const lengthWithin = (from: Point2, to: Point2, points: readonly Point2[]): numb
 const touchesFace = (face: Segment, body: Body): boolean =>
   body.sides.some((side) => sharedRange(face, side) !== null)
 
-/** Whether the face of a cut closes on the pieces that it may bear on. */
-const closes = (face: Segment, cut: PlanCut, bodies: readonly Body[]): boolean => {
+/** How much of a cut's face bears, mm in plan, and whether it closes on all that it was meant to meet. */
+const bearingOf = (face: Segment, cut: PlanCut, bodies: readonly Body[]) => {
   const named = bodies.filter((body) => touchesFace(face, body))
-  if (named.length === 0) return false
+  if (named.length === 0) return { bornMm: 0, closes: false }
   const covered = (offMm: number) => {
     const off = scale2(cut.normal, offMm)
     const [from, to] = [add2(face.from, off), add2(face.to, off)]
     return named.reduce((sum, body) => sum + lengthWithin(from, to, body.points), 0)
   }
   const meant = Math.min(covered(behindMm), covered(nearlyMm))
-  return covered(closedMm) >= closedShare * meant && covered(closedMm) > sliverMm
+  const bornMm = covered(closedMm)
+  return { bornMm, closes: bornMm >= closedShare * meant && bornMm > sliverMm }
 }
 
 const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
   const { piece, end } = job
   const cuts = end === 'head' ? piece.headCuts : piece.footCuts
   let faults = Math.max(0, cuts.length - 2) * awkward
+  let [faceMm, bornMm] = [0, 0]
   cuts.forEach((cut, k) => {
-    const face = own.sides.find((s) => s.side.kind === end && s.side.cut === k)
     const facing = Math.abs(dot2(cut.normal, piece.dir))
-    if (facing < featherFacing) faults += facing < ripFacing ? ripped : awkward
-    const size =
-      face === undefined ? 0 : Math.hypot(face.to.x - face.from.x, face.to.y - face.from.y)
-    if (face === undefined || size < sliverMm || !closes(face, cut, bodies)) faults += open
+    if (facing < featherFacing) faults += facing < ripFacing ? poor : awkward
+    const face = own.sides.find((s) => s.side.kind === end && s.side.cut === k)
+    const size = face === undefined ? 0 : distance2(face.from, face.to)
+    if (face === undefined || size < sliverMm) {
+      faults += open
+      return
+    }
+    const bearing = bearingOf(face, cut, bodies)
+    if (!bearing.closes) faults += open
+    faceMm += size
+    bornMm += bearing.bornMm
   })
-  return faults
+  return bornMm < leastBorne * faceMm ? faults + poor : faults
 }
 
 const overlaps = (own: Body, bodies: readonly Body[]): boolean =>
@@ -142,5 +152,5 @@ export const jointFaults = (
     standing.push(...(made.get(piece.id) ?? []))
     made.delete(piece.id)
   }
-  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= ripped, openPieces }
+  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= poor, openPieces }
 }
