@@ -93,7 +93,9 @@ function judgeFascia(say: Say, site: Site, piece: Piece): void {
     if (Math.abs(out) > TOUCH_MM || turn > 0.01)
       say('its back is not on the tail, mm', out, other.member.mark)
   }
-  if (met === 0) say('is on no tail', 0)
+  // between two valleys a board can be shorter than a bay
+  const long = member.setOutLengthMm > site.roof.maxSpacingMm
+  if (met === 0 && long) say('is on no tail, mm long', member.setOutLengthMm)
 }
 
 /** Its back stands on the verge line of a gable. */

@@ -1,5 +1,6 @@
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { checkBeside } from './check-beside.ts'
+import { checkCuts } from './check-cuts.ts'
 import { checkJoints } from './check-joints.ts'
 import { checkLayout } from './check-layout.ts'
 import { checkLists, checkWeight } from './check-lists.ts'
@@ -55,6 +56,7 @@ function checkMarks(complain: Complain, spec: FrameSpec): void {
 /** Everything that can be said of one piece where it stands. */
 export function checkPiece(complain: Complain, site: Site, facets: Facets, piece: Piece): void {
   checkNumbers(complain, site, piece)
+  checkCuts(complain, site, piece)
   checkWeight(complain, piece, site.settings.densityKgM3)
   checkPlace(complain, site, piece)
   checkTop(complain, site, piece)
