@@ -73,7 +73,7 @@ export function sidesOfOutline(outline: readonly Point2[]): {
 }
 
 /** The same turn, over −180° and up to 180°. */
-export function turnWithin180(deg: number): number {
+function turnWithin180(deg: number): number {
   const turn = ((deg % 360) + 360) % 360
   return turn > 180 ? turn - 360 : turn
 }

@@ -20,7 +20,7 @@ export type WalkReading = {
   unread: { side: number; field: 'lengthMm' | 'turnDeg' } | null
 }
 
-export function readWalk(form: WalkForm, start: Point2): WalkReading {
+function readWalk(form: WalkForm, start: Point2): WalkReading {
   const typed = typedSides(form)
   const sides: WalkSide[] = []
   let unread: WalkReading['unread'] = null
@@ -130,11 +130,11 @@ function sideOf({ finish, pitchDeg, overhangMm }: SideForm): SideForm {
 }
 
 /** A walked side as a person would type it. */
-export function sideFormOf({ lengthMm, turnLeftDeg }: WalkSide): WalkSideForm {
+function sideFormOf({ lengthMm, turnLeftDeg }: WalkSide): WalkSideForm {
   return { lengthMm: mmText(lengthMm), ...turnFormOf(turnLeftDeg), side: plainSide() }
 }
 
-export function turnFormOf(turnLeftDeg: number): Pick<WalkSideForm, 'turn' | 'turnDeg'> {
+function turnFormOf(turnLeftDeg: number): Pick<WalkSideForm, 'turn' | 'turnDeg'> {
   const text = degText(Math.abs(turnLeftDeg))
   const isLeft = turnLeftDeg > 0
   if (text === '90') return { turn: isLeft ? 'left' : 'right', turnDeg: '' }

@@ -5,7 +5,7 @@ import { sectionNames } from './form-typing.ts'
 import { besideKeys, type RoofForm, type SectionKey, sectionKeys } from './roof-form.ts'
 
 /** Who typed a size as it now stands, and when: an instant. */
-export const sizeTypedSchema = z.object({ by: z.string(), at: z.string() })
+const sizeTypedSchema = z.object({ by: z.string(), at: z.string() })
 export type SizeTyped = z.infer<typeof sizeTypedSchema>
 
 const allKeys = [...sectionKeys, ...besideKeys] as const

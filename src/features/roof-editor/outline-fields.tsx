@@ -6,7 +6,7 @@ import { Segmented } from '../../ui/segmented.tsx'
 import { CornerFields } from './corner-fields.tsx'
 import { withPastedCorners } from './outline-edits.ts'
 import { PasteDialog } from './paste-dialog.tsx'
-import { useRoofForm } from './roof-form-context.ts'
+import { fieldId, useRoofForm } from './roof-form-context.ts'
 import { WalkFields } from './walk-fields.tsx'
 
 const ways = [
@@ -17,7 +17,8 @@ type Way = (typeof ways)[number]['value']
 
 /** One outline, entered whichever way the plan gives it; every way shows what the others made. */
 export function OutlineFields() {
-  const { form, setForm } = useRoofForm()
+  const { form, problemAt, setForm } = useRoofForm()
+  const walkProblem = problemAt('walk')
   const isEmpty = form.corners.every(({ x, y }) => x === '' && y === '')
   const [way, setWay] = useState<Way>(isEmpty || heldWalk(form) ? 'walk' : 'corners')
   const [isPasting, setIsPasting] = useState(false)
@@ -38,7 +39,18 @@ export function OutlineFields() {
         ) : null}
       </div>
       <p className="text-sm text-ink-soft">Or drag its corners on the plan.</p>
-      {way === 'walk' ? <WalkFields /> : <CornerFields />}
+      {way === 'walk' ? (
+        <WalkFields />
+      ) : (
+        <>
+          {walkProblem ? (
+            <p id={fieldId('walk')} role="alert" className="text-sm font-semibold text-stop">
+              {walkProblem}
+            </p>
+          ) : null}
+          <CornerFields />
+        </>
+      )}
       <PasteDialog
         open={isPasting}
         onClose={() => setIsPasting(false)}

@@ -9,8 +9,7 @@ import { Fold } from '../../ui/fold.tsx'
 import { ChoiceField, FieldGroup, MeasureField } from './form-fields.tsx'
 import { useRoofForm } from './roof-form-context.ts'
 
-export const sizesRule =
-  'Sized by span tables or an engineer, not by this program. Type what they say.'
+const sizesRule = 'Sized by span tables or an engineer, not by this program. Type what they say.'
 
 const sectionTitles: Record<SectionKey, string> = {
   rafter: 'Rafter',
