@@ -98,7 +98,8 @@ export const ridgeEnd = (
     (other) => other.phase === phases.ridgeButt && other.joint === joint && joint !== null,
   )
   const commons = jobs.filter(
-    (other) => other.piece.onRidge && other.end === 'head' && other.joint === joint && joint !== null,
+    (other) =>
+      other.piece.onRidge && other.end === 'head' && other.joint === joint && joint !== null,
   )
   const wanted = Math.max(
     ground.roof.sections.rafter.thicknessMm / 2,
