@@ -1,4 +1,5 @@
 import type { Roof } from './roof-types.ts'
+import { pinchedLines } from './pinched.ts'
 import { ridgeChains } from './ridge-chains.ts'
 import type { RidgeChain } from './ridge-chains.ts'
 import type { NodeLine, RoofLines } from './roof-lines.ts'
@@ -27,6 +28,8 @@ export type Joints = {
   ofNode: (number | null)[]
   /** Lines too short for a member. */
   swallowed: ReadonlySet<number>
+  /** Lines too close beside another one for a member. */
+  pinched: ReadonlySet<number>
   /** Ridges as timbers, in the order of who runs through. */
   chains: RidgeChain[]
 }
@@ -114,6 +117,8 @@ export const roofJoints = (roof: Roof, lines: RoofLines): Joints => {
     groups.push(nodes)
   })
   const chains = ridgeChains(lines, ofNode, swallowed)
-  const joints = groups.map((nodes, index) => jointOf(lines, swallowed, chains, nodes, index))
-  return { joints, ofNode, swallowed, chains }
+  const pinched = pinchedLines(roof, lines, swallowed)
+  const gone = new Set([...swallowed, ...pinched])
+  const joints = groups.map((nodes, index) => jointOf(lines, gone, chains, nodes, index))
+  return { joints, ofNode, swallowed, pinched, chains }
 }

@@ -109,7 +109,7 @@ const ridgePiece = (ground: Ground, chain: RidgeChain): Piece => {
 export const linePieces = (ground: Ground): Piece[] => {
   const { lines, joints } = ground
   return lines.lines.flatMap((line, index): Piece[] => {
-    if (joints.swallowed.has(index)) return []
+    if (joints.swallowed.has(index) || joints.pinched.has(index)) return []
     if (line.kind === 'ridge') {
       const chain = joints.chains.find((c) => Math.min(...c.lines) === index)
       return chain === undefined ? [] : [ridgePiece(ground, chain)]
