@@ -2,7 +2,7 @@ import type { Facets } from './facets.ts'
 import { directionToBuilding, toBuilding, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
-import { heightOn, isFrameMember, isRafter } from './slopes.ts'
+import { heightOn, isFrameMember, isHipLike, isRafter } from './slopes.ts'
 import { boxesMeet, boxOf } from './solid-kit.ts'
 import { distanceToStretch } from './surface.ts'
 import { cosDeg, dot, scale, sub, toDeg, type Vec } from './vec.ts'
@@ -73,12 +73,15 @@ function judgeTie(say: Say, site: Site, facets: Facets, piece: Piece): void {
   }
 }
 
-/** Its back lies on the tail cuts of the rafters of its slope. */
+/** Its back lies on the tail cuts of the rafters of its slope, or at least a hip's or valley's tail holds it. */
 function judgeFascia(say: Say, site: Site, piece: Piece): void {
   const { member } = piece
   const half = member.section.thicknessMm / 2
   const near = boxOf(piece.corners, 1)
-  let met = 0
+  let met = site.pieces.filter(
+    (o) =>
+      isHipLike(o.member) && o.member.planes.includes(member.planes[0]!) && boxesMeet(o.box, near),
+  ).length
   for (const other of site.pieces) {
     if (!isRafter(other.member) || other.member.planes[0] !== member.planes[0]) continue
     if (!boxesMeet(other.box, near)) continue
@@ -93,9 +96,7 @@ function judgeFascia(say: Say, site: Site, piece: Piece): void {
     if (Math.abs(out) > TOUCH_MM || turn > 0.01)
       say('its back is not on the tail, mm', out, other.member.mark)
   }
-  // between two valleys a board can be shorter than a bay
-  const long = member.setOutLengthMm > site.roof.maxSpacingMm
-  if (met === 0 && long) say('is on no tail, mm long', member.setOutLengthMm)
+  if (met === 0) say('is on no tail, mm long', member.setOutLengthMm)
 }
 
 /** Its back stands on the verge line of a gable. */
