@@ -14,11 +14,18 @@ export const firm = sqliteTable('firm', {
   changeHoldMinutes: integer('change_hold_minutes').notNull(),
   startAt: text('start_at').notNull(),
   hoursPerDay: real('hours_per_day').notNull(),
+  /** Ordinary hours Monday to Sunday where they differ from day to day; null: `hoursPerDay` on each working weekday. */
+  weekHours: text('week_hours', { mode: 'json' }).$type<number[]>(),
   /** ISO weekdays worked, 1 = Monday. */
   workingWeekdays: text('working_weekdays', { mode: 'json' }).$type<number[]>().notNull(),
   closedDays: text('closed_days', { mode: 'json' })
     .$type<{ day: string; name: string }[]>()
     .notNull(),
+  /** ISO 3166 country and its state, whose public holidays are not worked; null: none are looked up. */
+  holidayCountry: text('holiday_country'),
+  holidayState: text('holiday_state'),
+  /** Public holidays the firm works all the same. */
+  holidaysWorked: text('holidays_worked', { mode: 'json' }).$type<string[]>().notNull().default([]),
   /** Added to an overhang measured from brickwork to get it from frame. */
   brickOffsetMm: real('brick_offset_mm').notNull(),
   lengthUnits: text('length_units', { enum: ['mm', 'feet-inches'] }).notNull(),

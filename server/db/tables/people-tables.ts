@@ -1,4 +1,6 @@
-import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { blob, index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { leaveKinds } from '../../../shared/people/leave-kinds.ts'
+import { ticketKinds } from '../../../shared/people/ticket-kinds.ts'
 
 export const people = sqliteTable(
   'people',
@@ -14,6 +16,8 @@ export const people = sqliteTable(
     /** Goes up at a password change or when access ends; older sessions are refused. */
     sessionEpoch: integer('session_epoch').notNull().default(1),
     active: integer('active', { mode: 'boolean' }).notNull().default(true),
+    /** Ordinary hours Monday to Sunday; null: the firm's. */
+    weekHours: text('week_hours', { mode: 'json' }).$type<number[]>(),
     createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),
     version: integer('version').notNull().default(1),
   },
@@ -78,7 +82,60 @@ export const leave = sqliteTable(
       .references(() => people.id),
     startsOn: text('starts_on').notNull(),
     endsOn: text('ends_on').notNull(),
+    kind: text('kind', { enum: leaveKinds }).notNull().default('leave'),
+    /** ISO weekdays within the span (trade school each Wednesday); null: every day of it. */
+    weekdays: text('weekdays', { mode: 'json' }).$type<number[]>(),
     reason: text('reason').notNull().default(''),
   },
-  (t) => [index('leave_person').on(t.personId, t.startsOn)],
+  (t) => [index('leave_person').on(t.personId, t.startsOn), index('leave_ends').on(t.endsOn)],
 )
+
+/** A day on which a person works with another crew than the own one. */
+export const crewLoans = sqliteTable(
+  'crew_loans',
+  {
+    id: text('id').primaryKey(),
+    personId: text('person_id')
+      .notNull()
+      .references(() => people.id),
+    /** The crew that borrows. */
+    crewId: text('crew_id')
+      .notNull()
+      .references(() => crews.id),
+    day: text('day').notNull(),
+    note: text('note').notNull().default(''),
+  },
+  (t) => [
+    uniqueIndex('crew_loans_person').on(t.personId, t.day),
+    index('crew_loans_crew').on(t.crewId, t.day),
+  ],
+)
+
+/** A ticket to work: what for, and the last day it holds. */
+export const tickets = sqliteTable(
+  'tickets',
+  {
+    id: text('id').primaryKey(),
+    personId: text('person_id')
+      .notNull()
+      .references(() => people.id),
+    kind: text('kind', { enum: ticketKinds }).notNull(),
+    /** What it is called where the kind does not say. */
+    name: text('name').notNull().default(''),
+    number: text('number').notNull().default(''),
+    /** The last day it holds; null: it does not lapse. */
+    expiresOn: text('expires_on'),
+    version: integer('version').notNull().default(1),
+  },
+  (t) => [index('tickets_person').on(t.personId), index('tickets_expires').on(t.expiresOn)],
+)
+
+/** The photo of a ticket's card: turned upright, made smaller, nothing but the picture in it. */
+export const ticketPhotos = sqliteTable('ticket_photos', {
+  ticketId: text('ticket_id')
+    .primaryKey()
+    .references(() => tickets.id, { onDelete: 'cascade' }),
+  contentType: text('content_type').notNull(),
+  bytes: blob('bytes', { mode: 'buffer' }).notNull(),
+  addedAt: integer('added_at', { mode: 'timestamp_ms' }).notNull(),
+})

@@ -1,0 +1,3 @@
+/** Why a person is away. */
+export const leaveKinds = ['leave', 'sick', 'trade-school', 'other'] as const
+export type LeaveKind = (typeof leaveKinds)[number]
