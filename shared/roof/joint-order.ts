@@ -54,6 +54,11 @@ const setCuts = (job: EndJob, cuts: PlanCut[], standing: Standing) => {
   standing.put(halfObstacle(job.piece, job.end), `${job.piece.id}${job.end}`)
 }
 
+const clearEnd = ({ piece, end }: EndJob) => {
+  if (end === 'head') piece.headCuts = []
+  else piece.footCuts = []
+}
+
 const hasFootJob = (piece: Piece): boolean =>
   piece.role === 'ridge' || piece.footJoint !== null || piece.footLine !== null
 
@@ -149,6 +154,8 @@ const placeGroup = (
     const jobs = endJobs(ground, own, ways).filter(
       (job) => isOwn(job.joint) && job.phase > phases.ridgeButt,
     )
+    // or a timber with both ends here would stand in the way as the trial before cut it
+    jobs.forEach(clearEnd)
     placeJobs(ground, jobs, ways, overlay(before), ridges)
     return { jobs, faults: jointFaults(jobs, before, hasFootJob) }
   }

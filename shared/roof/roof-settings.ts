@@ -14,4 +14,4 @@ export const defaultSettings: RoofSettings = {
 }
 
 /** Goes up whenever the same input would give other numbers; a revision stores it. */
-export const engineVersion = '3'
+export const engineVersion = '4'

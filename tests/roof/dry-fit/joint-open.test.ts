@@ -4,7 +4,7 @@ import type { FrameSpec } from '../../../shared/roof/roof-types.ts'
 import { allReferences, referenceRoof } from '../support/roofs.ts'
 import { furtherRoofs } from './further-roofs.ts'
 import { hardPlan } from './hard-plans.ts'
-import { rectilinearPlan } from './random-houses.ts'
+import { rectilinearPlan, skewedHouse } from './random-houses.ts'
 import { randomBuilding, randomRoof } from './random-roofs.ts'
 import { reportLines } from './report.ts'
 import { loadSolidKit, type SolidKit } from './solid-kit.ts'
@@ -49,3 +49,13 @@ test('no reference roof, further roof or everyday random plan is said to have an
   ]
   expect(roofs.flatMap((roof) => openMarks(frameRoof(roof)))).toEqual([])
 })
+
+// a broken hip of 544 and one of 293 mm: both of its ends are made in one group of joints
+test.each([26, 99])(
+  'of several ways to make a joint the one that closed is cut: house %i',
+  (seed) => {
+    const { roof, spec } = skewedHouse(seed)
+    expect(reportLines(dryFit(kit, roof, spec))).toEqual([])
+    expect(openMarks(spec)).toEqual([])
+  },
+)
