@@ -25,6 +25,7 @@ import { revisionRoutes } from './revisions/revision-routes.ts'
 import { createRevisionService } from './revisions/revision-service.ts'
 import type { Clock } from './lib/clock.ts'
 import { messageRoutes } from './messages/message-routes.ts'
+import { milestoneRoutes } from './milestones/milestone-routes.ts'
 import { peopleRoutes } from './people/people-routes.ts'
 
 export type AppDeps = {
@@ -92,6 +93,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   messageRoutes(api, deps)
   revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
   jobRoutes(api, { db, clock, events: deps.events })
+  milestoneRoutes(api, deps)
   peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })
 }

@@ -14,6 +14,7 @@ import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { EmptyState, ErrorState } from '../../ui/states.tsx'
 import { JobBookingsCard } from './job-bookings-card.tsx'
 import { JobContactsCard } from './job-contacts-card.tsx'
+import { JobMilestonesCard } from './job-milestones-card.tsx'
 import { jobQueries } from './job-queries.ts'
 import { JobRoofCard } from './job-roof-card.tsx'
 import { JobStageCard } from './job-stage-card.tsx'
@@ -97,6 +98,7 @@ function JobDetails({ job }: { job: JobView }) {
           <JobStageCard job={job} />
           <JobRoofCard job={job} />
           <JobBookingsCard job={job} />
+          <JobMilestonesCard jobId={job.id} />
         </div>
         {/* On site the way there and whom to ring come first. */}
         <div className={`space-y-4 ${mayWrite ? '' : 'max-lg:order-first'}`}>

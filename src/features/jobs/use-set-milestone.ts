@@ -1,0 +1,64 @@
+import { useState } from 'react'
+import type { MilestoneState } from '../../../shared/milestones/milestone-kinds.ts'
+import { milestoneNames, pressedState } from '../../../shared/milestones/milestone-rules.ts'
+import type {
+  Milestone,
+  MilestoneConflict,
+  SetMilestone,
+} from '../../../shared/milestones/milestone-schemas.ts'
+import { failureText } from '../../lib/failure-text.ts'
+import { useSession } from '../../lib/session.ts'
+import { useToast } from '../../ui/toast.tsx'
+import { milestoneConflictOf, useSetMilestone } from './milestone-queries.ts'
+
+export type MilestoneFields = Omit<SetMilestone, 'version'>
+
+/** One milestone set by a press or a form, taken back by Undo while nobody has set it again. */
+export function useMilestone(jobId: string, milestone: Milestone) {
+  const toast = useToast()
+  const { today } = useSession().firm
+  const set = useSetMilestone(jobId)
+  const [conflict, setConflict] = useState<MilestoneConflict | null>(null)
+  const { kind } = milestone
+  const name = milestoneNames[kind]
+  const stop = (error: unknown) =>
+    toast(failureText(error) ?? 'That was not saved. Try again.', { kind: 'stop' })
+
+  const send = (fields: MilestoneFields, from: Milestone, onSaved?: () => void) => {
+    if (set.isPending) return
+    set.mutate(
+      { kind, version: from.version, ...fields },
+      {
+        onSuccess: ({ milestones }) => {
+          setConflict(null)
+          onSaved?.()
+          const after = milestones.find((one) => one.kind === kind)
+          if (!after || after.version === from.version) return
+          const { version, ...before } = from
+          toast(`${name}: saved.`, {
+            undo: () => set.mutate({ ...before, version: after.version }, { onError: stop }),
+          })
+        },
+        onError: (error) => {
+          const found = milestoneConflictOf(error)
+          setConflict(found)
+          if (!found) stop(error)
+        },
+      },
+    )
+  }
+
+  return {
+    press: (state: MilestoneState) => send(pressedState(milestone, state, today), milestone),
+    save: (fields: MilestoneFields, onSaved: () => void) => send(fields, milestone, onSaved),
+    /** What was sent, over what somebody else made of it meanwhile. */
+    sendOver: (found: MilestoneConflict) => {
+      const { version, ...fields } = found.sent
+      send(fields, found.current)
+    },
+    takeTheirs: () => setConflict(null),
+    conflict,
+    error: set.error,
+    busy: set.isPending,
+  }
+}
