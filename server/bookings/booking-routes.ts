@@ -1,5 +1,9 @@
 import type { Request } from 'express'
 import {
+  bookingChangesSchema,
+  changedBookingsSchema,
+} from '../../shared/bookings/booking-changes.ts'
+import {
   cancelBookingSchema,
   changeBookingSchema,
   createBookingSchema,
@@ -49,6 +53,11 @@ export function bookingRoutes(api: Api, deps: { db: Db; clock: Clock; events: Ev
   api.route('post', '/api/bookings', 'booking:write', (req, res) => {
     const input = parseInput(createBookingSchema, req.body)
     send(res, bookingSchema, bookings.create(currentUser(res), input), 201)
+  })
+
+  api.route('post', '/api/bookings/changes', 'booking:write', (req, res) => {
+    const input = parseInput(bookingChangesSchema, req.body)
+    send(res, changedBookingsSchema, { bookings: bookings.changeAll(currentUser(res), input) })
   })
 
   api.route('patch', '/api/bookings/:bookingId', 'booking:write', (req, res) => {

@@ -38,16 +38,15 @@ function closedDayClashes(calendar: WorkingCalendar, days: readonly Day[]): Clas
 }
 
 /**
- * Refuses a crew booked twice on a day and a day not worked, unless it is said on purpose. What stood
- * that way before the change is not asked again.
+ * A crew booked twice on a day and days not worked, less what was said on purpose. What stood that way
+ * before the change is not asked again.
  *
- * @returns whether the crew is booked twice on any of the days.
- * @throws AppError 409 whose detail is a `BookingConflict`.
+ * @returns what is to be asked, and whether the crew is booked twice on any of the days, asked or not.
  */
-export function settleClashes(
+export function findClashesOf(
   tx: DbOrTx,
   input: { booking: CrewAndDays; before: Before; calendar: WorkingCalendar; said: OnPurpose },
-): { crewTwice: boolean } {
+): { asked: Clash[]; crewTwice: boolean } {
   const { booking, before, calendar, said } = input
   const twice = crewClashes(tx, booking)
   const settled = (clash: Clash): boolean => before?.days.includes(clash.day) ?? false
@@ -59,11 +58,15 @@ export function settleClashes(
       ? []
       : closedDayClashes(calendar, booking.days).filter((clash) => !settled(clash))),
   ]
-  if (asked.length > 0) {
-    const detail: BookingConflict = { kind: 'clash', clashes: asked }
-    throw new AppError('conflict', conflictWords(asked), { detail })
-  }
-  return { crewTwice: twice.length > 0 }
+  return { asked, crewTwice: twice.length > 0 }
+}
+
+/** @throws AppError 409 whose detail is a `BookingConflict`, when there is anything to be asked. */
+export function refuseClashes(asked: readonly Clash[]): void {
+  if (asked.length === 0) return
+  const clashes = asked.filter((clash, i) => asked.findIndex((c) => c.text === clash.text) === i)
+  const detail: BookingConflict = { kind: 'clash', clashes }
+  throw new AppError('conflict', conflictWords(clashes), { detail })
 }
 
 function conflictWords(clashes: readonly Clash[]): string {

@@ -1,3 +1,4 @@
+import type { BookingChanges } from '../../shared/bookings/booking-changes.ts'
 import type {
   ChangeBooking,
   CreateBooking,
@@ -6,7 +7,7 @@ import type {
 import type { Booking } from '../../shared/bookings/calendar-schemas.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import type { BookingDeps } from './booking-write.ts'
-import { cancelBooking, changeBooking, restoreBooking } from './change-booking.ts'
+import { changeBooking, changeBookings } from './change-booking.ts'
 import { createBooking } from './create-booking.ts'
 
 export type BookingService = ReturnType<typeof createBookingService>
@@ -16,9 +17,12 @@ export function createBookingService(deps: BookingDeps) {
     create: (user: CurrentUser, input: CreateBooking): Booking => createBooking(deps, user, input),
     change: (user: CurrentUser, id: string, input: ChangeBooking): Booking =>
       changeBooking(deps, user, id, input),
+    changeAll: (user: CurrentUser, input: BookingChanges): Booking[] =>
+      changeBookings(deps, user, input),
     cancel: (user: CurrentUser, id: string, input: { version: number }): Booking =>
-      cancelBooking(deps, user, id, input),
+      changeBooking(deps, user, id, { ...input, cancelled: true }),
+    /** Takes a cancellation back, when its days are still free or both are booked on purpose. */
     restore: (user: CurrentUser, id: string, input: RestoreBooking): Booking =>
-      restoreBooking(deps, user, id, input),
+      changeBooking(deps, user, id, { ...input, cancelled: false }),
   }
 }
