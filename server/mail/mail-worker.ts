@@ -10,7 +10,7 @@ import { backOffMs, mostAttempts } from './back-off.ts'
 import { scheduleChangeNotices } from './change-notices.ts'
 import { dropLate, nextDue, type OutboxRow, recoverInFlight, updateMail } from './outbox-store.ts'
 import { scheduleReminders } from './reminders.ts'
-import { type RenderedMail, renderMail } from './render-mail.ts'
+import { type RenderedMail, renderMail, type ToldToPerson } from './render-mail.ts'
 import { toldHash } from './told-day.ts'
 import type { MailTransport } from './transport.ts'
 
@@ -68,18 +68,31 @@ function claimNext(deps: MailWorkerDeps): Claim | 'again' | null {
 }
 
 function rememberTold(tx: DbOrTx, row: OutboxRow, told: RenderedMail['told'], now: Date): void {
-  if (told === null || row.personId === null) return
-  const { day, content, isNotice } = told
+  const { personId } = row
+  if (personId === null) return
+  for (const one of told) rememberDay(tx, personId, one, now)
+}
+
+function rememberDay(tx: DbOrTx, personId: string, told: ToldToPerson, now: Date): void {
+  const { day, content, isReminder } = told
   const known = { contentHash: toldHash(content), content, toldAt: now }
   const settled = { pendingHash: null, pendingSince: null }
   tx.insert(toldDays)
-    .values({ id: newId(), personId: row.personId, day, ...known, notices: 0 })
+    .values({
+      id: newId(),
+      personId,
+      day,
+      ...known,
+      notices: isReminder ? 0 : 1,
+      reminded: isReminder,
+    })
     .onConflictDoUpdate({
       target: [toldDays.personId, toldDays.day],
       set: {
         ...known,
         ...settled,
-        notices: sql`${toldDays.notices} + ${isNotice ? 1 : 0}`,
+        notices: sql`${toldDays.notices} + ${isReminder ? 0 : 1}`,
+        ...(isReminder ? { reminded: true } : {}),
       },
     })
     .run()

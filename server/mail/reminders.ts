@@ -26,17 +26,17 @@ function dueDays(db: DbOrTx, firm: Firm, now: Date): Day[] {
   return notYet === -1 ? days : days.slice(0, notYet)
 }
 
-function wasTold(db: DbOrTx, personId: string, day: Day): boolean {
+function wasReminded(db: DbOrTx, personId: string, day: Day): boolean {
   const row = db
     .select({ id: toldDays.id })
     .from(toldDays)
-    .where(and(eq(toldDays.personId, personId), eq(toldDays.day, day)))
+    .where(and(eq(toldDays.personId, personId), eq(toldDays.day, day), eq(toldDays.reminded, true)))
     .get()
   return row !== undefined
 }
 
 function remind(db: DbOrTx, firm: Firm, personId: string, day: Day, now: Date): boolean {
-  if (wasTold(db, personId, day)) return false
+  if (wasReminded(db, personId, day)) return false
   const starts = startsOf(toldDayOf(db, firm, personId, day), day, firm.timeZone)
   if (starts === null || starts.first <= now) return false
   const person = db.select().from(people).where(eq(people.id, personId)).get()

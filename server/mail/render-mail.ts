@@ -1,10 +1,9 @@
-import { and, eq } from 'drizzle-orm'
+import { eq } from 'drizzle-orm'
 import { z } from 'zod'
 import { daySchema } from '../../shared/http/fields.ts'
 import { mailNotNeeded } from '../../shared/messages/message-words.ts'
 import { invitationHours, issuePasswordToken, resetHours } from '../auth/password-links.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { toldDays } from '../db/tables/mail-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
 import { readFirm } from '../firm/firm-store.ts'
 import { dayChanges } from './day-changes.ts'
@@ -18,7 +17,8 @@ import {
 import { changeNoticeMail } from './templates/change-notice.ts'
 import { reminderMail } from './templates/crew-reminder.ts'
 import { type MailDocument, mailHtml, mailText } from './templates/mail-document.ts'
-import { type ToldDay, toldDayOf, toldDaySchema, type ToldPerson } from './told-day.ts'
+import { type ToldDay, toldDayOf, type ToldPerson } from './told-day.ts'
+import { readDifferencesOf } from './told-differences.ts'
 
 export type MailText = { subject: string; text: string; html: string }
 
@@ -28,13 +28,19 @@ export type RenderedMail = {
   send: MailText
   /** As sent, with secret links left out. */
   keep: MailText
-  /** What the person then knows of a day. */
-  told: { day: string; content: ToldDay; isNotice: boolean } | null
+  /** What the person then knows, of which days. */
+  told: ToldToPerson[]
 }
+
+export type ToldToPerson = { day: string; content: ToldDay; isReminder: boolean }
 
 export type Rendering = RenderedMail | { dropped: string }
 
 const dayPayloadSchema = z.object({ day: daySchema })
+/** A notice stored by an older version names one day. */
+const noticePayloadSchema = z
+  .object({ day: daySchema, days: z.array(daySchema).optional() })
+  .transform(({ day, days }) => days ?? [day])
 
 function textOf(document: MailDocument): MailText {
   return { subject: document.subject, text: mailText(document), html: mailHtml(document) }
@@ -57,48 +63,50 @@ function accountMail(
     to: receiver(person),
     send: textOf(template({ ...about, url })),
     keep: textOf(template({ ...about, url: null })),
-    told: null,
+    told: [],
   }
 }
 
-function lastTold(db: DbOrTx, personId: string, day: string): ToldDay | null {
-  const row = db
-    .select({ content: toldDays.content })
-    .from(toldDays)
-    .where(and(eq(toldDays.personId, personId), eq(toldDays.day, day)))
-    .get()
-  return row ? toldDaySchema.parse(row.content) : null
-}
+type From = { appUrl: string; now: Date }
 
-function dayMail(
-  db: DbOrTx,
-  row: OutboxRow,
-  person: ToldPerson,
-  from: { appUrl: string; now: Date },
-): Rendering {
+function dayReminder(db: DbOrTx, row: OutboxRow, person: ToldPerson, from: From): Rendering {
   const { day } = dayPayloadSchema.parse(row.payload)
   const firm = readFirm(db)
   const told = toldDayOf(db, firm, person.id, day)
   const mail = readDayMail(db, { ...from, firm, person, day, told })
-  if (row.kind === 'crew-reminder') {
-    if (mail.bookings.length === 0) return { dropped: mailNotNeeded }
-    const text = textOf(reminderMail(mail))
-    return {
-      to: receiver(person),
-      send: text,
-      keep: text,
-      told: { day, content: told, isNotice: false },
-    }
-  }
-  const before = lastTold(db, person.id, day)
-  const changes = before === null ? [] : dayChanges(db, person.id, day, before, told)
-  if (changes.length === 0) return { dropped: mailNotNeeded }
-  const text = textOf(changeNoticeMail(mail, changes))
+  if (mail.bookings.length === 0) return { dropped: mailNotNeeded }
+  const text = textOf(reminderMail(mail))
   return {
     to: receiver(person),
     send: text,
     keep: text,
-    told: { day, content: told, isNotice: true },
+    told: [{ day, content: told, isReminder: true }],
+  }
+}
+
+/** The net change of a person's days as it is now; what came back since it was asked for is left out. */
+function changeNotice(db: DbOrTx, row: OutboxRow, person: ToldPerson, from: From): Rendering {
+  const days = noticePayloadSchema.parse(row.payload)
+  const firm = readFirm(db)
+  const changed = readDifferencesOf(db, firm, { personId: person.id, days, now: from.now })
+    .map((one) => ({ ...one, changes: dayChanges(db, person.id, one.day, one.before, one.after) }))
+    .filter(({ changes }) => changes.length > 0)
+  if (changed.length === 0) return { dropped: mailNotNeeded }
+  const text = textOf(
+    changeNoticeMail(
+      changed.map(({ day, after, changes, row: toldRow }) => ({
+        mail: readDayMail(db, { ...from, firm, person, day, told: after }),
+        changes,
+        isNew: toldRow === null,
+        isReminded: toldRow?.reminded === true,
+      })),
+    ),
+  )
+  return {
+    to: receiver(person),
+    send: text,
+    keep: text,
+    told: changed.map(({ day, after }) => ({ day, content: after, isReminder: false })),
   }
 }
 
@@ -118,7 +126,8 @@ export function renderMail(
     case 'invitation':
       return accountMail(db, person, { ...from, hours: invitationHours }, invitationMail)
     case 'crew-reminder':
+      return dayReminder(db, row, person, from)
     case 'change-notice':
-      return dayMail(db, row, person, from)
+      return changeNotice(db, row, person, from)
   }
 }

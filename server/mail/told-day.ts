@@ -1,8 +1,10 @@
 import { createHash } from 'node:crypto'
-import { and, asc, eq, gte, inArray, isNull } from 'drizzle-orm'
+import { and, asc, between, eq, gte, isNull } from 'drizzle-orm'
 import { z } from 'zod'
 import type { Day } from '../../shared/calendar/days.ts'
 import { instantAt } from '../../shared/calendar/local-time.ts'
+import { groupBy } from '../../shared/collections/group-by.ts'
+import { readCrewHours } from '../bookings/crew-hours.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { bookingDays, bookings, tasks } from '../db/tables/booking-tables.ts'
 import { jobs, roofRevisions } from '../db/tables/job-tables.ts'
@@ -86,17 +88,6 @@ function joinedLines(rows: (typeof tasks.$inferSelect)[]): ToldLine[] {
   return [...byKey.entries()].sort(([a], [b]) => (a < b ? -1 : 1)).map(([, line]) => line)
 }
 
-function linesOf(db: DbOrTx, bookingDayId: string): ToldLine[] {
-  return joinedLines(
-    db
-      .select()
-      .from(tasks)
-      .where(eq(tasks.bookingDayId, bookingDayId))
-      .orderBy(asc(tasks.position))
-      .all(),
-  )
-}
-
 /** Crews a person turns up with on a day; none while on leave or with the account closed. */
 export function crewsWorkedWith(db: DbOrTx, personId: string, day: Day): string[] {
   return crewIdsOf(db, personId, day).filter((crewId) =>
@@ -104,19 +95,47 @@ export function crewsWorkedWith(db: DbOrTx, personId: string, day: Day): string[
   )
 }
 
-/** What a person is to be told of a day as things stand now. */
-export function toldDayOf(db: DbOrTx, firm: Firm, personId: string, day: Day): ToldDay {
-  const crewIds = crewsWorkedWith(db, personId, day)
-  if (crewIds.length === 0) return { bookings: [] }
+type Span = { from: Day; to: Day }
+
+function readTaskRows(db: DbOrTx, span: Span): Map<string, (typeof tasks.$inferSelect)[]> {
   const rows = db
-    .select({ booking: bookings, dayId: bookingDays.id, job: jobs, letter: roofRevisions.letter })
+    .select({ task: tasks })
+    .from(tasks)
+    .innerJoin(bookingDays, eq(bookingDays.id, tasks.bookingDayId))
+    .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
+    .where(and(between(bookingDays.day, span.from, span.to), standing))
+    .orderBy(asc(tasks.position))
+    .all()
+  return groupBy(
+    rows.map(({ task }) => task),
+    (task) => task.bookingDayId,
+  )
+}
+
+function readBookedRows(db: DbOrTx, span: Span) {
+  return db
+    .select({ booking: bookings, day: bookingDays, job: jobs, letter: roofRevisions.letter })
     .from(bookingDays)
     .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
     .innerJoin(jobs, eq(jobs.id, bookings.jobId))
     .leftJoin(roofRevisions, eq(roofRevisions.id, bookingDays.revisionId))
-    .where(and(eq(bookingDays.day, day), inArray(bookings.crewId, crewIds), standing))
+    .where(and(between(bookingDays.day, span.from, span.to), standing))
     .all()
-  const told = rows.map(({ booking, dayId, job, letter }) => ({
+}
+
+export type ToldDays = {
+  /** What the person is to be told of the day as things stand now. */
+  of(personId: string, day: Day): ToldDay
+  /** Who has something on, on which days. */
+  peopleOn(): { personId: string; day: Day }[]
+}
+
+/** What everybody is to be told of the days of a span, in the same few queries for any number. */
+export function readToldDays(db: DbOrTx, firm: Firm, span: Span): ToldDays {
+  const rows = groupBy(readBookedRows(db, span), (row) => row.day.day)
+  const tasksOf = readTaskRows(db, span)
+  const hours = readCrewHours(db, span, firm)
+  const toldOf = ({ booking, day, job, letter }: ReturnType<typeof readBookedRows>[number]) => ({
     bookingId: booking.id,
     jobNumber: job.number,
     jobTitle: job.title,
@@ -125,10 +144,33 @@ export function toldDayOf(db: DbOrTx, firm: Firm, personId: string, day: Day): T
     startAt: booking.startAt ?? firm.startAt,
     gear: booking.gear,
     revision: letter,
-    lines: linesOf(db, dayId),
-  }))
+    lines: joinedLines(tasksOf.get(day.id) ?? []),
+  })
   const inOrder = (b: ToldBooking) => `${b.startAt}|${b.jobNumber}|${b.bookingId}`
-  return { bookings: told.sort((a, b) => (inOrder(a) < inOrder(b) ? -1 : 1)) }
+  return {
+    of(personId, day) {
+      const own = (rows.get(day) ?? []).filter((row) =>
+        hours.on(row.booking.crewId, day).thereIds.includes(personId),
+      )
+      return { bookings: own.map(toldOf).sort((a, b) => (inOrder(a) < inOrder(b) ? -1 : 1)) }
+    },
+    peopleOn() {
+      return [...rows].flatMap(([day, booked]) => {
+        const there = booked.flatMap((row) => hours.on(row.booking.crewId, day).thereIds)
+        return [...new Set(there)].map((personId) => ({ personId, day }))
+      })
+    },
+  }
+}
+
+/** What a person is to be told of a day as things stand now. */
+export function toldDayOf(db: DbOrTx, firm: Firm, personId: string, day: Day): ToldDay {
+  return readToldDays(db, firm, { from: day, to: day }).of(personId, day)
+}
+
+/** The day itself without its lines: until the reminder they still move from day to day. */
+export function withoutLines(told: ToldDay): ToldDay {
+  return { bookings: told.bookings.map((booking) => ({ ...booking, lines: [] })) }
 }
 
 export function toldHash(told: ToldDay): string {

@@ -63,6 +63,11 @@ export const toldDays = sqliteTable(
     pendingHash: text('pending_hash'),
     pendingSince: integer('pending_since', { mode: 'timestamp_ms' }),
     notices: integer('notices').notNull().default(0),
+    /** The day's reminder has gone, with its numbers; before that only the day itself was told. */
+    reminded: integer('reminded', { mode: 'boolean' }).notNull().default(true),
   },
-  (t) => [uniqueIndex('told_days_person').on(t.personId, t.day)],
+  (t) => [
+    uniqueIndex('told_days_person').on(t.personId, t.day),
+    index('told_days_day').on(t.day),
+  ],
 )
