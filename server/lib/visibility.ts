@@ -12,6 +12,7 @@ import type { CurrentUser } from '../auth/current-user.ts'
 import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
 import { jobs } from '../db/tables/job-tables.ts'
 import type { Firm } from '../firm/firm-store.ts'
+import { countsForCrew } from '../people/counts-for-crew.ts'
 
 /** The last day an apprentice may see: the next worked day once its reminder has gone, today before. */
 export function lastRemindedDay(firm: Firm, now: Date): Day {
@@ -20,10 +21,9 @@ export function lastRemindedDay(firm: Firm, now: Date): Day {
   return workedDaysFrom(firm, dayPlus(today, 1), 1)[0] ?? today
 }
 
-const memberThatDay = (user: CurrentUser) => sql`exists (
-  select 1 from crew_members cm
-  where cm.crew_id = ${bookings.crewId} and cm.person_id = ${user.id}
-    and cm.starts_on <= ${bookingDays.day} and (cm.ends_on is null or cm.ends_on >= ${bookingDays.day}))`
+/** The user counts for the booking's crew that day: borrowed by it, or its member and not borrowed by another. */
+const memberThatDay = (user: CurrentUser) =>
+  countsForCrew(user.id, bookings.crewId, bookingDays.day)
 
 /**
  * The condition under which a user may see a booking day under a permission; goes into the WHERE of a

@@ -1,52 +1,56 @@
-import { and, asc, eq, gte, isNull, lte, or } from 'drizzle-orm'
+import { and, asc, eq, gte, lte, sql } from 'drizzle-orm'
+import type { Role } from '../../shared/auth/roles.ts'
 import type { Day } from '../../shared/calendar/days.ts'
+import { isAwayOn } from '../../shared/people/leave-days.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { crewMembers, leave, people } from '../db/tables/people-tables.ts'
-
-const memberOn = (day: Day) =>
-  and(lte(crewMembers.startsOn, day), or(isNull(crewMembers.endsOn), gte(crewMembers.endsOn, day)))
+import { crews, leave, people } from '../db/tables/people-tables.ts'
+import { countsForCrew } from './counts-for-crew.ts'
 
 export type RosteredPerson = {
   id: string
   name: string
   email: string
   phone: string
-  role: 'office' | 'leading-hand' | 'apprentice'
+  role: Role
+  /** Own ordinary hours Monday to Sunday; null: the firm's. */
+  weekHours: number[] | null
   onLeave: boolean
 }
 
-/** Active members of a crew on a day, those on leave marked; by name. */
+/** Active people who count for a crew on a day, borrowed ones too, those on leave marked; by name. */
 export function rosterOf(db: DbOrTx, crewId: string, day: Day): RosteredPerson[] {
   const rows = db
-    .selectDistinct({
+    .select({
       id: people.id,
       name: people.name,
       email: people.email,
       phone: people.phone,
       role: people.role,
-      leaveId: leave.id,
+      weekHours: people.weekHours,
+      leave: { startsOn: leave.startsOn, endsOn: leave.endsOn, weekdays: leave.weekdays },
     })
-    .from(crewMembers)
-    .innerJoin(people, and(eq(people.id, crewMembers.personId), eq(people.active, true)))
+    .from(people)
     .leftJoin(
       leave,
       and(eq(leave.personId, people.id), lte(leave.startsOn, day), gte(leave.endsOn, day)),
     )
-    .where(and(eq(crewMembers.crewId, crewId), memberOn(day)))
+    .where(and(eq(people.active, true), countsForCrew(people.id, crewId, day)))
     .orderBy(asc(people.name))
     .all()
   const byId = new Map<string, RosteredPerson>()
-  for (const { leaveId, ...person } of rows)
-    byId.set(person.id, { ...person, onLeave: leaveId !== null })
+  for (const { leave: span, ...person } of rows) {
+    const onLeave = byId.get(person.id)?.onLeave === true || (span !== null && isAwayOn(span, day))
+    byId.set(person.id, { ...person, onLeave })
+  }
   return [...byId.values()]
 }
 
-/** Crews a person belongs to on a day. */
+/** Crews a person counts for on a day: the one that has borrowed the person, else the own. */
 export function crewIdsOf(db: DbOrTx, personId: string, day: Day): string[] {
   return db
-    .selectDistinct({ crewId: crewMembers.crewId })
-    .from(crewMembers)
-    .where(and(eq(crewMembers.personId, personId), memberOn(day)))
+    .select({ crewId: crews.id })
+    .from(crews)
+    .where(sql`${countsForCrew(personId, crews.id, day)}`)
     .all()
     .map((row) => row.crewId)
 }

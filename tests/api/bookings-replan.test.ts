@@ -169,7 +169,11 @@ test('the hours of a crew agree with its roster on every day of a span', async (
   db.insert(leave)
     .values({ id: newId(), personId: firm.people.lead.id, startsOn: thu, endsOn: fri })
     .run()
-  const hours = readCrewHours(db, { from: wed, to: mon }, { hoursPerDay: 7.6 })
+  const hours = readCrewHours(
+    db,
+    { from: wed, to: mon },
+    { hoursPerDay: 7.6, workingWeekdays: [1, 2, 3, 4, 5], weekHours: null },
+  )
   for (const day of [wed, thu, fri, mon]) {
     const roster = rosterOf(db, firm.crew.id, day)
     const there = roster.filter((p) => !p.onLeave)
