@@ -11,7 +11,7 @@ import {
   hipBuilding,
   INCH_MM,
 } from '../support/hip-building.ts'
-import { creepersOn, hipFrom, planeOfEdge } from '../support/members.ts'
+import { creepersOn, cutsAt, hipFrom, planeOfEdge } from '../support/members.ts'
 import { misfits } from '../support/misfits.ts'
 import { convexReferences, referenceRoof } from '../support/roofs.ts'
 
@@ -195,13 +195,15 @@ describe('octagonal end', () => {
     const hipSection = { thicknessMm: 2 * INCH_MM, depthMm: 190 }
     const rafter = { thicknessMm: 45, depthMm: 140 }
     const sections = { rafter, hip: hipSection, valley: hipSection, ridge: hipSection }
-    const { hip, commonRunMm } = octagonal(degOfRise(8, 12), { hipTop: 'lowered', sections })
+    const built = octagonal(degOfRise(8, 12), { hipTop: 'lowered', sections })
+    const { hip, creeper, commonRunMm } = built
     const setBack = hip.dropMm / tanDeg(hip.pitchDeg)
     expect(
       misfits([
         ['hip run in 12', (hip.runMm / commonRunMm) * 12, 13, 0.05],
         // Level set-back of the arris; 5/12 stands for tan 22.5° = 4.97/12.
         ['backing over half thickness', (setBack / INCH_MM) * 12, 5, 0.05],
+        ['tangent on 12, in plan', 12 / tanDeg(cutsAt(creeper, 'head')[0]!.bladeTiltDeg), 5, 0.05],
       ]),
     ).toEqual([])
   })

@@ -9,7 +9,7 @@ import {
   hipBuilding,
   INCH_MM,
 } from '../support/hip-building.ts'
-import { misfits } from '../support/misfits.ts'
+import { misfits, type Row } from '../support/misfits.ts'
 import { makeRoof } from '../support/roofs.ts'
 import { frameRoof } from '../../../shared/roof/frame-roof.ts'
 
@@ -87,6 +87,33 @@ describe('common rafters', () => {
     const { common } = hipBuilding(degOfRise(rise, 1), number('inputs.run_in') * INCH_MM)
     expect(
       misfits([['length', inch(common.setOutLengthMm), number('results.length_in'), TWELFTH_IN]]),
+    ).toEqual([])
+  })
+
+  // F.T. Hodgson, ABC of the Steel Square: printed for braces; a rafter of that run and rise is as long.
+  test.each([
+    ['hodgson-brace-36-36', 36, 36, 'results.length_in', 0.005],
+    ['hodgson-brace-24-18', 24, 18, 'results.length', 0.0001],
+  ] as const)('%s: a brace %d by %d', (id, run, rise, result, tolerance) => {
+    const { common } = hipBuilding(degOfRise(rise, run), run * INCH_MM)
+    const printed = example(id).number(result)
+    expect(misfits([['length', inch(common.setOutLengthMm), printed, tolerance]])).toEqual([])
+  })
+
+  test('quarter pitch over a run of 151 in: twelve steps and a part of one (I.S. Griffith, Carpentry, sec. 23)', () => {
+    const { number } = example('griffith-stepoff-fraction')
+    const rise = 2 * number('inputs.pitch_rise_over_span')
+    const { common, hip } = hipBuilding(degOfRise(rise, 1), number('inputs.run_in') * INCH_MM)
+    const steps = number('results.whole_steps')
+    const last = [number('results.last_step_run_in'), number('results.last_step_rise_in')] as const
+    const stepped = steps * Math.hypot(12, 12 * rise) + Math.hypot(...last)
+    expect(
+      misfits([
+        ['length stepped off', inch(common.setOutLengthMm), stepped, 0.0001],
+        ['rise stepped off', inch(common.riseMm), steps * 12 * rise + last[1], 0.0001],
+        // 9 11/12 in: the book has 17 to the foot for 16.97, and reads to twelfths.
+        ['last step of the hip', (hip.runMm / common.runMm) * last[0], 9 + 11 / 12, TWELFTH_IN / 2],
+      ]),
     ).toEqual([])
   })
 
@@ -213,14 +240,20 @@ test('ready reckoner worked at 0.7 rise, called 35° (reprinted TRADA Timber 202
     const [first, second] = built.sideCreepers
     const out = first!.setOutLengthMm - second!.setOutLengthMm
     const printed = number(`results.jack_difference_mm.${centres}`)
-    return [`creepers at ${centres}`, out, printed, 0.5] as [string, number, number, number]
+    return [`creepers at ${centres}`, out, printed, 0.5] as Row
   })
   // Blade and tongue lengths on the square: the page is good to ±1 mm.
   expect(
     misfits([
-      ['rafter', common.setOutLengthMm / common.runMm, number('results.rafter_per_run.1'), 0.00006],
-      // The page cuts 1.57797 short to 1.5779.
-      ['hip', hip.setOutLengthMm / common.runMm, number('results.hip_per_run.1'), 0.0001],
+      // The page cuts its last digit short: 1.57797 to 1.5779, 12.2066 to 12.206.
+      ...[1, 4, 10].flatMap((run): Row[] => {
+        const unit = run === 10 ? 0.001 : 0.0001
+        const [rafterMm, hipMm] = [common.setOutLengthMm * run, hip.setOutLengthMm * run]
+        return [
+          [`rafter ${run}`, rafterMm / common.runMm, number(`results.rafter_per_run.${run}`), unit],
+          [`hip ${run}`, hipMm / common.runMm, number(`results.hip_per_run.${run}`), unit],
+        ]
+      }),
       ['hip plumb', square(1 / faceTan(hip), 424), 210, 1],
       ['hip edge', square(edgeTan(hip), 300), 269, 1],
       ['hip backing', square(backingTan, 300), 134, 1],

@@ -2,6 +2,7 @@ import { describe, expect, test } from 'vitest'
 
 import corners from '../../fixtures/corners.json' with { type: 'json' }
 import type { Cut, FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
+import { example } from '../support/handbook.ts'
 import { byMark, planeOfEdge } from '../support/members.ts'
 import { makeRoof } from '../support/roofs.ts'
 import { cos, deg, framed, membersOf, rad, rectangle, sin, tan, withSizes } from './sized.ts'
@@ -120,4 +121,14 @@ test('7 in 12 and 9 in 12 at a corner of 135°: the purlin’s edge bevel as pri
   const spec = framed(sized(hipHouse(given)), settings)
   const cut = cutAgainst(spec, 0, 'hip', 1)
   expect(cut.edge.fromSquareDeg).toBeCloseTo(4.93408, 4)
+})
+
+test('0.7 rise, called 35°: purlin cuts of the ready reckoner (reprinted TRADA Timber 2020 Yearbook, p. 169)', () => {
+  // Source: tests/fixtures/handbook.json, rrr-35deg: purlin plumb cut 300 : 172, purlin edge cut 300 : 245,
+  // blade and tongue on a square, good to 1 mm.
+  example('rrr-35deg') // results.square_blade_tongue
+  const roof = sized(makeRoof(rectangle(12_000, 8000), Array(4).fill(deg(Math.atan(0.7)))))
+  const cut = cutAgainst(framed(roof, settings), 0, 'hip', 1)
+  expect(Math.abs(300 / tan(cut.face.fromEdgeDeg) - 172)).toBeLessThan(1)
+  expect(Math.abs(300 / tan(cut.edge.fromEdgeDeg) - 245)).toBeLessThan(1)
 })
