@@ -1,4 +1,6 @@
 import { z } from 'zod'
+import { longestClosureDays } from '../calendar/closures.ts'
+import { daysBetween } from '../calendar/days.ts'
 import { isTimeZone } from '../calendar/local-time.ts'
 import {
   daySchema,
@@ -7,6 +9,7 @@ import {
   timeOfDaySchema,
   versionSchema,
 } from '../http/fields.ts'
+import { countryCodeSchema, stateCodeSchema } from './holiday-schemas.ts'
 
 const minutes = z
   .number()
@@ -54,6 +57,23 @@ export const firmRoofSettingsSchema = z.strictObject({
   collarTieSpacingMm: within(300, 3000, 'the widest spacing of collar ties in mm').default(1200),
 })
 
+const dayHours = within(0, 14, 'the hours of each weekday')
+
+const closureSchema = z
+  .strictObject({
+    day: daySchema,
+    lastDay: daySchema.nullish(),
+    name: lineSchema(60, { required: 'Say why it is closed.' }),
+  })
+  .refine(({ day, lastDay }) => !lastDay || lastDay >= day, {
+    path: ['lastDay'],
+    message: 'The last day is before the first.',
+  })
+  .refine(({ day, lastDay }) => !lastDay || daysBetween(day, lastDay) < longestClosureDays, {
+    path: ['lastDay'],
+    message: `A closure is ${longestClosureDays} days long at most.`,
+  })
+
 const firmFields = {
   name: lineSchema(80, { required: 'Give the firm’s name.' }),
   phone: phoneSchema,
@@ -65,14 +85,11 @@ const firmFields = {
   startAt: timeOfDaySchema,
   hoursPerDay: within(1, 14, 'hours a day'),
   workingWeekdays: z.array(z.number().int().min(1).max(7)).min(1, 'Tick at least one day.').max(7),
-  closedDays: z
-    .array(
-      z.strictObject({
-        day: daySchema,
-        name: lineSchema(60, { required: 'Say why it is closed.' }),
-      }),
-    )
-    .max(200),
+  weekHours: z.array(dayHours).length(7).nullable(),
+  ownClosedDays: z.array(closureSchema).max(200),
+  holidayCountry: countryCodeSchema.nullable(),
+  holidayState: stateCodeSchema.nullable(),
+  holidaysWorked: z.array(lineSchema(120)).max(60),
   brickOffsetMm: within(0, 500, 'the brickwork’s offset in mm'),
   lengthUnits: z.enum(['mm', 'feet-inches']),
   roofSettings: firmRoofSettingsSchema,

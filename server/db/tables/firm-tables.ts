@@ -1,4 +1,5 @@
 import { integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
+import type { Closure } from '../../../shared/calendar/closures.ts'
 import type { LabourRates } from '../../../shared/labour/labour-rates.ts'
 import type { RoofSettings } from '../../../shared/roof/roof-types.ts'
 
@@ -18,9 +19,8 @@ export const firm = sqliteTable('firm', {
   weekHours: text('week_hours', { mode: 'json' }).$type<number[]>(),
   /** ISO weekdays worked, 1 = Monday. */
   workingWeekdays: text('working_weekdays', { mode: 'json' }).$type<number[]>().notNull(),
-  closedDays: text('closed_days', { mode: 'json' })
-    .$type<{ day: string; name: string }[]>()
-    .notNull(),
+  /** The firm's own; public holidays come to them in `readFirm`. */
+  closedDays: text('closed_days', { mode: 'json' }).$type<Closure[]>().notNull(),
   /** ISO 3166 country and its state, whose public holidays are not worked; null: none are looked up. */
   holidayCountry: text('holiday_country'),
   holidayState: text('holiday_state'),

@@ -1,57 +1,118 @@
 import { useState } from 'react'
-import { formatDayWithYear } from '../../../shared/calendar/days.ts'
-import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
+import { formatDay, formatDayWithYear } from '../../../shared/calendar/days.ts'
+import type { Closure } from '../../../shared/calendar/closures.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
 import { TextInput } from '../../ui/inputs.tsx'
+import { useToast } from '../../ui/toast.tsx'
 
-type Closed = FirmSettings['closedDays']
+type Props = {
+  closures: Closure[]
+  onChange: (closures: Closure[]) => void
+  issueAt: (path: string) => string | undefined
+}
 
-/** Public holidays and the firm's own shut days. */
-export function ClosedDays({ days, onChange }: { days: Closed; onChange: (days: Closed) => void }) {
-  const [day, setDay] = useState('')
-  const [name, setName] = useState('')
-  const ready = day !== '' && name.trim() !== ''
+const none = { day: '', lastDay: '', name: '' }
+
+function spanWords({ day, lastDay }: Closure): string {
+  if (!lastDay || lastDay === day) return formatDayWithYear(day)
+  const isSameYear = day.slice(0, 4) === lastDay.slice(0, 4)
+  return `${isSameYear ? formatDay(day) : formatDayWithYear(day)} to ${formatDayWithYear(lastDay)}`
+}
+
+const inOrder = (closures: Closure[]) =>
+  [...closures].sort((a, b) => a.day.localeCompare(b.day) || a.name.localeCompare(b.name))
+
+function AddClosure({ onAdd }: { onAdd: (closure: Closure) => void }) {
+  const [typed, setTyped] = useState(none)
+  const isBackwards = typed.lastDay !== '' && typed.lastDay < typed.day
+  const ready = typed.day !== '' && typed.name.trim() !== '' && !isBackwards
+  const set = (change: Partial<typeof none>) => setTyped((now) => ({ ...now, ...change }))
   const add = () => {
-    const others = days.filter((each) => each.day !== day)
-    onChange([...others, { day, name: name.trim() }].sort((a, b) => a.day.localeCompare(b.day)))
-    setDay('')
-    setName('')
+    const { day, lastDay, name } = typed
+    onAdd({ day, lastDay: lastDay || null, name: name.trim() })
+    setTyped(none)
+  }
+  return (
+    <div className="grid gap-3 sm:grid-cols-[1fr_1fr_2fr_auto] sm:items-start">
+      <Field label="First day">
+        <TextInput
+          type="date"
+          value={typed.day}
+          onChange={(event) => set({ day: event.target.value })}
+        />
+      </Field>
+      <Field
+        label="Last day"
+        hint="If it is more than one."
+        error={isBackwards ? 'Before the first day.' : undefined}
+      >
+        <TextInput
+          type="date"
+          value={typed.lastDay}
+          min={typed.day}
+          onChange={(event) => set({ lastDay: event.target.value })}
+        />
+      </Field>
+      <Field label="Why">
+        <TextInput
+          value={typed.name}
+          maxLength={60}
+          onChange={(event) => set({ name: event.target.value })}
+        />
+      </Field>
+      <Button kind="plain" className="sm:mt-7" disabled={!ready} onClick={add}>
+        Add
+      </Button>
+    </div>
+  )
+}
+
+/** The firm's own shut days: a show day, a Christmas break. */
+export function ClosedDays({ closures, onChange, issueAt }: Props) {
+  const toast = useToast()
+  const takeOut = (closure: Closure) => {
+    const rest = closures.filter((other) => other !== closure)
+    onChange(rest)
+    toast(`${closure.name} taken out. Save the settings to keep that.`, {
+      undo: () => onChange(inOrder([...rest, closure])),
+    })
   }
   return (
     <div className="space-y-3">
-      {days.length === 0 ? <p className="text-ink-soft">No closed days yet.</p> : null}
-      <ul className="space-y-1">
-        {days.map((each) => (
-          <li key={each.day} className="flex items-center justify-between gap-3">
+      {closures.length === 0 ? (
+        <p className="text-ink-soft">
+          None yet. A Christmas break goes in once, first to last day.
+        </p>
+      ) : null}
+      <ul>
+        {closures.map((closure, i) => (
+          <li
+            key={`${closure.day} ${closure.name}`}
+            className="flex flex-wrap items-center justify-between gap-x-3"
+          >
             <span>
-              {formatDayWithYear(each.day)} · {each.name}
+              {spanWords(closure)} · {closure.name}
+              {['lastDay', 'name', 'day'].map((key) => {
+                const issue = issueAt(`ownClosedDays.${i}.${key}`)
+                return issue ? (
+                  <span key={key} role="alert" className="block text-sm font-semibold text-stop">
+                    {issue}
+                  </span>
+                ) : null
+              })}
             </span>
             <Button
               kind="quiet"
-              aria-label={`Take out ${each.name}`}
-              onClick={() => onChange(days.filter((other) => other.day !== each.day))}
+              aria-label={`Take out ${closure.name}`}
+              onClick={() => takeOut(closure)}
             >
               Take out
             </Button>
           </li>
         ))}
       </ul>
-      <div className="grid gap-3 sm:grid-cols-[1fr_2fr_auto] sm:items-end">
-        <Field label="Day">
-          <TextInput type="date" value={day} onChange={(event) => setDay(event.target.value)} />
-        </Field>
-        <Field label="Why">
-          <TextInput
-            value={name}
-            maxLength={60}
-            onChange={(event) => setName(event.target.value)}
-          />
-        </Field>
-        <Button kind="plain" disabled={!ready} onClick={add}>
-          Add day
-        </Button>
-      </div>
+      <AddClosure onAdd={(closure) => onChange(inOrder([...closures, closure]))} />
     </div>
   )
 }

@@ -1,5 +1,13 @@
 import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
 
+export type FirmSectionProps = {
+  firm: FirmSettings
+  onChange: (firm: FirmSettings) => void
+  issueAt: (path: string) => string | undefined
+}
+
+export const gridClass = 'grid gap-3 sm:grid-cols-2 xl:grid-cols-3'
+
 export type NumberField<Key extends string> = {
   key: Key
   label: string

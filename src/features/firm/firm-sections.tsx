@@ -1,18 +1,10 @@
-import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
 import { Card } from '../../ui/card.tsx'
 import { Field } from '../../ui/field.tsx'
-import { Checkbox, Select, TextInput } from '../../ui/inputs.tsx'
-import { ClosedDays } from './closed-days.tsx'
-import { roofFields, weekdays } from './firm-fields.ts'
+import { Select, TextInput } from '../../ui/inputs.tsx'
+import { type FirmSectionProps as Props, gridClass, roofFields } from './firm-fields.ts'
 import { NumberInput } from './number-input.tsx'
-
-type Props = {
-  firm: FirmSettings
-  onChange: (firm: FirmSettings) => void
-  issueAt: (path: string) => string | undefined
-}
-
-const gridClass = 'grid gap-3 sm:grid-cols-2 xl:grid-cols-3'
+import { PublicHolidays } from './public-holidays.tsx'
+import { WorkingDays } from './working-days.tsx'
 
 // Zones with an airport's city in them only; the list comes from the browser itself.
 const timeZones = Intl.supportedValuesOf('timeZone').filter((zone) => zone.includes('/'))
@@ -71,48 +63,11 @@ function FirmDetails({ firm, onChange, issueAt }: Props) {
   )
 }
 
-function DaysAndReminders({ firm, onChange, issueAt }: Props) {
-  const toggle = (weekday: number) => {
-    const has = firm.workingWeekdays.includes(weekday)
-    const days = has
-      ? firm.workingWeekdays.filter((each) => each !== weekday)
-      : [...firm.workingWeekdays, weekday]
-    onChange({ ...firm, workingWeekdays: days.sort() })
-  }
+function Reminders({ firm, onChange, issueAt }: Props) {
   return (
     <Card>
-      <h2 className="mb-3 text-lg font-extrabold">Days and reminders</h2>
-      <fieldset className="mb-3">
-        <legend className="font-semibold">Days worked</legend>
-        <div className="flex flex-wrap gap-x-5">
-          {weekdays.map((name, index) => (
-            <Checkbox
-              key={name}
-              label={name}
-              checked={firm.workingWeekdays.includes(index + 1)}
-              onChange={() => toggle(index + 1)}
-            />
-          ))}
-        </div>
-        {issueAt('workingWeekdays') ? (
-          <p className="text-sm font-semibold text-stop">{issueAt('workingWeekdays')}</p>
-        ) : null}
-      </fieldset>
+      <h2 className="mb-3 text-lg font-extrabold">Reminders and changes</h2>
       <div className={gridClass}>
-        <Field label="Work starts at" error={issueAt('startAt')}>
-          <TextInput
-            type="time"
-            value={firm.startAt}
-            onChange={(event) => onChange({ ...firm, startAt: event.target.value })}
-          />
-        </Field>
-        <NumberInput
-          label="Hours a day, each person"
-          unit="h"
-          value={firm.hoursPerDay}
-          onChange={(hoursPerDay) => onChange({ ...firm, hoursPerDay })}
-          error={issueAt('hoursPerDay')}
-        />
         <Field
           label="Reminders go at"
           hint="On the working day before."
@@ -133,11 +88,6 @@ function DaysAndReminders({ firm, onChange, issueAt }: Props) {
           error={issueAt('changeHoldMinutes')}
         />
       </div>
-      <h3 className="mb-2 mt-5 font-extrabold">Closed days</h3>
-      <ClosedDays
-        days={firm.closedDays}
-        onChange={(closedDays) => onChange({ ...firm, closedDays })}
-      />
     </Card>
   )
 }
@@ -168,7 +118,9 @@ export function FirmSections(props: Props) {
   return (
     <>
       <FirmDetails {...props} />
-      <DaysAndReminders {...props} />
+      <WorkingDays {...props} />
+      <PublicHolidays {...props} />
+      <Reminders {...props} />
       <RoofDefaults {...props} />
     </>
   )
