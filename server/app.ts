@@ -26,7 +26,10 @@ import { createRevisionService } from './revisions/revision-service.ts'
 import type { Clock } from './lib/clock.ts'
 import { messageRoutes } from './messages/message-routes.ts'
 import { milestoneRoutes } from './milestones/milestone-routes.ts'
+import { noticeRoutes } from './notices/notice-routes.ts'
 import { peopleRoutes } from './people/people-routes.ts'
+import { ticketRoutes } from './people/ticket-routes.ts'
+import { rainOffRoutes } from './rain-offs/rain-off-routes.ts'
 
 export type AppDeps = {
   env: Env
@@ -90,11 +93,14 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   eventRoutes(api, deps.events, (req) => isStillSignedIn(deps, req))
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
+  rainOffRoutes(api, deps)
   messageRoutes(api, deps)
+  noticeRoutes(api, deps)
   revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
   jobRoutes(api, { db, clock, events: deps.events })
   milestoneRoutes(api, deps)
   peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
+  ticketRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })
 }
 

@@ -47,15 +47,14 @@ export function spreadDays(
   slots: Slots,
   wanted: (day: Day) => Day | null,
 ): Map<Day, Day> | null {
-  const places = new Map<Day, Day>()
-  let last: Day | null = null
+  const places: Day[] = []
   for (const day of days) {
     const alone = wanted(day)
-    const place: Day | null =
-      alone === null || last === null || alone > last ? alone : slotAfter(slots, last, 1)
+    const last = places[places.length - 1]
+    const isFree = alone === null || last === undefined || alone > last
+    const place = isFree ? alone : slotAfter(slots, last, 1)
     if (place === null) return null
-    places.set(day, place)
-    last = place
+    places.push(place)
   }
-  return places
+  return new Map(days.map((day, i) => [day, places[i] ?? day]))
 }
