@@ -7,6 +7,7 @@ import { authRoutes } from './auth/auth-routes.ts'
 import { replanUpcoming, takeRevision } from './bookings/replan.ts'
 import { bookingRoutes } from './bookings/booking-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
+import { clashRoutes } from './clashes/clash-routes.ts'
 import { isStillSignedIn, loadUser, longestSessionMs, sessionCookieName } from './auth/session.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
@@ -99,6 +100,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
   jobRoutes(api, { db, clock, events: deps.events })
   milestoneRoutes(api, deps)
+  clashRoutes(api, deps)
   peopleRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   ticketRoutes(api, { db, clock, events: deps.events, replanUpcoming })
   firmRoutes(api, { db, clock, events: deps.events, replanUpcoming })

@@ -33,6 +33,7 @@ export function enqueueNotice(
   db: DbOrTx,
   differences: readonly DayDifference[],
   now: Date,
+  options: { evenFailed?: boolean } = {},
 ): boolean {
   const [first] = differences
   if (!first) return false
@@ -40,16 +41,17 @@ export function enqueueNotice(
   if (!person?.active || person.email === '') return false
   const round = (one: DayDifference) => `${one.day}:${(one.row?.notices ?? 0) + 1}`
   const days = differences.map((one) => one.day)
-  return enqueueOrRevive(db, {
+  const mail = {
     key: `change:${person.id}:${differences.map(round).join('+')}`,
-    kind: 'change-notice',
+    kind: 'change-notice' as const,
     personId: person.id,
     toName: person.name,
     toEmail: person.email,
     payload: { day: days[0], days },
     now,
     notAfter: new Date(Math.max(...differences.map((one) => one.until.getTime()))),
-  })
+  }
+  return enqueueOrRevive(db, mail, options)
 }
 
 /** Marks what is seen for the first time; says which have settled for as long as the firm holds them. */

@@ -1,4 +1,4 @@
-import { and, asc, eq, lte } from 'drizzle-orm'
+import { and, asc, eq, inArray, lte } from 'drizzle-orm'
 import type { DbOrTx } from '../db/client.ts'
 import { outbox } from '../db/tables/mail-tables.ts'
 import { newId } from '../lib/ids.ts'
@@ -40,15 +40,20 @@ export function enqueueMail(db: DbOrTx, mail: MailToSend): boolean {
 
 /**
  * As `enqueueMail`, and a mail of this key that was dropped as not needed waits again: a day booked, taken
- * off and booked once more still has its reminder. True when a mail now waits that did not before.
+ * off and booked once more still has its reminder. `evenFailed`: one that was given up waits again too. True when a mail now waits that did not before.
  */
-export function enqueueOrRevive(db: DbOrTx, mail: MailToSend): boolean {
+export function enqueueOrRevive(
+  db: DbOrTx,
+  mail: MailToSend,
+  { evenFailed = false }: { evenFailed?: boolean } = {},
+): boolean {
   if (enqueueMail(db, mail)) return true
   const notAfter = mail.notAfter ?? null
+  const revivable: OutboxRow['state'][] = evenFailed ? ['dropped', 'failed'] : ['dropped']
   const revived = db
     .update(outbox)
     .set({ state: 'waiting', attempts: 0, notBefore: mail.now, notAfter, lastError: null })
-    .where(and(eq(outbox.key, mail.key), eq(outbox.state, 'dropped')))
+    .where(and(eq(outbox.key, mail.key), inArray(outbox.state, revivable)))
     .run()
   if (revived.changes === 1) return true
   db.update(outbox)

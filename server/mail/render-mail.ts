@@ -8,6 +8,7 @@ import { people } from '../db/tables/people-tables.ts'
 import { readFirm } from '../firm/firm-store.ts'
 import { dayChanges } from './day-changes.ts'
 import { readDayMail } from './day-mail.ts'
+import { noticeDays } from './notice-days.ts'
 import type { OutboxRow } from './outbox-store.ts'
 import {
   type AccountMailInput,
@@ -37,10 +38,6 @@ export type ToldToPerson = { day: string; content: ToldDay; isReminder: boolean 
 export type Rendering = RenderedMail | { dropped: string }
 
 const dayPayloadSchema = z.object({ day: daySchema })
-/** A notice stored by an older version names one day. */
-const noticePayloadSchema = z
-  .object({ day: daySchema, days: z.array(daySchema).optional() })
-  .transform(({ day, days }) => days ?? [day])
 
 function textOf(document: MailDocument): MailText {
   return { subject: document.subject, text: mailText(document), html: mailHtml(document) }
@@ -86,7 +83,7 @@ function dayReminder(db: DbOrTx, row: OutboxRow, person: ToldPerson, from: From)
 
 /** The net change of a person's days as it is now; what came back since it was asked for is left out. */
 function changeNotice(db: DbOrTx, row: OutboxRow, person: ToldPerson, from: From): Rendering {
-  const days = noticePayloadSchema.parse(row.payload)
+  const days = noticeDays(row.payload)
   const firm = readFirm(db)
   const changed = readDifferencesOf(db, firm, { personId: person.id, days, now: from.now })
     .map((one) => ({ ...one, changes: dayChanges(db, person.id, one.day, one.before, one.after) }))

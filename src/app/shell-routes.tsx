@@ -41,13 +41,25 @@ export const shellRoutes: RouteObject[] = [
   {
     path: 'calendar',
     lazy: async () => ({
-      Component: (await import('../features/calendar/calendar-page.tsx')).CalendarPage,
+      Component: (await import('./calendar-screen.tsx')).CalendarScreen,
     }),
     children: [
       {
         path: 'book',
         lazy: async () => ({
           Component: (await import('../features/calendar/book-panel.tsx')).BookPanel,
+        }),
+      },
+      {
+        path: 'not-told',
+        lazy: async () => ({
+          Component: (await import('../features/notices/not-told-panel.tsx')).NotToldPanel,
+        }),
+      },
+      {
+        path: 'rain-off',
+        lazy: async () => ({
+          Component: (await import('../features/rain-offs/rain-off-panel.tsx')).RainOffPanel,
         }),
       },
       {
@@ -95,7 +107,13 @@ export const shellRoutes: RouteObject[] = [
   {
     path: 'today',
     lazy: async () => ({
-      Component: (await import('../features/today/today-page.tsx')).TodayPage,
+      Component: (await import('./today-screen.tsx')).TodayScreen,
+    }),
+  },
+  {
+    path: 'today/rain-off',
+    lazy: async () => ({
+      Component: (await import('../features/rain-offs/ask-rain-off-page.tsx')).AskRainOffPage,
     }),
   },
   {

@@ -4,13 +4,13 @@ import { type LiveEvent, liveEventSchema } from '../../shared/events/live-event.
 
 /** First part of the query keys that a topic makes stale; a feature's `all()` key is its topic. */
 const keysByTopic: Record<LiveEvent['topic'], readonly string[]> = {
-  jobs: ['jobs', 'calendar', 'day-sheet'],
-  roof: ['roof', 'jobs', 'calendar', 'day-sheet'],
-  calendar: ['calendar', 'jobs', 'day-sheet'],
+  jobs: ['jobs', 'calendar', 'day-sheet', 'notices'],
+  roof: ['roof', 'jobs', 'calendar', 'day-sheet', 'notices'],
+  calendar: ['calendar', 'jobs', 'day-sheet', 'notices'],
   'day-sheet': ['day-sheet', 'calendar'],
-  messages: ['messages'],
-  people: ['people', 'calendar', 'day-sheet'],
-  firm: ['firm', 'session', 'calendar', 'day-sheet'],
+  messages: ['messages', 'notices'],
+  people: ['people', 'calendar', 'day-sheet', 'notices'],
+  firm: ['firm', 'session', 'calendar', 'day-sheet', 'notices'],
 }
 
 function refresh(client: QueryClient, topic: LiveEvent['topic']): void {

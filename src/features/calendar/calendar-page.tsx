@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { ChevronLeft, ChevronRight, Plus } from 'lucide-react'
+import type { ReactNode } from 'react'
 import { Link, Outlet, useNavigate, useSearchParams } from 'react-router-dom'
 import { useMay } from '../../lib/session.ts'
 import { Button, buttonClass } from '../../ui/button.tsx'
@@ -101,8 +102,15 @@ function Unbooked({ isNarrow }: { isNarrow: boolean }) {
   )
 }
 
+type Props = {
+  /** What other features count beside it. */
+  waiting?: ReactNode
+  /** What other features say above it. */
+  above?: ReactNode
+}
+
 /** The wall planner: who is on which roof, day by day. */
-export function CalendarPage() {
+export function CalendarPage({ waiting, above }: Props) {
   const isNarrow = useNarrow()
   const mayEdit = useMay('booking:write')
   const navigate = useNavigate()
@@ -119,14 +127,18 @@ export function CalendarPage() {
       <PageHeader
         title="Calendar"
         actions={
-          mayEdit ? (
-            <Link className={buttonClass()} to={`/calendar/book${searchWith(search, {})}`}>
-              <Plus size={20} aria-hidden />
-              Book a crew
-            </Link>
-          ) : null
+          <>
+            {waiting}
+            {mayEdit ? (
+              <Link className={buttonClass()} to={`/calendar/book${searchWith(search, {})}`}>
+                <Plus size={20} aria-hidden />
+                Book a crew
+              </Link>
+            ) : null}
+          </>
         }
       />
+      {above}
       <div
         className={mayEdit && !isNarrow ? 'gap-5 xl:grid xl:grid-cols-[minmax(0,1fr)_17rem]' : ''}
       >

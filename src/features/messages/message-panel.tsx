@@ -6,6 +6,7 @@ import type { MessageDetail } from '../../../shared/messages/message-schemas.ts'
 import { kindWords } from '../../../shared/messages/message-words.ts'
 import { failureText } from '../../lib/failure-text.ts'
 import { useMay, useSession } from '../../lib/session.ts'
+import { smsHref } from '../../lib/sms-link.ts'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { Segmented } from '../../ui/segmented.tsx'
@@ -15,11 +16,6 @@ import { useToast } from '../../ui/toast.tsx'
 import { messageQueries, useTryAgain } from './message-queries.ts'
 import { MessageStateBadge } from './message-state-badge.tsx'
 import { messageTitle, momentWords } from './message-times.ts'
-
-/** Opens the phone's own messages with the words in place (RFC 5724; the body as both kinds of phone read it). */
-function smsHref({ phone, words }: { phone: string; words: string }): string {
-  return `sms:${phone.replaceAll(/[^0-9+]/g, '')}?body=${encodeURIComponent(words)}`
-}
 
 function Facts({ message, timeZone }: { message: MessageDetail; timeZone: string }) {
   const facts: [string, string | null][] = [
