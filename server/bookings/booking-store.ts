@@ -1,7 +1,8 @@
 import { and, asc, eq, inArray } from 'drizzle-orm'
 import type { Day } from '../../shared/calendar/days.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { bookingDays, bookings, tasks, ticks } from '../db/tables/booking-tables.ts'
+import { isWorkedDay } from '../day-logs/worked-days.ts'
+import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
 import { jobs } from '../db/tables/job-tables.ts'
 import { crews } from '../db/tables/people-tables.ts'
 import { newId } from '../lib/ids.ts'
@@ -15,20 +16,12 @@ export function readBookingRow(db: DbOrTx, id: string): BookingRow | null {
 export type BookedDay = { id: string; day: Day; worked: boolean }
 
 export function readBookedDays(db: DbOrTx, bookingId: string): BookedDay[] {
-  const days = db
-    .select({ id: bookingDays.id, day: bookingDays.day })
+  return db
+    .select({ id: bookingDays.id, day: bookingDays.day, worked: isWorkedDay.mapWith(Boolean) })
     .from(bookingDays)
     .where(eq(bookingDays.bookingId, bookingId))
     .orderBy(asc(bookingDays.day))
     .all()
-  const worked = db
-    .selectDistinct({ id: bookingDays.id })
-    .from(ticks)
-    .innerJoin(tasks, eq(tasks.id, ticks.taskId))
-    .innerJoin(bookingDays, eq(bookingDays.id, tasks.bookingDayId))
-    .where(eq(bookingDays.bookingId, bookingId))
-    .all()
-  return days.map((day) => ({ ...day, worked: worked.some((w) => w.id === day.id) }))
 }
 
 export function readJobToBook(db: DbOrTx, jobId: string) {

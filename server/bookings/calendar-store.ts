@@ -1,7 +1,8 @@
 import { and, asc, between, eq, inArray, isNull, type SQL, sql, sum } from 'drizzle-orm'
 import type { Day } from '../../shared/calendar/days.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { bookingDays, bookings, tasks, ticks } from '../db/tables/booking-tables.ts'
+import { bookingDays, bookings, tasks } from '../db/tables/booking-tables.ts'
+import { isWorkedDay } from '../day-logs/worked-days.ts'
 import { jobs, roofRevisions } from '../db/tables/job-tables.ts'
 import { crews } from '../db/tables/people-tables.ts'
 
@@ -76,15 +77,13 @@ export function readDayWork(db: DbOrTx, scope: SQL): Map<string, DayWork> {
   return work
 }
 
-/** Ids of the days that have a tick. */
+/** Ids of the days that have a tick or a log. */
 export function readWorkedDayIds(db: DbOrTx, scope: SQL): Set<string> {
   const rows = db
-    .selectDistinct({ id: bookingDays.id })
-    .from(ticks)
-    .innerJoin(tasks, eq(tasks.id, ticks.taskId))
-    .innerJoin(bookingDays, eq(bookingDays.id, tasks.bookingDayId))
+    .select({ id: bookingDays.id })
+    .from(bookingDays)
     .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
-    .where(scope)
+    .where(and(scope, isWorkedDay))
     .all()
   return new Set(rows.map((row) => row.id))
 }

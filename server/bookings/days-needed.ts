@@ -36,6 +36,7 @@ export function daysNeeded(
     day,
     revisionId,
     cancelled: false,
+    logged: false,
   }))
   const days = [...booked, ...asked].sort((a, b) => (a.day < b.day ? -1 : a.day > b.day ? 1 : 0))
   const today = localDayOf(now, firm.timeZone)

@@ -2,6 +2,7 @@ import { asc, count, desc, eq, inArray, sql, sum } from 'drizzle-orm'
 import type { FrameSpec } from '../../shared/roof/roof-types.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { bookingDays, bookings, tasks, ticks } from '../db/tables/booking-tables.ts'
+import { isLoggedDay } from '../day-logs/worked-days.ts'
 import { roofRevisions } from '../db/tables/job-tables.ts'
 
 export type JobDay = {
@@ -11,6 +12,8 @@ export type JobDay = {
   day: string
   revisionId: string | null
   cancelled: boolean
+  /** It has been closed with a log. */
+  logged: boolean
 }
 
 export type TaskRow = typeof tasks.$inferSelect
@@ -26,6 +29,7 @@ export function readJobDays(db: DbOrTx, jobId: string): JobDay[] {
       day: bookingDays.day,
       revisionId: bookingDays.revisionId,
       cancelled: sql<number>`${bookings.cancelledAt} is not null`.mapWith(Boolean),
+      logged: isLoggedDay.mapWith(Boolean),
     })
     .from(bookingDays)
     .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))

@@ -33,9 +33,10 @@ export type JobPlan = {
   cutButUnused: { revisionId: string; marks: string[] }[]
 }
 
-/** Started: it has a tick, be it one taken back. */
-export function startedDayIds(tasks: readonly JobTask[]): Set<string> {
-  return new Set(tasks.filter((t) => t.tickCount > 0).map((t) => t.bookingDayId))
+/** Started: it has a tick, be it one taken back, or a log. */
+export function startedDayIds(days: readonly JobDay[], tasks: readonly JobTask[]): Set<string> {
+  const logged = days.filter((d) => d.logged).map((d) => d.id)
+  return new Set([...logged, ...tasks.filter((t) => t.tickCount > 0).map((t) => t.bookingDayId)])
 }
 
 /**
@@ -45,7 +46,7 @@ export function startedDayIds(tasks: readonly JobTask[]): Set<string> {
 export function planJob(input: JobPlanInput): JobPlan {
   const { days, tasks, revisionId, specs, rates, hours, today } = input
   const spec = revisionId === null ? undefined : specs.get(revisionId)
-  const started = startedDayIds(tasks)
+  const started = startedDayIds(days, tasks)
   const ahead = days
     .filter((row) => !row.cancelled && row.day >= today)
     .map((row) => ({ row, started: started.has(row.id) }))

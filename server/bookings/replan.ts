@@ -30,7 +30,7 @@ export function replanJob(tx: DbOrTx, jobId: string, now: Date): JobPlan | null 
   const jobTasks = readJobTasks(tx, jobId)
   const today = localDayOf(now, firm.timeZone)
   const revisionId = readNewestRevisionId(tx, jobId)
-  takeNewest(tx, { days, started: startedDayIds(jobTasks), revisionId, today })
+  takeNewest(tx, { days, started: startedDayIds(days, jobTasks), revisionId, today })
   const hours = readCrewHours(tx, { from: first.day, to: last.day }, firm)
   const plan = planJob({
     days,

@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm'
+import { isWorkedDay } from '../day-logs/worked-days.ts'
 import type { JobFacts } from '../../shared/jobs/job-stage.ts'
 import { firstStage, stageTable } from '../../shared/jobs/job-stage.ts'
 
@@ -14,11 +15,8 @@ const conditions: Record<keyof JobFacts, SQL> = {
   hasFirmBooking: standing('firm'),
   // A worked day stays worked, even when what is left of its booking is called off.
   isWorked: sql`exists (
-    select 1 from bookings b
-      join booking_days d on d.booking_id = b.id
-      join tasks t on t.booking_day_id = d.id
-      join ticks k on k.task_id = t.id
-    where b.job_id = jobs.id)`,
+    select 1 from bookings join booking_days on booking_days.booking_id = bookings.id
+    where bookings.job_id = jobs.id and ${isWorkedDay})`,
   isMarkedComplete: sql`jobs.completed_on is not null`,
 }
 

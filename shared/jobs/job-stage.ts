@@ -28,7 +28,7 @@ export type JobFacts = {
   hasPencilledBooking: boolean
   /** A standing booking that is firm. */
   hasFirmBooking: boolean
-  /** A booked day has a tick. */
+  /** A booked day has a tick or a log. */
   isWorked: boolean
   isMarkedComplete: boolean
 }
