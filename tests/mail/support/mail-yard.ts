@@ -184,6 +184,8 @@ export async function createMailYard(options: { now?: Date; timeZone?: string } 
     book,
     mails,
     mailOf: (key: string) => mails().find((mail) => mail.key === key),
+    failMail: (key: string) =>
+      db.update(outbox).set({ state: 'failed', attempts: 21 }).where(eq(outbox.key, key)).run(),
     setFirm: (change: Partial<typeof firm.$inferInsert>) =>
       db.update(firm).set(change).where(eq(firm.id, 1)).run(),
     setBooking: (id: string, change: Partial<typeof bookings.$inferInsert>) =>
