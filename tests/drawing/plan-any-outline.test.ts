@@ -3,8 +3,8 @@ import { boxesOverlap, segmentCrossesBox } from '../../shared/drawing/drawing-ge
 import { overhangOutline } from '../../shared/drawing/overhang-outline.ts'
 import { cornerBox } from '../../shared/drawing/plan-corners.ts'
 import { planDrawing, type PlanDrawingOptions } from '../../shared/drawing/plan-drawing.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import type { FrameSpec, Roof } from '../../shared/roof/roof-types.ts'
+import { framedOnce } from '../roof/support/framed.ts'
 import { hollowReferences, makeRoof, referenceRoof } from '../roof/support/roofs.ts'
 import { laidOutSpec } from './support/laid-out-spec.ts'
 
@@ -109,9 +109,9 @@ const cross = makeRoof(
 const frames = [
   ...hollowReferences.map((reference) => {
     const roof = referenceRoof(reference)
-    return { title: reference.title, roof, spec: frameRoof(roof) }
+    return { title: reference.title, roof, spec: framedOnce(roof) }
   }),
-  { title: 'A cross', roof: cross, spec: frameRoof(cross) },
+  { title: 'A cross', roof: cross, spec: framedOnce(cross) },
 ]
 
 describe.each(frames)('$title', ({ roof, spec }) => {

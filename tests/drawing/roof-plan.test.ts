@@ -9,15 +9,15 @@ import { overhangOutline } from '../../shared/drawing/overhang-outline.ts'
 import { cornerBox } from '../../shared/drawing/plan-corners.ts'
 import { planDrawing, type PlanDrawingOptions } from '../../shared/drawing/plan-drawing.ts'
 import { planMemberAt } from '../../shared/drawing/plan-members.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
-import type { Point2, Roof } from '../../shared/roof/roof-types.ts'
+import type { FrameSpec, Point2, Roof } from '../../shared/roof/roof-types.ts'
+import { framedOnce } from '../roof/support/framed.ts'
 import { convexReferences, makeRoof, referenceRoof } from '../roof/support/roofs.ts'
 
 // The outlines, nodes and lines of the reference roofs are from tests/fixtures/roofs.json, which was
 // computed from plane intersections alone.
 const framed = convexReferences.map((reference) => {
   const roof = referenceRoof(reference)
-  return { reference, roof, spec: frameRoof(roof) }
+  return { reference, roof, spec: framedOnce(roof) }
 })
 const phonePx = 358
 const deskPx = 968
@@ -34,7 +34,7 @@ const widths = [
   { at: 'a phone', widthPx: phonePx, maxHeightPx: 420 },
   { at: 'a desk', widthPx: deskPx, maxHeightPx: deskPx },
 ]
-const draw = (roof: Roof, spec: ReturnType<typeof frameRoof> | null, o: PlanDrawingOptions) => {
+const draw = (roof: Roof, spec: FrameSpec | null, o: PlanDrawingOptions) => {
   const drawing = planDrawing(roof, spec, o)
   if (!drawing) throw new Error('nothing drawn')
   return drawing
@@ -154,7 +154,7 @@ describe('9.0 × 6.0 m, four hips', () => {
     ],
     [25, 25, 25, 25],
   )
-  const spec = frameRoof(roof)
+  const spec = framedOnce(roof)
 
   test('at a desk every mark is written in full', () => {
     const drawing = draw(roof, spec, options({ widthPx: deskPx, maxHeightPx: deskPx }))

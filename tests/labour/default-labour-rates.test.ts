@@ -2,8 +2,8 @@ import { describe, expect, test } from 'vitest'
 import { defaultLabourRates } from '../../shared/labour/default-labour-rates.ts'
 import { workPackagesOf } from '../../shared/labour/work-packages.ts'
 import { labourMinutes } from '../../shared/labour/work-step.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import type { Roof } from '../../shared/roof/roof-types.ts'
+import { framedOnce } from '../roof/support/framed.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 
 // Source: labour to cut and pitch, an estimating textbook's figure 13.55 (excerpt seen, title not): 18.5–35 h
@@ -14,7 +14,7 @@ const hipRange = [9.3, 14.8] as const
 const gableRange = [7.8, 12.7] as const
 
 function cutAndPitchMinutes(roof: Roof): { minutes: number; volumeM3: number } {
-  const spec = frameRoof(roof)
+  const spec = framedOnce(roof)
   const packages = workPackagesOf(spec, defaultLabourRates).filter((p) => p.key !== 'tails')
   const volumeMm3 = spec.members.reduce(
     (sum, m) => sum + m.cutLengthMm * m.section.thicknessMm * m.section.depthMm,

@@ -6,9 +6,9 @@ import { markingCardLines, markingCardOf } from '../../shared/marking/marking-ca
 import type { MarkingOptions } from '../../shared/marking/marking-figures.ts'
 import { shareWords } from '../../shared/marking/role-words.ts'
 import { roundingWords } from '../../shared/marking/rounding-words.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, MemberRole } from '../../shared/roof/roof-types.ts'
+import { framedOnce } from '../roof/support/framed.ts'
 import { hollowReferences, makeRoof, referenceRoof } from '../roof/support/roofs.ts'
 import {
   common,
@@ -30,7 +30,7 @@ const headPoints = (spec: FrameSpec, mark: string) =>
   markingCardOf(spec, mark, options).ends[0]!.points
 
 describe('a T plan, main 6.0 m wide, wing 4.0 m wide, 25°', () => {
-  const spec = frameRoof(referenceRoof(hollow('T-narrow-wing')))
+  const spec = framedOnce(referenceRoof(hollow('T-narrow-wing')))
 
   test('a pair of valley creepers is one left and one right, told apart by the foot', () => {
     const pair = cardsOf(spec, 'valley-creeper').find((card) => card.quantity === 2)!
@@ -93,7 +93,7 @@ describe('a T plan, main 6.0 m wide, wing 4.0 m wide, 25°', () => {
 test('a dished valley is marked and cut square, then dished to lines that lie in both slopes', () => {
   // Source: geometry. At one pitch both halves fall alike to the middle: half the thickness times the
   // tangent of the dish's angle; the edges stay.
-  const spec = frameRoof(referenceRoof(hollow('L-equal'), { valleyTop: 'dished' }))
+  const spec = framedOnce(referenceRoof(hollow('L-equal'), { valleyTop: 'dished' }))
   const valley = spec.members.find((one) => one.role === 'valley')!
   const card = cardsOf(spec, 'valley')[0]!
   const depthMm = Math.round(17.5 * Math.tan(deg(Math.abs(valley.backing!.leftDeg))))
@@ -107,7 +107,7 @@ test('a dished valley is marked and cut square, then dished to lines that lie in
 })
 
 test('a backed hip is not dished and a square valley has nothing to dish', () => {
-  const spec = frameRoof(referenceRoof(hollow('L-equal')))
+  const spec = framedOnce(referenceRoof(hollow('L-equal')))
   for (const role of ['hip', 'valley'] as const)
     for (const card of cardsOf(spec, role)) expect(card.dish).toBeNull()
 })
@@ -115,7 +115,7 @@ test('a backed hip is not dished and a square valley has nothing to dish', () =>
 test.each(hollowReferences)(
   'every card of $title says its hands, its ends and where it is measured from',
   (reference) => {
-    const spec = frameRoof(referenceRoof(reference))
+    const spec = framedOnce(referenceRoof(reference))
     for (const line of spec.cutLines) {
       const card = markingCardOf(spec, line.mark, options)
       const pieces = spec.members.filter((one) => line.members.includes(one.mark))
@@ -158,7 +158,7 @@ describe('timbers beside the frame', () => {
       tail: 'square',
     },
   )
-  const spec = frameRoof(roof, { ...defaultSettings, maxRafterSpanMm: 2200 })
+  const spec = framedOnce(roof, { ...defaultSettings, maxRafterSpanMm: 2200 })
   const roles = ['underpurlin', 'collar-tie', 'fascia', 'barge'] as const
 
   test.each(roles)('a %s has a card with its edges and which way it is looked at', (role) => {

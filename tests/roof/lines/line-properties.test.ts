@@ -16,13 +16,14 @@ import {
   unmatched,
 } from './line-rules.ts'
 import { numbersFrom, planAreaMm2, randomLinesRoof } from './random-outlines.ts'
+import { sampleOf } from '../support/sample.ts'
 
 /**
  * Properties that any roof has, on random outlines with fixed seeds: square and skew plans, plans like
  * stars, 4 to 32 corners; half of them at one pitch, half with a pitch for each eave and gables.
  * `PROOF=1` runs all 2,000, otherwise a sample.
  */
-const count = process.env['PROOF'] === '1' ? 2000 : 300
+const count = sampleOf(160, 2000)
 
 type Solved = { name: string; roof: Roof; plates: PlateLines; lines: RoofLines; onePitch: boolean }
 

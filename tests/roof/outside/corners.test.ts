@@ -39,7 +39,7 @@ function buildingWith({ in: given, out }: Corner, hipTop: Roof['hipTop']): Roof 
   const widest = Math.max(out.hip_plan_from_plate1_deg, out.hip_plan_from_plate2_deg)
   const hipPlan = (2.9 * given.spacing_mm) / Math.cos(rad(widest))
   const width = 2 * hipPlan * Math.sin(rad(out.hip_plan_from_plate1_deg))
-  const long = 2 * hipPlan + 6000
+  const long = 2 * hipPlan + 1200
   const outline: [number, number][] = [
     [0, 0],
     [long, 0],

@@ -31,8 +31,16 @@ function differenceIn(rise: number, centresIn: number): number {
   return (first!.setOutLengthMm - second!.setOutLengthMm) / INCH_MM
 }
 
+const kept = new Map<number, Record<Field, number>>()
+
 /** What the roof of this rise gives for each field, in inches. */
 function found(rise: number): Record<Field, number> {
+  const values = kept.get(rise) ?? measured(rise)
+  kept.set(rise, values)
+  return values
+}
+
+function measured(rise: number): Record<Field, number> {
   const built = hipBuilding(degOfRise(rise, 12), 144 * INCH_MM, { hipTop: 'lowered' })
   const { common, hip, sideCreepers } = built
   return {

@@ -1,5 +1,5 @@
-import { frameRoof } from '../../../shared/roof/frame-roof.ts'
 import type { FrameSpec, Member, Roof } from '../../../shared/roof/roof-types.ts'
+import { framedOnce } from './framed.ts'
 import { creepersOn, cutsAt, hipFrom, planeOfEdge, rafterAtHead } from './members.ts'
 import { makeRoof } from './roofs.ts'
 
@@ -39,7 +39,7 @@ export function hipBuilding(
     [sidePitchDeg, endPitchDeg, sidePitchDeg, endPitchDeg],
     rest,
   )
-  const spec = frameRoof(roof)
+  const spec = framedOnce(roof)
   const hip = hipFrom(spec, roof.outline[1]!)
   const [side, end] = [planeOfEdge(spec, 0), planeOfEdge(spec, 1)]
   return {
