@@ -9,6 +9,7 @@ import { bookingRoutes } from './bookings/booking-routes.ts'
 import { createAuthService } from './auth/auth-service.ts'
 import { clashRoutes } from './clashes/clash-routes.ts'
 import { isStillSignedIn, loadUser, longestSessionMs, sessionCookieName } from './auth/session.ts'
+import { dayLogRoutes } from './day-logs/day-log-routes.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
@@ -94,6 +95,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   eventRoutes(api, deps.events, (req) => isStillSignedIn(deps, req))
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
+  dayLogRoutes(api, deps)
   rainOffRoutes(api, deps)
   messageRoutes(api, deps)
   noticeRoutes(api, deps)

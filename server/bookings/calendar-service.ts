@@ -5,12 +5,14 @@ import type {
   CalendarBooking,
   CalendarCrew,
   CalendarDay,
+  CrewHoursOfDay,
 } from '../../shared/bookings/calendar-schemas.ts'
 import { permissionScope } from '../../shared/auth/permissions.ts'
-import { type Day, dayPlus } from '../../shared/calendar/days.ts'
+import { type Day, dayPlus, daysBetween } from '../../shared/calendar/days.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
 import { packagesInWords } from '../../shared/labour/package-words.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
+import { readDayClashes } from '../clashes/read-clashes.ts'
 import type { Db, DbOrTx } from '../db/client.ts'
 import { bookings } from '../db/tables/booking-tables.ts'
 import { crews } from '../db/tables/people-tables.ts'
@@ -21,7 +23,6 @@ import {
   type DayRow,
   daysBetweenScope,
   type Extent,
-  readCrewDays,
   readDayRows,
   readDayTaskLines,
   readDayWork,
@@ -30,7 +31,6 @@ import {
   standingScope,
 } from './calendar-store.ts'
 import { type CrewHours, readCrewHours } from './crew-hours.ts'
-import { dayFlags } from './day-flags.ts'
 
 const both = (...conditions: SQL[]): SQL => and(...conditions) ?? conditions[0] ?? standingScope()
 
@@ -48,16 +48,10 @@ function readSeen(
   const hours = readCrewHours(db, span, firm)
   const work = readDayWork(db, scope)
   const worked = readWorkedDayIds(db, scope)
-  const crewDays = readCrewDays(db, [...new Set(rows.map((row) => row.crew.id))], span)
+  const reader = isOffice ? 'office' : 'crew'
+  const clashes = readDayClashes(db, span, { firm, today, reader })
   const days = rows.map((row): CalendarDay => {
     const crewDay = hours.on(row.crew.id, row.day)
-    const others = crewDays.filter(
-      (other) =>
-        other.day === row.day &&
-        other.crewId === row.crew.id &&
-        other.bookingId !== row.booking.id &&
-        row.booking.cancelledAt === null,
-    )
     const held = work.get(row.id)
     return {
       id: row.id,
@@ -68,7 +62,7 @@ function readSeen(
       availableMinutes: crewDay.minutes,
       peopleThere: crewDay.thereIds.length,
       worked: worked.has(row.id),
-      flags: dayFlags(row, { calendar: firm, crewDay, others, isOffice }),
+      flags: clashes(row.booking.id, row.day),
     }
   })
   const bookingIds = [...new Set(rows.map((row) => row.booking.id))]
@@ -129,11 +123,15 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
       const scope = both(visible, daysBetweenScope(span.from, span.to))
       const seen = readSeen(db, { ...view, scope, visible })
       const shown = asBookings(seen, view)
+      const shownCrews = view.isOffice ? readActiveCrews(db) : crewsOf(shown)
       return {
         ...span,
         today: view.today,
         bookings: shown,
-        crews: view.isOffice ? readActiveCrews(db) : crewsOf(shown),
+        crews: shownCrews,
+        crewHours: view.isOffice
+          ? hoursOfSpan(readCrewHours(db, span, view.firm), shownCrews, span)
+          : hoursOfBooked(shown),
         workingWeekdays: view.firm.workingWeekdays,
         closedDays: view.firm.closedDays.filter(
           ({ day }) => day >= dayPlus(span.from, -7) && day <= dayPlus(span.to, 60),
@@ -163,6 +161,28 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
       }
     },
   }
+}
+
+function hoursOfSpan(
+  hours: CrewHours,
+  shownCrews: readonly CalendarCrew[],
+  { from, to }: { from: Day; to: Day },
+): CrewHoursOfDay[] {
+  const days = Array.from({ length: daysBetween(from, to) + 1 }, (_, i) => dayPlus(from, i))
+  return shownCrews.flatMap(({ id: crewId }) =>
+    days.map((day) => {
+      const { minutes, thereIds } = hours.on(crewId, day)
+      return { crewId, day, availableMinutes: minutes, peopleThere: thereIds.length }
+    }),
+  )
+}
+
+function hoursOfBooked(shown: readonly CalendarBooking[]): CrewHoursOfDay[] {
+  const byKey = new Map<string, CrewHoursOfDay>()
+  for (const { crew, days } of shown)
+    for (const { day, availableMinutes, peopleThere } of days)
+      byKey.set(`${crew.id} ${day}`, { crewId: crew.id, day, availableMinutes, peopleThere })
+  return [...byKey.values()]
 }
 
 export function readActiveCrews(db: DbOrTx): CalendarCrew[] {

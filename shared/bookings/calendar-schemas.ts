@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { daysBetween } from '../calendar/days.ts'
 import { daySchema, idSchema } from '../http/fields.ts'
 import type { RoofGlyphData, RoofGlyphLineKind } from '../drawing/roof-glyph.ts'
+import { clashSchema } from '../clashes/clash-schemas.ts'
 import { bookingStateSchema } from './booking-schemas.ts'
 
 export const longestCalendarDays = 100
@@ -31,25 +32,6 @@ export const calendarCrewSchema = z.object({
 })
 export type CalendarCrew = z.infer<typeof calendarCrewSchema>
 
-export const dayFlagCodes = [
-  'crew-twice',
-  'crew-twice-on-purpose',
-  'day-not-worked',
-  'nobody-there',
-  'on-leave',
-  'no-roof',
-] as const
-
-/** Something the office should know of a day: what, and a way out. */
-export const dayFlagSchema = z.object({
-  code: z.enum(dayFlagCodes),
-  /** A clash must be settled; a caution may stand. */
-  weight: z.enum(['clash', 'caution']),
-  text: z.string(),
-  wayOut: z.string(),
-})
-export type DayFlag = z.infer<typeof dayFlagSchema>
-
 export const calendarDaySchema = z.object({
   id: z.string(),
   day: z.string(),
@@ -62,7 +44,7 @@ export const calendarDaySchema = z.object({
   peopleThere: z.number(),
   /** Has a tick: it stays where it is. */
   worked: z.boolean(),
-  flags: z.array(dayFlagSchema),
+  flags: z.array(clashSchema),
 })
 export type CalendarDay = z.infer<typeof calendarDaySchema>
 
@@ -95,12 +77,23 @@ export const calendarBookingSchema = z.object({
 })
 export type CalendarBooking = z.infer<typeof calendarBookingSchema>
 
+/** The hours a crew has on a day, booked or not. */
+export const crewHoursSchema = z.object({
+  crewId: z.string(),
+  day: z.string(),
+  availableMinutes: z.number(),
+  peopleThere: z.number(),
+})
+export type CrewHoursOfDay = z.infer<typeof crewHoursSchema>
+
 export const calendarSchema = z.object({
   from: z.string(),
   to: z.string(),
   today: z.string(),
   bookings: z.array(calendarBookingSchema),
   crews: z.array(calendarCrewSchema),
+  /** Each crew on each day of the span; for those who see their own crew only, the days booked. */
+  crewHours: z.array(crewHoursSchema),
   workingWeekdays: z.array(z.number()),
   closedDays: z.array(z.object({ day: z.string(), name: z.string() })),
 })

@@ -6,6 +6,7 @@ import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Roof } from '../../shared/roof/roof-types.ts'
 import { bookingDays, tasks, ticks } from '../../server/db/tables/booking-tables.ts'
 import { roofRevisions } from '../../server/db/tables/job-tables.ts'
+import { tickets } from '../../server/db/tables/people-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 import { type Agent, createTestApp } from './harness.ts'
@@ -49,6 +50,13 @@ export async function bookingFirm() {
   const otherLead = app.addPerson('leading-hand', 'Bex Arden')
   const crew = app.addCrew('Plumb crew', [lead.id, apprentice.id])
   const otherCrew = app.addCrew('Rafter crew', [otherLead.id])
+  const heights = [lead, apprentice, otherLead].map((person) => ({
+    id: newId(),
+    personId: person.id,
+    kind: 'working-at-heights' as const,
+    expiresOn: '2028-06-30',
+  }))
+  app.db.insert(tickets).values(heights).run()
   const won = { acceptedOn: '2026-11-20' }
   const hillJob = kit.addJob({ number: 'QR-1', title: 'Hill house', ...won })
   const creekJob = kit.addJob({ number: 'QR-2', title: 'Creek shed', wantedBy: mon, ...won })

@@ -1,17 +1,10 @@
 import { OctagonAlert, TriangleAlert } from 'lucide-react'
-import type { CalendarBooking, DayFlag } from '../../../shared/bookings/calendar-schemas.ts'
+import type { CalendarBooking } from '../../../shared/bookings/calendar-schemas.ts'
+import type { Clash } from '../../../shared/clashes/clash-schemas.ts'
+import { clashShortWords } from '../../../shared/clashes/clash-words.ts'
 import { formatHours } from '../../../shared/labour/format-hours.ts'
 
-const shortWords: Record<DayFlag['code'], string> = {
-  'crew-twice': 'Crew booked twice',
-  'crew-twice-on-purpose': 'Two jobs, on purpose',
-  'day-not-worked': 'Day not worked',
-  'nobody-there': 'Nobody there',
-  'on-leave': 'On leave',
-  'no-roof': 'No roof issued yet',
-}
-
-export function FlagLine({ weight, children }: { weight: DayFlag['weight']; children: string }) {
+export function FlagLine({ weight, children }: { weight: Clash['weight']; children: string }) {
   const Icon = weight === 'clash' ? OctagonAlert : TriangleAlert
   return (
     <span
@@ -24,12 +17,15 @@ export function FlagLine({ weight, children }: { weight: DayFlag['weight']; chil
 }
 
 /** What is amiss with a day in a word or two each; the panel has the whole sentence. */
-export function DayFlagLines({ flags }: { flags: readonly DayFlag[] }) {
-  return flags.map((flag) => (
-    <FlagLine key={flag.code} weight={flag.weight}>
-      {shortWords[flag.code]}
-    </FlagLine>
-  ))
+export function DayFlagLines({ flags }: { flags: readonly Clash[] }) {
+  // The booking's length has words of its own beside these.
+  return flags
+    .filter((flag) => flag.code !== 'too-short')
+    .map((flag) => (
+      <FlagLine key={`${flag.code} ${flag.text}`} weight={flag.weight}>
+        {clashShortWords[flag.code]}
+      </FlagLine>
+    ))
 }
 
 /** Too short, too long, or null. */

@@ -71,7 +71,7 @@ function Days({ booking }: { booking: Booking }) {
               </span>
             </p>
             {day.flags.map((flag) => (
-              <div key={flag.code} className="mt-1 text-sm">
+              <div key={`${flag.code} ${flag.text}`} className="mt-1 text-sm">
                 <FlagLine weight={flag.weight}>{flag.text}</FlagLine>
                 <p className="text-ink-soft">{flag.wayOut}</p>
               </div>

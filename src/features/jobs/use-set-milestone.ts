@@ -27,16 +27,17 @@ export function useMilestone(jobId: string, milestone: Milestone) {
   const send = (fields: MilestoneFields, from: Milestone, onSaved?: () => void) => {
     if (set.isPending) return
     set.mutate(
-      { kind, version: from.version, ...fields },
+      { ...fields, kind, version: from.version },
       {
         onSuccess: ({ milestones }) => {
           setConflict(null)
           onSaved?.()
           const after = milestones.find((one) => one.kind === kind)
           if (!after || after.version === from.version) return
-          const { version, ...before } = from
+          const { day, state, broughtBy, note } = from
+          const back = { kind, version: after.version, day, state, broughtBy, note }
           toast(`${name}: saved.`, {
-            undo: () => set.mutate({ ...before, version: after.version }, { onError: stop }),
+            undo: () => set.mutate(back, { onError: stop }),
           })
         },
         onError: (error) => {
@@ -53,8 +54,7 @@ export function useMilestone(jobId: string, milestone: Milestone) {
     save: (fields: MilestoneFields, onSaved: () => void) => send(fields, milestone, onSaved),
     /** What was sent, over what somebody else made of it meanwhile. */
     sendOver: (found: MilestoneConflict) => {
-      const { version, ...fields } = found.sent
-      send(fields, found.current)
+      send(found.sent, found.current)
     },
     takeTheirs: () => setConflict(null),
     conflict,
