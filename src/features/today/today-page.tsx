@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { Printer } from 'lucide-react'
+import type { ReactNode } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import { formatDay, formatDayWithYear } from '../../../shared/calendar/days.ts'
 import type { DaySheets } from '../../../shared/day-sheets/day-sheet-schemas.ts'
@@ -75,12 +76,17 @@ function NothingBooked({ sheets, onDay }: { sheets: DaySheets; onDay: (day: stri
   )
 }
 
+/** What another feature puts under a crew's day. */
+type Foot = (which: { crewId: string; day: string }) => ReactNode
+
 function TodayBody({
   sheets,
   set,
+  foot,
 }: {
   sheets: DaySheets
   set: ReturnType<typeof useWhich>['set']
+  foot: Foot
 }) {
   const { firm } = useSession()
   const jobs = sheets.sheets.map(({ job, revision }) =>
@@ -131,12 +137,13 @@ function TodayBody({
           ))}
         </div>
       )}
+      {sheets.crew ? foot({ crewId: sheets.crew.id, day: sheets.day }) : null}
     </>
   )
 }
 
 /** What a crew needs on the day, read on a phone in the sun. */
-export function TodayPage() {
+export function TodayPage({ foot }: { foot: Foot }) {
   const { day, crewId, set } = useWhich()
   const query = useQuery(todayQueries.sheets({ day, crewId }))
   if (query.isPending) return <PageSkeleton />
@@ -152,7 +159,7 @@ export function TodayPage() {
     )
   return (
     <div className="site-screen" aria-busy={query.isPlaceholderData}>
-      <TodayBody sheets={query.data} set={set} />
+      <TodayBody sheets={query.data} set={set} foot={foot} />
     </div>
   )
 }

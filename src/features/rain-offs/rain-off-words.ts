@@ -1,0 +1,55 @@
+import { daysBetween, formatDay } from '../../../shared/calendar/days.ts'
+import type { MilestoneState } from '../../../shared/milestones/milestone-kinds.ts'
+import { milestoneNames } from '../../../shared/milestones/milestone-rules.ts'
+import type { PreviewMove, RainOffPreview } from '../../../shared/rain-offs/rain-off-schemas.ts'
+
+export const countWords = (count: number, one: string, many = `${one}s`): string =>
+  `${count} ${count === 1 ? one : many}`
+
+export const workingDaysWords = (count: number): string => countWords(count, 'working day')
+
+const mostNamed = 4
+
+/** 'Thu 3 Dec, Fri 4 Dec'; a long run by its ends and its number. */
+export function daysWords(days: readonly string[]): string {
+  const [first, last] = [days[0], days[days.length - 1]]
+  if (first === undefined || last === undefined) return 'no day'
+  if (days.length <= mostNamed) return days.map(formatDay).join(', ')
+  return `${formatDay(first)} to ${formatDay(last)}, ${days.length} days`
+}
+
+const stateWords: Record<MilestoneState, string> = {
+  guessed: 'guessed for',
+  asked: 'asked for',
+  promised: 'promised for',
+  done: 'done on',
+}
+
+/** 'Timber on site: promised for Thu 3 Dec by Marrow Creek Timber'. */
+export function milestoneWords(milestone: PreviewMove['milestones'][number]): string {
+  const by = milestone.broughtBy ? ` by ${milestone.broughtBy}` : ''
+  const when = `${stateWords[milestone.state]} ${formatDay(milestone.day)}`
+  return `${milestoneNames[milestone.kind]}: ${when}${by}`
+}
+
+/** Null while it is done by the day it is wanted, or would have been late all the same. */
+export function lateWords({ wantedBy, daysAfter }: PreviewMove): string | null {
+  const last = daysAfter[daysAfter.length - 1]
+  if (wantedBy === null || last === undefined || last <= wantedBy) return null
+  const late = countWords(daysBetween(wantedBy, last), 'day')
+  return `Wanted by ${formatDay(wantedBy)}; its last day would be ${formatDay(last)}, ${late} later.`
+}
+
+/** '3 bookings move; 2 customers hold firm days.' */
+export function summaryWords({ moves }: RainOffPreview): string {
+  const customers = new Set(
+    moves.filter((m) => m.state === 'firm').map((m) => m.customerName || m.job.number),
+  ).size
+  const deliveries = moves.reduce((sum, move) => sum + move.milestones.length, 0)
+  const parts = [
+    `${countWords(moves.length, 'booking moves', 'bookings move')}`,
+    customers > 0 ? `${countWords(customers, 'customer')} with firm days to be told` : '',
+    deliveries > 0 ? `${countWords(deliveries, 'delivery or trade', 'deliveries and trades')}` : '',
+  ]
+  return `${parts.filter(Boolean).join('; ')}.`
+}

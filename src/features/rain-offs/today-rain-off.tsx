@@ -1,0 +1,75 @@
+import { useQuery } from '@tanstack/react-query'
+import { CloudRain } from 'lucide-react'
+import { Link } from 'react-router-dom'
+import { dayPlus, formatDay } from '../../../shared/calendar/days.ts'
+import type { RainOffRow } from '../../../shared/rain-offs/rain-off-schemas.ts'
+import { useMay } from '../../lib/session.ts'
+import { Button, buttonClass } from '../../ui/button.tsx'
+import { Note } from '../../ui/states.tsx'
+import { rainOffQueries } from './rain-off-queries.ts'
+import { workingDaysWords } from './rain-off-words.ts'
+import { useAnswering } from './use-answering.ts'
+
+const shownDaysBack = 2
+
+function stateWords(row: RainOffRow): string {
+  const day = formatDay(row.fromDay)
+  const by = row.settledBy ?? 'The office'
+  if (row.state === 'asked')
+    return `Rain-off asked for ${day}, ${workingDaysWords(row.workingDays)}. The office has it.`
+  if (row.state === 'made')
+    return `${by} has moved the crew on from ${day}. See the next booked day.`
+  if (row.state === 'undone')
+    return `The rain-off of ${day} is taken back: the days stand as before.`
+  return `${by} said no to a rain-off on ${day}. Ring the office.`
+}
+
+function Answer({ row }: { row: RainOffRow }) {
+  const answering = useAnswering()
+  return (
+    <Note kind={row.state === 'asked' ? 'plain' : 'caution'} title={stateWords(row)}>
+      {row.reason ? <p className="text-base">“{row.reason}”</p> : null}
+      {row.state === 'asked' && row.isMine ? (
+        <Button
+          kind="plain"
+          size="site"
+          className="mt-2"
+          busy={answering.isPending}
+          onClick={() => answering.withdraw(row)}
+        >
+          Take it back
+        </Button>
+      ) : null}
+    </Note>
+  )
+}
+
+/** At the foot of Today: what was asked for and answered, and the way to ask. */
+export function TodayRainOff({ crewId, day }: { crewId: string; day: string }) {
+  const mayAsk = useMay('rain-off:ask')
+  const mayMake = useMay('rain-off:write')
+  const { data } = useQuery({ ...rainOffQueries.list(), enabled: mayAsk })
+  if (!mayAsk) return null
+  const since = data ? dayPlus(data.today, -shownDaysBack) : ''
+  const shown = (data?.rainOffs ?? []).filter(
+    (row) => row.crew.id === crewId && row.fromDay >= since && !row.takenBack,
+  )
+  const isAsked = shown.some((row) => row.state === 'asked' && row.fromDay === day)
+  const search = new URLSearchParams({ crew: crewId, day }).toString()
+  return (
+    <section aria-label="Rain-off" className="mt-6 space-y-3 print:hidden">
+      {shown.map((row) => (
+        <Answer key={row.id} row={row} />
+      ))}
+      {isAsked ? null : (
+        <Link
+          to={mayMake ? `/calendar/rain-off?${search}` : `/today/rain-off?${search}`}
+          className={buttonClass('plain', 'site')}
+        >
+          <CloudRain size={22} aria-hidden />
+          {mayMake ? 'Rain-off' : 'Ask for a rain-off'}
+        </Link>
+      )}
+    </section>
+  )
+}
