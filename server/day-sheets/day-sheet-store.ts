@@ -1,6 +1,7 @@
 import { and, asc, desc, eq, inArray, isNull, type SQL, sql } from 'drizzle-orm'
 import type { Day } from '../../shared/calendar/days.ts'
 import { formatDay } from '../../shared/calendar/days.ts'
+import { ordinaryMinutes } from '../../shared/calendar/ordinary-hours.ts'
 import { cautionsOf, leftOverOf, planMarks } from '../../shared/day-sheets/day-pieces.ts'
 import { comparePlates, differingCount } from '../../shared/day-sheets/plate-check.ts'
 import type { DayTask } from '../../shared/day-sheets/task-schemas.ts'
@@ -8,6 +9,7 @@ import type { DbOrTx } from '../db/client.ts'
 import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
 import { jobs, plateChecks, roofRevisions } from '../db/tables/job-tables.ts'
 import { people } from '../db/tables/people-tables.ts'
+import { readLogSummaries } from '../day-logs/day-log-store.ts'
 import { type Firm, readFirm } from '../firm/firm-store.ts'
 import { rosterOf, type RosteredPerson } from '../people/roster.ts'
 import {
@@ -52,6 +54,10 @@ export function readDaySheets(
     db,
     rows.map((row) => row.bookingDay.revisionId).filter((id) => id !== null),
   )
+  const logs = readLogSummaries(
+    db,
+    rows.map(({ bookingDay }) => bookingDay.id),
+  )
   const roster = rows.length > 0 ? rosterOf(db, crewId, day) : []
   return rows.map(({ booking, job, bookingDay }) => {
     const revision = revisions.get(bookingDay.revisionId ?? '') ?? null
@@ -73,7 +79,8 @@ export function readDaySheets(
       dayCount: days.length,
       plates: revision ? latestPlateCheck(db, revision) : null,
       minutesPlanned: work.tasks.reduce((sum, task) => sum + task.plannedMinutes, 0),
-      minutesThere: minutesThere(firm, roster),
+      minutesThere: minutesThere(firm, roster, day),
+      log: logs.get(bookingDay.id) ?? null,
       ...work,
       cautions: cautionsOf(revision?.spec.cautions ?? [], [...work.tasks, ...work.leftOver]),
       changes: before
@@ -136,8 +143,10 @@ export function latestPlateCheck(
   return { takenAt, takenBy: row.takenBy, note, differing }
 }
 
-function minutesThere(firm: Firm, roster: RosteredPerson[]): number {
-  return Math.round(roster.filter((person) => !person.onLeave).length * firm.hoursPerDay * 60)
+function minutesThere(firm: Firm, roster: RosteredPerson[], day: Day): number {
+  return roster
+    .filter((person) => !person.onLeave)
+    .reduce((total, person) => total + ordinaryMinutes(firm, person, day), 0)
 }
 
 /** What is not as it was on the booking's day before. */

@@ -43,6 +43,7 @@ export function daySheetView(sheet: CrewDaySheet, role: Role): DaySheet {
     plates: plates && { ...plates, takenAt: plates.takenAt.toISOString() },
     minutesPlanned: sheet.minutesPlanned,
     minutesThere: sheet.minutesThere,
+    log: sheet.log,
     tasks: sheet.tasks,
     leftOver: sheet.leftOver,
     changes: sheet.changes,

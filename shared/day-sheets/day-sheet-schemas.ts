@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { FrameSpec, Roof } from '../roof/roof-types.ts'
+import { dayLogSummarySchema } from '../day-logs/day-log-schemas.ts'
 import { daySchema, idSchema } from '../http/fields.ts'
 import { dayTaskSchema } from './task-schemas.ts'
 
@@ -52,6 +53,8 @@ export const daySheetSchema = z.object({
   plates: plateStateSchema.nullable(),
   minutesPlanned: z.number(),
   minutesThere: z.number(),
+  /** The day's log once it is closed. */
+  log: dayLogSummarySchema.nullable(),
   tasks: z.array(dayTaskSchema),
   /** Unfinished on earlier days of this booking. */
   leftOver: z.array(dayTaskSchema),
