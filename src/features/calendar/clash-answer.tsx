@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from 'react'
+import { type FormEvent, type ReactNode, useState } from 'react'
 import type { BookingConflict } from '../../../shared/bookings/booking-schemas.ts'
 import { Button } from '../../ui/button.tsx'
 import { Field } from '../../ui/field.tsx'
@@ -12,10 +12,12 @@ type Props = {
   busy: boolean
   onAnswer: (said: OnPurpose) => void
   onBack: () => void
+  /** Another way out, beside going back. */
+  children?: ReactNode
 }
 
 /** What stands in the way, day by day; the way round it is typed on purpose. */
-export function ClashAnswer({ conflict, busy, onAnswer, onBack }: Props) {
+export function ClashAnswer({ conflict, busy, onAnswer, onBack, children }: Props) {
   const [reason, setReason] = useState('')
   const [error, setError] = useState<string>()
   const isTwice = conflict.clashes.some((clash) => clash.code === 'crew-twice')
@@ -59,6 +61,7 @@ export function ClashAnswer({ conflict, busy, onAnswer, onBack }: Props) {
         <Button type="button" onClick={onBack}>
           Go back
         </Button>
+        {children}
         <Button type="submit" kind="danger" busy={busy}>
           {isTwice ? 'Book both on purpose' : 'Book it all the same'}
         </Button>
