@@ -22,6 +22,7 @@ import { demoJobs } from './demo-jobs.ts'
 import { demoCrews, demoEmail, demoFirm, demoPassword, demoPeople } from './demo-people.ts'
 import { demoRoofs } from './demo-roofs.ts'
 import { tickDemoTasks } from './demo-ticks.ts'
+import { tellDemoDays } from './demo-told.ts'
 
 export function isEmpty(db: Db): boolean {
   return (db.select({ n: count() }).from(people).get()?.n ?? 0) === 0
@@ -186,6 +187,7 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
       .where(eq(jobs.id, jobId))
       .run()
   }
+  tellDemoDays(db, { firm: readFirm(db), until: workingDay(db, today, 2), now })
 }
 
 /** The leading hand first. */
