@@ -1,46 +1,47 @@
-import type { Clash } from '../../shared/clashes/clash-schemas.ts'
 import type { Day } from '../../shared/calendar/days.ts'
-import { readCrewHours } from '../bookings/crew-hours.ts'
+import type { ClashBooking, ClashDay } from '../../shared/clashes/clash-facts.ts'
+import type { BookingClash, Clash } from '../../shared/clashes/clash-schemas.ts'
+import { findClashes } from '../../shared/clashes/find-clashes.ts'
+import { groupBy } from '../../shared/collections/group-by.ts'
+import type { BookingMove } from '../../shared/planning/rain-off.ts'
+import { readClashFacts } from '../clashes/read-clashes.ts'
 import type { DbOrTx } from '../db/client.ts'
 import type { Firm } from '../firm/firm-store.ts'
 import type { PlannedRainOff } from './plan-rain-off.ts'
 
-/** Clashes on the new days, by booking. */
+/** The booking on its new days; nobody has been told of those. */
+function afterMove(booking: ClashBooking, move: BookingMove | undefined): ClashBooking {
+  if (!move) return booking
+  const newest = booking.job.newestRevision
+  const from = new Map([...move.moved, ...move.added].map((one) => [one.to, one.from]))
+  const dayAt = (day: Day): ClashDay => {
+    const stood = booking.days.find((one) => one.day === (from.get(day) ?? day))
+    const kept = booking.days.find((one) => one.day === day)
+    if (kept && !from.has(day)) return kept
+    return { day, worked: false, revision: stood?.revision ?? newest, toldLetters: [] }
+  }
+  return { ...booking, days: move.daysAfter.map(dayAt) }
+}
+
+const sameClash = ({ bookingId, code, text }: BookingClash): string =>
+  `${bookingId} ${code} ${text}`
+
+/** What would stand in the way after a rain-off and does not now, by booking. */
 export function newClashes(
   db: DbOrTx,
-  input: { plan: PlannedRainOff; crewId: string; firm: Firm; today: Day },
+  input: { plan: PlannedRainOff; firm: Firm; today: Day },
 ): Map<string, Clash[]> {
-  const { plan, crewId, firm } = input
-  const days = plan.moves.flatMap((move) => move.daysAfter).sort()
+  const { plan, firm, today } = input
+  const days = plan.moves.flatMap((move) => [...move.daysBefore, ...move.daysAfter]).sort()
   const [from, to] = [days[0], days[days.length - 1]]
   if (from === undefined || to === undefined) return new Map()
-  const hours = readCrewHours(db, { from, to }, firm)
-  return new Map(
-    plan.moves.map((move) => [
-      move.bookingId,
-      [...move.moved, ...move.added].flatMap(({ to: day }): Clash[] => {
-        const { thereIds, away } = hours.on(crewId, day)
-        if (thereIds.length === 0)
-          return [
-            {
-              code: 'nobody-there',
-              weight: 'clash',
-              day,
-              text: 'Nobody of the crew is there that day.',
-              wayOut: 'Put people in the crew for that day or give the day to another crew.',
-            },
-          ]
-        if (away.length === 0) return []
-        return [
-          {
-            code: 'on-leave',
-            weight: 'caution',
-            day,
-            text: `On leave: ${away.join(', ')}.`,
-            wayOut: 'The hours are counted without them. Add a person or a day.',
-          },
-        ]
-      }),
-    ]),
-  )
+  const facts = readClashFacts(db, { from, to }, { firm, today, reader: 'office' })
+  const moveOf = new Map(plan.moves.map((move) => [move.bookingId, move]))
+  const before = new Set(findClashes(facts).map(sameClash))
+  const moved = facts.bookings.map((booking) => afterMove(booking, moveOf.get(booking.id)))
+  const found = findClashes({ ...facts, bookings: moved })
+    .filter((clash) => moveOf.has(clash.bookingId) && !before.has(sameClash(clash)))
+    // One that holds for several days is said once, for the first of them.
+    .filter((clash, i, all) => all.findIndex((one) => sameClash(one) === sameClash(clash)) === i)
+  return groupBy(found, (clash) => clash.bookingId)
 }

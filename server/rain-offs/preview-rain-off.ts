@@ -45,7 +45,7 @@ export function previewRainOff(
   const jobIds = plan.moves.flatMap((move) => plan.rowOf(move.bookingId)?.job.id ?? [])
   const milestones = readTouchedMilestones(db, jobIds)
   const others = readOtherCrews(db, { jobIds, crewId: crew.id, fromDay: asked.fromDay })
-  const clashes = newClashes(db, { plan, crewId: crew.id, firm, today })
+  const clashes = newClashes(db, { plan, firm, today })
   return {
     crew,
     lostDays: plan.lostDays,

@@ -4,6 +4,7 @@ import type { RainOffList, RainOffPreview } from '../../shared/rain-offs/rain-of
 import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
 import { jobs } from '../../server/db/tables/job-tables.ts'
 import { milestones } from '../../server/db/tables/milestone-tables.ts'
+import { leave } from '../../server/db/tables/people-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { bookingFirm, fri, mon, thu, tue, wed } from './booking-kit.ts'
 import type { Agent } from './harness.ts'
@@ -93,6 +94,23 @@ test('a wet Thursday is shown before anything moves: from where to where, whose 
     { bookingId: creek.id, wantedBy: mon, daysAfter: [tue] },
   ])
   expect(calendarOf(firm)).toEqual(before)
+})
+
+test('what the new days knock into is said, and what stood in the way before is not said again', async () => {
+  const { firm, hill, creek } = await wetFirm()
+  const away = { id: newId(), personId: firm.people.lead.id, startsOn: mon, endsOn: mon }
+  firm.app.db.insert(leave).values(away).run()
+  const shown = await preview(firm)
+  const codesOf = (id: string) =>
+    shown.moves.find((move) => move.bookingId === id)?.clashes.map(({ code, day }) => [code, day])
+  // Hill house gets Monday, when the leading hand is away; Creek shed had that Monday and leaves it.
+  expect(codesOf(hill.id)).toEqual(
+    expect.arrayContaining([
+      ['apprentice-alone', mon],
+      ['on-leave', mon],
+    ]),
+  )
+  expect(codesOf(creek.id)).toEqual([])
 })
 
 test('all of it moves at once, and undone the same day every booking is back as it was', async () => {
