@@ -10,6 +10,7 @@ import { createAuthService } from './auth/auth-service.ts'
 import { clashRoutes } from './clashes/clash-routes.ts'
 import { isStillSignedIn, loadUser, longestSessionMs, sessionCookieName } from './auth/session.ts'
 import { dayLogRoutes } from './day-logs/day-log-routes.ts'
+import { hoursRoutes } from './day-logs/hours-routes.ts'
 import { daySheetRoutes } from './day-sheets/day-sheet-routes.ts'
 import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
@@ -96,6 +97,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   bookingRoutes(api, deps)
   daySheetRoutes(api, deps)
   dayLogRoutes(api, deps)
+  hoursRoutes(api, deps)
   rainOffRoutes(api, deps)
   messageRoutes(api, deps)
   noticeRoutes(api, deps)

@@ -1,4 +1,5 @@
 import type { RequestHandler } from 'express'
+import { uploadHeader } from '../../shared/http/upload.ts'
 import { AppError } from './app-error.ts'
 
 const safeMethods = new Set(['GET', 'HEAD', 'OPTIONS'])
@@ -24,11 +25,13 @@ export function refuseCrossSiteWrites(appUrl: string): RequestHandler {
 
 /**
  * A body is JSON or nothing. What a plain form can send needs no leave of ours (Fetch standard, CORS-safelisted
- * content types), so such a body is refused rather than read as empty.
+ * content types), so such a body is refused rather than read as empty, unless it comes with a header that a
+ * plain form cannot send.
  */
 export const refuseOtherBodies: RequestHandler = (req, _res, next) => {
   const isEmpty = req.get('content-length') === '0'
-  if (!isEmpty && req.is('application/json') === false)
+  const isUpload = req.get(uploadHeader) !== undefined && req.is('multipart/form-data') !== false
+  if (!isEmpty && !isUpload && req.is('application/json') === false)
     throw new AppError('invalid_input', 'A body is sent as JSON.')
   next()
 }

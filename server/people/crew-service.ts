@@ -2,15 +2,15 @@ import { and, asc, eq, inArray, ne } from 'drizzle-orm'
 import type { z } from 'zod'
 import { permissionScope } from '../../shared/auth/permissions.ts'
 import type {
-  addLeaveSchema,
   Crew,
+  CrewPeople,
   crewInputSchema,
   moveCrewSchema,
   Person,
 } from '../../shared/people/people-schemas.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { crews, leave } from '../db/tables/people-tables.ts'
+import { crews } from '../db/tables/people-tables.ts'
 import { invalidField, notFound } from '../http/app-error.ts'
 import { newId } from '../lib/ids.ts'
 import {
@@ -21,7 +21,8 @@ import {
   requireCrew,
   requirePersonRow,
 } from './people-change.ts'
-import { moveToCrew } from './people-store.ts'
+import { moveToCrew } from './crew-moves.ts'
+import { readCrewPeople } from './people-store.ts'
 import { crewIdsOf } from './roster.ts'
 
 type CrewInput = z.output<typeof crewInputSchema>
@@ -43,37 +44,6 @@ export function movePerson(
   return personView(deps, id)
 }
 
-export function addLeave(
-  deps: PeopleDeps,
-  user: CurrentUser,
-  personId: string,
-  input: z.output<typeof addLeaveSchema>,
-): Person {
-  changePeople(deps, user, { action: 'leave added', entityId: personId }, (tx) => {
-    requirePersonRow(tx, personId)
-    tx.insert(leave)
-      .values({ id: newId(), personId, ...input })
-      .run()
-  })
-  return personView(deps, personId)
-}
-
-export function dropLeave(
-  deps: PeopleDeps,
-  user: CurrentUser,
-  personId: string,
-  leaveId: string,
-): Person {
-  changePeople(deps, user, { action: 'leave taken back', entityId: personId }, (tx) => {
-    const gone = tx
-      .delete(leave)
-      .where(and(eq(leave.id, leaveId), eq(leave.personId, personId)))
-      .run()
-    if (gone.changes === 0) throw notFound('That leave')
-  })
-  return personView(deps, personId)
-}
-
 /** The office sees every crew, a leading hand the own one. */
 export function listCrews(deps: PeopleDeps, user: CurrentUser): Crew[] {
   const all = permissionScope(user.role, 'crew:read') === 'all'
@@ -84,6 +54,13 @@ export function listCrews(deps: PeopleDeps, user: CurrentUser): Crew[] {
     .where(own ? inArray(crews.id, own) : undefined)
     .orderBy(asc(crews.letter))
     .all()
+}
+
+/** Who is, will be and was in a crew. */
+export function crewPeople(deps: PeopleDeps, id: string): CrewPeople {
+  const crew = deps.db.select({ id: crews.id }).from(crews).where(eq(crews.id, id)).get()
+  if (!crew) throw notFound('That crew')
+  return readCrewPeople(deps.db, id, firmToday(deps))
 }
 
 function refuseTakenLetter(tx: DbOrTx, letter: string, exceptId: string): void {

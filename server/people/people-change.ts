@@ -19,22 +19,25 @@ export type PeopleDeps = {
   replanUpcoming: (tx: DbOrTx, now: Date) => void
 }
 
-export function firmToday({ db, clock }: PeopleDeps): string {
+export function firmToday({ db, clock }: Pick<PeopleDeps, 'db' | 'clock'>): string {
   return localDayOf(clock.now(), readFirm(db).timeZone)
 }
 
-/** One change: its rows, its audit line and, where hours change, the plans, all or nothing. */
+/**
+ * One change: its rows, its audit line and, where hours change, the plans, all or nothing. `hoursStay`
+ * says that it leaves everybody's hours as they are.
+ */
 export function changePeople(
   deps: PeopleDeps,
   user: CurrentUser,
-  { action, entityId }: { action: string; entityId: string },
+  { action, entityId, hoursStay }: { action: string; entityId: string; hoursStay?: boolean },
   work: (tx: DbOrTx) => void,
 ): void {
   const now = deps.clock.now()
   deps.db.transaction((tx) => {
     work(tx)
     writeAudit(tx, { at: now, personId: user.id, action, entity: 'people', entityId })
-    deps.replanUpcoming(tx, now)
+    if (!hoursStay) deps.replanUpcoming(tx, now)
   })
   deps.events.publish({ topic: 'people' })
 }
@@ -52,7 +55,7 @@ export function requirePersonRow(tx: DbOrTx, id: string): typeof people.$inferSe
 }
 
 export function personView(deps: PeopleDeps, id: string): Person {
-  const person = listPeople(deps.db, firmToday(deps)).find((one) => one.id === id)
+  const person = listPeople(deps.db, firmToday(deps), deps.clock.now()).find((p) => p.id === id)
   if (!person) throw notFound('That person')
   return person
 }

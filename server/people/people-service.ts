@@ -4,12 +4,15 @@ import type {
   createPersonSchema,
   editPersonSchema,
   Person,
+  PersonDetail,
+  personHoursSchema,
 } from '../../shared/people/people-schemas.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import { dropPasswordLinks } from '../auth/password-links.ts'
 import type { DbOrTx } from '../db/client.ts'
 import { people } from '../db/tables/people-tables.ts'
-import { invalidField, staleVersion } from '../http/app-error.ts'
+import { readFirm } from '../firm/firm-store.ts'
+import { AppError, invalidField, notFound, staleVersion } from '../http/app-error.ts'
 import { newId } from '../lib/ids.ts'
 import { enqueueMail } from '../mail/outbox-store.ts'
 import {
@@ -20,7 +23,9 @@ import {
   requireCrew,
   requirePersonRow,
 } from './people-change.ts'
-import { moveToCrew } from './people-store.ts'
+import { moveToCrew } from './crew-moves.ts'
+import { readPersonDetail } from './people-store.ts'
+import { invitationKeys, readSignInLinks } from './sign-in-links.ts'
 
 function refuseTakenEmail(tx: DbOrTx, email: string, exceptId: string): void {
   const taken = tx
@@ -33,7 +38,7 @@ function refuseTakenEmail(tx: DbOrTx, email: string, exceptId: string): void {
 
 function invite(tx: DbOrTx, person: { id: string; name: string; email: string }, now: Date): void {
   enqueueMail(tx, {
-    key: `invitation:${newId()}`,
+    key: `${invitationKeys.from}${newId()}`,
     kind: 'invitation',
     personId: person.id,
     toName: person.name,
@@ -94,10 +99,40 @@ export function editPerson(
   return personView(deps, id)
 }
 
+/** Own ordinary hours of the week; null: the firm's. */
+export function setHours(
+  deps: PeopleDeps,
+  user: CurrentUser,
+  id: string,
+  { version, weekHours }: z.output<typeof personHoursSchema>,
+): PersonDetail {
+  changePeople(deps, user, { action: 'hours changed', entityId: id }, (tx) => {
+    const row = requirePersonRow(tx, id)
+    if (row.version !== version) throw staleVersion(personView(deps, id))
+    tx.update(people)
+      .set({ weekHours, version: version + 1 })
+      .where(eq(people.id, id))
+      .run()
+  })
+  return personDetail(deps, id)
+}
+
+export function personDetail(deps: PeopleDeps, id: string): PersonDetail {
+  const at = { id, today: firmToday(deps), now: deps.clock.now(), firm: readFirm(deps.db) }
+  const detail = readPersonDetail(deps.db, at)
+  if (!detail) throw notFound('That person')
+  return detail
+}
+
+/** Sends a link once more; one on its way already is enough. */
 export function inviteAgain(deps: PeopleDeps, user: CurrentUser, id: string): void {
-  changePeople(deps, user, { action: 'link sent again', entityId: id }, (tx) => {
+  const now = deps.clock.now()
+  const change = { action: 'link sent again', entityId: id, hoursStay: true }
+  changePeople(deps, user, change, (tx) => {
     const row = requirePersonRow(tx, id)
     if (!row.active) throw invalidField('active', 'This person has no access. Give it back first.')
-    invite(tx, row, deps.clock.now())
+    if (readSignInLinks(tx, now)(id).state === 'waiting')
+      throw new AppError('conflict', 'A link is on its way already. Messages says how it stands.')
+    invite(tx, row, now)
   })
 }

@@ -8,6 +8,8 @@ import {
   lineSchema,
   versionSchema,
 } from '../http/fields.ts'
+import { leaveSchema } from './leave-schemas.ts'
+import { ticketSchema } from './ticket-schemas.ts'
 
 const personFields = {
   name: lineSchema(80, { required: 'Give the name people know them by.' }),
@@ -33,16 +35,28 @@ export const moveCrewSchema = z.strictObject({
   from: daySchema,
 })
 
-export const addLeaveSchema = z
-  .strictObject({
-    startsOn: daySchema,
-    endsOn: daySchema,
-    reason: lineSchema(120),
-  })
-  .refine((leave) => leave.endsOn >= leave.startsOn, {
-    path: ['endsOn'],
-    message: 'The last day is before the first.',
-  })
+/** Monday to Sunday; null: the firm's. */
+const weekHoursSchema = z
+  .array(
+    z
+      .number('Give the hours as a number, 0 for none.')
+      .min(0, "Give hours from 0 to 14.")
+      .max(14, "Give hours from 0 to 14."),
+  )
+  .length(7)
+  .nullable()
+
+export const personHoursSchema = z.strictObject({
+  weekHours: weekHoursSchema,
+  version: versionSchema,
+})
+
+export const addLoanSchema = z.strictObject({
+  /** The crew that borrows. */
+  crewId: idSchema,
+  day: daySchema,
+  note: lineSchema(120),
+})
 
 export const crewInputSchema = z.strictObject({
   name: lineSchema(40, { required: 'Give the crew a name.' }),
@@ -65,12 +79,13 @@ export type Crew = z.infer<typeof crewSchema>
 
 export const crewListSchema = z.object({ crews: z.array(crewSchema) })
 
-export const leaveSchema = z.object({
-  id: z.string(),
-  startsOn: z.string(),
-  endsOn: z.string(),
-  reason: z.string(),
+/** How the link to sign in stands: never sent, on its way, stuck, good until a day, or no longer good. */
+export const signInLinkSchema = z.object({
+  state: z.enum(['none', 'waiting', 'failed', 'works', 'ended']),
+  sentAt: z.iso.datetime().nullable(),
+  worksUntil: z.iso.datetime().nullable(),
 })
+export type SignInLink = z.infer<typeof signInLinkSchema>
 
 export const personSchema = z.object({
   id: z.string(),
@@ -81,13 +96,67 @@ export const personSchema = z.object({
   active: z.boolean(),
   /** Has not yet chosen a password. */
   invited: z.boolean(),
-  /** The crew today, and the next move when one is set. */
+  link: signInLinkSchema,
+  /** The own crew today, and the next move when one is set. */
   crewId: z.string().nullable(),
   nextMove: z.object({ crewId: z.string().nullable(), from: z.string() }).nullable(),
+  /** The crew that has borrowed the person today. */
+  lentToId: z.string().nullable(),
   /** Today's and coming leave. */
   leave: z.array(leaveSchema),
+  tickets: z.array(ticketSchema),
   version: z.number(),
 })
 export type Person = z.infer<typeof personSchema>
 
 export const peopleListSchema = z.object({ people: z.array(personSchema) })
+
+export const loanSchema = z.object({
+  id: z.string(),
+  crewId: z.string(),
+  day: z.string(),
+  note: z.string(),
+})
+export type Loan = z.infer<typeof loanSchema>
+
+/** What the office sees of one person beside the list. */
+export const personDetailSchema = personSchema.extend({
+  weekHours: z.array(z.number()).nullable(),
+  firmWeekHours: z.array(z.number()),
+  /** The newest first. */
+  memberships: z.array(
+    z.object({
+      id: z.string(),
+      crewId: z.string(),
+      startsOn: z.string(),
+      endsOn: z.string().nullable(),
+    }),
+  ),
+  /** Today's and coming days with another crew. */
+  loans: z.array(loanSchema),
+})
+export type PersonDetail = z.infer<typeof personDetailSchema>
+
+/** Who is, will be and was in a crew, and whom it borrows; the newest first. */
+export const crewPeopleSchema = z.object({
+  members: z.array(
+    z.object({
+      id: z.string(),
+      personId: z.string(),
+      name: z.string(),
+      role: roleSchema,
+      startsOn: z.string(),
+      endsOn: z.string().nullable(),
+    }),
+  ),
+  loans: z.array(
+    z.object({
+      id: z.string(),
+      personId: z.string(),
+      name: z.string(),
+      day: z.string(),
+      note: z.string(),
+    }),
+  ),
+})
+export type CrewPeople = z.infer<typeof crewPeopleSchema>

@@ -1,8 +1,8 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
 import type { z } from 'zod'
 import { doneSchema } from '../../../shared/auth/auth-schemas.ts'
+import type { addLeaveSchema } from '../../../shared/people/leave-schemas.ts'
 import {
-  type addLeaveSchema,
   type createPersonSchema,
   type crewInputSchema,
   crewListSchema,
