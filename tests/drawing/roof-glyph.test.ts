@@ -1,11 +1,11 @@
 import { describe, expect, test } from 'vitest'
 import { roofGlyphOf } from '../../shared/drawing/roof-glyph.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
+import { framedOnce } from '../roof/support/framed.ts'
 import { convexReferences, hollowReferences, referenceRoof } from '../roof/support/roofs.ts'
 
 describe.each([...convexReferences, ...hollowReferences])('the glyph of $title', (reference) => {
   const roof = referenceRoof(reference)
-  const glyph = roofGlyphOf(frameRoof(roof), roof)
+  const glyph = roofGlyphOf(framedOnce(roof), roof)
 
   test('has the corners of the plan, its longer side 100 long, upright', () => {
     // Source: the outline of tests/fixtures/roofs.json, scaled by hand here.
@@ -21,7 +21,6 @@ describe.each([...convexReferences, ...hollowReferences])('the glyph of $title',
 
   test('has one line for each ridge, hip, broken hip and valley', () => {
     const kinds = reference.lines
-
       .map((line) => line.kind.replace(' ', '-'))
       .filter((kind) => kind !== 'verge')
       .sort()

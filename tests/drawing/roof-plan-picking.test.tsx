@@ -7,17 +7,10 @@ import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { RoofGlyph } from '../../src/drawings/roof-glyph.tsx'
 import { RoofPlan } from '../../src/drawings/roof-plan.tsx'
 import { TimberDrawing } from '../../src/drawings/timber-drawing.tsx'
+import { rectangle } from '../roof/support/plans.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 
-const roof = makeRoof(
-  [
-    [0, 0],
-    [9000, 0],
-    [9000, 6000],
-    [0, 6000],
-  ],
-  [25, 25, 25, 25],
-)
+const roof = makeRoof(rectangle(9000, 6000), [25, 25, 25, 25])
 const spec = frameRoof(roof)
 const [first, second] = spec.members.map((member) => member.mark)
 const button = (mark: string | undefined) =>

@@ -11,6 +11,7 @@ import { planDrawing, type PlanDrawingOptions } from '../../shared/drawing/plan-
 import { planMemberAt } from '../../shared/drawing/plan-members.ts'
 import type { FrameSpec, Point2, Roof } from '../../shared/roof/roof-types.ts'
 import { framedOnce } from '../roof/support/framed.ts'
+import { rectangle } from '../roof/support/plans.ts'
 import { convexReferences, makeRoof, referenceRoof } from '../roof/support/roofs.ts'
 
 // The outlines, nodes and lines of the reference roofs are from tests/fixtures/roofs.json, which was
@@ -145,15 +146,7 @@ describe.each(framed)('$reference.title', ({ reference, roof, spec }) => {
 })
 
 describe('9.0 × 6.0 m, four hips', () => {
-  const roof = makeRoof(
-    [
-      [0, 0],
-      [9000, 0],
-      [9000, 6000],
-      [0, 6000],
-    ],
-    [25, 25, 25, 25],
-  )
+  const roof = makeRoof(rectangle(9000, 6000), [25, 25, 25, 25])
   const spec = framedOnce(roof)
 
   test('at a desk every mark is written in full', () => {
@@ -187,15 +180,7 @@ describe('9.0 × 6.0 m, four hips', () => {
 })
 
 describe('a roof that is still being typed', () => {
-  const roof = makeRoof(
-    [
-      [0, 0],
-      [9000, 0],
-      [9000, 6000],
-      [0, 6000],
-    ],
-    [25, 25, 25, 25],
-  )
+  const roof = makeRoof(rectangle(9000, 6000), [25, 25, 25, 25])
 
   test('problems are marked on their plate or corner, and others are listed', () => {
     const drawing = draw(roof, null, {

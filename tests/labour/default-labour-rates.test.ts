@@ -4,6 +4,7 @@ import { workPackagesOf } from '../../shared/labour/work-packages.ts'
 import { labourMinutes } from '../../shared/labour/work-step.ts'
 import type { Roof } from '../../shared/roof/roof-types.ts'
 import { framedOnce } from '../roof/support/framed.ts'
+import { rectangle } from '../roof/support/plans.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 
 // Source: labour to cut and pitch, an estimating textbook's figure 13.55 (excerpt seen, title not): 18.5–35 h
@@ -28,14 +29,6 @@ function hoursPerM3(roof: Roof): number {
   return minutes / 60 / volumeM3
 }
 
-function rectangle(longMm: number, wideMm: number) {
-  return [
-    [0, 0],
-    [longMm, 0],
-    [longMm, wideMm],
-    [0, wideMm],
-  ] as const
-}
 const hipRoof = (longMm: number, wideMm: number, pitchDeg: number): Roof =>
   makeRoof(rectangle(longMm, wideMm), [pitchDeg, pitchDeg, pitchDeg, pitchDeg])
 const gableRoof = (longMm: number, wideMm: number, pitchDeg: number): Roof =>

@@ -3,19 +3,15 @@ import { defaultLabourRates } from '../../shared/labour/default-labour-rates.ts'
 import { packagesInWords } from '../../shared/labour/package-words.ts'
 import { workPackagesOf } from '../../shared/labour/work-packages.ts'
 import { packageKeys } from '../../shared/labour/work-step.ts'
-import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import type { FrameSpec } from '../../shared/roof/roof-types.ts'
+import { framedOnce } from '../roof/support/framed.ts'
+import { rectangle } from '../roof/support/plans.ts'
 import { convexReferences, makeRoof, referenceRoof, regularOutline } from '../roof/support/roofs.ts'
 
-const rectangle = [
-  [0, 0],
-  [9000, 0],
-  [9000, 6000],
-  [0, 6000],
-] as const
-const hipRoof = frameRoof(makeRoof(rectangle, [25, 25, 25, 25]))
-const gableRoof = frameRoof(makeRoof(rectangle, [25, 'gable', 25, 'gable']))
-const turret = frameRoof(makeRoof(regularOutline(8, 4000), Array(8).fill(30) as number[]))
+const plan = rectangle(9000, 6000)
+const hipRoof = framedOnce(makeRoof(plan, [25, 25, 25, 25]))
+const gableRoof = framedOnce(makeRoof(plan, [25, 'gable', 25, 'gable']))
+const turret = framedOnce(makeRoof(regularOutline(8, 4000), Array(8).fill(30) as number[]))
 
 const stepsOf = (spec: FrameSpec) =>
   workPackagesOf(spec, defaultLabourRates).flatMap((p) => p.steps)
@@ -26,7 +22,7 @@ const marks = (spec: FrameSpec, work: 'cut' | 'stand') =>
 const roleOf = (spec: FrameSpec) => new Map(spec.members.map((m) => [m.mark, m.role]))
 
 describe.each([
-  ...convexReferences.map((r) => [r.title, frameRoof(referenceRoof(r))] as const),
+  ...convexReferences.map((r) => [r.title, framedOnce(referenceRoof(r))] as const),
   ['octagonal turret', turret] as const,
 ])('the packages of %s', (_name, spec) => {
   test('cut every member once and stand every member once', () => {

@@ -9,6 +9,7 @@ import { roundingWords } from '../../shared/marking/rounding-words.ts'
 import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, MemberRole } from '../../shared/roof/roof-types.ts'
 import { framedOnce } from '../roof/support/framed.ts'
+import { rectangle } from '../roof/support/plans.ts'
 import { hollowReferences, makeRoof, referenceRoof } from '../roof/support/roofs.ts'
 import {
   common,
@@ -136,28 +137,19 @@ test.each(hollowReferences)(
 describe('timbers beside the frame', () => {
   const size = { thicknessMm: 70, depthMm: 140 }
   const board = { thicknessMm: 30, depthMm: 190 }
-  const roof = makeRoof(
-    [
-      [0, 0],
-      [9000, 0],
-      [9000, 6000],
-      [0, 6000],
-    ],
-    [25, 25, 25, 'gable'],
-    {
-      sections: {
-        rafter: { thicknessMm: 45, depthMm: 140 },
-        hip: { thicknessMm: 35, depthMm: 190 },
-        valley: { thicknessMm: 35, depthMm: 190 },
-        ridge: { thicknessMm: 35, depthMm: 190 },
-        underpurlin: size,
-        collarTie: { thicknessMm: 35, depthMm: 90 },
-        fascia: board,
-        barge: board,
-      },
-      tail: 'square',
+  const roof = makeRoof(rectangle(9000, 6000), [25, 25, 25, 'gable'], {
+    sections: {
+      rafter: { thicknessMm: 45, depthMm: 140 },
+      hip: { thicknessMm: 35, depthMm: 190 },
+      valley: { thicknessMm: 35, depthMm: 190 },
+      ridge: { thicknessMm: 35, depthMm: 190 },
+      underpurlin: size,
+      collarTie: { thicknessMm: 35, depthMm: 90 },
+      fascia: board,
+      barge: board,
     },
-  )
+    tail: 'square',
+  })
   const spec = framedOnce(roof, { ...defaultSettings, maxRafterSpanMm: 2200 })
   const roles = ['underpurlin', 'collar-tie', 'fascia', 'barge'] as const
 

@@ -1,4 +1,5 @@
 import type { Angle, Cut, FrameSpec, Member } from '../../shared/roof/roof-types.ts'
+import { bareSpec, cutLinesOf } from '../roof/support/bare-spec.ts'
 
 /**
  * A 3-4-5 roof worked by hand, so that every number is plain to check: run 3000, rise 2250, set-out length
@@ -147,43 +148,10 @@ export const creeperRight: Member = {
 
 const hip: Member = { ...common, mark: 'H1a', role: 'hip' }
 
+/** A spec of these members, with the ridge and the hip that they bear on. */
 export function specOf(members: Member[], changes: Partial<FrameSpec> = {}): FrameSpec {
-  const lineOf = (mark: string) => members.filter((m) => m.mark.startsWith(mark))
-  const marks = [...new Set(members.map((m) => m.mark.replace(/[a-z]+$/, '')))]
-  return {
-    standMm: 115.4,
-    planes: [],
-    lines: [],
-    members: [...members, ridge, hip].filter(
-      (m, i, all) => all.findIndex((other) => other.mark === m.mark) === i,
-    ),
-    cutLines: marks.map((mark) => {
-      const pieces = lineOf(mark)
-      const first = pieces[0]!
-      return {
-        mark,
-        role: first.role,
-        section: first.section,
-        cutLengthMm: first.cutLengthMm,
-        quantity: pieces.length,
-        left: pieces.filter((p) => p.hand === 'left').length,
-        right: pieces.filter((p) => p.hand === 'right').length,
-        members: pieces.map((p) => p.mark),
-      }
-    }),
-    totals: {
-      roofAreaM2: 0,
-      roofAreaWithEavesM2: 0,
-      ridgeMm: 0,
-      hipMm: 0,
-      valleyMm: 0,
-      eaveMm: 0,
-      vergeMm: 0,
-      bySection: [],
-    },
-    cautions: [],
-    planing: [],
-    rounding: { worstMm: 0, joint: null },
-    ...changes,
-  }
+  const all = [...members, ridge, hip].filter(
+    (m, i, list) => list.findIndex((other) => other.mark === m.mark) === i,
+  )
+  return bareSpec(all, { standMm: 115.4, cutLines: cutLinesOf(members), ...changes })
 }

@@ -3,6 +3,8 @@ import { markingCardLines, markingCardOf } from '../../shared/marking/marking-ca
 import type { MarkingOptions } from '../../shared/marking/marking-figures.ts'
 import { topTiltDeg } from '../../shared/marking/saw-words.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
+import { framedOnce } from '../roof/support/framed.ts'
+import { rectangle } from '../roof/support/plans.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 import {
   angle,
@@ -183,13 +185,7 @@ test('two cheeks give the points that are on the timber: the middle and both edg
 })
 
 test('a ridge says which of its ends the tape starts from', () => {
-  const outline = [
-    [0, 0],
-    [9000, 0],
-    [9000, 6000],
-    [0, 6000],
-  ] as const
-  const spec = frameRoof(makeRoof(outline, [25, 25, 25, 25]))
+  const spec = framedOnce(makeRoof(rectangle(9000, 6000), [25, 25, 25, 25]))
   const card = markingCardOf(spec, 'R1', options)
   const board = spec.members.find((one) => one.role === 'ridge')!
   const crown = spec.members.find((one) => card.handWords.includes(`crown end rafter ${one.mark}`))!
@@ -202,13 +198,7 @@ test('a cut line that the roof has not is refused by name', () => {
 })
 
 test('every card of a hip roof carries the numbers of the member it describes', () => {
-  const outline = [
-    [0, 0],
-    [9000, 0],
-    [9000, 6000],
-    [0, 6000],
-  ] as const
-  const spec = frameRoof(makeRoof(outline, [25, 25, 25, 25]))
+  const spec = framedOnce(makeRoof(rectangle(9000, 6000), [25, 25, 25, 25]))
   expect(spec.cutLines.length).toBeGreaterThan(5)
   for (const line of spec.cutLines) {
     const card = markingCardOf(spec, line.mark, options)

@@ -1,16 +1,9 @@
 import { expect, test } from 'vitest'
 import { cornersOfPaste } from '../../shared/outline/pasted-corners.ts'
+import { lCorners } from './l-outline.ts'
 
-const l = [
-  { x: 0, y: 0 },
-  { x: 9000, y: 0 },
-  { x: 9000, y: 4000 },
-  { x: 4000, y: 4000 },
-  { x: 4000, y: 7000 },
-  { x: 0, y: 7000 },
-]
 const written = (part: string, number = (mm: number) => `${mm}`) =>
-  l.map(({ x, y }) => `${number(x)}${part}${number(y)}`).join('\n')
+  lCorners.map(({ x, y }) => `${number(x)}${part}${number(y)}`).join('\n')
 
 test.each([
   ['a comma', ', '],
@@ -20,7 +13,7 @@ test.each([
   ['spaces', '   '],
 ])('corners parted by %s are read in millimetres', (_, part) => {
   expect(cornersOfPaste(written(part))).toMatchObject({
-    corners: l,
+    corners: lCorners,
     unit: 'mm',
     isUnitGuessed: true,
     wasTurned: false,
@@ -34,7 +27,7 @@ test.each([
   ['decimal commas', '; ', (mm: number) => (mm / 1000).toFixed(2).replace('.', ',')],
   ['decimal commas between spaces', ' ', (mm: number) => (mm / 1000).toFixed(1).replace('.', ',')],
 ])('a plan in metres with %s is taken for metres, and says so', (_, part, number) => {
-  expect(cornersOfPaste(written(part, number))).toMatchObject({ corners: l, unit: 'm' })
+  expect(cornersOfPaste(written(part, number))).toMatchObject({ corners: lCorners, unit: 'm' })
 })
 
 test('the unit a person chose goes before the guess', () => {
@@ -46,18 +39,21 @@ test('the unit a person chose goes before the guess', () => {
 })
 
 test('corners in clockwise order are turned round from the first, and say so', () => {
-  const clockwise = [l[0]!, ...l.slice(1).reverse()]
+  const clockwise = [lCorners[0]!, ...lCorners.slice(1).reverse()]
   const text = clockwise.map(({ x, y }) => `${x}, ${y}`).join('\n')
-  expect(cornersOfPaste(text)).toMatchObject({ corners: l, wasTurned: true })
+  expect(cornersOfPaste(text)).toMatchObject({ corners: lCorners, wasTurned: true })
 })
 
 test('a last line that repeats the first is left out, and says so', () => {
-  expect(cornersOfPaste(`${written(', ')}\n0, 0\n`)).toMatchObject({ corners: l, wasClosed: true })
+  expect(cornersOfPaste(`${written(', ')}\n0, 0\n`)).toMatchObject({
+    corners: lCorners,
+    wasClosed: true,
+  })
 })
 
 test('headings, empty lines, corner numbers and units in the text do no harm', () => {
-  const text = `x, y\n\n${l.map(({ x, y }, i) => `${i + 1}: x=${x} mm, y=${y} mm`).join('\r\n')}\n`
-  expect(cornersOfPaste(text)).toMatchObject({ corners: l, problems: [] })
+  const text = `x, y\n\n${lCorners.map(({ x, y }, i) => `${i + 1}: x=${x} mm, y=${y} mm`).join('\r\n')}\n`
+  expect(cornersOfPaste(text)).toMatchObject({ corners: lCorners, problems: [] })
 })
 
 test('what cannot be read is refused with its line and its words', () => {

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
 import { sidesOfOutline, walkOfSides } from '../../shared/outline/sides-and-turns.ts'
+import { lCorners } from './l-outline.ts'
 
 const side = (lengthMm: number, turnLeftDeg: number) => ({ lengthMm, turnLeftDeg })
 
@@ -15,14 +16,7 @@ test('six sides of an L, five turns left and one right, come back to where they 
   ])
   expect(walk.isClosed).toBe(true)
   expect(walk.gapMm).toBe(0)
-  expect(walk.corners).toEqual([
-    { x: 0, y: 0 },
-    { x: 9000, y: 0 },
-    { x: 9000, y: 4000 },
-    { x: 4000, y: 4000 },
-    { x: 4000, y: 7000 },
-    { x: 0, y: 7000 },
-  ])
+  expect(walk.corners).toEqual(lCorners)
 })
 
 test('a side left out leaves a gap as long as that side, straight back to the start', () => {

@@ -3,15 +3,11 @@ import { describe, expect, test } from 'vitest'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { FrameSpec, Member, MemberRole, Roof } from '../../shared/roof/roof-types.ts'
+import { rectangle } from './support/plans.ts'
 import { makeRoof, regularOutline } from './support/roofs.ts'
 
 /** Source of the rules checked here: the project's written agreement on layout, joints and outputs. */
-const rectangle: [number, number][] = [
-  [0, 0],
-  [9000, 0],
-  [9000, 6000],
-  [0, 6000],
-]
+const plan = rectangle(9000, 6000)
 const ofRole = (spec: FrameSpec, role: MemberRole): Member[] =>
   spec.members.filter((m) => m.role === role)
 const head = (member: Member) => member.cuts.filter((cut) => cut.end === 'head')
@@ -24,7 +20,7 @@ describe('layout', () => {
       .map((m) => m.axis.from.x)
       .sort((a, b) => a - b)
   const gabled = (changes: Parameters<typeof makeRoof>[2]) =>
-    makeRoof(rectangle, [25, 'gable', 25, 'gable'], changes)
+    makeRoof(plan, [25, 'gable', 25, 'gable'], changes)
 
   test('rafters stand flush inside each gable, the bays between them even', () => {
     const found = stations(gabled({ spacing: 'even' }))
@@ -47,7 +43,7 @@ describe('layout', () => {
   })
 
   test('creepers fall by one constant difference: the spacing, up the slope', () => {
-    const spec = frameRoof(makeRoof(rectangle, [22.5, 35, 22.5, 35]))
+    const spec = frameRoof(makeRoof(plan, [22.5, 35, 22.5, 35]))
     const lengths = ofRole(spec, 'creeper')
       .filter((m) => m.planes[0] === 0 && m.hand === 'right')
       .map((m) => m.setOutLengthMm)
@@ -60,7 +56,7 @@ describe('layout', () => {
   })
 
   test('creepers shorter than the setting are left out', () => {
-    const roof = makeRoof(rectangle, [25, 25, 25, 25])
+    const roof = makeRoof(plan, [25, 25, 25, 25])
     const short = frameRoof(roof, { ...defaultSettings, minCreeperMm: 700 })
     expect(Math.min(...ofRole(short, 'creeper').map((m) => m.setOutLengthMm))).toBeGreaterThan(700)
     expect(short.members.length).toBeLessThan(frameRoof(roof).members.length)
@@ -69,7 +65,7 @@ describe('layout', () => {
 
 describe('joints', () => {
   test('at unequal pitches the two cheeks of a hip cross its centre line at different places', () => {
-    const hips = ofRole(frameRoof(makeRoof(rectangle, [22.5, 35, 22.5, 35])), 'hip')
+    const hips = ofRole(frameRoof(makeRoof(plan, [22.5, 35, 22.5, 35])), 'hip')
     for (const hip of hips) {
       const [a, b] = head(hip)
       expect(head(hip)).toHaveLength(2)
@@ -83,7 +79,7 @@ describe('joints', () => {
   })
 
   test('a gable ridge runs out to the verge', () => {
-    const spec = frameRoof(makeRoof(rectangle, [30, 'gable', 30, 'gable'], { overhangMm: 320 }))
+    const spec = frameRoof(makeRoof(plan, [30, 'gable', 30, 'gable'], { overhangMm: 320 }))
     const [ridge] = ofRole(spec, 'ridge')
     expect(ridge!.cutLengthMm).toBeCloseTo(9640, 6)
     expect([ridge!.headDeductionMm, ridge!.footDeductionMm]).toEqual([
@@ -93,7 +89,7 @@ describe('joints', () => {
   })
 
   test('the crown end bears on the ridge first, then on the centring pair beside it', () => {
-    const spec = frameRoof(makeRoof(rectangle, [25, 25, 25, 25]))
+    const spec = frameRoof(makeRoof(plan, [25, 25, 25, 25]))
     for (const crown of ofRole(spec, 'crown-end')) {
       const [cut] = head(crown)
       expect(cut!.against).toBe('R1')
@@ -126,17 +122,7 @@ describe('joints', () => {
   })
 
   test('on a pyramid one pair butts in line, the pair square to it butts its sides, the hips go between', () => {
-    const spec = frameRoof(
-      makeRoof(
-        [
-          [0, 0],
-          [5000, 0],
-          [5000, 5000],
-          [0, 5000],
-        ],
-        [30, 30, 30, 30],
-      ),
-    )
+    const spec = frameRoof(makeRoof(rectangle(5000, 5000), [30, 30, 30, 30]))
     const deductions = ofRole(spec, 'crown-end').map((m) => [m.planes[0], m.headDeductionMm])
     const cos = Math.cos(Math.PI / 6)
     expect(deductions.filter(([, mm]) => Math.abs(mm!) < 1e-6).map(([p]) => p)).toEqual([0, 2])
@@ -170,7 +156,7 @@ describe('joints', () => {
 
 describe('tails, tops and lengths', () => {
   test('a hip tail has two cheeks, one for each eave; a rafter tail is square across', () => {
-    const spec = frameRoof(makeRoof(rectangle, [25, 25, 25, 25]))
+    const spec = frameRoof(makeRoof(plan, [25, 25, 25, 25]))
     for (const hip of ofRole(spec, 'hip')) {
       expect(
         tail(hip)
@@ -185,14 +171,14 @@ describe('tails, tops and lengths', () => {
   })
 
   test('a square tail stands at 90° to the edge and ends the top where the plumb one does', () => {
-    const spec = frameRoof(makeRoof(rectangle, [25, 25, 25, 25], { tail: 'square' }))
+    const spec = frameRoof(makeRoof(plan, [25, 25, 25, 25], { tail: 'square' }))
     const [common] = ofRole(spec, 'common')
     expect(tail(common!)[0]!.face.fromEdgeDeg).toBeCloseTo(90, 6)
     expect(common!.tailLengthMm).toBeCloseTo(450 / Math.cos((25 * Math.PI) / 180), 6)
   })
 
   test('cut length reaches from long point to long point, the plumb tail and the allowance included', () => {
-    const spec = frameRoof(makeRoof(rectangle, [25, 25, 25, 25], { tailAllowanceMm: 60 }))
+    const spec = frameRoof(makeRoof(plan, [25, 25, 25, 25], { tailAllowanceMm: 60 }))
     const [common] = ofRole(spec, 'common')
     const reach = common!.setOutLengthMm - common!.headDeductionMm + common!.tailLengthMm
     const heelPiece = 140 * Math.tan((25 * Math.PI) / 180)
@@ -201,8 +187,8 @@ describe('tails, tops and lengths', () => {
   })
 
   test('a backed hip is not dropped and carries both backing angles; a lowered one the larger drop', () => {
-    const backed = frameRoof(makeRoof(rectangle, [22.5, 35, 22.5, 35], { hipTop: 'backed' }))
-    const lowered = frameRoof(makeRoof(rectangle, [22.5, 35, 22.5, 35], { hipTop: 'lowered' }))
+    const backed = frameRoof(makeRoof(plan, [22.5, 35, 22.5, 35], { hipTop: 'backed' }))
+    const lowered = frameRoof(makeRoof(plan, [22.5, 35, 22.5, 35], { hipTop: 'lowered' }))
     const [hip] = ofRole(backed, 'hip')
     expect(hip!.dropMm).toBe(0)
     expect(hip!.backing!.leftDeg).not.toBeCloseTo(hip!.backing!.rightDeg, 1)
@@ -219,7 +205,7 @@ describe('cautions', () => {
   const codes = (roof: Roof, settings = defaultSettings) =>
     frameRoof(roof, settings).cautions.map((c) => c.code)
   const plain = (changes: Parameters<typeof makeRoof>[2] = {}) =>
-    makeRoof(rectangle, [25, 25, 25, 25], changes)
+    makeRoof(plan, [25, 25, 25, 25], changes)
 
   test('an ordinary hip roof and an ordinary splayed pitch raise none', () => {
     expect(codes(plain())).toEqual([])
@@ -249,7 +235,7 @@ describe('cautions', () => {
   })
 
   test('unequal pitches with one overhang say how to level the eaves', () => {
-    const { cautions } = frameRoof(makeRoof(rectangle, [25, 30, 25, 30]))
+    const { cautions } = frameRoof(makeRoof(plan, [25, 30, 25, 30]))
     const uneven = cautions.filter((c) => c.code === 'eaves-not-level')
     expect(uneven).toHaveLength(4)
     // 450 × tan 25 / tan 30 = 363

@@ -3,15 +3,11 @@ import { describe, expect, test } from 'vitest'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { RoofRefusedError, roofProblems } from '../../shared/roof/roof-problems.ts'
 import type { Roof } from '../../shared/roof/roof-types.ts'
+import { rectangle } from './support/plans.ts'
 import { makeRoof } from './support/roofs.ts'
 
-const rectangle: [number, number][] = [
-  [0, 0],
-  [9000, 0],
-  [9000, 6000],
-  [0, 6000],
-]
-const good = (): Roof => makeRoof(rectangle, [25, 25, 25, 25])
+const plan = rectangle(9000, 6000)
+const good = (): Roof => makeRoof(plan, [25, 25, 25, 25])
 const changed = (change: (roof: Roof) => void): Roof => {
   const roof = structuredClone(good())
   change(roof)
@@ -20,10 +16,10 @@ const changed = (change: (roof: Roof) => void): Roof => {
 
 /** Source of every limit: the project's written agreement on what is refused. */
 const refusals: [string, Roof, string, RegExp][] = [
-  ['two corners', makeRoof(rectangle.slice(0, 2), [25, 25]), 'outline', /at least 3 corners/],
+  ['two corners', makeRoof(plan.slice(0, 2), [25, 25]), 'outline', /at least 3 corners/],
   [
     'edges that cross',
-    makeRoof([rectangle[0]!, rectangle[2]!, rectangle[1]!, rectangle[3]!], [25, 25, 25, 25]),
+    makeRoof([plan[0]!, plan[2]!, plan[1]!, plan[3]!], [25, 25, 25, 25]),
     'outline.2',
     /Edges 1 and 3 cross or touch/,
   ],
@@ -43,7 +39,7 @@ const refusals: [string, Roof, string, RegExp][] = [
   ],
   [
     'corners that run clockwise',
-    makeRoof([...rectangle].reverse(), [25, 25, 25, 25]),
+    makeRoof([...plan].reverse(), [25, 25, 25, 25]),
     'outline',
     /clockwise/,
   ],
@@ -77,17 +73,17 @@ const refusals: [string, Roof, string, RegExp][] = [
     'outline',
     /over 100 m/,
   ],
-  ['a pitch of 4°', makeRoof(rectangle, [25, 4, 25, 25]), 'edges.1.pitchDeg', /Edge 2.*5 to 60/],
-  ['a pitch of 61°', makeRoof(rectangle, [61, 25, 25, 25]), 'edges.0.pitchDeg', /Edge 1.*5 to 60/],
+  ['a pitch of 4°', makeRoof(plan, [25, 4, 25, 25]), 'edges.1.pitchDeg', /Edge 2.*5 to 60/],
+  ['a pitch of 61°', makeRoof(plan, [61, 25, 25, 25]), 'edges.0.pitchDeg', /Edge 1.*5 to 60/],
   [
     'gables all round',
-    makeRoof(rectangle, ['gable', 'gable', 'gable', 'gable']),
+    makeRoof(plan, ['gable', 'gable', 'gable', 'gable']),
     'edges.0.finish',
     /Every edge is a gable/,
   ],
   [
     'a gable beside a gable',
-    makeRoof(rectangle, [25, 'gable', 'gable', 25]),
+    makeRoof(plan, [25, 'gable', 'gable', 25]),
     'edges.1.finish',
     /Edge 2 is a gable that no slope meets at both ends/,
   ],
@@ -242,7 +238,7 @@ const refusals: [string, Roof, string, RegExp][] = [
   ['a plate without width', changed((r) => (r.plateWidthMm = 0)), 'plateWidthMm', /plate/],
   [
     'a slope left with too little seat at the common height over plate',
-    makeRoof(rectangle, [60, 5, 60, 5]),
+    makeRoof(plan, [60, 5, 60, 5]),
     'edges.1.pitchDeg',
     /Edge 2.*under 38 mm/,
   ],

@@ -1,4 +1,5 @@
 import type { Cut, FrameSpec, Member, MemberRole, Point3 } from '../../../shared/roof/roof-types.ts'
+import { bareSpec } from '../../roof/support/bare-spec.ts'
 import type { ReferenceRoof } from '../../roof/support/roofs.ts'
 
 /**
@@ -12,9 +13,7 @@ export function laidOutSpec(reference: ReferenceRoof, spacingMm = 600): FrameSpe
     ...reference.lines.flatMap((line) => lineMember(line, marks)),
     ...rafters(reference, spacingMm, marks),
   ]
-  return {
-    standMm: 110,
-    planes: [],
+  return bareSpec(members, {
     lines: reference.lines.map((line) => ({
       kind: line.kind.replace(' ', '-') as FrameSpec['lines'][number]['kind'],
       from: pointOf(line.frm),
@@ -24,22 +23,7 @@ export function laidOutSpec(reference: ReferenceRoof, spacingMm = 600): FrameSpe
       pitchDeg: line.pitch_deg,
       planes: [],
     })),
-    members,
-    cutLines: cutLinesOf(members),
-    totals: {
-      roofAreaM2: 0,
-      roofAreaWithEavesM2: 0,
-      ridgeMm: 0,
-      hipMm: 0,
-      valleyMm: 0,
-      eaveMm: 0,
-      vergeMm: 0,
-      bySection: [],
-    },
-    cautions: [],
-    planing: [],
-    rounding: { worstMm: 0, joint: null },
-  }
+  })
 }
 
 type Line = ReferenceRoof['lines'][number]
@@ -134,7 +118,7 @@ function roleBetween(low: string, high: string): MemberRole {
 }
 
 /** A timber from point to point, its ends square plumb cuts. */
-export function memberOf(
+function memberOf(
   role: MemberRole,
   mark: string,
   from: Point3,
@@ -196,22 +180,4 @@ export function memberOf(
     planes: [],
     weightKg: 0,
   }
-}
-
-export function cutLinesOf(members: readonly Member[]): FrameSpec['cutLines'] {
-  const stems = [...new Set(members.map((member) => member.mark.replace(/[a-z]+$/, '')))]
-  return stems.map((mark) => {
-    const alike = members.filter((member) => member.mark.replace(/[a-z]+$/, '') === mark)
-    const first = alike[0]!
-    return {
-      mark,
-      role: first.role,
-      section: first.section,
-      cutLengthMm: first.cutLengthMm,
-      quantity: alike.length,
-      left: 0,
-      right: 0,
-      members: alike.map((member) => member.mark),
-    }
-  })
 }

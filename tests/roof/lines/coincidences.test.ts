@@ -3,12 +3,11 @@ import { describe, expect, test } from 'vitest'
 import { plateLines } from '../../../shared/roof/plate-lines.ts'
 import { roofLines } from '../../../shared/roof/roof-lines.ts'
 import type { LineKind } from '../../../shared/roof/roof-types.ts'
+import { lPlan, type Plan, rectangle, tPlan } from '../support/plans.ts'
 import { makeRoof, regularOutline } from '../support/roofs.ts'
 import { sampleOf } from '../support/sample.ts'
 import { faultsOf, facePoints } from './line-rules.ts'
 import { numbersFrom, planAreaMm2 } from './random-outlines.ts'
-
-type Plan = [number, number][]
 
 /**
  * Plans whose slopes meet many at a point. The number of nodes over the plate, of slopes, and of lines of
@@ -23,29 +22,9 @@ const regular = (sides: number): [string, Plan, Wanted] => [
 ]
 
 const plans: [string, Plan, Wanted][] = [
-  [
-    'a square',
-    [
-      [0, 0],
-      [6000, 0],
-      [6000, 6000],
-      [0, 6000],
-    ],
-    { nodes: 1, slopes: 4, hip: 4 },
-  ],
+  ['a square', rectangle(6000, 6000), { nodes: 1, slopes: 4, hip: 4 }],
   ...[3, 5, 6, 8, 12].map(regular),
-  [
-    'an L of two equal wings',
-    [
-      [0, 0],
-      [12000, 0],
-      [12000, 6000],
-      [6000, 6000],
-      [6000, 11000],
-      [0, 11000],
-    ],
-    { nodes: 3, slopes: 6, ridge: 2, hip: 5, valley: 1 },
-  ],
+  ['an L of two equal wings', lPlan, { nodes: 3, slopes: 6, ridge: 2, hip: 5, valley: 1 }],
   [
     'a T with a wing as wide as the main roof',
     [
@@ -60,20 +39,7 @@ const plans: [string, Plan, Wanted][] = [
     ],
     { nodes: 4, slopes: 8, ridge: 3, hip: 6, valley: 2 },
   ],
-  [
-    'a T with a narrow wing',
-    [
-      [0, 0],
-      [12000, 0],
-      [12000, 6000],
-      [8000, 6000],
-      [8000, 9500],
-      [4000, 9500],
-      [4000, 6000],
-      [0, 6000],
-    ],
-    { nodes: 4, slopes: 7, ridge: 2, hip: 6, valley: 2 },
-  ],
+  ['a T with a narrow wing', tPlan, { nodes: 4, slopes: 7, ridge: 2, hip: 6, valley: 2 }],
   [
     'a cross of four equal wings',
     [
@@ -125,6 +91,10 @@ const plans: [string, Plan, Wanted][] = [
     { nodes: 4, slopes: 8, ridge: 3, hip: 6, valley: 2 },
   ],
 ]
+
+/** The T with the plate on the right of its wing so far out of line with the one on the left. */
+const tWithStep = (byMm: number): Plan =>
+  tPlan.map(([x, y]) => (y === 6000 && x >= 8000 ? [x, y + byMm] : [x, y]))
 
 const solve = (plan: Plan, pitchDeg = 25) => {
   const roof = makeRoof(
@@ -194,16 +164,7 @@ describe('plates out of square give a roof without slivers:', () => {
   })
 
   test('a wing between two plates 1 mm out of one line leaves one slope over both', () => {
-    const { plates } = solve([
-      [0, 0],
-      [12000, 0],
-      [12000, 6001],
-      [8000, 6001],
-      [8000, 9500],
-      [4000, 9500],
-      [4000, 6000],
-      [0, 6000],
-    ])
+    const { plates } = solve(tWithStep(1))
     expect(plates.slopes.map((slope) => slope.edges)).toContainEqual([2, 6])
   })
 
@@ -236,16 +197,7 @@ describe('plates out of square give a roof without slivers:', () => {
   })
 
   test('two plates 20 mm out of one line stay two slopes', () => {
-    const { roof, plates, lines } = solve([
-      [0, 0],
-      [12000, 0],
-      [12000, 6020],
-      [8000, 6020],
-      [8000, 9500],
-      [4000, 9500],
-      [4000, 6000],
-      [0, 6000],
-    ])
+    const { roof, plates, lines } = solve(tWithStep(20))
     expect(plates.slopes).toHaveLength(8)
     expect(faultsOf(roof, plates, lines)).toEqual([])
   })

@@ -7,6 +7,7 @@ import { roofLines } from '../../../shared/roof/roof-lines.ts'
 import { edgeUnder, slopePoint } from '../../../shared/roof/slopes.ts'
 import { squareLineSpans } from '../../../shared/roof/square-spans.ts'
 import type { Point2, Roof } from '../../../shared/roof/roof-types.ts'
+import { lPlan, rectangle, tPlan } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
 import { sampleOf } from '../support/sample.ts'
 import { facePoints, placeIn } from './line-rules.ts'
@@ -49,24 +50,6 @@ const widened = (outline: Point2[], outMm: number): Point2[] => {
   })
 }
 
-const lPlan: [number, number][] = [
-  [0, 0],
-  [12000, 0],
-  [12000, 6000],
-  [6000, 6000],
-  [6000, 11000],
-  [0, 11000],
-]
-const tPlan: [number, number][] = [
-  [0, 0],
-  [12000, 0],
-  [12000, 6000],
-  [8000, 6000],
-  [8000, 9500],
-  [4000, 9500],
-  [4000, 6000],
-  [0, 6000],
-]
 const pitches = (plan: unknown[], deg: number) => plan.map(() => deg)
 
 describe('slopes with their overhangs (by hand, from the plan)', () => {
@@ -87,7 +70,7 @@ describe('slopes with their overhangs (by hand, from the plan)', () => {
   })
 
   test('at a hip the wider overhang ends on the narrower one’s tail line', () => {
-    const plan = [lPlan[0]!, [9000, 0], [9000, 6000], [0, 6000]] as [number, number][]
+    const plan = rectangle(9000, 6000)
     const roof = withOverhangs(makeRoof(plan, pitches(plan, 25)), [450, 300, 450, 300])
     expect(sum(eavesPlanMm2(roof))).toBeCloseTo(9600 * 6900, 0)
   })
@@ -102,13 +85,13 @@ describe('slopes with their overhangs (by hand, from the plan)', () => {
   })
 
   test('a gable’s overhang carries both slopes on, tails and all', () => {
-    const plan = [lPlan[0]!, [9000, 0], [9000, 6000], [0, 6000]] as [number, number][]
+    const plan = rectangle(9000, 6000)
     const roof = withOverhangs(makeRoof(plan, [30, 'gable', 30, 'gable']), [450, 200, 450, 200])
     for (const area of eavesPlanMm2(roof)) expect(area).toBeCloseTo(9400 * 3450, 0)
   })
 
   test('a lean-to runs past its sides and its high wall', () => {
-    const plan = [lPlan[0]!, [9000, 0], [9000, 4000], [0, 4000]] as [number, number][]
+    const plan = rectangle(9000, 4000)
     const roof = withOverhangs(
       makeRoof(plan, [15, 'gable', 'gable', 'gable']),
       [450, 200, 100, 200],
@@ -132,7 +115,7 @@ describe('the surface of the roof', () => {
   })
 
   test('beyond a gable it is the slope run on', () => {
-    const plan = [lPlan[0]!, [9000, 0], [9000, 6000], [0, 6000]] as [number, number][]
+    const plan = rectangle(9000, 6000)
     const gabled = solve(makeRoof(plan, [30, 'gable', 30, 'gable']))
     const at = (x: number, y: number) => roofSurface(gabled.plates, gabled.lines)({ x, y })
     expect(at(9200, 1000)).toBeCloseTo(1000 * tan(30), 6)
@@ -216,7 +199,7 @@ test('square lines lie in their slope and nowhere else, in as many parts as it h
 describe('a lean-to', () => {
   test('is one slope up to its high wall: a level top line with one slope, two verges, one eave', () => {
     const { plates, lines } = solve(
-      makeRoof([lPlan[0]!, [9000, 0], [9000, 4000], [0, 4000]], [15, 'gable', 'gable', 'gable']),
+      makeRoof(rectangle(9000, 4000), [15, 'gable', 'gable', 'gable']),
     )
     expect(plates.slopes).toHaveLength(1)
     const shown = lines.lines.map(({ kind, from, to, slopes }) => [

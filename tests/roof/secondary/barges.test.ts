@@ -2,8 +2,9 @@ import { describe, expect, test } from 'vitest'
 
 import type { FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { planeOfEdge } from '../support/members.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { cos, endOf, framed, membersOf, rectangle, sin, tan, withSizes } from './sized.ts'
+import { cos, endOf, framed, membersOf, sin, tan, withSizes } from './sized.ts'
 
 const gableRoof = (changes: Partial<Roof> = {}, pitches = [25, 25]): Roof => ({
   ...withSizes(

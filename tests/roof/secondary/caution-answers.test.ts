@@ -1,8 +1,9 @@
 import { describe, expect, test } from 'vitest'
 
 import type { Caution, CautionCode, Roof, RoofSettings } from '../../../shared/roof/roof-types.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { cos, framed, lPlan, rectangle, sin, tan } from './sized.ts'
+import { cos, framed, lPlan, sin, tan } from './sized.ts'
 
 const said = (roof: Roof, code: CautionCode, settings?: Partial<RoofSettings>): Caution[] =>
   framed(roof, settings).cautions.filter((c) => c.code === code)

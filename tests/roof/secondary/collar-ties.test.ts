@@ -2,8 +2,9 @@ import { describe, expect, test } from 'vitest'
 
 import { tiedPlaces } from '../../../shared/roof/secondary/collar-ties.ts'
 import type { Roof } from '../../../shared/roof/roof-types.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { endOf, framed, membersOf, rectangle, sin, tan, withSizes } from './sized.ts'
+import { endOf, framed, membersOf, sin, tan, withSizes } from './sized.ts'
 
 const gableRoof = (changes: Partial<Roof> = {}, pitches = [25, 25]) => ({
   ...withSizes(

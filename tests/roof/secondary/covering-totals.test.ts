@@ -1,8 +1,9 @@
 import { describe, expect, test } from 'vitest'
 
 import type { Roof, RoofSettings } from '../../../shared/roof/roof-types.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { cos, framed, lPlan, membersOf, rectangle, tan, withSizes } from './sized.ts'
+import { cos, framed, lPlan, membersOf, tan, withSizes } from './sized.ts'
 
 /** Every figure here is worked out by hand from the plan; common mensuration, no source. */
 const coveringOf = (roof: Roof, settings?: Partial<RoofSettings>) =>

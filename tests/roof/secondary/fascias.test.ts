@@ -2,8 +2,9 @@ import { describe, expect, test } from 'vitest'
 
 import type { Cut, FrameSpec, Member, Roof } from '../../../shared/roof/roof-types.ts'
 import { planeOfEdge } from '../support/members.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof, regularOutline } from '../support/roofs.ts'
-import { cos, deg, endOf, framed, lPlan, membersOf, rad, rectangle, sin, tan } from './sized.ts'
+import { cos, deg, endOf, framed, lPlan, membersOf, rad, sin, tan } from './sized.ts'
 import { withSizes } from './sized.ts'
 
 const fasciaOn = (spec: FrameSpec, edge: number): Member =>

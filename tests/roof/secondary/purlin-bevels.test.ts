@@ -4,8 +4,9 @@ import corners from '../../fixtures/corners.json' with { type: 'json' }
 import type { Cut, FrameSpec, Roof } from '../../../shared/roof/roof-types.ts'
 import { example } from '../support/handbook.ts'
 import { byMark, planeOfEdge } from '../support/members.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { cos, deg, framed, membersOf, rad, rectangle, sin, tan, withSizes } from './sized.ts'
+import { cos, deg, framed, membersOf, rad, sin, tan, withSizes } from './sized.ts'
 
 /** The cut of an edge's purlin against a hip or a valley. */
 function cutAgainst(spec: FrameSpec, edge: number, role: 'hip' | 'valley', corner: number): Cut {

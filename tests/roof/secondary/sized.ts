@@ -44,14 +44,6 @@ export const tan = (degrees: number): number => Math.tan(rad(degrees))
 export const sin = (degrees: number): number => Math.sin(rad(degrees))
 export const cos = (degrees: number): number => Math.cos(rad(degrees))
 
-export const rectangle = (longMm: number, wideMm: number) =>
-  [
-    [0, 0],
-    [longMm, 0],
-    [longMm, wideMm],
-    [0, wideMm],
-  ] as const
-
 /** An L: a 12 × 6 m body with a wing 5 m wide, 4 m out from its front, at its left end. */
 export const lPlan = [
   [0, 0],

@@ -3,8 +3,9 @@ import { describe, expect, test } from 'vitest'
 import { purlinRowsMm } from '../../../shared/roof/secondary/underpurlins.ts'
 import type { FrameSpec, Member } from '../../../shared/roof/roof-types.ts'
 import { byMark, planeOfEdge } from '../support/members.ts'
+import { rectangle } from '../support/plans.ts'
 import { makeRoof } from '../support/roofs.ts'
-import { cos, endOf, framed, lPlan, membersOf, rectangle, sin, tan, withSizes } from './sized.ts'
+import { cos, endOf, framed, lPlan, membersOf, sin, tan, withSizes } from './sized.ts'
 
 const hipRoof = (pitchDeg = 25) =>
   withSizes(makeRoof(rectangle(12_000, 8000), Array(4).fill(pitchDeg)), 'underpurlin')
