@@ -103,11 +103,11 @@ function AskForm({ list, ...props }: Props) {
         Nothing moves until the office says so. They see which jobs, customers and deliveries it
         touches.
       </p>
-      <RainOffHeightNote />
       <FormFailure error={ask.error} shownPaths={fieldPaths} />
       <Button type="submit" size="site" busy={ask.isPending} className="w-full sm:w-auto">
         Ask the office
       </Button>
+      <RainOffHeightNote />
     </form>
   )
 }

@@ -3,7 +3,7 @@ import { formatDay } from '../../../shared/calendar/days.ts'
 import type { RainOffPreview } from '../../../shared/rain-offs/rain-off-schemas.ts'
 import { Note } from '../../ui/states.tsx'
 import { MovingBooking } from './moving-booking.tsx'
-import { daysWords, summaryWords } from './rain-off-words.ts'
+import { daysWords, isBookedOnLost, summaryWords } from './rain-off-words.ts'
 
 /** No booked day says that a roof is fit to go up on. */
 export function RainOffHeightNote() {
@@ -30,6 +30,14 @@ export function RainOffResult({ preview }: { preview: RainOffPreview }) {
             : `Nothing of ${preview.crew.name} has to move.`}
         </p>
       </div>
+      {moves.length > 0 && !isBookedOnLost(preview) ? (
+        <Note
+          kind="caution"
+          title={`${preview.crew.name} has nothing booked on ${lostDays.length === 1 ? 'the day' : 'the days'} lost`}
+        >
+          What follows moves all the same. To leave it where it is, use up free days first.
+        </Note>
+      ) : null}
       {stays.length > 0 ? (
         <Note title="Stays where it is">
           <ul>

@@ -9,13 +9,15 @@ export const countWords = (count: number, one: string, many = `${one}s`): string
 export const workingDaysWords = (count: number): string => countWords(count, 'working day')
 
 const mostNamed = 4
+/** A day stays on one line. */
+const unbroken = (day: string): string => formatDay(day).replaceAll(' ', '\u00a0')
 
 /** 'Thu 3 Dec, Fri 4 Dec'; a long run by its ends and its number. */
 export function daysWords(days: readonly string[]): string {
   const [first, last] = [days[0], days[days.length - 1]]
   if (first === undefined || last === undefined) return 'no day'
-  if (days.length <= mostNamed) return days.map(formatDay).join(', ')
-  return `${formatDay(first)} to ${formatDay(last)}, ${days.length} days`
+  if (days.length <= mostNamed) return days.map(unbroken).join(', ')
+  return `${unbroken(first)} to ${unbroken(last)}, ${days.length} days`
 }
 
 const stateWords: Record<MilestoneState, string> = {
@@ -52,4 +54,10 @@ export function summaryWords({ moves }: RainOffPreview): string {
     deliveries > 0 ? `${countWords(deliveries, 'delivery or trade', 'deliveries and trades')}` : '',
   ]
   return `${parts.filter(Boolean).join('; ')}.`
+}
+
+/** Whether the crew was booked on any of the days lost. */
+export function isBookedOnLost({ moves, stays, lostDays }: RainOffPreview): boolean {
+  const booked = [...moves.flatMap((move) => move.daysBefore), ...stays.map((stay) => stay.day)]
+  return booked.some((day) => lostDays.includes(day))
 }

@@ -51,9 +51,11 @@ export function TodayRainOff({ crewId, day }: { crewId: string; day: string }) {
   const { data } = useQuery({ ...rainOffQueries.list(), enabled: mayAsk })
   if (!mayAsk) return null
   const since = data ? dayPlus(data.today, -shownDaysBack) : ''
-  const shown = (data?.rainOffs ?? []).filter(
+  const own = (data?.rainOffs ?? []).filter(
     (row) => row.crew.id === crewId && row.fromDay >= since && !row.takenBack,
   )
+  // Newest first: of one day only what was said last.
+  const shown = own.filter((row, i) => own.findIndex((o) => o.fromDay === row.fromDay) === i)
   const isAsked = shown.some((row) => row.state === 'asked' && row.fromDay === day)
   const search = new URLSearchParams({ crew: crewId, day }).toString()
   return (
