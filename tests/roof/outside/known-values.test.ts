@@ -1,95 +1,108 @@
-import { expect, test } from 'vitest'
+import { describe, expect, test } from 'vitest'
 
-import { frameRoof } from '../../../shared/roof/frame-roof.ts'
+import { framedOnce } from '../support/framed.ts'
 import { hipBuilding } from '../support/hip-building.ts'
-import { hipFrom, ofRole } from '../support/members.ts'
-import { misfits } from '../support/misfits.ts'
+import { cutsAt, hipFrom, ofRole } from '../support/members.ts'
+import { misfits, type Row } from '../support/misfits.ts'
 import { convexReferences, referenceRoof } from '../support/roofs.ts'
+import type { Member } from '../../../shared/roof/roof-types.ts'
 
 /**
- * Source: the project's own agreement on what the computation means; "built once from this text, no
- * published source". Rafters 45 thick and 140 deep on 90 plates, hip and ridge 35 thick, 25°.
+ * Source: the project's written agreement on what the computation means ("Known values, 25°"): built once
+ * from that text, no published source. Rafters 45 thick and 140 deep on 90 plates, hip and ridge 35 thick.
  */
 const PRINTED = 0.005
 
-test('deductions at a square hip end at 25° are the agreed ones', () => {
-  const { spec, common, crown, hip, sideCreepers, endCreepers } = hipBuilding(25, 3000)
-  const plain = ofRole(spec, 'common').map((m) => m.headDeductionMm)
-  const creepers = [...sideCreepers, ...endCreepers].map((m) => m.headDeductionMm)
-  expect(creepers.length).toBeGreaterThan(4)
-  const rows = [
-    ...plain.map(
-      (mm, i) => [`common ${i}`, mm, 19.31, PRINTED] as [string, number, number, number],
-    ),
-    ['centring rafter', common.headDeductionMm, 19.31, PRINTED] as [string, number, number, number],
-    ['crown end', crown.headDeductionMm, 24.83, PRINTED] as [string, number, number, number],
-    ['hip', hip.headDeductionMm, 33.5, PRINTED] as [string, number, number, number],
-    ...creepers.map(
-      (mm, i) => [`creeper ${i}`, mm, 27.31, PRINTED] as [string, number, number, number],
-    ),
-  ]
-  expect(misfits(rows)).toEqual([])
+const deductions = (name: string, members: Member[], expected: number): Row[] => [
+  [`${name}: there are some`, +(members.length > 0), 1, 0],
+  ...members.map((m): Row => [`${name} ${m.mark}`, m.headDeductionMm, expected, PRINTED]),
+]
+
+describe('a hip roof at 25°', () => {
+  const { spec, common, crown, hip, ridge } = hipBuilding(25, 3000, { hipTop: 'lowered' })
+
+  test.each(['lowered', 'backed'] as const)(
+    'hips %s: its heads lose the agreed lengths',
+    (hipTop) => {
+      const built = hipBuilding(25, 3000, { hipTop })
+      expect(
+        misfits([
+          ...deductions('common', ofRole(built.spec, 'common'), 19.31),
+          ...deductions('crown end', ofRole(built.spec, 'crown-end'), 24.83),
+          ...deductions('creeper', ofRole(built.spec, 'creeper'), 27.31),
+          ...deductions('hip', ofRole(built.spec, 'hip'), 33.5),
+        ]),
+      ).toEqual([])
+      expect([common.role, crown.role]).toEqual(['common', 'crown-end'])
+    },
+  )
+
+  test('the ridge runs half a rafter past each centring pair', () => {
+    expect(ridge.headDeductionMm).toBeCloseTo(-22.5, 6)
+    expect(ridge.footDeductionMm).toBeCloseTo(-22.5, 6)
+    expect(ridge.cutLengthMm).toBeCloseTo(3600 + 45, 6)
+  })
+
+  test('hip and ridge drop, stand, heel and seat are the agreed ones', () => {
+    expect(
+      misfits([
+        ['hip drop', hip.dropMm, 5.77, PRINTED],
+        ['ridge drop', ridge.dropMm, 8.16, PRINTED],
+        ['stand', spec.standMm, 112.51, PRINTED],
+        ['heel', common.birdsmouth?.heelMm ?? NaN, 41.97, PRINTED],
+        ['seat', common.birdsmouth?.seatMm ?? NaN, 90, PRINTED],
+      ]),
+    ).toEqual([])
+  })
+
+  test('creepers come in left and right pairs of one length, four to a pair of slopes at each end', () => {
+    const lines = spec.cutLines.filter((line) => line.role === 'creeper')
+    expect(lines.length).toBeGreaterThan(2)
+    for (const line of lines) expect([line.quantity, line.left, line.right]).toEqual([8, 4, 4])
+  })
+
+  test('an ordinary hip roof raises no caution', () => {
+    expect(spec.cautions).toEqual([])
+  })
 })
 
-test('hip and ridge drop, stand, heel and seat at 25° are the agreed ones', () => {
-  const { spec, hip, ridge, common } = hipBuilding(25, 3000, { hipTop: 'lowered' })
-  expect(
-    misfits([
-      ['hip drop', hip.dropMm, 5.77, PRINTED],
-      ['ridge drop', ridge.dropMm, 8.16, PRINTED],
-      ['stand', spec.standMm, 112.51, PRINTED],
-      ['heel', common.birdsmouth?.heelMm ?? NaN, 41.97, PRINTED],
-      ['seat', common.birdsmouth?.seatMm ?? NaN, 90, PRINTED],
-    ]),
-  ).toEqual([])
-})
-
-test('deductions at an octagonal end at 25° are the agreed ones', () => {
-  const reference = convexReferences.find((r) => r.id === 'octagonal-end')!
-  const roof = referenceRoof(reference)
-  const spec = frameRoof(roof)
+describe('an octagonal end at 25°', () => {
+  const roof = referenceRoof(convexReferences.find((r) => r.id === 'octagonal-end')!)
+  const spec = framedOnce(roof)
   const crowns = ofRole(spec, 'crown-end')
-  // In line with the ridge its bearing is 0 or 180°; the two diagonal ones stand at 45° to it.
-  const inLine = crowns.filter((m) => Math.abs(m.axis.to.y - m.axis.from.y) < 1)
-  const diagonal = crowns.filter((m) => Math.abs(m.axis.to.y - m.axis.from.y) >= 1)
-  expect([inLine.length, diagonal.length]).toEqual([1, 2])
+  // in line with the ridge its bearing is 0 or 180°; the two diagonal ones stand at 45° to it
+  const isInLine = ({ axis }: Member): boolean => Math.abs(axis.to.y - axis.from.y) < 1
+  const diagonal = crowns.filter((m) => !isInLine(m))
   const hips = roof.outline.slice(1, 5).map((corner) => hipFrom(spec, corner))
-  expect(
-    misfits([
-      ['crown end in line', inLine[0]!.headDeductionMm, 24.83, PRINTED],
-      ...diagonal.map((m): [string, number, number, number] => [
-        `diagonal crown end ${m.mark}`,
-        m.headDeductionMm,
-        35.11,
-        PRINTED,
-      ]),
-      ...hips.map((m): [string, number, number, number] => [
-        `hip ${m.mark}`,
-        m.headDeductionMm,
-        64.02,
-        PRINTED,
-      ]),
-    ]),
-  ).toEqual([])
-})
 
-test('the octagonal end’s backed hip bevel of 20.58° does not double to the crown end’s 42.19°', () => {
-  const reference = convexReferences.find((r) => r.id === 'octagonal-end')!
-  const roof = referenceRoof(reference)
-  const spec = frameRoof(roof)
-  const diagonal = ofRole(spec, 'crown-end').filter(
-    (m) => Math.abs(m.axis.to.y - m.axis.from.y) >= 1,
-  )
-  const bevels = diagonal.flatMap((m) =>
-    m.cuts.filter((c) => c.end === 'head').map((c) => c.edge.fromEdgeDeg),
-  )
-  const hip = hipFrom(spec, roof.outline[1]!)
-  const hipBevels = hip.cuts.filter((c) => c.end === 'head').map((c) => c.edge.fromEdgeDeg)
-  expect(bevels).toHaveLength(4)
-  const rows = [
-    ...bevels.map((deg): [string, number, number, number] => ['crown end', deg, 42.19, PRINTED]),
-    ...hipBevels.map((deg): [string, number, number, number] => ['hip', deg, 20.58, PRINTED]),
-  ]
-  expect(misfits(rows)).toEqual([])
-  expect(spec.cautions.map((c) => c.code)).toContain('crown-bevel-shortcut')
+  test('the crown end in line bears square, the two diagonal ones go between with two cheeks', () => {
+    expect([crowns.filter(isInLine).length, diagonal.length]).toEqual([1, 2])
+    for (const crown of diagonal) expect(cutsAt(crown, 'head')).toHaveLength(2)
+  })
+
+  test('its heads lose the agreed lengths', () => {
+    expect(
+      misfits([
+        ...deductions('crown end in line', crowns.filter(isInLine), 24.83),
+        ...deductions('diagonal crown end', diagonal, 35.11),
+        ...deductions('hip', hips, 64.02),
+      ]),
+    ).toEqual([])
+  })
+
+  test('twice the backed hip’s bevel of 20.58° is not the crown end’s 42.19°, and the spec says what that costs', () => {
+    const bevels = (members: Member[]): number[] =>
+      members.flatMap((m) => cutsAt(m, 'head').map((cut) => cut.edge.fromEdgeDeg))
+    expect([bevels(diagonal).length, bevels(hips).length]).toEqual([4, 8])
+    expect(
+      misfits([
+        ...bevels(diagonal).map((deg): Row => ['crown end', deg, 42.19, PRINTED]),
+        ...bevels(hips).map((deg): Row => ['hip', deg, 20.58, PRINTED]),
+      ]),
+    ).toEqual([])
+    const caution = spec.cautions.find((c) => c.code === 'crown-bevel-shortcut')
+    expect([...(caution?.members ?? [])].sort()).toEqual(diagonal.map((m) => m.mark).sort())
+    expect(caution?.text).toContain('41.15')
+    expect(caution?.text).toContain('42.19')
+  })
 })
