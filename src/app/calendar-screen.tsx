@@ -1,4 +1,5 @@
 import { CalendarPage } from '../features/calendar/calendar-page.tsx'
+import { ClashLink } from '../features/clashes/clash-link.tsx'
 import { NotToldLink } from '../features/notices/not-told-link.tsx'
 import { RainOffBanner, RainOffLink } from '../features/rain-offs/rain-off-banner.tsx'
 
@@ -8,6 +9,7 @@ export function CalendarScreen() {
     <CalendarPage
       waiting={
         <>
+          <ClashLink />
           <NotToldLink />
           <RainOffLink />
         </>

@@ -51,6 +51,12 @@ export const shellRoutes: RouteObject[] = [
         }),
       },
       {
+        path: 'clashes',
+        lazy: async () => ({
+          Component: (await import('../features/clashes/clash-panel.tsx')).ClashPanel,
+        }),
+      },
+      {
         path: 'not-told',
         lazy: async () => ({
           Component: (await import('../features/notices/not-told-panel.tsx')).NotToldPanel,
@@ -105,6 +111,12 @@ export const shellRoutes: RouteObject[] = [
     }),
   },
   {
+    path: 'jobs/:jobId/revisions/:letter/against/:other',
+    lazy: async () => ({
+      Component: (await import('../features/roof-editor/comparison-page.tsx')).ComparisonPage,
+    }),
+  },
+  {
     path: 'today',
     lazy: async () => ({
       Component: (await import('./today-screen.tsx')).TodayScreen,
@@ -120,6 +132,12 @@ export const shellRoutes: RouteObject[] = [
     path: 'today/plates/:bookingDayId',
     lazy: async () => ({
       Component: (await import('../features/today/plate-check-page.tsx')).PlateCheckPage,
+    }),
+  },
+  {
+    path: 'today/close/:bookingDayId',
+    lazy: async () => ({
+      Component: (await import('../features/day-logs/close-day-page.tsx')).CloseDayPage,
     }),
   },
   {

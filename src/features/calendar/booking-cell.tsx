@@ -4,7 +4,8 @@ import type { CalendarBooking, CalendarDay } from '../../../shared/bookings/cale
 import { formatLoad } from '../../../shared/labour/format-hours.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
-import { DayFlagLines, FlagLine, lengthWords } from './booking-flags.tsx'
+import { FlagLine } from '../../ui/flag-line.tsx'
+import { DayFlagLines, lengthWords } from './booking-flags.tsx'
 
 /** Pencilled or firm, by word, icon and border. */
 export function StateMark({ state }: { state: BookingState }) {

@@ -11,7 +11,7 @@ import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { ErrorState, Note } from '../../ui/states.tsx'
 import { StateMark } from './booking-cell.tsx'
 import { BookingEditor } from './booking-editor.tsx'
-import { FlagLine, lengthWords } from './booking-flags.tsx'
+import { BookingClashes, DayFlagLines, lengthWords } from './booking-flags.tsx'
 import { searchWith } from './calendar-address.ts'
 import { calendarQueries } from './calendar-queries.ts'
 
@@ -70,12 +70,9 @@ function Days({ booking }: { booking: Booking }) {
                 {day.worked ? ' · worked' : ''}
               </span>
             </p>
-            {day.flags.map((flag) => (
-              <div key={`${flag.code} ${flag.text}`} className="mt-1 text-sm">
-                <FlagLine weight={flag.weight}>{flag.text}</FlagLine>
-                <p className="text-ink-soft">{flag.wayOut}</p>
-              </div>
-            ))}
+            <div className="text-sm">
+              <DayFlagLines flags={day.flags} />
+            </div>
             {day.tasks.length > 0 ? (
               <details className="mt-1">
                 <summary className="min-h-11 content-center">{day.holds}</summary>
@@ -116,6 +113,7 @@ export function BookingPanel() {
         <div className="space-y-6">
           {booking.cancelled ? <Note kind="stop" title="This booking is cancelled" /> : null}
           <Head booking={booking} />
+          <BookingClashes booking={booking} />
           <Days booking={booking} />
           {mayEdit ? (
             <BookingEditor booking={booking} onClosed={close} />
