@@ -11,8 +11,9 @@ export type BoxGrid<T> = { near: (box: Box) => T[]; put: (item: T, box: Box) => 
 
 /** Things that lie in boxes of the plan, found by where they are. */
 export const boxGrid = <T>(): BoxGrid<T> => {
-  type Entry = { item: T; box: Box }
+  type Entry = { item: T; box: Box; foundBy: number }
   const squares = new Map<number, Entry[]>()
+  let searches = 0
   const each = (box: Box, visit: (key: number) => void) => {
     for (let x = Math.floor(box.minX / squareMm); x <= Math.floor(box.maxX / squareMm); x++) {
       for (let y = Math.floor(box.minY / squareMm); y <= Math.floor(box.maxY / squareMm); y++) {
@@ -22,16 +23,19 @@ export const boxGrid = <T>(): BoxGrid<T> => {
   }
   return {
     near: (box) => {
-      const found = new Set<Entry>()
+      searches += 1
+      const found: T[] = []
       each(box, (key) => {
         for (const entry of squares.get(key) ?? []) {
-          if (boxesMeet(box, entry.box)) found.add(entry)
+          if (entry.foundBy === searches || !boxesMeet(box, entry.box)) continue
+          entry.foundBy = searches
+          found.push(entry.item)
         }
       })
-      return Array.from(found, ({ item }) => item)
+      return found
     },
     put: (item, box) => {
-      const entry = { item, box }
+      const entry = { item, box, foundBy: 0 }
       each(box, (key) => {
         const list = squares.get(key)
         if (list === undefined) squares.set(key, [entry])

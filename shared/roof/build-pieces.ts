@@ -1,6 +1,7 @@
 import type { Joints } from './clusters.ts'
 import { slopeRafters } from './layout.ts'
 import { linePieces } from './line-pieces.ts'
+import { gather } from './lists.ts'
 import type { Piece } from './piece.ts'
 import type { RoofLines } from './roof-lines.ts'
 import type { Roof, RoofSettings } from './roof-types.ts'
@@ -20,7 +21,7 @@ export type Ground = {
 export const buildPieces = (ground: Ground): Piece[] => {
   const pieces = [
     ...linePieces(ground),
-    ...ground.plates.slopes.flatMap((slope) => slopeRafters(ground, slopeGround(ground, slope))),
+    ...gather(ground.plates.slopes, (slope) => slopeRafters(ground, slopeGround(ground, slope))),
   ]
   pieces.forEach((piece, id) => (piece.id = id))
   return pieces

@@ -1,4 +1,5 @@
 import type { Roof } from './roof-types.ts'
+import { gather } from './lists.ts'
 import { pinchedLines } from './pinched.ts'
 import { ridgeChains } from './ridge-chains.ts'
 import type { RidgeChain } from './ridge-chains.ts'
@@ -87,7 +88,7 @@ const jointOf = (
   }
   const passes = (chain: RidgeChain) => chain.through.includes(index)
   const inOrder = [...chains.filter(passes), ...chains.filter((chain) => !passes(chain))]
-  const ridges = inOrder.flatMap((chain) => chain.lines.filter((n) => ends(at(lines.lines, n))))
+  const ridges = gather(inOrder, (chain) => chain.lines.filter((n) => ends(at(lines.lines, n))))
   const climbs = (l: NodeLine) =>
     (l.kind === 'broken-hip' || l.kind === 'valley') && nodes.includes(l.from)
   const rising = find((l, gone) => !gone && climbs(l))

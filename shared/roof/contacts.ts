@@ -1,6 +1,7 @@
 import { boxGrid } from './box-grid.ts'
 import type { BoxGrid } from './box-grid.ts'
 import type { Box, Labelled } from './convex.ts'
+import { gather } from './lists.ts'
 import type { Piece, PieceEnd } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -20,7 +21,7 @@ const mostTurn = 0.035
 const leastShare = 0.025
 
 export const planSegments = (piece: number, plan: Labelled<Side>): Segment[] =>
-  plan.points.flatMap((from, k) => {
+  gather(plan.points, (from, k) => {
     const side = at(plan.labels, k)
     return side.kind === 'open' ? [] : [{ piece, side, from, to: at(plan.points, k + 1) }]
   })
@@ -38,7 +39,9 @@ const boxOf = ({ from, to }: Segment, growMm: number): Box => ({
 export const segmentIndex = (pieces: readonly Piece[]): SegmentIndex => {
   const ofPiece = pieces.map((piece) => planSegments(piece.id, fullPlan(piece)))
   const grid = boxGrid<Segment>()
-  ofPiece.flat().forEach((segment) => grid.put(segment, boxOf(segment, 0)))
+  for (const segments of ofPiece) {
+    for (const segment of segments) grid.put(segment, boxOf(segment, 0))
+  }
   return { ofPiece, grid }
 }
 

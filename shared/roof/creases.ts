@@ -1,7 +1,7 @@
 import type { Point2, Point3 } from './roof-types.ts'
 import { at, slopeHeightMm } from './slopes.ts'
 import type { PlateLines } from './slopes.ts'
-import { distance2 } from './vector.ts'
+import { distance2, point3 } from './vector.ts'
 
 /** A node of the roof; `corner` is the plate corner it stands on, null above the plate. */
 export type RoofNode = { point: Point3; corner: number | null }
@@ -24,7 +24,7 @@ const isSameSide = (a: CreaseSide, b: CreaseSide): boolean =>
 const rawNet = (plates: PlateLines): CreaseNet => {
   const { wave, edges, slopeOf } = plates
   const nodes = edges.map((edge): RoofNode => ({
-    point: { ...edge.from, z: 0 },
+    point: point3(edge.from, 0),
     corner: edge.index,
   }))
   const nodeOf = wave.nodes.map((point, k) => {
@@ -165,7 +165,7 @@ const settleHeights = (plates: PlateLines, { nodes, creases }: CreaseNet): Creas
     if (node.corner !== null || slopes.size === 0) return node
     let sum = 0
     for (const slope of slopes) sum += slopeHeightMm(at(plates.slopes, slope), node.point)
-    return { ...node, point: { ...node.point, z: sum / slopes.size } }
+    return { ...node, point: point3(node.point, sum / slopes.size) }
   })
   return { nodes: settled, creases }
 }

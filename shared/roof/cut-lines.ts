@@ -1,3 +1,4 @@
+import { gather } from './lists.ts'
 import type { DraftMember } from './members.ts'
 import type { Cut, CutLine, Member, MemberRole } from './roof-types.ts'
 
@@ -65,11 +66,25 @@ type Group = { straight: Likeness; mirrored: Likeness; members: DraftMember[] }
 
 const grouped = (members: DraftMember[]): Group[] => {
   const groups: Group[] = []
+  // pieces alike have the same words, straight or mirrored
+  const byWords = new Map<string, Group[]>()
+  const withWords = (words: string): Group[] => {
+    const known = byWords.get(words) ?? []
+    byWords.set(words, known)
+    return known
+  }
   for (const member of members) {
     const straight = likeness(member, false)
-    const found = groups.find((g) => alike(straight, g.straight) || alike(straight, g.mirrored))
-    if (found !== undefined) found.members.push(member)
-    else groups.push({ straight, mirrored: likeness(member, true), members: [member] })
+    const known = withWords(straight.words)
+    const found = known.find((g) => alike(straight, g.straight) || alike(straight, g.mirrored))
+    if (found !== undefined) {
+      found.members.push(member)
+      continue
+    }
+    const group = { straight, mirrored: likeness(member, true), members: [member] }
+    groups.push(group)
+    known.push(group)
+    if (group.mirrored.words !== straight.words) withWords(group.mirrored.words).push(group)
   }
   return groups
 }
@@ -87,7 +102,7 @@ const finished = (draft: DraftMember, markOf: Map<number, string>): Member => {
   return {
     mark: mark(draft.piece.id),
     role: draft.role,
-    ...(draft.topInSlope === true ? { topInSlope: true } : {}),
+    topInSlope: draft.topInSlope,
     hand: draft.hand,
     section: draft.section,
     axis: draft.axis,
@@ -141,7 +156,7 @@ export const markMembers = (drafts: DraftMember[]): MarkedMembers => {
   })
   const counts = new Map<MemberRole, number>()
   const markOf = new Map<number, string>()
-  const cutLines = groups.flatMap(({ members }): CutLine[] => {
+  const cutLines = gather(groups, ({ members }): CutLine[] => {
     const [first] = members
     if (first === undefined) return []
     const number = (counts.get(first.role) ?? 0) + 1
@@ -165,6 +180,6 @@ export const markMembers = (drafts: DraftMember[]): MarkedMembers => {
       },
     ]
   })
-  const members = groups.flatMap((group) => group.members.map((draft) => finished(draft, markOf)))
+  const members = gather(groups, (group) => group.members.map((draft) => finished(draft, markOf)))
   return { members, cutLines, markOf }
 }

@@ -8,11 +8,13 @@ import type { Piece, PlanCut } from './piece.ts'
 import type { Cut, Point3 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import type { PlateEdge } from './slopes.ts'
-import { add2, dot3, length2, radians, scale2 } from './vector.ts'
+import { add2, dot3, length2, point3, radians, scale2 } from './vector.ts'
 import type { Plane } from './vector.ts'
 
 /** A cut before the pieces have marks. */
 export type DraftCut = Omit<Cut, 'against' | 'alsoAgainst'> & {
+  /** Pieces that it lies against, most first; none until all are cut. */
+  bears: readonly number[]
   /** Place in the piece's list of joint cuts of this end; null for a tail left free. */
   listed: number | null
   crossing: Crossing
@@ -29,7 +31,7 @@ export const timberOf = (piece: Piece, standMm: number): Timber => {
   return {
     origin: { x: piece.foot.x, y: piece.foot.y, z: piece.foot.z + standMm - piece.dropMm },
     direction: { x: dir.x * cos, y: dir.y * cos, z: sin },
-    left: { ...piece.left, z: 0 },
+    left: point3(piece.left, 0),
     up: { x: -dir.x * sin, y: -dir.y * sin, z: cos },
     down: { x: 0, y: 0, z: -1 },
     halfMm: piece.halfMm,
@@ -79,6 +81,7 @@ const draftCut = (
   return {
     end,
     plane,
+    bears: [],
     listed,
     crossing: bevel.crossing,
     alongMm: bevel.alongMm,
@@ -100,7 +103,7 @@ const jointPlane = (piece: Piece, timber: Timber, cut: PlanCut): Plane => {
   const planMm =
     (normal.x * (point.x - piece.foot.x) + normal.y * (point.y - piece.foot.y)) / facing
   return {
-    point: { ...piecePoint(piece, planMm, 0), z: timber.origin.z + planMm * piece.tan },
+    point: point3(piecePoint(piece, planMm, 0), timber.origin.z + planMm * piece.tan),
     normal: { x: normal.x, y: normal.y, z: 0 },
   }
 }
@@ -109,9 +112,9 @@ const jointPlane = (piece: Piece, timber: Timber, cut: PlanCut): Plane => {
 export const tailPlane = (ground: Ground, edge: PlateEdge, standMm: number): Plane => {
   const pitch = radians(edge.pitchDeg)
   const line = add2(edge.from, scale2(edge.inward, -edge.overhangMm))
-  const point: Point3 = { ...line, z: standMm - edge.overhangMm * Math.tan(pitch) }
+  const point: Point3 = point3(line, standMm - edge.overhangMm * Math.tan(pitch))
   const out = scale2(edge.inward, -1)
-  if (ground.roof.tail === 'plumb') return { point, normal: { ...out, z: 0 } }
+  if (ground.roof.tail === 'plumb') return { point, normal: point3(out, 0) }
   const level = Math.cos(pitch)
   return { point, normal: { x: out.x * level, y: out.y * level, z: -Math.sin(pitch) } }
 }
@@ -178,8 +181,12 @@ const tailCuts = (ground: Ground, piece: Piece, timber: Timber, standMm: number)
 }
 
 /** All saw cuts of a piece but its birdsmouth: head, then foot, then tail. */
-export const cutsOf = (ground: Ground, piece: Piece, standMm: number): DraftCut[] => {
-  const timber = timberOf(piece, standMm)
+export const cutsOf = (
+  ground: Ground,
+  piece: Piece,
+  timber: Timber,
+  standMm: number,
+): DraftCut[] => {
   const joint = (end: 'head' | 'foot') => (cut: PlanCut, place: number) =>
     draftCut(ground, piece, timber, end, jointPlane(piece, timber, cut), place)
   return [

@@ -99,33 +99,45 @@ const distanceToSide = (p: Point2, a: Point2, b: Point2): number => {
   return distance2(p, add2(a, scale2(side, t)))
 }
 
-/** 0 inside a polygon or on its sides, otherwise the distance to its nearest side, mm. */
-const distanceToPolygon = (points: readonly Point2[], p: Point2): number => {
+const isInside = (points: readonly Point2[], p: Point2): boolean => {
   let inside = false
-  let nearest = Infinity
   points.forEach((a, k) => {
     const b = at(points, k + 1)
-    if (a.y > p.y !== b.y > p.y) {
-      const x = a.x + ((b.x - a.x) * (p.y - a.y)) / (b.y - a.y)
-      if (x > p.x) inside = !inside
-    }
-    nearest = Math.min(nearest, distanceToSide(p, a, b))
+    if (a.y > p.y === b.y > p.y) return
+    const x = a.x + ((b.x - a.x) * (p.y - a.y)) / (b.y - a.y)
+    if (x > p.x) inside = !inside
   })
-  return inside ? 0 : nearest
+  return inside
 }
+
+/** 0 inside a polygon or on its sides, otherwise the distance to its nearest side, mm. */
+const distanceToPolygon = (points: readonly Point2[], p: Point2): number => {
+  if (isInside(points, p)) return 0
+  let nearest = Infinity
+  points.forEach((a, k) => {
+    nearest = Math.min(nearest, distanceToSide(p, a, at(points, k + 1)))
+  })
+  return nearest
+}
+
+/** How far a point lies beside a box at least; not over 0 inside. */
+const asideMm = (box: Box, p: Point2): number =>
+  Math.max(box.minX - p.x, p.x - box.maxX, box.minY - p.y, p.y - box.maxY)
 
 type Covered = { slope: Slope; piece: Point2[]; box: Box }
 
 /** The slope over (or overhanging) a point of the plan; the nearest one beyond all overhangs. */
 const slopeOver = (covered: readonly Covered[], p: Point2): Slope => {
+  const over = covered.find(
+    ({ piece, box }) => asideMm(box, p) <= 0 && distanceToPolygon(piece, p) === 0,
+  )
+  if (over !== undefined) return over.slope
   let nearest = at(covered, 0).slope
   let leastMm = Infinity
   for (const { slope, piece, box } of covered) {
-    const asideMm = Math.max(box.minX - p.x, p.x - box.maxX, box.minY - p.y, p.y - box.maxY)
-    if (asideMm >= leastMm) continue
+    if (asideMm(box, p) >= leastMm) continue
     const awayMm = distanceToPolygon(piece, p)
     if (awayMm >= leastMm) continue
-    if (awayMm === 0) return slope
     nearest = slope
     leastMm = awayMm
   }

@@ -1,6 +1,7 @@
 import { crossingAt, timberPoint, topFall } from './bevel.ts'
 import type { Timber } from './bevel.ts'
 import type { DraftCut } from './cuts.ts'
+import { gather } from './lists.ts'
 import type { Point3 } from './roof-types.ts'
 
 /** A corner of a timber's end: where it is and how far off the centre line. */
@@ -84,10 +85,11 @@ const isCorner = (timber: Timber, cuts: DraftCut[], leftMm: number, alongMm: num
 
 /** The corners of one end of a timber's top, cut by all cuts of that end. */
 export const endCorners = (timber: Timber, cuts: DraftCut[], upper: boolean): EndCorner[] =>
-  offsets(timber, cuts, 'top').flatMap((leftMm) => {
+  gather(offsets(timber, cuts, 'top'), (leftMm) => {
     const alongMm = endAlongMm(timber, cuts, upper, leftMm, 'top')
     if (!isCorner(timber, cuts, leftMm, alongMm)) return []
-    return { leftMm, alongMm, point: timberPoint(timber, alongMm, leftMm, topFall(timber, leftMm)) }
+    const point = timberPoint(timber, alongMm, leftMm, topFall(timber, leftMm))
+    return [{ leftMm, alongMm, point }]
   })
 
 /** The corners of one cut's face, among all cuts of its end: mm off the centre line and plumb under the top. */
@@ -97,7 +99,7 @@ export const faceCorners = (
   cut: DraftCut,
   upper: boolean,
 ): { leftMm: number; downMm: number }[] =>
-  (['top', 'bottom'] as const).flatMap((level) =>
+  gather(['top', 'bottom'] as const, (level) =>
     offsets(timber, cuts, level)
       .filter((leftMm) => {
         const beyond =

@@ -1,7 +1,6 @@
 import { buildPieces } from './build-pieces.ts'
 import type { Ground } from './build-pieces.ts'
 import { cautionsOf } from './cautions.ts'
-import { roofJoints } from './clusters.ts'
 import { bearings, segmentIndex } from './contacts.ts'
 import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
@@ -9,15 +8,13 @@ import { draftMember } from './members.ts'
 import type { FrameDraft } from './members.ts'
 import { planingOf } from './planing.ts'
 import { publishedLines, publishedPlanes } from './published-lines.ts'
-import { roofLines } from './roof-lines.ts'
-import { RoofRefusedError, roofProblems } from './roof-problems.ts'
+import { RoofRefusedError, setOutRoof } from './roof-problems.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { FrameSpec, Roof, RoofSettings } from './roof-types.ts'
 import { worstRounding } from './rounding.ts'
 import { besideFrame } from './secondary/beside-frame.ts'
 import type { BesideGround } from './secondary/beside-ground.ts'
 import { coveringTotals } from './secondary/covering-totals.ts'
-import { plateLines } from './plate-lines.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
 
@@ -51,11 +48,10 @@ const draftMembers = (ground: Ground, standMm: number) => {
  * @throws {RoofRefusedError} with `problems` (field and sentence) when the roof cannot be framed as typed.
  */
 export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings): FrameSpec => {
-  const problems = roofProblems(roof, settings)
-  if (problems.length > 0) throw new RoofRefusedError(problems)
-  const plates = plateLines(roof)
-  const lines = roofLines(plates)
-  const ground: Ground = { roof, settings, plates, lines, joints: roofJoints(roof, lines) }
+  const setOut = setOutRoof(roof, settings)
+  if (setOut.problems !== null) throw new RoofRefusedError(setOut.problems)
+  const { plates, lines, joints } = setOut
+  const ground: Ground = { roof, settings, plates, lines, joints }
   const standMm = commonStandMm(roof, plates.slopes)
   const { drafts, openPieces } = draftMembers(ground, standMm)
   const standing: BesideGround = { ...ground, standMm, drafts }

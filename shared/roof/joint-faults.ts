@@ -4,6 +4,7 @@ import { boxesMeet, convexOverlap, polygonSignedArea } from './convex.ts'
 import type { Box } from './convex.ts'
 import { phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
+import { gather } from './lists.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -140,7 +141,7 @@ export const jointFaults = (
     const { piece, end } = job
     const own = bodyOf(halfObstacle(piece, end))
     const cuts = end === 'head' ? piece.headCuts : piece.footCuts
-    const mates = cuts.flatMap(({ mitreWith }) => made.get(mitreWith ?? -1) ?? [])
+    const mates = gather(cuts, ({ mitreWith }) => made.get(mitreWith ?? -1) ?? [])
     const others = [...new Set([...standing, ...mates])].filter((body) => body.piece !== piece.id)
     // a foot that others bear on bears on nothing itself
     const bearing = job.phase === phases.brokenFoot ? 0 : endFaults(job, own, others)

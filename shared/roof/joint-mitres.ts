@@ -1,6 +1,7 @@
 import type { Ground } from './build-pieces.ts'
 import { bodyDirection, inLineRad, turn } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
+import { gather } from './lists.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
@@ -29,7 +30,7 @@ export const jointMitres = (
   const round = [...placed, ...jobs.filter((j) => j.phase === job.phase)].filter(
     (j) => j.joint === job.joint && j.piece !== job.piece,
   )
-  const cuts = ([1, -1] as const).flatMap((sign) => {
+  const cuts = gather([1, -1] as const, (sign) => {
     const angle = (j: EndJob) => {
       const a = sign * turn(own, bodyDirection(j.piece, j.end))
       return a < 0 ? a + 2 * Math.PI : a

@@ -149,8 +149,14 @@ const standsThere = (joint: Joint, rising: Piece, way: JointWay): boolean =>
   way.foot === 'stand' ||
   (way.foot === 'usual' && rising.role === 'valley')
 
-const reaches = (piece: Piece): number[] =>
-  [...new Set([piece.headJoint, piece.footJoint, ...piece.through])].flatMap((j) => j ?? [])
+/** The joints that a piece ends at or runs through. */
+const reaches = ({ headJoint, footJoint, through }: Piece): number[] => {
+  const found: number[] = []
+  for (const joint of [headJoint, footJoint, ...through]) {
+    if (joint !== null && !found.includes(joint)) found.push(joint)
+  }
+  return found
+}
 
 /** The pieces that reach each joint. */
 const piecesByJoint = (ground: Ground, pieces: Piece[], ways: JointWays): JointPieces[] => {

@@ -1,4 +1,5 @@
 import type { Ground } from './build-pieces.ts'
+import { gather } from './lists.ts'
 import { rawPiece } from './piece.ts'
 import type { Piece } from './piece.ts'
 import type { RidgeChain } from './ridge-chains.ts'
@@ -108,7 +109,7 @@ const ridgePiece = (ground: Ground, chain: RidgeChain): Piece => {
 /** Ridges, hips, broken hips and valleys with their set-out lines, in the order of the roof's lines. */
 export const linePieces = (ground: Ground): Piece[] => {
   const { lines, joints } = ground
-  return lines.lines.flatMap((line, index): Piece[] => {
+  return gather(lines.lines, (line, index): Piece[] => {
     if (joints.swallowed.has(index) || joints.pinched.has(index)) return []
     if (line.kind === 'ridge') {
       const chain = joints.chains.find((c) => Math.min(...c.lines) === index)

@@ -7,13 +7,13 @@ import { setOutLengthMm } from './piece.ts'
 import type { Piece } from './piece.ts'
 import type { Cut, Member } from './roof-types.ts'
 import type { Timber } from './bevel.ts'
-import { degrees } from './vector.ts'
+import { degrees, point3 } from './vector.ts'
 
 /** A member whose mark, and the marks it bears on, are still piece numbers. */
 export type DraftMember = Omit<Member, 'mark' | 'cuts'> & {
   piece: Pick<Piece, 'id'>
   timber: Timber
-  cuts: (DraftCut & { bears: number[] })[]
+  cuts: DraftCut[]
 }
 
 /** A rafter or a timber of a line: its numbers come from a piece of the frame. */
@@ -69,7 +69,7 @@ export const draftMember = (
   bears: (cut: DraftCut) => number[],
 ): FrameDraft => {
   const timber = timberOf(piece, standMm)
-  const cuts = cutsOf(ground, piece, standMm)
+  const cuts = cutsOf(ground, piece, timber, standMm)
   const finished = finishedTimber(piece, timber)
   const isLong = cuts.some((cut) => cut.end === 'tail' && cut.listed === null)
   const allowanceMm = isLong ? ground.roof.tailAllowanceMm : 0
@@ -91,7 +91,7 @@ export const draftMember = (
     section: { ...piece.section },
     axis: {
       from: { ...timber.origin },
-      to: { ...piece.head, z: piece.head.z + standMm - piece.dropMm },
+      to: point3(piece.head, piece.head.z + standMm - piece.dropMm),
     },
     riseMm,
     runMm: piece.planMm,

@@ -1,6 +1,9 @@
 import { crossingAt, timberPoint, topFall } from './bevel.ts'
 import { roofSurface } from './eaves.ts'
+import { boxesMeet, polygonBox } from './convex.ts'
+import type { Box } from './convex.ts'
 import { endCorners } from './ends.ts'
+import { gather } from './lists.ts'
 import type { FrameDraft } from './members.ts'
 import type { RoofLines } from './roof-lines.ts'
 import type { Planing, Point2, Point3 } from './roof-types.ts'
@@ -17,7 +20,7 @@ const centreMm = 1e-6
 type Place = { end: 'head' | 'foot'; leftMm: number; point: Point3 }
 
 const cornerPlaces = ({ finished, cuts }: FrameDraft): Place[] =>
-  (['head', 'foot'] as const).flatMap((end) => {
+  gather(['head', 'foot'] as const, (end) => {
     const own = cuts.filter((cut) => cut.end === end)
     if (own.length === 0) return []
     return endCorners(finished, own, end === 'head').map(({ leftMm, point }) => ({
@@ -27,7 +30,9 @@ const cornerPlaces = ({ finished, cuts }: FrameDraft): Place[] =>
     }))
   })
 
-type Stretch = { from: Point2; to: Point2 }
+type Stretch = { from: Point2; to: Point2; box: Box }
+
+const stretch = (from: Point2, to: Point2): Stretch => ({ from, to, box: polygonBox([from, to]) })
 
 /** Where two stretches of the plan cross, as a share of the first; null where they do not. */
 const crossingShare = (a: Stretch, b: Stretch): number | null => {
@@ -44,7 +49,8 @@ const crossingShare = (a: Stretch, b: Stretch): number | null => {
 /** Where the arrises and the middle of a top pass over valleys: between its corners a top stands proud only there. */
 const valleyPlaces = (draft: FrameDraft, valleys: readonly Stretch[]): Place[] => {
   const { finished, cuts, setOutLengthMm } = draft
-  return [finished.halfMm, 0, -finished.halfMm].flatMap((leftMm) => {
+  if (valleys.length === 0) return []
+  return gather([finished.halfMm, 0, -finished.halfMm], (leftMm) => {
     const down = topFall(finished, leftMm)
     let [low, high] = [-Infinity, Infinity]
     for (const { end, crossing } of cuts) {
@@ -53,12 +59,12 @@ const valleyPlaces = (draft: FrameDraft, valleys: readonly Stretch[]): Place[] =
       else low = Math.max(low, alongMm)
     }
     if (!(low < high) || high - low === Infinity) return []
-    const top = {
-      from: timberPoint(finished, low, leftMm, down),
-      to: timberPoint(finished, high, leftMm, down),
-    }
-    return valleys.flatMap((valley): Place[] => {
-      const share = crossingShare(top, valley)
+    const top = stretch(
+      timberPoint(finished, low, leftMm, down),
+      timberPoint(finished, high, leftMm, down),
+    )
+    return gather(valleys, (valley): Place[] => {
+      const share = boxesMeet(top.box, valley.box) ? crossingShare(top, valley) : null
       if (share === null) return []
       const alongMm = low + share * (high - low)
       const point = timberPoint(finished, alongMm, leftMm, down)
@@ -81,19 +87,23 @@ export const planingOf = (
   const surfaceMm = roofSurface(plates, lines)
   const valleys = lines.lines
     .filter(({ kind }) => kind === 'valley')
-    .map(({ from, to }) => ({ from: at(lines.nodes, from).point, to: at(lines.nodes, to).point }))
-  return drafts.flatMap((draft) => {
+    .map(({ from, to }) => stretch(at(lines.nodes, from).point, at(lines.nodes, to).point))
+  return gather(drafts, (draft) => {
     const mark = markOf.get(draft.piece.id) ?? ''
-    const overs = [...cornerPlaces(draft), ...valleyPlaces(draft, valleys)].map((place) => ({
-      ...place,
-      overMm: place.point.z - standMm - surfaceMm(place.point),
-    }))
-    return (['head', 'foot'] as const).flatMap((end) =>
-      (['left', 'right'] as const).flatMap((side): Planing[] => {
+    const overs = [...cornerPlaces(draft), ...valleyPlaces(draft, valleys)]
+      .map(({ end, leftMm, point }) => ({
+        end,
+        leftMm,
+        overMm: point.z - standMm - surfaceMm(point),
+      }))
+      .filter(({ overMm }) => overMm > leastOffMm)
+    if (overs.length === 0) return []
+    return gather(['head', 'foot'] as const, (end) =>
+      gather(['left', 'right'] as const, (side): Planing[] => {
         const sign = side === 'left' ? 1 : -1
         const own = overs.filter((o) => o.end === end && o.leftMm * sign >= -centreMm)
-        const offMm = Math.max(0, ...own.map((o) => o.overMm))
-        return offMm > leastOffMm ? [{ mark, end, side, offMm }] : []
+        if (own.length === 0) return []
+        return [{ mark, end, side, offMm: Math.max(...own.map((o) => o.overMm)) }]
       }),
     )
   })

@@ -2,6 +2,7 @@ import type { Ground } from './build-pieces.ts'
 import { convexOverlap, polygonBox, polygonSignedArea } from './convex.ts'
 import { bodyDirection, phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
+import { gather } from './lists.ts'
 import type { Piece, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import type { Near } from './trim.ts'
@@ -114,9 +115,9 @@ export const ridgeEnd = (
 
 /** The ends of ridges at a joint, and both ways of one that runs through, as ends already placed. */
 export const ridgeDirections = (pieces: readonly Piece[], joints: readonly number[]): EndJob[] =>
-  pieces.flatMap((piece) => {
+  gather(pieces, (piece) => {
     if (piece.role !== 'ridge') return []
-    return joints.flatMap((joint): EndJob[] => {
+    return gather(joints, (joint): EndJob[] => {
       const ends: EndJob['end'][] = piece.through.includes(joint)
         ? ['head', 'foot']
         : piece.headJoint === joint

@@ -1,12 +1,16 @@
 import { outlineProblems } from './outline-problems.ts'
+import { roofJoints } from './clusters.ts'
+import type { Joints } from './clusters.ts'
 import { plateLines } from './plate-lines.ts'
+import { roofLines } from './roof-lines.ts'
+import type { RoofLines } from './roof-lines.ts'
 import { defaultSettings } from './roof-settings.ts'
 import type { Roof, RoofProblem, RoofSettings } from './roof-types.ts'
 import { besideProblems } from './secondary/beside-problems.ts'
 import { at } from './slopes.ts'
 import type { PlateLines } from './slopes.ts'
 import { commonStandMm, leastSeatMm, rafterSeatMm } from './stand.ts'
-import { ridgeProblems, waveProblems } from './wave-problems.ts'
+import { needsRidges, ridgeProblems, waveProblems } from './wave-problems.ts'
 
 /** Thrown by `frameRoof`; `problems` says field by field what to change. */
 export class RoofRefusedError extends Error {
@@ -164,6 +168,51 @@ const seatProblems = (roof: Roof, { slopes }: PlateLines): RoofProblem[] => {
   })
 }
 
+/** What is wrong with the fields of a roof one by one, whatever was typed; nothing is set out yet. */
+const fieldProblems = (roof: Roof, settings: RoofSettings): RoofProblem[] => {
+  const input: unknown = roof
+  if (!isRecord(input))
+    return [{ path: '', message: 'Give a roof: its corners, edges and sections.' }]
+  const edges: unknown = input['edges']
+  const list: unknown[] = Array.isArray(edges) ? edges : []
+  const shape = outlineProblems(input['outline'], list)
+  return [
+    ...shape,
+    ...holeProblems(input['holes']),
+    ...list.slice(0, 64).flatMap(edgeProblems),
+    ...choiceProblems(input),
+    ...settingsProblems(settings),
+    ...besideProblems(roof, settings),
+  ]
+}
+
+/** The plate lines of a roof that can be set out, or what keeps it from that. */
+type Plated = { problems: RoofProblem[] } | { problems: null; plates: PlateLines }
+
+const platedRoof = (roof: Roof, settings: RoofSettings): Plated => {
+  const fields = fieldProblems(roof, settings)
+  if (fields.length > 0) return { problems: fields }
+  const plates = plateLines(roof)
+  const problems = [seatProblems(roof, plates), waveProblems(plates)].find((p) => p.length > 0)
+  return problems === undefined ? { problems: null, plates } : { problems }
+}
+
+/** The lines of a roof that can be framed, or what keeps it from that. */
+type SetOut =
+  | { problems: RoofProblem[] }
+  | { problems: null; plates: PlateLines; lines: RoofLines; joints: Joints }
+
+/** Sets out the lines of a roof, once for its problems and its frame. */
+export const setOutRoof = (roof: Roof, settings: RoofSettings): SetOut => {
+  const plated = platedRoof(roof, settings)
+  if (plated.problems !== null) return plated
+  const { plates } = plated
+  const lines = roofLines(plates)
+  const joints = roofJoints(roof, lines)
+  const problems = ridgeProblems(plates, lines, joints)
+  return problems.length > 0 ? { problems } : { problems: null, plates, lines, joints }
+}
+
 /**
  * Everything that keeps a roof, as typed, from being framed: one entry a field, its path in `Roof`
  * (settings under `settings.`) and a sentence that names the edge or corner, counted from 1, and says
@@ -173,25 +222,10 @@ export const roofProblems = (
   roof: Roof,
   settings: RoofSettings = defaultSettings,
 ): RoofProblem[] => {
-  const input: unknown = roof
-  if (!isRecord(input))
-    return [{ path: '', message: 'Give a roof: its corners, edges and sections.' }]
-  const edges: unknown = input['edges']
-  const list: unknown[] = Array.isArray(edges) ? edges : []
-  const shape = outlineProblems(input['outline'], list)
-  const fields = [
-    ...shape,
-    ...holeProblems(input['holes']),
-    ...list.slice(0, 64).flatMap(edgeProblems),
-    ...choiceProblems(input),
-    ...settingsProblems(settings),
-    ...besideProblems(roof, settings),
-  ]
-  if (fields.length > 0) return fields
-  const plates = plateLines(roof)
-  for (const problems of [seatProblems, waveProblems, ridgeProblems]) {
-    const found = problems(roof, plates)
-    if (found.length > 0) return found
-  }
-  return []
+  const plated = platedRoof(roof, settings)
+  if (plated.problems !== null) return plated.problems
+  const { plates } = plated
+  if (!needsRidges(plates)) return []
+  const lines = roofLines(plates)
+  return ridgeProblems(plates, lines, roofJoints(roof, lines))
 }

@@ -50,7 +50,8 @@ export const straightCornerMm = 1
 
 /** The item at `index`, going round; only for lists that are not empty. */
 export const at = <T>(list: readonly T[], index: number): T => {
-  const item = list[((index % list.length) + list.length) % list.length]
+  const isWithin = index >= 0 && index < list.length
+  const item = list[isWithin ? index : ((index % list.length) + list.length) % list.length]
   if (item === undefined) throw new RangeError(`nothing at ${index} of ${list.length}`)
   return item
 }

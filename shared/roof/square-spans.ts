@@ -1,3 +1,4 @@
+import { gather } from './lists.ts'
 import type { Border, Face, RoofLines } from './roof-lines.ts'
 import { at, insideMm } from './slopes.ts'
 import type { Slope } from './slopes.ts'
@@ -25,7 +26,7 @@ export const squareLineSpans = (
   const aside = face.nodes.map(
     (n) => dot2(slope.along, sub2(at(lines.nodes, n).point, slope.origin)) - alongMm,
   )
-  const crossings = face.nodes.flatMap((n, k): Crossing[] => {
+  const crossings = gather(face.nodes, (n, k): Crossing[] => {
     const [p, q] = [at(aside, k), at(aside, k + 1)]
     if (p + nudge > 0 === q + nudge > 0) return []
     const t = Math.min(1, Math.max(0, p / (p - q)))

@@ -1,6 +1,6 @@
-import { roofJoints } from './clusters.ts'
-import { roofLines } from './roof-lines.ts'
-import type { Roof, RoofProblem } from './roof-types.ts'
+import type { Joints } from './clusters.ts'
+import type { RoofLines } from './roof-lines.ts'
+import type { RoofProblem } from './roof-types.ts'
 import { at } from './slopes.ts'
 import type { PlateLines } from './slopes.ts'
 
@@ -12,7 +12,7 @@ const climbedTo = (gable: number, climber: string, remedy: string): RoofProblem 
 })
 
 /** Why the slopes of an outline that is otherwise sound cannot be set out: gables climbed to, level breaks. */
-export const waveProblems = (_roof: Roof, { wave }: PlateLines): RoofProblem[] => {
+export const waveProblems = ({ wave }: PlateLines): RoofProblem[] => {
   const { refusal } = wave
   if (refusal === null) return []
   if (refusal.reason === 'gable-reached') {
@@ -32,13 +32,17 @@ export const waveProblems = (_roof: Roof, { wave }: PlateLines): RoofProblem[] =
   return [{ path: `outline.${edge ?? 0}`, message }]
 }
 
+/** Whether a roof has gables that must have a ridge between them; a lean-to has a high wall in place of one. */
+export const needsRidges = ({ edges, slopes }: PlateLines): boolean =>
+  slopes.length > 1 && edges.some((edge) => edge.finish === 'gable')
+
 /** Gables under which the roof leaves no ridge to run out to the verge. */
-export const ridgeProblems = (roof: Roof, plates: PlateLines): RoofProblem[] => {
-  const hasGable = plates.edges.some((edge) => edge.finish === 'gable')
-  // a lean-to has a high wall in place of a ridge
-  if (!hasGable || plates.slopes.length === 1) return []
-  const lines = roofLines(plates)
-  const { swallowed } = roofJoints(roof, lines)
+export const ridgeProblems = (
+  plates: PlateLines,
+  lines: RoofLines,
+  { swallowed }: Joints,
+): RoofProblem[] => {
+  if (!needsRidges(plates)) return []
   return plates.edges.flatMap((edge) => {
     if (edge.finish !== 'gable') return []
     const sides = [edge.index, (edge.index + 1) % plates.edges.length]

@@ -9,7 +9,7 @@ import type { WavePiece } from './wavefront-links.ts'
 import { meet, noteGableClosed, noteJogs } from './wavefront-meet.ts'
 import type { Run } from './wavefront-meet.ts'
 import type { Front, WaveCorner, WaveLoop } from './wavefront-types.ts'
-import { add2, cross2, distance2, scale2, sub2 } from './vector.ts'
+import { add2, cross2, distance2, point3, scale2, sub2 } from './vector.ts'
 
 /** Fronts this near to parallel (sine) cross too far off to say where. */
 const leastCrossing = 1e-4
@@ -62,7 +62,7 @@ const nodesAt = (run: Run, ring: Ring, zMm: number): Map<number, number> => {
   const nodes = new Map<number, number>()
   for (const [point, corners] of members) {
     const place = middle(corners.map((k) => at(ring.places, k)))
-    const node = run.nodes.push({ ...place, z: zMm }) - 1
+    const node = run.nodes.push(point3(place, zMm)) - 1
     nodes.set(point, node)
     for (const k of corners) {
       const [left, right] = [at(ring.loop.fronts, k - 1), at(ring.loop.fronts, k)]

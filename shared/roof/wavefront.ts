@@ -5,7 +5,7 @@ import { ownerOf } from './wavefront-meet.ts'
 import type { Run } from './wavefront-meet.ts'
 import { crossingAt, overEvent } from './wavefront-step.ts'
 import type { Front, Wave, WaveCorner, WaveLoop } from './wavefront-types.ts'
-import { distance2 } from './vector.ts'
+import { distance2, point3 } from './vector.ts'
 
 const runOnce = (fronts: readonly Front[], owner: number[]): Run => {
   const corners = fronts.map((front, k): WaveCorner => {
@@ -14,7 +14,7 @@ const runOnce = (fronts: readonly Front[], owner: number[]): Run => {
     const point = isKept ? front.from : crossingAt(before, front, 0, front.from)
     return { point, fromMm: 0, velocity: cornerVelocity(before, front), node: k, next: null }
   })
-  const nodes = corners.map(({ point }) => ({ ...point, z: 0 }))
+  const nodes = corners.map(({ point }) => point3(point, 0))
   const run: Run = { fronts, nodes, arcs: [], owner, align: null, refusal: null }
   const open: WaveLoop[] = [{ fronts: fronts.map((_, k) => k), corners, zMm: 0 }]
   // every event joins or parts fronts for good; the count only guards against rounding without end

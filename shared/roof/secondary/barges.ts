@@ -6,7 +6,7 @@ import type { NodeLine } from '../roof-lines.ts'
 import type { Section } from '../roof-types.ts'
 import { at, slopeGradient, slopeHeightMm } from '../slopes.ts'
 import type { PlateEdge } from '../slopes.ts'
-import { add2, along3, dot2, dot3, left2, scale2, scale3, sub2, unit2 } from '../vector.ts'
+import { add2, along3, dot2, dot3, left2, point3, scale2, scale3, sub2, unit2 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import type { BesideGround } from './beside-ground.ts'
 import { besideMember } from './beside-member.ts'
@@ -63,9 +63,9 @@ const layBarge = (ground: BesideGround, { line, gable }: Verge, section: Section
   // a slope whose plate is not square to the gable falls across the board
   const dropMm = Math.abs(dot2(slopeGradient(slope), left2(dir))) * halfMm
   const timber: Timber = {
-    origin: { ...heel, z: slopeHeightMm(slope, heel) + ground.standMm - dropMm },
+    origin: point3(heel, slopeHeightMm(slope, heel) + ground.standMm - dropMm),
     direction: { x: dir.x * cos, y: dir.y * cos, z: sin },
-    left: { ...left2(dir), z: 0 },
+    left: point3(left2(dir), 0),
     up: { x: -dir.x * sin, y: -dir.y * sin, z: cos },
     down: { x: 0, y: 0, z: -1 },
     halfMm,
@@ -87,7 +87,7 @@ const headPlane = (ground: BesideGround, verge: Verge, dir: { x: number; y: numb
   const ridge = lines.lines.find(
     (line) => line.kind === 'ridge' && (line.from === verge.line.to || line.to === verge.line.to),
   )
-  if (ridge === undefined) return { point: top.point, normal: { ...dir, z: 0 } }
+  if (ridge === undefined) return { point: top.point, normal: point3(dir, 0) }
   const [from, to] = [at(lines.nodes, ridge.from).point, at(lines.nodes, ridge.to).point]
   return { point: top.point, normal: { ...left2(unit2(sub2(to, from))), z: 0 } }
 }

@@ -52,12 +52,17 @@ export const turnedTimber = (timber: Timber): Timber => ({
   left: scale3(timber.left, -1),
 })
 
-const draftCut = (settings: RoofSettings, timber: Timber, { end, plane }: EndCut): DraftCut => {
+const draftCut = (
+  settings: RoofSettings,
+  timber: Timber,
+  { end, plane, bears }: EndCut,
+): DraftCut => {
   const bevel = bevelOf(plane, timber, noFalls)
   const leftIsLong = bevel.longSide !== 'right'
   return {
     end,
     plane: { point: timberPoint(timber, bevel.alongMm, 0, 0), normal: { ...plane.normal } },
+    bears,
     listed: null,
     crossing: bevel.crossing,
     alongMm: bevel.alongMm,
@@ -97,10 +102,7 @@ const nearest = (distances: number[]): number => (distances.length > 0 ? Math.mi
 /** The numbers of a timber beside the frame, with the fields and the meaning that rafters have. */
 export const besideMember = (settings: RoofSettings, beside: BesideTimber): DraftMember => {
   const { timber, lengthMm, thicknessMm } = beside
-  const cuts = beside.cuts.map((cut) => ({
-    ...draftCut(settings, timber, cut),
-    bears: cut.bears,
-  }))
+  const cuts = beside.cuts.map((cut) => draftCut(settings, timber, cut))
   const heads = cuts.filter((cut) => cut.end === 'head')
   const feet = cuts.filter((cut) => cut.end !== 'head')
   const along = (end: Cut['end']) => cuts.filter((c) => c.end === end).map((c) => c.alongMm)

@@ -4,7 +4,7 @@ import { boxesMeet, polygonBox } from '../convex.ts'
 import type { Box } from '../convex.ts'
 import type { FrameDraft } from '../members.ts'
 import type { Point3 } from '../roof-types.ts'
-import { cross3, dot3, unit2 } from '../vector.ts'
+import { cross3, dot3, point3, unit2 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import { endFaces } from './end-faces.ts'
 import type { EndFace } from './end-faces.ts'
@@ -39,7 +39,7 @@ const obstacleOf = (stands: FrameDraft): Obstacle => {
     ),
   )
   const level = unit2(timber.direction)
-  const axes = [{ x: 0, y: 0, z: 1 }, timber.left, timber.up, { ...level, z: 0 }]
+  const axes = [{ x: 0, y: 0, z: 1 }, timber.left, timber.up, point3(level, 0)]
   return { stands, corners, axes, box: polygonBox(corners) }
 }
 

@@ -1,7 +1,7 @@
 import type { DraftMember, FrameDraft } from '../members.ts'
 import type { Point3, Section } from '../roof-types.ts'
 import { at, slopeHeightMm } from '../slopes.ts'
-import { add2, dot2, scale2 } from '../vector.ts'
+import { add2, dot2, point3, scale2 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import { besideMember, lyingTimber } from './beside-member.ts'
 import type { EndCut } from './beside-member.ts'
@@ -49,7 +49,7 @@ const layTie = (
   const end = (draft: FrameDraft): Point3 => {
     const slope = at(plates.slopes, soleSlope(draft))
     const backMm = (slopeHeightMm(slope, centre) + standMm - topMm) / slope.tan
-    return { ...add2(centre, scale2(slope.inward, -backMm)), z: topMm }
+    return point3(add2(centre, scale2(slope.inward, -backMm)), topMm)
   }
   const plane = (draft: FrameDraft, point: Point3): Plane => ({
     point,
@@ -64,8 +64,8 @@ const layTie = (
   const timber = lyingTimber(
     {
       origin: from,
-      direction: { ...dir, z: 0 },
-      left: { ...left, z: 0 },
+      direction: point3(dir, 0),
+      left: point3(left, 0),
       up: { x: 0, y: 0, z: 1 },
     },
     section,

@@ -5,7 +5,7 @@ import type { DraftMember } from '../members.ts'
 import type { Point3, Section } from '../roof-types.ts'
 import { at } from '../slopes.ts'
 import type { PlateEdge } from '../slopes.ts'
-import { along3, cross3, dot3, radians, scale3, unit3 } from '../vector.ts'
+import { along3, cross3, dot3, point3, radians, scale3, unit3 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import type { BargeDraft } from './barges.ts'
 import type { BesideGround } from './beside-ground.ts'
@@ -35,7 +35,7 @@ const layFascia = (ground: BesideGround, run: EaveRun, section: Section): Laid =
   const dropMm = plumb ? halfMm * Math.tan(pitch) : 0
   const centre = along3(back.point, back.normal, halfMm)
   const fallMm = plumb ? 2 * dropMm : 0
-  const origin = { ...centre, z: centre.z - fallMm }
+  const origin = point3(centre, centre.z - fallMm)
   return { run, edge, timber: lyingTimber({ origin, direction: along, left, up }, section), dropMm }
 }
 
@@ -54,10 +54,10 @@ const endPlane = (ground: BesideGround, laid: Laid, end: RunEnd, upper: boolean)
   const corner = at(ground.plates.edges, end.corner).from
   const beyond = at(ground.plates.edges, end.edge)
   const ahead = scale3({ x: edge.along.x, y: edge.along.y, z: 0 }, upper ? 1 : -1)
-  if (end.kind === 'square') return { point: { ...corner, z: 0 }, normal: ahead }
+  if (end.kind === 'square') return { point: point3(corner, 0), normal: ahead }
   if (end.kind === 'verge') {
-    const out = scale3({ ...beyond.inward, z: 0 }, -1)
-    return { point: along3({ ...beyond.from, z: 0 }, out, beyond.overhangMm), normal: out }
+    const out = scale3(point3(beyond.inward, 0), -1)
+    return { point: along3(point3(beyond.from, 0), out, beyond.overhangMm), normal: out }
   }
   const own = tailPlane(ground, edge, ground.standMm)
   const other = tailPlane(ground, beyond, ground.standMm)

@@ -4,7 +4,7 @@ import type { FrameDraft } from '../members.ts'
 import type { Point3 } from '../roof-types.ts'
 import { at } from '../slopes.ts'
 import type { Slope } from '../slopes.ts'
-import { along3, dot3, scale3, sub2, unit2 } from '../vector.ts'
+import { along3, dot3, point3, scale3, sub2, unit2 } from '../vector.ts'
 import type { Plane } from '../vector.ts'
 import { timberOnLine } from './beside-ground.ts'
 import type { BesideGround } from './beside-ground.ts'
@@ -62,7 +62,7 @@ export const borderStop = (
   if (side.kind === 'plate') {
     const edge = at(plates.edges, side.edge)
     const normal = { x: -edge.inward.x, y: -edge.inward.y, z: 0 }
-    const plane = offEnd({ point: { ...edge.from, z: 0 }, normal }, timber, upper)
+    const plane = offEnd({ point: point3(edge.from, 0), normal }, timber, upper)
     return { kind: 'square', plane, centre: plane, bearing: null }
   }
   const start = at(lines.nodes, at(face.nodes, border)).point

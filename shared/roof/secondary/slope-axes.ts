@@ -1,7 +1,7 @@
 import type { Point3 } from '../roof-types.ts'
 import { slopePoint } from '../slopes.ts'
 import type { Slope } from '../slopes.ts'
-import { radians } from '../vector.ts'
+import { point3, radians } from '../vector.ts'
 
 /** A slope's three directions, of length 1: along its plate, up the slope, and square out of it. */
 export type SlopeAxes = { along: Point3; upSlope: Point3; normal: Point3; sin: number; cos: number }
@@ -25,4 +25,4 @@ export const topPlanePoint = (
   standMm: number,
   alongMm: number,
   inMm: number,
-): Point3 => ({ ...slopePoint(slope, alongMm, inMm), z: standMm + inMm * slope.tan })
+): Point3 => point3(slopePoint(slope, alongMm, inMm), standMm + inMm * slope.tan)
