@@ -2,8 +2,9 @@ import { expect, test } from 'vitest'
 import { demoPassword } from '../../server/db/demo/demo-people.ts'
 import { isEmpty, seedDemo } from '../../server/db/demo/seed-demo.ts'
 import { roofRevisions } from '../../server/db/tables/job-tables.ts'
-import { people } from '../../server/db/tables/people-tables.ts'
+import { people, tickets } from '../../server/db/tables/people-tables.ts'
 import { jobStages } from '../../shared/jobs/job-stage.ts'
+import { ticketState } from '../../shared/people/ticket-words.ts'
 import { createTestApp } from './harness.ts'
 
 // The Australian regulator's numbers for fiction: mobiles from 0491 570 006 on and landlines in 5550;
@@ -17,7 +18,7 @@ test.each([
   '2026-12-13T02:00:00Z',
   '2026-12-30T23:00:00Z',
 ])(
-  'the demo seeded at %s has two crews, eight people and fourteen jobs over every stage',
+  'the demo seeded at %s has three crews, eleven people and fourteen jobs over every stage',
   async (now) => {
     const app = await createTestApp({ now: new Date(now) })
     expect(isEmpty(app.db)).toBe(true)
@@ -32,9 +33,9 @@ test.each([
     const stages = new Set(body.jobs.map((job: { stage: string }) => job.stage))
     expect([...stages].sort()).toEqual([...jobStages].sort())
     expect(body.jobs).toHaveLength(14)
-    expect((await agent.get('/api/crews')).body.crews).toHaveLength(2)
+    expect((await agent.get('/api/crews')).body.crews).toHaveLength(3)
     const everybody = app.db.select().from(people).all()
-    expect(everybody).toHaveLength(8)
+    expect(everybody).toHaveLength(11)
     for (const { phone, email } of everybody) {
       expect(phone).toMatch(fictional)
       expect(email).toMatch(/\.example$/)
@@ -66,4 +67,23 @@ test('the demo’s roofs are of every shape and each frames into a cut list', as
     'valley',
     'valley-creeper',
   ])
+})
+
+test('the demo’s crews hold the tickets of the roof, one of them soon to lapse and none lapsed', async () => {
+  const app = await createTestApp()
+  await seedDemo(app.db, app.clock)
+  const today = '2026-12-02'
+  const crewPeople = app.db
+    .select()
+    .from(people)
+    .all()
+    .filter((one) => one.role !== 'office')
+  const held = app.db.select().from(tickets).all()
+  for (const person of crewPeople) {
+    const kinds = held.filter((one) => one.personId === person.id).map((one) => one.kind)
+    expect(kinds).toEqual(expect.arrayContaining(['working-at-heights', 'construction-induction']))
+  }
+  const soon = held.filter((ticket) => ticketState(ticket, today) === 'lapsing')
+  expect(soon.map((ticket) => ticket.kind)).toEqual(['working-at-heights'])
+  expect(held.some((ticket) => ticketState(ticket, today) === 'lapsed')).toBe(false)
 })

@@ -1,8 +1,9 @@
+import type { DemoCrewLetter } from './demo-people.ts'
 import type { DemoRoofKey } from './demo-roofs.ts'
 
 /** Days are counted in working days from today: 0 today, −1 the one before. */
 export type DemoBooking = {
-  crew: 'A' | 'B'
+  crew: DemoCrewLetter
   fromWorkingDay: number
   days: number
   state: 'pencilled' | 'firm'

@@ -48,7 +48,7 @@ export const demoWingJobs: DemoJob[] = [
     acceptedAgo: 6,
     roof: 'gabledWing',
     issued: true,
-    booking: { crew: 'B', fromWorkingDay: 6, days: 2, state: 'pencilled', gear: '', done: 'none' },
+    booking: { crew: 'C', fromWorkingDay: 6, days: 2, state: 'pencilled', gear: '', done: 'none' },
   },
   {
     ...blankJob,

@@ -19,9 +19,18 @@ import { jobs, plateChecks, roofRevisions } from '../tables/job-tables.ts'
 import { crewMembers, crews, people } from '../tables/people-tables.ts'
 import type { DemoJob } from './demo-job.ts'
 import { demoJobs } from './demo-jobs.ts'
-import { demoCrews, demoEmail, demoFirm, demoPassword, demoPeople } from './demo-people.ts'
+import { insertDemoMilestones } from './demo-milestones.ts'
+import {
+  type DemoCrewLetter,
+  demoCrews,
+  demoEmail,
+  demoFirm,
+  demoPassword,
+  demoPeople,
+} from './demo-people.ts'
 import { demoRoofs } from './demo-roofs.ts'
 import { tickDemoTasks } from './demo-ticks.ts'
+import { seedDemoTime } from './demo-time.ts'
 import { tellDemoDays } from './demo-told.ts'
 
 export function isEmpty(db: Db): boolean {
@@ -149,6 +158,7 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
   readFirm(db)
   db.update(firmTable).set(demoFirm).run()
   const ids = seedPeople(db, passwordHash, now, dayPlus(today, -400))
+  seedDemoTime(db, { ids, today, loanDay: workingDay(db, today, 10) })
   const office: CurrentUser = {
     id: ids.get('marnie') ?? '',
     name: 'Marnie Quill',
@@ -176,6 +186,12 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
         state: job.booking.state,
         gear: job.booking.gear,
       })
+      const { fromWorkingDay } = job.booking
+      insertDemoMilestones(
+        db,
+        { id: jobId, number: job.number },
+        { dayOf: (n) => workingDay(db, today, fromWorkingDay + n), today, now },
+      )
       const crew = crewOf(ids, job.booking.crew)
       if (job.platesMeasured) {
         insertPlateCheck(db, jobId, crew[0] ?? '', instantAt(firstDay, '07:20', timeZone))
@@ -191,7 +207,7 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
 }
 
 /** The leading hand first. */
-function crewOf(ids: Map<string, string>, letter: 'A' | 'B'): string[] {
+function crewOf(ids: Map<string, string>, letter: DemoCrewLetter): string[] {
   return demoPeople
     .filter((person) => person.crew === letter)
     .map((person) => ids.get(person.key) ?? '')
