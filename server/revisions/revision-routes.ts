@@ -1,5 +1,6 @@
 import type { Request } from 'express'
 import { z } from 'zod'
+import { comparisonSchema } from '../../shared/revisions/comparison-schemas.ts'
 import {
   issuedSchema,
   issueRevisionSchema,
@@ -40,5 +41,12 @@ export function revisionRoutes(api: Api, revisions: RevisionService): void {
     const jobId = jobIdOf(req)
     const letter = pathPart(req, 'letter', letterSchema, 'That revision')
     send(res, revisionSchema, revisions.readRevision(currentUser(res), jobId, letter))
+  })
+
+  api.route('get', '/api/jobs/:jobId/revisions/:letter/against/:other', 'roof:read', (req, res) => {
+    const jobId = jobIdOf(req)
+    const letter = pathPart(req, 'letter', letterSchema, 'That revision')
+    const other = pathPart(req, 'other', letterSchema, 'That revision')
+    send(res, comparisonSchema, revisions.compare(currentUser(res), jobId, [letter, other]))
   })
 }

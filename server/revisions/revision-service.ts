@@ -9,6 +9,7 @@ import { notFound, staleVersion } from '../http/app-error.ts'
 import { writeAudit } from '../lib/audit.ts'
 import type { Clock } from '../lib/clock.ts'
 import { jobVisible } from '../lib/visibility.ts'
+import { compareRevisions } from './compare-revisions.ts'
 import type { Framer } from './framer.ts'
 import { type IssueDeps, issueRevision } from './issue-revision.ts'
 import {
@@ -31,6 +32,8 @@ export function createRevisionService(deps: IssueDeps & { framer: Framer }) {
       saveDraft(deps, user, jobId, input),
     issue: (user: CurrentUser, jobId: string, version: number) =>
       issueRevision(deps, { user, jobId, version }),
+    compare: (user: CurrentUser, jobId: string, letters: [string, string]) =>
+      compareRevisions(deps, user, jobId, letters),
     readRevision: (user: CurrentUser, jobId: string, letter: string) =>
       wholeRevision(deps, user, jobId, letter),
   }

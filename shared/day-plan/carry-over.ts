@@ -1,4 +1,5 @@
 import type { FrameSpec, Member } from '../roof/roof-types.ts'
+import { memberShapeKey } from './member-shape.ts'
 import { nothingDone, type DonePieces } from './day-plan.ts'
 
 /** Pieces done to one revision, in the marks of another. */
@@ -8,17 +9,13 @@ export type CarriedOver = {
   cutButUnused: string[]
 }
 
-/** Alike as a cut line has it: within 0.1 mm and 0.01°. */
-const lengthKey = (lengthMm: number): string => lengthMm.toFixed(1)
-const angleKey = (angleDeg: number): string => angleDeg.toFixed(2)
-
 /**
  * Which pieces of `next` are there already, from what was done to `previous`: a piece cut serves any alike
  * piece, a piece stood serves only the alike one at its place. Set-out work carries over when the plates are
  * the same ones.
  */
 export function carryOver(previous: FrameSpec, next: FrameSpec, done: DonePieces): CarriedOver {
-  const shapes = countBy(previous.members.filter((m) => done.cut.has(m.mark)).map(shapeKey))
+  const shapes = countBy(previous.members.filter((m) => done.cut.has(m.mark)).map(memberShapeKey))
   const places = new Set(previous.members.filter((m) => done.stood.has(m.mark)).map(placeKey))
   const stood = new Set(next.members.filter((m) => places.has(placeKey(m))).map((m) => m.mark))
   const cut = new Set<string>()
@@ -27,41 +24,22 @@ export function carryOver(previous: FrameSpec, next: FrameSpec, done: DonePieces
     (a, b) => Number(stood.has(b.mark)) - Number(stood.has(a.mark)),
   )
   for (const member of standingFirst) {
-    const left = shapes.get(shapeKey(member)) ?? 0
+    const left = shapes.get(memberShapeKey(member)) ?? 0
     if (left === 0) continue
-    shapes.set(shapeKey(member), left - 1)
+    shapes.set(memberShapeKey(member), left - 1)
     cut.add(member.mark)
   }
   const cutButUnused = previous.members
-    .filter((m) => done.cut.has(m.mark) && takeOne(shapes, shapeKey(m)))
+    .filter((m) => done.cut.has(m.mark) && takeOne(shapes, memberShapeKey(m)))
     .map((m) => m.mark)
   const setOut = platesKey(previous) === platesKey(next) ? done.setOut : nothingDone.setOut
   return { done: { cut, stood, setOut }, cutButUnused }
 }
 
-function shapeKey(member: Member): string {
-  const cuts = member.cuts.map((cut) =>
-    [cut.end, cut.longSide, angleKey(cut.face.fromEdgeDeg), angleKey(cut.edge.fromEdgeDeg)].join(),
-  )
-  const { birdsmouth: mouth } = member
-  return [
-    member.role,
-    member.section.thicknessMm,
-    member.section.depthMm,
-    lengthKey(member.cutLengthMm),
-    lengthKey(member.tailLengthMm),
-    mouth ? `${lengthKey(mouth.seatMm)},${lengthKey(mouth.heelMm)}` : '',
-    member.backing
-      ? `${angleKey(member.backing.leftDeg)},${angleKey(member.backing.rightDeg)}`
-      : '',
-    ...cuts,
-  ].join(' ')
-}
-
 function placeKey(member: Member): string {
   const { from, to } = member.axis
   const points = [from, to].map((p) => [p.x, p.y, p.z].map(Math.round).join())
-  return `${shapeKey(member)} ${points.join(' ')}`
+  return `${memberShapeKey(member)} ${points.join(' ')}`
 }
 
 function platesKey(spec: FrameSpec): string {

@@ -23,7 +23,7 @@ const roleNames = [
   'fascia',
   'barge',
 ] as const
-const role = z.enum(roleNames)
+export const memberRoleSchema = z.enum(roleNames)
 
 export const roofSchema = z.object({
   outline: z.array(point2),
@@ -96,7 +96,7 @@ const birdsmouth = z.object({
 
 const member = z.object({
   mark: z.string(),
-  role,
+  role: memberRoleSchema,
   topInSlope: z.boolean().optional(),
   hand: hand.nullable(),
   section,
@@ -160,7 +160,7 @@ export const frameSpecSchema = z.object({
   cutLines: z.array(
     z.object({
       mark: z.string(),
-      role,
+      role: memberRoleSchema,
       section,
       cutLengthMm: z.number(),
       quantity: z.number(),

@@ -7,3 +7,9 @@ export function revisionLetter(sequence: number): string {
   const before = Math.floor((sequence - 1) / letters)
   return before === 0 ? last : revisionLetter(before) + last
 }
+
+/** The letter of the revision before; null for the first. */
+export function letterBefore(letter: string): string | null {
+  const sequence = [...letter].reduce((sum, one) => sum * letters + one.charCodeAt(0) - 64, 0)
+  return sequence > 1 ? revisionLetter(sequence - 1) : null
+}

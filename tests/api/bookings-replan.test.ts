@@ -1,5 +1,6 @@
 import { eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
+import { comparisonSchema } from '../../shared/revisions/comparison-schemas.ts'
 import type { Issued } from '../../shared/revisions/revision-schemas.ts'
 import { replanBooking, replanUpcoming, takeRevision } from '../../server/bookings/replan.ts'
 import { bookings, tasks } from '../../server/db/tables/booking-tables.ts'
@@ -65,6 +66,15 @@ test('the office is told which cut pieces a new revision has no place for, and w
   firm.tick(commons.task.id, 2)
   const marks = commons.task.memberMarks.slice(0, 2)
   expect((await issue(1, '30')).cutButUnused).toEqual([{ letter: 'A', marks }])
+  // The same can be read again at any time, whichever way round the two are asked for.
+  const at = `/api/jobs/${firm.jobs.bareJob}/revisions`
+  const compared = comparisonSchema.parse(
+    (await firm.officeAgent.get(`${at}/A/against/B`).expect(200)).body,
+  )
+  expect([compared.before.letter, compared.after.letter]).toEqual(['A', 'B'])
+  expect(compared.cutButUnused).toEqual([{ letter: 'A', marks }])
+  expect(compared.lines.find((line) => line.role === 'common')?.kind).toBe('longer')
+  await firm.officeAgent.get(`${at}/A/against/C`).expect(404)
 })
 
 test('a revision that leaves a line alike keeps what was cut of it', async () => {

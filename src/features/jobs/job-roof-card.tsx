@@ -29,23 +29,36 @@ function Revisions({ job }: { job: JobView }) {
   const { timeZone } = useSession().firm
   return (
     <ol className="divide-y divide-rule">
-      {job.revisions.map((revision, i) => (
-        <li key={revision.letter}>
-          <Link
-            to={`/jobs/${job.id}/revisions/${revision.letter}`}
-            className="flex min-h-12 items-center gap-3 py-1 hover:underline"
-          >
-            <RoofGlyph glyph={revision.glyph} sizePx={36} />
-            <span>
-              <span className="font-semibold text-chalk underline">Revision {revision.letter}</span>
-              {i === 0 ? ' (latest)' : ''}
-              <span className="block text-sm text-ink-soft">
-                Issued {issuedText(revision.issuedAt, timeZone)}
+      {job.revisions.map((revision, i) => {
+        const before = job.revisions[i + 1]
+        return (
+          <li key={revision.letter} className="flex flex-wrap items-center justify-between gap-x-4">
+            <Link
+              to={`/jobs/${job.id}/revisions/${revision.letter}`}
+              className="flex min-h-12 items-center gap-3 py-1 hover:underline"
+            >
+              <RoofGlyph glyph={revision.glyph} sizePx={36} />
+              <span>
+                <span className="font-semibold text-chalk underline">
+                  Revision {revision.letter}
+                </span>
+                {i === 0 ? ' (latest)' : ''}
+                <span className="block text-sm text-ink-soft">
+                  Issued {issuedText(revision.issuedAt, timeZone)}
+                </span>
               </span>
-            </span>
-          </Link>
-        </li>
-      ))}
+            </Link>
+            {before ? (
+              <Link
+                to={`/jobs/${job.id}/revisions/${revision.letter}/against/${before.letter}`}
+                className="inline-flex min-h-11 items-center text-chalk underline"
+              >
+                What changed since {before.letter}
+              </Link>
+            ) : null}
+          </li>
+        )
+      })}
     </ol>
   )
 }

@@ -16,20 +16,24 @@ export function CutButUnused({ issued }: { issued: Issued | null }) {
   if (!issued || issued.cutButUnused.length === 0) return null
   return (
     <div role="status" className="mb-4">
-      <Note
-        kind="caution"
-        title={`Already cut, and not used in revision ${issued.revision.letter}`}
-      >
-        {issued.cutButUnused.map(({ letter, marks }) => (
-          <details key={letter}>
-            <summary className="min-h-11 content-center">
-              Cut to {letter}: {byLine(marks)}
-            </summary>
-            <p>{marks.join(', ')}</p>
-          </details>
-        ))}
-        <p>Tell the crew to put them aside; the pieces of the new roof are planned to be cut.</p>
-      </Note>
+      <CutButUnusedNote letter={issued.revision.letter} cut={issued.cutButUnused} />
     </div>
+  )
+}
+
+/** Pieces cut to older revisions that the one of this letter has no place for. */
+export function CutButUnusedNote({ letter, cut }: { letter: string; cut: Issued['cutButUnused'] }) {
+  return (
+    <Note kind="caution" title={`Already cut, and not used in revision ${letter}`}>
+      {cut.map(({ letter: cutTo, marks }) => (
+        <details key={cutTo}>
+          <summary className="min-h-11 content-center">
+            Cut to {cutTo}: {byLine(marks)}
+          </summary>
+          <p>{marks.join(', ')}</p>
+        </details>
+      ))}
+      <p>Tell the crew to put them aside; the pieces of the new roof are planned to be cut.</p>
+    </Note>
   )
 }

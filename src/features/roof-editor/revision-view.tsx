@@ -4,6 +4,7 @@ import { Link, useSearchParams } from 'react-router-dom'
 import { formatDayWithYear } from '../../../shared/calendar/days.ts'
 import { localDayOf, localTimeOf } from '../../../shared/calendar/local-time.ts'
 import { cutOneFirst, workAtHeight } from '../../../shared/marking/marking-card.ts'
+import { letterBefore } from '../../../shared/revisions/revision-letters.ts'
 import type { Revision } from '../../../shared/revisions/revision-schemas.ts'
 import { sizesTypedWords } from '../../../shared/revisions/sizes-typed.ts'
 import { RoofPlan } from '../../drawings/roof-plan.tsx'
@@ -87,6 +88,7 @@ function RevisionHeader({ revision, issuedOn }: { revision: Revision; issuedOn: 
   const sizesBy = sizesTypedWords(revision.sizesTyped, useSession().firm.timeZone)
   const mayEdit = useMay('roof:write')
   const mayOpenJob = useMay('job:read')
+  const before = letterBefore(letter)
   return (
     <PageHeader
       title={`${job.number} roof, revision ${letter}`}
@@ -105,6 +107,14 @@ function RevisionHeader({ revision, issuedOn }: { revision: Revision; issuedOn: 
       }
       actions={
         <>
+          {before ? (
+            <Link
+              to={`/jobs/${job.id}/revisions/${letter}/against/${before}`}
+              className={buttonClass('plain')}
+            >
+              What changed since {before}
+            </Link>
+          ) : null}
           {mayEdit ? (
             <Link to={`/jobs/${job.id}/roof`} className={buttonClass('plain')}>
               Open the editor
@@ -125,12 +135,20 @@ function RevisionNotes({ revision }: { revision: Revision }) {
     <div className="mb-4 space-y-2">
       {latestLetter === letter ? null : (
         <Note kind="caution" title={`Revision ${latestLetter} has been issued since`}>
-          <Link
-            to={`/jobs/${job.id}/revisions/${latestLetter}`}
-            className="font-semibold text-chalk underline"
-          >
-            Open revision {latestLetter}
-          </Link>
+          <p className="flex flex-wrap gap-x-6">
+            <Link
+              to={`/jobs/${job.id}/revisions/${latestLetter}`}
+              className="font-semibold text-chalk underline"
+            >
+              Open revision {latestLetter}
+            </Link>
+            <Link
+              to={`/jobs/${job.id}/revisions/${latestLetter}/against/${letter}`}
+              className="font-semibold text-chalk underline"
+            >
+              What changed since {letter}
+            </Link>
+          </p>
         </Note>
       )}
       {platesMeasured ? null : (

@@ -1,4 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
+import { comparisonSchema } from '../../../shared/revisions/comparison-schemas.ts'
 import {
   issuedSchema,
   jobRoofSchema,
@@ -20,6 +21,14 @@ export const roofQueries = {
       queryKey: [...roofQueries.all(), 'revision', jobId, letter] as const,
       queryFn: ({ signal }) =>
         api.get(`/api/jobs/${jobId}/revisions/${letter}`, revisionSchema, { signal }),
+    }),
+  comparison: (jobId: string, letter: string, other: string) =>
+    queryOptions({
+      queryKey: [...roofQueries.all(), 'comparison', jobId, letter, other] as const,
+      queryFn: ({ signal }) =>
+        api.get(`/api/jobs/${jobId}/revisions/${letter}/against/${other}`, comparisonSchema, {
+          signal,
+        }),
     }),
 }
 
