@@ -1,13 +1,13 @@
-import { asc, eq } from 'drizzle-orm'
+import { eq } from 'drizzle-orm'
 import { expect, test } from 'vitest'
 import type { RainOffList, RainOffPreview } from '../../shared/rain-offs/rain-off-schemas.ts'
-import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
 import { jobs } from '../../server/db/tables/job-tables.ts'
 import { milestones } from '../../server/db/tables/milestone-tables.ts'
 import { leave } from '../../server/db/tables/people-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
 import { bookingFirm, fri, mon, thu, tue, wed } from './booking-kit.ts'
 import type { Agent } from './harness.ts'
+import { calendarOf } from './rain-off-kit.ts'
 
 const nextDay = new Date('2026-12-03T00:00:00Z')
 
@@ -41,24 +41,6 @@ async function make(firm: Firm, changes: Record<string, unknown> = {}) {
     seen: seenOf(shown),
     ...changes,
   })
-}
-
-/** All that a rain-off and its undo may touch, versions left out. */
-function calendarOf({ app }: Firm) {
-  const rows = app.db
-    .select()
-    .from(bookingDays)
-    .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
-    .orderBy(asc(bookingDays.id))
-    .all()
-  const held = app.db.select().from(tasks).orderBy(asc(tasks.bookingDayId), asc(tasks.position))
-  return {
-    days: rows.map(({ booking_days: day, bookings: booking }) => {
-      const { id, jobId, crewId, state, startAt, gear, clashReason, cancelledAt } = booking
-      return { day, id, jobId, crewId, state, startAt, gear, clashReason, cancelledAt }
-    }),
-    tasks: held.all().map(({ id: _id, version: _version, ...task }) => task),
-  }
 }
 
 const list = async (agent: Agent) => (await agent.get('/api/rain-offs')).body as RainOffList

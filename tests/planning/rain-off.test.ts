@@ -3,6 +3,7 @@ import { expect, test } from 'vitest'
 import { dayPlus, daysBetween, isoWeekday } from '../../shared/calendar/days.ts'
 import type { WorkingCalendar } from '../../shared/calendar/working-days.ts'
 import { type BookingMove, rainOff, type RainOffFacts } from '../../shared/planning/rain-off.ts'
+import { sampleOf } from '../roof/support/sample.ts'
 import { monday, rainOffFacts } from './random-firm.ts'
 
 // What holds comes from the words of the trade (rained off: everything after moves on, in its order, and
@@ -38,7 +39,7 @@ function made(facts: RainOffFacts) {
 const all = (moves: readonly BookingMove[]) => moves.flatMap((m) => [...m.moved, ...m.added])
 
 function holds(check: (facts: RainOffFacts) => void): void {
-  fc.assert(fc.property(rainOffFacts, check), { numRuns: 250 })
+  fc.assert(fc.property(rainOffFacts, check), { numRuns: sampleOf(100, 1000) })
 }
 
 const week: WorkingCalendar = {
