@@ -7,8 +7,10 @@ import {
   degOfRise,
   edgeTan,
   faceTan,
+  foot,
   FOOT_MM,
   hipBuilding,
+  inch,
   INCH_MM,
 } from '../support/hip-building.ts'
 import { creepersOn, cutsAt, hipFrom, planeOfEdge } from '../support/members.ts'
@@ -20,8 +22,6 @@ import { convexReferences, referenceRoof } from '../support/roofs.ts'
  * is laid on a square: its tangent is blade over tongue. Books take 17 for 16.97 (the diagonal of
  * 12), 13 for 12.99 (the octagon hip) and 5 for 4.97 (12 tan 22.5°): the tolerance allows for that.
  */
-const inch = (mm: number): number => mm / INCH_MM
-const foot = (mm: number): number => mm / FOOT_MM
 const tanDeg = (deg: number): number => Math.tan((deg * Math.PI) / 180)
 
 describe('hips over a square corner', () => {

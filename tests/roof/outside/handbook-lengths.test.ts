@@ -7,6 +7,7 @@ import {
   faceTan,
   FOOT_MM,
   hipBuilding,
+  inch,
   INCH_MM,
 } from '../support/hip-building.ts'
 import { misfits, type Row } from '../support/misfits.ts'
@@ -18,7 +19,6 @@ import { frameRoof } from '../../../shared/roof/frame-roof.ts'
  * sheets; each check names its book. Tolerance: half the last printed digit, unless the book
  * multiplies a rounded unit length, reads off a square, or cuts digits short, which is then said.
  */
-const inch = (mm: number): number => mm / INCH_MM
 const metre = (mm: number): number => mm / 1000
 const TWELFTH_IN = 1 / 12
 

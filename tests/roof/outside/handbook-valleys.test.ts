@@ -1,15 +1,13 @@
 import { describe, expect, test } from 'vitest'
 
 import { example } from '../support/handbook.ts'
-import { degOfRise, FOOT_MM, INCH_MM } from '../support/hip-building.ts'
+import { degOfRise, foot, FOOT_MM, inch, INCH_MM } from '../support/hip-building.ts'
 import { ofRole } from '../support/members.ts'
 import { misfits, type Row } from '../support/misfits.ts'
 import { lBuilding, wingedBuilding } from '../support/wing-building.ts'
 import type { Member } from '../../../shared/roof/roof-types.ts'
 
 /** Source: tests/fixtures/handbook.json, as in handbook-lengths.test.ts. */
-const inch = (mm: number): number => mm / INCH_MM
-const foot = (mm: number): number => mm / FOOT_MM
 
 /** A length along a member as it lies in plan. */
 const level = (member: Member, mm: number): number => (mm * member.runMm) / member.setOutLengthMm

@@ -5,6 +5,8 @@ import { makeRoof } from './roofs.ts'
 
 export const INCH_MM = 25.4
 export const FOOT_MM = 304.8
+export const inch = (mm: number): number => mm / INCH_MM
+export const foot = (mm: number): number => mm / FOOT_MM
 export const degOfRise = (rise: number, run: number): number =>
   (Math.atan2(rise, run) * 180) / Math.PI
 
