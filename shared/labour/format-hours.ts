@@ -12,3 +12,11 @@ export function formatLoad(plannedMinutes: number, availableMinutes: number): st
 function hoursNumber(minutes: number): string {
   return String(Math.round(minutes / 6) / 10)
 }
+
+/** Whole hours and quarters, as said on site: 495 → '8¼ h'. */
+export function formatQuarters(minutes: number): string {
+  const quarters = Math.round(minutes / 15)
+  const hours = Math.floor(quarters / 4)
+  const fraction = ['', '¼', '½', '¾'][quarters % 4] ?? ''
+  return `${hours > 0 || fraction === '' ? hours : ''}${fraction} h`
+}

@@ -1,10 +1,10 @@
 import { MapPin, Phone } from 'lucide-react'
 import type { ReactNode } from 'react'
 import type { DaySheet } from '../../../shared/day-sheets/day-sheet-schemas.ts'
+import { formatQuarters } from '../../../shared/labour/format-hours.ts'
 import { Badge } from '../../ui/badge.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { Card } from '../../ui/card.tsx'
-import { hoursWords } from './day-words.ts'
 
 function Fact({ name, children }: { name: string; children: ReactNode }) {
   return (
@@ -88,7 +88,11 @@ export function DayFacts({ sheet }: { sheet: DaySheet }) {
         {sheet.gear ? <Fact name="Gear">{sheet.gear}</Fact> : null}
         {job.crewNotes ? <Fact name="Notes">{job.crewNotes}</Fact> : null}
         <Fact name="Work">
-          {hoursWords(sheet.minutesPlanned)} planned, {hoursWords(sheet.minutesThere)} there
+          {formatQuarters(sheet.minutesPlanned)} planned, {formatQuarters(sheet.minutesThere)} there
+          {sheet.log ? `, ${formatQuarters(sheet.log.minutes)} logged` : ''}
+          {sheet.log && sheet.log.lostMinutes > 0
+            ? `, ${formatQuarters(sheet.log.lostMinutes)} of them lost`
+            : ''}
         </Fact>
       </dl>
     </Card>

@@ -10,6 +10,7 @@ import { Card } from '../../ui/card.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { Skeleton } from '../../ui/skeleton.tsx'
 import { ErrorState } from '../../ui/states.tsx'
+import { CloseDayKey } from './close-day-key.tsx'
 import { CautionNotes, ChangesNote, HeightNote } from './day-notes.tsx'
 import { DayFacts } from './day-facts.tsx'
 import { JumpKeys, planPlaceId } from './jump-keys.tsx'
@@ -107,8 +108,9 @@ export function SheetView({ sheet, today }: { sheet: DaySheet; today: string }) 
           <CautionNotes sheet={sheet} />
           <HeightNote />
         </div>
-        <div className="lg:col-start-2 lg:row-span-2 lg:row-start-1">
+        <div className="space-y-5 lg:col-start-2 lg:row-span-2 lg:row-start-1">
           <WorkList sheet={sheet} roof={roof.data ?? null} today={today} />
+          <CloseDayKey sheet={sheet} today={today} />
         </div>
         {revision ? <SheetRoof sheet={sheet} revisionId={revision.id} /> : null}
       </div>
