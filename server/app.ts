@@ -31,6 +31,7 @@ import { messageRoutes } from './messages/message-routes.ts'
 import { milestoneRoutes } from './milestones/milestone-routes.ts'
 import { noticeRoutes } from './notices/notice-routes.ts'
 import { peopleRoutes } from './people/people-routes.ts'
+import { variationRoutes } from './variations/variation-routes.ts'
 import { ticketRoutes } from './people/ticket-routes.ts'
 import { rainOffRoutes } from './rain-offs/rain-off-routes.ts'
 
@@ -102,6 +103,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   messageRoutes(api, deps)
   noticeRoutes(api, deps)
   revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
+  variationRoutes(api, deps)
   jobRoutes(api, { db, clock, events: deps.events })
   milestoneRoutes(api, deps)
   clashRoutes(api, deps)

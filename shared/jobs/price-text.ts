@@ -18,8 +18,9 @@ export function priceInputText(cents: number | null): string {
   return cents % 100 === 0 ? String(cents / 100) : (cents / 100).toFixed(2)
 }
 
-/** As it is read: '$18,450' or '$18,450.50'. */
+/** As it is read: '$18,450', '$18,450.50' or, for work left out, '−$450'. */
 export function formatPrice(cents: number): string {
+  if (cents < 0) return `−${formatPrice(-cents)}`
   const rest = cents % 100
   const dollars = Math.floor(cents / 100)
   const grouped = String(dollars).replace(/\B(?=(\d{3})+$)/g, ',')

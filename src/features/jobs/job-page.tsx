@@ -18,6 +18,7 @@ import { JobMilestonesCard } from './job-milestones-card.tsx'
 import { jobQueries } from './job-queries.ts'
 import { JobRoofCard } from './job-roof-card.tsx'
 import { JobStageCard } from './job-stage-card.tsx'
+import { JobVariationsCard } from './job-variations-card.tsx'
 import { missingText } from './missing-text.ts'
 
 function BackToBoard() {
@@ -99,6 +100,7 @@ function JobDetails({ job }: { job: JobView }) {
           <JobRoofCard job={job} />
           <JobBookingsCard job={job} />
           <JobMilestonesCard jobId={job.id} />
+          <JobVariationsCard jobId={job.id} />
         </div>
         {/* On site the way there and whom to ring come first. */}
         <div className={`space-y-4 ${mayWrite ? '' : 'max-lg:order-first'}`}>
