@@ -16,6 +16,7 @@ export const clipConvex = <L>(
   label: L,
 ): Labelled<L> => {
   const { points, labels } = polygon
+  if (points.every((p) => normal.x * p.x + normal.y * p.y - offset <= onLineMm)) return polygon
   const count = points.length
   const outPoints: Point2[] = []
   const outLabels: L[] = []
@@ -66,6 +67,13 @@ export const polygonBox = (points: readonly Point2[]): Box => {
   }
   return box
 }
+
+export const grownBox = (box: Box, byMm: number): Box => ({
+  minX: box.minX - byMm,
+  minY: box.minY - byMm,
+  maxX: box.maxX + byMm,
+  maxY: box.maxY + byMm,
+})
 
 export const boxesMeet = (a: Box, b: Box): boolean =>
   a.minX <= b.maxX && b.minX <= a.maxX && a.minY <= b.maxY && b.minY <= a.maxY

@@ -1,6 +1,6 @@
 import { planSegments, sharedRange } from './contacts.ts'
 import type { Segment } from './contacts.ts'
-import { boxesMeet, convexOverlap, polygonSignedArea } from './convex.ts'
+import { boxesMeet, convexOverlap, grownBox, polygonSignedArea } from './convex.ts'
 import type { Box } from './convex.ts'
 import { phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
@@ -37,6 +37,8 @@ const sliverMm = 0.3
 const closedMm = 0.1
 const nearlyMm = 1.5
 const behindMm = 6
+/** What lies further than this off an end has no part in it; more than `behindMm`. */
+const besideMm = 10
 const closedShare = 0.985
 /** Pieces that share more of the plan than this are in each other's way. */
 const overlapMm2 = 1
@@ -113,7 +115,7 @@ const overlaps = (own: Body, bodies: readonly Body[]): boolean =>
       polygonSignedArea(convexOverlap(own.points, body.points)) > overlapMm2,
   )
 
-const bodyOf = (obstacle: Obstacle): Body => ({
+export const bodyOf = (obstacle: Obstacle): Body => ({
   piece: obstacle.piece,
   points: obstacle.polygon.points,
   sides: planSegments(obstacle.piece, obstacle.polygon),
@@ -123,26 +125,30 @@ const bodyOf = (obstacle: Obstacle): Body => ({
 /** Looks at all ends of a group of joints as placed in order: whether each bears and closes on what stood before it. */
 export const jointFaults = (
   jobs: readonly EndJob[],
-  before: readonly Obstacle[],
+  before: readonly Body[],
   hasFootJob: (piece: Piece) => boolean,
 ): JointFaults => {
   const made = new Map<number, Body[]>()
-  for (const { piece, end } of jobs) {
+  const ends = jobs.map(({ piece, end }) => bodyOf(halfObstacle(piece, end)))
+  jobs.forEach(({ piece, end }, k) => {
     const bodies = made.get(piece.id) ?? []
     made.set(piece.id, bodies)
-    bodies.push(bodyOf(halfObstacle(piece, end)))
+    bodies.push(at(ends, k))
     if (end === 'head' && !hasFootJob(piece)) bodies.push(bodyOf(halfObstacle(piece, 'foot')))
-  }
-  const standing: Body[] = before.map(bodyOf)
+  })
+  const standing: Body[] = [...before]
   const ofJoint = new Map<number, number>()
   const openPieces: number[] = []
   let total = 0
-  for (const job of jobs) {
+  jobs.forEach((job, k) => {
     const { piece, end } = job
-    const own = bodyOf(halfObstacle(piece, end))
+    const own = at(ends, k)
     const cuts = end === 'head' ? piece.headCuts : piece.footCuts
     const mates = gather(cuts, ({ mitreWith }) => made.get(mitreWith ?? -1) ?? [])
-    const others = [...new Set([...standing, ...mates])].filter((body) => body.piece !== piece.id)
+    const near = grownBox(own.box, besideMm)
+    const others = [...new Set([...standing, ...mates])].filter(
+      (body) => body.piece !== piece.id && boxesMeet(near, body.box),
+    )
     // a foot that others bear on bears on nothing itself
     const bearing = job.phase === phases.brokenFoot ? 0 : endFaults(job, own, others)
     const faults = bearing + (overlaps(own, others) ? open : 0)
@@ -152,6 +158,6 @@ export const jointFaults = (
     // once one end stands, what bears on the timber bears on all of it
     standing.push(...(made.get(piece.id) ?? []))
     made.delete(piece.id)
-  }
+  })
   return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= poor, openPieces }
 }

@@ -1,7 +1,7 @@
 import { boxGrid } from './box-grid.ts'
 import { brokenFootCut, sidesAt } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
-import { jointFaults } from './joint-faults.ts'
+import { bodyOf, jointFaults } from './joint-faults.ts'
 import { endJobs, phases, usualWay } from './joint-phases.ts'
 import type { EndJob, JointWay, JointWays } from './joint-phases.ts'
 import { jointMitres } from './joint-mitres.ts'
@@ -150,6 +150,7 @@ const placeGroup = (
     (p) => isOwn(p.headJoint) || isOwn(p.footJoint) || p.through.some(isOwn),
   )
   const ridges = ridgeDirections(pieces, group)
+  const bodies = before.map(bodyOf)
   const place = (ways: JointWays) => {
     const jobs = endJobs(ground, own, ways).filter(
       (job) => isOwn(job.joint) && job.phase > phases.ridgeButt,
@@ -157,7 +158,7 @@ const placeGroup = (
     // or a timber with both ends here would stand in the way as the trial before cut it
     jobs.forEach(clearEnd)
     placeJobs(ground, jobs, ways, overlay(before), ridges)
-    return { jobs, faults: jointFaults(jobs, before, hasFootJob) }
+    return { jobs, faults: jointFaults(jobs, bodies, hasFootJob) }
   }
   let ways: JointWays = new Map<number, JointWay>()
   let best = place(ways)

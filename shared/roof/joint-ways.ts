@@ -2,7 +2,7 @@ import { isRisingAt } from './broken-foot.ts'
 import type { FootWay } from './broken-foot.ts'
 import type { Ground } from './build-pieces.ts'
 import type { Box } from './convex.ts'
-import { polygonBox } from './convex.ts'
+import { grownBox, polygonBox } from './convex.ts'
 import type { JointWay } from './joint-phases.ts'
 import type { Piece } from './piece.ts'
 import { at } from './slopes.ts'
@@ -34,13 +34,7 @@ export const jointGroups = (ground: Ground): JointGroup[] => {
     if (owner[root] !== root) return []
     const members = owner.flatMap((id, k) => (id === root ? [k] : []))
     const box = polygonBox(members.map((k) => at(joints, k).point))
-    const grown = {
-      minX: box.minX - nearMm,
-      minY: box.minY - nearMm,
-      maxX: box.maxX + nearMm,
-      maxY: box.maxY + nearMm,
-    }
-    return [{ joints: members, box: grown }]
+    return [{ joints: members, box: grownBox(box, nearMm) }]
   })
 }
 

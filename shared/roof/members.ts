@@ -82,6 +82,7 @@ export const draftMember = (
   const cutLengthMm = upper - lower + allowanceMm
   const volumeM3 = (cutLengthMm * piece.section.thicknessMm * piece.section.depthMm) / 1_000_000_000
   const riseMm = piece.head.z - piece.foot.z
+  const { headDeductionMm, footDeductionMm, tailLengthMm } = deductions(piece, cuts)
   return {
     piece,
     timber,
@@ -97,7 +98,9 @@ export const draftMember = (
     runMm: piece.planMm,
     pitchDeg: degrees(Math.atan(piece.tan)),
     setOutLengthMm: setOutLengthMm(piece),
-    ...deductions(piece, cuts),
+    headDeductionMm,
+    footDeductionMm,
+    tailLengthMm,
     cutLengthMm,
     cuts: cuts.map((cut) => ({ ...cut, bears: bears(cut) })),
     birdsmouth: birdsmouthOf(ground, piece, standMm),

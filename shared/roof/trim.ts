@@ -121,6 +121,15 @@ const bestFace = (
   return best
 }
 
+/** Whether a polygon lies wholly beside a piece, on one side of it. */
+const liesBeside = (piece: Piece, points: readonly Point2[]): boolean => {
+  const asideMm = (p: Point2) => dot2(piece.left, sub2(p, piece.foot))
+  return (
+    points.every((p) => asideMm(p) > piece.halfMm) ||
+    points.every((p) => asideMm(p) < -piece.halfMm)
+  )
+}
+
 type Hit = { obstacle: Obstacle; nearest: number }
 
 const hits = (piece: Piece, polygon: Labelled<Side>, near: Near, away: Point2): Hit[] => {
@@ -128,6 +137,7 @@ const hits = (piece: Piece, polygon: Labelled<Side>, near: Near, away: Point2): 
   const found: Hit[] = []
   for (const obstacle of near(box)) {
     if (obstacle.piece === piece.id || !boxesMeet(box, obstacle.box)) continue
+    if (liesBeside(piece, obstacle.polygon.points)) continue
     const shared = convexOverlap(polygon.points, obstacle.polygon.points)
     if (shared.length < 3 || polygonSignedArea(shared) < touchMm2) continue
     found.push({ obstacle, nearest: Math.min(...shared.map((p) => dot2(p, away))) })
