@@ -43,8 +43,14 @@ const closedShare = 0.985
 /** Pieces that share more of the plan than this are in each other's way. */
 const overlapMm2 = 1
 
-/** What stands in plan: the piece and the shape of it. */
-type Body = { piece: number; points: readonly Point2[]; sides: Segment[]; box: Box }
+/** What stands in plan: the piece, the shape of it, and of a timber not cut yet the joints it runs to. */
+type Body = {
+  piece: number
+  points: readonly Point2[]
+  sides: Segment[]
+  box: Box
+  runsTo: Obstacle['runsTo']
+}
 
 /** Length of a segment within a convex shape. */
 const lengthWithin = (from: Point2, to: Point2, points: readonly Point2[]): number => {
@@ -107,10 +113,15 @@ const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
   return bornMm < leastBorne * faceMm ? faults + poor : faults
 }
 
-const overlaps = (own: Body, bodies: readonly Body[]): boolean =>
+/** Whether a timber not cut yet runs to a joint of this piece: there the one is cut to the other, and looked at again. */
+const meetsLater = ({ headJoint, footJoint }: Piece, { runsTo = [] }: Body): boolean =>
+  runsTo.some((joint) => joint !== null && (joint === headJoint || joint === footJoint))
+
+const overlaps = (piece: Piece, own: Body, bodies: readonly Body[]): boolean =>
   bodies.some(
     (body) =>
       body.piece !== own.piece &&
+      !meetsLater(piece, body) &&
       boxesMeet(own.box, body.box) &&
       polygonSignedArea(convexOverlap(own.points, body.points)) > overlapMm2,
   )
@@ -120,6 +131,7 @@ export const bodyOf = (obstacle: Obstacle): Body => ({
   points: obstacle.polygon.points,
   sides: planSegments(obstacle.piece, obstacle.polygon),
   box: obstacle.box,
+  runsTo: obstacle.runsTo,
 })
 
 /** Looks at all ends of a group of joints as placed in order: whether each bears and closes on what stood before it. */
@@ -151,7 +163,7 @@ export const jointFaults = (
     )
     // a foot that others bear on bears on nothing itself
     const bearing = job.phase === phases.brokenFoot ? 0 : endFaults(job, own, others)
-    const faults = bearing + (overlaps(own, others) ? open : 0)
+    const faults = bearing + (overlaps(piece, own, others) ? open : 0)
     total += faults
     if (faults >= open) openPieces.push(piece.id)
     if (job.joint !== null) ofJoint.set(job.joint, (ofJoint.get(job.joint) ?? 0) + faults)

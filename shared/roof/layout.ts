@@ -1,6 +1,7 @@
 import type { Ground } from './build-pieces.ts'
+import type { Joint } from './clusters.ts'
 import type { Piece } from './piece.ts'
-import { raftersAt, reachesJoint } from './rafter-pieces.ts'
+import { besideTailMm, raftersAt, reachesJoint } from './rafter-pieces.ts'
 import type { Station } from './rafter-pieces.ts'
 import type { RoofLines } from './roof-lines.ts'
 import type { Roof } from './roof-types.ts'
@@ -19,34 +20,54 @@ const touchesGable = (lines: RoofLines, nodes: number[]): boolean =>
     (line) => line.kind === 'verge' && (nodes.includes(line.from) || nodes.includes(line.to)),
   )
 
+const inGable = (alongMm: number): Ranked => ({ alongMm, joints: [], rank: 0, flush: true })
+
 /** Flush inside the gables at the ends of a slope's plates. */
 const gableStations = (ground: Ground, { slope }: SlopeGround): Ranked[] => {
   const half = ground.roof.sections.rafter.thicknessMm / 2
   const isGable = (edge: number) => at(ground.plates.edges, edge).finish === 'gable'
   return slope.plateRuns.flatMap((run) => [
-    ...(isGable(run.edge - 1) ? [{ alongMm: run.fromMm + half, joints: [], rank: 0 }] : []),
-    ...(isGable(run.edge + 1) ? [{ alongMm: run.toMm - half, joints: [], rank: 0 }] : []),
+    ...(isGable(run.edge - 1) ? [inGable(run.fromMm + half)] : []),
+    ...(isGable(run.edge + 1) ? [inGable(run.toMm - half)] : []),
   ])
+}
+
+/** The nodes of a joint that lie on a slope, but for those at a gable. */
+const ownNodes = (ground: Ground, { face }: SlopeGround, joint: Joint): number[] => {
+  const nodes = joint.nodes.filter((n) => face.nodes.includes(n))
+  return touchesGable(ground.lines, nodes) ? [] : nodes
+}
+
+/**
+ * Where a joint's rafter stands: on its centre, or on one of its nodes where only that is reached;
+ * null where no square line of the slope ends in it.
+ */
+const jointAlongMm = (ground: Ground, own: SlopeGround, index: number): number | null => {
+  const { joints, lines } = ground
+  const joint = at(joints.joints, index)
+  const nodes = ownNodes(ground, own, joint).map((n) => at(lines.nodes, n).point)
+  const places = nodes.length === 0 ? [] : [joint.point, ...nodes]
+  const alongs = places.map((p) => dot2(own.slope.along, sub2(p, own.slope.origin)))
+  const reached = alongs.find((alongMm) => reachesJoint(ground, own, { alongMm, joints: [index] }))
+  return reached ?? null
 }
 
 /** At joints where one of the slope's square lines ends: a ridge's end first, then the higher one. */
 const jointStations = (ground: Ground, own: SlopeGround): Ranked[] => {
   const { lines, joints } = ground
-  const { slope, face } = own
-  const onFace = new Set(face.nodes.map((n) => joints.ofNode[n] ?? null))
+  const onFace = new Set(own.face.nodes.map((n) => joints.ofNode[n] ?? null))
   return joints.joints.flatMap((joint, index): Ranked[] => {
     if (!onFace.has(index)) return []
-    const nodes = joint.nodes.filter((n) => face.nodes.includes(n))
-    if (touchesGable(lines, nodes)) return []
-    const alongMm = dot2(slope.along, sub2(joint.point, slope.origin))
-    const station = { alongMm, joints: [index] }
-    if (!reachesJoint(ground, own, station)) return []
+    const alongMm = jointAlongMm(ground, own, index)
+    if (alongMm === null) return []
+    const nodes = ownNodes(ground, own, joint)
     const isRidgeEnd = joint.ridges.some((ridge) => {
       const { from, to } = at(lines.lines, ridge)
       return nodes.includes(from) || nodes.includes(to)
     })
     const height = Math.max(...nodes.map((n) => at(lines.nodes, n).point.z))
-    return [{ ...station, rank: isRidgeEnd ? 1 : 2 + 1 / (1 + height) }]
+    const rank = isRidgeEnd ? 1 : 2 + 1 / (1 + height)
+    return [{ alongMm, joints: [index], rank }]
   })
 }
 
@@ -54,12 +75,12 @@ const jointStations = (ground: Ground, own: SlopeGround): Ranked[] => {
 const keepApart = (stations: Ranked[], thicknessMm: number): Station[] => {
   const kept: Station[] = []
   const byRank = [...stations].sort((a, b) => a.rank - b.rank || a.alongMm - b.alongMm)
-  for (const { alongMm, joints } of byRank) {
-    const near = kept.findIndex((s) => Math.abs(s.alongMm - alongMm) < thicknessMm - 1e-6)
-    if (near < 0) kept.push({ alongMm, joints })
+  for (const station of byRank) {
+    const near = kept.findIndex((s) => Math.abs(s.alongMm - station.alongMm) < thicknessMm - 1e-6)
+    if (near < 0) kept.push(station)
     else {
       const found = at(kept, near)
-      kept[near] = { ...found, joints: [...found.joints, ...joints] }
+      kept[near] = { ...found, joints: [...found.joints, ...station.joints] }
     }
   }
   return kept.sort((a, b) => a.alongMm - b.alongMm)
@@ -102,25 +123,41 @@ const towards = (roof: Roof, from: number, end: number): number[] => {
   return Array.from({ length: count }, (_, k) => from + sign * roof.maxSpacingMm * (k + 1))
 }
 
-/** All rafters of a slope, in order along its plate line. */
-export const slopeRafters = (ground: Ground, own: SlopeGround): Piece[] => {
+type Laid = { station: Station; pieces: Piece[] }
+
+/** Where to start on a slope without stations: in its middle, else where its square lines are about longest. */
+const startsOf = (ground: Ground, { slope, face }: SlopeGround): number[] => {
+  const [first] = slope.plateRuns
+  const middle = first === undefined ? 0 : (first.fromMm + first.toMm) / 2
+  const alongs = face.nodes
+    .map((n) => dot2(slope.along, sub2(at(ground.lines.nodes, n).point, slope.origin)))
+    .sort((a, b) => a - b)
+  const stretches = alongs.slice(1).map((toMm, k) => ({ fromMm: at(alongs, k), toMm }))
+  stretches.sort((a, b) => b.toMm - b.fromMm - (a.toMm - a.fromMm))
+  return [slope.lengthMm / 2, middle, ...stretches.map((s) => (s.fromMm + s.toMm) / 2)]
+}
+
+/** Rafters at the stations given, between them and outwards from the last ones, in order. */
+const layOut = (ground: Ground, own: SlopeGround, stations: readonly Station[]): Laid[] => {
   const { roof } = ground
-  const { slope } = own
-  const found = keepApart(
-    [...gableStations(ground, own), ...jointStations(ground, own)],
-    roof.sections.rafter.thicknessMm,
-  )
-  const make = (station: Station) => ({ station, pieces: raftersAt(ground, own, station) })
+  const make = (station: Station): Laid => ({ station, pieces: raftersAt(ground, own, station) })
   const free = (alongMm: number) => make({ alongMm, joints: [] })
-  let fixed = found.map(make).filter(({ pieces }) => pieces.length > 0)
+  // a creeper that a hip's tail leaves no room stands beside that tail
+  const creeper = (alongMm: number): Laid => {
+    const asideMm = besideTailMm(own, alongMm)
+    const isNear = asideMm !== null && Math.abs(asideMm - alongMm) < roof.maxSpacingMm / 2
+    return free(isNear ? asideMm : alongMm)
+  }
+  const found = stations.map(make)
+  let fixed = found.filter(({ pieces }) => pieces.length > 0)
   if (fixed.length === 0) {
-    const [first] = slope.plateRuns
-    const middle = first === undefined ? 0 : (first.fromMm + first.toMm) / 2
-    fixed = [slope.lengthMm / 2, middle].map(free).filter(({ pieces }) => pieces.length > 0)
-    fixed = fixed.slice(0, 1)
+    fixed = startsOf(ground, own)
+      .map(free)
+      .filter(({ pieces }) => pieces.length > 0)
+      .slice(0, 1)
   }
   if (fixed.length === 0) return []
-  const made = towards(roof, at(fixed, 0).station.alongMm, own.fromMm).reverse().map(free)
+  const made = towards(roof, at(fixed, 0).station.alongMm, own.fromMm).reverse().map(creeper)
   fixed.forEach((entry, k) => {
     made.push(entry)
     const next = fixed[k + 1]
@@ -129,6 +166,27 @@ export const slopeRafters = (ground: Ground, own: SlopeGround): Piece[] => {
     const backwards = countsBackwards(ground, own, (from + to) / 2)
     made.push(...between(roof, from, to, backwards).map(free))
   })
-  made.push(...towards(roof, at(fixed, -1).station.alongMm, own.toMm).map(free))
-  return made.flatMap(({ pieces }) => pieces)
+  made.push(...towards(roof, at(fixed, -1).station.alongMm, own.toMm).map(creeper))
+  return [...made, ...found.filter(({ pieces }) => pieces.length === 0)]
+}
+
+/** Beside the tails of hips that leave rafters no room where they fall, where one is worth cutting. */
+const besideTails = (ground: Ground, own: SlopeGround, laid: readonly Laid[]): Ranked[] =>
+  laid.flatMap(({ station, pieces }): Ranked[] => {
+    const alongMm = pieces.length > 0 ? null : besideTailMm(own, station.alongMm)
+    if (alongMm === null) return []
+    const moved = { alongMm, joints: station.joints }
+    return raftersAt(ground, own, moved).length > 0 ? [{ ...moved, rank: 3 }] : []
+  })
+
+/** All rafters of a slope, in order along its plate line. */
+export const slopeRafters = (ground: Ground, own: SlopeGround): Piece[] => {
+  const fixed = [...gableStations(ground, own), ...jointStations(ground, own)]
+  const { thicknessMm } = ground.roof.sections.rafter
+  const laid = layOut(ground, own, keepApart(fixed, thicknessMm))
+  const moved = besideTails(ground, own, laid)
+  if (moved.length === 0) return laid.flatMap(({ pieces }) => pieces)
+  const standing = fixed.filter((station) => raftersAt(ground, own, station).length > 0)
+  const stations = keepApart([...standing, ...moved], thicknessMm)
+  return layOut(ground, own, stations).flatMap(({ pieces }) => pieces)
 }

@@ -5,15 +5,21 @@ import type { Piece } from './piece.ts'
 import { nearestEdge, rafterFoot } from './plate-foot.ts'
 import type { RafterFoot } from './plate-foot.ts'
 import type { LineKind, MemberRole } from './roof-types.ts'
-import type { SlopeGround } from './slope-ground.ts'
+import type { HipCorner, SlopeGround } from './slope-ground.ts'
 import { at, insideMm, slopePoint } from './slopes.ts'
 import type { PlateEdge, Slope } from './slopes.ts'
 import type { SquareSpan } from './square-spans.ts'
 import { squareLineSpans } from './square-spans.ts'
 import { dot2, sub2 } from './vector.ts'
 
-/** Where a rafter stands on a slope's plate line, mm from the slope's first corner, and the joints near its line. */
-export type Station = { alongMm: number; joints: readonly number[] }
+/**
+ * Where a rafter stands on a slope's plate line, mm from the slope's first corner, and the joints near
+ * its line; `flush` where it stands inside a gable.
+ */
+export type Station = { alongMm: number; joints: readonly number[]; flush?: true }
+
+/** A rafter set just clear of a hip is clear of it, whatever the last digit says. */
+const roundingMm = 1e-6
 
 type FootPlace =
   | RafterFoot
@@ -110,9 +116,31 @@ const roleOf = (
   return meets === 'hip' ? 'cripple-creeper' : 'valley-creeper'
 }
 
-/** Whether a rafter `alongMm` along a slope's plate line stands clear of the hips at the corners there. */
-const clearOfHips = ({ hips }: SlopeGround, alongMm: number): boolean =>
-  hips.every((hip) => Math.abs(hip.alongMm - alongMm) >= hip.gapMm)
+/** The hip whose corner leaves a rafter no room on the plate `alongMm` along a slope's plate line. */
+const hipInTheWay = ({ hips }: SlopeGround, alongMm: number): HipCorner | undefined =>
+  hips.find((hip) => Math.abs(hip.alongMm - alongMm) < hip.gapMm - roundingMm)
+
+/** Where a rafter stands instead that only a hip's tail is in the way of: beside that tail; null elsewhere. */
+export const besideTailMm = (own: SlopeGround, alongMm: number): number | null => {
+  const hip = hipInTheWay(own, alongMm)
+  if (hip === undefined || hip.plateSide * (alongMm - hip.alongMm) < hip.ownMm) return null
+  return hip.alongMm + hip.plateSide * hip.gapMm
+}
+
+/**
+ * Whether hips and valleys leave a rafter room: not where one that runs beside it takes half of its
+ * length or more, so that it would have to be ripped.
+ */
+const hasRoom = (ground: Ground, own: SlopeGround, alongMm: number, span: SquareSpan): boolean => {
+  const { rafter, hip, valley } = ground.roof.sections
+  const asideMm = (rafter.thicknessMm + Math.max(hip.thicknessMm, valley.thicknessMm)) / 2
+  const half = (span.high - span.low) / 2
+  return [-asideMm, asideMm].every((mm) =>
+    squareLineSpans(ground.lines, own.slope, own.face, alongMm + mm).some(
+      ({ low, high }) => Math.min(high, span.high) - Math.max(low, span.low) > half,
+    ),
+  )
+}
 
 const rafterPiece = (
   ground: Ground,
@@ -124,7 +152,8 @@ const rafterPiece = (
   const { slope } = own
   const foot = footPlace(ground, own, station, span)
   if (foot === null) return null
-  if (foot.on === 'plate' && !clearOfHips(own, station.alongMm)) return null
+  if (foot.on === 'plate' && hipInTheWay(own, station.alongMm) !== undefined) return null
+  if (station.flush !== true && !hasRoom(ground, own, station.alongMm, span)) return null
   const footMm = foot.on === 'plate' ? 0 : foot.inMm
   if ((span.high - footMm) * Math.hypot(1, slope.tan) < settings.minCreeperMm) return null
   const headLine = span.highBorder.line

@@ -20,8 +20,14 @@ export type ValleySide = {
   plan: Point2[]
 }
 
-/** A hip that borders a slope and starts at a plate corner: how near to that corner a rafter may stand. */
-type HipCorner = { alongMm: number; gapMm: number }
+/**
+ * A hip that borders a slope and starts at a plate corner: how near to that corner a rafter may stand,
+ * how near to it the hip itself is all that stands there, and on which side of it the plate is.
+ */
+export type HipCorner = { alongMm: number; gapMm: number; ownMm: number; plateSide: 1 | -1 }
+
+/** A hip that leans back further than this, per mm, leaves the corner that it starts from to a rafter. */
+const leavesCorner = 1 / 6
 
 /** What a slope's rafters have to mind: looked up once a slope. */
 export type SlopeGround = {
@@ -48,14 +54,14 @@ const hipCorner = (ground: Ground, slope: Slope, line: NodeLine): HipCorner => {
   const starts = slope.plateRuns.find((r) => Math.abs(r.fromMm - alongMm) < 1)
   const ends = slope.plateRuns.find((r) => Math.abs(r.toMm - alongMm) < 1)
   const sine = dot2(slope.inward, run)
-  const leansBack = Math.max(0, dot2(slope.along, run) * (starts === undefined ? 1 : -1))
+  const plateSide = starts === undefined ? -1 : 1
+  const leansBack = Math.max(0, -plateSide * dot2(slope.along, run))
   const edge = (starts ?? ends ?? at(slope.plateRuns, 0)).edge
   const { overhangMm } = at(ground.plates.edges, edge)
-  const gapMm =
-    sections.rafter.thicknessMm / 2 +
-    sections.hip.thicknessMm / 2 / sine +
-    (overhangMm * leansBack) / sine
-  return { alongMm, gapMm }
+  const bareMm = sections.rafter.thicknessMm / 2 + sections.hip.thicknessMm / 2 / sine
+  const gapMm = bareMm + (overhangMm * leansBack) / sine
+  const ownMm = leansBack / sine > leavesCorner ? 0 : bareMm
+  return { alongMm, gapMm, ownMm, plateSide }
 }
 
 const valleySide = (

@@ -26,11 +26,13 @@ const seeds = (length: number) => Array.from({ length }, (_, i) => i + 1)
 
 describe('where pieces of a hard plan do not go together, a head that does not close is named', () => {
   let agreed = 0
-  test.each(proof ? seeds(60) : [12, 17, 55])('hard plan %i', (seed) => {
+  test.each(proof ? seeds(60) : [12, 26, 45])('hard plan %i', (seed) => {
     const roof = hardPlan(seed)
     const spec = frameRoof(roof)
     const marks = openMarks(spec)
-    const misfits = dryFit(kit, roof, spec).filter((c) => ['joint', 'overlap'].includes(c.check))
+    const all = dryFit(kit, roof, spec)
+    expect(reportLines(all.filter((c) => c.check === 'layout'))).toEqual([])
+    const misfits = all.filter((c) => ['joint', 'overlap'].includes(c.check))
     if (misfits.length > 0) expect(marks, reportLines(misfits).join('; ')).not.toEqual([])
     if (misfits.some((c) => c.marks.some((mark) => marks.includes(mark)))) agreed += 1
   })
@@ -51,11 +53,9 @@ test('no reference roof, further roof or everyday random plan is said to have an
 })
 
 // a broken hip of 544 and one of 293 mm: both of its ends are made in one group of joints
-test.each([26, 99])(
-  'of several ways to make a joint the one that closed is cut: house %i',
-  (seed) => {
-    const { roof, spec } = skewedHouse(seed)
-    expect(reportLines(dryFit(kit, roof, spec))).toEqual([])
-    expect(openMarks(spec)).toEqual([])
-  },
-)
+// 9: a rafter beside a broken hip that would be ripped for all of its length; 161: a slope without stations
+test.each([9, 26, 99, 161])('houses that stood open or bare once go together: house %i', (seed) => {
+  const { roof, spec } = skewedHouse(seed)
+  expect(reportLines(dryFit(kit, roof, spec))).toEqual([])
+  expect(openMarks(spec)).toEqual([])
+})
