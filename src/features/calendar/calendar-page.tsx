@@ -1,104 +1,72 @@
 import { useQuery } from '@tanstack/react-query'
-import { ChevronLeft, ChevronRight, Plus } from 'lucide-react'
-import type { ReactNode } from 'react'
+import { Plus } from 'lucide-react'
+import { lazy, type ReactNode, Suspense } from 'react'
 import { Link, Outlet, useNavigate, useSearchParams } from 'react-router-dom'
+import type { Calendar } from '../../../shared/bookings/calendar-schemas.ts'
 import { useMay } from '../../lib/session.ts'
-import { Button, buttonClass } from '../../ui/button.tsx'
-import { Dialog } from '../../ui/dialog.tsx'
+import { buttonClass } from '../../ui/button.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
-import { Segmented } from '../../ui/segmented.tsx'
 import { Skeleton } from '../../ui/skeleton.tsx'
 import { ErrorState } from '../../ui/states.tsx'
-import {
-  type CalendarView,
-  searchWith,
-  stepOf,
-  titleOf,
-  useCalendarAddress,
-} from './calendar-address.ts'
+import { BookingMovesProvider } from './booking-moves.tsx'
+import { searchWith, useCalendarAddress } from './calendar-address.ts'
 import { CalendarGrid } from './calendar-grid.tsx'
 import { calendarQueries } from './calendar-queries.ts'
-import { ClashAnswer } from './clash-answer.tsx'
+import { CalendarToolbar } from './calendar-toolbar.tsx'
+import { CrewList } from './crew-list.tsx'
 import { DayList } from './day-list.tsx'
-import { UnbookedList } from './unbooked-list.tsx'
-import { useMoveBooking } from './use-move-booking.ts'
+import { UnbookedSide } from './unbooked-side.tsx'
+import { useMoveDay } from './use-move-day.ts'
 import { useNarrow } from './use-narrow.ts'
+import { useWall } from './use-wall.ts'
 
-const views: readonly { value: CalendarView; label: string }[] = [
-  { value: 'month', label: 'Month' },
-  { value: 'week', label: 'Week' },
-]
+const CrewWeeks = lazy(async () => ({ default: (await import('./crew-weeks.tsx')).CrewWeeks }))
 
-type Address = ReturnType<typeof useCalendarAddress>
+type Shown = {
+  calendar: Calendar
+  address: ReturnType<typeof useCalendarAddress>
+  mayEdit: boolean
+  isNarrow: boolean
+}
 
-function Toolbar({ address }: { address: Address }) {
-  const { view, on, today, go } = address
-  const step = (direction: -1 | 1) => go({ on: stepOf(view, on, direction) })
+/** The calendar as a month, a week or crew weeks; as a list on a phone. */
+function CalendarBody({ calendar, address, mayEdit, isNarrow }: Shown) {
+  const navigate = useNavigate()
+  const [search] = useSearchParams()
+  const { view, on, span, weeks, isWall } = address
+  const move = useMoveDay(calendar)
+  const open = (id: string) => void navigate(`/calendar/bookings/${id}${searchWith(search, {})}`)
+  const bookOn = (job: string, day: string) =>
+    void navigate(`/calendar/book${searchWith(search, { job, day, view, on })}`)
+  if (view === 'crews')
+    return isNarrow ? (
+      <CrewList calendar={calendar} mayEdit={mayEdit} />
+    ) : (
+      <Suspense fallback={<Skeleton className="h-96" />}>
+        <CrewWeeks calendar={calendar} weeks={weeks} mayEdit={mayEdit} isWall={isWall} />
+      </Suspense>
+    )
+  if (isNarrow) return <DayList calendar={calendar} view={view} mayEdit={mayEdit} {...span} />
   return (
-    <div className="mb-3 flex flex-wrap items-center gap-2">
-      <Button
-        kind="plain"
-        className="w-11 px-0!"
-        aria-label={`The ${view} before`}
-        onClick={() => step(-1)}
-      >
-        <ChevronLeft size={20} aria-hidden />
-      </Button>
-      <Button kind="plain" onClick={() => go({ on: today })}>
-        Today
-      </Button>
-      <Button
-        kind="plain"
-        className="w-11 px-0!"
-        aria-label={`The ${view} after`}
-        onClick={() => step(1)}
-      >
-        <ChevronRight size={20} aria-hidden />
-      </Button>
-      <Segmented
-        label="Show"
-        options={views}
-        value={view}
-        onChange={(next) => go({ view: next })}
-      />
-      <h2 aria-live="polite" className="w-full text-xl font-extrabold sm:ml-2 sm:w-auto">
-        {titleOf(view, on)}
-      </h2>
-    </div>
+    <CalendarGrid
+      calendar={calendar}
+      view={view}
+      on={on}
+      mayEdit={mayEdit}
+      onOpen={open}
+      onMove={move}
+      onDropJob={bookOn}
+    />
   )
 }
 
-function Unbooked({ isNarrow }: { isNarrow: boolean }) {
-  const { data, error, refetch } = useQuery(calendarQueries.unbooked())
-  const jobs = data?.jobs ?? []
-  const body = error ? (
-    <ErrorState message={error.message} onRetry={() => void refetch()} />
-  ) : !data ? (
-    <Skeleton className="h-24" />
-  ) : jobs.length === 0 ? (
-    <p className="text-ink-soft">None waiting. A job comes here once its price is accepted.</p>
-  ) : (
-    <UnbookedList jobs={jobs} crews={data.crews} mayDrag={!isNarrow} />
-  )
-  if (isNarrow)
-    return (
-      <details className="mb-4 rounded-md border border-rule bg-sheet px-3">
-        <summary className="min-h-11 content-center font-semibold">
-          Won, not booked ({jobs.length})
-        </summary>
-        <div className="pb-3">{body}</div>
-      </details>
-    )
+function BookLink() {
+  const [search] = useSearchParams()
   return (
-    <section aria-labelledby="unbooked" className="xl:sticky xl:top-4 xl:self-start">
-      <h2 id="unbooked" className="text-lg font-extrabold">
-        Won, not booked
-      </h2>
-      {jobs.length > 0 ? (
-        <p className="mb-2 text-sm text-ink-soft">Drag one onto its first day, or press Book.</p>
-      ) : null}
-      {body}
-    </section>
+    <Link className={buttonClass()} to={`/calendar/book${searchWith(search, {})}`}>
+      <Plus size={20} aria-hidden />
+      Book a crew
+    </Link>
   )
 }
 
@@ -113,69 +81,50 @@ type Props = {
 export function CalendarPage({ waiting, above }: Props) {
   const isNarrow = useNarrow()
   const mayEdit = useMay('booking:write')
-  const navigate = useNavigate()
-  const [search] = useSearchParams()
   const address = useCalendarAddress(isNarrow)
-  const { view, on, span } = address
+  const { view, isWall, span, go } = address
   const { data: calendar, error, refetch } = useQuery(calendarQueries.span(span))
-  const mover = useMoveBooking()
-  const open = (id: string) => void navigate(`/calendar/bookings/${id}${searchWith(search, {})}`)
-  const bookOn = (job: string, day: string) =>
-    void navigate(`/calendar/book${searchWith(search, { job, day, view, on })}`)
+  const setWall = useWall(isWall, (on) => go({ wall: on }))
+  const hasSide = mayEdit && !isNarrow && view !== 'crews'
   return (
-    <>
+    <BookingMovesProvider crews={calendar?.crews ?? []}>
       <PageHeader
         title="Calendar"
         actions={
           <>
             {waiting}
-            {mayEdit ? (
-              <Link className={buttonClass()} to={`/calendar/book${searchWith(search, {})}`}>
-                <Plus size={20} aria-hidden />
-                Book a crew
-              </Link>
-            ) : null}
+            {mayEdit ? <BookLink /> : null}
           </>
         }
       />
       {above}
-      <div
-        className={mayEdit && !isNarrow ? 'gap-5 xl:grid xl:grid-cols-[minmax(0,1fr)_17rem]' : ''}
-      >
-        <div className="min-w-0">
-          <Toolbar address={address} />
-          {mayEdit && isNarrow ? <Unbooked isNarrow /> : null}
+      <div className={hasSide ? 'gap-5 xl:grid xl:grid-cols-[minmax(0,1fr)_17rem]' : ''}>
+        <div
+          className={isWall ? 'fixed inset-0 z-20 overflow-auto bg-paper p-3 text-lg' : 'min-w-0'}
+        >
+          <CalendarToolbar
+            address={address}
+            mayEdit={mayEdit}
+            isNarrow={isNarrow}
+            onWall={setWall}
+          />
+          {mayEdit && isNarrow ? <UnbookedSide isNarrow /> : null}
           {error ? (
             <ErrorState message={error.message} onRetry={() => void refetch()} />
           ) : !calendar ? (
             <Skeleton className="h-96" />
-          ) : isNarrow ? (
-            <DayList calendar={calendar} view={view} mayEdit={mayEdit} {...span} />
           ) : (
-            <CalendarGrid
+            <CalendarBody
               calendar={calendar}
-              view={view}
-              on={on}
+              address={address}
               mayEdit={mayEdit}
-              onOpen={open}
-              onMove={mover.move}
-              onDropJob={bookOn}
+              isNarrow={isNarrow}
             />
           )}
         </div>
-        {mayEdit && !isNarrow ? <Unbooked isNarrow={false} /> : null}
+        {hasSide ? <UnbookedSide isNarrow={false} /> : null}
       </div>
-      <Dialog open={mover.conflict !== null} onClose={mover.giveUp} title="This day is not free">
-        {mover.conflict ? (
-          <ClashAnswer
-            conflict={mover.conflict}
-            busy={mover.isPending}
-            onAnswer={mover.answer}
-            onBack={mover.giveUp}
-          />
-        ) : null}
-      </Dialog>
       <Outlet />
-    </>
+    </BookingMovesProvider>
   )
 }

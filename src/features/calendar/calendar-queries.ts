@@ -15,6 +15,7 @@ import {
   calendarSchema,
   unbookedJobsSchema,
 } from '../../../shared/bookings/calendar-schemas.ts'
+import { landingsSchema } from '../../../shared/clashes/clash-schemas.ts'
 import { movedDays } from '../../../shared/bookings/move-days.ts'
 import type { Day } from '../../../shared/calendar/days.ts'
 import { api, ApiFailure } from '../../lib/api-client.ts'
@@ -38,6 +39,19 @@ export const calendarQueries = {
         api.get(
           `/api/calendar/unbooked${jobId ? `?job=${encodeURIComponent(jobId)}` : ''}`,
           unbookedJobsSchema,
+          { signal },
+        ),
+    }),
+  /** Where a booking, taken hold of at `day`, or a job not booked could go, and what stands in the way. */
+  landings: (what: { bookingId: string; day: Day } | { jobId: string }, { from, to }: Span) =>
+    queryOptions({
+      queryKey: [...calendarQueries.all(), 'landings', what, from, to] as const,
+      queryFn: ({ signal }) =>
+        api.get(
+          'jobId' in what
+            ? `/api/jobs/${encodeURIComponent(what.jobId)}/landings?from=${from}&to=${to}`
+            : `/api/bookings/${encodeURIComponent(what.bookingId)}/landings?from=${from}&to=${to}&day=${what.day}`,
+          landingsSchema,
           { signal },
         ),
     }),

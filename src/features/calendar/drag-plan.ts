@@ -1,10 +1,13 @@
-import type { Calendar, UnbookedJob } from '../../../shared/bookings/calendar-schemas.ts'
+import type {
+  Calendar,
+  CalendarBooking,
+  UnbookedJob,
+} from '../../../shared/bookings/calendar-schemas.ts'
 import type { Clash, Landings } from '../../../shared/clashes/clash-schemas.ts'
 import { heldMove, type Place, pulledDays } from '../../../shared/bookings/booking-places.ts'
 import { movedDays } from '../../../shared/bookings/move-days.ts'
 import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import { whyNotWorked, workedDaysFrom } from '../../../shared/calendar/working-days.ts'
-import type { CalendarBooking } from '../../../shared/bookings/calendar-schemas.ts'
 import { nameOf } from './booking-steps.ts'
 import type { Bar } from './crew-weeks-layout.ts'
 
@@ -24,6 +27,8 @@ export type Landing = {
   clashes: Pick<Clash, 'weight' | 'text'>[]
   /** It would stay as it is. */
   isIdle: boolean
+  /** A drop here does nothing. */
+  cannot?: boolean
   move: { from: Day; to: Day } | null
 }
 
@@ -73,8 +78,9 @@ export function landingOf(
   if (drag.kind === 'job') {
     const days = daysOfJob(calendar, drag.job, cell)
     const own = { bookingId: null, crewId: cell.crewId, days, before: [] }
-    const clashes = knownAt(known, cell) ?? clashesHere(calendar, own)
-    return { crewId: cell.crewId, days, clashes, isIdle: false, move: null }
+    const landing = { crewId: cell.crewId, days, isIdle: false, move: null, clashes: [] }
+    if (cell.day < calendar.today) return stays(landing, `${formatDay(cell.day)} has gone by.`)
+    return { ...landing, clashes: knownAt(known, cell) ?? clashesHere(calendar, own) }
   }
   const { booking, stretch } = drag.bar
   const place = placeOf(booking)
@@ -86,9 +92,22 @@ export function landingOf(
   if (!move) return null
   const days = movedDays(calendar, place.days, place.worked, move)
   const landing = landed(calendar, booking, { crewId: cell.crewId, days, move })
+  if (landing.isIdle) return landing
+  if (cell.crewId !== booking.crew.id && place.worked.size > 0)
+    return stays(
+      landing,
+      `${booking.crew.name} has worked days of it: only the days ahead move, and to no other crew.`,
+    )
+  if (move.to < calendar.today) return stays(landing, `${formatDay(move.to)} has gone by.`)
   const clashes = knownAt(known, { crewId: cell.crewId, day: move.to })
-  return clashes && !landing.isIdle ? { ...landing, clashes } : landing
+  return clashes ? { ...landing, clashes } : landing
 }
+
+const stays = (landing: Landing, text: string): Landing => ({
+  ...landing,
+  cannot: true,
+  clashes: [{ weight: 'clash', text }],
+})
 
 function landed(
   calendar: Calendar,

@@ -35,10 +35,11 @@ export function settledStep(
   if (direction === 'back') return step
   const parts = step.parts.map((part): StepPart => {
     const answer = bookings.find((booking) => booking.id === part.id)
-    const { create: _made, ...rest } = part
-    if (!answer) return rest
+    const { id, name, version, before, after } = part
+    const made = { id, name, version, before }
+    if (!answer) return { ...made, after }
     const { clashReason, allDays: days } = answer
-    return { ...rest, after: { ...part.after, clashReason, days } }
+    return { ...made, after: { ...after, clashReason, days } }
   })
   return { ...step, parts }
 }

@@ -1,0 +1,134 @@
+import { useState } from 'react'
+import type {
+  Calendar,
+  CalendarBooking,
+  CalendarCrew,
+} from '../../../shared/bookings/calendar-schemas.ts'
+import { type Day, formatDay } from '../../../shared/calendar/days.ts'
+import { isWorked, whyNotWorked } from '../../../shared/calendar/working-days.ts'
+import { formatHours, formatLoad } from '../../../shared/labour/format-hours.ts'
+import { CrewPennant } from '../../drawings/crew-pennant.tsx'
+import { PopPanel } from '../../ui/pop-panel.tsx'
+import { EmptyState } from '../../ui/states.tsx'
+import { BookingActions } from './booking-actions.tsx'
+import { cellClass, StateMark } from './booking-cell.tsx'
+import { DayFlagLines } from './booking-flags.tsx'
+import { daysFromTo } from './calendar-with-step.ts'
+import { crewRowOf, loadOf } from './crew-weeks-layout.ts'
+
+type Opened = { bookingId: string; stretch: readonly Day[]; anchor: HTMLElement }
+type Open = (booking: CalendarBooking, stretch: readonly Day[], anchor: HTMLElement) => void
+
+function CrewDays(props: {
+  calendar: Calendar
+  crew: CalendarCrew
+  mayEdit: boolean
+  onOpen: Open
+}) {
+  const { calendar, crew, mayEdit, onOpen } = props
+  const days = daysFromTo(calendar)
+  const { bars } = crewRowOf(calendar, crew.id, days)
+  const load = loadOf(calendar, crew.id)
+  const shown = days
+    .map((day) => ({ day, there: bars.filter((bar) => bar.shown.includes(day)) }))
+    .filter(
+      ({ day, there }) => there.length > 0 || (isWorked(calendar, day) && day >= calendar.today),
+    )
+  return (
+    <section aria-label={crew.name}>
+      <h3 className="mb-2 flex items-center gap-2 text-lg font-extrabold">
+        <CrewPennant {...crew} />
+        {crew.name}
+      </h3>
+      <ol className="space-y-2">
+        {shown.map(({ day, there }) => {
+          const { plannedMinutes, availableMinutes } = load(day)
+          const isOver = plannedMinutes > availableMinutes
+          const closed = whyNotWorked(calendar, day)
+          return (
+            <li key={day} className="border-t border-rule pt-2">
+              <p className="flex items-baseline justify-between gap-3">
+                <span
+                  className={day === calendar.today ? 'font-extrabold text-clay' : 'font-semibold'}
+                >
+                  {formatDay(day)}
+                  {day === calendar.today ? ' · today' : ''}
+                  {closed ? <span className="font-normal text-ink-soft"> {closed}</span> : null}
+                </span>
+                <span
+                  className={`text-sm ${isOver ? 'font-extrabold text-stop' : 'text-ink-soft'}`}
+                >
+                  {there.length > 0
+                    ? formatLoad(plannedMinutes, availableMinutes)
+                    : availableMinutes > 0
+                      ? `${formatHours(availableMinutes)} free`
+                      : 'nobody there'}
+                </span>
+              </p>
+              {there.map((bar) => (
+                <button
+                  key={bar.key}
+                  type="button"
+                  onClick={(event) => onOpen(bar.booking, bar.stretch, event.currentTarget)}
+                  className={`${cellClass(bar.booking.state)} mt-1 min-h-11 w-full p-2`}
+                >
+                  <span className="flex items-start justify-between gap-2">
+                    <span className="min-w-0 font-semibold [overflow-wrap:anywhere]">
+                      {bar.booking.job.title}
+                    </span>
+                    <span className="shrink-0 font-semibold text-chalk underline">
+                      {mayEdit ? 'Move' : 'Open'}
+                    </span>
+                  </span>
+                  <span className="text-sm">
+                    <StateMark state={bar.booking.state} />
+                    <DayFlagLines
+                      flags={bar.booking.days.find((one) => one.day === day)?.flags ?? []}
+                    />
+                  </span>
+                </button>
+              ))}
+            </li>
+          )
+        })}
+      </ol>
+    </section>
+  )
+}
+
+/** Crew weeks on a phone: crew by crew, day by day; a press on a booking says what can be done with it. */
+export function CrewList({ calendar, mayEdit }: { calendar: Calendar; mayEdit: boolean }) {
+  const [opened, setOpened] = useState<Opened | null>(null)
+  const booking = calendar.bookings.find((one) => one.id === opened?.bookingId)
+  const close = () => setOpened(null)
+  if (calendar.crews.length === 0)
+    return <EmptyState title="Nothing is booked here">Look at other weeks.</EmptyState>
+  return (
+    <div className="space-y-6">
+      {calendar.crews.map((crew) => (
+        <CrewDays
+          key={crew.id}
+          calendar={calendar}
+          crew={crew}
+          mayEdit={mayEdit}
+          onOpen={(one, stretch, anchor) => setOpened({ bookingId: one.id, stretch, anchor })}
+        />
+      ))}
+      <PopPanel
+        anchor={booking && opened ? opened.anchor : null}
+        title={booking ? `${booking.job.number} ${booking.job.title}` : ''}
+        onClose={close}
+      >
+        {booking && opened ? (
+          <BookingActions
+            calendar={calendar}
+            booking={booking}
+            stretch={opened.stretch}
+            mayEdit={mayEdit}
+            onDone={close}
+          />
+        ) : null}
+      </PopPanel>
+    </div>
+  )
+}
