@@ -40,8 +40,8 @@ const weekHoursSchema = z
   .array(
     z
       .number('Give the hours as a number, 0 for none.')
-      .min(0, "Give hours from 0 to 14.")
-      .max(14, "Give hours from 0 to 14."),
+      .min(0, 'Give hours from 0 to 14.')
+      .max(14, 'Give hours from 0 to 14.'),
   )
   .length(7)
   .nullable()

@@ -95,6 +95,12 @@ export const shellRoutes: RouteObject[] = [
     }),
   },
   {
+    path: 'people/crews/:crewId',
+    lazy: async () => ({
+      Component: (await import('../features/people/people-page.tsx')).PeoplePage,
+    }),
+  },
+  {
     path: 'firm',
     lazy: async () => ({ Component: (await import('../features/firm/firm-page.tsx')).FirmPage }),
   },
@@ -132,6 +138,24 @@ export const shellRoutes: RouteObject[] = [
     path: 'today/plates/:bookingDayId',
     lazy: async () => ({
       Component: (await import('../features/today/plate-check-page.tsx')).PlateCheckPage,
+    }),
+  },
+  {
+    path: 'jobs/:jobId/hours',
+    lazy: async () => ({
+      Component: (await import('../features/day-logs/job-hours-page.tsx')).JobHoursPage,
+    }),
+  },
+  {
+    path: 'jobs/:jobId/lost-time',
+    lazy: async () => ({
+      Component: (await import('../features/day-logs/lost-time-page.tsx')).LostTimePage,
+    }),
+  },
+  {
+    path: 'hours',
+    lazy: async () => ({
+      Component: (await import('../features/day-logs/week-hours-page.tsx')).WeekHoursPage,
     }),
   },
   {

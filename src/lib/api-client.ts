@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import { type ApiError, apiErrorSchema } from '../../shared/http/api-error.ts'
+import { photoField, uploadHeader } from '../../shared/http/upload.ts'
 
 /** What the server answered when it was not success; `issues` go to their fields. */
 export class ApiFailure extends Error {
@@ -27,6 +28,19 @@ const unreachable: ApiError = {
 
 type Options = { signal?: AbortSignal }
 
+/** A picture travels as a form, everything else as JSON. */
+function bodyOf(body: unknown): { headers: Record<string, string>; body?: BodyInit } {
+  if (body === undefined) return { headers: {} }
+  if (body instanceof FormData) return { headers: { [uploadHeader]: '1' }, body }
+  return { headers: { 'Content-Type': 'application/json' }, body: JSON.stringify(body) }
+}
+
+function photoForm(photo: File): FormData {
+  const form = new FormData()
+  form.set(photoField, photo)
+  return form
+}
+
 async function call<Schema extends z.ZodType>(
   method: string,
   path: string,
@@ -39,8 +53,7 @@ async function call<Schema extends z.ZodType>(
     response = await fetch(path, {
       method,
       credentials: 'same-origin',
-      headers: body === undefined ? {} : { 'Content-Type': 'application/json' },
-      ...(body === undefined ? {} : { body: JSON.stringify(body) }),
+      ...bodyOf(body),
       ...(options.signal ? { signal: options.signal } : {}),
     })
   } catch (cause) {
@@ -60,6 +73,8 @@ export const api = {
     call('POST', path, schema, body, {}),
   put: <S extends z.ZodType>(path: string, schema: S, body: unknown = {}) =>
     call('PUT', path, schema, body, {}),
+  putPhoto: <S extends z.ZodType>(path: string, schema: S, photo: File) =>
+    call('PUT', path, schema, photoForm(photo), {}),
   patch: <S extends z.ZodType>(path: string, schema: S, body: unknown = {}) =>
     call('PATCH', path, schema, body, {}),
   delete: <S extends z.ZodType>(path: string, schema: S) =>

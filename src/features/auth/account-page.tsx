@@ -12,6 +12,7 @@ import { PageHeader } from '../../ui/page-header.tsx'
 import { Segmented } from '../../ui/segmented.tsx'
 import { useToast } from '../../ui/toast.tsx'
 import { useChangePassword, useSignOut } from './auth-queries.ts'
+import { OwnTickets } from './own-tickets.tsx'
 
 const looks = [
   { value: '', label: 'As the device' },
@@ -85,7 +86,8 @@ export function AccountPage() {
           </Button>
         }
       />
-      <div className="grid gap-4 lg:grid-cols-2">
+      <div className="grid items-start gap-4 lg:grid-cols-2">
+        <OwnTickets />
         <Card>
           <h2 className="mb-3 text-lg font-extrabold">Change password</h2>
           <PasswordForm />

@@ -1,4 +1,4 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query'
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
 import type { z } from 'zod'
 import {
   type changePasswordSchema,
@@ -6,8 +6,15 @@ import {
   type signInSchema,
   type useResetSchema,
 } from '../../../shared/auth/auth-schemas.ts'
+import { ticketListSchema } from '../../../shared/people/ticket-schemas.ts'
 import { api } from '../../lib/api-client.ts'
 import { sessionQuery } from '../../lib/session.ts'
+
+/** Under the topic of people, so that it follows what the office changes. */
+export const ownTicketsQuery = queryOptions({
+  queryKey: ['people', 'own-tickets'] as const,
+  queryFn: ({ signal }) => api.get('/api/account/tickets', ticketListSchema, { signal }),
+})
 
 /** After any change of who is signed in, nothing of the earlier person may stay on screen. */
 function useFreshSession() {

@@ -1,14 +1,15 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
 import type { z } from 'zod'
 import { doneSchema } from '../../../shared/auth/auth-schemas.ts'
-import type { addLeaveSchema } from '../../../shared/people/leave-schemas.ts'
 import {
   type createPersonSchema,
   type crewInputSchema,
   crewListSchema,
+  crewPeopleSchema,
   type editPersonSchema,
-  type moveCrewSchema,
   peopleListSchema,
+  personDetailSchema,
+  type personHoursSchema,
   personSchema,
 } from '../../../shared/people/people-schemas.ts'
 import { api } from '../../lib/api-client.ts'
@@ -20,14 +21,24 @@ export const peopleQueries = {
       queryKey: [...peopleQueries.all(), 'list'] as const,
       queryFn: ({ signal }) => api.get('/api/people', peopleListSchema, { signal }),
     }),
+  person: (id: string) =>
+    queryOptions({
+      queryKey: [...peopleQueries.all(), 'person', id] as const,
+      queryFn: ({ signal }) => api.get(`/api/people/${id}`, personDetailSchema, { signal }),
+    }),
   crews: () =>
     queryOptions({
       queryKey: [...peopleQueries.all(), 'crews'] as const,
       queryFn: ({ signal }) => api.get('/api/crews', crewListSchema, { signal }),
     }),
+  crewPeople: (id: string) =>
+    queryOptions({
+      queryKey: [...peopleQueries.all(), 'crew', id] as const,
+      queryFn: ({ signal }) => api.get(`/api/crews/${id}/people`, crewPeopleSchema, { signal }),
+    }),
 }
 
-function usePeopleMutation<Input>(mutationFn: (input: Input) => Promise<unknown>) {
+export function usePeopleMutation<Input, Output>(mutationFn: (input: Input) => Promise<Output>) {
   const client = useQueryClient()
   return useMutation({
     mutationFn,
@@ -45,23 +56,13 @@ export const useEditPerson = () =>
     api.patch(`/api/people/${id}`, personSchema, input),
   )
 
+export const useSetHours = () =>
+  usePeopleMutation(({ id, ...input }: z.input<typeof personHoursSchema> & { id: string }) =>
+    api.put(`/api/people/${id}/hours`, personDetailSchema, input),
+  )
+
 export const useInviteAgain = () =>
   usePeopleMutation((id: string) => api.post(`/api/people/${id}/invitation`, doneSchema))
-
-export const useMoveCrew = () =>
-  usePeopleMutation(({ id, ...input }: z.input<typeof moveCrewSchema> & { id: string }) =>
-    api.put(`/api/people/${id}/crew`, personSchema, input),
-  )
-
-export const useAddLeave = () =>
-  usePeopleMutation(({ id, ...input }: z.input<typeof addLeaveSchema> & { id: string }) =>
-    api.post(`/api/people/${id}/leave`, personSchema, input),
-  )
-
-export const useDropLeave = () =>
-  usePeopleMutation(({ id, leaveId }: { id: string; leaveId: string }) =>
-    api.delete(`/api/people/${id}/leave/${leaveId}`, personSchema),
-  )
 
 export const useSaveCrew = () =>
   usePeopleMutation(({ id, ...input }: z.input<typeof crewInputSchema> & { id: string | null }) =>
