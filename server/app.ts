@@ -16,6 +16,7 @@ import type { Db } from './db/client.ts'
 import type { Env } from './env.ts'
 import type { EventHub } from './events/event-hub.ts'
 import { eventRoutes } from './events/event-routes.ts'
+import { findDaysRoutes } from './find-days/find-days-routes.ts'
 import { firmRoutes } from './firm/firm-routes.ts'
 import { type Api, createApi } from './http/api.ts'
 import { AppError } from './http/app-error.ts'
@@ -100,6 +101,7 @@ function registerRoutes(api: Api, deps: AppDeps): void {
   dayLogRoutes(api, deps)
   hoursRoutes(api, deps)
   rainOffRoutes(api, deps)
+  findDaysRoutes(api, deps)
   messageRoutes(api, deps)
   noticeRoutes(api, deps)
   revisionRoutes(api, createRevisionService({ ...deps, takeRevision }))
