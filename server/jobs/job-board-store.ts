@@ -52,22 +52,57 @@ function hasCrew(viewer: Viewer, crewId: string | undefined): SQL {
     where bookings.cancelled_at is null and bookings.crew_id = ${crewId} and ${visibleDays(viewer)})`
 }
 
-/** Jobs found, each with its stage and what orders it within that. */
-function foundJobs(viewer: Viewer, query: BoardQuery): SQL {
+function isFound(viewer: Viewer, query: BoardQuery): SQL {
+  return sql`${jobVisible(viewer.user, 'board:read', viewer.firm, viewer.now)}
+    and ${matchesSearch(viewer, query.q)} and ${hasCrew(viewer, query.crew)}`
+}
+
+/** Jobs found that are not complete, each with its stage and what orders it within that. */
+function openJobs(viewer: Viewer, query: BoardQuery): SQL {
   const today = localDayOf(viewer.now, viewer.firm.timeZone)
   return sql`
-    select jobs.id as id, jobs.number as number, jobs.completed_on as completed_on,
-      ${stageSql()} as stage,
+    select jobs.id as id, jobs.number as number, ${stageSql()} as stage,
       coalesce(
         (select min(booking_days.day) from bookings
           join booking_days on booking_days.booking_id = bookings.id
-          where jobs.completed_on is null and bookings.job_id = jobs.id
-            and bookings.cancelled_at is null
+          where bookings.job_id = jobs.id and bookings.cancelled_at is null
             and booking_days.day >= ${today} and ${visibleDays(viewer)}),
         jobs.wanted_by, ${anyOrder}) as due_on
-    from jobs
-    where ${jobVisible(viewer.user, 'board:read', viewer.firm, viewer.now)}
-      and ${matchesSearch(viewer, query.q)} and ${hasCrew(viewer, query.crew)}`
+    from jobs where jobs.completed_on is null and ${isFound(viewer, query)}`
+}
+
+type Placed = { id: string; stage: JobStage }
+type Counted = { stage: JobStage; count: number }
+
+function readOpenPage(db: DbOrTx, viewer: Viewer, query: BoardQuery) {
+  const found = openJobs(viewer, query)
+  const ofStage = query.stage ? sql`stage = ${query.stage}` : sql`1 = 1`
+  const page = db.all<Placed>(sql`
+    with found as materialized (${found}),
+    placed as (
+      select id, stage, row_number() over (partition by stage order by due_on, number) as place
+      from found where ${ofStage})
+    select id, stage from placed
+    where place > ${query.offset} and place <= ${query.offset + boardPageSize}
+    order by stage, place`)
+  const counts = db.all<Counted>(
+    sql`select stage, count(*) as count from (${found}) group by stage`,
+  )
+  return { page, counts }
+}
+
+/** Years of them: read by the index of the day they were done, latest first, and never one by one. */
+function readCompletePage(db: DbOrTx, viewer: Viewer, query: BoardQuery) {
+  const found = sql`from jobs where jobs.completed_on is not null and ${isFound(viewer, query)}`
+  const isAsked = query.stage === undefined || query.stage === 'complete'
+  const page = isAsked
+    ? db.all<Placed>(sql`
+        select jobs.id as id, 'complete' as stage ${found}
+        order by jobs.completed_on desc, coalesce(jobs.wanted_by, ${anyOrder}), jobs.number
+        limit ${boardPageSize} offset ${query.offset}`)
+    : []
+  const { count } = db.get<{ count: number }>(sql`select count(*) as count ${found}`)
+  return { page, counts: count > 0 ? [{ stage: 'complete' as const, count }] : [] }
 }
 
 /** One page of each stage asked for, soonest first (complete: latest first), and the count of every stage. */
@@ -75,22 +110,13 @@ export function readBoardPage(
   db: DbOrTx,
   viewer: Viewer,
   query: BoardQuery,
-): { page: { id: string; stage: JobStage }[]; counts: { stage: JobStage; count: number }[] } {
-  const found = foundJobs(viewer, query)
-  const ofStage = query.stage ? sql`stage = ${query.stage}` : sql`1 = 1`
-  const page = db.all<{ id: string; stage: JobStage }>(sql`
-    with found as materialized (${found}),
-    placed as (
-      select id, stage, row_number() over (
-        partition by stage order by completed_on desc, due_on, number) as place
-      from found where ${ofStage})
-    select id, stage from placed
-    where place > ${query.offset} and place <= ${query.offset + boardPageSize}
-    order by stage, place`)
-  const counts = db.all<{ stage: JobStage; count: number }>(
-    sql`select stage, count(*) as count from (${found}) group by stage`,
-  )
-  return { page, counts }
+): { page: Placed[]; counts: Counted[] } {
+  const open = readOpenPage(db, viewer, query)
+  const complete = readCompletePage(db, viewer, query)
+  return {
+    page: [...open.page, ...complete.page],
+    counts: [...open.counts, ...complete.counts],
+  }
 }
 
 export function readStage(db: DbOrTx, jobId: string): JobStage {

@@ -163,5 +163,5 @@ test('ten thousand jobs come a page a stage, each once, in a bounded number of q
   }
   const forAll = await countQueries('')
   expect(forAll).toBeGreaterThan(5)
-  expect(await countQueries('?q=House+10&stage=firm')).toBe(forAll)
+  expect(await countQueries('?q=House+10&stage=firm')).toBeLessThanOrEqual(forAll)
 })

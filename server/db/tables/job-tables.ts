@@ -36,6 +36,7 @@ export const jobs = sqliteTable(
     uniqueIndex('jobs_number').on(t.number),
     index('jobs_updated').on(t.updatedAt),
     index('jobs_wanted').on(t.wantedBy),
+    index('jobs_completed').on(t.completedOn),
   ],
 )
 

@@ -1,0 +1,1 @@
+CREATE INDEX `jobs_completed` ON `jobs` (`completed_on`);
