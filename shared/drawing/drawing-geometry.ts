@@ -115,6 +115,10 @@ export function svgPoints(points: readonly DrawingPoint[]): string {
   return points.map((p) => `${roundPx(p.x)},${roundPx(p.y)}`).join(' ')
 }
 
+/** Whether two points come out at one place on the screen. */
+export const isSamePx = (a: DrawingPoint, b: DrawingPoint): boolean =>
+  roundPx(a.x) === roundPx(b.x) && roundPx(a.y) === roundPx(b.y)
+
 export function roundPx(value: number): number {
   return Math.round(value * 100) / 100
 }

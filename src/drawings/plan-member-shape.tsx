@@ -1,5 +1,5 @@
-import type { KeyboardEvent } from 'react'
-import { svgPoints } from '../../shared/drawing/drawing-geometry.ts'
+import { memo } from 'react'
+import { isSamePx, roundPx, svgPoints } from '../../shared/drawing/drawing-geometry.ts'
 import type { PlanMember } from '../../shared/drawing/plan-members.ts'
 
 /** How a timber stands in the day's work; 'plain' where no day is shown. */
@@ -34,12 +34,27 @@ type Props = {
   isTabStop: boolean
   isFocused: boolean
   isPickable: boolean
-  onKeyDown: (event: KeyboardEvent<SVGGElement>) => void
-  onFocus: () => void
-  onBlur: () => void
 }
 
-export function PlanMemberShape(props: Props) {
+/** Each typed pause brings a new plan in which most timbers lie where they lay: those are not drawn again. */
+export const PlanMemberShape = memo(MemberShape, (before, now) => {
+  const { member: a, ...rest } = before
+  const { member: b } = now
+  const isSameState = (Object.keys(rest) as (keyof typeof rest)[]).every(
+    (key) => before[key] === now[key],
+  )
+  return isSameState && isDrawnAlike(a, b)
+})
+
+const isDrawnAlike = (a: PlanMember, b: PlanMember): boolean =>
+  a.mark === b.mark &&
+  a.role === b.role &&
+  a.thicknessPx === b.thicknessPx &&
+  isSamePx(a.centre.from, b.centre.from) &&
+  isSamePx(a.centre.to, b.centre.to) &&
+  svgPoints(a.outline) === svgPoints(b.outline)
+
+function MemberShape(props: Props) {
   const { member, state, isSelected, isFocused, isPickable } = props
   const pickProps = isPickable
     ? {
@@ -47,9 +62,6 @@ export function PlanMemberShape(props: Props) {
         tabIndex: props.isTabStop ? 0 : -1,
         'aria-label': `${member.mark}, ${roleWords(member.role)}${stateWords[state]}`,
         'aria-pressed': isSelected,
-        onKeyDown: props.onKeyDown,
-        onFocus: props.onFocus,
-        onBlur: props.onBlur,
       }
     : {}
   return (
@@ -108,7 +120,8 @@ function MemberBody({ member, state }: { member: PlanMember; state: MemberState 
 }
 
 function centreProps({ centre }: PlanMember) {
-  return { x1: centre.from.x, y1: centre.from.y, x2: centre.to.x, y2: centre.to.y }
+  const { from, to } = centre
+  return { x1: roundPx(from.x), y1: roundPx(from.y), x2: roundPx(to.x), y2: roundPx(to.y) }
 }
 
 /** 'crown-end' → 'crown end'. */

@@ -1,4 +1,5 @@
-import { useRef, useState, type KeyboardEvent, type MouseEvent } from 'react'
+import { memo, useRef, useState, type KeyboardEvent, type MouseEvent } from 'react'
+import { isSamePx, roundPx } from '../../shared/drawing/drawing-geometry.ts'
 import type { PlanDrawing } from '../../shared/drawing/plan-drawing.ts'
 import type { PlanLabel } from '../../shared/drawing/plan-labels.ts'
 import { planMemberAt, type PlanMember } from '../../shared/drawing/plan-members.ts'
@@ -29,10 +30,11 @@ export function PlanTimbers({ drawing, stateOf, selected, onPick }: Props) {
     const next = members[(at + step + members.length) % members.length]
     if (next) focusMark(groupRef.current, next.mark)
   }
-  const onKeyDown = (mark: string) => (event: KeyboardEvent<SVGGElement>) => {
+  const onKeyDown = (event: KeyboardEvent<SVGGElement>) => {
     const step = keySteps[event.key]
     const picks = event.key === 'Enter' || event.key === ' '
-    if (step === undefined && !picks) return
+    const mark = markOf(event.target)
+    if (mark === null || (step === undefined && !picks)) return
     event.preventDefault()
     if (step !== undefined) moveFocus(mark, step)
     else onPick?.(mark)
@@ -44,7 +46,14 @@ export function PlanTimbers({ drawing, stateOf, selected, onPick }: Props) {
   const drawn = [...members].sort((a, b) => order(a, stateOf) - order(b, stateOf))
   const leaders = drawing.labels.flatMap((label) => (label.leader ? [label.leader] : []))
   return (
-    <g ref={groupRef} onClick={onPick ? onClick : undefined} className={onPick && 'cursor-pointer'}>
+    <g
+      ref={groupRef}
+      onClick={onPick ? onClick : undefined}
+      onKeyDown={onPick ? onKeyDown : undefined}
+      onFocus={onPick ? (event) => setFocused(markOf(event.target)) : undefined}
+      onBlur={onPick ? () => setFocused(null) : undefined}
+      className={onPick && 'cursor-pointer'}
+    >
       {onPick ? <rect width="100%" height="100%" className="fill-transparent" /> : null}
       {drawn.map((member) => (
         <PlanMemberShape
@@ -55,9 +64,6 @@ export function PlanTimbers({ drawing, stateOf, selected, onPick }: Props) {
           isFocused={member.mark === focused}
           isTabStop={member.mark === tabStop}
           isPickable={onPick !== undefined}
-          onKeyDown={onKeyDown(member.mark)}
-          onFocus={() => setFocused(member.mark)}
-          onBlur={() => setFocused(null)}
         />
       ))}
       {leaders.map((leader, i) => (
@@ -91,13 +97,29 @@ const textClasses: Record<MemberState, string> = {
 
 type MarkTextProps = { label: PlanLabel; state: MemberState; isSelected: boolean }
 
+const isSameText = (a: PlanLabel, b: PlanLabel): boolean =>
+  a.text === b.text &&
+  a.sizePx === b.sizePx &&
+  a.widthPx === b.widthPx &&
+  a.heightPx === b.heightPx &&
+  roundPx(a.angleDeg) === roundPx(b.angleDeg) &&
+  isSamePx(a.centre, b.centre)
+
+const MarkText = memo(
+  MarkPatch,
+  (before, now) =>
+    before.state === now.state &&
+    before.isSelected === now.isSelected &&
+    isSameText(before.label, now.label),
+)
+
 /** On a patch that breaks its timber, as a number breaks a contour. */
-function MarkText({ label, state, isSelected }: MarkTextProps) {
+function MarkPatch({ label, state, isSelected }: MarkTextProps) {
   const { centre, angleDeg, widthPx, heightPx, sizePx } = label
   return (
     <g
       aria-hidden="true"
-      transform={`translate(${centre.x} ${centre.y}) rotate(${angleDeg})`}
+      transform={`translate(${roundPx(centre.x)} ${roundPx(centre.y)}) rotate(${roundPx(angleDeg)})`}
       className="pointer-events-none"
     >
       <rect
@@ -130,11 +152,14 @@ function focusMark(group: SVGGElement | null, mark: string): void {
   shapes.find((shape) => shape.getAttribute('data-mark') === mark)?.focus()
 }
 
+const markOf = (target: EventTarget): string | null =>
+  (target instanceof Element ? target.closest('[data-mark]') : null)?.getAttribute('data-mark') ??
+  null
+
 /** The timber under the finger; a click without a place (a screen reader's) means its own target. */
 function markOfClick(event: MouseEvent<SVGGElement>, drawing: PlanDrawing): string | null {
   const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect()
-  const target = event.target instanceof Element ? event.target.closest('[data-mark]') : null
-  const own = target?.getAttribute('data-mark') ?? null
+  const own = markOf(event.target)
   if (!box || box.width === 0 || event.detail === 0) return own
   const pxPerScreenPx = drawing.view.widthPx / box.width
   const point = {
