@@ -5,10 +5,14 @@ import { distance2, dot2, left2, radians, sub2, unit2 } from './vector.ts'
 import { growRoof } from './wavefront.ts'
 import type { Front } from './wavefront-types.ts'
 
-const plateEdges = (roof: Roof): PlateEdge[] =>
-  roof.edges.map((edge, index) => {
-    const from = at(roof.outline, index)
-    const to = at(roof.outline, index + 1)
+/** The corners as points like all others: what comes out of JSON slows every sum it takes part in. */
+const cornersOf = ({ outline }: Roof): Point2[] => outline.map(({ x, y }) => ({ x, y }))
+
+const plateEdges = (roof: Roof): PlateEdge[] => {
+  const corners = cornersOf(roof)
+  return roof.edges.map((edge, index) => {
+    const from = at(corners, index)
+    const to = at(corners, index + 1)
     const along = unit2(sub2(to, from))
     return {
       index,
@@ -22,6 +26,7 @@ const plateEdges = (roof: Roof): PlateEdge[] =>
       pitchDeg: edge.finish === 'eave' ? edge.pitchDeg : 90,
     }
   })
+}
 
 /** Whether the corner before edge `index` lies in the middle of one slope, or of one gable. */
 const runsOn = (edges: PlateEdge[], index: number): boolean => {

@@ -1,5 +1,6 @@
 import type { Ground } from './build-pieces.ts'
 import type { Joint } from './clusters.ts'
+import { gather } from './lists.ts'
 import { rawPiece } from './piece.ts'
 import type { Piece } from './piece.ts'
 import { nearestEdge, rafterFoot } from './plate-foot.ts'
@@ -10,7 +11,7 @@ import { at, insideMm, slopePoint } from './slopes.ts'
 import type { PlateEdge, Slope } from './slopes.ts'
 import type { SquareSpan } from './square-spans.ts'
 import { squareLineSpans } from './square-spans.ts'
-import { dot2, sub2 } from './vector.ts'
+import { dot2, point3, sub2 } from './vector.ts'
 
 /**
  * Where a rafter stands on a slope's plate line, mm from the slope's first corner, and the joints near
@@ -162,10 +163,7 @@ const rafterPiece = (
   const joint = headJoint === null ? null : at(joints.joints, headJoint)
   const kindOf = (line: number | null) => (line === null ? null : at(lines.lines, line).kind)
   const footLine = foot.on === 'valley' ? foot.valley.line : foot.on === 'hip' ? foot.line : null
-  const place = (inMm: number) => ({
-    ...slopePoint(slope, station.alongMm, inMm),
-    z: inMm * slope.tan,
-  })
+  const place = (inMm: number) => point3(slopePoint(slope, station.alongMm, inMm), inMm * slope.tan)
   const meets = headMeets(ground, slope.index, joint, kindOf(headLine))
   const piece = rawPiece({
     role: roleOf(foot, kindOf(footLine), meets),
@@ -192,9 +190,10 @@ const rafterPiece = (
 
 /** The rafters on one square line of a slope; none where none is worth cutting. */
 export const raftersAt = (ground: Ground, own: SlopeGround, station: Station): Piece[] =>
-  squareLineSpans(ground.lines, own.slope, own.face, station.alongMm).flatMap(
-    (span) => rafterPiece(ground, own, station, span) ?? [],
-  )
+  gather(squareLineSpans(ground.lines, own.slope, own.face, station.alongMm), (span) => {
+    const piece = rafterPiece(ground, own, station, span)
+    return piece === null ? [] : [piece]
+  })
 
 /** Whether a joint of a slope is where one of its square lines starts or ends, and not only touched in passing. */
 export const reachesJoint = (ground: Ground, own: SlopeGround, station: Station): boolean =>
