@@ -53,7 +53,7 @@ function BarText({ bar }: { bar: Bar }) {
   const WarnIcon = isClash ? OctagonAlert : TriangleAlert
   return (
     <span className="block p-1 text-xs leading-tight @min-[8rem]:text-sm @min-[8rem]:leading-snug">
-      <span className="flex items-center gap-1 text-ink-soft">
+      <span className="flex flex-wrap items-center gap-1 text-ink-soft">
         {booking.glyph ? <RoofGlyph glyph={booking.glyph} sizePx={24} /> : null}
         <StateIcon size={14} aria-hidden className="shrink-0" />
         <span className="hidden @min-[8rem]:inline">{booking.state}</span>

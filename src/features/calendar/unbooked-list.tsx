@@ -45,13 +45,22 @@ export function UnbookedList({ jobs, crews, mayDrag }: Props) {
             ) : null}
           </div>
           <p className="mt-1 text-sm">{workWords(job, crews)}</p>
-          <Link
-            to={`/calendar/book${searchWith(search, { job: job.id })}`}
-            aria-label={`Book ${job.title}`}
-            className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
-          >
-            Book
-          </Link>
+          <p className="flex flex-wrap gap-x-4">
+            <Link
+              to={`/calendar/book${searchWith(search, { job: job.id })}`}
+              aria-label={`Book ${job.title}`}
+              className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
+            >
+              Book
+            </Link>
+            <Link
+              to={`/calendar/find-days${searchWith(search, { job: job.id })}`}
+              aria-label={`Find days for ${job.title}`}
+              className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
+            >
+              Find days
+            </Link>
+          </p>
         </li>
       ))}
     </ul>

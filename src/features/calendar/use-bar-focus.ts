@@ -47,15 +47,20 @@ const ways: Record<string, (grid: HTMLElement, from: HTMLElement) => HTMLElement
 /** Arrows from booking to booking; a booking that moved keeps the focus it had. */
 export function useBarFocus(grid: HTMLElement | null) {
   const wanted = useRef<string | null>(null)
-  // After each drawing: the booking may stand somewhere else by now.
+  // After each drawing: a booking that moved is drawn anew somewhere else, and its focus went to nothing.
   useEffect(() => {
     const id = wanted.current
-    if (id === null || document.querySelector('[role="dialog"]')) return
-    const bar = grid?.querySelector<HTMLElement>(`[data-booking="${id}"]`)
-    if (!bar) return
-    wanted.current = null
-    bar.focus()
+    const isLost = document.activeElement === null || document.activeElement === document.body
+    if (id === null || !isLost) return
+    grid?.querySelector<HTMLElement>(`[data-booking="${id}"]`)?.focus()
   })
+  useEffect(() => {
+    const forget = () => {
+      wanted.current = null
+    }
+    document.addEventListener('pointerdown', forget)
+    return () => document.removeEventListener('pointerdown', forget)
+  }, [])
   return {
     keep: (bookingId: string) => {
       wanted.current = bookingId
