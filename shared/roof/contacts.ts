@@ -12,8 +12,8 @@ import { add2, cross2, distance2, dot2, left2, length2, scale2, sub2 } from './v
 /** A side of a trimmed piece in plan, as a segment. */
 export type Segment = { piece: number; side: Side; from: Point2; to: Point2 }
 
-/** Faces this near to one plane bear on each other. */
-const bearingGapMm = 0.1
+/** Faces this near to one plane bear on each other: what the agreement calls a closed joint. */
+const bearingGapMm = 0.2
 const leastBearingMm = 0.25
 /** Faces that turn from each other by more than this (tangent, two degrees) only touch along an edge. */
 const mostTurn = 0.035
@@ -125,6 +125,26 @@ const drawnOut = (own: Segment, ofPiece: readonly Segment[]): Segment => {
   }
 }
 
+type MayBear = (other: number) => boolean
+
+/** Area on which a cut of a piece bears on each other piece, mm². */
+const bearingAreas = (
+  pieces: readonly Piece[],
+  segments: SegmentIndex,
+  own: Segment,
+  mayBear: MayBear,
+): Map<number, number> => {
+  const face = drawnOut(own, segments.ofPiece[own.piece] ?? [])
+  const sums = new Map<number, number>()
+  for (const other of segments.grid.near(boxOf(face, 1))) {
+    if (other.piece === own.piece) continue
+    if (other.side.kind !== 'face' && !mayBear(other.piece)) continue
+    const shared = bearingMm2(pieces, face, other)
+    if (shared > 0) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
+  }
+  return sums
+}
+
 /**
  * Pieces that a piece's cut bears on, most bearing first: on the sides of any, and on the cuts of those
  * placed before it, as `mayBear` says.
@@ -135,17 +155,29 @@ export const bearings = (
   piece: Piece,
   end: PieceEnd | 'tail',
   cut: number,
-  mayBear: (other: number) => boolean,
+  mayBear: MayBear,
 ): number[] => {
   const own = segments.ofPiece[piece.id]?.find((s) => s.side.kind === end && s.side.cut === cut)
   if (own === undefined) return []
-  const face = drawnOut(own, segments.ofPiece[piece.id] ?? [])
-  const sums = new Map<number, number>()
-  for (const other of segments.grid.near(boxOf(face, 1))) {
-    if (other.piece === piece.id) continue
-    if (other.side.kind !== 'face' && !mayBear(other.piece)) continue
-    const shared = bearingMm2(pieces, face, other)
-    if (shared > 0) sums.set(other.piece, (sums.get(other.piece) ?? 0) + shared)
+  return [...bearingAreas(pieces, segments, own, mayBear)]
+    .sort((a, b) => b[1] - a[1] || a[0] - b[0])
+    .map(([id]) => id)
+}
+
+/** A head that bears over less than this share of its faces hangs by a corner. No source. */
+const leastHeld = 1 / 8
+
+/** Whether next to nothing holds a piece's head, whatever was placed first. */
+export const hangsByCorner = (
+  pieces: readonly Piece[],
+  segments: SegmentIndex,
+  piece: Piece,
+): boolean => {
+  const faces = (segments.ofPiece[piece.id] ?? []).filter((s) => s.side.kind === 'head')
+  let [borneMm2, faceMm2] = [0, 0]
+  for (const face of faces) {
+    faceMm2 += (length2(sub2(face.to, face.from)) * piece.section.depthMm) / piece.cos
+    bearingAreas(pieces, segments, face, () => true).forEach((mm2) => (borneMm2 += mm2))
   }
-  return [...sums].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([id]) => id)
+  return faceMm2 > 0 && borneMm2 < leastHeld * faceMm2
 }

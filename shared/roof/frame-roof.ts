@@ -1,7 +1,7 @@
 import { buildPieces } from './build-pieces.ts'
 import type { Ground } from './build-pieces.ts'
 import { cautionsOf } from './cautions.ts'
-import { bearings, segmentIndex } from './contacts.ts'
+import { bearings, hangsByCorner, segmentIndex } from './contacts.ts'
 import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
@@ -38,7 +38,10 @@ const draftMembers = (ground: Ground, standMm: number) => {
       return bearings(pieces, segments, piece, cut.end, cut.listed, mayBear)
     }),
   )
-  return { drafts, openPieces }
+  const hung = pieces.filter(
+    (p) => p.role !== 'ridge' && p.headJoint !== null && hangsByCorner(pieces, segments, p),
+  )
+  return { drafts, openPieces: new Set([...openPieces, ...hung.map((p) => p.id)]) }
 }
 
 /**

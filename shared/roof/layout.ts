@@ -142,13 +142,19 @@ const layOut = (ground: Ground, own: SlopeGround, stations: readonly Station[]):
   const { roof } = ground
   const make = (station: Station): Laid => ({ station, pieces: raftersAt(ground, own, station) })
   const free = (alongMm: number) => make({ alongMm, joints: [] })
-  // a creeper that a hip's tail leaves no room stands beside that tail
+  const found = stations.map(make)
+  // a creeper that a hip's tail leaves no room stands beside that tail, and so does the joint's that fell there
   const creeper = (alongMm: number): Laid => {
     const asideMm = besideTailMm(own, alongMm)
     const isNear = asideMm !== null && Math.abs(asideMm - alongMm) < roof.maxSpacingMm / 2
-    return free(isNear ? asideMm : alongMm)
+    if (!isNear) return free(alongMm)
+    const inTheWay = ({ station, pieces }: Laid) =>
+      pieces.length === 0 && Math.abs(station.alongMm - asideMm) < roof.sections.rafter.thicknessMm
+    return make({
+      alongMm: asideMm,
+      joints: found.filter(inTheWay).flatMap(({ station }) => station.joints),
+    })
   }
-  const found = stations.map(make)
   let fixed = found.filter(({ pieces }) => pieces.length > 0)
   if (fixed.length === 0) {
     fixed = startsOf(ground, own)
