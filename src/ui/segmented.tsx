@@ -5,10 +5,18 @@ type Props<Value extends string> = {
   options: readonly Option<Value>[]
   value: Value
   onChange: (value: Value) => void
+  /** Four words beside one another on a phone. */
+  dense?: boolean
 }
 
 /** A few choices side by side, one taken. */
-export function Segmented<Value extends string>({ label, options, value, onChange }: Props<Value>) {
+export function Segmented<Value extends string>({
+  label,
+  options,
+  value,
+  onChange,
+  dense,
+}: Props<Value>) {
   return (
     <div
       role="radiogroup"
@@ -18,7 +26,7 @@ export function Segmented<Value extends string>({ label, options, value, onChang
       {options.map((option) => (
         <label
           key={option.value}
-          className={`flex min-h-11 items-center rounded-md px-3 font-semibold has-focus-visible:outline-3 has-focus-visible:outline-chalk ${option.value === value ? 'bg-ink text-sheet' : 'text-ink'}`}
+          className={`flex min-h-11 items-center rounded-md ${dense ? 'px-2' : 'px-3'} font-semibold has-focus-visible:outline-3 has-focus-visible:outline-chalk ${option.value === value ? 'bg-ink text-sheet' : 'text-ink'}`}
         >
           <input
             type="radio"

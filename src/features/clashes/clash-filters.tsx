@@ -54,19 +54,21 @@ export function ClashFilters({ list, filter, change }: Props) {
           ))}
         </Select>
       </Field>
-      <Field label="Crew">
-        <Select
-          value={filter.crew ?? ''}
-          onChange={(event) => change({ crew: event.target.value || null })}
-        >
-          <option value="">All crews</option>
-          {crews.map((crew) => (
-            <option key={crew.id} value={crew.id}>
-              {crew.name}
-            </option>
-          ))}
-        </Select>
-      </Field>
+      {crews.length > 1 ? (
+        <Field label="Crew">
+          <Select
+            value={filter.crew ?? ''}
+            onChange={(event) => change({ crew: event.target.value || null })}
+          >
+            <option value="">All crews</option>
+            {crews.map((crew) => (
+              <option key={crew.id} value={crew.id}>
+                {crew.name}
+              </option>
+            ))}
+          </Select>
+        </Field>
+      ) : null}
     </search>
   )
 }

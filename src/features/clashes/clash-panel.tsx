@@ -49,6 +49,8 @@ function BookingCard({ booking, search }: { booking: ClashBookingView; search: s
 }
 
 const shownAtOnce = 40
+/** As many as are seen at a glance need no filter. */
+const fewBookings = 4
 
 function Bookings({ list }: { list: ClashList }) {
   const address = useClashAddress()
@@ -68,7 +70,9 @@ function Bookings({ list }: { list: ClashList }) {
         {countWords(list)}, from today on. A clash must be settled; a caution may stand.
         {mayBook ? '' : ' Ask the office about any of them.'}
       </p>
-      <ClashFilters list={list} filter={address.filter} change={address.change} />
+      {list.bookings.length > fewBookings || address.isFiltered ? (
+        <ClashFilters list={list} filter={address.filter} change={address.change} />
+      ) : null}
       {found.length === 0 ? (
         <EmptyState
           title="None like that"

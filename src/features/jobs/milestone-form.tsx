@@ -15,14 +15,20 @@ type Props = {
   onCancel: () => void
 }
 
-/** Day, bringer and a word on one milestone. */
+/** Day, bringer and a word on one milestone; what was not touched is not sent. */
 export function MilestoneForm({ milestone, error, busy, onSave, onCancel }: Props) {
+  const [start] = useState(milestone)
   const [day, setDay] = useState(milestone.day ?? '')
   const [broughtBy, setBroughtBy] = useState(milestone.broughtBy)
   const [note, setNote] = useState(milestone.note)
   const submit = (event: FormEvent) => {
     event.preventDefault()
-    onSave({ day: day === '' ? null : day, broughtBy: broughtBy.trim(), note: note.trim() })
+    const typed = { day: day || null, broughtBy: broughtBy.trim(), note: note.trim() }
+    onSave({
+      ...(typed.day === start.day ? {} : { day: typed.day }),
+      ...(typed.broughtBy === start.broughtBy ? {} : { broughtBy: typed.broughtBy }),
+      ...(typed.note === start.note ? {} : { note: typed.note }),
+    })
   }
   const failure = milestoneConflictOf(error)
     ? undefined

@@ -1,6 +1,5 @@
 import { Check, Pencil } from 'lucide-react'
-import { useState } from 'react'
-import { milestoneStates } from '../../../shared/milestones/milestone-kinds.ts'
+import { type MilestoneState, milestoneStates } from '../../../shared/milestones/milestone-kinds.ts'
 import {
   isMilestoneKept,
   milestoneNames,
@@ -20,7 +19,9 @@ import { dayText, unbroken } from './day-words.ts'
 import { MilestoneForm } from './milestone-form.tsx'
 import { useMilestone } from './use-set-milestone.ts'
 
-const stateOptions = milestoneStates.map((value) => ({ value, label: milestoneStateNames[value] }))
+const stateOptions: { value: MilestoneState | ''; label: string }[] = milestoneStates.map(
+  (value) => ({ value, label: milestoneStateNames[value] }),
+)
 
 type Shown = Partial<Pick<Milestone, 'day' | 'state' | 'broughtBy' | 'note'>>
 
@@ -87,35 +88,42 @@ function definedOf({ day, state, broughtBy, note }: SetMilestone): Shown {
 function EditableRow({ jobId, milestone }: { jobId: string; milestone: Milestone }) {
   const { today } = useSession().firm
   const edit = useMilestone(jobId, milestone)
-  const [isOpen, setOpen] = useState(false)
   const name = milestoneNames[milestone.kind]
+  const isKept = isMilestoneKept(milestone)
   const { conflict } = edit
+  const press = (state: MilestoneState | '') => {
+    if (state === '') return
+    // A guess is of a day, and a promise mostly: without one the form asks for it.
+    if (milestone.day === null && state !== 'done' && !edit.base) edit.open()
+    if (isKept || state !== 'guessed') edit.press(state)
+  }
   return (
-    <li className="py-3">
-      <div className="flex flex-wrap items-center justify-between gap-x-3">
-        <div className="min-w-0">
+    <li className="py-2">
+      <div className="flex flex-wrap items-center gap-x-3 gap-y-1">
+        <div className="min-w-44 flex-1">
           <h3 className="font-semibold">{name}</h3>
           <p className="text-ink-soft [overflow-wrap:anywhere]">
-            {isMilestoneKept(milestone) ? wordsOf(milestone, today) : 'Nothing said yet'}
+            {isKept ? wordsOf(milestone, today) : 'Nothing said yet'}
           </p>
         </div>
         <Button
           kind="quiet"
-          className="px-2!"
-          aria-expanded={isOpen}
+          className="w-11 px-0! sm:order-last"
+          aria-expanded={edit.base !== null}
           aria-label={`${name}: day and who brings it`}
-          onClick={() => setOpen(!isOpen)}
+          title="Day and who brings it"
+          onClick={edit.base ? edit.shut : edit.open}
         >
-          <Pencil size={16} aria-hidden />
-          Day and who
+          <Pencil size={18} aria-hidden />
         </Button>
+        <Segmented
+          dense
+          label={name}
+          options={stateOptions}
+          value={isKept ? milestone.state : ''}
+          onChange={press}
+        />
       </div>
-      <Segmented
-        label={name}
-        options={stateOptions}
-        value={milestone.state}
-        onChange={edit.press}
-      />
       {conflict ? (
         <ChangedMeanwhile
           conflict={conflict}
@@ -124,14 +132,13 @@ function EditableRow({ jobId, milestone }: { jobId: string; milestone: Milestone
           onTheirs={edit.takeTheirs}
         />
       ) : null}
-      {isOpen ? (
+      {edit.base ? (
         <MilestoneForm
-          key={milestone.version}
-          milestone={milestone}
+          milestone={edit.base}
           error={edit.error}
           busy={edit.busy}
-          onSave={(fields) => edit.save(fields, () => setOpen(false))}
-          onCancel={() => setOpen(false)}
+          onSave={edit.save}
+          onCancel={edit.shut}
         />
       ) : null}
     </li>
@@ -144,8 +151,8 @@ export function MilestoneRow({ jobId, milestone }: { jobId: string; milestone: M
   const mayWrite = useMay('milestone:write')
   if (mayWrite) return <EditableRow jobId={jobId} milestone={milestone} />
   return (
-    <li className="flex flex-wrap items-center justify-between gap-x-3 py-2">
-      <div className="min-w-0">
+    <li className="flex items-center justify-between gap-x-3 py-2">
+      <div className="min-w-0 flex-1">
         <h3 className="font-semibold">{milestoneNames[milestone.kind]}</h3>
         <p className="[overflow-wrap:anywhere]">{wordsOf(milestone, today)}</p>
       </div>
