@@ -63,6 +63,12 @@ export const shellRoutes: RouteObject[] = [
         }),
       },
       {
+        path: 'find-days',
+        lazy: async () => ({
+          Component: (await import('../features/find-days/find-days-panel.tsx')).FindDaysPanel,
+        }),
+      },
+      {
         path: 'rain-off',
         lazy: async () => ({
           Component: (await import('../features/rain-offs/rain-off-panel.tsx')).RainOffPanel,

@@ -1,4 +1,4 @@
-import { CalendarPlus } from 'lucide-react'
+import { CalendarPlus, CalendarSearch, Clock } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import type { JobBooking, JobView } from '../../../shared/jobs/job-views.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
@@ -40,6 +40,7 @@ function BookingRow({ booking }: { booking: JobBooking }) {
 /** Which crew is on it, and when. */
 export function JobBookingsCard({ job }: { job: JobView }) {
   const mayBook = useMay('booking:write')
+  const mayReadHours = useMay('hours:read')
   const { today } = useSession().firm
   // Without a roof the roof comes first.
   const isWaiting = job.stage === 'won' && job.bookings.length === 0 && job.revisions.length > 0
@@ -48,13 +49,21 @@ export function JobBookingsCard({ job }: { job: JobView }) {
       <div className="mb-2 flex flex-wrap items-center justify-between gap-3">
         <h2 className="text-lg font-extrabold">Bookings</h2>
         {mayBook ? (
-          <Link
-            to={`/calendar/book?job=${job.id}`}
-            className={buttonClass(isWaiting ? 'primary' : 'plain')}
-          >
-            <CalendarPlus size={18} aria-hidden />
-            Book a crew
-          </Link>
+          <div className="flex flex-wrap gap-2">
+            {job.stage === 'complete' ? null : (
+              <Link to={`/calendar/find-days?job=${job.id}`} className={buttonClass('plain')}>
+                <CalendarSearch size={18} aria-hidden />
+                Find days
+              </Link>
+            )}
+            <Link
+              to={`/calendar/book?job=${job.id}`}
+              className={buttonClass(isWaiting ? 'primary' : 'plain')}
+            >
+              <CalendarPlus size={18} aria-hidden />
+              Book a crew
+            </Link>
+          </div>
         ) : null}
       </div>
       {job.wantedBy ? (
@@ -69,6 +78,15 @@ export function JobBookingsCard({ job }: { job: JobView }) {
       ) : (
         <p>No crew is booked on this job.</p>
       )}
+      {mayReadHours && (job.bookings.length > 0 || job.stage === 'complete') ? (
+        <Link
+          to={`/jobs/${job.id}/hours`}
+          className="mt-2 inline-flex min-h-11 items-center gap-2 font-semibold text-chalk underline"
+        >
+          <Clock size={18} aria-hidden />
+          Hours, planned and logged
+        </Link>
+      ) : null}
     </Card>
   )
 }
