@@ -12,7 +12,10 @@ type Props = {
   today: Day
   /** Where the photo of its card is read from. */
   photoPath: string
+  /** Beside the card. */
   children?: ReactNode
+  /** Under it, over the whole width. */
+  below?: ReactNode
 }
 
 function TicketTime({ ticket, today }: { ticket: Ticket; today: Day }) {
@@ -64,11 +67,11 @@ function CardPhoto({ src, title }: { src: string; title: string }) {
 }
 
 /** A ticket: its card, what it is for, its number and how long it holds. */
-export function TicketLine({ ticket, today, photoPath, children }: Props) {
+export function TicketLine({ ticket, today, photoPath, children, below }: Props) {
   const title = ticketTitle(ticket)
   const src = ticket.photoAt ? `${photoPath}?at=${Date.parse(ticket.photoAt)}` : null
   return (
-    <li className="flex gap-3 py-3">
+    <li className="flex flex-wrap gap-x-3 py-3">
       {src ? (
         <CardPhoto key={src} src={src} title={title} />
       ) : (
@@ -87,6 +90,7 @@ export function TicketLine({ ticket, today, photoPath, children }: Props) {
         <TicketTime ticket={ticket} today={today} />
         {children}
       </div>
+      {below ? <div className="mt-2 w-full">{below}</div> : null}
     </li>
   )
 }

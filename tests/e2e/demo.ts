@@ -5,7 +5,7 @@ import { demoPassword } from '../../server/db/demo/demo-people.ts'
 import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
 import { jobs } from '../../server/db/tables/job-tables.ts'
 import { outbox } from '../../server/db/tables/mail-tables.ts'
-import { people } from '../../server/db/tables/people-tables.ts'
+import { crews, people } from '../../server/db/tables/people-tables.ts'
 import { createFakeMailTransport } from '../../fakes/mail/fake-mail-transport.ts'
 import { createMailWorker } from '../../server/mail/mail-worker.ts'
 import { type ServedApp, serveTestApp } from './browser.ts'
@@ -64,6 +64,15 @@ export function dayIdOf(db: Db, number: string, day: string): string {
     .where(eq(bookingDays.bookingId, bookingIdOf(db, number)))
     .all()
   return rows.find((row) => row.day === day)?.id ?? ''
+}
+
+export function personIdOf(db: Db, key: string): string {
+  const { email } = demoSignIn(key)
+  return db.select({ id: people.id }).from(people).where(eq(people.email, email)).get()?.id ?? ''
+}
+
+export function crewIdOf(db: Db, letter: string): string {
+  return db.select({ id: crews.id }).from(crews).where(eq(crews.letter, letter)).get()?.id ?? ''
 }
 
 /** The newest mail. */

@@ -1,6 +1,14 @@
 import type { Page } from '@playwright/test'
 import type { ServedApp } from './browser.ts'
-import { bookingIdOf, dayIdOf, jobIdOf, messageIdOf, taskIdOf } from './demo.ts'
+import {
+  bookingIdOf,
+  crewIdOf,
+  dayIdOf,
+  jobIdOf,
+  messageIdOf,
+  taskIdOf,
+  personIdOf,
+} from './demo.ts'
 
 export type Screen = {
   name: string
@@ -62,16 +70,26 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     office('clashes-none', '/calendar/clashes?q=nothing+like+this'),
     office('booking', `/calendar/bookings/${bookingIdOf(db, 'QR-108')}`),
     office('book', `/calendar/book?job=${octagon}`),
+    office('rain-off', `/calendar/rain-off?day=${today}&days=2`),
+    office('find-days', `/calendar/find-days?job=${octagon}`),
     office('today', '/today'),
     office('messages', '/messages'),
     office('message', `/messages/${messageIdOf(db)}`),
     office('people', '/people'),
+    office('person', `/people/${personIdOf(db, 'bram')}`),
     office('person-new', '/people/new'),
+    office('crew', `/people/crews/${crewIdOf(db, 'B')}`),
     office('firm', '/firm'),
+    office('close-day', `/today/close/${todaysDay}`),
+    office('job-hours', `/jobs/${house}/hours`),
+    office('lost-time', `/jobs/${house}/lost-time`),
+    office('hours', '/hours'),
     office('account', '/account'),
     office('not-found', '/no-such-page'),
     lead('today', '/today'),
     lead('plates', `/today/plates/${todaysDay}`),
+    lead('ask-rain-off', `/today/rain-off?day=${today}`),
+    lead('close-day', `/today/close/${todaysDay}`),
     lead('board', '/board'),
     lead('job', `/jobs/${house}`),
     lead('calendar', '/calendar'),
@@ -80,6 +98,7 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     apprentice('my-tasks', '/my-tasks'),
     apprentice('task', `/my-tasks/${task}`),
     apprentice('today', '/today'),
+    apprentice('account', '/account'),
   ]
 }
 

@@ -12,7 +12,7 @@ import { ErrorState } from '../../ui/states.tsx'
 import { CrewForm } from './crew-form.tsx'
 import { LoanForm } from './loan-form.tsx'
 import { LoanList } from './loan-list.tsx'
-import { PanelSection } from './panel-section.tsx'
+import { PanelParts, PanelSection } from './panel-section.tsx'
 import { peopleQueries } from './people-queries.ts'
 
 type Props = { crew: Crew; crews: Crew[]; people: Person[]; onClose: () => void }
@@ -25,6 +25,12 @@ function spanText({ startsOn, endsOn }: Member, today: string): string {
   return endsOn < today
     ? `${start} to ${dayNear(endsOn, today)}`
     : `until ${dayNear(endsOn, today)}`
+}
+
+/** Leading hands first, then by name. */
+function byRole(a: Member, b: Member): number {
+  const lead = (member: Member) => Number(member.role === 'leading-hand')
+  return lead(b) - lead(a) || a.name.localeCompare(b.name)
 }
 
 function Members({ members, today }: { members: Member[]; today: string }) {
@@ -50,15 +56,15 @@ function Members({ members, today }: { members: Member[]; today: string }) {
 function Parts({ crew, crews, people, seen }: Omit<Props, 'onClose'> & { seen: CrewPeople }) {
   const { firm } = useSession()
   const stays = (member: Member) => member.endsOn === null || member.endsOn >= firm.today
-  const now = seen.members.filter(stays).reverse()
+  const now = seen.members.filter(stays).sort(byRole)
   const past = seen.members.filter((member) => !stays(member))
   const others = people.filter((person) => person.active && person.crewId !== crew.id)
   const loans = seen.loans.map((loan) => ({ ...loan, crewId: crew.id, words: loan.name }))
   return (
     <>
       <PanelSection
-        title="Crew"
-        action="Change"
+        title="In the crew"
+        action="Name and pennant"
         form={(close) => <CrewForm crew={crew} crews={crews} onDone={close} />}
       >
         {now.length === 0 ? (
@@ -95,7 +101,9 @@ export function CrewPanel({ crew, crews, people, onClose }: Props) {
   return (
     <Dialog open onClose={onClose} title={crew.name} place="panel">
       {seen.data ? (
-        <Parts crew={crew} crews={crews} people={people} seen={seen.data} />
+        <PanelParts>
+          <Parts crew={crew} crews={crews} people={people} seen={seen.data} />
+        </PanelParts>
       ) : seen.error ? (
         <ErrorState message={failureText(seen.error) ?? ''} onRetry={() => void seen.refetch()} />
       ) : (

@@ -1,4 +1,5 @@
 import { type FormEvent, useState } from 'react'
+import { isoWeekday } from '../../../shared/calendar/days.ts'
 import { type LeaveKind, leaveKinds } from '../../../shared/people/leave-kinds.ts'
 import { leaveKindNames, weekdayNames } from '../../../shared/people/leave-words.ts'
 import { issueAt } from '../../lib/failure-text.ts'
@@ -58,7 +59,7 @@ export function LeaveForm({ personId, onDone }: Props) {
   const formRef = useFaultFocus(add.error)
   const pickKind = (next: LeaveKind) => {
     setKind(next)
-    if (next === 'trade-school' && weekdays === null) setWeekdays([3])
+    if (next === 'trade-school' && weekdays === null) setWeekdays([isoWeekday(startsOn)])
     if (next !== 'trade-school' && kind === 'trade-school') setWeekdays(null)
   }
   const submit = (event: FormEvent) => {
@@ -99,7 +100,7 @@ export function LeaveForm({ personId, onDone }: Props) {
       <Checkbox
         label="Only some weekdays"
         checked={weekdays !== null}
-        onChange={(event) => setWeekdays(event.target.checked ? [3] : null)}
+        onChange={(event) => setWeekdays(event.target.checked ? [isoWeekday(startsOn)] : null)}
       />
       {weekdays ? (
         <Weekdays value={weekdays} error={issueAt(add.error, 'weekdays')} onChange={setWeekdays} />

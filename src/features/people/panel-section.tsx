@@ -28,7 +28,7 @@ export function PanelSection({ title, action, form, children }: Props) {
             aria-expanded={isOpen}
             onClick={() => setIsOpen(!isOpen)}
           >
-            {isOpen ? 'Leave it' : action}
+            {isOpen ? 'Close' : action}
           </Button>
         ) : null}
       </div>
@@ -38,4 +38,9 @@ export function PanelSection({ title, action, form, children }: Props) {
       {children}
     </section>
   )
+}
+
+/** Parts one under the other; the first without a line over it. */
+export function PanelParts({ children }: { children: ReactNode }) {
+  return <div className="*:first:mt-0 *:first:border-0 *:first:pt-0">{children}</div>
 }

@@ -51,7 +51,7 @@ function Everybody({ people, crews }: { people: Person[]; crews: Crew[] }) {
   )
   return (
     <section>
-      <h2 className="mb-2 text-lg font-extrabold">People</h2>
+      <h2 className="mb-2 text-lg font-extrabold">Everybody</h2>
       <div className="mb-3 grid gap-3 sm:max-w-2xl sm:grid-cols-2">
         <SearchBox label="Find by name or e-mail" maxLength={80} value={q} onChange={setQ} />
         <Field label="Show">

@@ -59,8 +59,14 @@ function History({ person, crews }: Props) {
   )
 }
 
+function sinceText({ memberships, crewId }: PersonDetail, today: string): string {
+  const now = memberships.find((row) => row.crewId === crewId && row.startsOn <= today)
+  return now ? `, since ${dayNear(now.startsOn, today)}` : ''
+}
+
 /** The crew now and next, who it was, and days with another one. */
 export function PersonCrew({ person, crews }: Props) {
+  const { firm } = useSession()
   const others = crews.filter((crew) => crew.active && crew.id !== person.crewId)
   const loans = person.loans.map((loan) => ({
     ...loan,
@@ -75,7 +81,8 @@ export function PersonCrew({ person, crews }: Props) {
         form={(close) => <MoveForm person={person} crews={crews} onDone={close} />}
       >
         <p>
-          Now in <span className="font-semibold">{crewName(crews, person.crewId)}</span>.
+          Now in <span className="font-semibold">{crewName(crews, person.crewId)}</span>
+          {sinceText(person, firm.today)}.
         </p>
         <PlannedMove person={person} crews={crews} />
         <History person={person} crews={crews} />

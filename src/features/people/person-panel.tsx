@@ -6,7 +6,7 @@ import { Badge } from '../../ui/badge.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { PageSkeleton } from '../../ui/skeleton.tsx'
 import { ErrorState } from '../../ui/states.tsx'
-import { PanelSection } from './panel-section.tsx'
+import { PanelParts, PanelSection } from './panel-section.tsx'
 import { peopleQueries } from './people-queries.ts'
 import { PersonCrew } from './person-crew.tsx'
 import { PersonForm } from './person-form.tsx'
@@ -48,13 +48,17 @@ function Details({ person, crews }: { person: PersonDetail; crews: Crew[] }) {
 function Parts({ person, crews }: { person: PersonDetail; crews: Crew[] }) {
   return (
     <>
-      {person.invited && person.active ? <SignInLink person={person} /> : null}
+      {person.invited && person.active ? (
+        <PanelSection title="Link to sign in">
+          <SignInLink person={person} />
+        </PanelSection>
+      ) : null}
       <Details person={person} crews={crews} />
       <PersonTickets person={person} />
       <PersonLeave person={person} />
       <PersonCrew person={person} crews={crews} />
       <PersonHours person={person} />
-      {person.invited ? null : (
+      {person.invited && person.active ? null : (
         <PanelSection title="Link to sign in">
           <SignInLink person={person} />
         </PanelSection>
@@ -69,9 +73,9 @@ export function PersonPanel({ person, crews, onClose }: Props) {
   return (
     <Dialog open onClose={onClose} title={person.name} place="panel">
       {detail.data ? (
-        <div className="-mt-4 first:*:mt-2 first:*:border-0 first:*:pt-0">
+        <PanelParts>
           <Parts person={detail.data} crews={crews} />
-        </div>
+        </PanelParts>
       ) : detail.error ? (
         <ErrorState
           message={failureText(detail.error) ?? ''}

@@ -48,58 +48,64 @@ function Removal({
   )
 }
 
-function TicketActions({
-  personId,
-  ticket,
-  onAsk,
-}: {
-  personId: string
-  ticket: Ticket
-  onAsk: (what: Asking['what']) => void
-}) {
-  const [isEditing, setIsEditing] = useState(false)
+type ItemProps = { personId: string; ticket: Ticket; onAsk: (what: Asking['what']) => void }
+
+function ChangeTicket({ personId, ticket, onAsk, onDone }: ItemProps & { onDone: () => void }) {
+  return (
+    <div className="rounded-md border border-rule bg-paper p-3">
+      <TicketForm key={ticket.version} personId={personId} ticket={ticket} onDone={onDone} />
+      <div className="mt-3 flex flex-wrap gap-2 border-t border-rule pt-3">
+        {ticket.photoAt ? (
+          <Button kind="danger" onClick={() => onAsk('photo')}>
+            Remove the photo
+          </Button>
+        ) : null}
+        <Button kind="danger" onClick={() => onAsk('ticket')}>
+          Remove the ticket
+        </Button>
+      </div>
+    </div>
+  )
+}
+
+function TicketItem({ personId, ticket, onAsk }: ItemProps) {
+  const { firm } = useSession()
+  const [isChanging, setIsChanging] = useState(false)
   const title = ticketTitle(ticket)
   const owned = { personId, ticketId: ticket.id }
   return (
-    <>
+    <TicketLine
+      ticket={ticket}
+      today={firm.today}
+      photoPath={photoPath(owned)}
+      below={
+        isChanging ? (
+          <ChangeTicket
+            personId={personId}
+            ticket={ticket}
+            onAsk={onAsk}
+            onDone={() => setIsChanging(false)}
+          />
+        ) : null
+      }
+    >
       <div className="-ml-2 flex flex-wrap">
         <PhotoButton owned={owned} title={title} hasPhoto={ticket.photoAt !== null} />
         <Button
           kind="quiet"
           className="!px-2"
-          aria-expanded={isEditing}
-          aria-label={isEditing ? `Leave ${title} as it is` : `Change ${title}`}
-          onClick={() => setIsEditing(!isEditing)}
+          aria-expanded={isChanging}
+          aria-label={isChanging ? `Close ${title}` : `Change ${title}`}
+          onClick={() => setIsChanging(!isChanging)}
         >
-          {isEditing ? 'Leave it' : 'Change'}
+          {isChanging ? 'Close' : 'Change'}
         </Button>
       </div>
-      {isEditing ? (
-        <div className="mt-1 rounded-md border border-rule bg-paper p-3">
-          <TicketForm
-            key={ticket.version}
-            personId={personId}
-            ticket={ticket}
-            onDone={() => setIsEditing(false)}
-          />
-          <div className="mt-3 flex flex-wrap gap-2 border-t border-rule pt-3">
-            {ticket.photoAt ? (
-              <Button kind="danger" onClick={() => onAsk('photo')}>
-                Remove the photo
-              </Button>
-            ) : null}
-            <Button kind="danger" onClick={() => onAsk('ticket')}>
-              Remove the ticket
-            </Button>
-          </div>
-        </div>
-      ) : null}
-    </>
+    </TicketLine>
   )
 }
 
 export function PersonTickets({ person }: { person: PersonDetail }) {
-  const { firm } = useSession()
   const [asking, setAsking] = useState<Asking | null>(null)
   return (
     <PanelSection
@@ -110,18 +116,12 @@ export function PersonTickets({ person }: { person: PersonDetail }) {
       {person.tickets.length === 0 ? <p className="text-ink-soft">None kept yet.</p> : null}
       <ul className="divide-y divide-rule">
         {person.tickets.map((ticket) => (
-          <TicketLine
+          <TicketItem
             key={ticket.id}
+            personId={person.id}
             ticket={ticket}
-            today={firm.today}
-            photoPath={photoPath({ personId: person.id, ticketId: ticket.id })}
-          >
-            <TicketActions
-              personId={person.id}
-              ticket={ticket}
-              onAsk={(what) => setAsking({ what, ticket })}
-            />
-          </TicketLine>
+            onAsk={(what) => setAsking({ what, ticket })}
+          />
         ))}
       </ul>
       {asking ? (
