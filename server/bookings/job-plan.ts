@@ -9,7 +9,7 @@ import {
 } from '../../shared/day-plan/day-plan.ts'
 import type { LabourRates } from '../../shared/labour/labour-rates.ts'
 import { workPackagesOf } from '../../shared/labour/work-packages.ts'
-import { packageKeys, type PackageKey } from '../../shared/labour/work-step.ts'
+import { minutesForWork, packageKeys, type PackageKey } from '../../shared/labour/work-step.ts'
 import type { FrameSpec } from '../../shared/roof/roof-types.ts'
 import type { CrewHours } from './crew-hours.ts'
 import type { JobDay, JobTask } from './job-plan-store.ts'
@@ -72,7 +72,8 @@ export function planJob(input: JobPlanInput): JobPlan {
     merge(done, carryOver(there, spec, ticked).done)
   }
   const toPlan = ahead.map(({ row, started: isStarted }): DayToPlan => {
-    const crewMinutes = hours.on(row.crewId, row.day).minutes
+    const { minutes, thereIds } = hours.on(row.crewId, row.day)
+    const crewMinutes = minutesForWork(rates, { minutes, people: thereIds.length })
     if (!isStarted) return { day: row.day, crewMinutes }
     const own = row.revisionId === revisionId ? tasks.filter((t) => t.bookingDayId === row.id) : []
     return { day: row.day, crewMinutes, frozen: { tasks: own.flatMap(asPlanned) } }

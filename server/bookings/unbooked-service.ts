@@ -3,7 +3,7 @@ import type { z } from 'zod'
 import type { unbookedJobsSchema } from '../../shared/bookings/calendar-schemas.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
 import { workPackagesOf } from '../../shared/labour/work-packages.ts'
-import { labourMinutes } from '../../shared/labour/work-step.ts'
+import { labourMinutes, minutesForWork } from '../../shared/labour/work-step.ts'
 import type { Db } from '../db/client.ts'
 import { bookings } from '../db/tables/booking-tables.ts'
 import { jobs, roofRevisions } from '../db/tables/job-tables.ts'
@@ -82,7 +82,9 @@ export function createUnbookedService({ db, clock }: { db: Db; clock: Clock }) {
       const shown = rows.map(({ revisionId, isUnbooked, ...row }) => {
         const work = revisionId === null ? null : (minutes.get(revisionId) ?? null)
         const crewDays = crews.map((crew) => {
-          const there = hours.on(crew.id, today).minutes
+          const { minutes: crewMinutes, thereIds } = hours.on(crew.id, today)
+          const people = thereIds.length
+          const there = minutesForWork(firm.labourRates, { minutes: crewMinutes, people })
           const days = work === null || there === 0 ? null : Math.max(1, Math.ceil(work / there))
           return { crewId: crew.id, days }
         })

@@ -63,12 +63,16 @@ function holidaysOff(row: FirmRow, years: readonly number[]): { day: Day; name: 
 function asFirm(row: FirmRow, years: readonly number[]): Firm {
   const { closedDays, ...rest } = row
   const pieces = { ...defaultLabourRates.pieces, ...row.labourRates.pieces }
+  const packageMinutes = {
+    ...defaultLabourRates.packageMinutes,
+    ...row.labourRates.packageMinutes,
+  }
   return {
     ...rest,
     closedDays: [...closureDays(closedDays), ...holidaysOff(row, years)],
     ownClosedDays: closedDays,
     roofSettings: { ...defaultSettings, ...row.roofSettings },
-    labourRates: { ...defaultLabourRates, ...row.labourRates, pieces },
+    labourRates: { ...defaultLabourRates, ...row.labourRates, pieces, packageMinutes },
   }
 }
 

@@ -1,4 +1,5 @@
 import type { Day } from '../calendar/days.ts'
+import { groupBy } from '../collections/group-by.ts'
 import {
   stepPieces,
   type PackageKey,
@@ -46,7 +47,8 @@ export type DayPlan = {
   spareMinutes: number
 }
 
-type Piece = { step: WorkStep; mark: string | null }
+/** `minutes` are the piece's own and, with the first of a package, those of setting up for it. */
+type Piece = { step: WorkStep; mark: string | null; minutes: number }
 
 /** Minutes are sums of the firm's rates, which need not be whole. */
 const minuteToleranceMin = 1e-6
@@ -85,13 +87,15 @@ export function planDays(input: {
 }
 
 function piecesOf(packages: readonly WorkPackage[]): Piece[] {
-  return packages.flatMap((p) =>
-    p.steps.flatMap((step): Piece[] =>
-      step.memberMarks.length === 0
-        ? [{ step, mark: null }]
-        : step.memberMarks.map((mark) => ({ step, mark })),
-    ),
-  )
+  return packages.flatMap(({ steps, setUpMinutes }) => {
+    const pieces = steps.flatMap((step): Piece[] => {
+      const marks = step.memberMarks.length === 0 ? [null] : step.memberMarks
+      return marks.map((mark) => ({ step, mark, minutes: step.minutesEach }))
+    })
+    return pieces.map((piece, i) =>
+      i === 0 ? { ...piece, minutes: piece.minutes + setUpMinutes } : piece,
+    )
+  })
 }
 
 function takeDay(
@@ -104,26 +108,29 @@ function takeDay(
   let left = minutes
   let count = 0
   for (const piece of queue) {
-    const fits = piece.step.minutesEach <= left + minuteToleranceMin || count === 0
+    const fits = piece.minutes <= left + minuteToleranceMin || count === 0
     if (!fits || (piece.step.work === 'stand' && !cut.has(piece.mark ?? ''))) break
     if (piece.step.work === 'cut' && piece.mark !== null) cut.add(piece.mark)
-    left -= piece.step.minutesEach
+    left -= piece.minutes
     count++
   }
   return queue.slice(0, count)
 }
 
 function tasksOf(pieces: readonly Piece[]): PlannedTask[] {
-  const marksByStep = new Map<WorkStep, string[]>()
-  for (const { step, mark } of pieces) {
-    const marks = marksByStep.get(step) ?? []
-    if (mark !== null) marks.push(mark)
-    marksByStep.set(step, marks)
-  }
-  return [...marksByStep].map(([step, memberMarks]) => {
-    const { minutesEach, ...rest } = step
-    const quantity = stepPieces({ memberMarks })
-    return { ...rest, memberMarks, quantity, plannedMinutes: minutesEach * quantity }
+  const piecesByStep = groupBy(pieces, (piece) => piece.step)
+  return [...piecesByStep].map(([step, own]) => {
+    const { packageKey, work, cutLineMark, title } = step
+    const memberMarks = own.flatMap(({ mark }) => mark ?? [])
+    return {
+      packageKey,
+      work,
+      cutLineMark,
+      title,
+      memberMarks,
+      quantity: stepPieces({ memberMarks }),
+      plannedMinutes: own.reduce((sum, piece) => sum + piece.minutes, 0),
+    }
   })
 }
 

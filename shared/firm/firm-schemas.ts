@@ -38,6 +38,19 @@ export const labourRatesSchema = z.strictObject({
   firstPairMinutes: minutes,
   braceRidgeMinutes: minutes,
   tailLineMinutesPerEaveM: minutes,
+  packageMinutes: z.strictObject({
+    'set-out-plates': minutes,
+    'first-pair': minutes,
+    'cut-commons': minutes,
+    ridge: minutes,
+    'crown-ends': minutes,
+    hips: minutes,
+    'remaining-commons': minutes,
+    creepers: minutes,
+    purlins: minutes,
+    tails: minutes,
+  }),
+  startUpMinutes: minutes.max(240, 'Over four hours is no start to a day.'),
 })
 
 const within = (low: number, high: number, what: string) =>

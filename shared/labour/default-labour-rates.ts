@@ -1,6 +1,23 @@
 import type { LabourRates } from './labour-rates.ts'
 
 /**
+ * The textbook's hours are of whole jobs, setting up counted in, so nothing is added until a firm knows its
+ * own.
+ */
+const noPackageMinutes: LabourRates['packageMinutes'] = {
+  'set-out-plates': 0,
+  'first-pair': 0,
+  'cut-commons': 0,
+  ridge: 0,
+  'crown-ends': 0,
+  hips: 0,
+  'remaining-commons': 0,
+  creepers: 0,
+  purlins: 0,
+  tails: 0,
+}
+
+/**
  * Where a firm starts until its own day logs say better.
  *
  * Minutes a piece are common practice, no source. Those of the rafters and lines together come to the
@@ -29,4 +46,6 @@ export const defaultLabourRates: LabourRates = {
   firstPairMinutes: 15,
   braceRidgeMinutes: 15,
   tailLineMinutesPerEaveM: 3,
+  packageMinutes: noPackageMinutes,
+  startUpMinutes: 0,
 }

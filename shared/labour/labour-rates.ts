@@ -1,4 +1,5 @@
 import type { MemberRole } from '../roof/roof-types.ts'
+import type { PackageKey } from './work-step.ts'
 
 /** Minutes of one person for one piece. */
 export type PieceMinutes = { cutMinutes: number; standMinutes: number }
@@ -15,4 +16,8 @@ export type LabourRates = {
   braceRidgeMinutes: number
   /** Bringing tails and fascia to a line, a metre of eave. */
   tailLineMinutesPerEaveM: number
+  /** Setting up for a package (trestles, saw, ladders), once, whatever its pieces. */
+  packageMinutes: Record<PackageKey, number>
+  /** Of each person at the start of each day (unloading, toolbox talk): not there for the work. */
+  startUpMinutes: number
 }

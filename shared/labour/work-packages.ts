@@ -31,7 +31,7 @@ export function workPackagesOf(spec: FrameSpec, rates: LabourRates): WorkPackage
   const pair = new Set(firstPair(spec))
   const centring = centringCommons(spec)
   const commons = marksOf(spec, 'common')
-  const packages: WorkPackage[] = [
+  const packages: Omit<WorkPackage, 'setUpMinutes'>[] = [
     { key: 'set-out-plates', title: 'Set out the plates', steps: [plateStep(spec, rates)] },
     {
       key: 'first-pair',
@@ -91,7 +91,9 @@ export function workPackagesOf(spec: FrameSpec, rates: LabourRates): WorkPackage
       ],
     },
   ]
-  return packages.filter((p) => p.steps.length > 0)
+  return packages
+    .filter((p) => p.steps.length > 0)
+    .map((p) => ({ ...p, setUpMinutes: rates.packageMinutes[p.key] }))
 }
 
 type StepMaker = {

@@ -28,7 +28,13 @@ export type WorkStep = {
   title: string
 }
 
-export type WorkPackage = { key: PackageKey; title: string; steps: WorkStep[] }
+export type WorkPackage = {
+  key: PackageKey
+  title: string
+  steps: WorkStep[]
+  /** Setting up for it, once; goes with its first piece. */
+  setUpMinutes: number
+}
 
 /** Pieces of a step: its members, or one for set-out work. */
 export function stepPieces(step: Pick<WorkStep, 'memberMarks'>): number {
@@ -37,6 +43,19 @@ export function stepPieces(step: Pick<WorkStep, 'memberMarks'>): number {
 
 /** Minutes of one person for all of it. */
 export function labourMinutes(packages: readonly WorkPackage[]): number {
-  const steps = packages.flatMap((p) => p.steps)
-  return steps.reduce((sum, step) => sum + step.minutesEach * stepPieces(step), 0)
+  return packages.reduce(
+    (sum, { steps, setUpMinutes }) =>
+      sum +
+      setUpMinutes +
+      steps.reduce((own, step) => own + step.minutesEach * stepPieces(step), 0),
+    0,
+  )
+}
+
+/** Minutes of a day that are there for the roof: the crew's, less what each person starts the day with. */
+export function minutesForWork(
+  rates: { startUpMinutes: number },
+  day: { minutes: number; people: number },
+): number {
+  return Math.max(0, day.minutes - rates.startUpMinutes * day.people)
 }

@@ -8,6 +8,7 @@ import {
 } from '../../shared/day-plan/day-plan.ts'
 import {
   labourMinutes,
+  minutesForWork,
   packageKeys,
   type PackageKey,
   type WorkPackage,
@@ -47,13 +48,19 @@ const aJob = fc
     }),
     { minLength: 1, maxLength: 6 },
   )
-  .map((lines): WorkPackage[] => {
+  .chain((lines) => fc.tuple(fc.constant(lines), fc.integer({ min: 0, max: 45 })))
+  .map(([lines, setUpMinutes]): WorkPackage[] => {
     const made = lines.map((l, i) => cutAndStand(`L${i}`, l.pieces, l.cutMinutes, l.standMinutes))
     return [
-      { key: 'set-out-plates', title: 'Set out', steps: [setOut('set-out-plates', 90)] },
-      { key: 'cut-commons', title: 'Cut', steps: made.map((l) => l.cut) },
-      { key: 'hips', title: 'Stand', steps: made.map((l) => l.stand) },
-      { key: 'tails', title: 'Tails', steps: [setOut('tails', 120)] },
+      {
+        key: 'set-out-plates',
+        title: 'Set out',
+        steps: [setOut('set-out-plates', 90)],
+        setUpMinutes,
+      },
+      { key: 'cut-commons', title: 'Cut', steps: made.map((l) => l.cut), setUpMinutes },
+      { key: 'hips', title: 'Stand', steps: made.map((l) => l.stand), setUpMinutes },
+      { key: 'tails', title: 'Tails', steps: [setOut('tails', 120)], setUpMinutes },
     ]
   })
 
@@ -180,8 +187,8 @@ describe('a day plan of any job over any days', () => {
 
 const { cut, stand } = cutAndStand('C1', 10, 30, 10)
 const smallJob: WorkPackage[] = [
-  { key: 'cut-commons', title: 'Cut', steps: [cut] },
-  { key: 'hips', title: 'Stand', steps: [stand] },
+  { key: 'cut-commons', title: 'Cut', steps: [cut], setUpMinutes: 0 },
+  { key: 'hips', title: 'Stand', steps: [stand], setUpMinutes: 0 },
 ]
 
 test('a line that does not fit is split over two days by pieces', () => {
@@ -229,4 +236,31 @@ test('the keys of packages stand in the order crews work', () => {
   expect(packageKeys.indexOf('first-pair')).toBeLessThan(packageKeys.indexOf('cut-commons'))
   expect(packageKeys.indexOf('ridge')).toBeLessThan(packageKeys.indexOf('hips'))
   expect(packageKeys.at(-1)).toBe('tails')
+})
+
+test('setting up for a package takes its minutes once, on the day its first piece is taken', () => {
+  const [cutting, standing] = smallJob as [WorkPackage, WorkPackage]
+  const packages = [
+    { ...cutting, setUpMinutes: 20 },
+    { ...standing, setUpMinutes: 40 },
+  ]
+  // By hand: 20 + 10 × 30 of cutting and 40 + 10 × 10 of standing make 460.
+  const plan = planDays({
+    packages,
+    days: [
+      { day: '2026-12-07', crewMinutes: 170 },
+      { day: '2026-12-08', crewMinutes: 290 },
+      { day: '2026-12-09', crewMinutes: 60 },
+    ],
+  })
+  expect(plan.days.map((day) => day.plannedMinutes)).toEqual([170, 290, 0])
+  expect(plan.days[0]?.tasks[0]).toMatchObject({ quantity: 5, plannedMinutes: 170 })
+  expect(plan.days[1]?.tasks.map((task) => task.plannedMinutes)).toEqual([150, 140])
+  expect(labourMinutes(packages)).toBe(460)
+})
+
+test('what each person starts the day with is not there for the roof, and never makes less than nothing', () => {
+  expect(minutesForWork({ startUpMinutes: 0 }, { minutes: 960, people: 2 })).toBe(960)
+  expect(minutesForWork({ startUpMinutes: 20 }, { minutes: 960, people: 2 })).toBe(920)
+  expect(minutesForWork({ startUpMinutes: 60 }, { minutes: 30, people: 1 })).toBe(0)
 })

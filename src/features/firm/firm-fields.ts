@@ -46,7 +46,9 @@ export const roofFields: NumberField<keyof FirmSettings['roofSettings']>[] = [
   { key: 'roundDeg', label: 'Bevels are marked to', unit: '°' },
 ]
 
-export const labourFields: NumberField<Exclude<keyof FirmSettings['labourRates'], 'pieces'>>[] = [
+export const labourFields: NumberField<
+  Exclude<keyof FirmSettings['labourRates'], 'pieces' | 'packageMinutes' | 'startUpMinutes'>
+>[] = [
   { key: 'setOutMinutes', label: 'Check and set out plates, once', unit: 'min' },
   { key: 'setOutMinutesPerPlateM', label: 'and for each metre of plate', unit: 'min' },
   { key: 'firstPairMinutes', label: 'Cut and try the first pair', unit: 'min' },

@@ -1,9 +1,18 @@
+import type { ReactNode } from 'react'
 import type { FirmSettings } from '../../../shared/firm/firm-schemas.ts'
+import { defaultLabourRates as standard } from '../../../shared/labour/default-labour-rates.ts'
+import {
+  type LabourSource,
+  labourSourceNotes,
+  pieceSource,
+} from '../../../shared/labour/labour-sources.ts'
+import { packagesInWords } from '../../../shared/labour/package-words.ts'
+import { packageKeys } from '../../../shared/labour/work-step.ts'
 import { roleWords } from '../../../shared/marking/role-words.ts'
 import type { MemberRole } from '../../../shared/roof/roof-types.ts'
 import { Card } from '../../ui/card.tsx'
-import { labourFields } from './firm-fields.ts'
-import { NumberInput } from './number-input.tsx'
+import { gridClass, labourFields } from './firm-fields.ts'
+import { LabourNumber } from './labour-number.tsx'
 
 type Rates = FirmSettings['labourRates']
 type Props = {
@@ -12,52 +21,113 @@ type Props = {
   issueAt: (path: string) => string | undefined
 }
 
-/** Minutes a piece; where the first figures come from stands with them. */
-export function LabourSection({ rates, onChange, issueAt }: Props) {
-  const setPiece = (role: MemberRole, key: 'cutMinutes' | 'standMinutes') => (value: number) =>
-    onChange({
-      ...rates,
-      pieces: { ...rates.pieces, [role]: { ...rates.pieces[role], [key]: value } },
-    })
+const rolesWith = (source: LabourSource) =>
+  (Object.keys(roleWords) as MemberRole[]).filter((role) => pieceSource(role) === source)
+
+function Group({ title, note, children }: { title: string; note: string; children: ReactNode }) {
+  return (
+    <section className="mt-5">
+      <h3 className="font-extrabold">{title}</h3>
+      <p className="mb-3 max-w-prose text-sm text-ink-soft">{note}</p>
+      {children}
+    </section>
+  )
+}
+
+function Pieces({ rates, onChange, issueAt, roles }: Props & { roles: MemberRole[] }) {
+  const kinds = [
+    ['cutMinutes', 'Cut'],
+    ['standMinutes', 'Stand'],
+  ] as const
+  return (
+    <div className="grid gap-x-6 gap-y-4 sm:grid-cols-2 xl:grid-cols-3">
+      {roles.map((role) => (
+        <fieldset key={role} className="grid grid-cols-2 items-start gap-2">
+          <legend className="mb-1 font-extrabold">{roleWords[role]}</legend>
+          {kinds.map(([key, label]) => (
+            <LabourNumber
+              key={key}
+              label={label}
+              of={roleWords[role]}
+              value={rates.pieces[role][key]}
+              standard={standard.pieces[role][key]}
+              source={pieceSource(role)}
+              onChange={(value) =>
+                onChange({
+                  ...rates,
+                  pieces: { ...rates.pieces, [role]: { ...rates.pieces[role], [key]: value } },
+                })
+              }
+              error={issueAt(`labourRates.pieces.${role}.${key}`)}
+            />
+          ))}
+        </fieldset>
+      ))}
+    </div>
+  )
+}
+
+function Packages({ rates, onChange, issueAt }: Props) {
+  return (
+    <div className={gridClass}>
+      <LabourNumber
+        label="Each person, each day’s start"
+        value={rates.startUpMinutes}
+        standard={standard.startUpMinutes}
+        source="none-added"
+        onChange={(startUpMinutes) => onChange({ ...rates, startUpMinutes })}
+        error={issueAt('labourRates.startUpMinutes')}
+      />
+      {packageKeys.map((key) => (
+        <LabourNumber
+          key={key}
+          label={`Set up for ${packagesInWords([key]).toLowerCase()}`}
+          value={rates.packageMinutes[key]}
+          standard={standard.packageMinutes[key]}
+          source="none-added"
+          onChange={(value) =>
+            onChange({ ...rates, packageMinutes: { ...rates.packageMinutes, [key]: value } })
+          }
+          error={issueAt(`labourRates.packageMinutes.${key}`)}
+        />
+      ))}
+    </div>
+  )
+}
+
+/** Minutes of one person; where the first figures come from stands with them. */
+export function LabourSection(props: Props) {
+  const { rates, onChange, issueAt } = props
   return (
     <Card>
       <h2 className="text-lg font-extrabold">Labour</h2>
-      <p className="mb-3 max-w-prose text-ink-soft">
-        Minutes of one person for one piece. The first figures are common practice, no source;
-        correct them from your own days.
+      <p className="max-w-prose text-ink-soft">
+        Minutes of one person. A job’s hours, planned and logged, show how near they are.
       </p>
-      <div className="grid gap-x-6 gap-y-3 sm:grid-cols-2 xl:grid-cols-3">
-        {(Object.keys(roleWords) as MemberRole[]).map((role) => (
-          <fieldset key={role} className="grid grid-cols-2 gap-2">
-            <legend className="mb-1 font-extrabold">{roleWords[role]}</legend>
-            <NumberInput
-              label="Cut"
-              unit="min"
-              value={rates.pieces[role].cutMinutes}
-              onChange={setPiece(role, 'cutMinutes')}
-              error={issueAt(`labourRates.pieces.${role}.cutMinutes`)}
+      <Group title="Rafters and lines, each piece" note={labourSourceNotes.textbook}>
+        <Pieces {...props} roles={rolesWith('textbook')} />
+      </Group>
+      <Group title="Purlins, ties and trim, each piece" note={labourSourceNotes.practice}>
+        <Pieces {...props} roles={rolesWith('practice')} />
+      </Group>
+      <Group title="Setting out, trying, bracing" note={labourSourceNotes.practice}>
+        <div className={gridClass}>
+          {labourFields.map(({ key, label }) => (
+            <LabourNumber
+              key={key}
+              label={label}
+              value={rates[key]}
+              standard={standard[key]}
+              source="practice"
+              onChange={(value) => onChange({ ...rates, [key]: value })}
+              error={issueAt(`labourRates.${key}`)}
             />
-            <NumberInput
-              label="Stand"
-              unit="min"
-              value={rates.pieces[role].standMinutes}
-              onChange={setPiece(role, 'standMinutes')}
-              error={issueAt(`labourRates.pieces.${role}.standMinutes`)}
-            />
-          </fieldset>
-        ))}
-      </div>
-      <div className="mt-4 grid gap-3 sm:grid-cols-2 xl:grid-cols-3">
-        {labourFields.map(({ key, ...field }) => (
-          <NumberInput
-            key={key}
-            {...field}
-            value={rates[key]}
-            onChange={(value) => onChange({ ...rates, [key]: value })}
-            error={issueAt(`labourRates.${key}`)}
-          />
-        ))}
-      </div>
+          ))}
+        </div>
+      </Group>
+      <Group title="Set-ups" note={labourSourceNotes['none-added']}>
+        <Packages {...props} />
+      </Group>
     </Card>
   )
 }
