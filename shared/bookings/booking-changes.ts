@@ -6,7 +6,7 @@ import { idSchema } from '../http/fields.ts'
 export const mostChangesAtOnce = 200
 
 /** One booking of several that change together; see `changeBookingSchema`. */
-export const oneOfChangesSchema = changeBookingSchema.omit({ move: true }).extend({
+export const oneOfChangesSchema = changeBookingSchema.extend({
   bookingId: idSchema,
   /** true takes it off the calendar, false puts it back. */
   cancelled: z.boolean().optional(),

@@ -7,7 +7,8 @@ import {
 } from '../../shared/bookings/calendar-schemas.ts'
 import { audit } from '../../server/db/tables/audit-tables.ts'
 import { bookings, tasks } from '../../server/db/tables/booking-tables.ts'
-import { daysBackTo } from '../../src/features/calendar/days-back.ts'
+import { partOf, stepOf } from '../../src/features/calendar/booking-steps.ts'
+import { bodyOf } from '../../src/features/calendar/step-bodies.ts'
 import { bookingFirm, daysOf, fri, mon, sat, thu, tue, wed } from './booking-kit.ts'
 
 type Firm = Awaited<ReturnType<typeof bookingFirm>>
@@ -106,8 +107,10 @@ test('a day dragged off one that two jobs share on purpose goes back there by Un
   expect(before.clashReason).toBe('Same street')
   const dragged = await change(firm, before, { move: { from: mon, to: fri } }).expect(200)
   expect(dragged.body).toMatchObject({ allDays: [thu, fri], clashReason: null })
-  const back = await change(firm, dragged.body, daysBackTo(before)).expect(200)
-  expect(back.body).toMatchObject({ allDays: [thu, mon], clashReason: 'Same street' })
+  const step = stepOf('Creek shed moved', partOf(before, { days: [thu, fri], clashReason: null }))
+  const undo = bodyOf(step, 'back', { versionOf: () => dragged.body.version, said: null })
+  const back = await firm.officeAgent.post('/api/bookings/changes').send(undo).expect(200)
+  expect(back.body.bookings[0]).toMatchObject({ allDays: [thu, mon], clashReason: 'Same street' })
 })
 
 test('moving onto a day not worked is refused until it is said on purpose', async () => {

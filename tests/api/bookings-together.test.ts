@@ -140,6 +140,15 @@ test('a worked day stays in a change of several as in a change of one', async ()
   await send(firm, { changes: [of(hill, { cancelled: true })] }).expect(409)
 })
 
+test('one of several may be moved from a day on, laid by the server over days off', async () => {
+  const firm = await bookingFirm()
+  const hill = await firm.booked({ days: [thu, fri] })
+  const answer = await send(firm, {
+    changes: [of(hill, { move: { from: thu, to: fri } })],
+  }).expect(200)
+  expect(daysOf(answer.body.bookings[0])).toEqual([fri, mon])
+})
+
 test('the same send again makes no second booking', async () => {
   const firm = await bookingFirm()
   const one = {

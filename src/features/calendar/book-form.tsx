@@ -1,7 +1,6 @@
 import { type FormEvent, useState } from 'react'
 import type { CalendarCrew, UnbookedJob } from '../../../shared/bookings/calendar-schemas.ts'
 import type { BookingState } from '../../../shared/bookings/booking-schemas.ts'
-import { formatDay } from '../../../shared/calendar/days.ts'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
 import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
@@ -9,10 +8,11 @@ import { Field } from '../../ui/field.tsx'
 import { Select, TextInput } from '../../ui/inputs.tsx'
 import { useToast } from '../../ui/toast.tsx'
 import { BookingFields, CrewField } from './booking-fields.tsx'
-import { conflictOf, useCancelBooking, useCreateBooking } from './calendar-queries.ts'
+import { useBookingMoves } from './booking-moves-context.ts'
+import { bookedStep } from './booking-steps.ts'
+import { conflictOf, useCreateBooking } from './calendar-queries.ts'
 import { ClashAnswer, type OnPurpose } from './clash-answer.tsx'
 import { FormFailure, issuesOf } from './form-failure.tsx'
-import { useUndoing } from './use-undoing.ts'
 import { workWords } from './work-words.ts'
 
 type Props = {
@@ -25,9 +25,8 @@ type Props = {
 
 function useBookForm({ jobs, crews, jobId, day, onDone }: Props) {
   const toast = useToast()
-  const undoing = useUndoing()
+  const moves = useBookingMoves()
   const create = useCreateBooking()
-  const cancel = useCancelBooking()
   const [clientId] = useState(() => crypto.randomUUID())
   const [form, setForm] = useState({
     jobId: jobId || (jobs[0]?.id ?? ''),
@@ -54,12 +53,9 @@ function useBookForm({ jobs, crews, jobId, day, onDone }: Props) {
       },
       {
         onSuccess: (booking) => {
-          const back = { id: booking.id, version: booking.version }
-          const undo = undoing(() => cancel.mutateAsync(back))
-          const days = booking.days.length === 1 ? '1 day' : `${booking.days.length} days`
-          toast(`Booked: ${booking.crew.name}, ${days} from ${formatDay(booking.firstDay)}.`, {
-            undo,
-          })
+          const step = bookedStep(booking)
+          moves.record(step)
+          toast(`${step.words}.`, { undo: () => moves.undo(step.id) })
           onDone()
         },
       },

@@ -1,38 +1,21 @@
 import { useQuery } from '@tanstack/react-query'
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { Note } from '../../ui/states.tsx'
 import { BookingFields, CrewField } from './booking-fields.tsx'
-import { calendarQueries, conflictOf } from './calendar-queries.ts'
-import { ClashAnswer } from './clash-answer.tsx'
+import { calendarQueries } from './calendar-queries.ts'
 import { DaysEditor } from './days-editor.tsx'
 import { FormFailure, issuesOf } from './form-failure.tsx'
-import {
-  type BookingChange,
-  type BookingEditProps,
-  inputOf,
-  useBookingEdit,
-} from './use-booking-edit.ts'
+import { type BookingEditProps, sideOfDraft, useBookingEdit } from './use-booking-edit.ts'
 
 type Edit = ReturnType<typeof useBookingEdit>
 
 function RestoreBooking({ edit }: { edit: Edit }) {
-  const { restore, bringBack } = edit
-  const conflict = conflictOf(restore.error)
-  if (conflict)
-    return (
-      <ClashAnswer
-        conflict={conflict}
-        busy={restore.isPending}
-        onAnswer={bringBack}
-        onBack={() => restore.reset()}
-      />
-    )
   return (
     <div className="space-y-3">
-      <FormFailure error={restore.error} />
-      <Button busy={restore.isPending} onClick={() => bringBack()}>
+      <FormFailure error={edit.failure} />
+      <Button busy={edit.isPending} onClick={edit.bringBack}>
         Restore the booking
       </Button>
     </div>
@@ -53,30 +36,15 @@ function ChangedMeanwhile({ onRestart }: { onRestart: () => void }) {
 export function BookingEditor(props: BookingEditProps) {
   const { booking } = props
   const edit = useBookingEdit(props)
-  const { base, draft, setDraft, send, change, cancel } = edit
-  const [asked, setAsked] = useState<BookingChange>({})
+  const { base, draft, setDraft, failure, isPending } = edit
   const { data } = useQuery(calendarQueries.unbooked())
-  const formRef = useFaultFocus(change.error)
+  const formRef = useFaultFocus(failure)
   if (booking.cancelled) return <RestoreBooking edit={edit} />
-  const ask = (input: BookingChange) => {
-    setAsked(input)
-    send(input)
-  }
-  const conflict = conflictOf(change.error)
-  if (conflict)
-    return (
-      <ClashAnswer
-        conflict={conflict}
-        busy={change.isPending}
-        onAnswer={(said) => ask({ ...asked, ...said })}
-        onBack={() => change.reset()}
-      />
-    )
-  const issueAt = issuesOf(change.error)
+  const issueAt = issuesOf(failure)
   const set = (changes: Partial<typeof draft>) => setDraft({ ...draft, ...changes })
   const submit = (event: FormEvent) => {
     event.preventDefault()
-    ask(inputOf(draft))
+    edit.save(sideOfDraft(draft))
   }
   return (
     <section aria-labelledby="booking-change" className="space-y-4">
@@ -91,7 +59,7 @@ export function BookingEditor(props: BookingEditProps) {
           days={draft.days}
           worked={booking.days.filter((d) => d.worked).map((d) => d.day)}
           onChange={(days) => set({ days })}
-          onMove={(move) => ask({ move })}
+          onMove={edit.move}
         />
         <CrewField
           crews={data?.crews ?? [booking.crew]}
@@ -100,12 +68,12 @@ export function BookingEditor(props: BookingEditProps) {
           error={issueAt('crewId')}
         />
         <BookingFields values={draft} onChange={set} issueAt={issueAt} />
-        <FormFailure error={change.error ?? cancel.error} />
+        <FormFailure error={failure} />
         <div className="flex flex-wrap gap-2">
-          <Button type="submit" busy={change.isPending}>
+          <Button type="submit" busy={isPending}>
             Save
           </Button>
-          <Button kind="danger" busy={cancel.isPending} onClick={edit.drop}>
+          <Button kind="danger" busy={isPending} onClick={edit.drop}>
             Cancel the booking
           </Button>
         </div>

@@ -4,6 +4,8 @@ import type { BookingStep } from './booking-steps.ts'
 export type MakeOptions = {
   /** Called once it stands. */
   onDone?: () => void
+  /** Told of a refusal that asks nothing, instead of a notice on the page. */
+  onFailed?: (error: unknown) => void
   /** Offered beside the answers when the days are taken. */
   otherWay?: { label: string; step: BookingStep } | undefined
 }

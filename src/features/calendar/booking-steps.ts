@@ -1,7 +1,7 @@
 import type { OneOfChanges } from '../../../shared/bookings/booking-changes.ts'
 import type { BookingState, CreateBooking } from '../../../shared/bookings/booking-schemas.ts'
 import type { Booking, CalendarBooking } from '../../../shared/bookings/calendar-schemas.ts'
-import type { Day } from '../../../shared/calendar/days.ts'
+import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import type { OnPurpose } from './clash-answer.tsx'
 
 /** How a booking stands before or after a step; start and gear only where the step is about them. */
@@ -24,6 +24,8 @@ export type StepPart = {
   after: BookingSide
   /** Set until the booking has been made. */
   create?: CreateBooking
+  /** Instead of the days on the way on: the server, which knows every day off, lays them. */
+  move?: { from: Day; to: Day }
 }
 
 /** Something done to one or more bookings at once, in a sentence, with both its sides. */
@@ -76,7 +78,8 @@ export function differenceOf(
 /** Nothing would change. */
 export const isIdle = (step: BookingStep): boolean =>
   step.parts.every(
-    (part) => !part.create && Object.keys(differenceOf(part.before, part.after)).length === 0,
+    (part) =>
+      !part.create && !part.move && Object.keys(differenceOf(part.before, part.after)).length === 0,
   )
 
 /**
@@ -94,9 +97,14 @@ export function changeTo(
     bookingId: part.id,
     version: given.version,
     ...rest,
-    ...(days ? { days: [...days] } : {}),
+    ...daysToSend(direction === 'on' ? part.move : undefined, days),
     ...given.said,
   }
+}
+
+function daysToSend(move: StepPart['move'], days: readonly Day[] | undefined) {
+  if (move) return { move }
+  return days ? { days: [...days] } : {}
 }
 
 /** What was said on purpose on the side that a step goes to. */
@@ -118,4 +126,15 @@ export function rebased(step: BookingStep, current: Booking): BookingStep {
       return { ...part, version: current.version, before, after }
     }),
   }
+}
+
+/** A booking just made, as a step that can be taken back. */
+export function bookedStep(booking: Booking): BookingStep {
+  const { dayCount, crew, firstDay } = booking
+  const days = dayCount === 1 ? '1 day' : `${dayCount} days`
+  const part = partOf(booking, {})
+  return stepOf(`Booked: ${crew.name}, ${days} from ${formatDay(firstDay)}`, {
+    ...part,
+    before: { ...part.before, cancelled: true },
+  })
 }

@@ -1,22 +1,17 @@
 import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
 import type { z } from 'zod'
 import {
-  type changeBookingSchema,
   type createBookingSchema,
   bookingConflictSchema,
   type BookingConflict,
-  type restoreBookingSchema,
 } from '../../../shared/bookings/booking-schemas.ts'
 import {
   type Booking,
   bookingSchema,
-  type Calendar,
-  type CalendarBooking,
   calendarSchema,
   unbookedJobsSchema,
 } from '../../../shared/bookings/calendar-schemas.ts'
 import { landingsSchema } from '../../../shared/clashes/clash-schemas.ts'
-import { movedDays } from '../../../shared/bookings/move-days.ts'
 import type { Day } from '../../../shared/calendar/days.ts'
 import { api, ApiFailure } from '../../lib/api-client.ts'
 
@@ -83,62 +78,6 @@ export function useCreateBooking() {
   return useMutation({
     mutationFn: (input: z.input<typeof createBookingSchema>) =>
       api.post('/api/bookings', bookingSchema, input),
-    onSuccess: (booking) => refresh(booking),
-  })
-}
-
-export type ChangeInput = { id: string } & z.input<typeof changeBookingSchema>
-
-/** The span as it will be, so that a dragged day stays where it was dropped while the server decides. */
-function withMove(calendar: Calendar, id: string, move: { from: Day; to: Day }): Calendar {
-  const moveBooking = (booking: CalendarBooking): CalendarBooking => {
-    if (booking.id !== id) return booking
-    const worked = new Set(booking.days.filter((d) => d.worked).map((d) => d.day))
-    const before = booking.allDays
-    const after = movedDays(calendar, before, worked, move)
-    const gone = before.filter((day) => !after.includes(day))
-    const fresh = after.filter((day) => !before.includes(day))
-    const days = booking.days.map((d) => ({ ...d, day: fresh[gone.indexOf(d.day)] ?? d.day }))
-    return { ...booking, allDays: after, days: days.sort((a, b) => (a.day < b.day ? -1 : 1)) }
-  }
-  return { ...calendar, bookings: calendar.bookings.map(moveBooking) }
-}
-
-export function useChangeBooking() {
-  const client = useQueryClient()
-  const refresh = useRefresh()
-  return useMutation({
-    mutationFn: ({ id, ...input }: ChangeInput) =>
-      api.patch(`/api/bookings/${encodeURIComponent(id)}`, bookingSchema, input),
-    onMutate: async ({ id, move }) => {
-      if (!move) return { before: [] }
-      const filter = { queryKey: calendarQueries.spans() }
-      await client.cancelQueries(filter)
-      const before = client.getQueriesData<Calendar>(filter)
-      client.setQueriesData<Calendar>(filter, (old) => (old ? withMove(old, id, move) : old))
-      return { before }
-    },
-    onError: (_error, _input, context) => {
-      for (const [key, data] of context?.before ?? []) client.setQueryData(key, data)
-    },
-    onSuccess: (booking) => refresh(booking),
-  })
-}
-
-export function useCancelBooking() {
-  const refresh = useRefresh()
-  return useMutation({
-    mutationFn: ({ id, version }: { id: string; version: number }) =>
-      api.post(`/api/bookings/${encodeURIComponent(id)}/cancel`, bookingSchema, { version }),
-    onSuccess: (booking) => refresh(booking),
-  })
-}
-
-export function useRestoreBooking() {
-  const refresh = useRefresh()
-  return useMutation({
-    mutationFn: ({ id, ...input }: { id: string } & z.input<typeof restoreBookingSchema>) =>
-      api.post(`/api/bookings/${encodeURIComponent(id)}/restore`, bookingSchema, input),
     onSuccess: (booking) => refresh(booking),
   })
 }

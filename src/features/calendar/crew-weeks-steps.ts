@@ -42,7 +42,9 @@ export function moveStep(
   const { days: before, worked } = placeOf(booking)
   const days = movedDays(calendar, before, worked, move)
   const crewId = move.crewId ?? booking.crew.id
-  return placeStep(calendar, booking, { crewId, days, first: move.to })
+  const step = placeStep(calendar, booking, { crewId, days, first: move.to })
+  const { from, to } = move
+  return { ...step, parts: step.parts.map((part) => ({ ...part, move: { from, to } })) }
 }
 
 /** One end of a run a working day further out or in; null when nothing of it would be left. */

@@ -45,8 +45,10 @@ function useCrewWeeks({ calendar }: Props) {
       moves.make(step, options)
     },
   })
-  const open = (bar: Bar, anchor: HTMLElement) =>
+  const open = (bar: Bar, anchor: HTMLElement) => {
+    focus.keep(bar.booking.id)
     setOpened({ bookingId: bar.booking.id, stretch: bar.stretch, anchor })
+  }
   const press = (bar: Bar, event: KeyboardEvent<HTMLElement>, mayEdit: boolean) => {
     if (dragging.drag) return
     const by = { ArrowRight: 1, ArrowLeft: -1 } as const

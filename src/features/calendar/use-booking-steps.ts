@@ -99,7 +99,8 @@ function useSteps() {
       } catch (error) {
         const asked = questionOf(error, step, options)
         setQuestion(asked)
-        if (!asked) toast(wordsOf(error), { kind: 'stop' })
+        if (!asked && options.onFailed) options.onFailed(error)
+        else if (!asked) toast(wordsOf(error), { kind: 'stop' })
         return false
       }
     })
