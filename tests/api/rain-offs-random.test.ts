@@ -51,7 +51,7 @@ function lay(firm: Firm, random: RandomFirm): void {
   const { db, clock } = firm.app
   for (const table of [rainOffs, ticks, tasks, bookingDays, bookings, leave]) db.delete(table).run()
   const closedDays = random.closedDays.map((day) => ({ day, name: 'Closed' }))
-  const { workingWeekdays } = random
+  const workingWeekdays = [...random.workingWeekdays]
   db.update(firmTable).set({ closedDays, workingWeekdays }).run()
   if (random.leadAway) {
     const on = { startsOn: random.leadAway, endsOn: random.leadAway }

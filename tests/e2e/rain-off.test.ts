@@ -18,10 +18,11 @@ test('a leading hand asks from Today, the office sees it at once, looks, moves t
       .all()
       .map((row) => row.day)
       .sort()
-  const office = await visit(browser, app.url, demoSignIn('marnie'))
-  await office.goto('/calendar')
-  const lead = await visit(browser, app.url, demoSignIn('corin'), { viewport: phone, touch: true })
-  await lead.goto('/today?day=2026-12-03')
+  const [office, lead] = await Promise.all([
+    visit(browser, app.url, demoSignIn('marnie')),
+    visit(browser, app.url, demoSignIn('corin'), { viewport: phone, touch: true }),
+  ])
+  await Promise.all([office.goto('/calendar'), lead.goto('/today?day=2026-12-03')])
   await lead.page.getByRole('link', { name: 'Ask for a rain-off' }).click()
   await lead.page.getByLabel('What it is like').fill('Plates under water')
   await lead.page.getByRole('button', { name: 'Ask the office' }).click()
