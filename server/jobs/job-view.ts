@@ -53,7 +53,18 @@ export function jobCard(viewer: Viewer, stage: JobStage, job: JobRow, related: R
     number: job.number,
     title: job.title,
     siteAddress: job.siteAddress,
+    version: job.version,
     stage,
+    ...(roleMay(viewer.user.role, 'price:read')
+      ? {
+          priceCents: job.priceCents,
+          facts: {
+            priceSentOn: job.priceSentOn,
+            acceptedOn: job.acceptedOn,
+            completedOn: job.completedOn,
+          },
+        }
+      : {}),
     wantedBy: job.wantedBy,
     glyph: latest?.glyph ?? null,
     latestLetter: latest?.letter ?? null,

@@ -49,8 +49,19 @@ export const jobCardSchema = z.object({
   number: z.string(),
   title: z.string(),
   siteAddress: z.string(),
+  version: z.number(),
   stage: z.enum(jobStages),
   wantedBy: z.string().nullable(),
+  /** Only for who may see prices. */
+  priceCents: z.number().nullable().optional(),
+  /** The days the office has set; only for who may see prices. */
+  facts: z
+    .object({
+      priceSentOn: z.string().nullable(),
+      acceptedOn: z.string().nullable(),
+      completedOn: z.string().nullable(),
+    })
+    .optional(),
   glyph: glyphSchema.nullable(),
   latestLetter: z.string().nullable(),
   /** Only for who may write roofs. */

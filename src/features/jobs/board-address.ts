@@ -6,6 +6,9 @@ function stageOf(text: string | null): JobStage | null {
   return jobStages.find((stage) => stage === text) ?? null
 }
 
+/** Columns by stage, or one table. */
+export type BoardView = 'stages' | 'table'
+
 /** The board's search and filters live in the address, so that a view can be kept and sent. */
 export function useBoardAddress() {
   const [params, setParams] = useSearchParams()
@@ -14,8 +17,16 @@ export function useBoardAddress() {
     stage: stageOf(params.get('stage')),
     crew: params.get('crew'),
   }
-  const change = (next: Partial<BoardFilter>) => {
-    const merged = { ...filter, ...next }
+  const view: BoardView = params.get('view') === 'table' ? 'table' : 'stages'
+  const sort = params.get('sort') ?? ''
+  const change = (next: Partial<BoardFilter & { view: BoardView; sort: string }>) => {
+    const { view: nextView = view, sort: nextSort = sort, ...rest } = next
+    const merged = {
+      ...filter,
+      ...rest,
+      view: nextView === 'table' ? 'table' : null,
+      sort: nextSort,
+    }
     const entries = Object.entries(merged).filter((entry): entry is [string, string] =>
       Boolean(entry[1]),
     )
@@ -23,5 +34,5 @@ export function useBoardAddress() {
     setParams(entries, { replace: true, flushSync: true })
   }
   const isFiltered = filter.q !== '' || filter.stage !== null || filter.crew !== null
-  return { filter, change, isFiltered }
+  return { filter, view, sort, change, isFiltered }
 }

@@ -2,7 +2,9 @@ import { ChevronDown, ChevronRight } from 'lucide-react'
 import { useState } from 'react'
 import { type JobStage, jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
 import type { Board, JobCard as Card } from '../../../shared/jobs/job-views.ts'
+import { useMay } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
+import { BoardDrag, DraggableCard, useStagePlace } from './board-drag.tsx'
 import { JobCard } from './job-card.tsx'
 
 type ColumnProps = { stage: JobStage; cards: Card[]; count: number; onShowAll: () => void }
@@ -20,9 +22,14 @@ function Heading({ stage, count }: { stage: JobStage; count: number }) {
 function StageColumn({ stage, cards, count, onShowAll }: ColumnProps) {
   const [open, setOpen] = useState(stage !== 'complete')
   const Chevron = open ? ChevronDown : ChevronRight
+  const mayWrite = useMay('job:write')
+  const { setNodeRef, isOver } = useStagePlace(stage)
   const width = count === 0 ? 'hidden lg:flex lg:w-24' : 'flex lg:w-36 lg:grow'
   return (
-    <section className={`${width} min-h-0 shrink-0 flex-col`}>
+    <section
+      ref={setNodeRef}
+      className={`${width} min-h-0 shrink-0 flex-col rounded-md ${isOver ? 'outline-2 outline-clay' : ''}`}
+    >
       <h2 className="text-lg font-extrabold">
         <span className="hidden items-baseline justify-between gap-2 border-b-2 border-ink pb-1 lg:flex">
           <Heading stage={stage} count={count} />
@@ -43,7 +50,7 @@ function StageColumn({ stage, cards, count, onShowAll }: ColumnProps) {
       >
         {cards.map((card) => (
           <li key={card.id}>
-            <JobCard card={card} />
+            {mayWrite ? <DraggableCard card={card} /> : <JobCard card={card} />}
           </li>
         ))}
         {count > cards.length ? (
@@ -67,16 +74,18 @@ export function BoardColumns({
   onShowStage: (stage: JobStage) => void
 }) {
   return (
-    <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-14.25rem)] lg:min-h-96 lg:gap-2 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
-      {jobStages.map((stage) => (
-        <StageColumn
-          key={stage}
-          stage={stage}
-          count={board.counts[stage]}
-          cards={board.jobs.filter((card) => card.stage === stage)}
-          onShowAll={() => onShowStage(stage)}
-        />
-      ))}
-    </div>
+    <BoardDrag cards={board.jobs}>
+      <div className="space-y-3 lg:-mx-1 lg:flex lg:h-[calc(100dvh-14.25rem)] lg:min-h-96 lg:gap-2 lg:space-y-0 lg:overflow-x-auto lg:px-1 lg:pb-2">
+        {jobStages.map((stage) => (
+          <StageColumn
+            key={stage}
+            stage={stage}
+            count={board.counts[stage]}
+            cards={board.jobs.filter((card) => card.stage === stage)}
+            onShowAll={() => onShowStage(stage)}
+          />
+        ))}
+      </div>
+    </BoardDrag>
   )
 }

@@ -2,22 +2,28 @@ import { useInfiniteQuery } from '@tanstack/react-query'
 import { Plus } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { type JobStage, jobStageNames, jobStages } from '../../../shared/jobs/job-stage.ts'
-import type { Board } from '../../../shared/jobs/job-views.ts'
+import type { Board, JobCard as JobCardData } from '../../../shared/jobs/job-views.ts'
 import { failureText } from '../../lib/failure-text.ts'
 import { useMay } from '../../lib/session.ts'
 import { useSettled } from '../../lib/use-settled.ts'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
+import { Segmented } from '../../ui/segmented.tsx'
 import { Skeleton } from '../../ui/skeleton.tsx'
 import { EmptyState, ErrorState } from '../../ui/states.tsx'
-import { useBoardAddress } from './board-address.ts'
+import { type BoardView, useBoardAddress } from './board-address.ts'
 import { BoardColumns } from './board-columns.tsx'
 import { BoardFilters } from './board-filters.tsx'
+import { BoardTable } from './board-table.tsx'
 import { FirstSteps } from './first-steps.tsx'
 import { JobCard } from './job-card.tsx'
 import { jobQueries } from './job-queries.ts'
 
 const settleMs = 200
+const boardViews: readonly { value: BoardView; label: string }[] = [
+  { value: 'stages', label: 'Stages' },
+  { value: 'table', label: 'Table' },
+]
 
 function BoardSkeleton() {
   return (
@@ -83,9 +89,37 @@ function StageList({ stage, board, more, busy }: StageListProps) {
   )
 }
 
+type TableProps = {
+  cards: JobCardData[]
+  sort: string
+  onSort: (sort: string) => void
+  /** Not all jobs of every stage are there yet. */
+  isPart: boolean
+  more: (() => void) | null
+  busy: boolean
+}
+
+function TableOfJobs({ isPart, more, busy, ...table }: TableProps) {
+  return (
+    <>
+      {isPart ? (
+        <p className="mb-2 text-ink-soft">
+          The first jobs of each stage. Show more, or choose a stage, to sort through them all.
+        </p>
+      ) : null}
+      <BoardTable {...table} />
+      {more ? (
+        <Button kind="plain" className="mt-4 w-full sm:w-auto" busy={busy} onClick={more}>
+          Show more
+        </Button>
+      ) : null}
+    </>
+  )
+}
+
 /** Jobs by stage. */
 export function BoardPage() {
-  const { filter, change, isFiltered } = useBoardAddress()
+  const { filter, view, sort, change, isFiltered } = useBoardAddress()
   const q = useSettled(filter.q, settleMs)
   const asked = { ...filter, q }
   const query = useInfiniteQuery(jobQueries.board(asked))
@@ -102,6 +136,17 @@ export function BoardPage() {
     if (jobs.length === 0)
       return <NoJobs isFiltered={isFiltered} hasCrews={first.crews.length > 0} />
     const { stage } = filter
+    if (view === 'table')
+      return (
+        <TableOfJobs
+          cards={stage ? jobs.filter((card) => card.stage === stage) : jobs}
+          sort={sort}
+          onSort={(next) => change({ sort: next })}
+          isPart={stage === null && first.nextOffset !== null}
+          more={query.hasNextPage ? () => void query.fetchNextPage() : null}
+          busy={query.isFetchingNextPage}
+        />
+      )
     if (!stage)
       return <BoardColumns board={first} onShowStage={(next) => change({ stage: next })} />
     const ofStage = jobs.filter((card) => card.stage === stage)
@@ -116,7 +161,20 @@ export function BoardPage() {
   }
   return (
     <>
-      <PageHeader title="Board" actions={mayWrite ? <NewJobLink /> : null} />
+      <PageHeader
+        title="Board"
+        actions={
+          <>
+            <Segmented
+              label="Show as"
+              options={boardViews}
+              value={view}
+              onChange={(next) => change({ view: next })}
+            />
+            {mayWrite ? <NewJobLink /> : null}
+          </>
+        }
+      />
       <BoardFilters filter={filter} change={change} isFiltered={isFiltered} board={first} />
       <div aria-busy={query.isPlaceholderData}>{body()}</div>
     </>

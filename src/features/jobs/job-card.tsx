@@ -40,11 +40,20 @@ function CardTiming({ card }: { card: Card }) {
 }
 
 /** A job on the board: its shape, where it is, when it is on, and what it lacks. */
-export function JobCard({ card }: { card: Card }) {
+export function JobCard({
+  card,
+  holding = {},
+}: {
+  card: Card
+  /** How it is taken hold of, where it can be. */
+  holding?: { 'aria-describedby'?: string }
+}) {
   const roof = roofText(card)
   return (
     <Link
+      {...holding}
       to={`/jobs/${card.id}`}
+      draggable={false}
       className="block rounded-md border border-rule bg-sheet p-2.5 leading-snug hover:border-ink-soft"
     >
       <span className="flex items-center gap-2.5">

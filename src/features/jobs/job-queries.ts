@@ -67,10 +67,21 @@ export function useChangeJob() {
   })
 }
 
+type FactChange = { fact: JobFactName; on: Day | null; version: number }
+
+/** Sets a fact of any job, as the board does. */
+export function useSetFactOf() {
+  return useMutation({
+    mutationFn: ({ jobId, fact, ...input }: FactChange & { jobId: string }) =>
+      api.put(`/api/jobs/${jobId}/facts/${fact}`, jobSchema, input),
+    onSuccess: useKeepJob(),
+  })
+}
+
 export function useSetFact(jobId: string) {
   const client = useQueryClient()
   return useMutation({
-    mutationFn: ({ fact, ...input }: { fact: JobFactName; on: Day | null; version: number }) =>
+    mutationFn: ({ fact, ...input }: FactChange) =>
       api.put(`/api/jobs/${jobId}/facts/${fact}`, jobSchema, input),
     onSuccess: useKeepJob(),
     onError: () => client.invalidateQueries({ queryKey: jobQueries.detail(jobId).queryKey }),
