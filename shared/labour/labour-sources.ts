@@ -4,8 +4,8 @@ import type { MemberRole } from '../roof/roof-types.ts'
 export type LabourSource = 'textbook' | 'practice' | 'none-added'
 
 export const labourSourceWords: Record<LabourSource, string> = {
-  textbook: 'common practice, held to the textbook',
-  practice: 'common practice, no source',
+  textbook: 'textbook',
+  practice: 'no source',
   'none-added': 'none added',
 }
 

@@ -17,6 +17,8 @@ export const demoFirm = {
   name: 'Quillback Roofing',
   phone: '(07) 5550 0140',
   timeZone: 'Australia/Brisbane',
+  holidayCountry: 'AU',
+  holidayState: 'QLD',
 }
 
 export const demoCrews = [

@@ -17,6 +17,7 @@ import type { Db } from '../client.ts'
 import { firm as firmTable } from '../tables/firm-tables.ts'
 import { jobs, plateChecks, roofRevisions } from '../tables/job-tables.ts'
 import { crewMembers, crews, people } from '../tables/people-tables.ts'
+import { closeDemoDays } from './demo-day-logs.ts'
 import type { DemoJob } from './demo-job.ts'
 import { demoJobs } from './demo-jobs.ts'
 import { insertDemoMilestones } from './demo-milestones.ts'
@@ -203,6 +204,7 @@ function seedAll(db: Db, clock: Clock, passwordHash: string): void {
       .where(eq(jobs.id, jobId))
       .run()
   }
+  closeDemoDays(db, { today })
   tellDemoDays(db, { firm: readFirm(db), until: workingDay(db, today, 2), now })
 }
 

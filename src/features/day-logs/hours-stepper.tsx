@@ -19,7 +19,7 @@ export function HoursStepper(props: Props) {
   const { label, minutes, stepMinutes, leastMinutes = 0, mostMinutes, onChange } = props
   const to = (next: number) => onChange(Math.min(mostMinutes, Math.max(leastMinutes, next)))
   return (
-    <div role="group" aria-label={label} className="flex items-center gap-2">
+    <div role="group" aria-label={label} className="flex shrink-0 items-center gap-1 sm:gap-2">
       <button
         type="button"
         aria-label={`${label}: less`}
@@ -29,7 +29,7 @@ export function HoursStepper(props: Props) {
       >
         <Minus size={28} aria-hidden />
       </button>
-      <p className="numeral w-20 text-center text-[1.75rem]" aria-live="polite">
+      <p className="numeral w-16 text-center sm:w-20 text-[1.75rem]" aria-live="polite">
         {formatQuarters(minutes).replace(' h', '')}
         <span className="text-base font-semibold"> h</span>
       </p>

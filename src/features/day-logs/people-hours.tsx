@@ -29,8 +29,8 @@ function PersonRow({ row, person, onChange }: RowProps) {
   const toggle = () =>
     onChange({ ...row, turnedUp: !row.turnedUp, minutes: row.turnedUp ? 0 : person.minutes })
   return (
-    <li className="flex flex-wrap items-center justify-between gap-x-4 gap-y-1 py-2">
-      <label className="flex min-h-14 min-w-40 flex-1 items-center gap-3 text-lg font-semibold">
+    <li className="flex items-center justify-between gap-x-3 py-2">
+      <label className="flex min-h-14 min-w-0 flex-1 items-center gap-3 text-lg font-semibold">
         <input
           type="checkbox"
           checked={row.turnedUp}
@@ -50,7 +50,7 @@ function PersonRow({ row, person, onChange }: RowProps) {
           onChange={(minutes) => onChange({ ...row, minutes })}
         />
       ) : (
-        <p className="text-base">Not here</p>
+        <p className="shrink-0 text-base">Not here</p>
       )}
     </li>
   )
@@ -119,11 +119,21 @@ export function PeopleHours({ rows, known, others, onChange }: Props) {
       </ul>
       {here.length > 1 ? (
         <div className="mt-1 flex flex-wrap items-center gap-2">
-          <span className="font-semibold">Everybody</span>
-          <Button kind="plain" size="site" onClick={() => stepAll(-everybodyStepMinutes)}>
+          <span className="font-semibold">All</span>
+          <Button
+            kind="plain"
+            size="site"
+            className="px-3 whitespace-nowrap"
+            onClick={() => stepAll(-everybodyStepMinutes)}
+          >
             ½ h less
           </Button>
-          <Button kind="plain" size="site" onClick={() => stepAll(everybodyStepMinutes)}>
+          <Button
+            kind="plain"
+            size="site"
+            className="px-3 whitespace-nowrap"
+            onClick={() => stepAll(everybodyStepMinutes)}
+          >
             ½ h more
           </Button>
         </div>

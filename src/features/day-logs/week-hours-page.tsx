@@ -58,10 +58,12 @@ function OpenDays({ open }: Pick<WeekHours, 'open'>) {
             <li key={bookingDayId}>
               <Link
                 to={`/today/close/${bookingDayId}`}
-                className="inline-flex min-h-11 flex-wrap items-center gap-x-3 text-chalk underline"
+                className="inline-flex min-h-11 items-center gap-x-3 text-chalk underline"
               >
                 <CrewPennant letter={crew.letter} colour={crew.colour} name={crew.name} />
-                {formatDay(day)}, {job.number} {job.title}
+                <span>
+                  {formatDay(day)}, {job.number} {job.title}
+                </span>
               </Link>
             </li>
           ))}

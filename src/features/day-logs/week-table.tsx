@@ -32,13 +32,18 @@ function PersonCard({ person, days }: { person: PersonHours; days: string[] }) {
 /** A person a row, a day a column, hours as decimals. */
 export function WeekTable({ hours }: { hours: WeekHours }) {
   const { days, people } = hours
+  const withHours = people.filter((person) => totalOf(person.minutes) > 0)
+  const without = people.filter((person) => totalOf(person.minutes) === 0)
   const cell = 'border-t border-rule px-3 py-2 text-right tabular-nums'
   return (
     <>
       <ul className="space-y-3 sm:hidden">
-        {people.map((person) => (
+        {withHours.map((person) => (
           <PersonCard key={person.personId} person={person} days={days} />
         ))}
+        {without.length > 0 ? (
+          <li className="text-ink-soft">No hours: {without.map(({ name }) => name).join(', ')}.</li>
+        ) : null}
       </ul>
       <div className="hidden rounded-md border border-rule bg-sheet sm:block">
         <table className="w-full border-collapse">

@@ -11,6 +11,7 @@ import { packageKeys } from '../../../shared/labour/work-step.ts'
 import { roleWords } from '../../../shared/marking/role-words.ts'
 import type { MemberRole } from '../../../shared/roof/roof-types.ts'
 import { Card } from '../../ui/card.tsx'
+import { Fold } from '../../ui/fold.tsx'
 import { gridClass, labourFields } from './firm-fields.ts'
 import { LabourNumber } from './labour-number.tsx'
 
@@ -95,6 +96,9 @@ function Packages({ rates, onChange, issueAt }: Props) {
   )
 }
 
+const hasSetUps = ({ startUpMinutes, packageMinutes }: Rates): boolean =>
+  startUpMinutes !== 0 || Object.values(packageMinutes).some((minutes) => minutes !== 0)
+
 /** Minutes of one person; where the first figures come from stands with them. */
 export function LabourSection(props: Props) {
   const { rates, onChange, issueAt } = props
@@ -125,9 +129,14 @@ export function LabourSection(props: Props) {
           ))}
         </div>
       </Group>
-      <Group title="Set-ups" note={labourSourceNotes['none-added']}>
-        <Packages {...props} />
-      </Group>
+      <div className="mt-3">
+        <Fold title="Set-ups and the start of a day" isOpen={hasSetUps(rates)}>
+          <p className="mb-3 max-w-prose text-sm text-ink-soft">
+            {labourSourceNotes['none-added']}
+          </p>
+          <Packages {...props} />
+        </Fold>
+      </div>
     </Card>
   )
 }
