@@ -29,6 +29,26 @@ export function ticketState({ expiresOn }: { expiresOn: Day | null }, today: Day
   return expiresOn <= dayPlus(today, lapsingDays) ? 'lapsing' : 'holds'
 }
 
+type HeldTicket = { kind: TicketKind; name: string; expiresOn: Day | null }
+
+/**
+ * Tickets lapsed, or lapsing soon, that no other ticket for the same thing outlasts: a renewed one makes
+ * its older one forgotten.
+ */
+export function ticketsToRenew<Held extends HeldTicket>(
+  tickets: readonly Held[],
+  today: Day,
+): Held[] {
+  const lasts = (ticket: HeldTicket) => ticket.expiresOn ?? '9999'
+  const forSame = (a: HeldTicket, b: HeldTicket) =>
+    a.kind === b.kind && a.name.toLowerCase() === b.name.toLowerCase()
+  return tickets.filter(
+    (ticket) =>
+      ticketState(ticket, today) !== 'holds' &&
+      !tickets.some((other) => forSame(ticket, other) && lasts(other) > lasts(ticket)),
+  )
+}
+
 /** 'Lapsed after Thu 4 Dec 2025', 'Last day Thu 4 Dec 2025', 'Does not lapse'. */
 export function ticketStateText(ticket: { expiresOn: Day | null }, today: Day): string {
   if (ticket.expiresOn === null) return 'Does not lapse'

@@ -1,7 +1,9 @@
 import { expect, test } from 'vitest'
 import { crewLoans } from '../../server/db/tables/people-tables.ts'
+import { readFirm } from '../../server/firm/firm-store.ts'
+import { peopleToTell, toldDayOf } from '../../server/mail/told-day.ts'
 import { rosterOf } from '../../server/people/roster.ts'
-import { fri, thu, wed } from './booking-kit.ts'
+import { bookingFirm, fri, thu, wed } from './booking-kit.ts'
 import { crewOnSite, days } from './day-sheet-kit.ts'
 import { missingId, twoCrewFirm } from './people-kit.ts'
 
@@ -71,4 +73,42 @@ test('a borrowed apprentice sees the borrowing crew’s sheet that day and not t
     .expect(201)
   expect(await titles(days.wednesday)).toEqual(['Wintle Lane shed'])
   expect(await titles(days.tuesday)).toEqual(own)
+})
+
+test('the hours of both crews follow a loan, and what a lent person was handed is handed to nobody', async () => {
+  const firm = await bookingFirm()
+  const { app, officeAgent, people: who } = firm
+  const booking = await firm.booked({ startsOn: thu, workingDays: 2, state: 'firm' })
+  const task = firm.taskRows(booking.id).find((row) => row.day === thu)!.task
+  await officeAgent
+    .patch(`/api/tasks/${task.id}`)
+    .send({ version: task.version, assignedToId: who.apprentice.id })
+    .expect(200)
+  await officeAgent
+    .post(`/api/people/${who.apprentice.id}/loans`)
+    .send({ crewId: firm.otherCrew.id, day: thu, note: '' })
+    .expect(201)
+  const { body } = await officeAgent.get(`/api/bookings/${booking.id}`).expect(200)
+  const minutes = (body.days as { availableMinutes: number }[]).map((d) => d.availableMinutes)
+  expect(minutes).toEqual([480, 960])
+  const handed = firm.taskRows(booking.id).filter((row) => row.day === thu)
+  expect(handed.map((row) => row.task.assignedToId)).toEqual(handed.map(() => null))
+  expect(handed.reduce((sum, row) => sum + row.task.plannedMinutes, 0)).toBeLessThanOrEqual(480)
+  expect(rosterOf(app.db, firm.otherCrew.id, thu)).toHaveLength(2)
+})
+
+test('a borrowed person is reminded of the borrowing crew’s job, not of the own crew’s', async () => {
+  const firm = await bookingFirm()
+  const { app, officeAgent, people: who } = firm
+  await firm.booked({ startsOn: thu, workingDays: 1, state: 'firm' })
+  const creek = { jobId: firm.jobs.creekJob, crewId: firm.otherCrew.id }
+  await firm.booked({ ...creek, startsOn: thu, workingDays: 1, state: 'firm' })
+  const told = () => toldDayOf(app.db, readFirm(app.db), who.apprentice.id, thu)
+  expect(told().bookings.map((one) => one.jobTitle)).toEqual(['Hill house'])
+  await officeAgent
+    .post(`/api/people/${who.apprentice.id}/loans`)
+    .send({ crewId: firm.otherCrew.id, day: thu, note: '' })
+    .expect(201)
+  expect(told().bookings.map((one) => one.jobTitle)).toEqual(['Creek shed'])
+  expect(peopleToTell(app.db, thu)).toContain(who.apprentice.id)
 })

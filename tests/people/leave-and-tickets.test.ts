@@ -1,7 +1,12 @@
 import { expect, test } from 'vitest'
 import { isAwayOn, nextAwayDay } from '../../shared/people/leave-days.ts'
 import { leaveSpanText } from '../../shared/people/leave-words.ts'
-import { ticketState, ticketStateText, ticketTitle } from '../../shared/people/ticket-words.ts'
+import {
+  ticketState,
+  ticketStateText,
+  ticketsToRenew,
+  ticketTitle,
+} from '../../shared/people/ticket-words.ts'
 
 const thu = '2026-12-03'
 
@@ -32,6 +37,18 @@ test('a ticket holds on its last day, lapses soon for thirty days before and has
   expect(on('2027-01-02')).toBe('lapsing')
   expect(on('2027-01-03')).toBe('holds')
   expect(on(null)).toBe('holds')
+})
+
+test('a ticket that was renewed need not be renewed again, one for something else must', () => {
+  const heights = { kind: 'working-at-heights', name: '' } as const
+  const old = { ...heights, expiresOn: '2026-12-01' }
+  const soon = { ...heights, expiresOn: '2026-12-20' }
+  const renewed = { ...heights, expiresOn: '2028-12-01' }
+  const forklift = { kind: 'other', name: 'Forklift', expiresOn: '2026-12-01' } as const
+  const dogging = { kind: 'other', name: 'Dogging', expiresOn: null } as const
+  expect(ticketsToRenew([old, renewed], thu)).toEqual([])
+  expect(ticketsToRenew([old, soon], thu)).toEqual([soon])
+  expect(ticketsToRenew([old, forklift, dogging], thu)).toEqual([old, forklift])
 })
 
 test('leave and tickets are said in words, with the year where it is another', () => {

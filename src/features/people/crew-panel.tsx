@@ -37,14 +37,14 @@ function Members({ members, today }: { members: Member[]; today: string }) {
   return (
     <ul className="divide-y divide-rule">
       {members.map((member) => (
-        <li key={member.id} className="flex flex-wrap items-center justify-between gap-x-4">
+        <li key={member.id} className="sm:flex sm:items-center sm:justify-between sm:gap-x-4">
           <Link
             to={`/people/${member.personId}`}
-            className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
+            className="flex min-h-11 items-center font-semibold text-chalk underline"
           >
             {member.name}
           </Link>
-          <span className="text-ink-soft">
+          <span className="block pb-2 text-ink-soft sm:pb-0">
             {roleNames[member.role]}, {spanText(member, today)}
           </span>
         </li>

@@ -1,6 +1,6 @@
 import { isAwayOn } from '../../../shared/people/leave-days.ts'
 import type { Person } from '../../../shared/people/people-schemas.ts'
-import { ticketState } from '../../../shared/people/ticket-words.ts'
+import { ticketsToRenew } from '../../../shared/people/ticket-words.ts'
 
 /** Which of all people a list shows; the key stands in the address. */
 export const shownKinds = {
@@ -25,7 +25,7 @@ export function isShown(person: Person, kind: ShownKind, today: string): boolean
     case 'all':
       return true
     case 'tickets':
-      return person.active && person.tickets.some((one) => ticketState(one, today) !== 'holds')
+      return person.active && ticketsToRenew(person.tickets, today).length > 0
     case 'away':
       return person.active && isAwayToday(person, today)
     case 'link':

@@ -3,7 +3,7 @@ import { roleNames } from '../../../shared/auth/roles.ts'
 import { nextAwayDay } from '../../../shared/people/leave-days.ts'
 import { dayNear, leaveKindNames } from '../../../shared/people/leave-words.ts'
 import type { Crew, Person } from '../../../shared/people/people-schemas.ts'
-import { ticketState, ticketTitle } from '../../../shared/people/ticket-words.ts'
+import { ticketState, ticketsToRenew, ticketTitle } from '../../../shared/people/ticket-words.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { Badge } from '../../ui/badge.tsx'
 import { crewName } from './crew-name.ts'
@@ -27,13 +27,12 @@ function Marks({ person, crews, today }: Omit<Props, 'search'>) {
           {link === 'ended' || link === 'failed' ? 'Needs a new link' : 'Not signed in yet'}
         </Badge>
       ) : null}
-      {person.tickets.map((ticket) => {
-        const state = ticketState(ticket, today)
-        if (state === 'holds' || ticket.expiresOn === null) return null
-        const last = dayNear(ticket.expiresOn, today)
+      {ticketsToRenew(person.tickets, today).map((ticket) => {
+        const isLapsed = ticketState(ticket, today) === 'lapsed'
+        const last = ticket.expiresOn === null ? '' : dayNear(ticket.expiresOn, today)
         return (
-          <Badge key={ticket.id} kind={state === 'lapsed' ? 'stop' : 'ochre'}>
-            {ticketTitle(ticket)}: {state === 'lapsed' ? 'lapsed after' : 'last day'} {last}
+          <Badge key={ticket.id} kind={isLapsed ? 'stop' : 'ochre'}>
+            {ticketTitle(ticket)}: {isLapsed ? 'lapsed after' : 'last day'} {last}
           </Badge>
         )
       })}
