@@ -18,7 +18,8 @@ const standingOf = (crewId: string, fromDay: Day): SQL | undefined =>
   and(
     isNull(bookings.cancelledAt),
     eq(bookings.crewId, crewId),
-    sql`exists (select 1 from booking_days later where later.booking_id = ${bookings.id} and later.day >= ${fromDay})`,
+    // Not `exists`: for each booking the crew ever had that would look for a day.
+    sql`${bookings.id} in (select later.booking_id from booking_days later where later.day >= ${fromDay})`,
   )
 
 function readRows(db: DbOrTx, scope: SQL | undefined) {

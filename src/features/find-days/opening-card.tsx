@@ -1,4 +1,4 @@
-import { ArrowRight, CircleAlert } from 'lucide-react'
+import { CircleAlert } from 'lucide-react'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import type { OpeningFound } from '../../../shared/find-days/find-days-schemas.ts'
 import { spanWords } from '../../../shared/planning/opening-words.ts'
@@ -7,22 +7,6 @@ import { Button } from '../../ui/button.tsx'
 import { Fold } from '../../ui/fold.tsx'
 
 type Props = { opening: OpeningFound; isFirst: boolean; busy: boolean; onTake: () => void }
-
-function GivesWay({ moves }: { moves: OpeningFound['moves'] }) {
-  if (moves.length === 0) return null
-  return (
-    <ul className="space-y-1 text-sm" aria-label="What gives way">
-      {moves.map(({ bookingId, job, daysBefore, daysAfter }) => (
-        <li key={bookingId} className="flex flex-wrap items-center gap-x-2">
-          <span className="font-semibold">{job.number}</span>
-          {spanWords(daysBefore)}
-          <ArrowRight size={16} aria-label="to" className="text-ink-soft" />
-          <span className="font-semibold text-clay">{spanWords(daysAfter)}</span>
-        </li>
-      ))}
-    </ul>
-  )
-}
 
 function Cautions({ cautions }: { cautions: OpeningFound['cautions'] }) {
   const lines = [...new Map(cautions.map((one) => [one.text, one])).values()]
@@ -49,7 +33,7 @@ function Cautions({ cautions }: { cautions: OpeningFound['cautions'] }) {
 
 /** One of the three: whose days, which, why, and one press to take them. */
 export function OpeningCard({ opening, isFirst, busy, onTake }: Props) {
-  const { crew, days, why, moves, cautions } = opening
+  const { crew, days, why, cautions } = opening
   const span = spanWords(days)
   const count = days.length === 1 ? '1 working day' : `${days.length} working days`
   return (
@@ -63,7 +47,6 @@ export function OpeningCard({ opening, isFirst, busy, onTake }: Props) {
       </p>
       <p className="text-xl font-extrabold">{span}</p>
       <p>{why}</p>
-      <GivesWay moves={moves} />
       <Cautions cautions={cautions} />
       <Button
         kind={isFirst ? 'primary' : 'plain'}

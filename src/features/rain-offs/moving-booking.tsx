@@ -4,7 +4,7 @@ import { Link } from 'react-router-dom'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import type { PreviewMove } from '../../../shared/rain-offs/rain-off-schemas.ts'
 import { Badge } from '../../ui/badge.tsx'
-import { daysWords, lateWords, milestoneWords } from './rain-off-words.ts'
+import { daysWords, isOvertaken, lateWords, milestoneWords } from './rain-off-words.ts'
 
 /** A remark by icon, word and colour. */
 function Remark({ weight, children }: { weight: 'clash' | 'caution'; children: ReactNode }) {
@@ -64,9 +64,15 @@ export function MovingBooking({ move }: { move: PreviewMove }) {
           {move.customerName ? `Customer: ${move.customerName}` : 'No customer named'}
           {isFirm ? '' : ' (pencilled days were told to nobody)'}
         </li>
-        {move.milestones.map((milestone) => (
-          <li key={milestone.kind}>{milestoneWords(milestone)}</li>
-        ))}
+        {move.milestones.map((milestone) =>
+          isOvertaken(move, milestone) ? (
+            <Remark key={milestone.kind} weight="caution">
+              {milestoneWords(milestone)}. The frame would not be done.
+            </Remark>
+          ) : (
+            <li key={milestone.kind}>{milestoneWords(milestone)}</li>
+          ),
+        )}
         {move.otherCrews.map(({ crew, days }) => (
           <li key={crew}>
             {crew} is on this job too and stays: {daysWords(days)}

@@ -1,5 +1,5 @@
 import { daysBetween, formatDay } from '../../../shared/calendar/days.ts'
-import type { MilestoneState } from '../../../shared/milestones/milestone-kinds.ts'
+import type { MilestoneKind, MilestoneState } from '../../../shared/milestones/milestone-kinds.ts'
 import { milestoneNames } from '../../../shared/milestones/milestone-rules.ts'
 import type { PreviewMove, RainOffPreview } from '../../../shared/rain-offs/rain-off-schemas.ts'
 
@@ -34,6 +34,14 @@ export function milestoneWords(milestone: PreviewMove['milestones'][number]): st
   return `${milestoneNames[milestone.kind]}: ${when}${by}`
 }
 
+const afterFrame: readonly MilestoneKind[] = ['frame-inspection', 'fascia-and-gutter', 'roof-cover']
+
+/** Whether what follows the frame would now come before it is done, and did not before. */
+export function isOvertaken(move: PreviewMove, { kind, day }: PreviewMove['milestones'][number]) {
+  const [before = '', after = ''] = [move.daysBefore, move.daysAfter].map((days) => days.at(-1))
+  return afterFrame.includes(kind) && day > before && day <= after
+}
+
 /** Null while it is done by the day it is wanted, or would have been late all the same. */
 export function lateWords({ wantedBy, daysAfter }: PreviewMove): string | null {
   const last = daysAfter[daysAfter.length - 1]
@@ -42,7 +50,7 @@ export function lateWords({ wantedBy, daysAfter }: PreviewMove): string | null {
   return `Wanted by ${formatDay(wantedBy)}; its last day would be ${formatDay(last)}, ${late} later.`
 }
 
-/** '3 bookings move; 2 customers hold firm days.' */
+/** '3 bookings move; 2 customers with firm days to be told; 1 delivery or trade touched.' */
 export function summaryWords({ moves }: RainOffPreview): string {
   const customers = new Set(
     moves.filter((m) => m.state === 'firm').map((m) => m.customerName || m.job.number),
@@ -51,7 +59,9 @@ export function summaryWords({ moves }: RainOffPreview): string {
   const parts = [
     `${countWords(moves.length, 'booking moves', 'bookings move')}`,
     customers > 0 ? `${countWords(customers, 'customer')} with firm days to be told` : '',
-    deliveries > 0 ? `${countWords(deliveries, 'delivery or trade', 'deliveries and trades')}` : '',
+    deliveries > 0
+      ? `${countWords(deliveries, 'delivery or trade', 'deliveries and trades')} touched`
+      : '',
   ]
   return `${parts.filter(Boolean).join('; ')}.`
 }
