@@ -65,6 +65,75 @@ function stateWords(variation: Variation, today: string): string {
   return askedOn ? dayText(askedOn, today) : ''
 }
 
+type ActionProps = {
+  variation: Variation
+  state: VariationState
+  today: string
+  busy: boolean
+  send: ReturnType<typeof useVariation>['send']
+  onOpen: (what: 'edit' | 'yes') => void
+}
+
+/** What can come next, by where it stands. */
+function VariationActions({ variation, state, today, busy, send, onOpen }: ActionProps) {
+  const name = `V${variation.sequence}`
+  const { agreedOn, agreedBy } = variation
+  const wasAgreed = agreedOn ? { on: agreedOn, by: agreedBy } : null
+  return (
+    <div className="mt-1 flex flex-wrap gap-x-1">
+      {state === 'to-ask' ? (
+        <Button
+          kind="quiet"
+          busy={busy}
+          onClick={() => send({ askedOn: today }, `${name} asked for.`, { askedOn: null })}
+        >
+          Asked today
+        </Button>
+      ) : null}
+      {state === 'to-ask' || state === 'asked' ? (
+        <Button kind="quiet" onClick={() => onOpen('yes')}>
+          Builder said yes
+        </Button>
+      ) : null}
+      {state === 'agreed' ? (
+        <Button
+          kind="quiet"
+          busy={busy}
+          onClick={() => send({ agreed: null }, 'The yes is taken back.', { agreed: wasAgreed })}
+        >
+          Take the yes back
+        </Button>
+      ) : null}
+      {state === 'agreed' || state === 'withdrawn' ? null : (
+        <Button kind="quiet" onClick={() => onOpen('edit')}>
+          Edit
+        </Button>
+      )}
+      {state === 'withdrawn' ? (
+        <Button
+          kind="quiet"
+          busy={busy}
+          onClick={() =>
+            send({ withdrawnOn: null }, `${name} is back.`, {
+              withdrawnOn: variation.withdrawnOn,
+            })
+          }
+        >
+          Bring it back
+        </Button>
+      ) : state === 'agreed' ? null : (
+        <Button
+          kind="quiet"
+          busy={busy}
+          onClick={() => send({ withdrawnOn: today }, `${name} withdrawn.`, { withdrawnOn: null })}
+        >
+          Withdraw
+        </Button>
+      )}
+    </div>
+  )
+}
+
 /** One variation: what, how much, how far it is, and what comes next. */
 export function VariationRow({ jobId, variation }: { jobId: string; variation: Variation }) {
   const { today } = useSession().firm
@@ -76,8 +145,7 @@ export function VariationRow({ jobId, variation }: { jobId: string; variation: V
     setOpen(null)
     reset()
   }
-  const { reason, priceCents, agreedOn, agreedBy } = variation
-  const wasAgreed = agreedOn ? { on: agreedOn, by: agreedBy } : null
+  const { reason, priceCents } = variation
   return (
     <li className="py-3">
       <div className="flex items-start justify-between gap-3">
@@ -113,61 +181,14 @@ export function VariationRow({ jobId, variation }: { jobId: string; variation: V
           onSave={(agreed) => send({ agreed }, `${name} agreed.`, { agreed: null }, close)}
         />
       ) : (
-        <div className="mt-1 flex flex-wrap gap-x-1">
-          {state === 'to-ask' ? (
-            <Button
-              kind="quiet"
-              busy={busy}
-              onClick={() => send({ askedOn: today }, `${name} asked for.`, { askedOn: null })}
-            >
-              Asked today
-            </Button>
-          ) : null}
-          {state === 'to-ask' || state === 'asked' ? (
-            <Button kind="quiet" onClick={() => setOpen('yes')}>
-              Builder said yes
-            </Button>
-          ) : null}
-          {state === 'agreed' ? (
-            <Button
-              kind="quiet"
-              busy={busy}
-              onClick={() =>
-                send({ agreed: null }, 'The yes is taken back.', { agreed: wasAgreed })
-              }
-            >
-              Take the yes back
-            </Button>
-          ) : null}
-          {state === 'agreed' || state === 'withdrawn' ? null : (
-            <Button kind="quiet" onClick={() => setOpen('edit')}>
-              Edit
-            </Button>
-          )}
-          {state === 'withdrawn' ? (
-            <Button
-              kind="quiet"
-              busy={busy}
-              onClick={() =>
-                send({ withdrawnOn: null }, `${name} is back.`, {
-                  withdrawnOn: variation.withdrawnOn,
-                })
-              }
-            >
-              Bring it back
-            </Button>
-          ) : state === 'agreed' ? null : (
-            <Button
-              kind="quiet"
-              busy={busy}
-              onClick={() =>
-                send({ withdrawnOn: today }, `${name} withdrawn.`, { withdrawnOn: null })
-              }
-            >
-              Withdraw
-            </Button>
-          )}
-        </div>
+        <VariationActions
+          variation={variation}
+          state={state}
+          today={today}
+          busy={busy}
+          send={send}
+          onOpen={setOpen}
+        />
       )}
     </li>
   )
