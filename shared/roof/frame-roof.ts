@@ -17,6 +17,7 @@ import type { BesideGround } from './secondary/beside-ground.ts'
 import { coveringTotals } from './secondary/covering-totals.ts'
 import { commonStandMm } from './stand.ts'
 import { roofTotals } from './totals.ts'
+import { unmadeProblems } from './unmade.ts'
 
 /** Cuts all joints and gives every piece its numbers. */
 const draftMembers = (ground: Ground, standMm: number) => {
@@ -57,6 +58,8 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
   const ground: Ground = { roof, settings, plates, lines, joints }
   const standMm = commonStandMm(roof, plates.slopes)
   const { drafts, openPieces } = draftMembers(ground, standMm)
+  const unmade = unmadeProblems(ground, drafts)
+  if (unmade.length > 0) throw new RoofRefusedError(unmade)
   const standing: BesideGround = { ...ground, standMm, drafts }
   const beside = besideFrame(standing)
   const all = [...drafts, ...beside.drafts]

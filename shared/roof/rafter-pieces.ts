@@ -35,6 +35,8 @@ const jointAt = (ground: Ground, slope: Slope, station: Station, inMm: number): 
   const off = (index: number) => {
     const { point, radiusMm } = at(joints, index)
     const aside = Math.abs(dot2(slope.along, sub2(point, slope.origin)) - station.alongMm)
+    // a rafter set further off than its own thickness does not end in that joint
+    if (aside > radiusMm + ground.roof.sections.rafter.thicknessMm) return Infinity
     const away = Math.abs(insideMm(slope, point) - inMm)
     return away <= 1 + 4 * radiusMm + 3 * aside ? away : Infinity
   }

@@ -198,7 +198,7 @@ export const trimEnd = (
   }
   clear()
   const stop = piecePoint(piece, end === 'head' ? piece.planMm : 0, 0)
-  if (centreReachMm(piece, cuts, stop, away) > allowPastMm) {
+  if (cuts.length === 0 || centreReachMm(piece, cuts, stop, away) > allowPastMm) {
     const square = { point: stop, normal: away, mitreWith: null }
     cuts.push(square)
     polygon = cutAway(polygon, square, { kind: 'face' })

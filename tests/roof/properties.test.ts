@@ -160,6 +160,11 @@ describe('over random plans of any shape', () => {
       expect(numbersOf(spec).every(Number.isFinite), `roof ${n}`).toBe(true)
       const short = spec.members.filter((m) => !(m.cutLengthMm > 0)).map((m) => m.mark)
       expect(short, `roof ${n}`).toEqual([])
+      const headless = spec.members.filter((m) => !m.cuts.some((cut) => cut.end === 'head'))
+      expect(
+        headless.map((m) => m.mark),
+        `roof ${n}`,
+      ).toEqual([])
       const marks = spec.members.map((m) => m.mark)
       expect(new Set(marks).size, `roof ${n}`).toBe(marks.length)
       const listed = spec.cutLines.flatMap((line) => line.members)

@@ -1,8 +1,14 @@
 import { describe, expect, test } from 'vitest'
 
+import { buildPieces } from '../../shared/roof/build-pieces.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
-import { RoofRefusedError, roofProblems } from '../../shared/roof/roof-problems.ts'
+import { cutJoints } from '../../shared/roof/joint-order.ts'
+import { draftMember } from '../../shared/roof/members.ts'
+import type { Piece } from '../../shared/roof/piece.ts'
+import { RoofRefusedError, roofProblems, setOutRoof } from '../../shared/roof/roof-problems.ts'
+import { defaultSettings } from '../../shared/roof/roof-settings.ts'
 import type { Roof } from '../../shared/roof/roof-types.ts'
+import { unmadeProblems } from '../../shared/roof/unmade.ts'
 import { rectangle } from './support/plans.ts'
 import { makeRoof } from './support/roofs.ts'
 
@@ -266,6 +272,22 @@ describe('a roof is refused, with its field and what to change:', () => {
 
 test('a roof that can be framed has no problems', () => {
   expect(roofProblems(good())).toEqual([])
+})
+
+test('timbers that were never cut are refused, each by its place', () => {
+  const roof = good()
+  const setOut = setOutRoof(roof, defaultSettings)
+  if (setOut.problems !== null) throw new Error('the plan is refused')
+  const ground = { ...setOut, roof, settings: defaultSettings }
+  const pieces = buildPieces(ground)
+  const draft = (piece: Piece) => draftMember(ground, piece, 110, () => [])
+  const found = unmadeProblems(ground, pieces.map(draft))
+  expect(found).toHaveLength(pieces.length)
+  expect(found.map(({ message }) => message).join(' ')).toMatch(
+    /Edge 1: the common that starts 3000 mm along it meets nothing/,
+  )
+  cutJoints(ground, pieces)
+  expect(unmadeProblems(ground, pieces.map(draft))).toEqual([])
 })
 
 describe('rubbish is refused and never thrown at', () => {
