@@ -38,10 +38,9 @@ function useListed<Input>(send: (input: Input) => Promise<RainOffList>) {
   const client = useQueryClient()
   return useMutation({
     mutationFn: send,
-    onSuccess: (list) => {
-      client.setQueryData(rainOffQueries.list().queryKey, list)
-      return client.invalidateQueries({ queryKey: ['calendar'] })
-    },
+    onSuccess: (list) => client.setQueryData(rainOffQueries.list().queryKey, list),
+    // Refused or not, what is shown next is what is there now.
+    onSettled: () => client.invalidateQueries({ queryKey: ['calendar'] }),
   })
 }
 
