@@ -12,8 +12,13 @@ import {
 } from './clash-words.ts'
 import { type DayClash, peopleClashes } from './people-clashes.ts'
 
-/** Facts with who stands where looked up once, however many bookings are asked about. */
-export type ClashIndex = { facts: ClashFacts; onCrewDay: Map<string, ClashBooking[]> }
+/** Facts with what all bookings of a crew and day share looked up once, however many are asked about. */
+export type ClashIndex = {
+  facts: ClashFacts
+  onCrewDay: Map<string, ClashBooking[]>
+  /** What is amiss with a crew's people and with the day itself. */
+  ofCrewDay: (crew: ClashBooking['crew'], day: Day) => readonly DayClash[]
+}
 
 const crewDayKey = (crewId: string, day: Day): string => `${crewId} ${day}`
 
@@ -27,7 +32,17 @@ export function clashIndex(facts: ClashFacts): ClashIndex {
       ones.map((one) => one.booking),
     ]),
   )
-  return { facts, onCrewDay }
+  const known = new Map<string, readonly DayClash[]>()
+  const ofCrewDay: ClashIndex['ofCrewDay'] = (crew, day) => {
+    const key = crewDayKey(crew.id, day)
+    const found = known.get(key) ?? [
+      ...peopleClashes(facts, crew, day),
+      ...dayNotWorked(facts, day),
+    ]
+    known.set(key, found)
+    return found
+  }
+  return { facts, onCrewDay, ofCrewDay }
 }
 
 function crewTwice({ facts, onCrewDay }: ClashIndex, booking: ClashBooking, day: Day): DayClash[] {
@@ -154,8 +169,7 @@ export function clashesOfBooking(index: ClashIndex, booking: ClashBooking): Book
     if (booked.day < facts.today) return []
     const found = [
       ...crewTwice(index, booking, booked.day),
-      ...peopleClashes(facts, booking.crew, booked.day),
-      ...dayNotWorked(facts, booked.day),
+      ...index.ofCrewDay(booking.crew, booked.day),
       ...roofClashes(booking, booked),
       ...(booked === first ? beforeMilestones(booking, booked) : []),
       ...(booked === last ? tooShort(booking) : []),

@@ -10,7 +10,7 @@ export function FlagLine({ weight, children }: { weight: FlagWeight; children: R
     <span
       className={`flex items-start gap-1 font-semibold ${weight === 'clash' ? 'text-stop' : 'text-ochre'}`}
     >
-      <Icon size={14} aria-hidden className="mt-0.5 shrink-0" />
+      <Icon aria-hidden className="mt-[0.2em] h-[1em] w-[1em] shrink-0" />
       <span className="min-w-0 [overflow-wrap:anywhere]">{children}</span>
     </span>
   )

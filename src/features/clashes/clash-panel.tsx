@@ -2,6 +2,8 @@ import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
 import { Link } from 'react-router-dom'
 import type { ClashList } from '../../../shared/clashes/clash-list-schemas.ts'
+import type { ClashCode } from '../../../shared/clashes/clash-schemas.ts'
+import { neededFirst } from '../../../shared/clashes/clash-words.ts'
 import { daysInWords } from '../../../shared/clashes/days-in-words.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
 import { failureText } from '../../lib/failure-text.ts'
@@ -44,9 +46,24 @@ function BookingCard({ booking, search }: { booking: ClashBookingView; search: s
           />
         ))}
       </ul>
+      {isOfMilestones(booking) ? (
+        <Link
+          to={`/jobs/${job.id}`}
+          className="inline-flex min-h-11 items-center font-semibold text-chalk underline"
+        >
+          What the job waits for
+        </Link>
+      ) : null}
     </li>
   )
 }
+
+/** What is settled on the job rather than on the booking. */
+function isOfMilestones({ clashes }: ClashBookingView): boolean {
+  return clashes.some(({ code }) => milestoneCodes.includes(code))
+}
+
+const milestoneCodes: readonly ClashCode[] = Object.values(neededFirst).map(({ code }) => code)
 
 const shownAtOnce = 40
 /** As many as are seen at a glance need no filter. */
