@@ -1,4 +1,5 @@
 import { benchDaySheet } from './bench-day-sheet.ts'
+import { benchFiveYears } from './bench-five-years.ts'
 import { benchGrowth, benchReferences } from './bench-frames.ts'
 import { benchKeystroke } from './bench-keystroke.ts'
 import { builtEngine } from './built-engine.ts'
@@ -10,4 +11,5 @@ benchReferences(rivals)
 benchGrowth(rivals)
 benchKeystroke(rivals.engine)
 await benchDaySheet()
+await benchFiveYears()
 process.exit(0)
