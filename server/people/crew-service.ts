@@ -1,5 +1,6 @@
-import { and, asc, eq, inArray, ne } from 'drizzle-orm'
+import { and, asc, eq, gte, inArray, isNull, ne, or } from 'drizzle-orm'
 import type { z } from 'zod'
+import type { Day } from '../../shared/calendar/days.ts'
 import { permissionScope } from '../../shared/auth/permissions.ts'
 import type {
   Crew,
@@ -10,7 +11,8 @@ import type {
 } from '../../shared/people/people-schemas.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import type { DbOrTx } from '../db/client.ts'
-import { crews } from '../db/tables/people-tables.ts'
+import { bookingDays, bookings } from '../db/tables/booking-tables.ts'
+import { crewLoans, crewMembers, crews } from '../db/tables/people-tables.ts'
 import { invalidField, notFound } from '../http/app-error.ts'
 import { newId } from '../lib/ids.ts'
 import {
@@ -82,9 +84,36 @@ export function addCrew(deps: PeopleDeps, user: CurrentUser, input: CrewInput): 
   })
 }
 
+/** A crew is stood down once nobody is in it and nothing is booked for it from today on. */
+function refuseInUse(tx: DbOrTx, crewId: string, today: Day): void {
+  const stays = or(isNull(crewMembers.endsOn), gte(crewMembers.endsOn, today))
+  const member = tx
+    .select({ id: crewMembers.id })
+    .from(crewMembers)
+    .where(and(eq(crewMembers.crewId, crewId), stays))
+    .get()
+  if (member) throw invalidField('active', 'People are in it still. Move them first.')
+  const lent = tx
+    .select({ id: crewLoans.id })
+    .from(crewLoans)
+    .where(and(eq(crewLoans.crewId, crewId), gte(crewLoans.day, today)))
+    .get()
+  if (lent) throw invalidField('active', 'It borrows somebody still. Take that day back first.')
+  const booked = tx
+    .select({ id: bookingDays.id })
+    .from(bookingDays)
+    .innerJoin(bookings, eq(bookings.id, bookingDays.bookingId))
+    .where(
+      and(eq(bookings.crewId, crewId), isNull(bookings.cancelledAt), gte(bookingDays.day, today)),
+    )
+    .get()
+  if (booked) throw invalidField('active', 'It has days booked still. Give them to another crew.')
+}
+
 export function editCrew(deps: PeopleDeps, user: CurrentUser, id: string, input: CrewInput): void {
   changePeople(deps, user, { action: 'crew changed', entityId: id }, (tx) => {
     refuseTakenLetter(tx, input.letter, id)
+    if (!input.active) refuseInUse(tx, id, firmToday(deps))
     if (tx.update(crews).set(input).where(eq(crews.id, id)).run().changes === 0)
       throw notFound('That crew')
   })

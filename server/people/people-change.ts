@@ -43,9 +43,9 @@ export function changePeople(
 }
 
 export function requireCrew(tx: DbOrTx, crewId: string | null): void {
-  if (crewId && !tx.select({ id: crews.id }).from(crews).where(eq(crews.id, crewId)).get()) {
-    throw invalidField('crewId', 'That crew is no longer there. Choose another.')
-  }
+  if (crewId === null) return
+  const crew = tx.select({ active: crews.active }).from(crews).where(eq(crews.id, crewId)).get()
+  if (!crew?.active) throw invalidField('crewId', 'That crew is not in use. Choose another.')
 }
 
 export function requirePersonRow(tx: DbOrTx, id: string): typeof people.$inferSelect {

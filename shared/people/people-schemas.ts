@@ -66,6 +66,8 @@ export const crewInputSchema = z.strictObject({
     .toUpperCase()
     .regex(/^[A-Z]$/, 'One letter, for the pennant.'),
   colour: z.number().int().min(1).max(6),
+  /** False: stood down, no longer to choose. */
+  active: z.boolean().default(true),
 })
 
 export const crewSchema = z.object({

@@ -5,6 +5,7 @@ import { crewMembers, leave } from '../../server/db/tables/people-tables.ts'
 import { issuePasswordToken } from '../../server/auth/password-links.ts'
 import { rosterOf } from '../../server/people/roster.ts'
 import { fri, mon, thu, wed } from './booking-kit.ts'
+import { jobKit } from './jobs-kit.ts'
 import { twoCrewFirm } from './people-kit.ts'
 
 test('trade school each Wednesday is one entry, and takes the Wednesdays only', async () => {
@@ -129,4 +130,24 @@ test('no word of a password, a session or a link’s token is in what the office
     .expect(409)
   for (const answer of [list, one, stale])
     expect(JSON.stringify(answer.body)).not.toMatch(/password|argon|sessionEpoch|token/i)
+})
+
+test('a crew is stood down once nobody is in it, and then takes nobody', async () => {
+  const { app, agent, otherLead, apprentice, bevel } = await twoCrewFirm()
+  const put = (active: boolean) =>
+    agent.put(`/api/crews/${bevel.id}`).send({ name: 'Bevel crew', letter: 'B', colour: 2, active })
+  const move = (id: string, crewId: string | null) =>
+    agent.put(`/api/people/${id}/crew`).send({ crewId, from: wed })
+  expect((await put(false).expect(400)).body.issues[0].path).toBe('active')
+  await move(otherLead.id, null).expect(200)
+  const kit = jobKit(app)
+  kit.addBooking(kit.addJob({}), bevel.id, [fri])
+  expect((await put(false).expect(400)).body.issues[0].message).toMatch(/days booked/)
+  app.clock.current = new Date('2026-12-07T00:00:00Z')
+  await put(false).expect(200)
+  const to = { crewId: bevel.id, from: '2026-12-08' }
+  const refused = await agent.put(`/api/people/${apprentice.id}/crew`).send(to).expect(400)
+  expect(refused.body.issues[0].path).toBe('crewId')
+  await put(true).expect(200)
+  await agent.put(`/api/people/${apprentice.id}/crew`).send(to).expect(200)
 })

@@ -37,9 +37,11 @@ export function CrewCards({ crews, people, today, search }: Props) {
                 <span className="min-w-0">
                   <span className="block font-semibold [overflow-wrap:anywhere]">{crew.name}</span>
                   <span className="block text-sm text-ink-soft [overflow-wrap:anywhere]">
-                    {there.length === 0
-                      ? 'Nobody there today'
-                      : `Today: ${there.map((person) => person.name).join(', ')}`}
+                    {!crew.active
+                      ? 'Not in use'
+                      : there.length === 0
+                        ? 'Nobody there today'
+                        : `Today: ${there.map((person) => person.name).join(', ')}`}
                   </span>
                 </span>
               </Link>

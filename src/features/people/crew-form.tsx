@@ -6,7 +6,7 @@ import { useFaultFocus } from '../../lib/use-fault-focus.ts'
 import { Button } from '../../ui/button.tsx'
 import { FormFailure } from '../../ui/form-failure.tsx'
 import { Field } from '../../ui/field.tsx'
-import { TextInput } from '../../ui/inputs.tsx'
+import { Checkbox, TextInput } from '../../ui/inputs.tsx'
 import { useSaveCrew } from './people-queries.ts'
 
 const colours = [1, 2, 3, 4, 5, 6]
@@ -22,12 +22,13 @@ export function CrewForm({ crew, crews, onDone }: Props) {
   const [name, setName] = useState(crew?.name ?? '')
   const [letter, setLetter] = useState(crew?.letter ?? '')
   const [colour, setColour] = useState(crew?.colour ?? freeColour(crews))
+  const [active, setActive] = useState(crew?.active ?? true)
   const save = useSaveCrew()
   const formRef = useFaultFocus(save.error)
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (!save.isPending)
-      save.mutate({ id: crew?.id ?? null, name, letter, colour }, { onSuccess: onDone })
+      save.mutate({ id: crew?.id ?? null, name, letter, colour, active }, { onSuccess: onDone })
   }
   return (
     <form ref={formRef} onSubmit={submit} noValidate className="space-y-4">
@@ -66,6 +67,13 @@ export function CrewForm({ crew, crews, onDone }: Props) {
           ))}
         </div>
       </fieldset>
+      {crew ? (
+        <Checkbox
+          label="In use"
+          checked={active}
+          onChange={(event) => setActive(event.target.checked)}
+        />
+      ) : null}
       <FormFailure error={save.error} shownPaths={['name', 'letter']} />
       <Button type="submit" busy={save.isPending}>
         Save crew

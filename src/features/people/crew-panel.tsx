@@ -68,7 +68,9 @@ function Parts({ crew, crews, people, seen }: Omit<Props, 'onClose'> & { seen: C
         form={(close) => <CrewForm crew={crew} crews={crews} onDone={close} />}
       >
         {now.length === 0 ? (
-          <p className="text-ink-soft">Nobody is in it. Open a person and move them here.</p>
+          <p className="text-ink-soft">
+            {crew.active ? 'Nobody is in it. Open a person and move them here.' : 'Not in use.'}
+          </p>
         ) : null}
         <Members members={now} today={firm.today} />
         {past.length > 0 ? (
@@ -79,7 +81,7 @@ function Parts({ crew, crews, people, seen }: Omit<Props, 'onClose'> & { seen: C
       </PanelSection>
       <PanelSection
         title="Borrowed"
-        {...(others.length > 0
+        {...(crew.active && others.length > 0
           ? {
               action: 'Borrow for a day',
               form: (close: () => void) => (

@@ -12,11 +12,13 @@ export function CrewSelect({ crews, value, onChange, ...rest }: Props) {
   return (
     <Select {...rest} value={value} onChange={(event) => onChange(event.target.value)}>
       <option value="">No crew</option>
-      {crews.map((crew) => (
-        <option key={crew.id} value={crew.id}>
-          {crew.name}
-        </option>
-      ))}
+      {crews
+        .filter((crew) => crew.active || crew.id === value)
+        .map((crew) => (
+          <option key={crew.id} value={crew.id}>
+            {crew.name}
+          </option>
+        ))}
     </Select>
   )
 }
