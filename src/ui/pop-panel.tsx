@@ -45,7 +45,7 @@ export function PopPanel({ anchor, title, onClose, children }: Props) {
             event.preventDefault()
             if (anchor instanceof SVGElement || anchor instanceof HTMLElement) anchor.focus()
           }}
-          className="pop-panel z-30 max-h-[60dvh] w-full overflow-y-auto rounded-t-md border border-rule bg-sheet p-4 shadow-float outline-none sm:w-80 sm:rounded-md"
+          className="pop-panel z-30 max-h-[60dvh] w-full overflow-y-auto rounded-t-md border border-rule bg-sheet p-4 shadow-float outline-none sm:max-h-[min(60dvh,var(--radix-popover-content-available-height))] sm:w-80 sm:rounded-md"
         >
           <div className="mb-2 flex items-start justify-between gap-3">
             <h2 ref={titleRef} tabIndex={-1} className="text-lg font-extrabold outline-none">

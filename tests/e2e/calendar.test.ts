@@ -36,7 +36,7 @@ test('with keys alone: a crew is booked, twice on one day only with a reason, an
   await page.getByRole('button', { name: 'Cancel the booking' }).focus()
   await page.keyboard.press('Enter')
   await cell.waitFor({ state: 'detached' })
-  const cancelled = page.locator('li').filter({ hasText: 'Booking cancelled.' })
+  const cancelled = page.locator('li').filter({ hasText: 'cancelled.' })
   await cancelled.getByRole('button', { name: 'Undo' }).focus()
   await page.keyboard.press('Enter')
   await cell.waitFor()

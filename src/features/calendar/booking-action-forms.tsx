@@ -26,10 +26,10 @@ export function PullButtons({ calendar, booking, stretch, onMake }: Props) {
   return (
     <div className="grid grid-cols-2 gap-2">
       <Button kind="plain" disabled={!shorter} onClick={() => onMake(shorter)}>
-        <Minus size={18} aria-hidden />A day
+        <Minus size={18} aria-hidden />A day less
       </Button>
       <Button kind="plain" onClick={() => onMake(by(1))}>
-        <Plus size={18} aria-hidden />A day
+        <Plus size={18} aria-hidden />A day more
       </Button>
     </div>
   )

@@ -14,10 +14,15 @@ import { BookingActions } from './booking-actions.tsx'
 import { cellClass, StateMark } from './booking-cell.tsx'
 import { DayFlagLines } from './booking-flags.tsx'
 import { daysFromTo } from './calendar-with-step.ts'
-import { crewRowOf, loadOf } from './crew-weeks-layout.ts'
+import { crewRowOf, type Load, loadOf } from './crew-weeks-layout.ts'
 
 type Opened = { bookingId: string; stretch: readonly Day[]; anchor: HTMLElement }
 type Open = (booking: CalendarBooking, stretch: readonly Day[], anchor: HTMLElement) => void
+
+function loadWords({ plannedMinutes, availableMinutes, isBooked }: Load): string {
+  if (isBooked) return formatLoad(plannedMinutes, availableMinutes)
+  return availableMinutes > 0 ? `${formatHours(availableMinutes)} free` : 'nobody there'
+}
 
 function CrewDays(props: {
   calendar: Calendar
@@ -42,8 +47,8 @@ function CrewDays(props: {
       </h3>
       <ol className="space-y-2">
         {shown.map(({ day, there }) => {
-          const { plannedMinutes, availableMinutes } = load(day)
-          const isOver = plannedMinutes > availableMinutes
+          const hours = load.get(day)
+          const isOver = hours !== undefined && hours.plannedMinutes > hours.availableMinutes
           const closed = whyNotWorked(calendar, day)
           return (
             <li key={day} className="border-t border-rule pt-2">
@@ -58,11 +63,7 @@ function CrewDays(props: {
                 <span
                   className={`text-sm ${isOver ? 'font-extrabold text-stop' : 'text-ink-soft'}`}
                 >
-                  {there.length > 0
-                    ? formatLoad(plannedMinutes, availableMinutes)
-                    : availableMinutes > 0
-                      ? `${formatHours(availableMinutes)} free`
-                      : 'nobody there'}
+                  {hours ? loadWords(hours) : ''}
                 </span>
               </p>
               {there.map((bar) => (

@@ -1,13 +1,12 @@
 import { useDraggable } from '@dnd-kit/core'
 import { BadgeCheck, Check, OctagonAlert, Pencil, TriangleAlert } from 'lucide-react'
-import type { KeyboardEvent } from 'react'
+import { type KeyboardEvent, memo, useMemo } from 'react'
 import { clashShortWords } from '../../../shared/clashes/clash-words.ts'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { RoofGlyph } from '../../drawings/roof-glyph.tsx'
 import { cellClass } from './booking-cell.tsx'
 import { FlagLine } from '../../ui/flag-line.tsx'
 import { lengthWords } from './booking-flags.tsx'
-import { nameOf } from './booking-steps.ts'
 import type { Bar } from './crew-weeks-layout.ts'
 import { daysInWords } from './drag-plan.ts'
 
@@ -42,7 +41,7 @@ function labelOf(bar: Bar): string {
   ].join(', ')
 }
 
-function BarText({ bar }: { bar: Bar }) {
+const BarText = memo(function BarText({ bar }: { bar: Bar }) {
   const { booking } = bar
   const flags = flagsOf(bar)
   const length = lengthWords(booking)
@@ -90,7 +89,7 @@ function BarText({ bar }: { bar: Bar }) {
       </span>
     </span>
   )
-}
+})
 
 const pullClass = 'absolute inset-y-0 w-2 cursor-ew-resize'
 
@@ -100,6 +99,7 @@ export function CrewWeeksBar(props: Props) {
   const { booking, stretch, fromColumn, toColumn, lane, goesOnBefore, goesOnAfter } = bar
   const isAllWorked = stretch.every((day) => booking.days.some((d) => d.day === day && d.worked))
   const mayDrag = mayEdit && !isAllWorked
+  const label = useMemo(() => labelOf(bar), [bar])
   const { attributes, listeners, setNodeRef } = useDraggable({
     id: `bar ${bar.key}`,
     data: { kind: 'bar', bar },
@@ -114,7 +114,7 @@ export function CrewWeeksBar(props: Props) {
       ref={setNodeRef}
       aria-disabled={undefined}
       aria-pressed={undefined}
-      aria-label={labelOf(bar)}
+      aria-label={label}
       data-bar={bar.key}
       data-booking={booking.id}
       data-column={fromColumn}
@@ -138,5 +138,3 @@ export function CrewWeeksBar(props: Props) {
     </div>
   )
 }
-
-export const barName = (bar: Bar): string => nameOf(bar.booking)

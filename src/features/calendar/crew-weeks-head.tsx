@@ -8,7 +8,7 @@ type Props = { calendar: Calendar; days: readonly Day[]; columns: string; minWid
 export function CrewWeeksHead({ calendar, days, columns, minWidth }: Props) {
   return (
     <div
-      className="sticky top-0 z-20 grid border-b-2 border-ink-soft bg-sheet"
+      className="sticky top-0 z-20 grid shrink-0 border-b-2 border-ink-soft bg-sheet"
       style={{ gridTemplateColumns: columns, minWidth }}
     >
       <span className="sticky left-0 z-10 border-r-2 border-ink-soft bg-sheet px-2 py-1.5 text-sm font-semibold text-ink-soft">
@@ -32,7 +32,7 @@ export function CrewWeeksHead({ calendar, days, columns, minWidth }: Props) {
               {isOff && !closed ? '' : <span className="max-sm:hidden"> {month}</span>}
             </span>
             {closed ? (
-              <span className="block text-xs font-normal [overflow-wrap:anywhere]">
+              <span className="mx-auto block max-h-24 overflow-hidden text-xs font-normal [writing-mode:vertical-rl]">
                 {closed.name}
               </span>
             ) : null}

@@ -67,9 +67,10 @@ export function crewRowOf(calendar: Calendar, crewId: string, days: readonly Day
 export function gridColumnsOf(
   calendar: Calendar,
   days: readonly Day[],
-  weeks: number,
+  { weeks, isWall }: { weeks: number; isWall: boolean },
 ): { columns: string; minWidth: string } {
-  const dayRem = weeks <= 2 ? 5.5 : weeks === 3 ? 4.75 : 4
+  // Nobody scrolls a screen on the wall: there the days share what width it has.
+  const dayRem = isWall ? 0 : weeks <= 2 ? 5.5 : weeks === 3 ? 4.75 : 4
   const sliverRem = 1.75
   const headRem = 8.5
   const booked = new Set(calendar.bookings.flatMap((b) => b.days.map((d) => d.day)))
@@ -81,20 +82,20 @@ export function gridColumnsOf(
   }
 }
 
-/** What a crew has to do on a day and the hours it has. */
-export function loadOf(calendar: Calendar, crewId: string) {
-  const hours = calendar.crewHours.filter((one) => one.crewId === crewId)
-  const booked = calendar.bookings
-    .filter((booking) => booking.crew.id === crewId)
-    .flatMap((booking) => booking.days)
-  return (day: Day) => {
-    const there = hours.find((one) => one.day === day)
-    const planned = booked.filter((one) => one.day === day)
-    return {
-      plannedMinutes: planned.reduce((sum, one) => sum + one.plannedMinutes, 0),
-      availableMinutes: there?.availableMinutes ?? planned[0]?.availableMinutes ?? 0,
-      peopleThere: there?.peopleThere ?? planned[0]?.peopleThere ?? 0,
-      isBooked: planned.length > 0,
+export type Load = { plannedMinutes: number; availableMinutes: number; isBooked: boolean }
+
+/** What a crew has to do on each day and the hours it has; no entry where that is not known. */
+export function loadOf(calendar: Calendar, crewId: string): ReadonlyMap<Day, Load> {
+  const load = new Map<Day, Load>()
+  for (const { day, availableMinutes, crewId: id } of calendar.crewHours)
+    if (id === crewId) load.set(day, { plannedMinutes: 0, availableMinutes, isBooked: false })
+  for (const booking of calendar.bookings) {
+    if (booking.crew.id !== crewId) continue
+    for (const { day, plannedMinutes, availableMinutes } of booking.days) {
+      const before = load.get(day) ?? { plannedMinutes: 0, availableMinutes }
+      const planned = before.plannedMinutes + plannedMinutes
+      load.set(day, { ...before, plannedMinutes: planned, isBooked: true })
     }
   }
+  return load
 }

@@ -1,5 +1,5 @@
 import { useDroppable } from '@dnd-kit/core'
-import type { KeyboardEvent } from 'react'
+import { type KeyboardEvent, useMemo } from 'react'
 import type { Calendar, CalendarCrew } from '../../../shared/bookings/calendar-schemas.ts'
 import { type Day, isoWeekday } from '../../../shared/calendar/days.ts'
 import { isWorked } from '../../../shared/calendar/working-days.ts'
@@ -60,8 +60,11 @@ function DayCell(props: {
 /** One crew: its bookings over the days, and under them its hours, a day a cell. */
 export function CrewWeeksRow(props: Props) {
   const { calendar, crew, days, columns, minWidth, mayEdit, landing, inHandKey, stopKey } = props
-  const { bars, laneCount } = crewRowOf(calendar, crew.id, days)
-  const load = loadOf(calendar, crew.id)
+  const { bars, laneCount } = useMemo(
+    () => crewRowOf(calendar, crew.id, days),
+    [calendar, crew.id, days],
+  )
+  const load = useMemo(() => loadOf(calendar, crew.id), [calendar, crew.id])
   const looksOf = (day: Day): string => {
     const edge = isoWeekday(day) === 1 ? 'border-l-2 border-ink-soft' : 'border-l border-rule'
     const lands = landing?.days.includes(day) ? landingClasses[landing.weight] : ''
@@ -72,10 +75,10 @@ export function CrewWeeksRow(props: Props) {
     <section
       aria-label={crew.name}
       data-crew={crew.id}
-      className="grid border-b-2 border-ink-soft last:border-b-0"
+      className="grid grow border-b-2 border-ink-soft last:border-b-0"
       style={{
         gridTemplateColumns: columns,
-        gridTemplateRows: `repeat(${laneCount}, minmax(4.75rem, auto)) auto`,
+        gridTemplateRows: `repeat(${laneCount}, minmax(4.75rem, 1fr)) auto`,
         minWidth,
       }}
     >
@@ -114,7 +117,7 @@ export function CrewWeeksRow(props: Props) {
           className="relative min-w-0 overflow-hidden"
           style={{ gridColumn: column + 2, gridRow: laneCount + 1 }}
         >
-          <LoadCell day={day} isOff={!isWorked(calendar, day)} {...load(day)} />
+          <LoadCell day={day} isOff={!isWorked(calendar, day)} load={load.get(day)} />
         </div>
       ))}
     </section>

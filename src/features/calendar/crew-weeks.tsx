@@ -1,6 +1,6 @@
 import { DndContext } from '@dnd-kit/core'
 import { useQuery } from '@tanstack/react-query'
-import { type KeyboardEvent, useState } from 'react'
+import { type KeyboardEvent, useMemo, useState } from 'react'
 import type { Calendar } from '../../../shared/bookings/calendar-schemas.ts'
 import { PopPanel } from '../../ui/pop-panel.tsx'
 import { EmptyState } from '../../ui/states.tsx'
@@ -35,7 +35,10 @@ function useCrewWeeks({ calendar }: Props) {
   const [opened, setOpened] = useState<Opened | null>(null)
   const [stopKey, setStopKey] = useState<string | null>(null)
   const focus = useBarFocus(grid)
-  const days = daysFromTo(calendar)
+  const days = useMemo(
+    () => daysFromTo({ from: calendar.from, to: calendar.to }),
+    [calendar.from, calendar.to],
+  )
   const dragging = useCrewWeeksDrag({
     calendar,
     days,
@@ -64,8 +67,11 @@ function useCrewWeeks({ calendar }: Props) {
       if (step) moves.make(step)
     } else focus.step(event)
   }
-  const rows = calendar.crews.map((crew) => crewRowOf(calendar, crew.id, days))
-  const keys = rows.flatMap((row) => row.bars.map((bar) => bar.key))
+  const keys = useMemo(
+    () =>
+      calendar.crews.flatMap(({ id }) => crewRowOf(calendar, id, days).bars.map((bar) => bar.key)),
+    [calendar, days],
+  )
   const stop = stopKey !== null && keys.includes(stopKey) ? stopKey : (keys[0] ?? null)
   return { setGrid, days, dragging, open, press, opened, setOpened, stop, setStopKey }
 }
@@ -76,7 +82,10 @@ export function CrewWeeks(props: Props) {
   const { setGrid, days, dragging, opened, setOpened, open, press, stop, setStopKey } =
     useCrewWeeks(props)
   const { drag, landing, context } = dragging
-  const sizes = gridColumnsOf(calendar, days, weeks)
+  const sizes = useMemo(
+    () => gridColumnsOf(calendar, days, { weeks, isWall }),
+    [calendar, days, weeks, isWall],
+  )
   const booking = calendar.bookings.find((one) => one.id === opened?.bookingId)
   const close = () => setOpened(null)
   if (calendar.crews.length === 0)
@@ -91,7 +100,7 @@ export function CrewWeeks(props: Props) {
         ref={setGrid}
         role="group"
         aria-label="Crew weeks"
-        className={`crew-weeks relative overflow-auto rounded-md border-2 border-ink-soft bg-sheet ${isWall ? 'max-h-[calc(100dvh-6rem)]' : 'max-h-[calc(100dvh-7rem)]'}`}
+        className={`crew-weeks relative flex flex-col overflow-auto rounded-md border-2 border-ink-soft bg-sheet ${isWall ? 'h-[calc(100dvh-5.5rem)]' : 'max-h-[calc(100dvh-7rem)]'}`}
       >
         <CrewWeeksHead calendar={calendar} days={days} {...sizes} />
         {calendar.crews.map((crew) => (

@@ -57,7 +57,7 @@ function Said({ landing }: { landing: Landing | null }) {
             className={`flex items-start gap-1 font-semibold ${clash.weight === 'clash' ? 'text-stop' : 'text-ochre'}`}
           >
             <Icon size={16} aria-hidden className="mt-0.5 shrink-0" />
-            <span>{clash.text}</span>
+            <span className="line-clamp-4 min-w-0 [overflow-wrap:anywhere]">{clash.text}</span>
           </li>
         )
       })}

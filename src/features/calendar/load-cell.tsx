@@ -1,20 +1,16 @@
+import { memo } from 'react'
 import { formatDay } from '../../../shared/calendar/days.ts'
 import { formatLoad } from '../../../shared/labour/format-hours.ts'
+import type { Load } from './crew-weeks-layout.ts'
 
-type Props = {
-  day: string
-  plannedMinutes: number
-  availableMinutes: number
-  isBooked: boolean
-  isOff: boolean
-}
+type Props = { day: string; load: Load | undefined; isOff: boolean }
 
 const hours = (minutes: number): string => String(Math.round(minutes / 6) / 10)
 
 /** A crew's planned hours against the hours it has, on one day. */
-export function LoadCell(props: Props) {
-  const { day, plannedMinutes, availableMinutes, isBooked, isOff } = props
-  if (isOff && !isBooked) return null
+export const LoadCell = memo(function LoadCell({ day, load, isOff }: Props) {
+  if (!load || (isOff && !load.isBooked)) return null
+  const { plannedMinutes, availableMinutes, isBooked } = load
   const isOver = plannedMinutes > availableMinutes
   const share = availableMinutes > 0 ? plannedMinutes / availableMinutes : isOver ? 1 : 0
   const nobody = availableMinutes === 0
@@ -45,4 +41,4 @@ export function LoadCell(props: Props) {
       </span>
     </span>
   )
-}
+})

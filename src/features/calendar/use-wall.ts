@@ -21,6 +21,11 @@ export function useWall(isWall: boolean, setWall: (on: boolean) => void) {
       document.removeEventListener('keydown', press)
     }
   })
+  useEffect(() => {
+    if (!isWall) return
+    document.documentElement.setAttribute('data-wall', 'on')
+    return () => document.documentElement.removeAttribute('data-wall')
+  }, [isWall])
   return (on: boolean) => {
     setWall(on)
     if (on) document.documentElement.requestFullscreen().catch(() => undefined)
