@@ -33,7 +33,7 @@ function DayHeader({ day }: { day: DayToClose }) {
       <PageHeader
         title={`${day.log ? 'Log of' : 'Close'} ${formatDay(day.day)}`}
         lead={
-          <span className="flex flex-wrap items-center gap-x-3 gap-y-1 text-ink">
+          <span className="flex items-start gap-x-3 text-ink">
             <CrewPennant letter={crew.letter} colour={crew.colour} name={crew.name} />
             <span>
               {job.number} {job.title}, {formatQuarters(day.plannedMinutes)} planned

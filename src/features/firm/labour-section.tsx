@@ -25,13 +25,16 @@ type Props = {
 const rolesWith = (source: LabourSource) =>
   (Object.keys(roleWords) as MemberRole[]).filter((role) => pieceSource(role) === source)
 
-function Group({ title, note, children }: { title: string; note: string; children: ReactNode }) {
+type GroupProps = { title: string; note: string; isOpen: boolean; children: ReactNode }
+
+/** Put away until asked for; a fault in it opens it. */
+function Group({ title, note, isOpen, children }: GroupProps) {
   return (
-    <section className="mt-5">
-      <h3 className="font-extrabold">{title}</h3>
+    <Fold title={title} isOpen={isOpen}>
       <p className="mb-3 max-w-prose text-sm text-ink-soft">{note}</p>
       {children}
-    </section>
+      <div className="h-4" />
+    </Fold>
   )
 }
 
@@ -96,46 +99,69 @@ function Packages({ rates, onChange, issueAt }: Props) {
   )
 }
 
-const hasSetUps = ({ startUpMinutes, packageMinutes }: Rates): boolean =>
-  startUpMinutes !== 0 || Object.values(packageMinutes).some((minutes) => minutes !== 0)
+function OtherWork({ rates, onChange, issueAt }: Props) {
+  return (
+    <div className={gridClass}>
+      {labourFields.map(({ key, label }) => (
+        <LabourNumber
+          key={key}
+          label={label}
+          value={rates[key]}
+          standard={standard[key]}
+          source="practice"
+          onChange={(value) => onChange({ ...rates, [key]: value })}
+          error={issueAt(`labourRates.${key}`)}
+        />
+      ))}
+    </div>
+  )
+}
 
 /** Minutes of one person; where the first figures come from stands with them. */
 export function LabourSection(props: Props) {
-  const { rates, onChange, issueAt } = props
+  const hasFault = (path: string) => props.issueAt(`labourRates.${path}`) !== undefined
+  const hasPieceFault = (source: LabourSource) =>
+    rolesWith(source).some((role) =>
+      ['cutMinutes', 'standMinutes'].some((key) => hasFault(`pieces.${role}.${key}`)),
+    )
   return (
     <Card>
       <h2 className="text-lg font-extrabold">Labour</h2>
       <p className="max-w-prose text-ink-soft">
         Minutes of one person. A job’s hours, planned and logged, show how near they are.
       </p>
-      <Group title="Rafters and lines, each piece" note={labourSourceNotes.textbook}>
-        <Pieces {...props} roles={rolesWith('textbook')} />
-      </Group>
-      <Group title="Purlins, ties and trim, each piece" note={labourSourceNotes.practice}>
-        <Pieces {...props} roles={rolesWith('practice')} />
-      </Group>
-      <Group title="Setting out, trying, bracing" note={labourSourceNotes.practice}>
-        <div className={gridClass}>
-          {labourFields.map(({ key, label }) => (
-            <LabourNumber
-              key={key}
-              label={label}
-              value={rates[key]}
-              standard={standard[key]}
-              source="practice"
-              onChange={(value) => onChange({ ...rates, [key]: value })}
-              error={issueAt(`labourRates.${key}`)}
-            />
-          ))}
-        </div>
-      </Group>
-      <div className="mt-3">
-        <Fold title="Set-ups and the start of a day" isOpen={hasSetUps(rates)}>
-          <p className="mb-3 max-w-prose text-sm text-ink-soft">
-            {labourSourceNotes['none-added']}
-          </p>
+      <div className="divide-y divide-rule">
+        <Group
+          title="Rafters and lines, each piece"
+          note={labourSourceNotes.textbook}
+          isOpen={hasPieceFault('textbook')}
+        >
+          <Pieces {...props} roles={rolesWith('textbook')} />
+        </Group>
+        <Group
+          title="Purlins, ties and trim, each piece"
+          note={labourSourceNotes.practice}
+          isOpen={hasPieceFault('practice')}
+        >
+          <Pieces {...props} roles={rolesWith('practice')} />
+        </Group>
+        <Group
+          title="Setting out, trying, bracing"
+          note={labourSourceNotes.practice}
+          isOpen={labourFields.some(({ key }) => hasFault(key))}
+        >
+          <OtherWork {...props} />
+        </Group>
+        <Group
+          title="Set-ups and the start of a day"
+          note={labourSourceNotes['none-added']}
+          isOpen={
+            hasFault('startUpMinutes') ||
+            packageKeys.some((key) => hasFault(`packageMinutes.${key}`))
+          }
+        >
           <Packages {...props} />
-        </Fold>
+        </Group>
       </div>
     </Card>
   )

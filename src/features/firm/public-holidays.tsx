@@ -48,27 +48,23 @@ type ListProps = {
 
 function HolidayList({ holidays, worked, onToggle }: ListProps) {
   return (
-    <ul className="grid gap-x-6 sm:grid-cols-2">
-      {holidays.map(({ day, name, holiday }) => {
-        const isWorked = worked.includes(holiday)
-        return (
-          <li
-            key={`${day} ${name}`}
-            className="flex flex-wrap items-center justify-between gap-x-4"
-          >
-            <span className={isWorked ? '' : 'font-semibold'}>
-              {formatDay(day)} · {name}
-            </span>
+    <fieldset>
+      <legend className="font-semibold">Days off</legend>
+      <p className="text-sm text-ink-soft">Take the tick out where the firm works all the same.</p>
+      <div className="grid gap-x-6 sm:grid-cols-2 xl:grid-cols-3">
+        {holidays.map(({ day, name, holiday }) => {
+          const isWorked = worked.includes(holiday)
+          return (
             <Checkbox
-              label="Worked all the same"
-              aria-label={`${name} is worked all the same`}
-              checked={isWorked}
+              key={`${day} ${name}`}
+              label={`${formatDay(day)} · ${name}${isWorked ? ', worked' : ''}`}
+              checked={!isWorked}
               onChange={() => onToggle(holiday)}
             />
-          </li>
-        )
-      })}
-    </ul>
+          )
+        })}
+      </div>
+    </fieldset>
   )
 }
 
