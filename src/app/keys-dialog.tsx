@@ -17,6 +17,24 @@ const groups: Group[] = [
     ],
   },
   {
+    title: 'On the calendar',
+    roles: ['office'],
+    keys: [
+      { keys: ['Ctrl', 'Z'], does: 'Take the last change of a booking back' },
+      { keys: ['Ctrl', 'Shift', 'Z'], does: 'Do it again' },
+    ],
+  },
+  {
+    title: 'On crew weeks',
+    roles: ['office'],
+    keys: [
+      { keys: ['↑', '↓', '←', '→'], does: 'To the next booking, or crew' },
+      { keys: ['Space'], does: 'Take the booking in hand; arrows carry it, Space puts it down' },
+      { keys: ['Shift', '→'], does: 'A day longer; with the left arrow a day shorter' },
+      { keys: ['Enter'], does: 'Show what can be done with it' },
+    ],
+  },
+  {
     title: 'Entering a roof',
     roles: ['office'],
     keys: [
