@@ -104,8 +104,8 @@ export type CalendarService = ReturnType<typeof createCalendarService>
 export function createCalendarService(deps: { db: Db; clock: Clock }) {
   const { db, clock } = deps
 
-  function viewOf(user: CurrentUser, from: DbOrTx = db) {
-    const firm = readFirm(from)
+  function viewOf(user: CurrentUser, from: DbOrTx = db, span?: { from: Day; to: Day }) {
+    const firm = readFirm(from, span)
     const now = clock.now()
     return {
       firm,
@@ -118,7 +118,7 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
   return {
     /** What is booked from one day to another, as far as the user may see it. */
     read(user: CurrentUser, span: { from: Day; to: Day }): Calendar {
-      const view = viewOf(user)
+      const view = viewOf(user, db, span)
       const visible = both(standingScope(), view.visible)
       const scope = both(visible, daysBetweenScope(span.from, span.to))
       const seen = readSeen(db, { ...view, scope, visible })
