@@ -1,10 +1,9 @@
 import { dayNear } from '../../../shared/people/leave-words.ts'
-import { failureText } from '../../lib/failure-text.ts'
 import { useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { FormFailure } from '../../ui/form-failure.tsx'
-import { useToast } from '../../ui/toast.tsx'
 import { useAddLoan, useDropLoan } from './time-queries.ts'
+import { useUndoLine } from './use-undo-line.tsx'
 
 export type LoanRow = {
   id: string
@@ -21,17 +20,19 @@ export function LoanList({ loans }: { loans: LoanRow[] }) {
   const { firm } = useSession()
   const drop = useDropLoan()
   const add = useAddLoan()
-  const toast = useToast()
-  const back = ({ personId: id, crewId, day, note }: LoanRow) =>
-    add.mutate(
-      { id, crewId, day, note },
-      { onError: (error) => toast(failureText(error) ?? '', { kind: 'stop' }) },
-    )
-  const takeBack = (loan: LoanRow) =>
+  const { line, say } = useUndoLine()
+  const takeBack = (loan: LoanRow) => {
+    const { personId: id, crewId, day, note } = loan
     drop.mutate(
-      { id: loan.personId, loanId: loan.id },
-      { onSuccess: () => toast('Day taken back.', { undo: () => back(loan) }) },
+      { id, loanId: loan.id },
+      {
+        onSuccess: () =>
+          say(`Taken back: ${dayNear(day, firm.today)} ${loan.words}.`, () =>
+            add.mutateAsync({ id, crewId, day, note }),
+          ),
+      },
     )
+  }
   return (
     <>
       <ul className="divide-y divide-rule">
@@ -53,6 +54,7 @@ export function LoanList({ loans }: { loans: LoanRow[] }) {
           </li>
         ))}
       </ul>
+      {line}
       <FormFailure error={drop.error} />
     </>
   )

@@ -11,15 +11,16 @@ import { TextInput } from '../../ui/inputs.tsx'
 import { crewName } from './crew-name.ts'
 import { CrewSelect } from './crew-select.tsx'
 import { useTellMove } from './use-tell-move.ts'
+import type { Say } from './use-undo-line.tsx'
 
-type Props = { person: PersonDetail; crews: Crew[]; onDone: () => void }
+type Props = { person: PersonDetail; crews: Crew[]; say: Say; onDone: () => void }
 
 /** From a day on in another crew. */
-export function MoveForm({ person, crews, onDone }: Props) {
+export function MoveForm({ person, crews, say, onDone }: Props) {
   const { firm } = useSession()
   const [crewId, setCrewId] = useState(person.crewId ?? '')
   const [from, setFrom] = useState(firm.today)
-  const { move, tell } = useTellMove(person, crews)
+  const { move, tell } = useTellMove(person, crews, say)
   const formRef = useFaultFocus(move.error)
   const planned = person.nextMove
   const submit = (event: FormEvent) => {

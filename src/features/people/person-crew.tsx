@@ -10,12 +10,13 @@ import { LoanList } from './loan-list.tsx'
 import { MoveForm } from './move-form.tsx'
 import { PanelSection } from './panel-section.tsx'
 import { useTellMove } from './use-tell-move.ts'
+import { type Say, useUndoLine } from './use-undo-line.tsx'
 
 type Props = { person: PersonDetail; crews: Crew[] }
 
-function PlannedMove({ person, crews }: Props) {
+function PlannedMove({ person, crews, say }: Props & { say: Say }) {
   const { firm } = useSession()
-  const { move, tell } = useTellMove(person, crews)
+  const { move, tell } = useTellMove(person, crews, say)
   const { nextMove, crewId } = person
   if (!nextMove) return null
   const words = `From ${dayNear(nextMove.from, firm.today)}: ${crewName(crews, nextMove.crewId)}`
@@ -67,6 +68,7 @@ function sinceText({ memberships, crewId }: PersonDetail, today: string): string
 /** The crew now and next, who it was, and days with another one. */
 export function PersonCrew({ person, crews }: Props) {
   const { firm } = useSession()
+  const { line, say } = useUndoLine()
   const others = crews.filter((crew) => crew.active && crew.id !== person.crewId)
   const loans = person.loans.map((loan) => ({
     ...loan,
@@ -78,13 +80,14 @@ export function PersonCrew({ person, crews }: Props) {
       <PanelSection
         title="Crew"
         action="Move"
-        form={(close) => <MoveForm person={person} crews={crews} onDone={close} />}
+        form={(close) => <MoveForm person={person} crews={crews} say={say} onDone={close} />}
       >
         <p>
           Now in <span className="font-semibold">{crewName(crews, person.crewId)}</span>
           {sinceText(person, firm.today)}.
         </p>
-        <PlannedMove person={person} crews={crews} />
+        <PlannedMove person={person} crews={crews} say={say} />
+        {line}
         <History person={person} crews={crews} />
       </PanelSection>
       {others.length > 0 ? (

@@ -1,29 +1,29 @@
 import type { Leave } from '../../../shared/people/leave-schemas.ts'
 import { leaveKindNames, leaveSpanText } from '../../../shared/people/leave-words.ts'
 import type { PersonDetail } from '../../../shared/people/people-schemas.ts'
-import { failureText } from '../../lib/failure-text.ts'
 import { useSession } from '../../lib/session.ts'
 import { Button } from '../../ui/button.tsx'
 import { FormFailure } from '../../ui/form-failure.tsx'
-import { useToast } from '../../ui/toast.tsx'
 import { LeaveForm } from './leave-form.tsx'
 import { PanelSection } from './panel-section.tsx'
 import { useAddLeave, useDropLeave } from './time-queries.ts'
+import { useUndoLine } from './use-undo-line.tsx'
 
 export function PersonLeave({ person }: { person: PersonDetail }) {
   const { firm } = useSession()
   const add = useAddLeave()
   const drop = useDropLeave()
-  const toast = useToast()
-  const back = (leave: Omit<Leave, 'id'>) =>
-    add.mutate(
-      { id: person.id, ...leave },
-      { onError: (error) => toast(failureText(error) ?? '', { kind: 'stop' }) },
-    )
-  const takeBack = ({ id, ...leave }: Leave) =>
+  const { line, say } = useUndoLine()
+  const takeBack = ({ id: leaveId, ...leave }: Leave) =>
     drop.mutate(
-      { id: person.id, leaveId: id },
-      { onSuccess: () => toast('Leave taken back.', { undo: () => back(leave) }) },
+      { id: person.id, leaveId },
+      {
+        onSuccess: () =>
+          say(
+            `Taken back: ${leaveKindNames[leave.kind]} ${leaveSpanText(leave, firm.today)}.`,
+            () => add.mutateAsync({ id: person.id, ...leave }),
+          ),
+      },
     )
   return (
     <PanelSection
@@ -52,6 +52,7 @@ export function PersonLeave({ person }: { person: PersonDetail }) {
           </li>
         ))}
       </ul>
+      {line}
       <FormFailure error={drop.error} />
     </PanelSection>
   )
