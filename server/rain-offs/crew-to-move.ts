@@ -17,8 +17,8 @@ export type CrewToMove = { bookings: BookingToMove[]; rowOf(bookingId: string): 
 const standingOf = (crewId: string, fromDay: Day): SQL | undefined =>
   and(
     isNull(bookings.cancelledAt),
-    eq(bookings.crewId, crewId),
-    // Not `exists`: for each booking the crew ever had that would look for a day.
+    // From the days ahead, not from the crew: of all bookings it ever had few have one.
+    sql`+${bookings.crewId} = ${crewId}`,
     sql`${bookings.id} in (select later.booking_id from booking_days later where later.day >= ${fromDay})`,
   )
 

@@ -44,34 +44,49 @@ function Answer({ row }: { row: RainOffRow }) {
   )
 }
 
-/** At the foot of Today: what was asked for and answered, and the way to ask. */
-export function TodayRainOff({ crewId, day }: { crewId: string; day: string }) {
+/** What was said of a crew's days lately, newest first; of one day only the last. */
+function useAnswers(crewId: string): RainOffRow[] {
   const mayAsk = useMay('rain-off:ask')
-  const mayMake = useMay('rain-off:write')
   const { data } = useQuery({ ...rainOffQueries.list(), enabled: mayAsk })
-  if (!mayAsk) return null
-  const since = data ? dayPlus(data.today, -shownDaysBack) : ''
-  const own = (data?.rainOffs ?? []).filter(
+  if (!data) return []
+  const since = dayPlus(data.today, -shownDaysBack)
+  const own = data.rainOffs.filter(
     (row) => row.crew.id === crewId && row.fromDay >= since && !row.takenBack,
   )
-  // Newest first: of one day only what was said last.
-  const shown = own.filter((row, i) => own.findIndex((o) => o.fromDay === row.fromDay) === i)
-  const isAsked = shown.some((row) => row.state === 'asked' && row.fromDay === day)
-  const search = new URLSearchParams({ crew: crewId, day }).toString()
+  return own.filter((row, i) => own.findIndex((one) => one.fromDay === row.fromDay) === i)
+}
+
+type Which = { crewId: string; day: string }
+
+/** Over the day sheet: what was asked for, and what the office said to it. */
+export function RainOffAnswers({ crewId }: Which) {
+  const answers = useAnswers(crewId)
+  if (answers.length === 0) return null
   return (
-    <section aria-label="Rain-off" className="mt-6 space-y-3 print:hidden">
-      {shown.map((row) => (
+    <section aria-label="Rain-offs" className="mb-4 space-y-3 print:hidden">
+      {answers.map((row) => (
         <Answer key={row.id} row={row} />
       ))}
-      {isAsked ? null : (
-        <Link
-          to={mayMake ? `/calendar/rain-off?${search}` : `/today/rain-off?${search}`}
-          className={buttonClass('plain', 'site')}
-        >
-          <CloudRain size={22} aria-hidden />
-          {mayMake ? 'Rain-off' : 'Ask for a rain-off'}
-        </Link>
-      )}
     </section>
+  )
+}
+
+/** Under the day sheet: the way to ask; for the office the way to make one. */
+export function AskRainOffLink({ crewId, day }: Which) {
+  const mayAsk = useMay('rain-off:ask')
+  const mayMake = useMay('rain-off:write')
+  const isAsked = useAnswers(crewId).some((row) => row.state === 'asked' && row.fromDay === day)
+  if (!mayAsk || isAsked) return null
+  const search = new URLSearchParams({ crew: crewId, day }).toString()
+  return (
+    <p className="mt-6 print:hidden">
+      <Link
+        to={mayMake ? `/calendar/rain-off?${search}` : `/today/rain-off?${search}`}
+        className={buttonClass('plain', 'site')}
+      >
+        <CloudRain size={22} aria-hidden />
+        {mayMake ? 'Rain-off' : 'Ask for a rain-off'}
+      </Link>
+    </p>
   )
 }

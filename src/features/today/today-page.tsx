@@ -76,18 +76,20 @@ function NothingBooked({ sheets, onDay }: { sheets: DaySheets; onDay: (day: stri
   )
 }
 
-/** What another feature puts under a crew's day. */
-type Foot = (which: { crewId: string; day: string }) => ReactNode
+/** What another feature puts over and under a crew's day. */
+type Slot = (which: { crewId: string; day: string }) => ReactNode
+type Slots = { head: Slot; foot: Slot }
 
 function TodayBody({
   sheets,
   set,
+  head,
   foot,
 }: {
   sheets: DaySheets
   set: ReturnType<typeof useWhich>['set']
-  foot: Foot
-}) {
+} & Slots) {
+  const which = sheets.crew ? { crewId: sheets.crew.id, day: sheets.day } : null
   const { firm } = useSession()
   const jobs = sheets.sheets.map(({ job, revision }) =>
     [job.number, revision ? `revision ${revision.letter}` : ''].filter(Boolean).join(', '),
@@ -124,6 +126,7 @@ function TodayBody({
       />
       <DaySwitcher sheets={sheets} onDay={(day) => set('day', day)} />
       <CrewPicker sheets={sheets} onCrew={(id) => set('crew', id)} />
+      {which ? head(which) : null}
       <PrintFoot
         left={`${firm.name}: ${jobs.join('; ')}`}
         middle={`Day sheet ${formatDayWithYear(sheets.day)}`}
@@ -137,13 +140,13 @@ function TodayBody({
           ))}
         </div>
       )}
-      {sheets.crew ? foot({ crewId: sheets.crew.id, day: sheets.day }) : null}
+      {which ? foot(which) : null}
     </>
   )
 }
 
 /** What a crew needs on the day, read on a phone in the sun. */
-export function TodayPage({ foot }: { foot: Foot }) {
+export function TodayPage(slots: Slots) {
   const { day, crewId, set } = useWhich()
   const query = useQuery(todayQueries.sheets({ day, crewId }))
   if (query.isPending) return <PageSkeleton />
@@ -159,7 +162,7 @@ export function TodayPage({ foot }: { foot: Foot }) {
     )
   return (
     <div className="site-screen" aria-busy={query.isPlaceholderData}>
-      <TodayBody sheets={query.data} set={set} foot={foot} />
+      <TodayBody sheets={query.data} set={set} {...slots} />
     </div>
   )
 }
