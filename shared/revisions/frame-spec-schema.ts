@@ -140,6 +140,7 @@ const cautionCodes = [
   'crown-bevel-shortcut',
   'rafter-span-long',
   'joint-open',
+  'tail-touches',
   'collar-tie-moved',
   'eaves-meet',
 ] as const

@@ -118,7 +118,7 @@ export const roofJoints = (roof: Roof, lines: RoofLines): Joints => {
     groups.push(nodes)
   })
   const chains = ridgeChains(lines, ofNode, swallowed)
-  const pinched = pinchedLines(roof, lines, swallowed)
+  const pinched = pinchedLines(roof, lines, ofNode, swallowed)
   const gone = new Set([...swallowed, ...pinched])
   const joints = groups.map((nodes, index) => jointOf(lines, gone, chains, nodes, index))
   return { joints, ofNode, swallowed, pinched, chains }

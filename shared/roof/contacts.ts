@@ -164,20 +164,46 @@ export const bearings = (
     .map(([id]) => id)
 }
 
-/** A head that bears over less than this share of its faces hangs by a corner. No source. */
+/** An end that bears over less than this share of its faces hangs by a corner. No source. */
 const leastHeld = 1 / 8
 
-/** Whether next to nothing holds a piece's head, whatever was placed first. */
+const anyMayBear: MayBear = () => true
+
+/** Whether next to nothing holds an end of a piece, whatever was placed first. */
 export const hangsByCorner = (
   pieces: readonly Piece[],
   segments: SegmentIndex,
   piece: Piece,
+  end: PieceEnd,
 ): boolean => {
-  const faces = (segments.ofPiece[piece.id] ?? []).filter((s) => s.side.kind === 'head')
+  const faces = (segments.ofPiece[piece.id] ?? []).filter((s) => s.side.kind === end)
   let [borneMm2, faceMm2] = [0, 0]
   for (const face of faces) {
     faceMm2 += (length2(sub2(face.to, face.from)) * piece.section.depthMm) / piece.cos
-    bearingAreas(pieces, segments, face, () => true).forEach((mm2) => (borneMm2 += mm2))
+    bearingAreas(pieces, segments, face, anyMayBear).forEach((mm2) => (borneMm2 += mm2))
   }
   return faceMm2 > 0 && borneMm2 < leastHeld * faceMm2
+}
+
+/** Faces that share less than this touch by a corner's tip. */
+const tipMm2 = 25
+
+/** Pieces that the free end of a plumb tail stands hard against, though it is not cut for them. */
+export const tailTouches = (
+  pieces: readonly Piece[],
+  segments: SegmentIndex,
+  piece: Piece,
+): number[] => {
+  const { points, labels } = fullPlan(piece)
+  return gather(points, (from, k): number[] => {
+    if (at(labels, k).kind !== 'open') return []
+    const face: Segment = {
+      piece: piece.id,
+      side: { kind: 'open' },
+      from,
+      to: at(points, k + 1),
+    }
+    const areas = bearingAreas(pieces, segments, face, anyMayBear)
+    return [...areas].filter(([, mm2]) => mm2 > tipMm2).map(([id]) => id)
+  })
 }

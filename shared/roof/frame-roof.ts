@@ -1,11 +1,12 @@
 import { buildPieces } from './build-pieces.ts'
 import type { Ground } from './build-pieces.ts'
 import { cautionsOf } from './cautions.ts'
-import { bearings, hangsByCorner, segmentIndex } from './contacts.ts'
+import { bearings, segmentIndex } from './contacts.ts'
 import { markMembers } from './cut-lines.ts'
 import { cutJoints } from './joint-order.ts'
 import { draftMember } from './members.ts'
 import type { FrameDraft } from './members.ts'
+import { markedEnds, openEnds } from './open-ends.ts'
 import { planingOf } from './planing.ts'
 import { publishedLines, publishedPlanes } from './published-lines.ts'
 import { RoofRefusedError, setOutRoof } from './roof-problems.ts'
@@ -39,10 +40,7 @@ const draftMembers = (ground: Ground, standMm: number) => {
       return bearings(pieces, segments, piece, cut.end, cut.listed, mayBear)
     }),
   )
-  const hung = pieces.filter(
-    (p) => p.role !== 'ridge' && p.headJoint !== null && hangsByCorner(pieces, segments, p),
-  )
-  return { drafts, openPieces: new Set([...openPieces, ...hung.map((p) => p.id)]) }
+  return { drafts, ends: openEnds(ground.roof, pieces, segments, openPieces) }
 }
 
 /**
@@ -57,14 +55,14 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
   const { plates, lines, joints } = setOut
   const ground: Ground = { roof, settings, plates, lines, joints }
   const standMm = commonStandMm(roof, plates.slopes)
-  const { drafts, openPieces } = draftMembers(ground, standMm)
+  const { drafts, ends } = draftMembers(ground, standMm)
   const unmade = unmadeProblems(ground, drafts)
   if (unmade.length > 0) throw new RoofRefusedError(unmade)
   const standing: BesideGround = { ...ground, standMm, drafts }
   const beside = besideFrame(standing)
   const all = [...drafts, ...beside.drafts]
   const { members, cutLines, markOf } = markMembers(all)
-  const openMarks = new Set([...openPieces].map((piece) => markOf.get(piece)))
+  const open = markedEnds(ends, markOf)
   const planes = publishedPlanes(plates, lines)
   const published = publishedLines(plates, lines)
   return {
@@ -77,7 +75,7 @@ export const frameRoof = (roof: Roof, settings: RoofSettings = defaultSettings):
       ...roofTotals(planes, published, members),
       covering: coveringTotals(standing, planes, members),
     },
-    cautions: [...cautionsOf(ground, standMm, members, openMarks), ...beside.cautions],
+    cautions: [...cautionsOf(ground, standMm, members, open), ...beside.cautions],
     planing: planingOf(drafts, plates, lines, standMm, markOf),
     rounding: worstRounding(all, settings, markOf),
   }

@@ -5,7 +5,8 @@ import type { Box } from './convex.ts'
 import { phases } from './joint-phases.ts'
 import type { EndJob } from './joint-phases.ts'
 import { gather } from './lists.ts'
-import type { Piece, PlanCut } from './piece.ts'
+import { isAlongCrease } from './piece.ts'
+import type { Piece, PieceEnd, PlanCut } from './piece.ts'
 import type { Point2 } from './roof-types.ts'
 import { at } from './slopes.ts'
 import { halfObstacle } from './trim.ts'
@@ -18,6 +19,8 @@ export type JointFaults = {
   needsOther: (joint: number) => boolean
   /** Pieces whose heads do not close. */
   openPieces: readonly number[]
+  /** Whether a hip or valley stops far short of its end. */
+  stopsShort: boolean
 }
 
 /** A head that does not close, in the count of faults; a third cut or a feathered one only adds to it. */
@@ -40,6 +43,8 @@ const behindMm = 6
 /** What lies further than this off an end has no part in it; more than `behindMm`. */
 const besideMm = 10
 const closedShare = 0.985
+/** A hip or valley that stops this far short of its end leaves what should bear on it there hanging. */
+const farMm = 400
 /** Pieces that share more of the plan than this are in each other's way. */
 const overlapMm2 = 1
 
@@ -91,11 +96,24 @@ const bearingOf = (face: Segment, cut: PlanCut, bodies: readonly Body[]) => {
   return { bornMm, closes: bornMm >= closedShare * meant && bornMm > sliverMm }
 }
 
+/** How far before its set-out end a piece's centre line is cut off; under 0 where it runs past. */
+const shortMm = (piece: Piece, end: PieceEnd, cuts: readonly PlanCut[]): number => {
+  const [set, out] = end === 'head' ? [piece.head, piece.dir] : [piece.foot, scale2(piece.dir, -1)]
+  return Math.max(
+    ...cuts.map(({ normal, point }) => dot2(normal, sub2(set, point)) / dot2(normal, out)),
+  )
+}
+
+const isCutShort = ({ piece, end }: EndJob): boolean =>
+  isAlongCrease(piece.role) &&
+  shortMm(piece, end, end === 'head' ? piece.headCuts : piece.footCuts) > farMm
+
 const endFaults = (job: EndJob, own: Body, bodies: readonly Body[]): number => {
   const { piece, end } = job
   const cuts = end === 'head' ? piece.headCuts : piece.footCuts
   let faults = Math.max(0, cuts.length - 2) * awkward
   let [faceMm, bornMm] = [0, 0]
+  if (isCutShort(job)) faults += poor
   cuts.forEach((cut, k) => {
     const facing = Math.abs(dot2(cut.normal, piece.dir))
     if (facing < featherFacing) faults += facing < ripFacing ? poor : awkward
@@ -171,5 +189,10 @@ export const jointFaults = (
     standing.push(...(made.get(piece.id) ?? []))
     made.delete(piece.id)
   })
-  return { total, needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= poor, openPieces }
+  return {
+    total,
+    needsOther: (joint) => (ofJoint.get(joint) ?? 0) >= poor,
+    openPieces,
+    stopsShort: jobs.some(isCutShort),
+  }
 }

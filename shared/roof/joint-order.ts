@@ -176,8 +176,8 @@ const placeGroup = (
     }
   }
   for (const joint of group) tryWays(joint, () => !best.faults.needsOther(joint))
-  // what leaves a head open can be the joint beside it
-  const isClosed = () => best.faults.openPieces.length === 0
+  // what leaves a head open, or cuts a valley short, can be the joint beside it
+  const isClosed = () => best.faults.openPieces.length === 0 && !best.faults.stopsShort
   for (let round = 0; round < 2 && group.length > 1; round++) {
     for (const joint of group) tryWays(joint, isClosed)
   }

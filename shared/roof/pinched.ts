@@ -15,9 +15,17 @@ type Strip = {
   halfMm: number
   isFromPlate: boolean
   lengthMm: number
+  /** The joints that it runs between; null at the plate. */
+  joints: (number | null)[]
 }
 
-const stripOf = (roof: Roof, lines: RoofLines, line: NodeLine, index: number): Strip => {
+const stripOf = (
+  roof: Roof,
+  lines: RoofLines,
+  ofNode: readonly (number | null)[],
+  line: NodeLine,
+  index: number,
+): Strip => {
   const [from, to] = [at(lines.nodes, line.from), at(lines.nodes, line.to)]
   const { valley, hip } = roof.sections
   return {
@@ -27,6 +35,7 @@ const stripOf = (roof: Roof, lines: RoofLines, line: NodeLine, index: number): S
     halfMm: (line.kind === 'valley' ? valley : hip).thicknessMm / 2,
     isFromPlate: from.corner !== null,
     lengthMm: distance2(from.point, to.point),
+    joints: [ofNode[line.from] ?? null, ofNode[line.to] ?? null],
   }
 }
 
@@ -38,8 +47,13 @@ const distanceTo = (p: Point2, { from, to, lengthMm }: Strip): number => {
 
 const liesBeside = (strip: Strip, other: Strip): boolean => {
   const most = strip.halfMm + other.halfMm + roomMm
-  const isNear = (p: Point2) => distanceTo(p, other) <= most
-  return isNear(strip.from) && isNear(strip.to)
+  const near = [strip.from, strip.to].map((p) => distanceTo(p, other) <= most)
+  if (!near.includes(true)) return false
+  // in one joint no timber fits between them either
+  return near.every((isNear, end) => {
+    const joint = strip.joints[end] ?? null
+    return isNear || (joint !== null && other.joints.includes(joint))
+  })
 }
 
 /** Which of two lines keeps its timber: the one from the plate, then the longer. */
@@ -54,11 +68,12 @@ const keepsBefore = (a: Strip, b: Strip): number =>
 export const pinchedLines = (
   roof: Roof,
   lines: RoofLines,
+  ofNode: readonly (number | null)[],
   skipped: ReadonlySet<number>,
 ): ReadonlySet<number> => {
   const strips = lines.lines.flatMap((line, index): Strip[] => {
     const isCrease = line.kind === 'hip' || line.kind === 'broken-hip' || line.kind === 'valley'
-    return isCrease && !skipped.has(index) ? [stripOf(roof, lines, line, index)] : []
+    return isCrease && !skipped.has(index) ? [stripOf(roof, lines, ofNode, line, index)] : []
   })
   const kept: Strip[] = []
   const pinched = new Set<number>()

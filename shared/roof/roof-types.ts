@@ -246,6 +246,7 @@ export type CautionCode =
   | 'crown-bevel-shortcut'
   | 'rafter-span-long'
   | 'joint-open'
+  | 'tail-touches'
   | 'collar-tie-moved'
   | 'eaves-meet'
 

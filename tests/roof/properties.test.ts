@@ -17,6 +17,9 @@ import { sampleOf } from './support/sample.ts'
  */
 const settings = { seed: 20251201, numRuns: sampleOf(30, 300) }
 
+/** The tests that frame these roofs first: 300 take over a minute on a busy machine. */
+const framingTimeMs = sampleOf(30_000, 600_000)
+
 const outlines = fc
   .record({
     gaps: fc.array(fc.double({ min: 0.35, max: 1, noNaN: true }), { minLength: 3, maxLength: 8 }),
@@ -72,29 +75,37 @@ const numbersOf = (value: unknown): number[] => {
 }
 
 describe('over random convex plans', () => {
-  test('at one pitch the slopes add up to the plan area over the cosine', () => {
-    fc.assert(
-      fc.property(onePitch, (roof) => {
-        const spec = framedOnce(roof)
-        const lean = Math.cos((spec.planes[0]!.pitchDeg * Math.PI) / 180)
-        expect(spec.totals.roofAreaM2).toBeCloseTo(planAreaM2(roof.outline) / lean, 5)
-      }),
-      settings,
-    )
-  })
+  test(
+    'at one pitch the slopes add up to the plan area over the cosine',
+    () => {
+      fc.assert(
+        fc.property(onePitch, (roof) => {
+          const spec = framedOnce(roof)
+          const lean = Math.cos((spec.planes[0]!.pitchDeg * Math.PI) / 180)
+          expect(spec.totals.roofAreaM2).toBeCloseTo(planAreaM2(roof.outline) / lean, 5)
+        }),
+        settings,
+      )
+    },
+    framingTimeMs,
+  )
 
-  test('at any pitches the slopes cover the plan once: their plans add up to it', () => {
-    fc.assert(
-      fc.property(anyPitch, (roof) => {
-        const plan = framedOnce(roof).planes.reduce(
-          (sum, p) => sum + p.areaM2 * Math.cos((p.pitchDeg * Math.PI) / 180),
-          0,
-        )
-        expect(plan).toBeCloseTo(planAreaM2(roof.outline), 4)
-      }),
-      settings,
-    )
-  })
+  test(
+    'at any pitches the slopes cover the plan once: their plans add up to it',
+    () => {
+      fc.assert(
+        fc.property(anyPitch, (roof) => {
+          const plan = framedOnce(roof).planes.reduce(
+            (sum, p) => sum + p.areaM2 * Math.cos((p.pitchDeg * Math.PI) / 180),
+            0,
+          )
+          expect(plan).toBeCloseTo(planAreaM2(roof.outline), 4)
+        }),
+        settings,
+      )
+    },
+    framingTimeMs,
+  )
 
   test('every point of the plan lies under exactly one slope', () => {
     const weights = fc.array(fc.double({ min: 0.01, max: 1, noNaN: true }), {

@@ -26,7 +26,7 @@ type Bearing = {
   openMm2: number
   /** The widest opening, square to the cut; under 0 where the pieces run into each other. */
   worstMm: number
-  /** It was cut to fit this piece, or is a board nailed over its end: it needs no name here. */
+  /** It was cut to fit this piece, is a board nailed over its end, or a caution says that they touch. */
   needsNoName: boolean
 }
 
@@ -106,7 +106,14 @@ function bearingsOn(
       const facing = facets.facing(o, scale(frame.normal, -1), FACING)
       const buttsBack = o.member.cuts.some((c) => [c.against, ...c.alsoAgainst].includes(mark))
       const covers = isFrameMember(piece.member) && ['fascia', 'barge'].includes(o.member.role)
-      const needsNoName = buttsBack || covers
+      // two pieces not cut for each other touch by chance: that is no joint, but it has to be said
+      const isSaid =
+        sawn.cut.end === 'tail' &&
+        site.spec.cautions.some(
+          ({ code, members }) =>
+            code === 'tail-touches' && members.includes(mark) && members.includes(o.member.mark),
+        )
+      const needsNoName = buttsBack || covers || isSaid
       return { mark: o.member.mark, needsNoName, ...bearingOn(site, frame, face, facing) }
     })
     .filter((b) => b.closedMm2 + b.openMm2 > TOUCH_MM2)
