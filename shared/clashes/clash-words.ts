@@ -9,7 +9,7 @@ import type { ClashCode } from './clash-schemas.ts'
 export const clashShortWords: Record<ClashCode, string> = {
   'crew-twice': 'Crew booked twice',
   'nobody-there': 'Nobody there',
-  'apprentice-alone': 'No tradesperson',
+  'apprentice-alone': 'Apprentice alone',
   'ticket-lapsed': 'Ticket not in order',
   'before-frames': 'Before frames',
   'before-edge-protection': 'Before edge protection',

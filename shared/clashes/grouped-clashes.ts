@@ -18,3 +18,8 @@ export function groupedClashes(found: readonly BookingClash[]): ListedClash[] {
     `${days[0]} ${weight === 'clash' ? 0 : 1}`
   return listed.sort((a, b) => (place(a) < place(b) ? -1 : place(a) > place(b) ? 1 : 0))
 }
+
+/** Of one booking: all that must be settled before what may stand. */
+export function worstFirst(listed: readonly ListedClash[]): ListedClash[] {
+  return [...listed].sort((a, b) => Number(b.weight === 'clash') - Number(a.weight === 'clash'))
+}

@@ -2,7 +2,7 @@ import type { Booking, CalendarBooking } from '../../../shared/bookings/calendar
 import type { Clash } from '../../../shared/clashes/clash-schemas.ts'
 import { clashShortWords } from '../../../shared/clashes/clash-words.ts'
 import { daysInWords } from '../../../shared/clashes/days-in-words.ts'
-import { groupedClashes } from '../../../shared/clashes/grouped-clashes.ts'
+import { groupedClashes, worstFirst } from '../../../shared/clashes/grouped-clashes.ts'
 import { formatHours } from '../../../shared/labour/format-hours.ts'
 import { FlagItem, FlagLine } from '../../ui/flag-line.tsx'
 
@@ -43,7 +43,7 @@ export function BookingClashes({ booking }: { booking: Booking }) {
         What stands in the way
       </h3>
       <ul className="divide-y divide-rule">
-        {listed.map((clash) => (
+        {worstFirst(listed).map((clash) => (
           <FlagItem
             key={`${clash.code} ${clash.weight} ${clash.text}`}
             weight={clash.weight}

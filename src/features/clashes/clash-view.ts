@@ -1,5 +1,6 @@
 import type { ClashList, ListedClash } from '../../../shared/clashes/clash-list-schemas.ts'
 import { type ClashCode, clashCodes } from '../../../shared/clashes/clash-schemas.ts'
+import { worstFirst } from '../../../shared/clashes/grouped-clashes.ts'
 import { groupBy } from '../../../shared/collections/group-by.ts'
 
 export type ClashFilter = {
@@ -30,7 +31,7 @@ export function clashBookings(list: ClashList, filter: ClashFilter): ClashBookin
   return [...groupBy(asked, (clash) => clash.bookingId)]
     .flatMap(([id, clashes]) => {
       const booking = bookings.get(id)
-      return booking ? [{ ...booking, clashes }] : []
+      return booking ? [{ ...booking, clashes: worstFirst(clashes) }] : []
     })
     .filter(
       (booking) =>
