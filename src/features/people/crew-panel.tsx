@@ -58,7 +58,10 @@ function Parts({ crew, crews, people, seen }: Omit<Props, 'onClose'> & { seen: C
   const stays = (member: Member) => member.endsOn === null || member.endsOn >= firm.today
   const now = seen.members.filter(stays).sort(byRole)
   const past = seen.members.filter((member) => !stays(member))
-  const others = people.filter((person) => person.active && person.crewId !== crew.id)
+  // Those who work in crews first.
+  const others = people
+    .filter((person) => person.active && person.crewId !== crew.id)
+    .sort((a, b) => Number(a.crewId === null) - Number(b.crewId === null))
   const loans = seen.loans.map((loan) => ({ ...loan, crewId: crew.id, words: loan.name }))
   return (
     <>
@@ -85,7 +88,7 @@ function Parts({ crew, crews, people, seen }: Omit<Props, 'onClose'> & { seen: C
           ? {
               action: 'Borrow for a day',
               form: (close: () => void) => (
-                <LoanForm people={others} crews={[crew]} onDone={close} />
+                <LoanForm choose="person" people={others} crews={[crew]} onDone={close} />
               ),
             }
           : {})}

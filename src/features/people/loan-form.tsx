@@ -10,6 +10,8 @@ import { Select, TextInput } from '../../ui/inputs.tsx'
 import { useAddLoan } from './time-queries.ts'
 
 type Props = {
+  /** What is to choose: the crew that one person goes to, or whom one crew borrows. */
+  choose: 'crew' | 'person'
   /** Who may be lent: one person, or those to choose from. */
   people: Pick<Person, 'id' | 'name'>[]
   /** The crews that may borrow: one, or those to choose from. */
@@ -33,7 +35,7 @@ function Pick({ choices, value, onChange, ...rest }: PickProps) {
 }
 
 /** A day with another crew. */
-export function LoanForm({ people, crews, onDone }: Props) {
+export function LoanForm({ choose, people, crews, onDone }: Props) {
   const { firm } = useSession()
   const [personId, setPersonId] = useState(people[0]?.id ?? '')
   const [crewId, setCrewId] = useState(crews[0]?.id ?? '')
@@ -48,7 +50,7 @@ export function LoanForm({ people, crews, onDone }: Props) {
   return (
     <form ref={formRef} onSubmit={submit} noValidate className="space-y-3">
       <div className="grid gap-3 sm:grid-cols-2">
-        {people.length === 1 ? (
+        {choose === 'crew' ? (
           <Field label="To" error={issueAt(add.error, 'crewId')}>
             <Pick choices={crews} value={crewId} onChange={setCrewId} />
           </Field>
@@ -71,7 +73,7 @@ export function LoanForm({ people, crews, onDone }: Props) {
       </Field>
       <FormFailure error={add.error} shownPaths={['crewId', 'day', 'note']} />
       <Button type="submit" busy={add.isPending}>
-        {people.length === 1 ? 'Lend for the day' : 'Borrow for the day'}
+        {choose === 'crew' ? 'Lend for the day' : 'Borrow for the day'}
       </Button>
     </form>
   )

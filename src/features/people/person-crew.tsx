@@ -94,7 +94,9 @@ export function PersonCrew({ person, crews }: Props) {
         <PanelSection
           title="Days with another crew"
           action="Lend for a day"
-          form={(close) => <LoanForm people={[person]} crews={others} onDone={close} />}
+          form={(close) => (
+            <LoanForm choose="crew" people={[person]} crews={others} onDone={close} />
+          )}
         >
           {loans.length === 0 ? <p className="text-ink-soft">None from today on.</p> : null}
           <LoanList loans={loans} />
