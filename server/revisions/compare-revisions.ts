@@ -7,7 +7,7 @@ import { readFirm } from '../firm/firm-store.ts'
 import { notFound } from '../http/app-error.ts'
 import type { Clock } from '../lib/clock.ts'
 import { jobVisible } from '../lib/visibility.ts'
-import { listRevisions, readRevision } from './revision-store.ts'
+import { hasPlateCheck, listRevisions, readRevision } from './revision-store.ts'
 
 /** Two revisions of a job line by line, the older first whichever way round they are asked for. */
 export function compareRevisions(
@@ -35,6 +35,7 @@ export function compareRevisions(
     before: summaryOf(older.revision.id),
     after: summaryOf(newer.revision.id),
     letters: listed.map((one) => one.letter),
+    platesMeasured: hasPlateCheck(db, newer.revision.id),
     lines: compareSpecs(older.revision.spec, newer.revision.spec, {
       sameLengthMm: newer.revision.settings.roundMm,
     }),

@@ -17,6 +17,8 @@ export const comparisonSchema = z.object({
   after: revisionSummarySchema,
   /** Letters of all revisions, newest first. */
   letters: z.array(z.string()),
+  /** To the newer of the two. */
+  platesMeasured: z.boolean(),
   lines: z.array(
     z.object({
       kind: z.enum(lineChangeKinds),

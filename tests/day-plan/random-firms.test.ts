@@ -15,7 +15,7 @@ import {
 } from './plan-rules.ts'
 import { aRandomFirm, firmToLay, type RandomFirm } from './random-firms-kit.ts'
 
-const runs = { numRuns: sampleOf(12, 200) }
+const runs = { numRuns: sampleOf(12, 80) }
 let firm: Awaited<ReturnType<typeof firmToLay>>
 beforeAll(async () => {
   firm = await firmToLay()
@@ -45,7 +45,7 @@ describe('on random firms with real roofs', () => {
     )
     expect(placed).toBeGreaterThan(50)
     expect(short).toBeGreaterThan(0)
-  }, 120_000)
+  }, 240_000)
 
   test('a rain-off keeps every tick, moves no day begun and leaves the plan whole', () => {
     let moved = 0
@@ -64,7 +64,7 @@ describe('on random firms with real roofs', () => {
       runs,
     )
     expect(moved).toBeGreaterThan(0)
-  }, 120_000)
+  }, 240_000)
 
   test('a new revision keeps every tick and day begun, and what is cut already is not cut again', () => {
     let begun = 0
@@ -82,7 +82,7 @@ describe('on random firms with real roofs', () => {
       runs,
     )
     expect(begun).toBeGreaterThan(0)
-  }, 120_000)
+  }, 240_000)
 })
 
 const isBegun = (day: SeenDay) => day.tasks.some((task) => task.tickIds.length > 0)

@@ -1,11 +1,16 @@
 import { createTransport } from 'nodemailer'
 import { asc, desc, eq } from 'drizzle-orm'
+import type { CurrentUser } from '../../server/auth/current-user.ts'
+import { takeRevision } from '../../server/bookings/replan.ts'
 import { seedDemo } from '../../server/db/demo/seed-demo.ts'
 import { demoPassword } from '../../server/db/demo/demo-people.ts'
 import { bookingDays, bookings, tasks } from '../../server/db/tables/booking-tables.ts'
-import { jobs } from '../../server/db/tables/job-tables.ts'
+import { jobs, roofDrafts } from '../../server/db/tables/job-tables.ts'
 import { outbox } from '../../server/db/tables/mail-tables.ts'
 import { crews, people } from '../../server/db/tables/people-tables.ts'
+import { issueAtOnce } from '../../server/revisions/issue-revision.ts'
+import { saveDraft } from '../../server/revisions/revision-service.ts'
+import { withText } from '../../shared/revisions/form-paths.ts'
 import { createFakeMailTransport } from '../../fakes/mail/fake-mail-transport.ts'
 import { createMailWorker } from '../../server/mail/mail-worker.ts'
 import { type ServedApp, serveTestApp } from './browser.ts'
@@ -30,10 +35,12 @@ export function mailFor(app: ServedApp) {
   return { fake, worker }
 }
 
-/** The demo firm on a real port, its reminders sent for the day after. */
+/** The demo firm on a real port, one roof issued twice, its reminders sent for the day after. */
 export async function serveDemo(now?: Date) {
   const app = await serveTestApp(now ? { now } : {})
   await seedDemo(app.db, app.clock)
+  // The studio came out wider than its plan.
+  reviseRoof(app, 'QR-103', { widthMm: '6400' })
   const mail = mailFor(app)
   // Half past three, for the reminders of the day after to have gone.
   app.clock.current = new Date(app.clock.current.getTime() + 5.5 * 3_600_000)
@@ -73,6 +80,25 @@ export function personIdOf(db: Db, key: string): string {
 
 export function crewIdOf(db: Db, letter: string): string {
   return db.select({ id: crews.id }).from(crews).where(eq(crews.letter, letter)).get()?.id ?? ''
+}
+
+/** The roof of a job issued once more, with a field or two typed anew. */
+export function reviseRoof(app: ServedApp, number: string, texts: Record<string, string>): void {
+  const jobId = jobIdOf(app.db, number)
+  const user: CurrentUser = {
+    ...demoSignIn('marnie'),
+    id: personIdOf(app.db, 'marnie'),
+    name: 'Marnie Quill',
+    role: 'office',
+  }
+  const draft = app.db.select().from(roofDrafts).where(eq(roofDrafts.jobId, jobId)).get()
+  if (!draft) throw new Error(`${number} has no roof.`)
+  const form = Object.entries(texts).reduce(
+    (typed, [path, text]) => withText(typed, path, text),
+    draft.form,
+  )
+  saveDraft(app, user, jobId, { form, version: draft.version })
+  issueAtOnce({ ...app, takeRevision }, { user, jobId, version: draft.version + 1 })
 }
 
 /** The newest mail. */

@@ -48,7 +48,9 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     signedOut('set-password', '/set-password?token=0'),
     office('board', '/board'),
     office('board-search', '/board?q=nothing+like+this'),
+    office('board-table', '/board?view=table&sort=-price'),
     office('job', `/jobs/${house}`),
+    office('job-variations', `/jobs/${house}`, addVariations),
     office('job-edit', `/jobs/${house}/edit`),
     office('job-new', '/jobs/new'),
     office('roof-editor', `/jobs/${octagon}/roof`),
@@ -64,6 +66,8 @@ export function screensOf({ db }: ServedApp, today: string): Screen[] {
     office('revision-all-timbers', `/jobs/${jobIdOf(db, 'QR-112')}/revisions/A`),
     office('card-valley', `/jobs/${jobIdOf(db, 'QR-112')}/revisions/A?timber=V1a`),
     office('card-underpurlin', `/jobs/${jobIdOf(db, 'QR-112')}/revisions/A?timber=UP1`),
+    office('comparison', `/jobs/${jobIdOf(db, 'QR-103')}/revisions/B/against/A`),
+    office('not-told', '/calendar/not-told'),
     office('calendar-month', '/calendar'),
     office('calendar-week', `/calendar?view=week&on=${today}`),
     office('clashes', '/calendar/clashes'),
@@ -129,4 +133,20 @@ async function openPaste(page: Page): Promise<void> {
   await page.getByRole('button', { name: 'Paste coordinates' }).click()
   const box = page.getByLabel('Corners, one a line: x, then y')
   await box.fill('0; 0\n0; 8,0\n4,0; 8,0\n4,0; 4,0\n10,0; 4,0\n10,0; 0\n0; 0')
+}
+
+/** One agreed, one in the form. */
+async function addVariations(page: Page): Promise<void> {
+  const card = page.getByRole('region', { name: 'Variations' })
+  const add = card.getByRole('button', { name: 'Add a variation' })
+  await add.click()
+  await card.getByLabel('What, and why').fill('Skylight trimmed in, asked for on site')
+  await card.getByLabel('Price').fill('450')
+  await card.getByRole('button', { name: 'Add it' }).click()
+  await card.getByRole('button', { name: 'Builder said yes' }).last().click()
+  await card.getByLabel('Who said yes').fill('Nell Ashby')
+  await card.getByRole('button', { name: 'Keep the yes' }).click()
+  await card.getByRole('button', { name: 'Take the yes back' }).last().waitFor()
+  await add.click()
+  await card.getByLabel('What, and why').fill('Second valley gutter left out')
 }

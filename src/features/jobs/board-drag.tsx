@@ -58,7 +58,10 @@ function announcementsFor(cardOf: (id: unknown) => Card | undefined, today: stri
     onDragStart: ({ active }) => `${name(active.id)} taken up.`,
     onDragOver: ({ active, over }) => {
       const stage = stageOf(over?.id)
-      return stage ? `${jobStageNames[stage]}: ${meaning(active.id, stage)}` : 'Over no stage.'
+      // With the number: this follows the taking up at once and replaces it.
+      return stage
+        ? `${name(active.id)} over ${jobStageNames[stage]}: ${meaning(active.id, stage)}`
+        : 'Over no stage.'
     },
     onDragEnd: ({ active, over }) =>
       over

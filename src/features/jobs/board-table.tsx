@@ -66,7 +66,7 @@ const plainColumns = column.columns([
     cell: ({ row }) => (
       <Link
         to={`/jobs/${row.original.id}`}
-        className="-my-2 inline-flex min-h-11 items-center whitespace-nowrap font-extrabold text-chalk underline"
+        className="-my-2.5 inline-flex min-h-11 items-center whitespace-nowrap font-extrabold text-chalk underline"
       >
         {row.original.number}
       </Link>
@@ -127,7 +127,7 @@ const priceColumn = column.accessor((card) => card.priceCents ?? undefined, {
   cell: ({ row }) => {
     const { priceCents } = row.original
     return (
-      <span className="whitespace-nowrap tabular-nums">
+      <span className="block whitespace-nowrap text-right tabular-nums">
         {typeof priceCents === 'number' ? formatPrice(priceCents) : '–'}
       </span>
     )
@@ -136,6 +136,33 @@ const priceColumn = column.accessor((card) => card.priceCents ?? undefined, {
 
 /** With prices last, for who may see them. */
 const pricedColumns = column.columns([...plainColumns, priceColumn])
+
+/** Headings and their names, for the choice on a phone. */
+const sortNames: readonly [id: string, name: string][] = [
+  ['number', 'Number'],
+  ['title', 'Job'],
+  ['stage', 'Stage'],
+  ['booked', 'Booked'],
+  ['wanted', 'Wanted by'],
+  ['roof', 'Roof'],
+  ['missing', 'Missing'],
+]
+
+function SortOptions({ sort, withPrices }: { sort: BoardSort; withPrices: boolean }) {
+  const names = withPrices ? [...sortNames, ['price', 'Price'] as const] : sortNames
+  const descending = names.find(([id]) => sort === `-${id}`)
+  return (
+    <>
+      <option value="">Stage, soonest first</option>
+      {names.map(([id, name]) => (
+        <option key={id} value={id}>
+          {name}
+        </option>
+      ))}
+      {descending ? <option value={sort}>{descending[1]}, from the last</option> : null}
+    </>
+  )
+}
 
 /** 'wanted', or '-wanted' for the latest first, as it stands in the address. */
 export type BoardSort = string
@@ -177,11 +204,7 @@ export function BoardTable({ cards, sort, onSort }: Props) {
       <div className="sm:hidden">
         <Field label="In the order of" className="mb-3">
           <Select value={sort} onChange={(event) => onSort(event.target.value)}>
-            <option value="">Stage, soonest first</option>
-            <option value="number">Number</option>
-            <option value="title">Job</option>
-            <option value="booked">Booked</option>
-            <option value="wanted">Wanted by</option>
+            <SortOptions sort={sort} withPrices={maySeePrices} />
           </Select>
         </Field>
         <ul className="space-y-2">

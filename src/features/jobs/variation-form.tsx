@@ -24,7 +24,7 @@ export function VariationForm({ start, save, error, busy, onSave, onBack }: Prop
     onSave(values)
   }
   return (
-    <form className="space-y-3 py-2" onSubmit={submit} noValidate>
+    <form className="mt-2 space-y-3 py-2" onSubmit={submit} noValidate>
       <Field label="What, and why" error={issueAt(error, 'reason')}>
         <TextArea
           autoFocus
@@ -75,7 +75,7 @@ export function VariationYesForm({ today, error, busy, onSave, onBack }: YesProp
     onSave(agreed)
   }
   return (
-    <form className="space-y-3 py-2" onSubmit={submit} noValidate>
+    <form className="mt-2 space-y-3 py-2" onSubmit={submit} noValidate>
       <div className="flex flex-wrap gap-3">
         <Field label="Who said yes" error={issueAt(error, 'agreed.by')} className="min-w-56 flex-1">
           <TextInput

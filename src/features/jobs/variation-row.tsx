@@ -80,7 +80,7 @@ function VariationActions({ variation, state, today, busy, send, onOpen }: Actio
   const { agreedOn, agreedBy } = variation
   const wasAgreed = agreedOn ? { on: agreedOn, by: agreedBy } : null
   return (
-    <div className="mt-1 flex flex-wrap gap-x-1">
+    <div className="-ml-4 mt-1 flex flex-wrap gap-x-1">
       {state === 'to-ask' ? (
         <Button
           kind="quiet"

@@ -27,7 +27,7 @@ function sideWords(side: Side, units: LengthUnits): string {
   const length = [formatLength(side.cutLengthMm, units), lengthUnitWord(units)]
     .filter(Boolean)
     .join(' ')
-  return `${side.mark}: ${length}, x${side.quantity}, ${sectionWords(side.section)}`
+  return `${length}, x${side.quantity}, ${sectionWords(side.section)}`
 }
 
 const lineKey = ({ before, after }: LineChange): string =>

@@ -16,6 +16,8 @@ import { changeCounts } from './comparison-words.ts'
 import { CutButUnusedNote } from './cut-but-unused.tsx'
 import { roofQueries } from './roof-queries.ts'
 
+const notMeasured = 'From plan, plates not measured'
+
 function LetterSelect({ comparison }: { comparison: Comparison }) {
   const navigate = useNavigate()
   const { job, before, after, letters } = comparison
@@ -74,7 +76,7 @@ function Header({ comparison }: { comparison: Comparison }) {
 }
 
 function Whole({ comparison }: { comparison: Comparison }) {
-  const { job, before, after, lines, cutButUnused } = comparison
+  const { job, before, after, lines, cutButUnused, platesMeasured } = comparison
   const [withSame, setWithSame] = useState(false)
   const { firm } = useSession()
   const sameCount = lines.filter((line) => line.kind === 'same').length
@@ -83,7 +85,7 @@ function Whole({ comparison }: { comparison: Comparison }) {
     <>
       <PrintFoot
         left={`${job.number} ${job.title}`}
-        middle={`Revision ${before.letter} to ${after.letter}`}
+        middle={`Revision ${before.letter} to ${after.letter}${platesMeasured ? '' : `. ${notMeasured}`}`}
       />
       <Header comparison={comparison} />
       <div className="space-y-4">
@@ -93,6 +95,7 @@ function Whole({ comparison }: { comparison: Comparison }) {
         <Card>
           <h2 className="mb-1 text-lg font-extrabold">Line by line</h2>
           <p className="mb-2">{changeCounts(lines)}</p>
+          {platesMeasured ? null : <p className="mb-2 font-semibold text-ochre">{notMeasured}</p>}
           <p className="mb-3 font-semibold">{cutOneFirst}</p>
           {sameCount > 0 ? (
             <label className="mb-3 flex min-h-11 w-fit items-center gap-2 print:hidden">

@@ -30,18 +30,25 @@ export function lineName({ role, before, after }: LineChange): string {
   return `${mark} ${name}${was}`
 }
 
+const mmPerSixteenth = 25.4 / 16
+
+/** A length as it is written, so that a difference is that of the two lengths one reads. */
+function writtenMm(lengthMm: number, units: LengthUnits): number {
+  const stepMm = units === 'mm' ? 1 : mmPerSixteenth
+  return Math.round(lengthMm / stepMm) * stepMm
+}
+
 /** 'by 12 mm; x4 to x6': what differs, in the order it matters at the saw. */
 export function differenceWords(change: LineChange, units: LengthUnits): string {
   const { before, after } = change
   if (!before || !after) return ''
-  const length = (mm: number) => formatLength(mm, units)
   const [oldSize, newSize] = [sectionWords(before.section), sectionWords(after.section)]
-  const isLength = change.kind === 'longer' || change.kind === 'shorter'
+  const byMm = writtenMm(after.cutLengthMm, units) - writtenMm(before.cutLengthMm, units)
   const parts = [
     oldSize === newSize ? '' : `${oldSize} to ${newSize}`,
-    isLength || length(before.cutLengthMm) !== length(after.cutLengthMm)
-      ? `by ${[length(Math.abs(change.byMm)), lengthUnitWord(units)].filter(Boolean).join(' ')}`
-      : '',
+    byMm === 0
+      ? ''
+      : `by ${[formatLength(Math.abs(byMm), units), lengthUnitWord(units)].filter(Boolean).join(' ')}`,
     change.kind === 'other-cuts' ? 'the length stays, bevels or notch differ' : '',
     before.quantity === after.quantity ? '' : `x${before.quantity} to x${after.quantity}`,
   ]
@@ -55,6 +62,11 @@ export function changeCounts(lines: readonly LineChange[]): string {
     .filter((kind) => kind !== 'same' && count(kind) > 0)
     .map((kind) => `${count(kind)} ${changeWords[kind].toLowerCase()}`)
   const same = count('same')
-  const sameWords = same === 1 ? '1 line stays the same.' : `${same} lines stay the same.`
+  const sameWords =
+    same === 0
+      ? 'no line stays the same.'
+      : same === 1
+        ? '1 line stays the same.'
+        : `${same} lines stay the same.`
   return changed.length === 0 ? sameWords : `${changed.join(', ')}; ${sameWords}`
 }
