@@ -33,8 +33,9 @@ export function crewAfter(
   before: readonly BookedDay[],
 ) {
   const crew = readCrew(tx, crewId ?? row.crewId)
-  if (!crew || (!crew.active && crew.id !== row.crewId))
-    throw invalidField('crewId', 'There is no such crew.')
+  // A crew is stood down once nothing stands for it: what was cancelled does not come back to it.
+  const isItsOwn = crew?.id === row.crewId && row.cancelledAt === null
+  if (!crew || (!crew.active && !isItsOwn)) throw invalidField('crewId', 'There is no such crew.')
   if (crew.id !== row.crewId && before.some((d) => d.worked))
     throw new AppError(
       'conflict',

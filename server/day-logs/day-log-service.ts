@@ -1,5 +1,6 @@
 import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm'
 import { permissionScope, type Permission } from '../../shared/auth/permissions.ts'
+import { formatDay } from '../../shared/calendar/days.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
 import { ordinaryMinutes } from '../../shared/calendar/ordinary-hours.ts'
 import { expectedMinutes, whyLogShut } from '../../shared/day-logs/day-log-rules.ts'
@@ -27,6 +28,7 @@ import {
   readMinutesElsewhere,
   saveLog,
 } from './day-log-store.ts'
+import { readLogHistory } from './log-history.ts'
 import { isLoggedDay } from './worked-days.ts'
 
 const minutesPerDay = 24 * 60
@@ -60,12 +62,28 @@ type FoundDay = ReturnType<typeof findDay>
 
 const todayOf = ({ now, firm }: Viewer) => localDayOf(now, firm.timeZone)
 
-function whyShut(viewer: Viewer, found: FoundDay, log: DayLogRow | null): string | null {
+/** A correction does not open a log again for who may only correct it on the day it was written. */
+function whyShut(
+  db: DbOrTx,
+  viewer: Viewer,
+  found: FoundDay,
+  log: DayLogRow | null,
+): string | null {
+  const writtenAt = log && (readLogHistory(db, found.id).writtenAt ?? log.loggedAt)
   return whyLogShut(permissionScope(viewer.user.role, 'day-log:write'), {
     day: found.day,
     today: todayOf(viewer),
-    loggedOn: log ? localDayOf(log.loggedAt, viewer.firm.timeZone) : null,
+    loggedOn: writtenAt && localDayOf(writtenAt, viewer.firm.timeZone),
   })
+}
+
+/** Rain moves a day while its log waits on a phone: the hours belong to the day they were put down for. */
+function refuseMoved(found: FoundDay, input: WriteDayLog): void {
+  if (input.day === undefined || input.day === found.day) return
+  throw new AppError(
+    'conflict',
+    `This was put down for ${formatDay(input.day)}, and the office has moved that day to ${formatDay(found.day)}. Ring the office about the hours.`,
+  )
 }
 
 /** The crew's sheets of the day that are still to be closed, this one counted. */
@@ -134,7 +152,7 @@ export function dayToClose(db: DbOrTx, viewer: Viewer, bookingDayId: string): Da
     roster: roster.map(expected),
     others: others.map(expected),
     log: readDayLog(db, bookingDayId),
-    closedBecause: whyShut(viewer, found, readLogRow(db, bookingDayId)),
+    closedBecause: whyShut(db, viewer, found, readLogRow(db, bookingDayId)),
   }
 }
 
@@ -162,10 +180,11 @@ function checkPeople(tx: DbOrTx, viewer: Viewer, found: FoundDay, input: WriteDa
 
 /** The same log sent again, when its first answer was lost on the way. */
 function isSentAgain(tx: DbOrTx, viewer: Viewer, row: DayLogRow | null, input: WriteDayLog) {
-  if (!row || row.loggedById !== viewer.user.id || row.version !== input.version + 1) return false
+  if (!row || row.loggedById !== viewer.user.id) return false
+  if (input.version !== 0 && row.version !== input.version + 1) return false
   const log = readDayLog(tx, row.bookingDayId)
   if (!log) return false
-  const asSent = (value: Omit<WriteDayLog, 'version'>) =>
+  const asSent = (value: Omit<WriteDayLog, 'version' | 'day'>) =>
     JSON.stringify([
       value.done,
       value.remarks,
@@ -196,7 +215,8 @@ export function writeDayLog(
       const found = findDay(tx, viewer, 'day-log:write', bookingDayId)
       const before = readLogRow(tx, bookingDayId)
       if (isSentAgain(tx, viewer, before, input)) return dayToClose(tx, viewer, bookingDayId)
-      const shut = whyShut(viewer, found, before)
+      refuseMoved(found, input)
+      const shut = whyShut(tx, viewer, found, before)
       if (shut) throw new AppError('conflict', shut)
       if ((before?.version ?? 0) !== input.version) throw staleLog(tx, bookingDayId, input)
       checkPeople(tx, viewer, found, input)
@@ -207,7 +227,8 @@ export function writeDayLog(
           bookingDayId,
           loggedById: user.id,
           loggedAt: now,
-          version: input.version + 1,
+          // A log written anew goes on from one taken back, so that nobody corrects the wrong one.
+          version: before ? before.version + 1 : readLogHistory(tx, bookingDayId).writes + 1,
         },
         input,
       )
@@ -240,7 +261,7 @@ export function takeBackDayLog(
       const found = findDay(tx, viewer, 'day-log:write', bookingDayId)
       const before = readLogRow(tx, bookingDayId)
       if (!before) return dayToClose(tx, viewer, bookingDayId)
-      const shut = whyShut(viewer, found, before)
+      const shut = whyShut(tx, viewer, found, before)
       if (shut) throw new AppError('conflict', shut)
       const log = readDayLog(tx, bookingDayId)
       if (before.version !== version)

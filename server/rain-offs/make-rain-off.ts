@@ -44,7 +44,7 @@ export function checkCrewAndDay(
 export function makeRainOff(deps: BookingDeps, user: CurrentUser, input: MakeRainOff): string {
   const id = deps.db.transaction((tx) => {
     const id = input.asked?.id ?? input.clientId
-    if (!input.asked && readRainOff(tx, id)) return id
+    if (!input.asked && isMadeAlready(tx, input)) return id
     const now = deps.clock.now()
     const firm = readFirm(tx)
     const today = localDayOf(now, firm.timeZone)
@@ -80,6 +80,22 @@ export function makeRainOff(deps: BookingDeps, user: CurrentUser, input: MakeRai
   })
   deps.events.publish({ topic: 'calendar' })
   return id
+}
+
+/** @throws AppError 409 when the id stands for another rain-off, or for one undone since. */
+function isMadeAlready(tx: DbOrTx, input: MakeRainOff): boolean {
+  const made = readRainOff(tx, input.clientId)
+  if (!made) return false
+  const isSame =
+    made.state === 'made' &&
+    made.crewId === input.crewId &&
+    made.fromDay === input.fromDay &&
+    made.workingDays === input.workingDays
+  if (isSame) return true
+  throw new AppError(
+    'conflict',
+    'The rain-off you pressed before was made after all. Look at the calendar; undo it before you make another.',
+  )
 }
 
 function requireSeen(plan: PlannedRainOff, seen: MakeRainOff['seen']): void {

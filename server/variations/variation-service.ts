@@ -16,6 +16,7 @@ import type { Clock } from '../lib/clock.ts'
 import {
   insertVariation,
   nextSequence,
+  readJobOfVariation,
   readVariationRow,
   readVariations,
   updateVariation,
@@ -105,10 +106,13 @@ export function createVariationService({ db, clock, events }: VariationDeps) {
     read: (user: CurrentUser, jobId: string): JobVariations =>
       answerOf(db, jobOf(db, user, 'price:read', jobId)),
 
-    /** The same id again makes no second one. */
+    /** The same id again makes no second one. @throws AppError 404, or 409 when another job has it. */
     create(user: CurrentUser, jobId: string, input: CreateVariation): JobVariations {
       return write(user, jobId, (tx) => {
-        if (readVariationRow(tx, jobId, input.id)) return null
+        const takenBy = readJobOfVariation(tx, input.id)
+        if (takenBy === jobId) return null
+        if (takenBy !== undefined)
+          throw new AppError('conflict', 'That variation was added already, to another job.')
         const sequence = nextSequence(tx, jobId)
         insertVariation(tx, {
           id: input.id,

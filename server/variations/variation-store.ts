@@ -36,6 +36,12 @@ export function readVariationRow(db: DbOrTx, jobId: string, id: string): Variati
     .get()
 }
 
+/** The job an id is taken by; undefined while nobody has it. */
+export function readJobOfVariation(db: DbOrTx, id: string): string | undefined {
+  return db.select({ jobId: variations.jobId }).from(variations).where(eq(variations.id, id)).get()
+    ?.jobId
+}
+
 export function nextSequence(db: DbOrTx, jobId: string): number {
   const last = db
     .select({ last: max(variations.sequence) })

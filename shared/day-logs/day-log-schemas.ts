@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { idSchema, textSchema } from '../http/fields.ts'
+import { daySchema, idSchema, textSchema } from '../http/fields.ts'
 import { delayReasons } from './delay-reasons.ts'
 
 const minutesPerDay = 24 * 60
@@ -41,6 +41,8 @@ const delaySchema = z
 export const writeDayLogSchema = z.strictObject({
   /** Of the log this was made from; 0 for a day not closed yet. */
   version: z.number().int().min(0),
+  /** The day it was put down for: a booked day may have been moved while the log waited on a phone. */
+  day: daySchema.optional(),
   done: textSchema(1000),
   remarks: textSchema(1000),
   people: z

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { longestClosureDays } from '../calendar/closures.ts'
+import { closureDays, longestClosureDays } from '../calendar/closures.ts'
 import { daysBetween } from '../calendar/days.ts'
 import { isTimeZone } from '../calendar/local-time.ts'
 import {
@@ -109,7 +109,19 @@ const firmFields = {
   labourRates: labourRatesSchema,
 }
 
-export const editFirmSchema = z.strictObject({ ...firmFields, version: versionSchema })
+/** More than years of long shutdowns; every working day that is counted is held against them all. */
+const mostClosedDays = 1000
+
+const ownClosedDaysSchema = firmFields.ownClosedDays.refine(
+  (closures) => closureDays(closures).length <= mostClosedDays,
+  `All closures together are ${mostClosedDays} days at most. Take off those that are past.`,
+)
+
+export const editFirmSchema = z.strictObject({
+  ...firmFields,
+  ownClosedDays: ownClosedDaysSchema,
+  version: versionSchema,
+})
 export const firmSchema = z.object({
   ...firmFields,
   roofSettings: z.object(firmRoofSettingsSchema.shape),

@@ -89,7 +89,7 @@ export function CloseDayForm({ day, onDone }: { day: DayToClose; onDone: () => v
         own={log}
         known={known}
         busy={save.isPending}
-        onKeepTheirs={() => startAgain(asWritten(theirs))}
+        onKeepTheirs={() => startAgain(asWritten(theirs, day.day))}
         onUseOwn={() => save.mutate({ ...log, version: theirs.version })}
       />
     )

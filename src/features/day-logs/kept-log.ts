@@ -5,6 +5,7 @@ import { delayReasons } from '../../../shared/day-logs/delay-reasons.ts'
 /** Looser than what is sent: half a delay is kept as well. */
 const keptSchema = z.object({
   version: z.number(),
+  day: z.string().optional(),
   done: z.string(),
   remarks: z.string(),
   people: z.array(z.object({ personId: z.string(), turnedUp: z.boolean(), minutes: z.number() })),

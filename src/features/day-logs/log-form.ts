@@ -6,10 +6,11 @@ import type {
 } from '../../../shared/day-logs/day-log-schemas.ts'
 
 /** What a log says, as the form changes it. */
-export function asWritten(log: DayLog): WriteDayLog {
+export function asWritten(log: DayLog, day: string): WriteDayLog {
   const { version, done, remarks, people, delays } = log
   return {
     version,
+    day,
     done,
     remarks,
     people: people.map(({ personId, turnedUp, minutes }) => ({ personId, turnedUp, minutes })),
@@ -21,6 +22,7 @@ export function asWritten(log: DayLog): WriteDayLog {
 function asExpected(day: DayToClose): WriteDayLog {
   return {
     version: 0,
+    day: day.day,
     done: '',
     remarks: '',
     people: day.roster.map(({ personId, onLeave, minutes }) => ({
@@ -33,7 +35,7 @@ function asExpected(day: DayToClose): WriteDayLog {
 }
 
 export function logToStart(day: DayToClose): WriteDayLog {
-  return day.log ? asWritten(day.log) : asExpected(day)
+  return day.log ? asWritten(day.log, day.day) : asExpected(day)
 }
 
 /** Everybody that can stand in the log, by id: rostered, logged already, or to be added by the office. */

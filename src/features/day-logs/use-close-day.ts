@@ -55,7 +55,8 @@ export function useCloseDay(day: DayToClose, onDone: () => void) {
     onSuccess: (now, written) => {
       keepLog(user.id, bookingDayId, null)
       show(now)
-      const before = day.log && day.log.version === written.version ? asWritten(day.log) : null
+      const before =
+        day.log && day.log.version === written.version ? asWritten(day.log, day.day) : null
       const version = now.log?.version ?? 0
       toast(before ? 'Log corrected.' : 'Day closed.', {
         undo: () => (before ? restore.mutate({ ...before, version }) : takeBack.mutate(version)),

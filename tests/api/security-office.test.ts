@@ -1,0 +1,152 @@
+import { eq } from 'drizzle-orm'
+import { expect, test } from 'vitest'
+import { bookingDays } from '../../server/db/tables/booking-tables.ts'
+import { dayLogs } from '../../server/db/tables/day-log-tables.ts'
+import { crews } from '../../server/db/tables/people-tables.ts'
+import { newId } from '../../server/lib/ids.ts'
+import { bookingFirm, thu, wed } from './booking-kit.ts'
+import { crewOnSite, days } from './day-sheet-kit.ts'
+
+type Site = Awaited<ReturnType<typeof crewOnSite>>
+
+async function siteWithLog() {
+  const site = await crewOnSite()
+  const lead = await site.app.agentFor(site.people.lead.email)
+  const office = await site.app.agentFor(site.people.office.email)
+  const address = `/api/day-sheets/${site.dayIds.wednesday}/log`
+  return { site, lead, office, address }
+}
+
+const logOf = ({ people }: Site, changes: Record<string, unknown> = {}) => ({
+  version: 0,
+  done: 'Plates set out.',
+  remarks: '',
+  people: [{ personId: people.lead.id, turnedUp: true, minutes: 480 }],
+  delays: [],
+  ...changes,
+})
+
+test('what the office corrected the day after stays as the office put it', async () => {
+  const { site, lead, office, address } = await siteWithLog()
+  await lead.put(address).send(logOf(site)).expect(200)
+  site.app.clock.current = new Date('2026-12-03T00:00:00Z')
+  const byOffice = logOf(site, { version: 1, done: 'By phone' })
+  await office.put(address).send(byOffice).expect(200)
+  const late = logOf(site, { version: 2, done: 'From site after all' })
+  await lead.put(address).send(late).expect(409)
+  await lead.delete(`${address}?version=2`).expect(409)
+  const { body } = await lead.get(address).expect(200)
+  expect(body.closedBecause).toBe('Closed on Wed 2 Dec. Ask the office to correct it.')
+  expect(body.log).toMatchObject({ version: 2, done: 'By phone' })
+})
+
+test('a correction of a log that was taken back and written anew is refused as stale', async () => {
+  const { site, lead, office, address } = await siteWithLog()
+  await lead.put(address).send(logOf(site)).expect(200)
+  await office.delete(`${address}?version=1`).expect(200)
+  const anew = logOf(site, { done: 'By the office' })
+  const { body } = await office.put(address).send(anew).expect(200)
+  expect(body.log.version).toBe(2)
+  await lead
+    .put(address)
+    .send(logOf(site, { version: 1, done: 'Of the first one' }))
+    .expect(409)
+  await lead.delete(`${address}?version=1`).expect(409)
+  const again = await office.put(address).send(anew).expect(200)
+  expect(again.body.log).toMatchObject({ version: 2, done: 'By the office' })
+})
+
+test('a log kept on the phone while its day was moved is not put down for the new day', async () => {
+  const { site, lead, address } = await siteWithLog()
+  const tomorrow = '2026-12-04'
+  site.app.db
+    .update(bookingDays)
+    .set({ day: tomorrow })
+    .where(eq(bookingDays.id, site.dayIds.wednesday))
+    .run()
+  site.app.clock.current = new Date(`${tomorrow}T06:00:00Z`)
+  const kept = logOf(site, { day: days.wednesday })
+  const { body } = await lead.put(address).send(kept).expect(409)
+  expect(body.message).toContain('Wed 2 Dec')
+  expect(body.message).toContain('Fri 4 Dec')
+  expect(site.app.db.select().from(dayLogs).all()).toEqual([])
+  await lead
+    .put(address)
+    .send({ ...kept, day: tomorrow })
+    .expect(200)
+})
+
+test('a variation’s id that another job has is refused, not an error of ours', async () => {
+  const { jobs, officeAgent } = await bookingFirm()
+  const variation = { id: newId(), reason: 'Skylight trimmed in', price: '450' }
+  await officeAgent.post(`/api/jobs/${jobs.hillJob}/variations`).send(variation).expect(201)
+  await officeAgent.post(`/api/jobs/${jobs.creekJob}/variations`).send(variation).expect(409)
+})
+
+test('a cancelled booking does not come back onto a crew that was stood down since', async () => {
+  const { app, officeAgent, booked, otherCrew } = await bookingFirm()
+  const booking = await booked({ crewId: otherCrew.id, days: [thu], startsOn: undefined })
+  const { body } = await officeAgent
+    .post(`/api/bookings/${booking.id}/cancel`)
+    .send({ version: booking.version })
+    .expect(200)
+  app.db.update(crews).set({ active: false }).where(eq(crews.id, otherCrew.id)).run()
+  const restore = { version: body.version as number }
+  const refused = await officeAgent
+    .post(`/api/bookings/${booking.id}/restore`)
+    .send(restore)
+    .expect(400)
+  expect(refused.body.issues[0].path).toBe('crewId')
+})
+
+test('a rain-off sent again with other days does not pass for made', async () => {
+  const { officeAgent, booked, crew } = await bookingFirm()
+  await booked({ days: [wed, thu], startsOn: undefined })
+  const previewOf = async (workingDays: number) => {
+    const query = `crew=${crew.id}&day=${wed}&days=${workingDays}`
+    const { body } = await officeAgent.get(`/api/rain-offs/preview?${query}`).expect(200)
+    const moves = body.moves as { bookingId: string; version: number; daysAfter: string[] }[]
+    return moves.map(({ bookingId, version, daysAfter }) => ({ bookingId, version, daysAfter }))
+  }
+  const clientId = newId()
+  const make = async (workingDays: number) => ({
+    clientId,
+    crewId: crew.id,
+    fromDay: wed,
+    workingDays,
+    useFreeDays: false,
+    seen: await previewOf(workingDays),
+  })
+  const first = await make(1)
+  await officeAgent.post('/api/rain-offs').send(first).expect(201)
+  await officeAgent.post('/api/rain-offs').send(first).expect(201)
+  await officeAgent
+    .post('/api/rain-offs')
+    .send(await make(2))
+    .expect(409)
+  const { body } = await officeAgent.get('/api/rain-offs').expect(200)
+  const made = body.rainOffs[0] as { id: string; version: number }
+  const undo = { version: made.version }
+  await officeAgent.post(`/api/rain-offs/${made.id}/undo`).send(undo).expect(200)
+  await officeAgent.post('/api/rain-offs').send(first).expect(409)
+})
+
+test('closures of a whole century are refused, since every screen counts working days by them', async () => {
+  const { officeAgent } = await bookingFirm()
+  const { body } = await officeAgent.get('/api/firm').expect(200)
+  const closure = (year: number) => ({
+    day: `${year}-01-01`,
+    lastDay: `${year}-04-20`,
+    name: 'Shut',
+  })
+  const closures = (count: number) => Array.from({ length: count }, (_, i) => closure(2030 + i))
+  const refused = await officeAgent
+    .put('/api/firm')
+    .send({ ...body, ownClosedDays: closures(100) })
+    .expect(400)
+  expect(refused.body.issues[0].path).toBe('ownClosedDays')
+  await officeAgent
+    .put('/api/firm')
+    .send({ ...body, ownClosedDays: closures(5) })
+    .expect(200)
+})
