@@ -1,5 +1,5 @@
 import { Minus, Plus } from 'lucide-react'
-import { type FormEvent, useState } from 'react'
+import { type FormEvent, type ReactNode, useEffect, useRef, useState } from 'react'
 import type { Calendar, CalendarBooking } from '../../../shared/bookings/calendar-schemas.ts'
 import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import { Button } from '../../ui/button.tsx'
@@ -17,7 +17,25 @@ type Props = {
   onMake: (step: BookingStep | null) => void
 }
 
-const formClass = 'space-y-3 border-l-4 border-rule pl-3'
+/** A form that opens inside the panel, brought into sight. */
+function ActionForm(props: { label: string; onSubmit: () => void; children: ReactNode }) {
+  const form = useRef<HTMLFormElement>(null)
+  useEffect(() => form.current?.scrollIntoView({ block: 'nearest' }), [])
+  const submit = (event: FormEvent) => {
+    event.preventDefault()
+    props.onSubmit()
+  }
+  return (
+    <form
+      ref={form}
+      onSubmit={submit}
+      aria-label={props.label}
+      className="space-y-3 border-l-4 border-rule pl-3"
+    >
+      {props.children}
+    </form>
+  )
+}
 
 /** The run's last day one working day later or earlier. */
 export function PullButtons({ calendar, booking, stretch, onMake }: Props) {
@@ -25,10 +43,10 @@ export function PullButtons({ calendar, booking, stretch, onMake }: Props) {
   const shorter = by(-1)
   return (
     <div className="grid grid-cols-2 gap-2">
-      <Button kind="plain" disabled={!shorter} onClick={() => onMake(shorter)}>
+      <Button kind="plain" className="px-2!" disabled={!shorter} onClick={() => onMake(shorter)}>
         <Minus size={18} aria-hidden />A day less
       </Button>
-      <Button kind="plain" onClick={() => onMake(by(1))}>
+      <Button kind="plain" className="px-2!" onClick={() => onMake(by(1))}>
         <Plus size={18} aria-hidden />A day more
       </Button>
     </div>
@@ -42,12 +60,11 @@ export function MoveForm({ calendar, booking, stretch, onMake }: Props) {
   const [crewId, setCrewId] = useState(booking.crew.id)
   if (!firstAhead)
     return <p className="text-ink-soft">These days have been worked and stay where they are.</p>
-  const submit = (event: FormEvent) => {
-    event.preventDefault()
+  const move = () => {
     if (to !== '') onMake(moveStep(calendar, booking, { from: firstAhead, to, crewId }))
   }
   return (
-    <form onSubmit={submit} className={formClass} aria-label="Move the booking">
+    <ActionForm onSubmit={move} label="Move the booking">
       <Field label="Crew">
         <Select value={crewId} onChange={(e) => setCrewId(e.target.value)}>
           {calendar.crews.map((crew) => (
@@ -61,7 +78,7 @@ export function MoveForm({ calendar, booking, stretch, onMake }: Props) {
         <TextInput type="date" value={to} onChange={(e) => setTo(e.target.value)} />
       </Field>
       <Button type="submit">Move it</Button>
-    </form>
+    </ActionForm>
   )
 }
 
@@ -70,12 +87,8 @@ export function SplitForm({ booking, onMake }: Props) {
   const [day, setDay] = useState(at[0] ?? '')
   if (at.length === 0)
     return <p className="text-ink-soft">No day ahead to split it at: worked days stay together.</p>
-  const submit = (event: FormEvent) => {
-    event.preventDefault()
-    onMake(splitStep(booking, day))
-  }
   return (
-    <form onSubmit={submit} className={formClass} aria-label="Split the booking">
+    <ActionForm onSubmit={() => onMake(splitStep(booking, day))} label="Split the booking">
       <Field label="From this day on it is a booking of its own">
         <Select value={day} onChange={(e) => setDay(e.target.value)}>
           {at.map((one) => (
@@ -86,7 +99,7 @@ export function SplitForm({ booking, onMake }: Props) {
         </Select>
       </Field>
       <Button type="submit">Split it</Button>
-    </form>
+    </ActionForm>
   )
 }
 
@@ -97,12 +110,11 @@ export function SwapForm({ calendar, booking, onMake }: Props) {
   const [otherId, setOtherId] = useState(others[0]?.id ?? '')
   const other = others.find((one) => one.id === otherId)
   if (!other) return <p className="text-ink-soft">No other booking here to change places with.</p>
-  const submit = (event: FormEvent) => {
-    event.preventDefault()
-    onMake(swapStep(calendar, booking, other))
-  }
   return (
-    <form onSubmit={submit} className={formClass} aria-label="Change places with another booking">
+    <ActionForm
+      onSubmit={() => onMake(swapStep(calendar, booking, other))}
+      label="Change places with another booking"
+    >
       <Field label="Change places with">
         <Select value={otherId} onChange={(e) => setOtherId(e.target.value)}>
           {others.map((one) => (
@@ -113,6 +125,6 @@ export function SwapForm({ calendar, booking, onMake }: Props) {
         </Select>
       </Field>
       <Button type="submit">Change places</Button>
-    </form>
+    </ActionForm>
   )
 }

@@ -32,7 +32,7 @@ export function CrewWeeksHead({ calendar, days, columns, minWidth }: Props) {
               {isOff && !closed ? '' : <span className="max-sm:hidden"> {month}</span>}
             </span>
             {closed ? (
-              <span className="mx-auto block max-h-24 overflow-hidden text-xs font-normal [writing-mode:vertical-rl]">
+              <span className="mx-auto block max-h-28 overflow-hidden text-ellipsis whitespace-nowrap text-xs font-normal [writing-mode:vertical-rl]">
                 {closed.name}
               </span>
             ) : null}
