@@ -151,6 +151,7 @@ const sortNames: readonly [id: string, name: string][] = [
 function SortOptions({ sort, withPrices }: { sort: BoardSort; withPrices: boolean }) {
   const names = withPrices ? [...sortNames, ['price', 'Price'] as const] : sortNames
   const descending = names.find(([id]) => sort === `-${id}`)
+  const isAmount = descending?.[0] === 'price' || descending?.[0] === 'missing'
   return (
     <>
       <option value="">Stage, soonest first</option>
@@ -159,7 +160,9 @@ function SortOptions({ sort, withPrices }: { sort: BoardSort; withPrices: boolea
           {name}
         </option>
       ))}
-      {descending ? <option value={sort}>{descending[1]}, from the last</option> : null}
+      {descending ? (
+        <option value={sort}>{`${descending[1]}, ${isAmount ? 'most' : 'last'} first`}</option>
+      ) : null}
     </>
   )
 }
