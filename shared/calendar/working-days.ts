@@ -8,10 +8,23 @@ export type WorkingCalendar = {
 
 const furthestDays = 400
 
+type ClosedDays = WorkingCalendar['closedDays']
+const namesOf = new WeakMap<ClosedDays, ReadonlyMap<Day, string>>()
+
+/** Looked up once a list, which nobody changes: where a job could land asks of thousands of days. */
+function closedNames(closedDays: ClosedDays): ReadonlyMap<Day, string> {
+  const known = namesOf.get(closedDays)
+  if (known) return known
+  // The first name given to a day is the one said.
+  const made = new Map([...closedDays].reverse().map(({ day, name }) => [day, name]))
+  namesOf.set(closedDays, made)
+  return made
+}
+
 /** The reason a day is not worked ('Saturday is not a working day', 'Show day'), or null when it is. */
 export function whyNotWorked(calendar: WorkingCalendar, day: Day): string | null {
-  const closed = calendar.closedDays.find((c) => c.day === day)
-  if (closed) return closed.name
+  const closed = closedNames(calendar.closedDays).get(day)
+  if (closed !== undefined) return closed
   return calendar.workingWeekdays.includes(isoWeekday(day)) ? null : 'Not a working weekday'
 }
 
