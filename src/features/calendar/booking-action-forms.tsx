@@ -20,7 +20,10 @@ type Props = {
 /** A form that opens inside the panel, brought into sight. */
 function ActionForm(props: { label: string; onSubmit: () => void; children: ReactNode }) {
   const form = useRef<HTMLFormElement>(null)
-  useEffect(() => form.current?.scrollIntoView({ block: 'nearest' }), [])
+  useEffect(() => {
+    // Newer browsers answer with a promise, which an effect must not hand back.
+    void form.current?.scrollIntoView({ block: 'nearest' })
+  }, [])
   const submit = (event: FormEvent) => {
     event.preventDefault()
     props.onSubmit()
