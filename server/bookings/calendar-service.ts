@@ -1,4 +1,4 @@
-import { and, asc, eq, type SQL } from 'drizzle-orm'
+import { and, asc, eq, inArray, type SQL } from 'drizzle-orm'
 import type {
   Booking,
   Calendar,
@@ -10,6 +10,7 @@ import type {
 import { permissionScope } from '../../shared/auth/permissions.ts'
 import { type Day, dayPlus, daysBetween } from '../../shared/calendar/days.ts'
 import { localDayOf } from '../../shared/calendar/local-time.ts'
+import { groupBy } from '../../shared/collections/group-by.ts'
 import { packagesInWords } from '../../shared/labour/package-words.ts'
 import type { CurrentUser } from '../auth/current-user.ts'
 import { readDayClashes } from '../clashes/read-clashes.ts'
@@ -115,7 +116,26 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
     }
   }
 
+  /** Bookings, cancelled or not, that are this user's to see: the same few queries for any number. */
+  function readBookings(user: CurrentUser, ids: readonly string[], from: DbOrTx = db): Booking[] {
+    const view = viewOf(user, from)
+    const visible = view.isOffice ? view.visible : both(standingScope(), view.visible)
+    const scope = both(visible, inArray(bookings.id, [...ids]))
+    const seen = readSeen(from, { ...view, scope, visible })
+    const lines = groupBy(readDayTaskLines(from, scope), (line) => line.dayId)
+    const rows = new Map(seen.rows.map((row) => [row.booking.id, row.booking]))
+    return asBookings(seen, view).flatMap((booking) => {
+      const row = rows.get(booking.id)
+      if (!row) return []
+      const { startAt: ownStartAt, gear, cancelledAt } = row
+      const days = booking.days.map((day) => ({ ...day, tasks: lines.get(day.id) ?? [] }))
+      return [{ ...booking, ownStartAt, gear, cancelled: cancelledAt !== null, days }]
+    })
+  }
+
   return {
+    readBookings,
+
     /** What is booked from one day to another, as far as the user may see it. */
     read(user: CurrentUser, span: { from: Day; to: Day }): Calendar {
       const view = viewOf(user, db, span)
@@ -141,24 +161,7 @@ export function createCalendarService(deps: { db: Db; clock: Clock }) {
 
     /** One booking, cancelled or not; null when it is not there or not this user's to see. */
     readBooking(user: CurrentUser, id: string, from: DbOrTx = db): Booking | null {
-      const view = viewOf(user, from)
-      const visible = view.isOffice ? view.visible : both(standingScope(), view.visible)
-      const scope = both(visible, eq(bookings.id, id))
-      const seen = readSeen(from, { ...view, scope, visible })
-      const [booking] = asBookings(seen, view)
-      const [row] = seen.rows
-      if (!booking || !row) return null
-      const lines = readDayTaskLines(from, scope)
-      return {
-        ...booking,
-        ownStartAt: row.booking.startAt,
-        gear: row.booking.gear,
-        cancelled: row.booking.cancelledAt !== null,
-        days: booking.days.map((day) => ({
-          ...day,
-          tasks: lines.filter((line) => line.dayId === day.id),
-        })),
-      }
+      return readBookings(user, [id], from)[0] ?? null
     },
   }
 }

@@ -26,8 +26,9 @@ export function changeBookings(
 ): Booking[] {
   const ids = deps.db.transaction((tx) => applyBookingChanges(tx, deps, user, input))
   deps.events.publish({ topic: 'calendar' })
+  const changed = new Map(deps.calendar.readBookings(user, ids).map((one) => [one.id, one]))
   return ids.map((id) => {
-    const booking = deps.calendar.readBooking(user, id)
+    const booking = changed.get(id)
     if (!booking) throw notFound('That booking')
     return booking
   })

@@ -4,7 +4,8 @@ import { bookingDays } from '../../server/db/tables/booking-tables.ts'
 import { dayLogs } from '../../server/db/tables/day-log-tables.ts'
 import { crews } from '../../server/db/tables/people-tables.ts'
 import { newId } from '../../server/lib/ids.ts'
-import { bookingFirm, thu, wed } from './booking-kit.ts'
+import { dayPlus } from '../../shared/calendar/days.ts'
+import { bookingFirm, mon, thu, wed } from './booking-kit.ts'
 import { crewOnSite, days } from './day-sheet-kit.ts'
 
 type Site = Awaited<ReturnType<typeof crewOnSite>>
@@ -129,6 +130,35 @@ test('a rain-off sent again with other days does not pass for made', async () =>
   const undo = { version: made.version }
   await officeAgent.post(`/api/rain-offs/${made.id}/undo`).send(undo).expect(200)
   await officeAgent.post('/api/rain-offs').send(first).expect(409)
+})
+
+test('many bookings changed at once are answered for together, not one by one', async () => {
+  const firm = await bookingFirm()
+  const { sqlite } = firm.app.database
+  const many = Array.from({ length: 20 }, (_, i) => {
+    const jobId = firm.kit.addJob({ number: `X-${i}` })
+    return firm.kit.addBooking(jobId, firm.crew.id, [dayPlus(mon, i)], 'pencilled').id
+  })
+  const prepare = sqlite.prepare.bind(sqlite)
+  const queriesOf = async (ids: string[], gear: string, version: number): Promise<number> => {
+    let count = 0
+    sqlite.prepare = ((source: string) => {
+      count++
+      return prepare(source)
+    }) as typeof sqlite.prepare
+    const changes = ids.map((bookingId) => ({ bookingId, version, gear }))
+    const { body } = await firm.officeAgent
+      .post('/api/bookings/changes')
+      .send({ changes })
+      .expect(200)
+    sqlite.prepare = prepare
+    expect(body.bookings.map((one: { id: string }) => one.id)).toEqual(ids)
+    return count
+  }
+  const two = await queriesOf(many.slice(0, 2).reverse(), 'Ladder', 1)
+  const others = await queriesOf(many.slice(2), 'Ladder', 1)
+  // Sixteen more: each is read, checked, planned and written; not looked up for its answer too.
+  expect((others - two) / 16).toBeLessThan(25)
 })
 
 test('closures of a whole century are refused, since every screen counts working days by them', async () => {
