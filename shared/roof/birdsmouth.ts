@@ -41,7 +41,8 @@ const bearingMm = (ground: Ground, piece: Piece, seatMm: number): number => {
  */
 export const birdsmouthOf = (ground: Ground, piece: Piece, standMm: number): Birdsmouth | null => {
   if (piece.edge === null && piece.corner === null) return null
-  const ownStandMm = standMm - piece.dropMm
+  // a rafter's foot is at its own plate, a little over or under the slope's line where plates are out of it
+  const ownStandMm = standMm - piece.dropMm + piece.foot.z
   const offsetMm = heelOffsetPlanMm(ground, piece)
   const heelMm = piece.section.depthMm / piece.cos - ownStandMm + offsetMm * piece.tan
   if (heelMm <= 0) return null

@@ -32,6 +32,20 @@ export const nearestEdge = (ground: Ground, slope: Slope, alongMm: number): Plat
   return at(ground.plates.edges, nearest.edge)
 }
 
+/** Plates nearer than this to their slope's line lie on it. */
+const onLineMm = 1e-3
+
+/**
+ * How far inside its slope's line the plate lies that a rafter stands on, where plates typed a little out
+ * of line carry one slope; under 0 outside. Beyond the plates' ends the nearest one is run on.
+ */
+export const ownPlateMm = (ground: Ground, slope: Slope, alongMm: number): number => {
+  const { from, inward } = nearestEdge(ground, slope, alongMm)
+  const off = dot2(inward, sub2(from, slopePoint(slope, alongMm, 0)))
+  const inMm = off / dot2(inward, slope.inward)
+  return Math.abs(inMm) < onLineMm ? 0 : inMm
+}
+
 /** A rafter's plan from its tail to its head, before any cut. */
 const rafterPlan = (
   ground: Ground,
@@ -77,7 +91,7 @@ const liesOverPlate = (
 /** Where a square line past the corner of a valley is over the plate, mm inside the slope's own plate line. */
 const pastCorner = (ground: Ground, slope: Slope, alongMm: number, { otherEdge }: ValleySide) => {
   const { plateWidthMm } = ground.roof
-  const start: Point2 = slopePoint(slope, alongMm, 0)
+  const start: Point2 = slopePoint(slope, alongMm, ownPlateMm(ground, slope, alongMm))
   const off = dot2(otherEdge.inward, sub2(start, otherEdge.from))
   const gain = dot2(otherEdge.inward, slope.inward)
   let fromMm = 0

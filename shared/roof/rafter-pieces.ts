@@ -3,7 +3,7 @@ import type { Joint } from './clusters.ts'
 import { gather } from './lists.ts'
 import { rawPiece } from './piece.ts'
 import type { Piece } from './piece.ts'
-import { nearestEdge, rafterFoot } from './plate-foot.ts'
+import { nearestEdge, ownPlateMm, rafterFoot } from './plate-foot.ts'
 import type { RafterFoot } from './plate-foot.ts'
 import type { LineKind, MemberRole } from './roof-types.ts'
 import type { HipCorner, SlopeGround } from './slope-ground.ts'
@@ -157,7 +157,7 @@ const rafterPiece = (
   if (foot === null) return null
   if (foot.on === 'plate' && hipInTheWay(own, station.alongMm) !== undefined) return null
   if (station.flush !== true && !hasRoom(ground, own, station.alongMm, span)) return null
-  const footMm = foot.on === 'plate' ? 0 : foot.inMm
+  const footMm = foot.on === 'plate' ? ownPlateMm(ground, slope, station.alongMm) : foot.inMm
   if ((span.high - footMm) * Math.hypot(1, slope.tan) < settings.minCreeperMm) return null
   const headLine = span.highBorder.line
   // a rafter that runs to a ridge too short to be a timber ends in that joint

@@ -2,7 +2,15 @@ import { ownHeight, backingOfSlopes } from './own-slopes.ts'
 import { toBuilding, toOwn, type Piece } from './rebuild-member.ts'
 import type { Complain } from './report.ts'
 import type { Site } from './site.ts'
-import { distanceIn, heightOn, isAlongLine, isFrameMember, isRafter } from './slopes.ts'
+import {
+  distanceAlong,
+  distanceIn,
+  heightOn,
+  isAlongLine,
+  isFrameMember,
+  isRafter,
+  slopeOfEdge,
+} from './slopes.ts'
 import { distanceToRim, distanceToStretch } from './surface.ts'
 import { cosDeg, tanDeg, toDeg, toVec, type Vec } from './vec.ts'
 
@@ -57,6 +65,21 @@ function checkFromValley(say: Say, site: Site, piece: Piece): void {
   if (out > PLACE_TOL_MM) say('comes down to a valley and starts off its centre line, mm', out)
 }
 
+/** How far a heel is from the outer face, run on, of the plate of its slope that it stands before or nearest to. */
+function offPlates(site: Site, plane: number, heel: { x: number; y: number }): number {
+  const { outline } = site.roof
+  const offs = site.spec.planes[plane]!.edges.map((edge) => {
+    const slope = slopeOfEdge(site.roof, edge)
+    const end = outline[(edge + 1) % outline.length]!
+    const along = distanceAlong(slope, heel.x, heel.y)
+    const beyond = Math.max(0, -along, along - distanceAlong(slope, end.x, end.y))
+    return { beyond, off: Math.abs(distanceIn(slope, heel.x, heel.y)) }
+  })
+  // at the corner between two plates it is on both
+  const nearest = Math.min(...offs.map(({ beyond }) => beyond)) + PLACE_TOL_MM
+  return Math.min(...offs.filter(({ beyond }) => beyond <= nearest).map(({ off }) => off))
+}
+
 /** `axis` stands over the set-out lines by the stand less the drop, and starts on the plate face. */
 export function checkPlace(complain: Complain, site: Site, piece: Piece): void {
   const { member } = piece
@@ -79,11 +102,11 @@ export function checkPlace(complain: Complain, site: Site, piece: Piece): void {
   checkFromValley(say, site, piece)
   if (member.birdsmouth !== null) {
     const heel = member.axis.from
-    const off = member.planes.map((index) => distanceIn(surface.slopes[index]!, heel.x, heel.y))
-    const out = Math.max(...off.map(Math.abs))
+    const out = Math.max(...member.planes.map((index) => offPlates(site, index, heel)))
     if (out > PLACE_TOL_MM) say('its heel is not on the outer plate face, mm', out)
-    const stand = member.birdsmouth.standMm - (spec.standMm - member.dropMm)
-    if (Math.abs(stand) > PLACE_TOL_MM) say('its stand is not the roof’s, mm', stand)
+    // the plate's top is at 0; that `axis.from` stands where the roof wants it is looked at above
+    const stand = member.birdsmouth.standMm - heel.z
+    if (Math.abs(stand) > PLACE_TOL_MM) say('its stand is not its height over plate, mm', stand)
   }
   const backing = backingOfSlopes(piece, surface)
   if (member.backing !== null && backing !== null) {

@@ -1,10 +1,13 @@
 import { beforeAll, expect, test } from 'vitest'
 
+import { frameRoof } from '../../../shared/roof/frame-roof.ts'
 import type { Roof } from '../../../shared/roof/roof-types.ts'
 import { makeRoof } from '../support/roofs.ts'
 import { plateFlat } from './plates.ts'
 import { skewedPlan } from './random-houses.ts'
+import { reportLines } from './report.ts'
 import { loadSolidKit, type SolidKit } from './solid-kit.ts'
+import { dryFit } from './stand-up.ts'
 
 let kit: SolidKit
 beforeAll(async () => {
@@ -58,5 +61,50 @@ test.each([1, 2, 3, 4, 5, 6, 7, 8])(
   (seed) => {
     const plan = skewedPlan(seed)
     expect(plateFlat(kit, plan).area()).toBeCloseTo(ringByHand(plan), 1)
+  },
+)
+
+/** An eave with its middle corner `offMm` out, and one that goes on over a wing, its second plate as far in. */
+const outOfLine = (offMm: number): Roof[] => [
+  makeRoof(
+    [
+      [0, 0],
+      [4000, -offMm],
+      [9000, 0],
+      [9000, 6000],
+      [0, 6000],
+    ],
+    Array<number>(5).fill(25),
+  ),
+  makeRoof(
+    [
+      [0, 0],
+      [3000, 0],
+      [3000, -2000],
+      [6500, -2000],
+      [6500, offMm],
+      [11000, offMm],
+      [11000, 6000],
+      [0, 6000],
+    ],
+    Array<number>(8).fill(25),
+  ),
+]
+
+// that the slope itself runs between its plates and not over each is not judged here
+test.each([0.9, 0.4, -0.9])(
+  'where plates %d mm out of line carry one slope, each rafter is cut to its own',
+  (offMm) => {
+    for (const roof of outOfLine(offMm)) {
+      const spec = frameRoof(roof)
+      const shared = spec.planes.filter((plane) => plane.edges.length > 1)
+      expect(shared).toHaveLength(1)
+      const all = dryFit(kit, roof, spec)
+      const onPlates = ['overlap', 'seat', 'joint']
+      const misfits = all.filter(
+        ({ check, text }) => onPlates.includes(check) || /heel is not|its stand/.test(text),
+      )
+      expect(reportLines(misfits)).toEqual([])
+    }
   },
 )
