@@ -11,6 +11,7 @@ import { crews, people } from '../../server/db/tables/people-tables.ts'
 import { issueAtOnce } from '../../server/revisions/issue-revision.ts'
 import { saveDraft } from '../../server/revisions/revision-service.ts'
 import { withText } from '../../shared/revisions/form-paths.ts'
+import { roofFormSchema } from '../../shared/revisions/roof-form.ts'
 import { createFakeMailTransport } from '../../fakes/mail/fake-mail-transport.ts'
 import { createMailWorker } from '../../server/mail/mail-worker.ts'
 import { type ServedApp, serveTestApp } from './browser.ts'
@@ -95,7 +96,7 @@ export function reviseRoof(app: ServedApp, number: string, texts: Record<string,
   if (!draft) throw new Error(`${number} has no roof.`)
   const form = Object.entries(texts).reduce(
     (typed, [path, text]) => withText(typed, path, text),
-    draft.form,
+    roofFormSchema.parse(draft.form),
   )
   saveDraft(app, user, jobId, { form, version: draft.version })
   issueAtOnce({ ...app, takeRevision }, { user, jobId, version: draft.version + 1 })
