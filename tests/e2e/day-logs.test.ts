@@ -93,9 +93,14 @@ test('two who close one day are shown both logs, and one press keeps the own', a
   await lead.page.getByText('Marnie Quill has closed or corrected this day meanwhile').waitFor()
   await lead.page.getByText('By phone').waitFor()
   await lead.page.getByText('From site').waitFor()
+  const byOffice = storedLog(dayId)?.log
+  expect(byOffice?.remarks).toBe('By phone')
   await lead.page.getByRole('button', { name: 'Use yours' }).click()
   await lead.page.getByText(/Day closed by Tamsin Rook/).waitFor()
-  expect(storedLog(dayId)?.log).toMatchObject({ remarks: 'From site', version: 2 })
+  expect(storedLog(dayId)?.log).toMatchObject({
+    remarks: 'From site',
+    version: byOffice!.version + 1,
+  })
   await lead.close()
   await office.close()
 })
