@@ -93,7 +93,10 @@ function isPackageKey(key: string): key is PackageKey {
 }
 
 /** The first so many pieces of each task; a piece that stands has been cut. */
-export function donePieces(tasks: readonly JobTask[], piecesOf: (task: JobTask) => number): MutableDone {
+export function donePieces(
+  tasks: readonly JobTask[],
+  piecesOf: (task: JobTask) => number,
+): MutableDone {
   const done = emptyDone()
   for (const task of tasks) {
     const pieces = Math.max(0, Math.min(task.quantity, piecesOf(task)))

@@ -63,8 +63,7 @@ test('the leading hand closes the day, and the sheet says who and how many hours
 
 test('a day with a log and not a tick is worked: it stays, and the job is on site', async () => {
   const { site, lead, office, today } = await onSite()
-  const worked = () =>
-    readBookedDays(site.app.db, site.booking.id).filter((day) => day.worked)
+  const worked = () => readBookedDays(site.app.db, site.booking.id).filter((day) => day.worked)
   expect(worked()).toEqual([])
   expect(readStage(site.app.db, site.jobId)).not.toBe('on-site')
 

@@ -66,8 +66,5 @@ export const toldDays = sqliteTable(
     /** The day's reminder has gone, with its numbers; before that only the day itself was told. */
     reminded: integer('reminded', { mode: 'boolean' }).notNull().default(true),
   },
-  (t) => [
-    uniqueIndex('told_days_person').on(t.personId, t.day),
-    index('told_days_day').on(t.day),
-  ],
+  (t) => [uniqueIndex('told_days_person').on(t.personId, t.day), index('told_days_day').on(t.day)],
 )
