@@ -169,5 +169,7 @@ function settleAsked(
   const row = readRainOff(tx, asked.id)
   if (row?.state !== 'asked' || row.version !== asked.version)
     throw new AppError('conflict', 'Somebody else has answered this already. Look again.')
+  if (row.crewId !== made.crewId)
+    throw invalidField('crewId', 'Another crew asked for this. Make it for that crew.')
   updateRainOff(tx, row, made)
 }

@@ -132,6 +132,31 @@ test('a rain-off sent again with other days does not pass for made', async () =>
   await officeAgent.post('/api/rain-offs').send(first).expect(409)
 })
 
+test('what one crew asked for is not answered by moving another', async () => {
+  const { app, officeAgent, booked, crew, otherCrew, people } = await bookingFirm()
+  await booked({ crewId: otherCrew.id, days: [thu], startsOn: undefined })
+  const lead = await app.agentFor(people.lead.email)
+  const clientId = newId()
+  const asked = { clientId, crewId: crew.id, fromDay: thu, workingDays: 1 }
+  await lead.post('/api/rain-offs/asked').send(asked).expect(201)
+  const query = `crew=${otherCrew.id}&day=${thu}&days=1`
+  const { body } = await officeAgent.get(`/api/rain-offs/preview?${query}`).expect(200)
+  const moves = body.moves as { bookingId: string; version: number; daysAfter: string[] }[]
+  const make = {
+    clientId: newId(),
+    asked: { id: clientId, version: 1 },
+    crewId: otherCrew.id,
+    fromDay: thu,
+    workingDays: 1,
+    useFreeDays: false,
+    seen: moves.map(({ bookingId, version, daysAfter }) => ({ bookingId, version, daysAfter })),
+  }
+  const refused = await officeAgent.post('/api/rain-offs').send(make).expect(400)
+  expect(refused.body.issues[0].path).toBe('crewId')
+  const list = await lead.get('/api/rain-offs').expect(200)
+  expect(list.body.rainOffs).toMatchObject([{ id: clientId, state: 'asked', version: 1 }])
+})
+
 test('many bookings changed at once are answered for together, not one by one', async () => {
   const firm = await bookingFirm()
   const { sqlite } = firm.app.database
