@@ -51,8 +51,9 @@ const results = await Promise.all([
 results.push(
   await checkStep('format', binPath('prettier'), ['--check', '--log-level', 'warn', '.']),
 )
-results.push(await vitestStep('unit-and-api', 'vitest.config.ts', proof ? { PROOF: '1' } : {}))
-results.push(await vitestStep('browser', 'tests/e2e/vitest.config.ts'))
+const length = proof ? { PROOF: '1' } : {}
+results.push(await vitestStep('unit-and-api', 'vitest.config.ts', length))
+results.push(await vitestStep('browser', 'tests/e2e/vitest.config.ts', length))
 
 const passed = results.reduce((sum, result) => sum + result.passed, 0)
 const failed = results.reduce((sum, result) => sum + result.failed, 0)
