@@ -15,6 +15,7 @@ const never = ['tests/e2e/**', 'node_modules/**']
 export default defineConfig({
   test: {
     environment: 'node',
+    setupFiles: ['tests/support/fixed-seeds.ts'],
     testTimeout: 30_000,
     hookTimeout: 30_000,
     // all cores: left to itself the runner keeps one free

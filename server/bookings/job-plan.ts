@@ -53,6 +53,8 @@ export function planJob(input: JobPlanInput): JobPlan {
   const keptIds = new Set(ahead.filter((d) => d.started).map((d) => d.row.id))
   const cutButUnused: JobPlan['cutButUnused'] = []
   const done = emptyDone()
+  /** Marks of this revision that a started day, cut to an older one, still has to cut. */
+  const cutOn = new Map<string, string[]>()
   const revisionOf = new Map(days.map((row) => [row.id, row.revisionId]))
   for (const [id, there] of spec ? specs : []) {
     const ofRevision = tasks.filter((t) => revisionOf.get(t.bookingDayId) === id)
@@ -62,21 +64,32 @@ export function planJob(input: JobPlanInput): JobPlan {
       continue
     }
     const onKept = ofRevision.filter((t) => keptIds.has(t.bookingDayId))
-    const { cutButUnused: marks } = carryOver(there, spec, ticked)
-    if (marks.length > 0) cutButUnused.push({ revisionId: id, marks })
+    const thereNow = carryOver(there, spec, ticked)
+    if (thereNow.cutButUnused.length > 0)
+      cutButUnused.push({ revisionId: id, marks: thereNow.cutButUnused })
     // A started day goes on as it is, so its pieces are spoken for, ticked or not.
     merge(
       ticked,
       donePieces(onKept, (t) => t.quantity),
     )
-    merge(done, carryOver(there, spec, ticked).done)
+    const spokenFor = carryOver(there, spec, ticked).done
+    const lastKept = ahead.filter((d) => onKept.some((t) => t.bookingDayId === d.row.id)).at(-1)
+    if (lastKept) {
+      const fresh = [...spokenFor.cut].filter((mark) => !thereNow.done.cut.has(mark))
+      cutOn.set(lastKept.row.id, [...(cutOn.get(lastKept.row.id) ?? []), ...fresh])
+    }
+    merge(done, spokenFor)
   }
   const toPlan = ahead.map(({ row, started: isStarted }): DayToPlan => {
     const { minutes, thereIds } = hours.on(row.crewId, row.day)
     const crewMinutes = minutesForWork(rates, { minutes, people: thereIds.length })
     if (!isStarted) return { day: row.day, crewMinutes }
     const own = row.revisionId === revisionId ? tasks.filter((t) => t.bookingDayId === row.id) : []
-    return { day: row.day, crewMinutes, frozen: { tasks: own.flatMap(asPlanned) } }
+    return {
+      day: row.day,
+      crewMinutes,
+      frozen: { tasks: own.flatMap(asPlanned), cutThatDay: cutOn.get(row.id) },
+    }
   })
   const packages = spec ? workPackagesOf(spec, rates) : []
   return { plan: planDays({ packages, days: toPlan, done }), days: ahead, cutButUnused }

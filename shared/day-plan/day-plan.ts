@@ -17,7 +17,13 @@ export type PlannedTask = Omit<WorkStep, 'minutesEach'> & {
 export type DayToPlan = {
   day: Day
   crewMinutes: number
-  frozen?: { tasks: PlannedTask[] } | undefined
+  frozen?:
+    | {
+        tasks: PlannedTask[]
+        /** Marks in `done.cut` that are only cut on this day, to another revision: none stands before it. */
+        cutThatDay?: readonly string[]
+      }
+    | undefined
 }
 
 /** What has been ticked already, in marks of the roof being planned. */
@@ -68,12 +74,14 @@ export function planDays(input: {
   const done = input.done ?? nothingDone
   const frozenPieces = placedOn(input.days)
   let queue = piecesOf(input.packages).filter((p) => !isIn(done, p) && !isIn(frozenPieces, p))
-  const cutSoFar = new Set(done.cut)
+  const cutLater = new Set(input.days.flatMap((day) => day.frozen?.cutThatDay ?? []))
+  const cutSoFar = new Set([...done.cut].filter((mark) => !cutLater.has(mark)))
   const days = input.days.map((day): PlannedDay => {
     const taken = day.frozen ? [] : takeDay(queue, day.crewMinutes, cutSoFar)
     queue = queue.slice(taken.length)
     const tasks = day.frozen?.tasks ?? tasksOf(taken)
     addCut(cutSoFar, tasks)
+    for (const mark of day.frozen?.cutThatDay ?? []) cutSoFar.add(mark)
     return {
       day: day.day,
       tasks,

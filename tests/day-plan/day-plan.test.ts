@@ -264,3 +264,25 @@ test('what each person starts the day with is not there for the roof, and never 
   expect(minutesForWork({ startUpMinutes: 20 }, { minutes: 960, people: 2 })).toBe(920)
   expect(minutesForWork({ startUpMinutes: 60 }, { minutes: 30, people: 1 })).toBe(0)
 })
+
+test('what a day already begun still has to cut, to an older roof, is not stood on a day before it', () => {
+  const { cut, stand } = cutAndStand('L0', 2, 30, 30)
+  const packages: WorkPackage[] = [
+    { key: 'cut-commons', title: 'Cut', steps: [cut], setUpMinutes: 0 },
+    { key: 'hips', title: 'Stand', steps: [stand], setUpMinutes: 0 },
+  ]
+  const spokenFor = { ...nothingDone, cut: new Set(['L0-1', 'L0-2']) }
+  const tuesday = { day: '2026-12-08', crewMinutes: 480 }
+  const begun = {
+    day: '2026-12-09',
+    crewMinutes: 480,
+    frozen: { tasks: [], cutThatDay: ['L0-1', 'L0-2'] },
+  }
+  const thursday = { day: '2026-12-10', crewMinutes: 480 }
+  const { days } = planDays({ packages, days: [tuesday, begun, thursday], done: spokenFor })
+  expect(days.map((day) => day.tasks.map((task) => [task.work, task.quantity]))).toEqual([
+    [],
+    [],
+    [['stand', 2]],
+  ])
+})

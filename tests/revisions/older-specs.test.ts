@@ -8,7 +8,9 @@ import {
 } from '../../shared/revisions/frame-spec-schema.ts'
 import { frameRoof } from '../../shared/roof/frame-roof.ts'
 import { defaultSettings } from '../../shared/roof/roof-settings.ts'
-import { newFirm } from '../../server/firm/firm-store.ts'
+import { openDatabase } from '../../server/db/client.ts'
+import { migrateDatabase } from '../../server/db/migrate.ts'
+import { readFirm } from '../../server/firm/firm-store.ts'
 import { makeRoof } from '../roof/support/roofs.ts'
 
 const roof = makeRoof(
@@ -61,5 +63,9 @@ test('settings stored before collar ties and battens were set still read and sti
 })
 
 test('a firm’s settings as a new installation has them pass its schema', () => {
-  expect(firmSchema.parse({ ...newFirm, version: 1 }).roofSettings.collarTieSpacingMm).toBe(1200)
+  const database = openDatabase(':memory:')
+  migrateDatabase(database)
+  const settings = firmSchema.parse(readFirm(database.db))
+  database.close()
+  expect(settings.roofSettings.collarTieSpacingMm).toBe(1200)
 })
