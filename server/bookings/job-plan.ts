@@ -68,10 +68,7 @@ export function planJob(input: JobPlanInput): JobPlan {
     if (thereNow.cutButUnused.length > 0)
       cutButUnused.push({ revisionId: id, marks: thereNow.cutButUnused })
     // A started day goes on as it is, so its pieces are spoken for, ticked or not.
-    merge(
-      ticked,
-      donePieces(onKept, (t) => t.quantity),
-    )
+    merge(ticked, heldPieces(onKept))
     const spokenFor = carryOver(there, spec, ticked).done
     const lastKept = ahead.filter((d) => onKept.some((t) => t.bookingDayId === d.row.id)).at(-1)
     if (lastKept) {
@@ -122,6 +119,16 @@ export function donePieces(
     }
   }
   return done
+}
+
+/** What tasks hold, done or not: a piece to be stood is not cut by that. */
+function heldPieces(tasks: readonly JobTask[]): MutableDone {
+  const held = emptyDone()
+  for (const task of tasks) {
+    if (task.work === 'set-out' && isPackageKey(task.packageKey)) held.setOut.add(task.packageKey)
+    for (const mark of task.memberMarks) (task.work === 'stand' ? held.stood : held.cut).add(mark)
+  }
+  return held
 }
 
 function merge(into: MutableDone, from: DonePieces): void {
