@@ -14,7 +14,8 @@ const looks = [
   { name: 'at the desk, dark', viewport: desk, dark: true, turn: 1 },
 ]
 
-test.each(looks)(
+// side by side: most of the time is the browser's
+test.concurrent.each(looks)(
   'axe finds nothing on the screens of this turn and none scrolls sideways: $name',
   { timeout: 480_000 },
   async (look) => {

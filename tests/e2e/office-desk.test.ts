@@ -60,7 +60,7 @@ test('a double click saves the settings once, and a form opens at its first fiel
   expect(await page.getByRole('alert').count()).toBe(0)
 
   await office.goto('/people')
-  await page.getByRole('button', { name: 'Add a person' }).click()
+  await page.getByRole('link', { name: 'Add a person' }).click()
   const name = page.getByRole('textbox', { name: 'Name', exact: true })
   await name.waitFor()
   expect(await name.evaluate((input) => input === document.activeElement)).toBe(true)
