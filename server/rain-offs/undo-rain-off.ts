@@ -45,7 +45,10 @@ export function undoRainOff(
     putBack(tx, deps, user, row)
     handBackTasks(
       tx,
-      row.moved.flatMap((one) => one.tasksHeld),
+      {
+        bookingIds: row.moved.map((one) => one.bookingId),
+        held: row.moved.flatMap((one) => one.tasksHeld),
+      },
       firm,
     )
     updateRainOff(tx, row, { state: 'undone', settledById: user.id })
