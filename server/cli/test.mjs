@@ -47,10 +47,8 @@ mkdirSync(resultsDir, { recursive: true })
 const results = await Promise.all([
   checkStep('types', binPath('tsc'), ['--noEmit', '-p', '.']),
   checkStep('lint', binPath('eslint'), ['.', '--max-warnings', '0']),
+  checkStep('format', binPath('prettier'), ['--check', '--log-level', 'warn', '.']),
 ])
-results.push(
-  await checkStep('format', binPath('prettier'), ['--check', '--log-level', 'warn', '.']),
-)
 const length = proof ? { PROOF: '1' } : {}
 results.push(await vitestStep('unit-and-api', 'vitest.config.ts', length))
 results.push(await vitestStep('browser', 'tests/e2e/vitest.config.ts', length))
