@@ -8,15 +8,13 @@ import { type Day, formatDay } from '../../../shared/calendar/days.ts'
 import { isWorked, whyNotWorked } from '../../../shared/calendar/working-days.ts'
 import { formatHours, formatLoad } from '../../../shared/labour/format-hours.ts'
 import { CrewPennant } from '../../drawings/crew-pennant.tsx'
-import { PopPanel } from '../../ui/pop-panel.tsx'
 import { EmptyState } from '../../ui/states.tsx'
-import { BookingActions } from './booking-actions.tsx'
 import { cellClass, StateMark } from './booking-cell.tsx'
 import { DayFlagLines } from './booking-flags.tsx'
 import { daysFromTo } from './calendar-with-step.ts'
 import { type Bar, crewRowOf, type Load, loadOf } from './crew-weeks-layout.ts'
+import { type Opened, OpenedBooking } from './opened-booking.tsx'
 
-type Opened = { bookingId: string; stretch: readonly Day[]; anchor: HTMLElement }
 type Open = (booking: CalendarBooking, stretch: readonly Day[], anchor: HTMLElement) => void
 
 function loadWords({ plannedMinutes, availableMinutes, isBooked }: Load): string {
@@ -119,7 +117,6 @@ function CrewDays(props: {
 /** Crew weeks on a phone: crew by crew, day by day; a press on a booking says what can be done with it. */
 export function CrewList({ calendar, mayEdit }: { calendar: Calendar; mayEdit: boolean }) {
   const [opened, setOpened] = useState<Opened | null>(null)
-  const booking = calendar.bookings.find((one) => one.id === opened?.bookingId)
   const close = () => setOpened(null)
   if (calendar.crews.length === 0)
     return <EmptyState title="Nothing is booked here">Look at other weeks.</EmptyState>
@@ -134,21 +131,7 @@ export function CrewList({ calendar, mayEdit }: { calendar: Calendar; mayEdit: b
           onOpen={(one, stretch, anchor) => setOpened({ bookingId: one.id, stretch, anchor })}
         />
       ))}
-      <PopPanel
-        anchor={booking && opened ? opened.anchor : null}
-        title={booking ? `${booking.job.number} ${booking.job.title}` : ''}
-        onClose={close}
-      >
-        {booking && opened ? (
-          <BookingActions
-            calendar={calendar}
-            booking={booking}
-            stretch={opened.stretch}
-            mayEdit={mayEdit}
-            onDone={close}
-          />
-        ) : null}
-      </PopPanel>
+      <OpenedBooking calendar={calendar} opened={opened} mayEdit={mayEdit} onClose={close} />
     </div>
   )
 }

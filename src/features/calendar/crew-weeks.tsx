@@ -2,9 +2,7 @@ import { DndContext } from '@dnd-kit/core'
 import { useQuery } from '@tanstack/react-query'
 import { type KeyboardEvent, useMemo, useState } from 'react'
 import type { Calendar } from '../../../shared/bookings/calendar-schemas.ts'
-import { PopPanel } from '../../ui/pop-panel.tsx'
 import { EmptyState } from '../../ui/states.tsx'
-import { BookingActions } from './booking-actions.tsx'
 import { useBookingMoves } from './booking-moves-context.ts'
 import { calendarQueries } from './calendar-queries.ts'
 import { daysFromTo } from './calendar-with-step.ts'
@@ -19,10 +17,9 @@ import { weightOf } from './drag-plan.ts'
 import { JobChips } from './job-chips.tsx'
 import { useBarFocus } from './use-bar-focus.ts'
 import { useCrewWeeksDrag } from './use-crew-weeks-drag.ts'
+import { type Opened, OpenedBooking } from './opened-booking.tsx'
 
 type Props = { calendar: Calendar; weeks: number; mayEdit: boolean; isWall: boolean }
-
-type Opened = { bookingId: string; stretch: readonly string[]; anchor: HTMLElement }
 
 function Jobs() {
   const { data } = useQuery(calendarQueries.unbooked())
@@ -86,7 +83,6 @@ export function CrewWeeks(props: Props) {
     () => gridColumnsOf(calendar, days, { weeks, isWall }),
     [calendar, days, weeks, isWall],
   )
-  const booking = calendar.bookings.find((one) => one.id === opened?.bookingId)
   const close = () => setOpened(null)
   if (calendar.crews.length === 0)
     return (
@@ -126,21 +122,7 @@ export function CrewWeeks(props: Props) {
       </div>
       {mayEdit && !isWall ? <Jobs /> : null}
       {drag ? <DragGhost calendar={calendar} drag={drag} landing={landing} /> : null}
-      <PopPanel
-        anchor={booking && opened ? opened.anchor : null}
-        title={booking ? `${booking.job.number} ${booking.job.title}` : ''}
-        onClose={close}
-      >
-        {booking && opened ? (
-          <BookingActions
-            calendar={calendar}
-            booking={booking}
-            stretch={opened.stretch}
-            mayEdit={mayEdit}
-            onDone={close}
-          />
-        ) : null}
-      </PopPanel>
+      <OpenedBooking calendar={calendar} opened={opened} mayEdit={mayEdit} onClose={close} />
     </DndContext>
   )
 }
